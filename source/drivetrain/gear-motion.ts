@@ -5,6 +5,9 @@ import {cellOf} from './monotone-cubic.ts';
 import type {Vehicle} from './straight.ts';
 import {engineRpm, growthReferenceMps, speedAtRpmMps} from './tire.ts';
 
+/** Both sides meet at a crossing, so an integral split this far beside it is off by no more than the square of this. */
+const crossingMps = 1e-7;
+
 export class GearMotion {
 	/** Speed at the limiter: thrust ends above it. Infinity without one. */
 	readonly limiterMps: number;
@@ -112,7 +115,7 @@ export class GearMotion {
 			for (const high of [(images[i - 1]! + images[i]!) / 2, images[i]!]) {
 				const atHigh = surplus(high);
 				if (atLow < 0 !== atHigh < 0) {
-					const crossing = brentRoot(surplus, low, high);
+					const crossing = brentRoot(surplus, low, high, crossingMps);
 					if (crossing !== undefined && crossing > low && crossing < high) all.push(crossing);
 				}
 				[low, atLow] = [high, atHigh];

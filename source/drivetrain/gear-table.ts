@@ -4,16 +4,26 @@
  */
 import type {GearMotion} from './gear-motion.ts';
 import {cellOf} from './monotone-cubic.ts';
-import {balancedBefore, brakingDistanceM, type Goal, gentle, integrate, settled, type Travel} from './travel.ts';
-
-type Piece = {readonly distanceM: number; readonly timeS: number};
+import {
+	balancedBetween,
+	brakingDistanceM,
+	type Goal,
+	gentle,
+	integrate,
+	integrateSliver,
+	newtonCap,
+	newtonEnd,
+	type Stretch,
+	settled,
+	type Travel,
+} from './travel.ts';
 
 export class GearTable {
 	readonly #motion: GearMotion;
 	/** Rising from 0 to the limiter: the kinks, the speeds at which the acceleration is 0, and cuts between them. */
 	readonly #edges: number[];
-	readonly #cells: Piece[] = [];
-	#entry: {fromMps: number; toMps: number; piece: Piece} | undefined;
+	readonly #cells: Stretch[] = [];
+	#entry: {fromMps: number; toMps: number; piece: Stretch} | undefined;
 
 	constructor(motion: GearMotion) {
 		this.#motion = motion;
@@ -53,7 +63,7 @@ export class GearTable {
 	}
 
 	/** A whole cell is kept; of the parts, the last one that was asked for: every run after a shift starts with the same. */
-	#piece(cell: number, fromMps: number, toMps: number): Piece {
+	#piece(cell: number, fromMps: number, toMps: number): Stretch {
 		if (fromMps === this.#edges[cell] && toMps === this.#edges[cell + 1]) {
 			this.#cells[cell] ??= integrate(this.#motion, fromMps, toMps);
 			return this.#cells[cell];
@@ -64,23 +74,17 @@ export class GearTable {
 	}
 
 	/** Newton's method from the speed that an even acceleration over the piece would give; each step adds its own short integral. */
-	#meet(here: Travel, farMps: number, whole: Piece, goal: Goal): Travel {
+	#meet(here: Travel, farMps: number, whole: Stretch, goal: Goal): Travel {
 		const [low, high] = here.speedMps < farMps ? [here.speedMps, farMps] : [farMps, here.speedMps];
 		const room = (speedMps: number, distanceM: number) =>
 			goal.distanceM - here.distanceM - distanceM - brakingDistanceM(speedMps, goal.braking);
-		let speed = evenGuess(
-			here.speedMps,
-			farMps,
-			whole.distanceM,
-			room(here.speedMps, 0),
-			room(farMps, whole.distanceM),
-		);
+		let speed = evenGuess(here.speedMps, farMps, room(here.speedMps, 0), room(farMps, whole.distanceM));
 		let {distanceM, timeS} = integrate(this.#motion, here.speedMps, speed);
 		for (let i = 0; i < newtonCap; i++) {
 			const left = room(speed, distanceM);
 			const next = Math.min(high, Math.max(low, speed + left / this.#roomSlope(speed, goal)));
 			if (Math.abs(next - speed) <= newtonEnd * speed) break;
-			const step = integrate(this.#motion, speed, next);
+			const step = integrateSliver(this.#motion, speed, next);
 			distanceM += step.distanceM;
 			timeS += step.timeS;
 			speed = next;
@@ -99,40 +103,50 @@ export class GearTable {
 /** Below this speed nothing is cut any more. */
 const standstillMps = 1e-9;
 
-/** Newton doubles its digits: more steps than this are never needed from a guess inside one cell. */
-const newtonCap = 12;
-const newtonEnd = 1e-15;
-
 /** Between two speeds, where the room falls to 0 if it falls evenly with V². */
-function evenGuess(fromMps: number, toMps: number, _distanceM: number, roomFrom: number, roomTo: number): number {
+function evenGuess(fromMps: number, toMps: number, roomFrom: number, roomTo: number): number {
 	const share = roomFrom / (roomFrom - roomTo);
 	return Math.sqrt(fromMps ** 2 + share * (toMps ** 2 - fromMps ** 2));
 }
 
+/** A speed and the acceleration there. */
+type Mark = {readonly speedMps: number; readonly mps2: number};
+
 /** The kinks and the speeds of no acceleration, cut until the acceleration changes little over each cell. */
 function cellEdges(motion: GearMotion): number[] {
-	const edges = [motion.breaks[0]!];
+	const mark = (speedMps: number): Mark => ({speedMps, mps2: motion.acceleration(speedMps)});
+	let low = mark(motion.breaks[0]!);
+	const edges = [low.speedMps];
 	for (let i = 1; i < motion.breaks.length; i++) {
-		const [low, high] = [motion.breaks[i - 1]!, motion.breaks[i]!];
-		const balanced = balancedBefore(motion, low, high);
-		if (balanced !== undefined && balanced > low && balanced < high) {
-			cut(motion, low, balanced, edges);
-			cut(motion, balanced, high, edges);
-		} else cut(motion, low, high, edges);
+		const high = mark(motion.breaks[i]!);
+		const middle = mark((low.speedMps + high.speedMps) / 2);
+		if (gentle(low.mps2, middle.mps2) && gentle(middle.mps2, high.mps2)) edges.push(high.speedMps);
+		else cutAround(motion, low, middle, high, edges);
+		low = high;
 	}
 	return edges;
 }
 
-function cut(motion: GearMotion, low: number, high: number, edges: number[]): void {
-	if (
-		high - low <= settled * high ||
-		high <= standstillMps ||
-		gentle(motion.acceleration(low), motion.acceleration(high))
-	) {
-		edges.push(high);
+/** A piece with a zero of the acceleration in it is cut there first. */
+function cutAround(motion: GearMotion, low: Mark, middle: Mark, high: Mark, edges: number[]): void {
+	const zero = balancedBetween(motion, low.speedMps, middle.speedMps, high.speedMps);
+	if (zero === undefined || zero <= low.speedMps || zero >= high.speedMps) {
+		cut(motion, low, high, edges);
 		return;
 	}
-	const middle = (low + high) / 2;
+	const balanced = {speedMps: zero, mps2: 0};
+	cut(motion, low, balanced, edges);
+	cut(motion, balanced, high, edges);
+}
+
+function cut(motion: GearMotion, low: Mark, high: Mark, edges: number[]): void {
+	const tiny = high.speedMps - low.speedMps <= settled * high.speedMps || high.speedMps <= standstillMps;
+	if (tiny || gentle(low.mps2, high.mps2)) {
+		edges.push(high.speedMps);
+		return;
+	}
+	const speedMps = (low.speedMps + high.speedMps) / 2;
+	const middle = {speedMps, mps2: motion.acceleration(speedMps)};
 	cut(motion, low, middle, edges);
 	cut(motion, middle, high, edges);
 }

@@ -5,6 +5,7 @@ import {GearMotion} from './gear-motion.ts';
 import {GearTable} from './gear-table.ts';
 import {shiftSpeedMps} from './shift-point.ts';
 import type {GearTrain, Vehicle} from './straight.ts';
+import {speedBefore} from './travel.ts';
 
 export type PlannedShift = {
 	/** Where the interruption starts, and the RPM there. */
@@ -23,6 +24,7 @@ export class RoadGears {
 	readonly #motions: GearMotion[] = [];
 	readonly #tables: GearTable[] = [];
 	readonly #shifts: PlannedShift[] = [];
+	readonly #lights: number[] = [];
 
 	constructor(vehicle: Vehicle, train: GearTrain, road: Road) {
 		this.vehicle = vehicle;
@@ -52,7 +54,13 @@ export class RoadGears {
 		return this.#shifts[gear];
 	}
 
-	/** The same for a car that enters the gear at a speed: it shifts at once where the planned speed is already behind. */
+	/** The speed one reaction time before the planned shift: where the light must come on. */
+	lightMps(gear: number): number {
+		this.#lights[gear] ??= speedBefore(this.motion(gear), this.shift(gear).speedMps, this.vehicle.reactionTimeS);
+		return this.#lights[gear];
+	}
+
+	/** The shift of a car that enters the gear at a speed: it shifts at once where the planned speed is already behind. */
 	shiftFrom(gear: number, enteredMps: number): PlannedShift {
 		const planned = this.shift(gear);
 		return enteredMps <= planned.speedMps ? planned : this.#shiftAt(gear, enteredMps);

@@ -1,8 +1,8 @@
 /** The run on a straight: every rising sequence of gears, and the choice among them. */
 import {chosenOf, fastestOf} from './choose-sequence.ts';
-import type {RoadGears} from './road-gears.ts';
+import {RoadGears} from './road-gears.ts';
 import {atExit, brakingOf, type Carry, described, type Entry, type Finish, finished, shifted} from './sequence.ts';
-import type {Course, StraightRun} from './straight.ts';
+import type {Course, GearTrain, StraightRun, Vehicle} from './straight.ts';
 import {brakingDistanceM, travel} from './travel.ts';
 
 /**
@@ -16,8 +16,9 @@ export function runStraight(gears: RoadGears, course: Course): StraightRun {
 	});
 }
 
-/** The definition: each sequence by itself, integrated afresh. What the fast way is tested and timed against. */
-export function runStraightPlainly(gears: RoadGears, course: Course): StraightRun {
+/** The definition: each straight and each sequence by itself, integrated afresh. What the fast way is tested and timed against. */
+export function runStraightPlainly(vehicle: Vehicle, train: GearTrain, course: Course): StraightRun {
+	const gears = new RoadGears(vehicle, train, course);
 	return run(gears, course, startGears => {
 		const carry: Carry = (gear, fromMps, goal) => travel(gears.motion(gear), fromMps, goal);
 		return startGears.flatMap(first =>
@@ -59,7 +60,7 @@ function mayStart(gears: RoadGears, course: Course, gear: number): boolean {
 function finishesFrom(gears: RoadGears, course: Course, first: number, carry: Carry): (Finish | undefined)[] {
 	const finishes: (Finish | undefined)[] = [];
 	let entered: Entry[] = [];
-	for (const gear of gearsFrom(first, course.highestGear)) {
+	for (let gear = first; ; gear++) {
 		finishes.push(finished(gears, course, first, entered, carry));
 		if (gear === course.highestGear) break;
 		const next = shifted(gears, course, gear, entered.at(-1) ?? atExit(course), carry);

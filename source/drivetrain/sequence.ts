@@ -1,9 +1,8 @@
 /** One rising sequence of gears on a straight: carried through shift by shift, and told in full. */
 import {resistanceN} from './forces.ts';
-import type {GearMotion} from './gear-motion.ts';
 import type {RoadGears} from './road-gears.ts';
 import type {Course, GearShift, SequenceRun} from './straight.ts';
-import {type Braking, brakingDistanceM, type Goal, speedBefore, type Travel, travel} from './travel.ts';
+import {type Braking, brakingDistanceM, type Goal, type Travel, travel} from './travel.ts';
 
 /** Somewhere on a straight, since the exit. */
 export type Place = {readonly speedMps: number; readonly distanceM: number; readonly timeS: number};
@@ -111,15 +110,16 @@ function brakingTimeS(speedMps: number, braking: Braking | undefined): number {
 }
 
 function highest(course: Course, {firstGear, entered, fullThrottleEnd}: Finish) {
-	const places = [
-		{gear: firstGear, speedMps: course.exitMps},
-		...entered.flatMap((entry, i) => [
-			{gear: firstGear + i, speedMps: entry.shiftMps},
-			{gear: firstGear + i + 1, speedMps: entry.speedMps},
-		]),
-		{gear: firstGear + entered.length, speedMps: fullThrottleEnd.speedMps},
-	];
-	return places.reduce((best, place) => (place.speedMps > best.speedMps ? place : best));
+	let top = {gear: firstGear, speedMps: course.exitMps};
+	const raise = (gear: number, speedMps: number) => {
+		if (speedMps > top.speedMps) top = {gear, speedMps};
+	};
+	for (const [i, entry] of entered.entries()) {
+		raise(firstGear + i, entry.shiftMps);
+		raise(firstGear + i + 1, entry.speedMps);
+	}
+	raise(firstGear + entered.length, fullThrottleEnd.speedMps);
+	return top;
 }
 
 /** The speed that no car on wheels passes: where the search without a limiter ends. */
@@ -144,16 +144,11 @@ function shiftTold(
 	return {
 		from,
 		rpm: plan.rpm,
-		lightRpm: lightRpm(gears.motion(from), entry.shiftMps, gearStart.speedMps, gears.vehicle.reactionTimeS),
+		lightRpm: gears.motion(from).rpmAt(Math.max(gears.lightMps(from), gearStart.speedMps)),
 		rpmAfter: plan.rpmAfter,
 		speedMps: entry.shiftMps,
 		distanceM: entry.distanceM - plan.coasted.distanceM,
 		timeS: entry.timeS - gears.vehicle.shiftTimeS,
 		leftS: fullThrottleEnd.timeS - entry.timeS,
 	};
-}
-
-/** RPM one reaction time before the shift, or where the gear was entered if that is later. */
-function lightRpm(motion: GearMotion, shiftMps: number, enteredMps: number, reactionTimeS: number): number {
-	return motion.rpmAt(speedBefore(motion, shiftMps, reactionTimeS, enteredMps));
 }

@@ -3,7 +3,8 @@
  * between the kinks of a. Where a falls toward 0 the integral diverges, as it should; the pieces are halved toward that speed.
  */
 import {brentRoot} from './brent.ts';
-import {gaussLegendre} from './gauss-legendre.ts';
+import {gaussLegendre, type Quadrature} from './gauss-legendre.ts';
+import {cellOf} from './monotone-cubic.ts';
 
 export type Motion = {
 	/** Acceleration at a road speed from 0 up, m/s². */
@@ -23,6 +24,8 @@ export type Goal = {
 	readonly braking: Braking | undefined;
 };
 
+export type Stretch = {readonly distanceM: number; readonly timeS: number};
+
 export type Travel = {
 	readonly speedMps: number;
 	readonly distanceM: number;
@@ -31,14 +34,20 @@ export type Travel = {
 	readonly why: 'speed' | 'end' | 'stopped';
 };
 
-/** Points a piece: on pieces over which the acceleration changes by no more than a factor of two the error is below 1e-10. */
-const {nodes, weights} = gaussLegendre(8);
+/** On pieces over which the acceleration changes by no more than a factor of two the error is below 1e-10. */
+const piece = gaussLegendre(6);
+/** For the last, short steps of a search, a small part of a piece. */
+const sliver = gaussLegendre(3);
 
 /** A piece is halved until the acceleration at its end is within this factor of that at its start. */
 const steepest = 0.4;
 
 /** This close to a speed at which the acceleration is 0, relatively, the car is taken to stay at it. */
 export const settled = 1e-13;
+
+/** Newton doubles its digits: more steps than this are never needed from a guess inside one piece. */
+export const newtonCap = 12;
+export const newtonEnd = 1e-15;
 
 /** The run from a speed until the goal is met, with the driver at full throttle. */
 export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
@@ -51,11 +60,11 @@ export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
 		const bound = pieceEnd(motion, here.speedMps, rising, goal);
 		const end = gentleEnd(motion, here.speedMps, bound);
 		if (Math.abs(end - here.speedMps) <= settled * here.speedMps) return cruise(here, goal);
-		const piece = integrate(motion, here.speedMps, end);
+		const stretch = integrate(motion, here.speedMps, end);
 		const there: Travel = {
 			speedMps: end,
-			distanceM: here.distanceM + piece.distanceM,
-			timeS: here.timeS + piece.timeS,
+			distanceM: here.distanceM + stretch.distanceM,
+			timeS: here.timeS + stretch.timeS,
 			why: 'end',
 		};
 		if (roomM(there, goal) < 0) return meet(motion, here, end, goal);
@@ -63,8 +72,9 @@ export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
 	}
 }
 
-/** Distance and time over which the acceleration, of one sign, takes the car from one speed to another. */
-export function integrate(motion: Motion, fromMps: number, toMps: number): {distanceM: number; timeS: number} {
+/** Distance and time over which the acceleration, of one sign, takes the car from one speed to another inside a piece. */
+export function integrate(motion: Motion, fromMps: number, toMps: number, rule: Quadrature = piece): Stretch {
+	const {nodes, weights} = rule;
 	const [middle, half] = [(fromMps + toMps) / 2, (toMps - fromMps) / 2];
 	let [distanceM, timeS] = [0, 0];
 	for (let i = 0; i < nodes.length; i++) {
@@ -74,6 +84,11 @@ export function integrate(motion: Motion, fromMps: number, toMps: number): {dist
 		distanceM += weight * speed;
 	}
 	return {distanceM: distanceM * half, timeS: timeS * half};
+}
+
+/** The same over a small part of a piece. */
+export function integrateSliver(motion: Motion, fromMps: number, toMps: number): Stretch {
+	return integrate(motion, fromMps, toMps, sliver);
 }
 
 /** Distance under braking from a speed to the entry speed, V² − V_e² = 2·a_b·s; 0 from below it or without braking. */
@@ -89,24 +104,23 @@ function roomM(at: Travel, goal: Goal): number {
 
 /** The next speed at which something changes: a kink, the goal, the entry speed, or where the acceleration is 0. */
 function pieceEnd(motion: Motion, speedMps: number, rising: boolean, goal: Goal): number {
-	const marks = [...motion.breaks, goal.braking?.entryMps ?? 0];
-	const next = rising
-		? Math.min(goal.toMps, ...marks.filter(mark => mark > speedMps))
-		: Math.max(0, ...marks.filter(mark => mark < speedMps));
+	const entry = goal.braking?.entryMps ?? 0;
+	const kink = rising ? Math.min(breakAbove(motion, speedMps), goal.toMps) : breakBelow(motion, speedMps);
+	const next = (entry > speedMps && entry < kink) || (entry < speedMps && entry > kink) ? entry : kink;
 	return balancedBefore(motion, speedMps, next) ?? next;
 }
 
 /** The first speed on the way at which the acceleration is 0 or changes sign; undefined where it does neither. */
-export function balancedBefore(motion: Motion, fromMps: number, toMps: number): number | undefined {
+function balancedBefore(motion: Motion, fromMps: number, toMps: number): number | undefined {
+	return balancedBetween(motion, fromMps, (fromMps + toMps) / 2, toMps);
+}
+
+/** The same on the way over a third speed. What the acceleration is at the very start does not count. */
+export function balancedBetween(motion: Motion, fromMps: number, overMps: number, toMps: number): number | undefined {
 	const acceleration = (speedMps: number) => motion.acceleration(speedMps);
-	const positive = acceleration((3 * fromMps + toMps) / 4) > 0;
-	let before = fromMps;
-	for (const place of [(fromMps + toMps) / 2, toMps]) {
-		if (acceleration(place) > 0 !== positive) {
-			return brentRoot(acceleration, before, place) ?? before;
-		}
-		before = place;
-	}
+	const positive = acceleration((fromMps + overMps) / 2) > 0;
+	if (acceleration(overMps) > 0 !== positive) return brentRoot(acceleration, fromMps, overMps) ?? fromMps;
+	if (acceleration(toMps) > 0 !== positive) return brentRoot(acceleration, overMps, toMps) ?? overMps;
 	return undefined;
 }
 
@@ -141,19 +155,42 @@ function meet(motion: Motion, here: Travel, endMps: number, goal: Goal): Travel 
 	return at(speed ?? here.speedMps);
 }
 
-/** The speed at which the car was `timeS` seconds before it reached `atMps` gaining speed, but not below `floorMps`. */
-export function speedBefore(motion: Motion, atMps: number, timeS: number, floorMps: number): number {
+/** The speed at which the car was `timeS` seconds before it reached `atMps` gaining speed; 0 where it gains none. */
+export function speedBefore(motion: Motion, atMps: number, timeS: number): number {
 	let [speed, left] = [atMps, timeS];
-	while (speed > floorMps) {
-		const next = Math.max(floorMps, ...motion.breaks.filter(mark => mark < speed));
-		const end = gentleEnd(motion, speed, next);
-		const took = integrate(motion, end, speed).timeS;
-		if (took >= left || took < 0) {
-			const before = (earlier: number) => integrate(motion, earlier, speed).timeS - left;
-			return brentRoot(before, end, speed) ?? floorMps;
-		}
-		left -= took;
+	while (speed > 0) {
+		const end = gentleEnd(motion, speed, breakBelow(motion, speed));
+		const tookS = integrate(motion, end, speed).timeS;
+		if (tookS < 0) return 0;
+		if (tookS >= left) return earlierBy(motion, end, speed, left);
+		left -= tookS;
 		speed = end;
 	}
-	return floorMps;
+	return 0;
+}
+
+/** Inside one piece: Newton's method on the time, from the speed that an even acceleration would give. */
+function earlierBy(motion: Motion, lowMps: number, atMps: number, timeS: number): number {
+	const slowed = (fromMps: number, byS: number) => Math.max(lowMps, fromMps - byS * motion.acceleration(fromMps));
+	let speed = slowed(atMps, timeS);
+	let left = timeS - integrate(motion, speed, atMps).timeS;
+	for (let i = 0; i < newtonCap && Math.abs(left) > newtonEnd * timeS; i++) {
+		const next = slowed(speed, left);
+		left -= integrateSliver(motion, next, speed).timeS;
+		speed = next;
+	}
+	return speed;
+}
+
+/** The nearest kink below a speed above 0. */
+function breakBelow({breaks}: Motion, speedMps: number): number {
+	const cell = cellOf(breaks, speedMps);
+	return breaks[cell] === speedMps ? (breaks[cell - 1] ?? 0) : (breaks[cell] ?? 0);
+}
+
+/** The nearest kink above a speed; Infinity beyond the last. */
+function breakAbove({breaks}: Motion, speedMps: number): number {
+	const next = speedMps < (breaks[0] ?? Infinity) ? 0 : cellOf(breaks, speedMps) + 1;
+	const kink = breaks[next] ?? Infinity;
+	return kink > speedMps ? kink : Infinity;
 }
