@@ -82,7 +82,10 @@ export function number(range: Range, description: string) {
 
 export function wholeNumber(range: Range, description: string) {
 	const error = `a whole number, ${rangeText(range)}`;
-	return z.int({error}).check(...rangeChecks(range, error), z.meta({description}));
+	// Not z.int(): its issues would stop the rules about several fields, and every problem is to be listed.
+	return z
+		.number({error})
+		.check(z.multipleOf(1, {error}), ...rangeChecks(range, error), z.meta({description, type: 'integer'}));
 }
 
 function rangeChecks({above, from, to}: Range, error: string) {
@@ -94,7 +97,7 @@ const longestName = 200;
 
 export function name(description: string) {
 	const error = `a text of 1 to ${longestName} characters`;
-	const checks = [z.minLength(1, {error}), z.maxLength(longestName, {error}), z.regex(/\S/, {error})];
+	const checks = [z.maxLength(longestName, {error}), z.regex(/\S/, {error})];
 	return z.string({error}).check(...checks, z.meta({description}));
 }
 

@@ -1,10 +1,11 @@
 /** Where things are in the text of a document. Loaded only when there is a problem to place. */
 import {findNodeAtLocation, type Node, parseTree, printParseErrorCode, visit} from 'jsonc-parser';
 import {excerptAt, type Place, placeOf, placesOf} from './place.ts';
-import {type Problem, pathText, shown} from './problem.ts';
+import {type Problem, pathText, shortened, shown} from './problem.ts';
 
 /** What a parser misses, in words; `printParseErrorCode` gives the names. */
 const missing: Readonly<Record<string, string>> = {
+	InvalidSymbol: 'a number, true, false, null or a text in double quotes',
 	ValueExpected: 'a value',
 	PropertyNameExpected: 'the name of a field in double quotes',
 	ColonExpected: 'a ":" after the name of a field',
@@ -30,7 +31,7 @@ export function brokenJson(text: string): Problem {
 	const found =
 		offset >= text.length
 			? 'the end of the document'
-			: shown(text.slice(offset, offset + Math.max(1, first?.length ?? 1)));
+			: shortened(text.slice(offset, offset + Math.max(1, first?.length ?? 1)));
 	const allowed = (first && missing[first.code]) ?? 'JSON';
 	return {path: '', ...placeOf(text, offset), found, allowed, ...(excerpt !== undefined && {excerpt})};
 }

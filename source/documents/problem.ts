@@ -27,7 +27,7 @@ export function describeProblems(file: string, problems: readonly Problem[]): st
 
 function describeProblem(file: string, {path, line, column, found, allowed, hint, excerpt}: Problem): string {
 	const place = [file, line, column].filter(part => part !== undefined).join(':');
-	const sentence = `${path === '' ? '' : `${path}: `}found ${found}; allowed: ${allowed}.`;
+	const sentence = `${path === '' ? '' : `${path}: `}found ${found}; allowed ${allowed}.`;
 	const text = visible(`${place}: ${sentence}${hint === undefined ? '' : ` ${hint}`}`);
 	return excerpt === undefined ? text : `${text}\n${excerpt.split('\n').map(visible).join('\n')}`;
 }
