@@ -1,0 +1,54 @@
+/** Changes of a situation that leave nothing to run: a speed, a mass, a rollout at or below zero. */
+import type {Car} from '../drivetrain/car.ts';
+import type {Situation, Track} from '../drivetrain/track.ts';
+import {type EngineInUse, powerFactor} from './conditions.ts';
+import {fault} from './faults.ts';
+import type {Fault} from './results.ts';
+import {carIn, straightIn} from './situations.ts';
+import {mphText} from './words.ts';
+
+/** Every such fault, one a field of a situation; a straight's own speed is named with its straight. */
+export function situationFaults(car: Car, track: Track, inUse: EngineInUse): Fault[] {
+	return track.situations.flatMap(situation => [
+		...carFaults(situation, car, inUse),
+		...speedFaults(situation, track),
+	]);
+}
+
+function carFaults(situation: Situation, car: Car, {ratedPeak}: EngineInUse): Fault[] {
+	const changed = carIn(situation, car);
+	const fields: [string, number][] = [
+		['mass', changed.massKg],
+		['drag', changed.dragAreaM2],
+		['grip', changed.grip],
+		['rollout', Math.min(changed.tires.leftM, changed.tires.rightM)],
+		['power', powerFactor(situation.power, ratedPeak.powerW)],
+	];
+	return fields
+		.filter(([, value]) => !(value > 0))
+		.map(([field]) =>
+			fault(
+				'track',
+				`situations.${situation.name}.${field}`,
+				'a change that leaves nothing',
+				`a ${field} that stays above 0`,
+			),
+		);
+}
+
+function speedFaults(situation: Situation, track: Track): Fault[] {
+	return track.straights.flatMap(straight => {
+		const {exitMps, minimumMps, endMps, entryMps} = straightIn(situation, straight);
+		const fields: [string, number | undefined][] = [
+			['exit', exitMps],
+			['minimum', minimumMps],
+			['end', endMps],
+			['entry', entryMps],
+		];
+		return fields
+			.filter(([, speed]) => speed !== undefined && !(speed > 0))
+			.map(([field, speed]) =>
+				fault('track', `situations.${situation.name}.${field}`, `${mphText(speed!)} on ${straight.name}`, 'a speed above 0'),
+			);
+	});
+}
