@@ -12,6 +12,7 @@ import {carIn, headwindMps, keepsVehicle, straightIn, windIn} from './situations
 /** A straight in a situation, or the restart. */
 export type Place = {
 	readonly name: string;
+	readonly isRestart: boolean;
 	/** With the speeds of the situation. */
 	readonly straight: Straight;
 	readonly headwindMps: number;
@@ -70,10 +71,9 @@ export function conditionFor(
 				straight.gears ?? track.gears,
 				headwindMps(wind, straight.headingRad) + added,
 				counts,
-				undefined,
 			),
 		),
-		restart: track.restart && placeFor(restartStraight(track.restart), undefined, added, counts, track.restart.gear),
+		restart: track.restart && placeFor(restartStraight(track.restart), undefined, added, counts, track.restart),
 	};
 }
 
@@ -108,8 +108,7 @@ function vehicleFor(
 		downforceAreaM2: car.downforceAreaM2,
 		rolling: car.rolling,
 		grip: car.grip,
-		cgHeightRatio:
-			car.cgHeightM === undefined || car.wheelbaseM === undefined ? 0 : car.cgHeightM / car.wheelbaseM,
+		cgHeightRatio: car.cgHeightM === undefined || car.wheelbaseM === undefined ? 0 : car.cgHeightM / car.wheelbaseM,
 		wheelInertiaKgM2: car.wheelInertiaKgM2,
 		undrivenInertiaKgM2: car.undrivenInertiaKgM2,
 		engineInertiaKgM2: engine.inertiaKgM2,
@@ -132,8 +131,9 @@ function placeFor(
 	allowed: GearRange | undefined,
 	headwind: number,
 	gearCounts: readonly number[],
-	startGear: number | undefined,
+	restart?: Restart,
 ): Place {
+	const startGear = restart?.gear;
 	const courseWith = (count: number): Course | undefined => {
 		const gears = gearsOf(allowed, count);
 		return (
@@ -153,7 +153,7 @@ function placeFor(
 		);
 	};
 	const courses = new Map(gearCounts.map(count => [count, courseWith(count)]));
-	return {name: straight.name, straight, headwindMps: headwind, courses};
+	return {name: straight.name, isRestart: restart !== undefined, straight, headwindMps: headwind, courses};
 }
 
 /** The restart as a straight of its own: level, unloaded, all gears. */

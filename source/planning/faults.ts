@@ -5,13 +5,13 @@ export function fault(document: Fault['document'], path: string, found: string, 
 	return {document, path, found, allowed};
 }
 
-export function unknownName(
-	document: Fault['document'],
-	path: string,
-	name: string,
-	known: readonly string[],
-): Fault {
-	return fault(document, path, `"${name}"`, known.length === 0 ? 'nothing: there are none' : `one of ${known.join(', ')}`);
+export function unknownName(document: Fault['document'], path: string, name: string, known: readonly string[]): Fault {
+	return fault(
+		document,
+		path,
+		`"${name}"`,
+		known.length === 0 ? 'nothing: there are none' : `one of ${known.join(', ')}`,
+	);
 }
 
 export function failed<T>(faults: Fault[]): Outcome<T> {

@@ -9,10 +9,7 @@ import {mphText} from './words.ts';
 
 /** Every such fault, one a field of a situation; a straight's own speed is named with its straight. */
 export function situationFaults(car: Car, track: Track, inUse: EngineInUse): Fault[] {
-	return track.situations.flatMap(situation => [
-		...carFaults(situation, car, inUse),
-		...speedFaults(situation, track),
-	]);
+	return track.situations.flatMap(situation => [...carFaults(situation, car, inUse), ...speedFaults(situation, track)]);
 }
 
 function carFaults(situation: Situation, car: Car, {ratedPeak}: EngineInUse): Fault[] {
@@ -48,7 +45,12 @@ function speedFaults(situation: Situation, track: Track): Fault[] {
 		return fields
 			.filter(([, speed]) => speed !== undefined && !(speed > 0))
 			.map(([field, speed]) =>
-				fault('track', `situations.${situation.name}.${field}`, `${mphText(speed!)} on ${straight.name}`, 'a speed above 0'),
+				fault(
+					'track',
+					`situations.${situation.name}.${field}`,
+					`${mphText(speed!)} on ${straight.name}`,
+					'a speed above 0',
+				),
 			);
 	});
 }
