@@ -1,13 +1,12 @@
 /** One situation made ready to run: the vehicle, and the course of each straight. Each is made once and shared by all rows. */
 import {type AirState, airState, mergedAir} from '../drivetrain/air.ts';
-import type {Car, Engine} from '../drivetrain/car.ts';
-import {type PowerPeak, scaledTorque} from '../drivetrain/engine.ts';
-import type {MonotoneCubic} from '../drivetrain/monotone-cubic.ts';
+import type {Car} from '../drivetrain/car.ts';
 import {correctionFactor} from '../drivetrain/power-correction.ts';
 import type {Course, Vehicle} from '../drivetrain/straight.ts';
-import {harmonicRolloutM} from '../drivetrain/tire.ts';
-import type {GearRange, PowerChange, Restart, Situation, Straight, Track, Wind} from '../drivetrain/track.ts';
+import type {GearRange, Restart, Situation, Straight, Track, Wind} from '../drivetrain/track.ts';
+import type {Roads} from './roads.ts';
 import {carIn, headwindMps, keepsVehicle, straightIn, windIn} from './situations.ts';
+import {type EngineInUse, vehicleFor} from './vehicle.ts';
 
 /** A straight in a situation, or the restart. */
 export type Place = {
@@ -15,7 +14,8 @@ export type Place = {
 	readonly isRestart: boolean;
 	/** With the speeds of the situation. */
 	readonly straight: Straight;
-	readonly headwindMps: number;
+	/** In the plan's `roads`. */
+	readonly road: number;
 	/** By the number of gears of the gearbox; undefined where it has none of the allowed gears. */
 	readonly courses: ReadonlyMap<number, Course | undefined>;
 };
@@ -35,20 +35,13 @@ export type Condition = {
 	readonly restart: Place | undefined;
 };
 
-/** What the engine is, whatever the situation. */
-export type EngineInUse = {
-	readonly engine: Engine;
-	readonly limitRpm: number;
-	readonly rated: MonotoneCubic;
-	readonly ratedPeak: PowerPeak;
-};
-
 /** The situation's condition. `base` is the one of the track as it stands, whose vehicle is shared where nothing of it changes. */
 export function conditionFor(
 	car: Car,
 	track: Track,
 	situation: Situation,
 	inUse: EngineInUse,
+	roads: Roads,
 	base: Condition | undefined,
 ): Omit<Condition, 'weight'> {
 	const shared = keepsVehicle(situation) ? base : undefined;
@@ -56,32 +49,34 @@ export function conditionFor(
 	const correction = shared?.correction ?? correctionFactor(inUse.engine.correctedTo, air);
 	const wind = windIn(situation, track.wind);
 	const added = situation.headwindMps ?? 0;
+	const vehicle = shared?.vehicle ?? vehicleFor(carIn(situation, car), inUse, air, correction, situation.power);
 	const counts = [...new Set(car.gearboxes.map(gearbox => gearbox.ratios.length))];
+	const placeOf = (straight: Straight, allowed: GearRange | undefined, headwind: number, restart?: Restart): Place => ({
+		name: straight.name,
+		isRestart: restart !== undefined,
+		straight,
+		road: roads.numberOf(vehicle, {...straight, headwindMps: headwind}),
+		courses: new Map(
+			counts.map(count => [count, courseFor(straight, gearsOf(allowed, count), headwind, count, restart)]),
+		),
+	});
 	return {
 		name: situation.name,
 		share: situation.share,
-		vehicle: shared?.vehicle ?? vehicleFor(carIn(situation, car), inUse, air, correction, situation.power),
+		vehicle,
 		steadySlip: car.tires.steadySlip,
 		air,
 		correction,
 		wind,
 		places: track.straights.map(straight =>
-			placeFor(
+			placeOf(
 				straightIn(situation, straight),
 				straight.gears ?? track.gears,
 				headwindMps(wind, straight.headingRad) + added,
-				counts,
 			),
 		),
-		restart: track.restart && placeFor(restartStraight(track.restart), undefined, added, counts, track.restart),
+		restart: track.restart && placeOf(restartStraight(track.restart), undefined, added, track.restart),
 	};
-}
-
-/** Torque of the situation ÷ today's torque of the base car: from a share, or from watts against today's peak power. */
-export function powerFactor(change: PowerChange | undefined, peakW: number): number {
-	if (change === undefined) return 1;
-	if (change.kind === 'scale') return change.factor;
-	return (change.kind === 'add' ? peakW + change.watts : change.watts) / peakW;
 }
 
 /** The allowed gears that a gearbox of so many gears has; undefined where it has none of them. */
@@ -91,69 +86,27 @@ export function gearsOf(allowed: GearRange | undefined, count: number): GearRang
 	return lowest <= highest ? {lowest, highest} : undefined;
 }
 
-function vehicleFor(
-	car: Car,
-	{engine, limitRpm, rated, ratedPeak}: EngineInUse,
-	air: AirState,
-	correction: number,
-	power: PowerChange | undefined,
-): Vehicle {
-	const limiterRpm = engine.limiter ?? limitRpm;
-	const topRpm = Math.min(limiterRpm, limitRpm);
-	return {
-		massKg: car.massKg,
-		rearShare: car.rearShare,
-		rearDownforceShare: car.rearDownforceShare,
-		dragAreaM2: car.dragAreaM2,
-		downforceAreaM2: car.downforceAreaM2,
-		rolling: car.rolling,
-		grip: car.grip,
-		cgHeightRatio: car.cgHeightM === undefined || car.wheelbaseM === undefined ? 0 : car.cgHeightM / car.wheelbaseM,
-		wheelInertiaKgM2: car.wheelInertiaKgM2,
-		undrivenInertiaKgM2: car.undrivenInertiaKgM2,
-		engineInertiaKgM2: engine.inertiaKgM2,
-		airDensityKgM3: air.densityKgM3,
-		rolloutM: harmonicRolloutM(car.tires.leftM, car.tires.rightM),
-		growth: car.tires.growth,
-		slip: car.tires.slip,
-		torqueNm: scaledTorque(rated, powerFactor(power, ratedPeak.powerW / correction) / correction),
-		limiterRpm,
-		topRpm,
-		shiftCapRpm: topRpm - car.margins.shiftRpm,
-		shiftTimeS: car.shiftTimeS,
-		reactionTimeS: car.reactionTimeS,
-		sameTimeS: car.margins.sameTimeS,
-	};
-}
-
-function placeFor(
+function courseFor(
 	straight: Straight,
-	allowed: GearRange | undefined,
+	gears: GearRange | undefined,
 	headwind: number,
-	gearCounts: readonly number[],
-	restart?: Restart,
-): Place {
-	const startGear = restart?.gear;
-	const courseWith = (count: number): Course | undefined => {
-		const gears = gearsOf(allowed, count);
-		return (
-			gears && {
-				lengthM: straight.lengthM ?? 0,
-				exitMps: straight.exitMps,
-				entryMps: straight.entryMps,
-				brakingMps2: straight.brakingMps2,
-				grade: straight.grade,
-				headwindMps: headwind,
-				load: straight.load,
-				extraDragN: straight.extraDragN,
-				lowestGear: gears.lowest,
-				highestGear: gears.highest,
-				startGear: startGear !== undefined && startGear <= count ? startGear : undefined,
-			}
-		);
+	gearCount: number,
+	restart: Restart | undefined,
+): Course | undefined {
+	if (gears === undefined) return undefined;
+	return {
+		lengthM: straight.lengthM ?? 0,
+		exitMps: straight.exitMps,
+		entryMps: straight.entryMps,
+		brakingMps2: straight.brakingMps2,
+		grade: straight.grade,
+		headwindMps: headwind,
+		load: straight.load,
+		extraDragN: straight.extraDragN,
+		lowestGear: gears.lowest,
+		highestGear: gears.highest,
+		startGear: restart?.gear !== undefined && restart.gear <= gearCount ? restart.gear : undefined,
 	};
-	const courses = new Map(gearCounts.map(count => [count, courseWith(count)]));
-	return {name: straight.name, isRestart: restart !== undefined, straight, headwindMps: headwind, courses};
 }
 
 /** The restart as a straight of its own: level, unloaded, all gears. */

@@ -3,7 +3,7 @@ import {speedAtRpmMps} from '../drivetrain/tire.ts';
 import type {Straight} from '../drivetrain/track.ts';
 import {type Candidate, candidateOf, gearboxNamed, onRack} from './candidates.ts';
 import type {Plan} from './plan.ts';
-import {rpmAt, runPlace} from './run-place.ts';
+import {type PlaceRun, rpmAt, runPlace} from './run-place.ts';
 
 export type MeasuredPoint = {
 	/** Index among the track's straights, and the name. */
@@ -43,7 +43,7 @@ export function agrees({model, speedMps}: MeasuredPoint): boolean {
 function measuredPoint(plan: Plan, straight: Straight, index: number): MeasuredPoint {
 	const {endMps, rpm, gear} = straight.measured!;
 	const candidate = measuredWith(plan, straight);
-	const run = candidate && runPlace(plan.base, candidate.train, plan.base.places[index]!);
+	const run = candidate && runAlone(plan, candidate, index);
 	const ran = run?.state === 'ran' ? run.result : undefined;
 	const inGear = gear ?? (run?.state === 'ran' || run?.state === 'held' ? run.result.endGear : undefined);
 	return {
@@ -55,6 +55,11 @@ function measuredPoint(plan: Plan, straight: Straight, index: number): MeasuredP
 		gear: inGear,
 		model: ran && {speedMps: ran.endSpeedMps, rpm: ran.endRpm},
 	};
+}
+
+function runAlone(plan: Plan, {train}: Candidate, index: number): PlaceRun {
+	const place = plan.base.places[index]!;
+	return runPlace(plan.base, place, plan.roads.gearsFor(train)(place.road));
 }
 
 function speedOf(plan: Plan, rpm?: number, candidate?: Candidate, gear?: number): number | undefined {

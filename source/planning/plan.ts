@@ -3,12 +3,14 @@ import type {Car} from '../drivetrain/car.ts';
 import {type PowerBand, peakPower, powerBand, ratedTorque} from '../drivetrain/engine.ts';
 import {engineFor, type LimitInForce, limitInForce} from '../drivetrain/limits.ts';
 import type {Situation, Track} from '../drivetrain/track.ts';
-import {type Condition, conditionFor, type EngineInUse} from './conditions.ts';
+import {type Condition, conditionFor} from './conditions.ts';
 import {documentFaults} from './document-faults.ts';
 import {done, failed, fault, unknownName} from './faults.ts';
 import type {Outcome, Setting} from './results.ts';
+import {Roads} from './roads.ts';
 import {situationFaults} from './situation-faults.ts';
 import {carAt} from './situations.ts';
+import type {EngineInUse} from './vehicle.ts';
 
 export type Plan = EngineInUse & {
 	/** As it is at this track. */
@@ -16,6 +18,7 @@ export type Plan = EngineInUse & {
 	readonly track: Track;
 	readonly limit: LimitInForce;
 	readonly band: PowerBand;
+	readonly roads: Roads;
 	/** The track as it stands. */
 	readonly base: Condition;
 	/** What is run and checked: every situation, or the one that was asked for. */
@@ -44,13 +47,14 @@ export function planFor(carDocument: Car, track: Track, options: PlanOptions = {
 	faults.push(...situationFaults(car, track, inUse));
 	if (faults.length > 0) return failed(faults);
 
-	const base = {...conditionFor(car, track, track.situations[0]!, inUse, undefined), weight: 0};
+	const roads = new Roads();
+	const base = {...conditionFor(car, track, track.situations[0]!, inUse, roads, undefined), weight: 0};
 	const band = powerBand(rated, engine.bandShare, limit.rpm);
 	const conditions = situations.map((situation, i) => ({
-		...(situation === track.situations[0] ? base : conditionFor(car, track, situation, inUse, base)),
+		...(situation === track.situations[0] ? base : conditionFor(car, track, situation, inUse, roads, base)),
 		weight: weightsOf(situations)[i]!,
 	}));
-	return done({...inUse, car, track, limit, band, base, conditions});
+	return done({...inUse, car, track, limit, band, roads, base, conditions});
 }
 
 /** What every answer says of the engine in use and the day. */

@@ -3,7 +3,7 @@ import {failureReason} from './failure-reasons.ts';
 import {type Judged, limitMargin} from './order.ts';
 import type {Plan} from './plan.ts';
 import type {Row} from './results.ts';
-import {counted, grouped, placeText, secondsText} from './words.ts';
+import {grouped, placeText, secondsText} from './words.ts';
 
 /** The reasons of rows in their ranked order. */
 export function reasonsOf(rows: readonly Judged[], plan: Plan): string[] {
@@ -42,10 +42,17 @@ function laterReason(row: Row, first: Row, plan: Plan): string {
 	return `${secondsText(behind)} a lap slower than ${nameOf(first)}${mostOn(row, first, plan)}; ${marginText(row)}.`;
 }
 
-/** What tells two rows of the same time apart: distance from the limit, and shifts in the first situation. */
+/** What tells two rows of the same time apart: margin to the limit, shifts, and how fast the engine turns at the ends. */
 function differences(row: Row, other: Row): string {
-	const shifts = counted(shiftCount(row), 'shift');
-	return `${marginText(row)} against ${grouped(limitMargin(other))}, ${shifts} against ${grouped(shiftCount(other))}`;
+	const pairs: [string, number, string, number][] = [
+		['margin', limitMargin(row), ' rpm', limitMargin(other)],
+		['', shiftCount(row), shiftCount(row) === 1 ? ' shift' : ' shifts', shiftCount(other)],
+		['at most', highestEndRpm(row), ' rpm at an end', highestEndRpm(other)],
+	];
+	const words = pairs
+		.filter(([, mine, , its]) => grouped(mine) !== grouped(its))
+		.map(([name, mine, unit, its]) => `${name} ${grouped(mine)}${unit} against ${grouped(its)}`.trim());
+	return words.length === 0 ? 'the same margin and shifts' : words.join(', ');
 }
 
 /** ", most on Back (0.031 s)": the straight with the largest mean loss; nothing where there is only one to lose on. */
@@ -76,11 +83,17 @@ function highestText(row: Row): string {
 }
 
 function marginText(row: Row): string {
-	return `${grouped(limitMargin(row))} under the limit`;
+	const margin = grouped(limitMargin(row));
+	return margin === '0' ? 'at the limit' : `${margin} under the limit`;
 }
 
 function shiftCount(row: Row): number {
 	return row.situations[0]!.straights.reduce((sum, {shifts}) => sum + shifts.length, 0);
+}
+
+/** Over all situations; shifts are left out, as they are planned at the same RPM with every pair. */
+function highestEndRpm(row: Row): number {
+	return Math.max(...row.situations.flatMap(({straights}) => straights.map(({endRpm}) => endRpm)));
 }
 
 function nameOf(row: Row): string {

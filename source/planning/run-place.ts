@@ -1,7 +1,8 @@
 /** One straight in one situation with one pair and set: what the solver says, in the words of the answer. */
+import {gripLimitN} from '../drivetrain/forces.ts';
+import type {RoadGears} from '../drivetrain/road-gears.ts';
 import {runStraight} from '../drivetrain/run-straight.ts';
-import {shiftSpeedMps} from '../drivetrain/shift-point.ts';
-import type {Course, GearTrain, SequenceRun, StraightRun, Vehicle} from '../drivetrain/straight.ts';
+import type {Course, SequenceRun, StraightRun, Vehicle} from '../drivetrain/straight.ts';
 import {engineRpm} from '../drivetrain/tire.ts';
 import type {Condition, Place} from './conditions.ts';
 import type {StraightResult} from './results.ts';
@@ -17,6 +18,8 @@ export type PlaceRun = {
 	readonly lastGear: number;
 	/** What the answer takes its gears from; undefined where nothing ran. */
 	readonly sequence: SequenceRun | undefined;
+	/** Grip less thrust at full throttle in the exit gear, N: where it is positive the engine is the limit. */
+	readonly spareGripN: {readonly exit: number; readonly minimum: number};
 	readonly result: StraightResult;
 };
 
@@ -25,32 +28,26 @@ export function rpmAt(vehicle: Vehicle, overall: number, speedMps: number, slip 
 	return engineRpm(speedMps, overall, vehicle.rolloutM, vehicle.growth, slip);
 }
 
-/** A straight in a situation, in the gears of the tie-break. */
-export function runPlace(condition: Condition, train: GearTrain, place: Place): PlaceRun {
-	const course = place.courses.get(train.overall.length);
-	if (course === undefined) return notRun(condition, train, place, course, 'noGear');
-	if (place.straight.lengthM === undefined) return hold(condition, train, place, course);
-	const run = runStraight(condition.vehicle, train, course);
-	if (run.kind !== 'ran') return notRun(condition, train, place, course, run.kind);
-	return ran(condition, train, place, course, run.chosen, run.fastest.timeS);
+/** A straight in a situation, in the gears of the tie-break; the restart in those of least time. */
+export function runPlace(condition: Condition, place: Place, gears: RoadGears): PlaceRun {
+	const course = place.courses.get(gears.train.overall.length);
+	const drive = {condition, place, gears, course};
+	if (course === undefined) return notRun(drive, 'noGear');
+	if (place.straight.lengthM === undefined) return hold(drive, course);
+	const run = runStraight(gears, course);
+	if (run.kind !== 'ran') return notRun(drive, run.kind);
+	return ran(drive, place.isRestart ? run.fastest : run.chosen, run.fastest.timeS);
 }
 
-/** The restart, in the gears of least time. */
-export function runRestart(condition: Condition, train: GearTrain, place: Place): PlaceRun {
-	const course = place.courses.get(train.overall.length)!;
-	const run = runStraight(condition.vehicle, train, course);
-	if (run.kind !== 'ran') return notRun(condition, train, place, course, run.kind);
-	return ran(condition, train, place, course, run.fastest, run.fastest.timeS);
-}
+type Drive = {
+	readonly condition: Condition;
+	readonly place: Place;
+	readonly gears: RoadGears;
+	readonly course: Course | undefined;
+};
 
-function ran(
-	condition: Condition,
-	train: GearTrain,
-	place: Place,
-	course: Course,
-	sequence: SequenceRun,
-	fastestS: number,
-): PlaceRun {
+function ran(drive: Drive, sequence: SequenceRun, fastestS: number): PlaceRun {
+	const {place, gears, course} = drive;
 	const {firstGear, lastGear} = sequence;
 	const {exitMps} = place.straight;
 	const result: StraightResult = {
@@ -58,7 +55,7 @@ function ran(
 		timeS: sequence.timeS,
 		fastestS,
 		exitSpeedMps: exitMps,
-		exitRpm: rpmAt(condition.vehicle, train.overall[firstGear - 1]!, exitMps),
+		exitRpm: gears.motion(firstGear).rpmAt(exitMps),
 		exitGear: firstGear,
 		endSpeedMps: sequence.topMps,
 		endRpm: sequence.topRpm,
@@ -66,61 +63,61 @@ function ran(
 		finalSpeedMps: sequence.finalMps,
 		limiterM: sequence.limiterM,
 		reachRpm: sequence.reachRpm,
-		...minimum(condition, train, place, firstGear),
+		...minimum(drive, firstGear),
 		shifts: [...sequence.shifts],
 		remarks: sequenceRemarks(sequence, place),
 	};
-	return {place, course, state: 'ran', lastGear, sequence, result};
+	return {place, course, state: 'ran', lastGear, sequence, spareGripN: spareGripN(drive, firstGear), result};
 }
 
 /** A straight without length: the gear in use at its speeds is the one in which the car would drive there. */
-function hold(condition: Condition, train: GearTrain, place: Place, course: Course): PlaceRun {
-	const {vehicle} = condition;
+function hold(drive: Drive, course: Course): PlaceRun {
+	const {place, gears} = drive;
 	const {exitMps, endMps = exitMps} = place.straight;
-	const top = course.highestGear - 1;
-	if (rpmAt(vehicle, train.overall[top]!, exitMps) > vehicle.topRpm) {
-		return notRun(condition, train, place, course, 'overLimit');
-	}
-	const exitGear = gearAt(vehicle, train, course, exitMps, course.lowestGear);
-	const endGear = gearAt(vehicle, train, course, endMps, exitGear);
+	if (exitMps > gears.motion(course.highestGear).speedAt(gears.vehicle.topRpm)) return notRun(drive, 'overLimit');
+	const exitGear = gearAt(gears, course, exitMps, course.lowestGear);
+	const endGear = gearAt(gears, course, endMps, exitGear);
 	const result: StraightResult = {
 		name: place.name,
 		timeS: null,
 		fastestS: null,
 		exitSpeedMps: exitMps,
-		exitRpm: rpmAt(vehicle, train.overall[exitGear - 1]!, exitMps),
+		exitRpm: gears.motion(exitGear).rpmAt(exitMps),
 		exitGear,
 		endSpeedMps: endMps,
-		endRpm: rpmAt(vehicle, train.overall[endGear - 1]!, endMps),
+		endRpm: gears.motion(endGear).rpmAt(endMps),
 		endGear,
 		finalSpeedMps: endMps,
 		limiterM: 0,
 		reachRpm: null,
-		...minimum(condition, train, place, exitGear),
+		...minimum(drive, exitGear),
 		shifts: [],
 		remarks: [],
 	};
-	return {place, course, state: 'held', lastGear: endGear, sequence: undefined, result};
+	return {
+		place,
+		course,
+		state: 'held',
+		lastGear: endGear,
+		sequence: undefined,
+		spareGripN: spareGripN(drive, exitGear),
+		result,
+	};
 }
 
 /** The shortest gear from `lowest` up whose shift speed is not behind at this speed; the last allowed one if all are. */
-function gearAt(vehicle: Vehicle, train: GearTrain, course: Course, speedMps: number, lowest: number): number {
+function gearAt(gears: RoadGears, course: Course, speedMps: number, lowest: number): number {
 	let gear = lowest;
-	while (gear < course.highestGear && shiftSpeedMps(vehicle, train, course, gear) <= speedMps) gear++;
+	while (gear < course.highestGear && gears.shift(gear).speedMps < speedMps) gear++;
 	return gear;
 }
 
 /** Nothing ran: the exit is shown in the highest gear that it may start in, where its RPM is lowest. */
-function notRun(
-	condition: Condition,
-	train: GearTrain,
-	place: Place,
-	course: Course | undefined,
-	state: PlaceRun['state'],
-): PlaceRun {
-	const gear = course?.startGear ?? course?.highestGear ?? train.overall.length;
+function notRun(drive: Drive, state: PlaceRun['state']): PlaceRun {
+	const {place, gears, course} = drive;
+	const gear = course?.startGear ?? course?.highestGear ?? gears.train.overall.length;
 	const {exitMps} = place.straight;
-	const rpm = rpmAt(condition.vehicle, train.overall[gear - 1]!, exitMps);
+	const rpm = gears.motion(gear).rpmAt(exitMps);
 	const result: StraightResult = {
 		name: place.name,
 		timeS: null,
@@ -134,11 +131,11 @@ function notRun(
 		finalSpeedMps: exitMps,
 		limiterM: 0,
 		reachRpm: null,
-		...minimum(condition, train, place, gear),
+		...minimum(drive, gear),
 		shifts: [],
 		remarks: [notRunRemarks[state] ?? state],
 	};
-	return {place, course, state, lastGear: gear, sequence: undefined, result};
+	return {place, course, state, lastGear: gear, sequence: undefined, spareGripN: spareGripN(drive, gear), result};
 }
 
 const notRunRemarks: Partial<Record<PlaceRun['state'], string>> = {
@@ -148,11 +145,20 @@ const notRunRemarks: Partial<Record<PlaceRun['state'], string>> = {
 	cannotBrake: 'cannot brake to the entry speed in this length',
 };
 
-function minimum(condition: Condition, train: GearTrain, place: Place, exitGear: number) {
+function minimum({condition, place, gears}: Drive, exitGear: number) {
 	const {minimumMps} = place.straight;
 	if (minimumMps === undefined) return {minimumSpeedMps: null, minimumRpm: null};
-	const rpm = rpmAt(condition.vehicle, train.overall[exitGear - 1]!, minimumMps, condition.steadySlip);
-	return {minimumSpeedMps: minimumMps, minimumRpm: rpm};
+	const overall = gears.train.overall[exitGear - 1]!;
+	return {
+		minimumSpeedMps: minimumMps,
+		minimumRpm: rpmAt(gears.vehicle, overall, minimumMps, condition.steadySlip),
+	};
+}
+
+function spareGripN({place, gears}: Drive, gear: number) {
+	const spareAt = (speedMps: number) => gripLimitN(gears.forces, speedMps) - gears.motion(gear).thrustN(speedMps);
+	const {exitMps, minimumMps} = place.straight;
+	return {exit: spareAt(exitMps), minimum: spareAt(minimumMps ?? exitMps)};
 }
 
 function sequenceRemarks(sequence: SequenceRun, place: Place): string[] {

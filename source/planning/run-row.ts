@@ -1,9 +1,9 @@
 /** One pair and set through every situation. */
 import {engineRpm} from '../drivetrain/tire.ts';
 import type {Candidate} from './candidates.ts';
-import type {Condition} from './conditions.ts';
+import type {Condition, Place} from './conditions.ts';
 import type {Plan} from './plan.ts';
-import {type PlaceRun, runPlace, runRestart} from './run-place.ts';
+import {type PlaceRun, runPlace} from './run-place.ts';
 
 export type SituationRun = {
 	readonly condition: Condition;
@@ -29,9 +29,15 @@ export type RowRun = {
 };
 
 export function runRow(plan: Plan, candidate: Candidate): RowRun {
+	const gearsOn = plan.roads.gearsFor(candidate.train);
+	const run = (condition: Condition, place: Place) => runPlace(condition, place, gearsOn(place.road));
 	return {
 		candidate,
-		situations: plan.conditions.map(condition => runSituation(condition, candidate)),
+		situations: plan.conditions.map(condition => ({
+			condition,
+			places: condition.places.map(place => run(condition, place)),
+			restart: condition.restart && run(condition, condition.restart),
+		})),
 		pitRoad: runPitRoad(plan, candidate),
 	};
 }
@@ -47,14 +53,6 @@ export function eachRun(row: RowRun, visit: (run: PlaceRun, situation: Situation
 /** The straights of a row without the restart. */
 export function eachStraight(row: RowRun, visit: (run: PlaceRun, situation: SituationRun) => void): void {
 	for (const situation of row.situations) for (const run of situation.places) visit(run, situation);
-}
-
-function runSituation(condition: Condition, {train}: Candidate): SituationRun {
-	return {
-		condition,
-		places: condition.places.map(place => runPlace(condition, train, place)),
-		restart: condition.restart && runRestart(condition, train, condition.restart),
-	};
 }
 
 /** The lowest gear with so much RPM in hand under the limit is the pit gear unless one is given. */

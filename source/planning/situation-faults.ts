@@ -1,10 +1,10 @@
 /** Changes of a situation that leave nothing to run: a speed, a mass, a rollout at or below zero. */
 import type {Car} from '../drivetrain/car.ts';
 import type {Situation, Track} from '../drivetrain/track.ts';
-import {type EngineInUse, powerFactor} from './conditions.ts';
 import {fault} from './faults.ts';
 import type {Fault} from './results.ts';
 import {carIn, straightIn} from './situations.ts';
+import {type EngineInUse, powerFactor} from './vehicle.ts';
 import {mphText} from './words.ts';
 
 /** Every such fault, one a field of a situation; a straight's own speed is named with its straight. */
@@ -21,7 +21,14 @@ function carFaults(situation: Situation, car: Car, {ratedPeak}: EngineInUse): Fa
 		['rollout', Math.min(changed.tires.leftM, changed.tires.rightM)],
 		['power', powerFactor(situation.power, ratedPeak.powerW)],
 	];
-	return fields
+	const tips = changed.grip * ((car.cgHeightM ?? 0) / (car.wheelbaseM ?? 1)) >= 1;
+	const tipping = fault(
+		'track',
+		`situations.${situation.name}.grip`,
+		`${changed.grip.toFixed(2)}, with which all the weight would move to the driven axle`,
+		'a grip below wheelbase ÷ height of the center of gravity',
+	);
+	const empty = fields
 		.filter(([, value]) => !(value > 0))
 		.map(([field]) =>
 			fault(
@@ -31,6 +38,7 @@ function carFaults(situation: Situation, car: Car, {ratedPeak}: EngineInUse): Fa
 				`a ${field} that stays above 0`,
 			),
 		);
+	return tips ? [...empty, tipping] : empty;
 }
 
 function speedFaults(situation: Situation, track: Track): Fault[] {

@@ -1,6 +1,4 @@
 /** RPM where the driver needs the engine to pull: at each exit and minimum, and at the restart, against the power band. */
-import {gripLimitN, roadForces, thrustN} from '../../drivetrain/forces.ts';
-import type {Candidate} from '../candidates.ts';
 import type {Condition} from '../conditions.ts';
 import type {Verdict} from '../results.ts';
 import type {PlaceRun} from '../run-place.ts';
@@ -13,10 +11,9 @@ export const band: RowCheck = (row, ground) => {
 		const {place, state, result} = run;
 		if (state === 'stops') worst = worseOf(worst, stops(place.name, condition.name));
 		if (state !== 'ran' && state !== 'held') return;
-		worst = worseOf(worst, pull(run, condition, row.candidate, ground, 'exit', result.exitSpeedMps, result.exitRpm));
+		worst = worseOf(worst, pull(run, condition, ground, 'exit', result.exitRpm));
 		if (result.minimumRpm === null) return;
-		const speedMps = result.minimumSpeedMps!;
-		worst = worseOf(worst, pull(run, condition, row.candidate, ground, 'minimum', speedMps, result.minimumRpm));
+		worst = worseOf(worst, pull(run, condition, ground, 'minimum', result.minimumRpm));
 	});
 	return checkOf('band', worst);
 };
@@ -28,15 +25,13 @@ export const band: RowCheck = (row, ground) => {
 export function pull(
 	run: PlaceRun,
 	condition: Condition,
-	candidate: Candidate,
 	ground: Ground,
-	part: string,
-	speedMps: number,
+	part: 'exit' | 'minimum',
 	rpm: number,
 ): Reading {
 	const {band, engine} = ground.plan;
 	const lame = rpm < engine.pullRpm;
-	const below = lame || (rpm < band.lowRpm && gripIsSpare(run, condition, candidate, speedMps));
+	const below = lame || (rpm < band.lowRpm && run.spareGripN[part] > 0);
 	const bound = lame ? Math.max(band.lowRpm, engine.pullRpm) : band.lowRpm;
 	const verdict: Verdict = below ? 'near' : 'pass';
 	return {
@@ -49,10 +44,6 @@ export function pull(
 		situation: condition.name,
 		remark: remarkOn(lame, below, rpm < band.lowRpm),
 	};
-}
-
-function gripIsSpare({course, result}: PlaceRun, {vehicle}: Condition, {train}: Candidate, speedMps: number): boolean {
-	return thrustN(vehicle, train, result.exitGear, speedMps) < gripLimitN(roadForces(vehicle, course!), speedMps);
 }
 
 function remarkOn(lame: boolean, below: boolean, outside: boolean): string | undefined {

@@ -16,10 +16,13 @@ export const limit: RowCheck = (row, ground) => {
 	return checkOf('limit', worst);
 };
 
+/** An RPM that was turned into a speed and back is the same to within this. */
+const roundingRpm = 1e-6;
+
 /** Fail above the limit; near within the margin, which halves once the model agrees with what was measured. */
 export function limitVerdict(rpm: number, {plan, anchored}: Ground): Verdict {
 	const margin = plan.limit.rpm - rpm;
-	if (margin < 0) return 'fail';
+	if (margin < -roundingRpm) return 'fail';
 	return margin < plan.car.margins.limitRpm / (anchored ? 2 : 1) ? 'near' : 'pass';
 }
 

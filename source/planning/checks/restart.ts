@@ -23,7 +23,7 @@ export const restart: RowCheck = (row, ground) => {
 		const {exitSpeedMps, exitGear} = run.result;
 		const overall = row.candidate.train.overall[exitGear - 1]!;
 		const rpm = rpmAt(condition.vehicle, overall, exitSpeedMps, condition.steadySlip);
-		worst = worseOf(worst, pull(run, condition, row.candidate, ground, '', exitSpeedMps, rpm));
+		worst = worseOf(worst, {...pull(run, condition, ground, 'exit', rpm), part: ''});
 	}
 	return checkOf('restart', worst);
 };
