@@ -49,7 +49,7 @@ const track = {
 export const commands: readonly Command[] = [
 	{
 		name: 'rank',
-		summary: 'rank every pair and gearbox set on the rack, best first, with the checks and the reason',
+		summary: 'rank every pair and gearbox set, best first, with checks and reasons',
 		argument: track,
 		options: ['car', 'situation', 'top', ...everywhere],
 		examples: [
@@ -71,7 +71,7 @@ export const commands: readonly Command[] = [
 	},
 	{
 		name: 'run',
-		summary: 'each straight with one pair: gears, shift points, top speed, time; all checks',
+		summary: 'one pair on each straight: gears, shifts, speeds, times; all checks',
 		argument: track,
 		options: ['car', 'pair', 'gearbox', ...everywhere],
 		examples: [

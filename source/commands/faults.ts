@@ -1,14 +1,17 @@
-/** What only the whole of track and car shows to be wrong, in words. */
-import {visible} from '../documents/visible.ts';
+/** What only the whole of track and car shows to be wrong, told like a document's own problems. */
+import {describeProblems} from '../documents/read.ts';
 import type {Fault} from '../planning/results.ts';
 import {badInput, type Refusal} from './reply.ts';
 
-/** One line a fault: document, path, found, allowed. */
+const sources = ['track', 'car', 'command'] as const;
+
+/** One line a fault, under the name of the file or of the command line. */
 export const refuseFaults = (faults: readonly Fault[], labels: {track: string; car: string}): Refusal => {
-	const label = (fault: Fault) => (fault.document === 'command' ? 'command line' : labels[fault.document]);
-	const lines = faults.map(fault => {
-		const where = fault.path === '' ? '' : ` ${visible(fault.path)}:`;
-		return `${label(fault)}:${where} found ${visible(fault.found)}; expected ${visible(fault.allowed)}.`;
+	const label = {...labels, command: 'command line'};
+	const paragraphs = sources.flatMap(source => {
+		const own = faults.filter(fault => fault.document === source);
+		const problems = own.map(({path, found, allowed}) => ({path, found, allowed}));
+		return problems.length > 0 ? [describeProblems(label[source], problems)] : [];
 	});
-	return badInput(lines.join('\n'));
+	return badInput(paragraphs.join('\n'));
 };

@@ -58,8 +58,7 @@ const settingWords = (setting: Setting, units: Units): string =>
 	].join(' · ');
 
 /** What the reader must know before acting on an answer. */
-export const caution =
-	"An estimate: check it in practice. The engine builder's limit, the rule book and the officials decide.";
+export const caution = "An estimate: the engine builder's limit, the rule book and officials decide.";
 
 /** Remarks, each once, and the caution. */
 export const closingView = (remarks: readonly string[]): Block[] => [

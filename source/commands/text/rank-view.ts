@@ -73,9 +73,10 @@ const reasonsView = (shown: readonly Placed[]): Block[] => {
 const legend = (shown: readonly Placed[]): string =>
 	[
 		...(shown.some(({row}) => row.installed) ? ['* in the car'] : []),
-		'time: the straights in their fastest gears',
-		'margin: to the limit',
-		'exit rpm: the lowest, and how far above the band it is',
+		'time s: in the fastest gears',
+		'margin: below the limit',
+		'exit rpm: the lowest',
+		'band: that above its low end',
 	].join('; ');
 
 const moreView = ({ranking}: RankAnswer, shown: readonly Placed[]): Block[] => {
