@@ -1,12 +1,18 @@
 import {defineConfig} from 'vitest/config';
+import {inkTable} from './ink-table.ts';
 
 const root = new URL('..', import.meta.url).pathname;
 const hashBang = '#!/usr/bin/env node';
 
 export default defineConfig(({command}) => ({
 	root,
+	plugins: [inkTable()],
 	// Only for the build: in tests it would send every library through the transformer.
-	...(command === 'build' && {ssr: {noExternal: true as const}, define: {'process.env.NODE_ENV': '"production"'}}),
+	...(command === 'build' && {
+		ssr: {noExternal: true as const},
+		define: {'process.env.NODE_ENV': '"production"', 'process.env.DEV': '"false"'},
+		resolve: {alias: {'react-devtools-core': new URL('no-devtools.ts', import.meta.url).pathname}},
+	}),
 	build: {
 		ssr: 'source/droprack.ts',
 		target: 'node20',
@@ -21,5 +27,9 @@ export default defineConfig(({command}) => ({
 			},
 		},
 	},
-	test: {include: ['tests/**/*.test.ts'], testTimeout: 30_000},
+	test: {
+		include: ['tests/**/*.test.ts', 'tests/**/*.test.tsx'],
+		testTimeout: 30_000,
+		server: {deps: {inline: ['ink-table']}},
+	},
 }));
