@@ -22,7 +22,11 @@ export type GearCurves = {
 const samples = 160;
 
 /** The straight of that number in a situation of a row that has been run. */
-function placeIn(run: RowRun, situation: string, straight: number): {place: PlaceRun; within: SituationRun} | undefined {
+function placeIn(
+	run: RowRun,
+	situation: string,
+	straight: number,
+): {place: PlaceRun; within: SituationRun} | undefined {
 	const within = run.situations.find(({condition}) => condition.name === situation) ?? run.situations[0];
 	const place = within?.places[straight];
 	return within === undefined || place === undefined ? undefined : {place, within};

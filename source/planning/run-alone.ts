@@ -21,7 +21,10 @@ export function runAlone(car: Car, track: Track, choice: Choice = {}, options: P
 	if (!chosen.ok) return chosen;
 	const pair = onRack(plan.value.car, chosen.value.pair);
 	const gearbox = gearboxNamed(plan.value.car, chosen.value.gearbox);
-	if (pair === undefined || gearbox === undefined) return failed([fault('car', 'installed', 'a pair or set that is not there', 'a pair on the rack and a set of the car')]);
+	if (pair === undefined || gearbox === undefined)
+		return failed([
+			fault('car', 'installed', 'a pair or set that is not there', 'a pair on the rack and a set of the car'),
+		]);
 	const ground = groundOf(plan.value);
 	const row = rowOf(runRow(plan.value, candidateOf(plan.value.car, pair, gearbox)), ground);
 	return done({setting: settingOf(plan.value, ground.anchored), row, remarks: []});

@@ -1,7 +1,11 @@
 /** A field of cells to draw on: braille dots (2 × 4 a cell), or one mark a cell where only ASCII can be shown. */
 import type {Meaning, Piece} from './pieces.ts';
 
-export type Pen = {readonly mark: string; readonly tone: Meaning; /** Draw every so many dots. */ readonly every?: number};
+export type Pen = {
+	readonly mark: string;
+	readonly tone: Meaning /** Draw every so many dots. */;
+	readonly every?: number;
+};
 
 /** The bit of each dot of a braille cell (Unicode chapter 21.1), by column and row. */
 const dotBits = [
@@ -50,7 +54,8 @@ export class Canvas {
 		if (this.#labeled.has(index)) return;
 		const before = this.#cells[index];
 		if (this.#ascii) this.#cells[index] = {dots: 0, tone, text: mark, under: false};
-		else if (before === undefined || before.under) this.#cells[index] = {dots: bitOf(x, y), tone, text: undefined, under: false};
+		else if (before === undefined || before.under)
+			this.#cells[index] = {dots: bitOf(x, y), tone, text: undefined, under: false};
 		else before.dots |= bitOf(x, y);
 	}
 

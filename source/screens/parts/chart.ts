@@ -20,7 +20,7 @@ export type Series = {
 export type Level = {readonly y: number; readonly name: string};
 /** A place with a sign, such as a shift. */
 export type Sign = {readonly x: number; readonly y: number; readonly text: string; readonly tone: Meaning};
-export type Axis = {readonly name: string; /** Always inside. */ readonly include?: readonly number[]};
+export type Axis = {readonly name: string /** Always inside. */; readonly include?: readonly number[]};
 
 export type Chart = {
 	readonly x: Axis;
@@ -64,7 +64,11 @@ export function drawChart(chart: Chart, size: ChartSize): Pieces[] {
 		return [piece(`${(label ?? '').padStart(gutter - 1)}${label === undefined ? ' │' : ' ┤'}`, 'muted'), ...cells];
 	});
 	const column = (value: number) => Math.floor(place.x(value) / wide);
-	return [line(`${' '.repeat(gutter)}${chart.y.name}`, 'muted'), ...body, ...axisBelow(chart, spans.x, column, gutter, columns)];
+	return [
+		line(`${' '.repeat(gutter)}${chart.y.name}`, 'muted'),
+		...body,
+		...axisBelow(chart, spans.x, column, gutter, columns),
+	];
 }
 
 function spansOf({x, y, series, levels = [], signs = []}: Chart): {x: Span; y: Span} | undefined {
@@ -123,7 +127,13 @@ function nameLine({name, tone, points}: Series, canvas: Canvas, place: Place): v
 	}
 }
 
-function axisBelow({x}: Chart, span: Span, column: (value: number) => number, gutter: number, columns: number): Pieces[] {
+function axisBelow(
+	{x}: Chart,
+	span: Span,
+	column: (value: number) => number,
+	gutter: number,
+	columns: number,
+): Pieces[] {
 	const ticks = niceTicks(span.from, span.to, Math.max(2, Math.round(columns / columnsPerTick)));
 	const labels = tickLabels(ticks);
 	const rule = Array.from({length: columns}, () => '─');
@@ -138,7 +148,9 @@ function axisBelow({x}: Chart, span: Span, column: (value: number) => number, gu
 		if (isClear) below = below.slice(0, start) + label + below.slice(start + label.length);
 	}
 	// The name of the axis takes the place of the last number where there is no room behind it.
-	const numbers = below.slice(0, columns - displayWidth(name)).replace(/\S+$/, cut => (below[columns - displayWidth(name)] === ' ' ? cut : ''));
+	const numbers = below
+		.slice(0, columns - displayWidth(name))
+		.replace(/\S+$/, cut => (below[columns - displayWidth(name)] === ' ' ? cut : ''));
 	const axis: Piece[] = [piece(`${' '.repeat(gutter)}└${rule.join('')}`, 'muted')];
 	return [axis, [piece(`${' '.repeat(gutter + 1)}${numbers.padEnd(columns - displayWidth(name))}${name}`, 'muted')]];
 }

@@ -1,6 +1,7 @@
 /** One editable line: a pure reducer, so that any number of fields share one key handler. */
 import {visible} from '../../documents/visible.ts';
 import {type KeyEvent, keyName} from '../terminal/key-event.ts';
+import {withoutSequences} from '../terminal/sequences.ts';
 import {after, before, wordAfter, wordBefore} from './graphemes.ts';
 
 /** `caret` is an offset in UTF-16 units, always between two whole characters. */
@@ -63,10 +64,8 @@ function inserted({text, caret}: EditLine, added: string): EditLine {
 }
 
 /** Terminal sequences are taken out as a whole, and then every character that is not shown as itself. */
-function printable(text: string): string {
-	const plain = text.replace(/\x1B(?:\[[0-?]*[ -/]*[@-~]|[\]PX^_][^\x07\x1B]*(?:\x07|\x1B\\)|.)/g, '');
-	return [...plain].filter(character => visible(character) === character).join('');
-}
+const printable = (text: string): string =>
+	[...withoutSequences(text)].filter(character => visible(character) === character).join('');
 
 /** The first line with anything on it, without the blanks around it. */
 const firstLine = (text: string): string =>

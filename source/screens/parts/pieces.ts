@@ -58,5 +58,9 @@ export function tall(lines: readonly Pieces[], height: number): Pieces[] {
 }
 
 /** Padded to a column. */
-export const padded = (text: string, width: number, tone: Meaning = 'plain', align: 'left' | 'right' = 'left'): Piece =>
-	({text: padTo(visible(text), width, align), tone});
+export const padded = (
+	text: string,
+	width: number,
+	tone: Meaning = 'plain',
+	align: 'left' | 'right' = 'left',
+): Piece => ({text: padTo(visible(text), width, align), tone});

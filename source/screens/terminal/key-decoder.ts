@@ -73,7 +73,8 @@ export class KeyDecoder {
 		const name = controls[character];
 		if (name !== undefined) return keyEvent(name, {alt});
 		if (character === '\0') return keyEvent('space', {alt, ctrl: true});
-		if (character < ' ') return keyEvent(String.fromCharCode(character.charCodeAt(0) + letterBefore), {alt, ctrl: true});
+		if (character < ' ')
+			return keyEvent(String.fromCharCode(character.charCodeAt(0) + letterBefore), {alt, ctrl: true});
 		return alt ? keyEvent(character, {alt}) : {kind: 'text', text: character};
 	}
 

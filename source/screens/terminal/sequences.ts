@@ -41,36 +41,43 @@ const byNumber: Readonly<Record<string, string>> = {
 	24: 'f12',
 };
 
-/** Control sequences (ECMA-48): parameters, intermediates, a final character. */
-const control = /^\x1B\[([0-?]*)[ -/]*([@-~])/;
-const unfinishedControl = /^\x1B\[[0-?]*[ -/]*$/;
+const esc = '\x1B';
+// What follows the ESC. A control sequence (ECMA-48): parameters, intermediates, a final character.
+const control = /^\[([0-?]*)[ -/]*([@-~])/;
+const unfinishedControl = /^\[[0-?]*[ -/]*$/;
+const single = /^O([A-Za-z])/;
 /** A mouse report of the oldest kind: three more characters. */
-const oldMouse = '\x1B[M';
-const oldMouseLength = 6;
-/** The Linux console's F1 to F5: ESC [ [ A to E. */
-const linuxConsole = '\x1B[[';
-const linuxConsoleLength = 4;
-/** Answers of the terminal, closed by BEL or ST: ESC ] … , ESC P … , ESC X … , ESC ^ … , ESC _ … */
-const string = /^\x1B[\]PX^_][^\x07\x1B]*(?:\x07|\x1B\\)/;
-const unfinishedString = /^\x1B[\]PX^_][^\x07\x1B]*\x1B?$/;
+const oldMouse = /^\[M[\s\S]{3}/u;
+const unfinishedOldMouse = /^\[M[\s\S]{0,2}$/u;
+/** The Linux console's F1 to F5. */
+const linuxConsole = /^\[\[[\s\S]/u;
+/** Answers of the terminal, closed by BEL or by ESC and a backslash. */
+const answer = /^[\]PX^_]\P{Cc}*\p{Cc}\\?/u;
+const unfinishedAnswer = /^[\]PX^_]\P{Cc}*$/u;
 
 /** Whether the text may be the beginning of a sequence whose rest is still on its way. */
 export function isUnfinished(text: string): boolean {
-	if (text.startsWith(oldMouse)) return text.length < oldMouseLength;
-	if (text.startsWith(linuxConsole)) return text.length < linuxConsoleLength;
-	return text === '\x1B' || text === '\x1BO' || unfinishedControl.test(text) || unfinishedString.test(text);
+	const body = text.slice(esc.length);
+	if (body === '' || body === 'O' || body === '[[') return true;
+	if (unfinishedOldMouse.test(body) || unfinishedControl.test(body)) return true;
+	return unfinishedAnswer.test(body) || (body.endsWith(esc) && unfinishedAnswer.test(body.slice(0, -1)));
 }
 
 /** The sequence at the start of a text that starts with ESC; undefined where it is just the key Esc, or Alt with a key. */
 export function sequenceAt(text: string): Sequence | undefined {
-	if (text.startsWith(oldMouse)) return {length: oldMouseLength};
-	if (text.startsWith(linuxConsole)) return {length: linuxConsoleLength};
-	const found = control.exec(text);
-	if (found) return {length: found[0].length, ...controlKey(found[1]!, found[2]!)};
-	const single = /^\x1BO([A-Za-z])/.exec(text);
-	if (single) return {length: single[0].length, ...named(byFinal[single[1]!], 0)};
-	const answer = string.exec(text);
-	return answer ? {length: answer[0].length} : undefined;
+	const body = text.slice(esc.length);
+	const meaningless = oldMouse.exec(body) ?? linuxConsole.exec(body) ?? answer.exec(body);
+	if (meaningless) return {length: esc.length + meaningless[0].length};
+	const found = control.exec(body);
+	if (found) return {length: esc.length + found[0].length, ...controlKey(found[1]!, found[2]!)};
+	const short = single.exec(body);
+	return short ? {length: esc.length + short[0].length, ...named(byFinal[short[1]!], 0)} : undefined;
+}
+
+/** The text without the sequences in it: a paste may hold what a program wrote to a terminal. */
+export function withoutSequences(text: string): string {
+	const [first = '', ...rest] = text.split(esc);
+	return first + rest.map(part => part.slice((sequenceAt(esc + part)?.length ?? 1) - 1)).join('');
 }
 
 function controlKey(parameters: string, final: string): {event?: KeyEvent} {

@@ -1,0 +1,96 @@
+/** Ranks in slices, so that keys are answered while a long rack is still being run. */
+import {type Ranked, rankSteps} from '../../planning/rank-rack.ts';
+import type {Outcome, SingleRun} from '../../planning/results.ts';
+import {runAlone} from '../../planning/run-alone.ts';
+import type {Progress} from '../../planning/run-rack.ts';
+import {type Answer, type Inputs, readBoth, wrongFromFault} from './answer.ts';
+
+export type Clock = {
+	/** Milliseconds; only differences count. */
+	now(): number;
+	/** Calls back when keys and drawing have had their turn; the result takes it back. */
+	later(act: () => void): () => void;
+};
+
+/** What is done within these is shown in the same frame as the key. */
+const firstSliceMs = 40;
+/** Short enough that no key waits noticeably. */
+const sliceMs = 12;
+
+type Steps = Generator<Progress, Outcome<Ranked>, void>;
+
+export class Ranker {
+	#answer: Answer;
+	readonly #clock: Clock;
+	readonly #changed: () => void;
+	#cancel: (() => void) | undefined;
+
+	constructor(clock: Clock, changed: () => void) {
+		this.#clock = clock;
+		this.#changed = changed;
+		this.#answer = {is: 'working', progress: {done: 0, total: 0}, first: undefined, before: undefined};
+	}
+
+	get answer(): Answer {
+		return this.#answer;
+	}
+
+	/** Only the pair in the car at once; the rest once that has been drawn. */
+	start(inputs: Inputs): void {
+		const read = readBoth(inputs.documents);
+		const first = read.ok ? runAlone(read.car, read.track, {}, inputs) : undefined;
+		this.#begin(inputs, first?.ok ? first.value : undefined, 0);
+	}
+
+	/** Ranks anew: at once as far as a frame allows. */
+	rank(inputs: Inputs): void {
+		this.#begin(inputs, undefined, firstSliceMs);
+	}
+
+	/** Leaves what is under way; whether there was anything. */
+	stop(): boolean {
+		if (this.#answer.is !== 'working') return false;
+		this.#cancel?.();
+		this.#cancel = undefined;
+		const {progress, before} = this.#answer;
+		this.#answer = {is: 'stopped', progress, before};
+		return true;
+	}
+
+	#begin(inputs: Inputs, first: SingleRun | undefined, sliceMs: number): void {
+		this.#cancel?.();
+		this.#cancel = undefined;
+		const read = readBoth(inputs.documents);
+		if (!read.ok) {
+			this.#answer = {is: 'faulty', wrong: read.wrong};
+			return;
+		}
+		const before =
+			this.#answer.is === 'ready'
+				? this.#answer.ranked
+				: this.#answer.is === 'faulty'
+					? undefined
+					: this.#answer.before;
+		this.#answer = {is: 'working', progress: {done: 0, total: 0}, first, before};
+		this.#work(rankSteps(read.car, read.track, {situation: inputs.situation}), sliceMs);
+	}
+
+	/** One slice; what is left comes later. */
+	#work(steps: Steps, budgetMs: number): void {
+		const end = this.#clock.now() + budgetMs;
+		while (this.#clock.now() < end) {
+			const step = steps.next();
+			if (step.done) {
+				this.#answer = step.value.ok
+					? {is: 'ready', ranked: step.value.value}
+					: {is: 'faulty', wrong: step.value.faults.map(wrongFromFault)};
+				return;
+			}
+			if (this.#answer.is === 'working') this.#answer = {...this.#answer, progress: step.value};
+		}
+		this.#cancel = this.#clock.later(() => {
+			this.#work(steps, sliceMs);
+			this.#changed();
+		});
+	}
+}
