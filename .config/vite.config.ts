@@ -1,10 +1,25 @@
 import {defineConfig} from 'vitest/config';
 
 const root = new URL('..', import.meta.url).pathname;
+const hashBang = '#!/usr/bin/env node';
 
-export default defineConfig({
+export default defineConfig(({command}) => ({
 	root,
-	ssr: {noExternal: true},
-	build: {ssr: 'source/droprack.ts', target: 'node20', minify: true, outDir: 'dist', emptyOutDir: true},
+	// Only for the build: in tests it would send every library through the transformer.
+	...(command === 'build' && {ssr: {noExternal: true as const}, define: {'process.env.NODE_ENV': '"production"'}}),
+	build: {
+		ssr: 'source/droprack.ts',
+		target: 'node20',
+		minify: true,
+		outDir: 'dist',
+		emptyOutDir: true,
+		rolldownOptions: {
+			output: {
+				entryFileNames: 'droprack.js',
+				chunkFileNames: 'chunks/[name].js',
+				banner: (chunk: {isEntry: boolean}) => (chunk.isEntry ? hashBang : ''),
+			},
+		},
+	},
 	test: {include: ['tests/**/*.test.ts'], testTimeout: 30_000},
-});
+}));

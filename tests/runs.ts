@@ -1,3 +1,3 @@
-// Sampled in npm test, in full in npm run test:full.
+/** How many runs a property gets: a sample in everyday use, the whole number in the full suite. */
 export const full = process.env.DROPRACK_FULL === '1';
 export const runs = (sample: number, whole: number) => (full ? whole : sample);

@@ -3,9 +3,9 @@
 /** Standard acceleration of free fall (3rd CGPM, 1901), m/s². Exact. */
 export const standardGravityMps2 = 9.80665;
 
-/** The inch and the mile of the international yard and pound agreement (1959), m. Exact. */
+/** The inch and the mile (63 360 in) of the international yard and pound agreement (1959), m. Exact. */
 export const inchM = 0.0254;
-export const mileM = 63360 * inchM;
+export const mileM = 1609.344;
 
 /** One mile per hour, m/s. Exact. */
 export const mphMps = mileM / 3600;

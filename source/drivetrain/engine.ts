@@ -35,7 +35,7 @@ export function peakPower(curve: MonotoneCubic, limitRpm: number): PowerPeak {
 
 /**
  * The span of RPM around the peak in which the power is at least `share` (0 to 1) of the peak's, on the interpolated curve
- * between the same ends. A second such span beyond a dip is not part of it. Ends are exact to 1e-12 of their value.
+ * between the same ends. A second such span beyond a dip is not part of it. Power at an end inside the curve is the share to 1e-9.
  */
 export function powerBand(curve: MonotoneCubic, share: number, limitRpm: number): PowerBand {
 	const places = turns(curve, limitRpm);

@@ -1,0 +1,150 @@
+/** From the words of the command line to a request, or to what is wrong with them. */
+import {parseArgs} from 'node:util';
+import {type Command, commandNamed, commands, type OptionName, option, options} from './command-table.ts';
+import {didYouMean} from './nearest.ts';
+
+export type UnitSystem = 'us' | 'metric';
+
+export type Request = {
+	/** The one argument as it was written; undefined where none was given. */
+	argument: string | undefined;
+	car?: string;
+	situation?: string;
+	top?: number;
+	pair?: {driving: number; driven: number};
+	gearbox?: string;
+	prefer?: string;
+	json: boolean;
+	units: UnitSystem;
+	strict: boolean;
+	ascii: boolean;
+};
+
+export type CommandLine =
+	/** Without a command the request is for the demo. */
+	| {kind: 'run'; command: Command | undefined; request: Request}
+	| {kind: 'help'; command: Command | undefined}
+	| {kind: 'version'}
+	| {kind: 'bad'; message: string};
+
+type Given = Partial<Record<OptionName, string | true>>;
+type Token = {
+	kind: string;
+	name?: string;
+	rawName?: string;
+	value?: string | undefined;
+	inlineValue?: boolean | undefined;
+};
+
+const bad = (message: string): CommandLine => ({kind: 'bad', message});
+const isOption = (name: string): name is OptionName => Object.hasOwn(options, name);
+/** The options that stand without a command: they ask for the ranking of the demo. */
+const bareOptions: readonly OptionName[] = commandNamed('rank')?.options ?? [];
+
+const parserOptions = Object.fromEntries(
+	Object.keys(options).map(name => {
+		const {value, short} = option(name as OptionName);
+		return [name, {type: value === undefined ? 'boolean' : 'string', ...(short && {short})}] as const;
+	}),
+);
+
+/** What is wrong with one option as given, or undefined. */
+const optionProblem = (
+	token: Token,
+	allowed: readonly OptionName[],
+	command: Command | undefined,
+): string | undefined => {
+	const name = token.name ?? '';
+	const written = token.rawName ?? `--${name}`;
+	const where = command ? `droprack ${command.name}` : 'droprack';
+	if (!isOption(name)) {
+		const meant = didYouMean(
+			written,
+			allowed.map(known => `--${known}`),
+		);
+		return `unknown option ${written}.${meant} ${where} --help lists the options.`;
+	}
+	if (!allowed.includes(name)) return `${where} takes no ${written}. ${where} --help lists its options.`;
+	const {value} = option(name);
+	if (value === undefined) return token.inlineValue ? `${written} takes no value, found ${token.value}.` : undefined;
+	const missing = token.value === undefined || (!token.inlineValue && /^-./.test(token.value));
+	return missing || token.value === '' ? `${written} needs a value: ${written} ${value}.` : undefined;
+};
+
+const pairPattern = /^\s*(\d{1,4})\s*\/\s*(\d{1,4})\s*$/;
+
+/** The request that the options make, or what is wrong with a value. */
+const toRequest = (argument: string | undefined, given: Given): Request | string => {
+	const text = (name: OptionName) => (typeof given[name] === 'string' ? {[name]: given[name]} : {});
+	const request: Request = {
+		argument,
+		json: given.json === true,
+		units: 'us',
+		strict: given.strict === true,
+		ascii: given.ascii === true,
+		...text('car'),
+		...text('situation'),
+		...text('gearbox'),
+		...text('prefer'),
+	};
+	if (given.units === 'metric') request.units = 'metric';
+	else if (given.units !== undefined && given.units !== 'us') return `--units is us or metric, found ${given.units}.`;
+	if (typeof given.top === 'string') {
+		if (!/^[1-9]\d{0,5}$/.test(given.top)) return `--top is a whole number from 1, found ${given.top}.`;
+		request.top = Number(given.top);
+	}
+	if (typeof given.pair === 'string') {
+		const [, driving, driven] = pairPattern.exec(given.pair) ?? [];
+		if (!Number(driving) || !Number(driven)) return `--pair is driving/driven, such as 33/38, found ${given.pair}.`;
+		request.pair = {driving: Number(driving), driven: Number(driven)};
+	}
+	if (argument === '-' && request.car === '-') return 'only one of TRACK and --car can be standard input.';
+	return request;
+};
+
+const unknownCommand = (name: string): string => {
+	const looksLikeFile = name.includes('/') || name.endsWith('.json');
+	const names = commands.map(command => command.name);
+	const meant = looksLikeFile ? ` To rank a track: droprack rank ${name}` : didYouMean(name, names);
+	return `unknown command ${name}.${meant}\nCommands: ${names.join(', ')}. droprack --help says more.`;
+};
+
+/**
+ * Reads the words after the program's name. Options may stand anywhere; the last of a repeated option counts.
+ * `--help` and `--version` come before everything that is wrong with the rest.
+ */
+export const readCommandLine = (words: readonly string[]): CommandLine => {
+	const {tokens, positionals} = parseArgs({
+		args: [...words],
+		options: parserOptions,
+		strict: false,
+		allowPositionals: true,
+		tokens: true,
+	});
+	const asksHelp = positionals[0] === 'help';
+	const [name, argument, ...more] = asksHelp ? positionals.slice(1) : positionals;
+	const command = name === undefined ? undefined : commandNamed(name);
+	if (name !== undefined && !command) return bad(unknownCommand(name));
+	const optionTokens = tokens.filter(token => token.kind === 'option') as Token[];
+	const has = (option: OptionName) => optionTokens.some(token => token.name === option);
+	if (asksHelp || has('help')) return {kind: 'help', command};
+	if (has('version')) return {kind: 'version'};
+
+	const allowed = command?.options ?? bareOptions;
+	const given: Given = {};
+	for (const token of optionTokens) {
+		const problem = optionProblem(token, allowed, command);
+		if (problem !== undefined) return bad(problem);
+		given[token.name as OptionName] = token.value ?? true;
+	}
+	const surplus = command?.argument ? more : [argument, ...more].filter(word => word !== undefined);
+	if (command && surplus.length > 0) return bad(surplusWords(command, surplus));
+	const request = toRequest(argument, given);
+	return typeof request === 'string' ? bad(request) : {kind: 'run', command, request};
+};
+
+const surplusWords = (command: Command, surplus: readonly string[]): string => {
+	const takes = command.argument ? `takes one ${command.argument.name}` : 'takes no argument';
+	const quote = command.argument ? ' A name with blanks needs quotes.' : '';
+	return `droprack ${command.name} ${takes}, found also: ${surplus.join(' ')}.${quote}`;
+};

@@ -1,0 +1,128 @@
+/** Every command and option once: parsing, help and the messages about unknown ones are made from these tables. */
+import type {Request} from './arguments.ts';
+import type {Reply} from './reply.ts';
+import type {Surroundings} from './surroundings.ts';
+
+export type Option = {
+	/** What stands for the value in help; an option without one is a switch. */
+	value?: string;
+	short?: string;
+	summary: string;
+};
+
+export const options = {
+	car: {value: 'CAR', summary: 'the car: a file, or the name of a saved or shipped one'},
+	situation: {value: 'NAME', summary: 'rank by this situation alone'},
+	top: {value: 'N', summary: 'show the first N rows'},
+	pair: {value: 'PAIR', summary: 'driving/driven teeth, such as 33/38; the installed pair unless given'},
+	gearbox: {value: 'SET', summary: 'the gearbox set; the installed one unless given'},
+	prefer: {value: 'NAME', summary: 'take this car where none is named; "none" clears it'},
+	json: {summary: 'print the result for programs: JSON, SI units, not rounded'},
+	units: {value: 'us|metric', summary: 'units of the text output; us unless given'},
+	strict: {summary: 'end with status 1 if the plan fails a check'},
+	ascii: {summary: 'print ASCII characters only'},
+	help: {short: 'h', summary: 'show this help'},
+	version: {summary: 'show the version'},
+} as const satisfies Record<string, Option>;
+export type OptionName = keyof typeof options;
+export const option = (name: OptionName): Option => options[name];
+
+export type CommandRun = (request: Request, around: Surroundings) => Promise<Reply>;
+
+export type Command = {
+	name: string;
+	summary: string;
+	/** The one argument, where there is one. */
+	argument?: {name: string; summary: string};
+	options: readonly OptionName[];
+	examples: readonly {line: string; gives: string}[];
+	/** Loads what the command needs, and only that. */
+	load: () => Promise<CommandRun>;
+};
+
+const everywhere = ['json', 'units', 'strict', 'ascii', 'help', 'version'] as const;
+const track = {
+	name: 'TRACK',
+	summary: 'a file (with a slash or .json), a saved or a shipped track, or - for standard input',
+};
+
+export const commands: readonly Command[] = [
+	{
+		name: 'rank',
+		summary: 'rank every pair and gearbox set, best first, with checks and reasons',
+		argument: track,
+		options: ['car', 'situation', 'top', ...everywhere],
+		examples: [
+			{line: 'droprack rank friday.json --car ours.json', gives: 'your car at your track'},
+			{line: 'droprack rank friday.json --situation "In the tow" --top 5', gives: 'the five best in the tow'},
+		],
+		load: async () => (await import('./rank.ts')).rank,
+	},
+	{
+		name: 'rpm',
+		summary: 'RPM at every point of the track in every gear',
+		argument: track,
+		options: ['car', 'pair', 'gearbox', ...everywhere],
+		examples: [
+			{line: 'droprack rpm friday.json', gives: 'with the installed pair and set'},
+			{line: 'droprack rpm friday.json --pair 33/38 --gearbox A --units metric', gives: 'with others, in km/h'},
+		],
+		load: async () => (await import('./rpm.ts')).rpm,
+	},
+	{
+		name: 'run',
+		summary: 'one pair on each straight: gears, shifts, speeds, times; all checks',
+		argument: track,
+		options: ['car', 'pair', 'gearbox', ...everywhere],
+		examples: [
+			{line: 'droprack run friday.json --pair 33/38', gives: 'what this pair would do'},
+			{line: 'droprack run friday.json --strict', gives: 'status 1 if the installed pair fails a check'},
+		],
+		load: async () => (await import('./run.ts')).run,
+	},
+	{
+		name: 'tracks',
+		summary: 'list the tracks, shipped and saved',
+		options: everywhere,
+		examples: [
+			{line: 'droprack tracks', gives: 'one line each'},
+			{line: 'droprack tracks --json', gives: 'the same for programs'},
+		],
+		load: async () => (await import('./tracks.ts')).tracks,
+	},
+	{
+		name: 'cars',
+		summary: 'list the cars, shipped and saved; choose the preferred one',
+		options: ['prefer', ...everywhere],
+		examples: [
+			{line: 'droprack cars', gives: 'one line each'},
+			{line: 'droprack cars --prefer none', gives: 'back to the demo car'},
+		],
+		load: async () => (await import('./cars.ts')).cars,
+	},
+	{
+		name: 'show',
+		summary: 'print a track or a car as a document, to start your own from',
+		argument: {name: 'NAME', summary: 'a saved or shipped track or car'},
+		options: everywhere,
+		examples: [
+			{line: 'droprack show NAME', gives: 'the document as it was written'},
+			{line: 'droprack show NAME > friday.json', gives: 'a file of your own to change'},
+		],
+		load: async () => (await import('./show.ts')).show,
+	},
+	{
+		name: 'schema',
+		summary: 'print the JSON Schema of track or car documents, for editors',
+		argument: {name: 'track|car', summary: 'which kind of document'},
+		options: everywhere,
+		examples: [
+			{line: 'droprack schema track > track.schema.json', gives: 'for an editor to check tracks with'},
+			{line: 'droprack schema car', gives: 'what a car document may hold'},
+		],
+		load: async () => (await import('./schema.ts')).schema,
+	},
+];
+
+/** The command of that name. */
+export const commandNamed = (name: string): Command | undefined => commands.find(command => command.name === name);

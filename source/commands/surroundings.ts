@@ -1,0 +1,31 @@
+/** The outer world as the commands see it, so that a test can stand in for it. */
+
+export type Surroundings = {
+	/** The directory of the shipped tracks; the shipped cars are in `cars/` below it. */
+	shipped: URL;
+	environment: Readonly<Record<string, string | undefined>>;
+	now: Date;
+	/** Width of the text output. */
+	columns: number;
+	color: boolean;
+	standardInput: () => AsyncIterable<Uint8Array>;
+};
+
+const columnsThroughPipe = 80;
+
+/** Whether to color, by the usual two variables and otherwise by whether a terminal is looking. */
+export const wantsColor = (environment: Surroundings['environment'], isTerminal: boolean): boolean => {
+	if (environment.NO_COLOR) return false;
+	const forced = environment.FORCE_COLOR;
+	if (forced !== undefined) return forced !== '0' && forced !== 'false';
+	return isTerminal && environment.TERM !== 'dumb';
+};
+
+export const processSurroundings = (shipped: URL): Surroundings => ({
+	shipped,
+	environment: process.env,
+	now: new Date(),
+	columns: process.stdout.columns || columnsThroughPipe,
+	color: wantsColor(process.env, process.stdout.isTTY === true),
+	standardInput: () => process.stdin,
+});

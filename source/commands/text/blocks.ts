@@ -1,0 +1,52 @@
+/** What a view gives: blocks of cells whose meaning is named. Layout takes the width, paint the color. */
+import {visible} from '../../documents/visible.ts';
+
+export type Tone = 'plain' | 'strong' | 'muted' | 'pass' | 'near' | 'fail';
+export type Cell = {text: string; tone: Tone};
+
+export type Column = {
+	head: string;
+	align: 'left' | 'right';
+	/** 0 stays whatever the width; of the others the highest goes first. */
+	keep: number;
+	/** A column with this may be cut to so many characters before others are left out. */
+	shortest?: number;
+};
+export type Table = {kind: 'table'; columns: readonly Column[]; rows: readonly (readonly Cell[])[]; indent: number};
+
+export type Block =
+	/** Wrapped to the width; lines after the first hang under `hang` characters. */
+	| {kind: 'text'; text: string; tone: Tone; hang: number}
+	/** One line, cut to the width. */
+	| {kind: 'line'; cells: readonly Cell[]}
+	| {kind: 'gap'}
+	| Table;
+
+/** A cell; what a stranger's text could do to a terminal becomes visible here. */
+export const cell = (text: string, tone: Tone = 'plain'): Cell => ({text: visible(text), tone});
+
+export const gap: Block = {kind: 'gap'};
+export const text = (content: string, tone: Tone = 'plain', hang = 0): Block => ({
+	kind: 'text',
+	text: visible(content),
+	tone,
+	hang,
+});
+export const line = (...cells: Cell[]): Block => ({kind: 'line', cells});
+export const table = (columns: readonly Column[], rows: readonly (readonly Cell[])[], indent = 0): Block => ({
+	kind: 'table',
+	columns,
+	rows,
+	indent,
+});
+
+/** A column with how it makes its cell of a row. */
+export type Making<T> = Column & {cell: (row: T) => Cell};
+
+/** A table from what each column makes of a row. */
+export const tableOf = <T>(makings: readonly Making<T>[], rows: readonly T[], indent = 0): Block =>
+	table(
+		makings.map(({cell: _, ...column}) => column),
+		rows.map(row => makings.map(making => making.cell(row))),
+		indent,
+	);

@@ -1,0 +1,17 @@
+import * as nodeModule from 'node:module';
+import {answer, replyFault} from './commands/main.ts';
+import {processSurroundings} from './commands/surroundings.ts';
+import {writeReply} from './commands/write-reply.ts';
+
+// Node 22 and later keep compiled code between runs; Node 20 has no such function.
+(nodeModule as {enableCompileCache?: () => unknown}).enableCompileCache?.();
+
+// From the bundle in dist and from here in source, the shipped tracks are next door.
+const surroundings = processSurroundings(new URL('../tracks/', import.meta.url));
+
+process.on('uncaughtException', async error => {
+	process.exit(await writeReply(replyFault(error, surroundings), process.stdout, process.stderr));
+});
+
+const reply = await answer(process.argv.slice(2), surroundings);
+process.exitCode = await writeReply(reply, process.stdout, process.stderr);

@@ -1,0 +1,71 @@
+/** What a person prefers, kept in one small file. */
+import {existsSync, readFileSync} from 'node:fs';
+import {join} from 'node:path';
+
+export type Preferences = {
+	/** Name of the car that is taken where none is named. */
+	car?: string;
+};
+export type PreferencesRead =
+	| {ok: true; value: Preferences}
+	| {ok: false; reason: 'broken' | 'unreachable'; message: string};
+export type PreferencesWritten = {ok: true} | {ok: false; reason: 'broken' | 'unreachable'; message: string};
+
+const configName = 'preferences';
+const formatVersion = 1;
+
+export const preferencesFile = (home: string): string => join(home, `${configName}.json`);
+
+/**
+ * The preferences; none where there is no file. Read here and not by conf, which costs every start 30 ms and
+ * writes a file anew whose content is not an object: a broken file is to stay as it is.
+ */
+export const readPreferences = (home: string): PreferencesRead => {
+	const file = preferencesFile(home);
+	if (!existsSync(file)) return {ok: true, value: {}};
+	const broken = (what: string): PreferencesRead => ({
+		ok: false,
+		reason: 'broken',
+		message: `${file}: ${what}; left as it is. Mend it or remove it.`,
+	});
+	let text: string;
+	try {
+		text = readFileSync(file, 'utf8');
+	} catch (error) {
+		return {ok: false, reason: 'unreachable', message: `${file}: cannot be read (${codeOf(error)}).`};
+	}
+	let content: unknown;
+	try {
+		content = JSON.parse(text);
+	} catch {
+		return broken('the preferences are not valid JSON');
+	}
+	if (typeof content !== 'object' || content === null || Array.isArray(content))
+		return broken('the preferences are not an object');
+	const {version, car} = content as {version?: unknown; car?: unknown};
+	if (version !== formatVersion)
+		return broken(`the preferences have version ${JSON.stringify(version)}, expected ${formatVersion}`);
+	if (car !== undefined && (typeof car !== 'string' || car === '')) return broken('the preferred car is not a name');
+	return {ok: true, value: car === undefined ? {} : {car}};
+};
+
+/** Keeps the preferred car, or forgets it. Writes nothing over a file that cannot be read. */
+export const preferCar = async (home: string, car: string | undefined): Promise<PreferencesWritten> => {
+	const before = readPreferences(home);
+	if (!before.ok) return before;
+	if (before.value.car === car) return {ok: true};
+	try {
+		const {default: Conf} = await import('conf');
+		const store = new Conf({projectName: 'droprack', cwd: home, configName, accessPropertiesByDotNotation: false});
+		store.store = {version: formatVersion, ...(car !== undefined && {car})};
+		return {ok: true};
+	} catch (error) {
+		return {
+			ok: false,
+			reason: 'unreachable',
+			message: `${preferencesFile(home)}: cannot be written (${codeOf(error)}).`,
+		};
+	}
+};
+
+const codeOf = (error: unknown): string => (error as NodeJS.ErrnoException).code ?? String(error);
