@@ -177,3 +177,10 @@ test('text from a stranger is shown without control characters', async () => {
 	expect(message.split('\n')).toHaveLength(2);
 	expect(message.replaceAll('\n', '')).not.toMatch(/[\p{Cc}\u202E]/u);
 });
+
+test('names in a problem are safe to show before anyone describes it', async () => {
+	const straights = ['a\u001B[2J', 'a\u001B[2J'].map(name => ({name, exit: '88\u2028mph'}));
+	const reading = await readTrack(text(trackDocument({straights})));
+	const [problem] = reading.ok ? [] : reading.problems;
+	expect(problem?.found).toBe('a second "a␛[2J"');
+});
