@@ -1,0 +1,109 @@
+/** What several fields of a car must be together. Each rule looks only at what could be read. */
+import {type Report, reportRepeated, rule} from './fields.ts';
+
+type Named = {name?: unknown};
+const nameOf = ({name}: Named) => name;
+
+export const curveRules = () =>
+	rule<readonly {rpm?: unknown; torque?: unknown}[]>((points, report) => {
+		for (let i = 1; i < points.length; i++) {
+			const [before, rpm] = [points[i - 1]?.rpm, points[i]?.rpm];
+			if (typeof before !== 'number' || typeof rpm !== 'number' || rpm > before) continue;
+			report([i, 'rpm'], `more than the ${before} of the point before`);
+		}
+		const isDead = points.length > 0 && points.every(point => point?.torque === 0);
+		if (isDead) report([], 'torque above 0 at one point at least', {found: 'no torque at any point'});
+	});
+
+export const engineRules = () =>
+	rule<{for?: readonly unknown[]}>((engine, report) => {
+		const types = Array.isArray(engine.for) ? engine.for : [];
+		types.forEach((type, i) => {
+			if (types.indexOf(type) < i) report(['for', i], 'each type once', {found: `a second "${type}"`});
+		});
+	});
+
+export const ratioRules = () =>
+	rule<readonly unknown[]>((ratios, report) => {
+		for (let i = 1; i < ratios.length; i++) {
+			const [before, ratio] = [ratios[i - 1], ratios[i]];
+			if (typeof before !== 'number' || typeof ratio !== 'number' || ratio <= before) continue;
+			report([i], `no more than the ${before} of the gear before`);
+		}
+	});
+
+type EfficiencyValues = {
+	efficiency?: unknown;
+	efficiencies?: readonly unknown[] | undefined;
+	gearboxes?: readonly unknown[];
+};
+
+export const efficiencyRules = () =>
+	rule<EfficiencyValues>(({efficiency, efficiencies, gearboxes}, report) => {
+		if (efficiency === undefined && efficiencies === undefined)
+			report(['efficiency'], 'a share like 0.92, or "efficiencies", one a gear');
+		if (efficiencies === undefined) return;
+		if (efficiency !== undefined) report(['efficiencies'], 'either "efficiency" or "efficiencies"');
+		if (!Array.isArray(efficiencies)) return;
+		for (const gearbox of listOf(gearboxes) as {name?: unknown; ratios?: unknown}[]) {
+			const ratios = gearbox?.ratios;
+			if (!Array.isArray(ratios) || ratios.length === efficiencies.length) continue;
+			report(['efficiencies'], `one for each of the ${ratios.length} gears of gearbox "${gearbox.name}"`);
+		}
+	});
+
+type PairValues = {driving?: unknown; driven?: unknown};
+type CarValues = {
+	wheelbase?: unknown;
+	cgHeight?: unknown;
+	engines?: readonly unknown[];
+	gearboxes?: readonly Named[];
+	rack?: {pairs?: readonly PairValues[]; eitherShaft?: unknown};
+	installed?: {pair?: PairValues; gearbox?: unknown} | undefined;
+	rules?: Readonly<Record<string, {gearboxes?: readonly unknown[] | undefined} | undefined>> | undefined;
+};
+
+export const carRules = () =>
+	rule<CarValues>((car, report) => {
+		if (car.wheelbase !== undefined && car.cgHeight === undefined) report(['cgHeight'], 'a height beside "wheelbase"');
+		if (car.cgHeight !== undefined && car.wheelbase === undefined) report(['wheelbase'], 'a length beside "cgHeight"');
+		reportRepeated(listOf(car.engines), nameOf, index => ['engines', index, 'name'], report);
+		reportRepeated(listOf(car.gearboxes), nameOf, index => ['gearboxes', index, 'name'], report);
+		reportRepeated(listOf(car.rack?.pairs), pairName, index => ['rack', 'pairs', index], report);
+		reportUnknownGearboxes(car, report);
+		reportInstalledPair(car, report);
+	});
+
+function reportUnknownGearboxes({gearboxes, installed, rules}: CarValues, report: Report): void {
+	const names = listOf(gearboxes).map(gearbox => gearbox?.name);
+	const checked = (name: unknown, path: PropertyKey[]) => {
+		if (typeof name !== 'string' || names.includes(name)) return;
+		report(path, `a gearbox of this car: ${names.map(known => `"${known}"`).join(', ')}`);
+	};
+	checked(installed?.gearbox, ['installed', 'gearbox']);
+	for (const [type, allowed] of Object.entries(rules ?? {})) {
+		listOf(allowed?.gearboxes).forEach((name, i) => {
+			checked(name, ['rules', type, 'gearboxes', i]);
+		});
+	}
+}
+
+function reportInstalledPair({installed, rack}: CarValues, report: Report): void {
+	const name = pairName(installed?.pair);
+	const pairs = listOf(rack?.pairs);
+	if (name === undefined || pairs.length === 0) return;
+	const flipped = ({driving, driven}: PairValues = {}) => pairName({driving: driven, driven: driving});
+	const names = pairs.flatMap(pair =>
+		rack?.eitherShaft === true ? [pairName(pair), flipped(pair)] : [pairName(pair)],
+	);
+	if (!names.includes(name)) report(['installed', 'pair'], 'a pair of this rack');
+}
+
+function pairName(pair: PairValues | undefined): string | undefined {
+	const {driving, driven} = pair ?? {};
+	return typeof driving === 'number' && typeof driven === 'number' ? `${driving}/${driven}` : undefined;
+}
+
+function listOf<T>(value: readonly T[] | undefined): readonly T[] {
+	return Array.isArray(value) ? value : [];
+}

@@ -1,0 +1,25 @@
+/** Which of the finished sequences is driven. */
+import type {Finish} from './sequence.ts';
+
+/** The least time. */
+export function fastestOf(finishes: readonly Finish[]): Finish {
+	return finishes.reduce((best, finish) => (finish.timeS < best.timeS ? finish : best));
+}
+
+/**
+ * Among those within `sameTimeS` of the fastest: first the ones that never touch the limiter, then the fewest shifts, then
+ * the fastest. A shift that gains less than the driver can feel is not worth making.
+ */
+export function chosenOf(finishes: readonly Finish[], sameTimeS: number): Finish {
+	const bound = fastestOf(finishes).timeS + sameTimeS;
+	return finishes
+		.filter(finish => finish.timeS <= bound)
+		.reduce((best, finish) => (preferred(finish, best) ? finish : best));
+}
+
+function preferred(one: Finish, other: Finish): boolean {
+	const limiter = Number(one.limiterM > 0) - Number(other.limiterM > 0);
+	if (limiter !== 0) return limiter < 0;
+	const shifts = one.entered.length - other.entered.length;
+	return shifts !== 0 ? shifts < 0 : one.timeS < other.timeS;
+}

@@ -1,0 +1,84 @@
+/** The gears of a car on one kind of road: how it moves in each, and where it changes up. Made once, used by many runs. */
+import {type Coast, coast} from './coast.ts';
+import {type Road, type RoadForces, roadForces} from './forces.ts';
+import {GearMotion} from './gear-motion.ts';
+import {GearTable} from './gear-table.ts';
+import {shiftSpeedMps} from './shift-point.ts';
+import type {GearTrain, Vehicle} from './straight.ts';
+import {speedBefore} from './travel.ts';
+
+export type PlannedShift = {
+	/** Where the interruption starts, and the RPM there. */
+	readonly speedMps: number;
+	readonly rpm: number;
+	readonly coasted: Coast;
+	/** In the next gear, after the interruption. */
+	readonly rpmAfter: number;
+};
+
+/** Everything is worked out when it is first asked for: most runs use few of the gears. Gears are counted from 1. */
+export class RoadGears {
+	readonly vehicle: Vehicle;
+	readonly train: GearTrain;
+	readonly forces: RoadForces;
+	readonly #motions: GearMotion[] = [];
+	readonly #tables: GearTable[] = [];
+	readonly #shifts: PlannedShift[] = [];
+	readonly #lights: number[] = [];
+
+	constructor(vehicle: Vehicle, train: GearTrain, road: Road) {
+		this.vehicle = vehicle;
+		this.train = train;
+		this.forces = roadForces(vehicle, road);
+	}
+
+	motion(gear: number): GearMotion {
+		this.#motions[gear] ??= this.#newMotion(gear, this.vehicle.limiterRpm);
+		return this.#motions[gear];
+	}
+
+	/** The same gear with an engine that no limiter cuts. */
+	unlimited(gear: number): GearMotion {
+		return this.#newMotion(gear, Number.POSITIVE_INFINITY);
+	}
+
+	/** The motion with its integrals kept. */
+	table(gear: number): GearTable {
+		this.#tables[gear] ??= new GearTable(this.motion(gear));
+		return this.#tables[gear];
+	}
+
+	/** The shift from a gear to the next. */
+	shift(gear: number): PlannedShift {
+		this.#shifts[gear] ??= this.#planShift(gear);
+		return this.#shifts[gear];
+	}
+
+	/** The speed one reaction time before the planned shift: where the light must come on. */
+	lightMps(gear: number): number {
+		this.#lights[gear] ??= speedBefore(this.motion(gear), this.shift(gear).speedMps, this.vehicle.reactionTimeS);
+		return this.#lights[gear];
+	}
+
+	/** The shift of a car that enters the gear at a speed: it shifts at once where the planned speed is already behind. */
+	shiftFrom(gear: number, enteredMps: number): PlannedShift {
+		const planned = this.shift(gear);
+		return enteredMps <= planned.speedMps ? planned : this.#shiftAt(gear, enteredMps);
+	}
+
+	#newMotion(gear: number, limiterRpm: number): GearMotion {
+		const {overall, efficiency} = this.train;
+		return new GearMotion(this.vehicle, this.forces, overall[gear - 1]!, efficiency[gear - 1]!, limiterRpm);
+	}
+
+	#planShift(gear: number): PlannedShift {
+		const [here, next] = [this.motion(gear), this.motion(gear + 1)];
+		return this.#shiftAt(gear, shiftSpeedMps(here, next, here.speedAt(this.vehicle.shiftCapRpm)));
+	}
+
+	#shiftAt(gear: number, speedMps: number): PlannedShift {
+		const coasted = coast(this.vehicle, this.forces, speedMps, this.vehicle.shiftTimeS);
+		const [rpm, rpmAfter] = [this.motion(gear).rpmAt(speedMps), this.motion(gear + 1).rpmAt(coasted.speedMps)];
+		return {speedMps, rpm, coasted, rpmAfter};
+	}
+}

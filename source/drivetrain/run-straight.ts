@@ -1,0 +1,81 @@
+/** The run on a straight: every rising sequence of gears, and the choice among them. */
+import {chosenOf, fastestOf} from './choose-sequence.ts';
+import {RoadGears} from './road-gears.ts';
+import {atExit, brakingOf, type Carry, described, type Entry, type Finish, finished, shifted} from './sequence.ts';
+import type {Course, GearTrain, StraightRun, Vehicle} from './straight.ts';
+import {brakingDistanceM, travel} from './travel.ts';
+
+/**
+ * The run from the exit to the end of the straight. Fast: sequences that start in the same gear share their way, and each
+ * gear's integrals are kept in `gears` for every run on the same kind of road. Agrees with `runStraightPlainly` to 1e-9.
+ */
+export function runStraight(gears: RoadGears, course: Course): StraightRun {
+	return run(gears, course, startGears => {
+		const carry: Carry = (gear, fromMps, goal) => gears.table(gear).travel(fromMps, goal);
+		return startGears.flatMap(first => finishesFrom(gears, course, first, carry));
+	});
+}
+
+/** The definition: each straight and each sequence by itself, integrated afresh. What the fast way is tested and timed against. */
+export function runStraightPlainly(vehicle: Vehicle, train: GearTrain, course: Course): StraightRun {
+	const gears = new RoadGears(vehicle, train, course);
+	return run(gears, course, startGears => {
+		const carry: Carry = (gear, fromMps, goal) => travel(gears.motion(gear), fromMps, goal);
+		return startGears.flatMap(first =>
+			gearsFrom(first, course.highestGear).map(last => sequence(gears, course, first, last, carry)),
+		);
+	});
+}
+
+function run(
+	gears: RoadGears,
+	course: Course,
+	finishesOf: (startGears: number[]) => (Finish | undefined)[],
+): StraightRun {
+	if (brakingDistanceM(course.exitMps, brakingOf(course)) > course.lengthM) return {kind: 'cannotBrake'};
+	const startGears = gearsFrom(course.lowestGear, course.highestGear).filter(gear => mayStart(gears, course, gear));
+	if (startGears.length === 0) return {kind: 'overLimit'};
+	const finishes = finishesOf(startGears).filter(finish => finish !== undefined);
+	if (finishes.length === 0) return {kind: 'stops'};
+	const [chosen, fastest] = [chosenOf(finishes, gears.vehicle.sameTimeS), fastestOf(finishes)];
+	const told = described(gears, course, chosen);
+	return {kind: 'ran', chosen: told, fastest: fastest === chosen ? told : described(gears, course, fastest)};
+}
+
+const gearsFrom = (lowest: number, highest: number) =>
+	Array.from({length: Math.max(0, highest - lowest + 1)}, (_, i) => lowest + i);
+
+/** No one starts above the limit, nor in a gear whose shift speed is already behind; a start gear that is given only heeds the limit. */
+function mayStart(gears: RoadGears, course: Course, gear: number): boolean {
+	if (course.startGear !== undefined && gear !== course.startGear) return false;
+	const given = course.startGear === gear;
+	const bound =
+		gear === course.highestGear || given
+			? gears.motion(gear).speedAt(gears.vehicle.topRpm)
+			: gears.shift(gear).speedMps;
+	return course.exitMps <= bound;
+}
+
+/** All sequences from one gear, the longer ones going on from the shorter. */
+function finishesFrom(gears: RoadGears, course: Course, first: number, carry: Carry): (Finish | undefined)[] {
+	const finishes: (Finish | undefined)[] = [];
+	let entered: Entry[] = [];
+	for (let gear = first; ; gear++) {
+		finishes.push(finished(gears, course, first, entered, carry));
+		if (gear === course.highestGear) break;
+		const next = shifted(gears, course, gear, entered.at(-1) ?? atExit(course), carry);
+		if (next === undefined) break;
+		entered = [...entered, next];
+	}
+	return finishes;
+}
+
+function sequence(gears: RoadGears, course: Course, first: number, last: number, carry: Carry): Finish | undefined {
+	const entered: Entry[] = [];
+	for (let gear = first; gear < last; gear++) {
+		const next = shifted(gears, course, gear, entered.at(-1) ?? atExit(course), carry);
+		if (next === undefined) return undefined;
+		entered.push(next);
+	}
+	return finished(gears, course, first, entered, carry);
+}

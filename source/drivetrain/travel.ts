@@ -1,0 +1,196 @@
+/**
+ * Motion whose acceleration depends on speed alone: t = ∫ dV / a(V) and s = ∫ V dV / a(V), by Gauss-Legendre quadrature
+ * between the kinks of a. Where a falls toward 0 the integral diverges, as it should; the pieces are halved toward that speed.
+ */
+import {brentRoot} from './brent.ts';
+import {gaussLegendre, type Quadrature} from './gauss-legendre.ts';
+import {cellOf} from './monotone-cubic.ts';
+
+export type Motion = {
+	/** Acceleration at a road speed from 0 up, m/s². */
+	acceleration(speedMps: number): number;
+	/** Rising speeds between which the acceleration is smooth. */
+	readonly breaks: readonly number[];
+};
+
+export type Braking = {readonly entryMps: number; readonly brakingMps2: number};
+
+export type Goal = {
+	/** How far it may go at most. */
+	readonly distanceM: number;
+	/** It ends when this speed is reached from below. */
+	readonly toMps: number;
+	/** The brakes must be on early enough to be at the entry speed at the end of the distance. */
+	readonly braking: Braking | undefined;
+};
+
+export type Stretch = {readonly distanceM: number; readonly timeS: number};
+
+export type Travel = {
+	readonly speedMps: number;
+	readonly distanceM: number;
+	readonly timeS: number;
+	/** `speed`: at the goal's speed; `end`: at the end or the braking point; `stopped`: the car came to rest. */
+	readonly why: 'speed' | 'end' | 'stopped';
+};
+
+/** On pieces over which the acceleration changes by no more than a factor of two the error is below 1e-10. */
+const piece = gaussLegendre(6);
+/** For the last, short steps of a search, a small part of a piece. */
+const sliver = gaussLegendre(3);
+
+/** A piece is halved until the acceleration at its end is within this factor of that at its start. */
+const steepest = 0.4;
+
+/** This close to a speed at which the acceleration is 0, relatively, the car is taken to stay at it. */
+export const settled = 1e-13;
+
+/** Newton doubles its digits: more steps than this are never needed from a guess inside one piece. */
+export const newtonCap = 12;
+export const newtonEnd = 1e-15;
+
+/** The run from a speed until the goal is met, with the driver at full throttle. */
+export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
+	let here: Travel = {speedMps: fromMps, distanceM: 0, timeS: 0, why: 'end'};
+	const rising = motion.acceleration(fromMps) >= 0;
+	for (;;) {
+		if (rising && here.speedMps >= goal.toMps) return {...here, why: 'speed'};
+		if (here.speedMps <= 0 && !rising) return {...here, why: 'stopped'};
+		if (roomM(here, goal) <= 0) return here;
+		const bound = pieceEnd(motion, here.speedMps, rising, goal);
+		const end = gentleEnd(motion, here.speedMps, bound);
+		if (Math.abs(end - here.speedMps) <= settled * here.speedMps) return cruise(here, goal);
+		const stretch = integrate(motion, here.speedMps, end);
+		const there: Travel = {
+			speedMps: end,
+			distanceM: here.distanceM + stretch.distanceM,
+			timeS: here.timeS + stretch.timeS,
+			why: 'end',
+		};
+		if (roomM(there, goal) < 0) return meet(motion, here, end, goal);
+		here = there;
+	}
+}
+
+/** Distance and time over which the acceleration, of one sign, takes the car from one speed to another inside a piece. */
+export function integrate(motion: Motion, fromMps: number, toMps: number, rule: Quadrature = piece): Stretch {
+	const {nodes, weights} = rule;
+	const [middle, half] = [(fromMps + toMps) / 2, (toMps - fromMps) / 2];
+	let [distanceM, timeS] = [0, 0];
+	for (let i = 0; i < nodes.length; i++) {
+		const speed = middle + half * nodes[i]!;
+		const weight = weights[i]! / motion.acceleration(speed);
+		timeS += weight;
+		distanceM += weight * speed;
+	}
+	return {distanceM: distanceM * half, timeS: timeS * half};
+}
+
+/** The same over a small part of a piece. */
+export function integrateSliver(motion: Motion, fromMps: number, toMps: number): Stretch {
+	return integrate(motion, fromMps, toMps, sliver);
+}
+
+/** Distance under braking from a speed to the entry speed, V² − V_e² = 2·a_b·s; 0 from below it or without braking. */
+export function brakingDistanceM(speedMps: number, braking: Braking | undefined): number {
+	if (braking === undefined || speedMps <= braking.entryMps) return 0;
+	return (speedMps ** 2 - braking.entryMps ** 2) / (2 * braking.brakingMps2);
+}
+
+/** What is left of the distance before the brakes must go on. */
+function roomM(at: Travel, goal: Goal): number {
+	return goal.distanceM - at.distanceM - brakingDistanceM(at.speedMps, goal.braking);
+}
+
+/** The next speed at which something changes: a kink, the goal, the entry speed, or where the acceleration is 0. */
+function pieceEnd(motion: Motion, speedMps: number, rising: boolean, goal: Goal): number {
+	const entry = goal.braking?.entryMps ?? 0;
+	const kink = rising ? Math.min(breakAbove(motion, speedMps), goal.toMps) : breakBelow(motion, speedMps);
+	const next = (entry > speedMps && entry < kink) || (entry < speedMps && entry > kink) ? entry : kink;
+	return balancedBefore(motion, speedMps, next) ?? next;
+}
+
+/** The first speed on the way at which the acceleration is 0 or changes sign; undefined where it does neither. */
+function balancedBefore(motion: Motion, fromMps: number, toMps: number): number | undefined {
+	return balancedBetween(motion, fromMps, (fromMps + toMps) / 2, toMps);
+}
+
+/** The same on the way over a third speed. What the acceleration is at the very start does not count. */
+export function balancedBetween(motion: Motion, fromMps: number, overMps: number, toMps: number): number | undefined {
+	const acceleration = (speedMps: number) => motion.acceleration(speedMps);
+	const positive = acceleration((fromMps + overMps) / 2) > 0;
+	if (acceleration(overMps) > 0 !== positive) return brentRoot(acceleration, fromMps, overMps) ?? fromMps;
+	if (acceleration(toMps) > 0 !== positive) return brentRoot(acceleration, overMps, toMps) ?? overMps;
+	return undefined;
+}
+
+/** The end of the piece, drawn nearer until the acceleration changes little over it. */
+function gentleEnd(motion: Motion, fromMps: number, boundMps: number): number {
+	const start = motion.acceleration(fromMps);
+	let end = boundMps;
+	while (Math.abs(end - fromMps) > settled * fromMps && !gentle(start, motion.acceleration(end)))
+		end = (fromMps + end) / 2;
+	return end;
+}
+
+/** Whether two accelerations are near enough for one quadrature between them: any pole of 1/a then lies outside the piece by its length. */
+export function gentle(from: number, to: number): boolean {
+	const ratio = to / from;
+	return ratio >= steepest && ratio <= 1 / steepest;
+}
+
+/** The car holds its speed to the end. */
+function cruise(here: Travel, goal: Goal): Travel {
+	const room = roomM(here, goal);
+	return {...here, distanceM: here.distanceM + room, timeS: here.timeS + room / here.speedMps};
+}
+
+/** Inside the piece that starts here: where the distance ends or the brakes go on. */
+function meet(motion: Motion, here: Travel, endMps: number, goal: Goal): Travel {
+	const at = (speedMps: number): Travel => {
+		const part = integrate(motion, here.speedMps, speedMps);
+		return {speedMps, distanceM: here.distanceM + part.distanceM, timeS: here.timeS + part.timeS, why: 'end'};
+	};
+	const speed = brentRoot(speedMps => roomM(at(speedMps), goal), here.speedMps, endMps);
+	return at(speed ?? here.speedMps);
+}
+
+/** The speed at which the car was `timeS` seconds before it reached `atMps` gaining speed; 0 where it gains none. */
+export function speedBefore(motion: Motion, atMps: number, timeS: number): number {
+	let [speed, left] = [atMps, timeS];
+	while (speed > 0) {
+		const end = gentleEnd(motion, speed, breakBelow(motion, speed));
+		const tookS = integrate(motion, end, speed).timeS;
+		if (tookS < 0) return 0;
+		if (tookS >= left) return earlierBy(motion, end, speed, left);
+		left -= tookS;
+		speed = end;
+	}
+	return 0;
+}
+
+/** Inside one piece: Newton's method on the time, from the speed that an even acceleration would give. */
+function earlierBy(motion: Motion, lowMps: number, atMps: number, timeS: number): number {
+	const slowed = (fromMps: number, byS: number) => Math.max(lowMps, fromMps - byS * motion.acceleration(fromMps));
+	let speed = slowed(atMps, timeS);
+	let left = timeS - integrate(motion, speed, atMps).timeS;
+	for (let i = 0; i < newtonCap && Math.abs(left) > newtonEnd * timeS; i++) {
+		const next = slowed(speed, left);
+		left -= integrateSliver(motion, next, speed).timeS;
+		speed = next;
+	}
+	return speed;
+}
+
+/** The nearest kink below a speed above 0. */
+function breakBelow({breaks}: Motion, speedMps: number): number {
+	const cell = cellOf(breaks, speedMps);
+	return breaks[cell] === speedMps ? (breaks[cell - 1] ?? 0) : (breaks[cell] ?? 0);
+}
+
+/** The nearest kink above a speed; Infinity beyond the last. */
+function breakAbove({breaks}: Motion, speedMps: number): number {
+	const next = speedMps < (breaks[0] ?? Infinity) ? 0 : cellOf(breaks, speedMps) + 1;
+	const kink = breaks[next] ?? Infinity;
+	return kink > speedMps ? kink : Infinity;
+}

@@ -1,0 +1,81 @@
+/** The highest RPM anywhere against the limit in force. */
+import type {Condition} from '../conditions.ts';
+import {measuredRpm} from '../measured.ts';
+import type {Verdict} from '../results.ts';
+import type {PlaceRun} from '../run-place.ts';
+import {eachRun, type RowRun} from '../run-row.ts';
+import {checkOf, type Ground, type Reading, type RowCheck, worseOf} from './check.ts';
+
+export const limit: RowCheck = (row, ground) => {
+	let worst: Reading | undefined;
+	eachRun(row, (run, {condition}) => {
+		if (run.state === 'overLimit') worst = worseOf(worst, tooFast(run, condition));
+		if (run.state === 'ran' || run.state === 'held') worst = worseOf(worst, highest(run, condition.name, ground));
+	});
+	for (const reading of measuredReadings(row, ground)) worst = worseOf(worst, reading);
+	return checkOf('limit', worst);
+};
+
+/** An RPM that was turned into a speed and back is the same to within this. */
+const roundingRpm = 1e-6;
+
+/** Fail above the limit; near within the margin, which halves once the model agrees with what was measured. */
+export function limitVerdict(rpm: number, {plan, anchored}: Ground): Verdict {
+	const margin = plan.limit.rpm - rpm;
+	if (margin < -roundingRpm) return 'fail';
+	return margin < plan.car.margins.limitRpm / (anchored ? 2 : 1) ? 'near' : 'pass';
+}
+
+function reading(
+	rpm: number,
+	ground: Ground,
+	place: string,
+	part: string,
+	situation: string,
+	remark?: string,
+): Reading {
+	const bound = ground.plan.limit.rpm;
+	return {verdict: limitVerdict(rpm, ground), value: rpm, bound, margin: bound - rpm, place, part, situation, remark};
+}
+
+function highest({place, result, sequence}: PlaceRun, situation: string, ground: Ground): Reading {
+	let rpm = result.exitRpm;
+	let part = 'exit';
+	let remark: string | undefined;
+	const offer = (value: number, name: string, why?: string) => {
+		if (value <= rpm) return;
+		[rpm, part, remark] = [value, name, why];
+	};
+	offer(result.endRpm, 'end');
+	for (const shift of result.shifts) if (shift.rpm > rpm) offer(shift.rpm, `shift ${shift.from}-${shift.from + 1}`);
+	if (result.minimumRpm !== null) offer(result.minimumRpm, 'minimum');
+	// A restart may be shifted out of early; a straight is driven to its end.
+	if (!place.isRestart && sequence !== undefined) offer(sequence.reachRpm, 'end', 'without the limiter');
+	return reading(rpm, ground, place.name, part, situation, remark);
+}
+
+/** The exit is above what every allowed gear may turn, limiter included. */
+function tooFast({place, result}: PlaceRun, {name, vehicle: {topRpm}}: Condition): Reading {
+	return {
+		verdict: 'fail',
+		value: result.exitRpm,
+		bound: topRpm,
+		margin: topRpm - result.exitRpm,
+		place: place.name,
+		part: 'exit',
+		situation: name,
+		remark: 'above the limit in every allowed gear',
+	};
+}
+
+/** Measured in the base, so it counts only where the base is run. */
+function measuredReadings(row: RowRun, ground: Ground): Reading[] {
+	const base = row.situations.find(({condition}) => condition.name === ground.plan.base.name);
+	if (base === undefined) return [];
+	return ground.measured.flatMap(point => {
+		const run = base.places[point.index]!;
+		if (run.state !== 'ran' && run.state !== 'held') return [];
+		const rpm = measuredRpm(ground.plan, point, row.candidate, run.result.endGear);
+		return rpm === undefined ? [] : [reading(rpm, ground, point.straight, 'measured', base.condition.name)];
+	});
+}

@@ -1,0 +1,45 @@
+/** Why a row fails, in one sentence. */
+import type {Check, CheckName, Row} from './results.ts';
+import {feetText, grouped, milesText, placeText} from './words.ts';
+
+/** The first failed check in words, and how many more fail. */
+export function failureReason(row: Row): string {
+	const failed = row.checks.filter(({verdict}) => verdict === 'fail');
+	const [first, ...more] = failed;
+	if (first === undefined) return '';
+	const words = sentences[first.check] ?? fallback;
+	const others = more.map(({check}) => names[check]);
+	return `${words(first)}${others.length > 0 ? `; also ${others.join(', ')}` : ''}.`;
+}
+
+const where = (check: Check) => placeText(check.at, check.situation);
+const fallback = (check: Check) => `${where(check) || names[check.check]}: ${check.remark ?? 'fails'}`;
+
+const sentences: Partial<Record<CheckName, (check: Check) => string>> = {
+	limit: check =>
+		`Over the limit: ${grouped(check.value!)} at ${where(check)}, ${grouped(Math.ceil(-check.margin!))} above ${grouped(check.bound!)}`,
+	limiter: check => `On the limiter for ${feetText(check.value!)} at ${where(check)}`,
+	permitted: check => `Not permitted: ${check.remark}`,
+	housing: check =>
+		check.bound === null
+			? `Does not fit the housing: it accepts no tooth sum`
+			: `Does not fit the housing: tooth sum ${check.value}, nearest accepted ${check.bound}`,
+	stock: () => 'No set on hand',
+	mileage: check => `Out of miles: ${milesText(check.value!)} of ${milesText(check.bound!)}`,
+};
+
+/** How a check is called in a sentence. */
+const names: Record<CheckName, string> = {
+	limit: 'over the limit',
+	limiter: 'on the limiter',
+	band: 'below the band',
+	afterShift: 'below the band after a shift',
+	settle: 'shifts while unsettled',
+	pitRoad: 'pit road',
+	restart: 'the restart',
+	downshift: 'the downshift',
+	permitted: 'not permitted',
+	housing: 'does not fit the housing',
+	stock: 'no set on hand',
+	mileage: 'out of miles',
+};

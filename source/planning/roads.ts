@@ -1,0 +1,34 @@
+/** Straights of one situation that are alike in grade, wind, load and drag share what the solver works out for a row. */
+import type {Road} from '../drivetrain/forces.ts';
+import {RoadGears} from '../drivetrain/road-gears.ts';
+import type {GearTrain, Vehicle} from '../drivetrain/straight.ts';
+
+/** The different roads of a plan, each with its vehicle, by number. */
+export class Roads {
+	readonly #known: {readonly vehicle: Vehicle; readonly road: Road}[] = [];
+
+	/** The number of a road; a road that is alike to a known one for the same vehicle has that one's. */
+	numberOf(vehicle: Vehicle, road: Road): number {
+		const found = this.#known.findIndex(known => known.vehicle === vehicle && alike(known.road, road));
+		return found >= 0 ? found : this.#known.push({vehicle, road}) - 1;
+	}
+
+	/** The gears of a train on each road, made when they are first asked for. */
+	gearsFor(train: GearTrain): (roadNumber: number) => RoadGears {
+		const made: RoadGears[] = [];
+		return number => {
+			const {vehicle, road} = this.#known[number]!;
+			made[number] ??= new RoadGears(vehicle, train, road);
+			return made[number];
+		};
+	}
+}
+
+function alike(one: Road, other: Road): boolean {
+	return (
+		one.grade === other.grade &&
+		one.headwindMps === other.headwindMps &&
+		one.load === other.load &&
+		one.extraDragN === other.extraDragN
+	);
+}

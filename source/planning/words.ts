@@ -1,0 +1,55 @@
+/** Numbers inside sentences: reasons, remarks and faults. Speeds in mph, lengths in ft, as they are read at the track. */
+const mileM = 1609.344;
+const footM = 0.3048;
+const mphMps = mileM / 3600;
+
+/** "8,820": no decimals, thousands separated. */
+export function grouped(value: number): string {
+	return Math.round(value)
+		.toString()
+		.replace(/\B(?=(\d{3})+$)/g, ',');
+}
+
+/** "9,310 rpm" */
+export function rpmText(rpm: number): string {
+	return `${grouped(rpm)} rpm`;
+}
+
+/** "116.0 mph" */
+export function mphText(speedMps: number): string {
+	return `${(speedMps / mphMps).toFixed(1)} mph`;
+}
+
+/** "650 ft" */
+export function feetText(lengthM: number): string {
+	return `${grouped(lengthM / footM)} ft`;
+}
+
+/** "1,200 miles" */
+export function milesText(lengthM: number): string {
+	return `${grouped(lengthM / mileM)} miles`;
+}
+
+/** "0.021 s" */
+export function secondsText(timeS: number): string {
+	return `${timeS.toFixed(3)} s`;
+}
+
+/** "1 shift", "2 shifts" */
+export function counted(count: number, singular: string, plural = `${singular}s`): string {
+	return `${grouped(count)} ${count === 1 ? singular : plural}`;
+}
+
+/** "a", "a and b", "a, b and c" */
+export function listed(names: readonly string[]): string {
+	if (names.length < 2) return names.join('');
+	return `${names.slice(0, -1).join(', ')} and ${names.at(-1)}`;
+}
+
+/** A place with the situation where it is not the track as it stands: "Front end (In the tow)". */
+export function placeText(at: string, situation: string): string {
+	return situation === '' || situation === baseName ? at : `${at} (${situation})`;
+}
+
+/** The track as it stands. */
+export const baseName = 'Base';
