@@ -1,7 +1,7 @@
 /** From the words of the command line to a request, or to what is wrong with them. */
 import {parseArgs} from 'node:util';
+import {didYouMean} from '../documents/nearest.ts';
 import {type Command, commandNamed, commands, type OptionName, option, options} from './command-table.ts';
-import {didYouMean} from './nearest.ts';
 
 export type UnitSystem = 'us' | 'metric';
 
@@ -62,7 +62,7 @@ const optionProblem = (
 			written,
 			allowed.map(known => `--${known}`),
 		);
-		return `unknown option ${written}.${meant} ${where} --help lists the options.`;
+		return [`unknown option ${written}.`, meant, `${where} --help lists the options.`].filter(Boolean).join(' ');
 	}
 	if (!allowed.includes(name)) return `${where} takes no ${written}. ${where} --help lists its options.`;
 	const {value} = option(name);
@@ -105,8 +105,9 @@ const toRequest = (argument: string | undefined, given: Given): Request | string
 const unknownCommand = (name: string): string => {
 	const looksLikeFile = name.includes('/') || name.endsWith('.json');
 	const names = commands.map(command => command.name);
-	const meant = looksLikeFile ? ` To rank a track: droprack rank ${name}` : didYouMean(name, names);
-	return `unknown command ${name}.${meant}\nCommands: ${names.join(', ')}. droprack --help says more.`;
+	const meant = looksLikeFile ? `To rank a track: droprack rank ${name}` : didYouMean(name, names);
+	const first = [`unknown command ${name}.`, meant].filter(Boolean).join(' ');
+	return `${first}\nCommands: ${names.join(', ')}. droprack --help says more.`;
 };
 
 /**

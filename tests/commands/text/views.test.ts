@@ -29,7 +29,7 @@ test('without air the day is the reference of J1349', () => {
 
 test('the third line says what bounds the answer', () => {
 	expect(rank(160)[2]).toBe(
-		'limit 8900 rpm (track) · band 6904-8790 · 657 hp at 8210 today (correction 0.988) · air 0.0725 lb/ft³ · not anchored to measured speeds',
+		'limit 8900 rpm (track) · band 6904-8790 · 657 hp at 8210 today (correction 0.988) · air 0.0725 lb/ft³',
 	);
 });
 
@@ -38,6 +38,12 @@ test('a row of the ranking, at 120 columns and at 60', () => {
 		' 1  33/38   1.1515  A    12.341  +0.012     8861  Front end, In the tow      39      6890   -14       1  pass',
 	);
 	expect(lineWith(rank(60), /^ 1 /)).toBe(' 1  33/38   A    12.341     8861      39      6890  pass');
+});
+
+test('the checks that a verdict comes from stand beside it where there is room', () => {
+	const view = rankView({heading, ranking: {setting, remarks: [], rows: [row()]}, top: 1}, us);
+	expect(lineWith(lines(view, 160), /^1 /)).toMatch(/near {5}RPM limit, mileage$/);
+	expect(lineWith(lines(view, 80), /^1 /)).toMatch(/near$/);
 });
 
 test('the installed row is shown and marked wherever it stands', () => {
@@ -91,9 +97,9 @@ test('a run shows gears, shifts rounded down, pit road and checks', () => {
 	expect(all).toContain('- Back: the car slows on it');
 	expect(all).toContain('Pit road · gear 2 · 4211 rpm at the limit · 4737 at limit and tolerance, never above');
 	expect(lineWith(all, /^RPM limit/)).toBe(
-		'RPM limit         near      8861   8900      39  rpm    Front end        In the tow',
+		'RPM limit           near      8861   8900      39  Front end        In the tow',
 	);
-	expect(lineWith(all, /^mileage/)).toBe('mileage           near      1100   1200     100  mi');
+	expect(lineWith(all, /^mileage/)).toBe('mileage, mi         near      1100   1200     100');
 	expect(all).toContain('- mileage: change the pair soon');
 });
 
