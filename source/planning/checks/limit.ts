@@ -23,7 +23,7 @@ const roundingRpm = 1e-6;
 export function limitVerdict(rpm: number, {plan, anchored}: Ground): Verdict {
 	const margin = plan.limit.rpm - rpm;
 	if (margin < -roundingRpm) return 'fail';
-	return margin < plan.car.margins.limitRpm / (anchored ? 2 : 1) ? 'near' : 'pass';
+	return margin < plan.car.margins.limitRpm / (anchored ? 2 : 1) - roundingRpm ? 'near' : 'pass';
 }
 
 function reading(
