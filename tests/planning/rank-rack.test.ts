@@ -36,6 +36,13 @@ describe('a ranking', () => {
 		expect(row.pairRatio).toBeCloseTo(1.1515152, 6);
 	});
 
+	test('turns at the minimum without slip, in the exit’s gear', () => {
+		const {exitRpm, exitSpeedMps, minimumRpm, minimumSpeedMps} = rowOf(ranking, '33/38').situations[0]!.straights[0]!;
+		const growth = (speedMps: number) => 1 + 0.008 * (speedMps / 44.704) ** 2;
+		const perSpeed = (exitRpm * growth(exitSpeedMps)) / (1.015 * exitSpeedMps);
+		expect(minimumRpm).toBeCloseTo((perSpeed * minimumSpeedMps!) / growth(minimumSpeedMps!), 6);
+	});
+
 	test('adds up: a situation is the sum of its straights, a row the mean of its situations', () => {
 		for (const {situations, timeS, fastestS} of ranking.rows) {
 			for (const {straights, fastestS: sum} of situations) {

@@ -28,6 +28,13 @@ describe('the restart', () => {
 		for (const {timeS} of others) expect(timeS).toBeGreaterThanOrEqual(result.timeS!);
 	});
 
+	test('takes the gears of least time even where the tie-break would save a shift', () => {
+		const margins = {...car().margins, sameTimeS: 10};
+		const result = rowOf({restart}, 'A', {margins}).situations[0]!;
+		expect(result.restart!.timeS).toBe(result.restart!.fastestS);
+		expect(result.timeS).toBeGreaterThan(result.fastestS!);
+	});
+
 	test('starts in the given gear, and in the gear of least time where the gearbox has not got it', () => {
 		expect(rowOf({restart: {...restart, gear: 4}}).situations[0]!.restart!.exitGear).toBe(4);
 		const gearboxes = [...car().gearboxes, {name: 'C', ratios: [2, 1.5, 1]}];
