@@ -1,6 +1,6 @@
 /** Why a row fails, in one sentence. */
 import type {Check, CheckName, Row} from './results.ts';
-import {feetText, grouped, milesText, placeText} from './words.ts';
+import {feetText, grouped, highestText, milesText, placeText} from './words.ts';
 
 /** The first failed check in words, and how many more fail. */
 export function failureReason(row: Row): string {
@@ -17,7 +17,7 @@ const fallback = (check: Check) => `${where(check) || check.check}: ${check.rema
 
 const sentences: Partial<Record<CheckName, (check: Check) => string>> = {
 	limit: check =>
-		`Over the limit: ${grouped(check.value!)} at ${where(check)}, ${grouped(Math.ceil(-check.margin!))} above ${grouped(check.bound!)}`,
+		`Over the limit: ${highestText(check.value!)} at ${where(check)}, ${grouped(Math.ceil(-check.margin!))} above ${grouped(check.bound!)}`,
 	limiter: check => `On the limiter for ${feetText(check.value!)} at ${where(check)}`,
 	permitted: check => `Not permitted: ${check.remark}`,
 	housing: check =>

@@ -10,6 +10,19 @@ export function grouped(value: number): string {
 		.replace(/\B(?=(\d{3})+$)/g, ',');
 }
 
+/** An RPM that was turned into a speed and back is the same to within this. */
+export const roundingRpm = 1e-6;
+
+/** A highest RPM: rounded up, so that no one reads less than the engine turns. */
+export function highestText(rpm: number): string {
+	return grouped(Math.ceil(rpm - roundingRpm));
+}
+
+/** A margin in rpm: rounded down. */
+export function marginText(rpm: number): string {
+	return grouped(Math.floor(rpm + roundingRpm));
+}
+
 /** "9,310 rpm" */
 export function rpmText(rpm: number): string {
 	return `${grouped(rpm)} rpm`;
@@ -32,6 +45,7 @@ export function milesText(lengthM: number): string {
 
 /** "0.021 s" */
 export function secondsText(timeS: number): string {
+	if (timeS < 0.0005) return 'under 0.001 s';
 	return `${timeS.toFixed(3)} s`;
 }
 

@@ -52,6 +52,13 @@ describe('the reason', () => {
 		expect(reasons[2]).toMatch(/^0\.021 s a lap slower than 33\/38 A/);
 	});
 
+	test('rounds a margin down, a highest RPM up, and a lead that does not show as what it is under', () => {
+		const rows = [judged(33, 38, timed(6, 9120.4)), judged(32, 39, timed(6.0001, 9100.000000000004))];
+		expect(reasonsOf(rows, plan)[0]).toBe(
+			'Fastest of 2 that pass, level with 32/39 A (under 0.001 s a lap): margin 79 rpm against 100, at most 9,121 rpm at an end against 9,100.',
+		);
+	});
+
 	test('of the only one that passes says so, and of rows without times who has the widest margin', () => {
 		const [pass, fail] = [judged(33, 38), judged(32, 39, timed(5, 9400))];
 		expect(reasonsOf([pass, fail], plan)).toEqual([

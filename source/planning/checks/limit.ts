@@ -4,6 +4,7 @@ import {measuredRpm} from '../measured.ts';
 import type {Verdict} from '../results.ts';
 import type {PlaceRun} from '../run-place.ts';
 import {eachRun, type RowRun} from '../run-row.ts';
+import {roundingRpm} from '../words.ts';
 import {checkOf, type Ground, type Reading, type RowCheck, worseOf} from './check.ts';
 
 export const limit: RowCheck = (row, ground) => {
@@ -15,9 +16,6 @@ export const limit: RowCheck = (row, ground) => {
 	for (const reading of measuredReadings(row, ground)) worst = worseOf(worst, reading);
 	return checkOf('limit', worst);
 };
-
-/** An RPM that was turned into a speed and back is the same to within this. */
-const roundingRpm = 1e-6;
 
 /** Fail above the limit; near within the margin, which halves once the model agrees with what was measured. */
 export function limitVerdict(rpm: number, {plan, anchored}: Ground): Verdict {
