@@ -18,16 +18,16 @@ export function reasonsOf(rows: readonly Judged[], plan: Plan): string[] {
 }
 
 function withNone(reason: string, place: number, passing: number, total: number): string {
-	return place === 0 && passing === 0 && total > 1 ? `None of ${total} passes. ${reason}` : reason;
+	return place === 0 && passing === 0 && total > 1 ? `Each of the ${total} fails a check. ${reason}` : reason;
 }
 
 function firstReason(row: Row, second: Row | undefined, passing: number, total: number, plan: Plan): string {
-	if (second === undefined) return `The only one of ${grouped(total)} that passes: ${topText(row)}.`;
+	if (second === undefined) return `The only one of ${grouped(total)} that fails no check: ${topText(row)}.`;
 	if (row.fastestS === null || second.fastestS === null) {
-		return `Widest margin of ${grouped(passing)} that pass, without times: ${topText(row)}.`;
+		return `Widest margin of ${grouped(passing)} that fail no check, without times: ${topText(row)}.`;
 	}
 	const ahead = second.fastestS - row.fastestS;
-	const lead = `Fastest of ${grouped(passing)} that pass`;
+	const lead = `Fastest of ${grouped(passing)} that fail no check`;
 	if (ahead > plan.car.margins.levelS)
 		return `${lead}: ${secondsText(ahead)} a lap ahead of ${nameOf(second)}; ${topText(row)}.`;
 	return `${lead}, level with ${nameOf(second)} (${secondsText(ahead)} a lap): ${differences(row, second)}.`;

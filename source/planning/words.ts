@@ -1,13 +1,10 @@
 /** Numbers inside sentences: reasons, remarks and faults. Speeds in mph, lengths in ft, as they are read at the track. */
-const mileM = 1609.344;
-const footM = 0.3048;
-const mphMps = mileM / 3600;
+import {footM, mileM, mphMps} from '../drivetrain/constants.ts';
 
-/** "8,820": no decimals, thousands separated. */
+/** "8820", "12,400": no decimals; thousands are set apart from five digits on, as a tachometer has four. */
 export function grouped(value: number): string {
-	return Math.round(value)
-		.toString()
-		.replace(/\B(?=(\d{3})+$)/g, ',');
+	const digits = Math.round(value).toString();
+	return digits.length < 5 ? digits : digits.replace(/\B(?=(\d{3})+$)/g, ',');
 }
 
 /** An RPM that was turned into a speed and back is the same to within this. */
@@ -23,7 +20,7 @@ export function marginText(rpm: number): string {
 	return grouped(Math.floor(rpm + roundingRpm));
 }
 
-/** "9,310 rpm" */
+/** "9310 rpm" */
 export function rpmText(rpm: number): string {
 	return `${grouped(rpm)} rpm`;
 }
@@ -38,7 +35,7 @@ export function feetText(lengthM: number): string {
 	return `${grouped(lengthM / footM)} ft`;
 }
 
-/** "1,200 miles" */
+/** "1200 miles" */
 export function milesText(lengthM: number): string {
 	return `${grouped(lengthM / mileM)} miles`;
 }

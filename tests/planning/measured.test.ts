@@ -60,7 +60,7 @@ describe('the answer', () => {
 			'Anchored: the model meets the speed measured on Front within 0.2 mph.',
 		);
 		expect(remarksAt({endMps: 100 * mph, rpm: 8000})).toMatch(
-			/^Not anchored: Front measured 100\.0 mph, 8,000 rpm; model 1\d\d\.\d mph, \d,\d{3} rpm with 33\/38 A\.$/,
+			/^Not anchored: Front measured 100\.0 mph, 8000 rpm; model 1\d\d\.\d mph, \d{4} rpm with 33\/38 A\.$/,
 		);
 		expect(remarksAt({gear: 3})).toBe('Not anchored: Front has no measured speed or RPM that gives one.');
 	});

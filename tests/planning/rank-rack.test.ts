@@ -117,7 +117,7 @@ describe('a ranking', () => {
 		expect(rowOf(mixed, '33/38').fastestS).toBe(rowOf(ranking, '33/38').fastestS);
 		const only = ranked(car(), track({straights: [held]}));
 		expect(only.rows.every(({timeS, fastestS}) => timeS === null && fastestS === null)).toBe(true);
-		expect(only.rows[0]!.reason).toMatch(/^Widest margin of \d+ that pass, without times: highest RPM /);
+		expect(only.rows[0]!.reason).toMatch(/^Widest margin of \d+ that fail no check, without times: highest RPM /);
 	});
 
 	test('puts a row whose exit is above every gear’s limit last, with its times null', () => {

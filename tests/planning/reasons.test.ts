@@ -24,7 +24,7 @@ describe('the reason', () => {
 	test('of the first says how far it is ahead and how far from the limit', () => {
 		const rows = [judged(33, 38, timed(6, 9120)), judged(32, 39, timed(6.05))];
 		expect(reasonsOf(rows, plan)[0]).toBe(
-			'Fastest of 2 that pass: 0.050 s a lap ahead of 32/39 A; highest RPM 9,120 at Front end, 80 under the limit.',
+			'Fastest of 2 that fail no check: 0.050 s a lap ahead of 32/39 A; highest RPM 9120 at Front end, 80 under the limit.',
 		);
 	});
 
@@ -44,7 +44,7 @@ describe('the reason', () => {
 		];
 		const reasons = reasonsOf(rows, plan);
 		expect(reasons[0]).toBe(
-			'Fastest of 3 that pass, level with 32/39 A (0.015 s a lap): margin 100 rpm against 300, 1 shift against 0, at most 9,100 rpm at an end against 8,900.',
+			'Fastest of 3 that fail no check, level with 32/39 A (0.015 s a lap): margin 100 rpm against 300, 1 shift against 0, at most 9100 rpm at an end against 8900.',
 		);
 		expect(reasons[1]).toMatch(
 			/^Level with 33\/38 A \(0\.015 s a lap slower\): margin 300 rpm against 100, 0 shifts against 1/,
@@ -55,21 +55,23 @@ describe('the reason', () => {
 	test('rounds a margin down, a highest RPM up, and a lead that does not show as what it is under', () => {
 		const rows = [judged(33, 38, timed(6, 9120.4)), judged(32, 39, timed(6.0001, 9100.000000000004))];
 		expect(reasonsOf(rows, plan)[0]).toBe(
-			'Fastest of 2 that pass, level with 32/39 A (under 0.001 s a lap): margin 79 rpm against 100, at most 9,121 rpm at an end against 9,100.',
+			'Fastest of 2 that fail no check, level with 32/39 A (under 0.001 s a lap): margin 79 rpm against 100, at most 9121 rpm at an end against 9100.',
 		);
 	});
 
-	test('of the only one that passes says so, and of rows without times who has the widest margin', () => {
+	test('of the only one that fails no check says so, and of rows without times who has the widest margin', () => {
 		const [pass, fail] = [judged(33, 38), judged(32, 39, timed(5, 9400))];
 		expect(reasonsOf([pass, fail], plan)).toEqual([
-			'The only one of 2 that passes: highest RPM 8,500 at Front end, 700 under the limit.',
-			'Over the limit: 9,400 at Front end, 200 above 9,200.',
+			'The only one of 2 that fails no check: highest RPM 8500 at Front end, 700 under the limit.',
+			'Over the limit: 9400 at Front end, 200 above 9200.',
 		]);
 	});
 
 	test('of the first says that none passes where none does', () => {
 		const rows = [judged(33, 38, timed(5, 9300)), judged(32, 39, timed(6, 9400))];
-		expect(reasonsOf(rows, plan)[0]).toBe('None of 2 passes. Over the limit: 9,300 at Front end, 100 above 9,200.');
+		expect(reasonsOf(rows, plan)[0]).toBe(
+			'Each of the 2 fails a check. Over the limit: 9300 at Front end, 100 above 9200.',
+		);
 	});
 });
 
@@ -84,7 +86,7 @@ describe('a failure', () => {
 	test('is one sentence for each check that can fail', () => {
 		const tow = {at: 'Front end', situation: 'In the tow'};
 		expect(fails({...tow, value: 9310, bound: 9200, margin: -110})).toBe(
-			'Over the limit: 9,310 at Front end (In the tow), 110 above 9,200.',
+			'Over the limit: 9310 at Front end (In the tow), 110 above 9200.',
 		);
 		expect(fails({...tow, check: 'limiter', value: 36.576})).toBe(
 			'On the limiter for 120 ft at Front end (In the tow).',
@@ -97,13 +99,13 @@ describe('a failure', () => {
 		);
 		expect(fails({check: 'stock'})).toBe('No set on hand.');
 		expect(fails({check: 'mileage', value: 1250 * 1609.344, bound: 1200 * 1609.344})).toBe(
-			'Out of miles: 1,250 miles of 1,200 miles.',
+			'Out of miles: 1250 miles of 1200 miles.',
 		);
 		expect(fails({check: 'permitted', remark: 'x'})).toBe('Not permitted: x.');
 	});
 
 	test('names what else fails', () => {
 		const two = judged(33, 38, timed(6, 9400, {limiterM: 3}));
-		expect(failureReason(two.row)).toBe('Over the limit: 9,400 at Front end, 200 above 9,200; also on the limiter.');
+		expect(failureReason(two.row)).toBe('Over the limit: 9400 at Front end, 200 above 9200; also on the limiter.');
 	});
 });

@@ -57,10 +57,10 @@ describe('remarks', () => {
 		const short = engine({curve: engine().curve.slice(3, 6)});
 		const remarks = remarksOf({engines: [short]});
 		expect(remarks[1]).toMatch(
-			/^The curve starts at 7,000 rpm: its torque is held below, where rows run down to \d,\d{3} rpm\.$/,
+			/^The curve starts at 7000 rpm: its torque is held below, where rows run down to \d{4} rpm\.$/,
 		);
 		expect(remarks[2]).toMatch(
-			/^The curve ends at 9,000 rpm: its torque is held above, where rows run up to 9,\d{3} rpm\.$/,
+			/^The curve ends at 9000 rpm: its torque is held above, where rows run up to 9,\d{3} rpm\.$/,
 		);
 	});
 

@@ -5,7 +5,7 @@ import {type Change, fakeRow, groundOf, planOf} from '../fake-row.ts';
 
 const plan = planOf();
 const {overall} = fakeRow(plan).candidate.train;
-/** (9200 − 200)·1.24/1.58: what fourth turns where third would turn 9,000. */
+/** (9200 − 200)·1.24/1.58: what fourth turns where third would turn 9000. */
 const bound = (9000 * 1.24) / 1.58;
 const speedAt = (rpm: number) =>
 	speedAtRpmMps(rpm, overall[3]!, plan.base.vehicle.rolloutM, plan.base.vehicle.growth, 0);

@@ -11,7 +11,7 @@ const plan = planOf(car(), track({restart: undefined}));
 const ground = groundOf(plan);
 const of = (...straights: Change[]) => limit(fakeRow(plan, straights), ground)!;
 
-describe('limit, 9,200 here', () => {
+describe('limit, 9200 here', () => {
 	test('passes with the margin of 100 rpm in hand, is near below it, fails above the limit', () => {
 		expect(of({result: {endRpm: 9100}})).toMatchObject({verdict: 'pass', value: 9100, bound: 9200, margin: 100});
 		expect(of({result: {endRpm: 9100.5}})).toMatchObject({verdict: 'near', margin: 99.5});

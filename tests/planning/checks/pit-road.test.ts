@@ -10,7 +10,7 @@ const of = (gear: number, toleranceRpms: number[]) =>
 	pitRoad(fakeRow(plan, [], {pitRoad: {gear, rpm: 1, toleranceRpm: toleranceRpms[gear - 1]!, toleranceRpms}}), ground)!;
 
 describe('pitRoad', () => {
-	test('passes where a gear is clean at limit + tolerance, from 2,500 rpm up to the limit', () => {
+	test('passes where a gear is clean at limit + tolerance, from 2500 rpm up to the limit', () => {
 		expect(of(1, [2500, 2000])).toMatchObject({verdict: 'pass', value: 2500, bound: 2500, margin: 0});
 		expect(of(1, [9200, 2499])).toMatchObject({verdict: 'pass'});
 	});
@@ -34,7 +34,7 @@ describe('the pit gear', () => {
 	const at = (limitMps: number, gear?: number) =>
 		runPitRoad(planOf(car(), track({pitRoad: {limitMps, toleranceMps: 5 * mph, gear}})), candidate)!;
 
-	test('is the lowest with 1,000 rpm under the limit at limit + tolerance', () => {
+	test('is the lowest with 1000 rpm under the limit at limit + tolerance', () => {
 		expect(at(40 * mph).gear).toBe(1);
 		const fast = at(60 * mph);
 		expect(fast.gear).toBe(2);
