@@ -23,7 +23,7 @@ const roundingRpm = 1e-6;
 export function limitVerdict(rpm: number, {plan, anchored}: Ground): Verdict {
 	const margin = plan.limit.rpm - rpm;
 	if (margin < -roundingRpm) return 'fail';
-	return margin < plan.car.margins.limitRpm / (anchored ? 2 : 1) ? 'near' : 'pass';
+	return margin < plan.car.margins.limitRpm / (anchored ? 2 : 1) - roundingRpm ? 'near' : 'pass';
 }
 
 function reading(
@@ -50,7 +50,8 @@ function highest({place, result, sequence}: PlaceRun, situation: string, ground:
 	for (const shift of result.shifts) if (shift.rpm > rpm) offer(shift.rpm, `shift ${shift.from}-${shift.from + 1}`);
 	if (result.minimumRpm !== null) offer(result.minimumRpm, 'minimum');
 	// A restart may be shifted out of early; a straight is driven to its end.
-	if (!place.isRestart && sequence !== undefined) offer(sequence.reachRpm, 'end', 'without the limiter');
+	const reachRpm = place.isRestart ? 0 : (sequence?.reachRpm ?? 0);
+	if (reachRpm > result.endRpm + roundingRpm) offer(reachRpm, 'end', 'without the limiter');
 	return reading(rpm, ground, place.name, part, situation, remark);
 }
 
