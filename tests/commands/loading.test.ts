@@ -33,16 +33,16 @@ test('plain commands load only what they need', async () => {
 	expect(
 		marksIn(await loadedBy(['cars', '--prefer', 'none'])).concat(marksIn(await loadedBy(['cars', '--prefer', 'demo']))),
 	).toContain('conf');
-	for (const words of [['tracks'], ['cars'], ['show', 'short'], ['--help'], ['--version']]) {
+	for (const words of [['tracks'], ['cars'], ['show', 'fixture oval'], ['--help'], ['--version']]) {
 		const loaded = await loadedBy(words);
 		expect(loaded.length).toBeGreaterThan(0);
 		expect(marksIn(loaded)).toEqual([]);
 		expect(loaded.map(file => readFileSync(file).length).reduce((sum, size) => sum + size)).toBeLessThan(60_000);
 	}
 	for (const words of [
-		['rank', 'short'],
-		['rpm', 'short'],
-		['run', 'short'],
+		['rank', 'fixture oval'],
+		['rpm', 'fixture oval'],
+		['run', 'fixture oval'],
 		['schema', 'car'],
 	]) {
 		const loaded = marksIn(await loadedBy(words));
@@ -52,7 +52,7 @@ test('plain commands load only what they need', async () => {
 
 test('ranking stays under 80 MB', async () => {
 	const report = `data:text/javascript,process.on('exit', () => process._rawDebug('RSS ' + process.resourceUsage().maxRSS));`;
-	const {err} = await program.run(['rank', 'short'], {node: ['--import', report]});
+	const {err} = await program.run(['rank', 'fixture oval'], {node: ['--import', report]});
 	const kilobytes = Number(/RSS (\d+)/.exec(err)?.[1]);
 	expect(kilobytes).toBeGreaterThan(10_000);
 	expect(kilobytes).toBeLessThan(80_000);

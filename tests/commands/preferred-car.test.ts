@@ -22,7 +22,7 @@ test('the preferred car is used where none is named, until it is cleared', async
 	});
 	expect((await program.run(['cars'], {environment})).out).toMatch(/^Other Car\* /m);
 	expect((await program.run([], {environment})).out).toMatch(/^Other Car · /);
-	expect((await program.run(['rank', 'short', '--car', 'demo'], {environment})).out).toMatch(/^Fixture Car · /);
+	expect((await program.run(['rank', 'fixture oval', '--car', 'demo'], {environment})).out).toMatch(/^Fixture Car · /);
 	expect((await program.run(['cars', '--prefer', 'none'], {environment})).status).toBe(0);
 	expect((await program.run([], {environment})).out).toMatch(/^Fixture Car · /);
 });
