@@ -1,7 +1,8 @@
 /** From the words of the command line to a request, or to what is wrong with them. */
 import {parseArgs} from 'node:util';
 import {didYouMean} from '../documents/nearest.ts';
-import {type Command, commandNamed, commands} from './command-table.ts';
+import type {Command} from './command.ts';
+import {commandNamed, commands} from './command-table.ts';
 import {type OptionName, option, options} from './options.ts';
 import {type Given, type Request, toRequest} from './request.ts';
 

@@ -1,21 +1,5 @@
 /** Every command once: parsing, help and the messages about unknown ones are made from this table. */
-import type {OptionName} from './options.ts';
-import type {Reply} from './reply.ts';
-import type {Request} from './request.ts';
-import type {Surroundings} from './surroundings.ts';
-
-export type CommandRun = (request: Request, around: Surroundings) => Promise<Reply>;
-
-export type Command = {
-	name: string;
-	summary: string;
-	/** The one argument, where there is one. */
-	argument?: {name: string; summary: string};
-	options: readonly OptionName[];
-	examples: readonly {line: string; gives: string}[];
-	/** Loads what the command needs, and only that. */
-	load: () => Promise<CommandRun>;
-};
+import type {Command} from './command.ts';
 
 const everywhere = ['json', 'units', 'strict', 'ascii', 'help', 'version'] as const;
 const track = {

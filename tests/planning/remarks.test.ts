@@ -60,7 +60,7 @@ describe('remarks', () => {
 			/^The curve starts at 7000 rpm: its torque is held below, where rows run down to \d{4} rpm\.$/,
 		);
 		expect(remarks[2]).toMatch(
-			/^The curve ends at 9000 rpm: its torque is held above, where rows run up to 9,\d{3} rpm\.$/,
+			/^The curve ends at 9000 rpm: its torque is held above, where rows run up to 9\d{3} rpm\.$/,
 		);
 	});
 
