@@ -1,0 +1,165 @@
+/** A session that runs: its state, the answer that follows from it, and who is told when either changes. */
+import type {Ranked} from '../../planning/rank-rack.ts';
+import type {Keeper} from '../keeper.ts';
+import {type ActionName, actionFor} from '../key-table.ts';
+import {type KeyEvent, keyName} from '../terminal/key-event.ts';
+import type {Action} from './action.ts';
+import {type Answer, rankedIn} from './answer.ts';
+import {choicesFor} from './catalog.ts';
+import {isChanged, type OpenDocument, unsaved} from './documents.ts';
+import {readTrackOf} from './forms.ts';
+import {type Effect, intend, type Scene, scopesOf, takesText} from './intend.ts';
+import {type Clock, Ranker} from './ranker.ts';
+import {reduce} from './reduce.ts';
+import {type Placed, placedRows, shownRows} from './rows.ts';
+import type {Session} from './session.ts';
+
+/** What only the terminal can do. */
+export type Outside = {
+	leave(): void;
+	suspend(): void;
+	redraw(): void;
+};
+
+export type State = {readonly session: Session; readonly answer: Answer; readonly scene: Scene};
+
+export class LiveSession {
+	#state: State;
+	readonly #ranker: Ranker;
+	readonly #catalog: readonly OpenDocument[];
+	readonly #keeper: Keeper;
+	readonly #outside: Outside;
+	readonly #listeners = new Set<() => void>();
+	#placed: {readonly ranked: Ranked; readonly rows: Placed[]} | undefined;
+
+	constructor(session: Session, catalog: readonly OpenDocument[], keeper: Keeper, outside: Outside, clock: Clock) {
+		this.#catalog = catalog;
+		this.#keeper = keeper;
+		this.#outside = outside;
+		this.#ranker = new Ranker(clock, () => this.#settle(this.#state.session));
+		this.#ranker.start(inputsOf(session));
+		this.#state = this.#stateOf(session);
+	}
+
+	readonly state = (): State => this.#state;
+
+	readonly subscribe = (listener: () => void): (() => void) => {
+		this.#listeners.add(listener);
+		return () => this.#listeners.delete(listener);
+	};
+
+	/** A key or a paste; what means nothing here is passed over. */
+	press(event: KeyEvent): void {
+		const {session, scene} = this.#state;
+		const key = keyName(event);
+		const name = key === undefined ? undefined : actionFor(key, scopesOf(session));
+		if (name !== undefined) this.#perform(intend(name, session, scene));
+		else if (takesText(session)) this.dispatch({do: 'type', event});
+		else if (event.kind === 'paste') this.dispatch({do: 'paste curve', text: event.text});
+	}
+
+	/** As if its key had been pressed. */
+	perform(name: ActionName): void {
+		this.#perform(intend(name, this.#state.session, this.#state.scene));
+	}
+
+	dispatch(action: Action): void {
+		const before = this.#state.session;
+		const session = reduce(before, action);
+		const documents = session.history.present;
+		const edited = documents !== before.history.present;
+		if (edited || session.situation !== before.situation) this.#ranker.rank(inputsOf(session));
+		if (edited) this.#keep(session);
+		this.#settle(session);
+	}
+
+	#perform(intent: Action | Effect | undefined): void {
+		if (intent === undefined) return;
+		if (typeof intent !== 'string') this.dispatch(intent);
+		else this.#effects[intent]();
+	}
+
+	readonly #effects: Record<Effect, () => void> = {
+		leave: () => this.#outside.leave(),
+		'discard and leave': () => {
+			this.#keeper.drop();
+			this.#outside.leave();
+		},
+		save: () => void this.#save(),
+		'save and leave': () => void this.#save().then(saved => saved && this.#outside.leave()),
+		suspend: () => this.#outside.suspend(),
+		redraw: () => {
+			if (this.#state.answer.is === 'stopped') this.#ranker.rank(inputsOf(this.#state.session));
+			this.#settle(this.#state.session);
+			this.#outside.redraw();
+		},
+		stop: () => {
+			this.#ranker.stop();
+			this.#settle(this.#state.session);
+		},
+		'take choice': () => {
+			const {session, scene} = this.#state;
+			const choice = session.place.at === 'choose' ? scene.choices[session.place.cursor] : undefined;
+			if (choice) this.dispatch({do: 'take', document: choice.document});
+		},
+		'forget recovery': () => {
+			this.#keeper.dropEarlier();
+			this.dispatch({do: 'cover', over: undefined});
+		},
+	};
+
+	async #save(): Promise<boolean> {
+		const changed = unsaved(this.#state.session.history.present);
+		if (changed.length === 0) {
+			this.dispatch({do: 'tell', notice: 'Nothing has changed since it was saved.'});
+			return true;
+		}
+		const saving = await this.#keeper.save(changed);
+		if (saving.ok) {
+			this.dispatch({do: 'saved', documents: changed});
+			this.#keep(this.#state.session);
+		}
+		this.dispatch({do: 'cover', over: undefined});
+		this.dispatch({do: 'tell', notice: saving.words});
+		return saving.ok;
+	}
+
+	#keep({history}: Session): void {
+		if (Object.values(history.present.open).some(isChanged)) this.#keeper.keep(history.present);
+		else this.#keeper.drop();
+	}
+
+	#settle(session: Session): void {
+		this.#state = this.#stateOf(session);
+		for (const listener of this.#listeners) listener();
+	}
+
+	#stateOf(session: Session): State {
+		const {answer} = this.#ranker;
+		const ranked = rankedIn(answer);
+		const all = ranked === undefined ? firstRow(answer) : this.#placedIn(ranked);
+		const documents = session.history.present;
+		const track = readTrackOf(documents.open[documents.track]!.json);
+		const {place} = session;
+		const scene: Scene = {
+			ranked,
+			all,
+			shown: shownRows(all, session.order, session.filter),
+			situations: track.ok ? track.value.situations.map(({name}) => name) : [],
+			choices: place.at === 'choose' ? choicesFor(this.#catalog, documents, place.kind, place.search.text) : [],
+			isWorking: answer.is === 'working',
+		};
+		return {session, answer, scene};
+	}
+
+	#placedIn(ranked: Ranked): Placed[] {
+		if (this.#placed?.ranked !== ranked) this.#placed = {ranked, rows: placedRows(ranked.ranking.rows)};
+		return this.#placed.rows;
+	}
+}
+
+/** Before the rack has been ranked there is the pair in the car. */
+const firstRow = (answer: Answer): Placed[] =>
+	answer.is === 'working' && answer.first !== undefined ? placedRows([answer.first.row]) : [];
+
+const inputsOf = ({history, situation}: Session) => ({documents: history.present, situation});
