@@ -117,6 +117,7 @@ export class GearTable {
 			distanceM: here.distanceM + distanceM,
 			timeS: here.timeS + timeS,
 			why: 'end',
+			shortlyBefore: here,
 		};
 		return evenly(there, room(speed, distanceM));
 	}
