@@ -25,10 +25,12 @@ export type Binding = {
 	readonly words: string;
 	/** For the line of keys; left out there where absent. */
 	readonly short?: string;
+	/** Where the line of keys is too short, the highest is left out first; 5 unless given. */
+	readonly rank?: number;
 };
 
 export const bindings = [
-	{scope: 'ranking', keys: ['up', 'k'], does: 'row up', words: 'the row above', short: 'row'},
+	{scope: 'ranking', keys: ['up', 'k'], does: 'row up', words: 'the row above', short: 'row', rank: 1},
 	{scope: 'ranking', keys: ['down', 'j'], does: 'row down', words: 'the row below'},
 	{
 		scope: 'ranking',
@@ -36,6 +38,7 @@ export const bindings = [
 		does: 'why',
 		words: 'see why: checks, points and straights of this row',
 		short: 'why',
+		rank: 2,
 	},
 	{scope: 'ranking', keys: ['pageup'], does: 'page up', words: 'ten rows up'},
 	{scope: 'ranking', keys: ['pagedown'], does: 'page down', words: 'ten rows down'},
@@ -47,6 +50,7 @@ export const bindings = [
 		does: 'next order',
 		words: 'sort by place, ratio, margin, exit RPM, shifts',
 		short: 'sort',
+		rank: 7,
 	},
 	{
 		scope: 'ranking',
@@ -54,6 +58,7 @@ export const bindings = [
 		does: 'hide failing',
 		words: 'hide rows that fail a check, or show them',
 		short: 'hide FAIL',
+		rank: 7,
 	},
 	{
 		scope: 'ranking',
@@ -61,6 +66,7 @@ export const bindings = [
 		does: 'next gearbox',
 		words: 'one gearbox set after the other, then all',
 		short: 'set',
+		rank: 8,
 	},
 	{
 		scope: 'ranking',
@@ -68,27 +74,28 @@ export const bindings = [
 		does: 'least margin',
 		words: 'hide rows with less to the limit than so many RPM',
 		short: 'margin',
+		rank: 8,
 	},
 
-	{scope: 'why', keys: ['up', 'k'], does: 'row up', words: 'the row above', short: 'row'},
+	{scope: 'why', keys: ['up', 'k'], does: 'row up', words: 'the row above', short: 'row', rank: 1},
 	{scope: 'why', keys: ['down', 'j'], does: 'row down', words: 'the row below'},
-	{scope: 'why', keys: ['pageup'], does: 'scroll up', words: 'scroll up', short: 'scroll'},
+	{scope: 'why', keys: ['pageup'], does: 'scroll up', words: 'scroll up', short: 'scroll', rank: 1},
 	{scope: 'why', keys: ['pagedown', 'space'], does: 'scroll down', words: 'scroll down'},
 	{scope: 'why', keys: ['enter'], does: 'ranking', words: 'back to the ranking'},
 
-	{scope: 'pictures', keys: ['tab'], does: 'next picture', words: 'the next picture', short: 'picture'},
+	{scope: 'pictures', keys: ['tab'], does: 'next picture', words: 'the next picture', short: 'picture', rank: 1},
 	{scope: 'pictures', keys: ['shift+tab'], does: 'previous picture', words: 'the picture before'},
-	{scope: 'pictures', keys: ['l'], does: 'next straight', words: 'the next straight', short: 'straight'},
+	{scope: 'pictures', keys: ['l'], does: 'next straight', words: 'the next straight', short: 'straight', rank: 1},
 	{scope: 'pictures', keys: ['L'], does: 'previous straight', words: 'the straight before'},
 	{scope: 'pictures', keys: ['up', 'k'], does: 'row up', words: 'the row above'},
 	{scope: 'pictures', keys: ['down', 'j'], does: 'row down', words: 'the row below'},
 
-	{scope: 'edit', keys: ['enter'], does: 'open field', words: 'type into the field', short: 'type'},
-	{scope: 'edit', keys: ['up', 'k'], does: 'field up', words: 'the field above', short: 'field'},
+	{scope: 'edit', keys: ['enter'], does: 'open field', words: 'type into the field', short: 'type', rank: 1},
+	{scope: 'edit', keys: ['up', 'k'], does: 'field up', words: 'the field above', short: 'field', rank: 1},
 	{scope: 'edit', keys: ['down', 'j'], does: 'field down', words: 'the field below'},
 	{scope: 'edit', keys: ['left'], does: 'column left', words: 'the column to the left, in a table'},
 	{scope: 'edit', keys: ['right'], does: 'column right', words: 'the column to the right, in a table'},
-	{scope: 'edit', keys: ['tab'], does: 'next section', words: 'the next section', short: 'section'},
+	{scope: 'edit', keys: ['tab'], does: 'next section', words: 'the next section', short: 'section', rank: 1},
 	{scope: 'edit', keys: ['shift+tab'], does: 'previous section', words: 'the section before'},
 	{scope: 'edit', keys: ['pageup'], does: 'fields up', words: 'ten fields up'},
 	{scope: 'edit', keys: ['pagedown'], does: 'fields down', words: 'ten fields down'},
@@ -98,6 +105,7 @@ export const bindings = [
 		does: 'other form',
 		words: 'the form of the track, or of the car',
 		short: 'track or car',
+		rank: 2,
 	},
 	{
 		scope: 'edit',
@@ -178,6 +186,7 @@ export const bindings = [
 		does: 'shorter',
 		words: 'one pair shorter: higher ratio, more RPM',
 		short: 'shorter',
+		rank: 3,
 	},
 	{
 		scope: 'everywhere',
@@ -185,6 +194,7 @@ export const bindings = [
 		does: 'taller',
 		words: 'one pair taller: lower ratio, less RPM',
 		short: 'taller',
+		rank: 3,
 	},
 	{
 		scope: 'everywhere',
@@ -192,6 +202,7 @@ export const bindings = [
 		does: 'compare',
 		words: 'compare all rows with this one, or stop comparing',
 		short: 'compare',
+		rank: 6,
 	},
 	{
 		scope: 'everywhere',
@@ -199,11 +210,12 @@ export const bindings = [
 		does: 'next situation',
 		words: 'the next situation, then the worst over all',
 		short: 'situation',
+		rank: 5,
 	},
 	{scope: 'everywhere', keys: ['S'], does: 'previous situation', words: 'the situation before'},
-	{scope: 'everywhere', keys: ['e'], does: 'edit', words: 'change the track or the car', short: 'edit'},
-	{scope: 'everywhere', keys: ['t'], does: 'choose', words: 'choose a track or a car', short: 'track'},
-	{scope: 'everywhere', keys: ['g'], does: 'pictures', words: 'look at pictures', short: 'pictures'},
+	{scope: 'everywhere', keys: ['e'], does: 'edit', words: 'change the track or the car', short: 'edit', rank: 4},
+	{scope: 'everywhere', keys: ['t'], does: 'choose', words: 'choose a track or a car', short: 'track', rank: 4},
+	{scope: 'everywhere', keys: ['g'], does: 'pictures', words: 'look at pictures', short: 'pictures', rank: 4},
 	{scope: 'everywhere', keys: ['w'], does: 'why', words: 'see why'},
 	{scope: 'everywhere', keys: ['r', 'escape'], does: 'ranking', words: 'the ranking; Esc also stops ranking'},
 	{
@@ -212,9 +224,10 @@ export const bindings = [
 		does: 'plan',
 		words: 'choose this pair as the plan, or take that back',
 		short: 'plan',
+		rank: 6,
 	},
 	{scope: 'everywhere', keys: ['i'], does: 'install', words: 'this pair is in the car now'},
-	{scope: 'everywhere', keys: ['u', 'ctrl+_'], does: 'undo', words: 'undo', short: 'undo'},
+	{scope: 'everywhere', keys: ['u', 'ctrl+_'], does: 'undo', words: 'undo', short: 'undo', rank: 6},
 	{scope: 'everywhere', keys: ['U', 'ctrl+r'], does: 'redo', words: 'redo'},
 	{scope: 'everywhere', keys: ['m'], does: 'units', words: 'US or metric units'},
 	{scope: 'everywhere', keys: ['ctrl+s'], does: 'save', words: 'save the track and the car'},
@@ -228,7 +241,14 @@ export const bindings = [
 		does: 'leave',
 		words: 'leave at once; what is not saved is offered at the next start',
 	},
-] as const satisfies readonly {scope: Scope; keys: readonly string[]; does: string; words: string; short?: string}[];
+] as const satisfies readonly {
+	scope: Scope;
+	keys: readonly string[];
+	does: string;
+	words: string;
+	short?: string;
+	rank?: number;
+}[];
 
 export type ActionName = (typeof bindings)[number]['does'];
 

@@ -39,8 +39,8 @@ export async function openScreen({documents, catalog, units, theme, keeper}: Ope
 	const clock = {
 		now: () => performance.now(),
 		later: (act: () => void) => {
-			const waiting = setTimeout(act, 0);
-			return () => clearTimeout(waiting);
+			const waiting = setImmediate(act);
+			return () => clearImmediate(waiting);
 		},
 	};
 	const session = startSession(documents, units);

@@ -1,10 +1,14 @@
 import {test} from 'vitest';
-import {trackSchema, carSchema} from '/work/wt-screen/source/documents/schema.ts';
+import {readFileSync} from 'node:fs';
+import {checkTrack, checkCar} from '../../source/documents/read.ts';
+import {rankRack} from '../../source/planning/rank-rack.ts';
 test('x', () => {
-	const t = trackSchema() as any;
-	const t0 = performance.now(); trackSchema(); carSchema(); console.log(performance.now() - t0);
-	console.log(JSON.stringify({...t, properties: {...t.properties, situations: undefined}}, null, 1).slice(0, 7000));
-	console.log(JSON.stringify(t.properties.situations.items.properties.grip), JSON.stringify(t.properties.situations.items.properties.exit), t.$defs);
-	const c = carSchema() as any;
-	console.log(JSON.stringify(c.properties.rack), JSON.stringify(c.properties.engines.items.properties.for), JSON.stringify(c.properties.engines.items.required), JSON.stringify(c.properties.margins.properties.level), JSON.stringify(c.properties.installed));
+	const car = checkCar(JSON.parse(readFileSync('tracks/cars/demo.json','utf8')));
+	for (const t of ['tarrowdale','hesper-ridge','quillmere','ostrand-flats']) {
+	const track = checkTrack(JSON.parse(readFileSync(`tracks/${t}.json`,'utf8')));
+	if (!car.ok || !track.ok) throw 1;
+	const times = [];
+	for (let i = 0; i < 6; i++) { const t0 = performance.now(); rankRack(car.value, track.value); times.push(Math.round(performance.now() - t0)); }
+	console.log(t, times.join(' '));
+	}
 });

@@ -49,7 +49,7 @@ export class Canvas {
 	}
 
 	dot(x: number, y: number, {mark, tone}: Pen): void {
-		if (!(x >= 0 && y >= 0 && x < this.wide && y < this.high)) return;
+		if (!this.#isInside(x, y)) return;
 		const index = this.#cellOf(x, y);
 		if (this.#labeled.has(index)) return;
 		const before = this.#cells[index];
@@ -61,6 +61,7 @@ export class Canvas {
 
 	/** A line of signs from left to right, under everything else. */
 	rule(y: number, sign: string, tone: Meaning): void {
+		if (!this.#isInside(0, y)) return;
 		const start = this.#cellOf(0, y);
 		for (let index = start; index < start + this.#columns; index++) {
 			this.#cells[index] ??= {dots: 0, tone, text: sign, under: true};
@@ -69,6 +70,7 @@ export class Canvas {
 
 	/** Text over what is drawn, from a dot's cell on. What does not fit is cut. */
 	label(x: number, y: number, text: string, tone: Meaning): void {
+		if (!this.#isInside(x, y)) return;
 		const start = this.#cellOf(x, y);
 		const room = this.#columns - (start % this.#columns);
 		[...text].slice(0, room).forEach((character, i) => {
@@ -79,7 +81,7 @@ export class Canvas {
 
 	/** Whether a stretch of cells lies inside and holds no label. */
 	isFree(x: number, y: number, length: number): boolean {
-		if (!(x >= 0 && y >= 0 && x < this.wide && y < this.high)) return false;
+		if (!this.#isInside(x, y)) return false;
 		const start = this.#cellOf(x, y);
 		if ((start % this.#columns) + length > this.#columns) return false;
 		return Array.from({length}, (_, i) => !this.#labeled.has(start + i)).every(Boolean);
@@ -93,6 +95,11 @@ export class Canvas {
 	/** The lines from top to bottom; neighbors of one meaning are one piece. */
 	lines(): Piece[][] {
 		return Array.from({length: this.#rows}, (_, row) => this.#line(row));
+	}
+
+	/** False for what is not finite, too. */
+	#isInside(x: number, y: number): boolean {
+		return x >= 0 && y >= 0 && x < this.wide && y < this.high;
 	}
 
 	#cellOf(x: number, y: number): number {

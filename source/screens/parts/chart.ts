@@ -56,6 +56,7 @@ export function drawChart(chart: Chart, size: ChartSize): Pieces[] {
 	drawLevels(chart, canvas, place);
 	drawSeries(chart, canvas, place);
 	for (const {x, y, text, tone} of chart.signs ?? []) canvas.label(place.x(x), place.y(y), text, tone);
+	for (const one of chart.series) nameLine(one, canvas, place);
 
 	const {wide, high} = canvas.dotsPerCell;
 	const labelOfRow = new Map(yTicks.map((tick, i) => [Math.floor(place.y(tick) / high), yLabels[i]!]));
@@ -76,7 +77,7 @@ function spansOf({x, y, series, levels = [], signs = []}: Chart): {x: Span; y: S
 	if (points.length === 0) return undefined;
 	const ys = [...points.map(([, y]) => y), ...levels.map(({y}) => y), ...signs.map(({y}) => y)];
 	return {
-		x: spanOf([...points.map(([x]) => x), ...(x.include ?? [])]),
+		x: spanOf([...points.map(([x]) => x), ...signs.map(({x}) => x), ...(x.include ?? [])]),
 		y: spanOf([...ys, ...(y.include ?? [])]),
 	};
 }
@@ -109,18 +110,18 @@ function drawSeries({series}: Chart, canvas: Canvas, place: Place): void {
 			last = isFinitePoint(point) ? point : undefined;
 		}
 	}
-	for (const one of series) nameLine(one, canvas, place);
 }
 
 /** The name stands at the end of its line, or further back where that place is taken. */
 function nameLine({name, tone, points}: Series, canvas: Canvas, place: Place): void {
 	const finite = points.filter(isFinitePoint);
-	const {wide} = canvas.dotsPerCell;
+	const {wide, high} = canvas.dotsPerCell;
 	for (const share of [1, 0.85, 0.7, 0.5, 0.3]) {
 		const point = finite[Math.round((finite.length - 1) * share)];
 		if (point === undefined) return;
 		const x = Math.max(0, place.x(point[0]) - (displayWidth(name) - 1) * wide);
-		const y = place.y(point[1]);
+		// Beside the line where it is long, on it where it is one digit.
+		const y = Math.max(0, place.y(point[1]) - (displayWidth(name) > 1 ? high : 0));
 		if (!canvas.isFree(x, y, displayWidth(name))) continue;
 		canvas.label(x, y, name, tone);
 		return;

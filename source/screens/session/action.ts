@@ -26,7 +26,8 @@ export type Action =
 	/** Typed into whatever takes text: a field, the search, the least margin. */
 	| {readonly do: 'type'; readonly event: KeyEvent}
 	| {readonly do: 'move in form'; readonly sections: number; readonly rows: number; readonly columns: number}
-	| {readonly do: 'open field'}
+	/** With what stands there, or with what was typed in its place. */
+	| {readonly do: 'open field'; readonly text?: string}
 	/** And then on by so many rows or columns. */
 	| {readonly do: 'accept field'; readonly rows: number; readonly columns: number}
 	| {readonly do: 'put back'}

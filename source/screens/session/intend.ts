@@ -196,8 +196,10 @@ function next<T>(among: readonly T[], one: T, by: number): T {
 }
 
 function rowBy(session: Session, {shown}: Scene, by: number): Action | undefined {
-	const row = shown[Math.max(0, Math.min(shown.length - 1, cursorIn(shown, session.row) + by))];
-	return row && {do: 'selectRow', row: row.name};
+	const cursor = cursorIn(shown, session.row);
+	const target = Math.max(0, Math.min(shown.length - 1, cursor + by));
+	// At the end of the list nothing is chosen that was not chosen before.
+	return target === cursor ? undefined : {do: 'selectRow', row: shown[target]!.name};
 }
 
 function stepTo({all, shown}: Scene, here: Placed | undefined, by: 1 | -1): Action | undefined {

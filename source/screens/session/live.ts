@@ -55,6 +55,7 @@ export class LiveSession {
 		const name = key === undefined ? undefined : actionFor(key, scopesOf(session));
 		if (name !== undefined) this.#perform(intend(name, session, scene));
 		else if (takesText(session)) this.dispatch({do: 'type', event});
+		else if (startsNumber(event) && session.place.at === 'edit') this.dispatch({do: 'open field', text: event.text});
 		else if (event.kind === 'paste') this.dispatch({do: 'paste curve', text: event.text});
 	}
 
@@ -157,6 +158,10 @@ export class LiveSession {
 		return this.#placed.rows;
 	}
 }
+
+/** A number typed on a field takes the place of what stood there. */
+const startsNumber = (event: KeyEvent): event is KeyEvent & {kind: 'text'} =>
+	event.kind === 'text' && /^[\d.]$/.test(event.text);
 
 /** Before the rack has been ranked there is the pair in the car. */
 const firstRow = (answer: Answer): Placed[] =>

@@ -1,9 +1,9 @@
 /** Ranks in slices, so that keys are answered while a long rack is still being run. */
 import {type Ranked, rankSteps} from '../../planning/rank-rack.ts';
-import type {Outcome, SingleRun} from '../../planning/results.ts';
+import type {Outcome} from '../../planning/results.ts';
 import {runAlone} from '../../planning/run-alone.ts';
 import type {Progress} from '../../planning/run-rack.ts';
-import {type Answer, type Inputs, readBoth, wrongFromFault} from './answer.ts';
+import {type Answer, type Inputs, rankedIn, readBoth, wrongFromFault} from './answer.ts';
 
 export type Clock = {
 	/** Milliseconds; only differences count. */
@@ -16,6 +16,10 @@ export type Clock = {
 const firstSliceMs = 40;
 /** Short enough that no key waits noticeably. */
 const sliceMs = 12;
+/** A drawing costs as much as a slice: progress is told no more often than this. */
+const tellMs = 120;
+
+const noProgress: Progress = {done: 0, total: 0};
 
 type Steps = Generator<Progress, Outcome<Ranked>, void>;
 
@@ -24,11 +28,13 @@ export class Ranker {
 	readonly #clock: Clock;
 	readonly #changed: () => void;
 	#cancel: (() => void) | undefined;
+	#told = 0;
+	#inputs: Inputs | undefined;
 
 	constructor(clock: Clock, changed: () => void) {
 		this.#clock = clock;
 		this.#changed = changed;
-		this.#answer = {is: 'working', progress: {done: 0, total: 0}, first: undefined, before: undefined};
+		this.#answer = {is: 'working', progress: noProgress, first: undefined, before: undefined};
 	}
 
 	get answer(): Answer {
@@ -37,14 +43,12 @@ export class Ranker {
 
 	/** Only the pair in the car at once; the rest once that has been drawn. */
 	start(inputs: Inputs): void {
-		const read = readBoth(inputs.documents);
-		const first = read.ok ? runAlone(read.car, read.track, {}, inputs) : undefined;
-		this.#begin(inputs, first?.ok ? first.value : undefined, 0);
+		this.#begin(inputs, 0);
 	}
 
 	/** Ranks anew: at once as far as a frame allows. */
 	rank(inputs: Inputs): void {
-		this.#begin(inputs, undefined, firstSliceMs);
+		this.#begin(inputs, firstSliceMs);
 	}
 
 	/** Leaves what is under way; whether there was anything. */
@@ -57,22 +61,25 @@ export class Ranker {
 		return true;
 	}
 
-	#begin(inputs: Inputs, first: SingleRun | undefined, sliceMs: number): void {
+	#begin(inputs: Inputs, budgetMs: number): void {
 		this.#cancel?.();
 		this.#cancel = undefined;
+		const before = this.#isOfSame(inputs) ? rankedIn(this.#answer) : undefined;
+		this.#inputs = inputs;
 		const read = readBoth(inputs.documents);
 		if (!read.ok) {
 			this.#answer = {is: 'faulty', wrong: read.wrong};
 			return;
 		}
-		const before =
-			this.#answer.is === 'ready'
-				? this.#answer.ranked
-				: this.#answer.is === 'faulty'
-					? undefined
-					: this.#answer.before;
-		this.#answer = {is: 'working', progress: {done: 0, total: 0}, first, before};
-		this.#work(rankSteps(read.car, read.track, {situation: inputs.situation}), sliceMs);
+		const first = before === undefined ? runAlone(read.car, read.track, {}, inputs) : undefined;
+		this.#answer = {is: 'working', progress: noProgress, first: first?.ok ? first.value : undefined, before};
+		this.#told = this.#clock.now();
+		this.#work(rankSteps(read.car, read.track, {situation: inputs.situation}), budgetMs);
+	}
+
+	/** What was ranked of another track or car would only mislead. */
+	#isOfSame({documents: {track, car}}: Inputs): boolean {
+		return this.#inputs?.documents.track === track && this.#inputs.documents.car === car;
 	}
 
 	/** One slice; what is left comes later. */
@@ -90,7 +97,14 @@ export class Ranker {
 		}
 		this.#cancel = this.#clock.later(() => {
 			this.#work(steps, sliceMs);
-			this.#changed();
+			this.#tell();
 		});
+	}
+
+	#tell(): void {
+		const now = this.#clock.now();
+		if (this.#answer.is === 'working' && now - this.#told < tellMs) return;
+		this.#told = now;
+		this.#changed();
 	}
 }

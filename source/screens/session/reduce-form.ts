@@ -29,7 +29,7 @@ export function reduceForm(session: Session, edit: Edit, action: Action): Sessio
 		case 'open field':
 			return field === undefined
 				? session
-				: at({...here, editing: {line: editLine(valueText(field.value)), wrong: undefined}});
+				: at({...here, editing: {line: editLine(action.text ?? valueText(field.value)), wrong: undefined}});
 		case 'put back':
 			return at({...here, editing: undefined});
 		case 'accept field': {

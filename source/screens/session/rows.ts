@@ -42,15 +42,12 @@ const valueBy: Record<Exclude<Order, 'place'>, (row: Row) => number> = {
 	shifts: row => -shiftsPerLap(row),
 };
 
-/** Where the cursor stands: on the row of that name, else on what is in the car, else on the first. */
-export function cursorIn(rows: readonly Placed[], name: string | undefined): number {
-	const named = rows.findIndex(row => row.name === name);
-	if (named >= 0) return named;
-	return Math.max(
+/** Where the cursor stands: on the row of that name, else on the first. */
+export const cursorIn = (rows: readonly Placed[], name: string | undefined): number =>
+	Math.max(
 		0,
-		rows.findIndex(({row}) => row.installed),
+		rows.findIndex(row => row.name === name),
 	);
-}
 
 /** The next shorter (`+1`) or taller (`-1`) pair on the same gearbox set, whatever is hidden; undefined at the end of the rack. */
 export function stepped(rows: readonly Placed[], from: Placed, by: 1 | -1): Placed | undefined {

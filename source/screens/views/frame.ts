@@ -13,7 +13,7 @@ import {chooseView} from './choose-view.ts';
 import {editView} from './edit-view.ts';
 import {headerView, settingOf} from './header-view.ts';
 import {helpView} from './help-view.ts';
-import {keyLine} from './key-line.ts';
+import {keyLines} from './key-line.ts';
 import {pictureView} from './picture-view.ts';
 import {type RankingTable, rankingTable, tableWidth} from './ranking-view.ts';
 import {reasonView, sentenceView} from './reason-view.ts';
@@ -34,17 +34,19 @@ export type Frame = {
 const wide = 120;
 /** The ranking beside its reasons takes no more than this. */
 const widestTable = 96;
-const headHeight = 3;
-/** Notice and keys. */
-const footHeight = 2;
+/** From this height on there are two lines of keys. */
+const roomy = 30;
 
 export function frameOf(state: State, size: Size, previousStart: number): Frame {
 	if (size.width < leastSize.width || size.height < leastSize.height) return tooSmall(size);
 	const {session, answer, scene} = state;
 	const {width, height} = size;
-	const head = [...headerView(session, answer, {shown: scene.shown.length, all: scene.all.length}, width), rule(width)];
-	const foot = [noticeLine(state, width), keyLine(scopesOf(session), width)];
-	const body = height - headHeight - footHeight;
+	const cursor = cursorIn(scene.shown, session.row);
+	const here = scene.shown[cursor];
+	const counts = {shown: scene.shown.length, all: scene.all.length};
+	const head = [...headerView(session, answer, counts, here, width), rule(width)];
+	const foot = [noticeLine(state, width), ...keyLines(scopesOf(session), width, height < roomy ? 1 : 2)];
+	const body = height - head.length - foot.length;
 	const plain = (lines: readonly Pieces[]): Frame => ({
 		top: [...head, ...tall(lines, body).map(one => fitted(one, width))],
 		table: undefined,
@@ -66,8 +68,6 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 	if (session.place.at === 'edit') return plain(editView(session, session.place, width, body));
 	if (answer.is === 'faulty') return plain(wrongView(answer.wrong, width));
 
-	const cursor = cursorIn(scene.shown, session.row);
-	const here = scene.shown[cursor];
 	if (here === undefined)
 		return plain([
 			line('No row passes the filter. h shows failing rows, b all sets, n with nothing typed any margin.', 'muted'),

@@ -1,11 +1,14 @@
 /** The two lines at the top: whose numbers these are and for which day, and how they are looked at. */
 import {airWords} from '../../commands/text/heading-view.ts';
-import {rpm, unitsOf} from '../../commands/text/units.ts';
+import {rpm, rpmDown, seconds, unitsOf} from '../../commands/text/units.ts';
+import {visible} from '../../documents/visible.ts';
 import type {Setting} from '../../planning/results.ts';
 import {type Piece, type Pieces, piece, spread} from '../parts/pieces.ts';
 import type {Answer} from '../session/answer.ts';
 import {current, isChanged, titleOf} from '../session/documents.ts';
+import {limitMarginRpm} from '../session/figures.ts';
 import {readTrackOf} from '../session/forms.ts';
+import type {Placed} from '../session/rows.ts';
 import type {Session} from '../session/session.ts';
 
 export const settingOf = (answer: Answer): Setting | undefined => {
@@ -14,13 +17,28 @@ export const settingOf = (answer: Answer): Setting | undefined => {
 	return answer.is === 'stopped' ? answer.before?.ranking.setting : undefined;
 };
 
+export type Counts = {readonly shown: number; readonly all: number};
+
+/** `here` is the row under the cursor. */
 export function headerView(
 	session: Session,
 	answer: Answer,
-	counts: {shown: number; all: number},
+	counts: Counts,
+	here: Placed | undefined,
 	width: number,
 ): Pieces[] {
-	return [trackLine(session, answer, width), stateLine(session, answer, counts, width)];
+	const isForm = session.place.at === 'edit' && here !== undefined && answer.is !== 'faulty';
+	const state = isForm ? rowLine(here, answer, width) : stateLine(session, answer, counts, width);
+	return [trackLine(session, answer, width), state];
+}
+
+/** While the form is worked on, what it comes to for the row under the cursor. */
+function rowLine({name, place, row}: Placed, answer: Answer, width: number): Pieces {
+	const verdict = row.verdict === 'fail' ? 'FAIL' : row.verdict;
+	const margin = `margin ${rpmDown(limitMarginRpm(row))} rpm`;
+	const words = [` place ${place}`, margin, `lap ${seconds(row.fastestS)} s`, visible(row.reason)].join(' · ');
+	const pieces = [piece(name, 'strong'), piece(' '), piece(verdict, row.verdict), piece(words, 'muted')];
+	return spread(pieces, progressPieces(answer), width);
 }
 
 function trackLine(session: Session, answer: Answer, width: number): Pieces {
@@ -40,12 +58,7 @@ function trackLine(session: Session, answer: Answer, width: number): Pieces {
 	return spread(left, [piece(`${titleOf(car)}${mark(car)}`, 'strong')], width);
 }
 
-function stateLine(
-	session: Session,
-	answer: Answer,
-	{shown, all}: {shown: number; all: number},
-	width: number,
-): Pieces {
+function stateLine(session: Session, answer: Answer, {shown, all}: Counts, width: number): Pieces {
 	const {situation, order, filter, comparison, plan} = session;
 	const words = [
 		situation === undefined ? 'worst over all situations' : `only ${situation}`,

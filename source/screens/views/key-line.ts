@@ -1,24 +1,37 @@
-/** The keys of the place, on one line: as many as fit, the rest is in the help. */
+/** The keys of the place: as many as fit, the rest is in the help. */
 import {type Binding, bindingsOf, keyWords, type Scope} from '../key-table.ts';
 import {fitted, type Piece, type Pieces, piece, widthOf} from '../parts/pieces.ts';
 
 const between = '  ';
 
-/** Help and the way out are always there. */
-export function keyLine(scopes: readonly Scope[], width: number): Pieces {
+const usualRank = 5;
+
+/** So many lines of keys; help and the way out are always there. */
+export function keyLines(scopes: readonly Scope[], width: number, count: number): Pieces[] {
 	const shown = scopes.flatMap(scope => bindingsOf(scope).filter(({short}) => short !== undefined));
 	const once = shown.filter((binding, i) => shown.findIndex(other => other.short === binding.short) === i);
 	const last = once.filter(({does}) => does === 'help' || does === 'quit');
-	const rest = once.filter(binding => !last.includes(binding));
+	const rest = once
+		.filter(binding => !last.includes(binding))
+		.sort((a, b) => (a.rank ?? usualRank) - (b.rank ?? usualRank));
 	const end = joined(last);
-	const line: Piece[] = [];
+	const lines: Piece[][] = Array.from({length: count}, () => []);
+	let at = 0;
 	for (const binding of rest) {
 		const part = keyPieces(binding);
-		const room = width - widthOf(line) - widthOf(part) - (end.length > 0 ? widthOf(end) + between.length : 0);
-		if (room < between.length) break;
+		const fits = () => {
+			const line = lines[at]!;
+			const reserved = at === count - 1 && end.length > 0 ? widthOf(end) + between.length : 0;
+			return widthOf(line) + (line.length > 0 ? between.length : 0) + widthOf(part) + reserved <= width;
+		};
+		while (at < count && !fits()) at++;
+		if (at === count) break;
+		const line = lines[at]!;
 		line.push(...(line.length > 0 ? [piece(between)] : []), ...part);
 	}
-	return fitted([...line, ...(line.length > 0 && end.length > 0 ? [piece(between)] : []), ...end], width);
+	const final = lines[count - 1]!;
+	final.push(...(final.length > 0 && end.length > 0 ? [piece(between)] : []), ...end);
+	return lines.map(line => fitted(line, width));
 }
 
 const joined = (bindings: readonly Binding[]): Piece[] =>

@@ -49,6 +49,10 @@ const sizes: Record<UnitSystem, Partial<Record<Quantity, number>>> = {
 	us: {speed: 1 / 0.44704, distance: 1 / 0.3048},
 	metric: {speed: 3.6, distance: 1},
 };
+const forces: Record<UnitSystem, {label: string; size: number}> = {
+	us: {label: 'lbf', size: 1 / 4.4482216152605},
+	metric: {label: 'kN', size: 1e-3},
+};
 const scale = (quantity: Quantity, units: UnitSystem): number => sizes[units][quantity] ?? 1;
 
 const runOf = ({runs}: Ranked, {name}: Placed): RowRun | undefined => runs.get(name);
@@ -66,7 +70,7 @@ function rpmPicture(given: PictureGiven): Drawn {
 	const used = [...new Set(points.flatMap(({gear}) => gear ?? []))].sort((a, b) => a - b);
 	const curves = run && gearCurves(run, ranked.ground, situationOf(given), 0);
 	const speeds = points.map(({speedMps}) => speedMps);
-	const [slowest, fastest] = [Math.min(...speeds) * 0.85, Math.max(...speeds) * 1.1];
+	const [slowest, fastest] = [Math.min(...speeds) * 0.9, Math.max(...speeds) * 1.05];
 	const series = used.map((gear): Series => {
 		const inside = (curves?.rpm[gear - 1] ?? []).filter(([speed]) => speed >= slowest && speed <= fastest);
 		return {name: `gear ${gear}`, mark: String(gear), tone: 'plain', points: scaled(inside, scale('speed', units), 1)};
@@ -84,16 +88,15 @@ function rpmPicture(given: PictureGiven): Drawn {
 	return {
 		title: `RPM over speed, ${here.name}, ${situationOf(given)}`,
 		chart: {x: {name: read.label('speed')}, y: {name: 'rpm'}, series, levels, signs},
-		notes: ['m minimum  x exit  T top  E entry  M measured  p pit road  r restart'],
+		notes: ['m minimum  x exit  T top  E entry  M measured'],
 	};
 }
 
-const isIn = ({situation}: RpmPoint, name: string) => situation === name || situation === '';
+/** Points under full throttle and around it; pit road and restart would press the rest together. */
+const isIn = ({situation, at}: RpmPoint, name: string) => situation === name && at !== 'restart';
 
 /** The last word of a point says what it is. */
 function letterOf({at}: RpmPoint): string {
-	if (at.startsWith('pit road')) return 'p';
-	if (at === 'restart') return 'r';
 	const letters: Record<string, string> = {minimum: 'm', exit: 'x', top: 'T', end: 'T', entry: 'E', measured: 'M'};
 	return letters[at.split(' ').at(-1) ?? ''] ?? 'x';
 }
@@ -108,28 +111,28 @@ function thrustPicture(given: PictureGiven): Drawn {
 	if (curves === undefined || straight === undefined)
 		return {title: 'Thrust and resistance', chart: undefined, notes: []};
 	const across = scale('speed', units);
-	const thousand = 1e-3;
+	const force = forces[units];
 	const gear = (curve: Curve, i: number): Series => ({
 		name: `${i + 1}`,
 		mark: String(i + 1),
 		tone: 'plain',
-		points: scaled(curve, across, thousand),
+		points: scaled(curve, across, force.size),
 	});
 	const series: Series[] = [
 		...curves.thrustN.map(gear),
-		{name: 'resistance', mark: '.', tone: 'second', points: scaled(curves.resistanceN, across, thousand)},
-		{name: 'grip', mark: ':', tone: 'muted', dotted: true, points: scaled(curves.gripN, across, thousand)},
+		{name: 'resistance', mark: '.', tone: 'second', points: scaled(curves.resistanceN, across, force.size)},
+		{name: 'grip', mark: ':', tone: 'muted', dotted: true, points: scaled(curves.gripN, across, force.size)},
 	];
 	const signs = straight.shifts.map((shift): Sign => {
 		const thrust = valueNear(curves.thrustN[shift.from - 1]!, shift.speedMps);
-		return {x: read.number('speed', shift.speedMps), y: thrust * thousand, text: 'S', tone: 'strong'};
+		return {x: read.number('speed', shift.speedMps), y: thrust * force.size, text: 'S', tone: 'strong'};
 	});
 	const shifts = straight.shifts.map(
 		({from, rpm: at, speedMps}) => `${from}-${from + 1} at ${rpm(at)} rpm, ${unitsOf(units).text('speed', speedMps)}`,
 	);
 	return {
 		title: `Thrust and resistance over speed, ${here.name}, ${straight.name}, ${situationOf(given)}`,
-		chart: {x: {name: read.label('speed')}, y: {name: 'kN', include: [0]}, series, signs},
+		chart: {x: {name: read.label('speed')}, y: {name: force.label, include: [0]}, series, signs},
 		notes: [shifts.length > 0 ? `S shift: ${shifts.join('; ')}` : 'No shift on this straight.'],
 	};
 }
@@ -173,7 +176,7 @@ function traceIn(given: PictureGiven, placed: Placed): TracePoint[] | undefined 
 	return run && traceOf(run, given.ranked.ground, situationOf(given), given.straight);
 }
 
-/** Ahead in time at the quarters of the way: two lines of speed lie too near each other to see it. */
+/** Ahead in time at the thirds of the way: two lines of speed lie too near each other to see it. */
 function aheadWords(
 	mine: readonly TracePoint[],
 	its: readonly TracePoint[],
@@ -181,11 +184,12 @@ function aheadWords(
 	name: string,
 ): string {
 	const words = unitsOf(units);
-	const at = [0.25, 0.5, 0.75, 1].map(share => Math.round((mine.length - 1) * share));
-	const parts = at.map(
-		i => `${signed(its[i]!.timeS - mine[i]!.timeS, 3)} s at ${words.text('distance', mine[i]!.distanceM)}`,
-	);
-	return `Ahead of ${name} by ${parts.join(', ')}`;
+	const at = [1 / 3, 2 / 3, 1].map(share => Math.round((mine.length - 1) * share));
+	const parts = at.map(i => {
+		const ahead = signed(its[i]!.timeS - mine[i]!.timeS, 3);
+		return `${ahead} at ${words.text('distance', mine[i]!.distanceM)}`;
+	});
+	return `Seconds ahead of ${name}: ${parts.join(', ')}`;
 }
 
 const scaled = (curve: Curve, x: number, y: number): Point[] => curve.map(([a, b]) => [a * x, b * y]);

@@ -110,21 +110,32 @@ const marksWidth = 4;
 /** `height` counts the heading too; `previousStart` is where the window stood before. */
 export function rankingTable(given: Given, width: number, height: number, previousStart: number): RankingTable {
 	const {shown, cursor, session, compared} = given;
-	const {start, end} = listWindow(shown.length, cursor, height - 1, previousStart);
+	const {start, end, pinned} = windowAndPinned(given, height - 1, previousStart);
 	const used = compared === undefined ? columns : [...columns.filter(({head}) => head !== 'gain s'), ...comparing];
 	const texts = shown.map(placed => used.map(column => column.text(placed, given)));
 	const natural = used.map(({head}, i) => Math.max(displayWidth(head), ...texts.map(row => displayWidth(row[i]!))));
 	const widths = fitColumns(used, natural, width - marksWidth - gap);
-	const rows = texts.slice(start, end).map(
-		(row, i): TableRow => ({
-			' ': marksOf(shown[start + i]!, session, start + i === cursor),
-			...Object.fromEntries(used.map(({head}, column) => [head, row[column]!])),
-		}),
-	);
+	const rowAt = (index: number): TableRow => ({
+		' ': marksOf(shown[index]!, session, index === cursor),
+		...Object.fromEntries(used.map(({head}, column) => [head, texts[index]![column]!])),
+	});
+	const rows = [...Array.from({length: end - start}, (_, i) => rowAt(start + i)), ...pinned.map(rowAt)];
 	const kept = used.flatMap(({head, align, tone}, i) =>
 		widths[i] === 0 ? [] : [{head, align, width: widths[i]!, ...(tone && {tone})}],
 	);
 	return {columns: [{head: ' ', align: 'left', width: marksWidth}, ...kept], rows, selected: cursor - start, start};
+}
+
+/** What is in the car and what is compared with stay in view: below the others where the window is elsewhere. */
+function windowAndPinned({shown, cursor, session}: Given, height: number, previousStart: number) {
+	const whole = listWindow(shown.length, cursor, height, previousStart);
+	const isOutside = (index: number) => index >= 0 && (index < whole.start || index >= whole.end);
+	const wanted = [shown.findIndex(({row}) => row.installed), shown.findIndex(({name}) => name === session.comparison)];
+	const outside = [...new Set(wanted.filter(isOutside))].sort((a, b) => a - b);
+	if (outside.length === 0) return {...whole, pinned: []};
+	const window = listWindow(shown.length, cursor, height - outside.length, previousStart);
+	const pinned = wanted.filter(index => index >= 0 && (index < window.start || index >= window.end));
+	return {...window, pinned: [...new Set(pinned)].sort((a, b) => a - b).slice(0, outside.length)};
 }
 
 /** What the table takes of a width. */

@@ -52,8 +52,9 @@ function checkWords(checks: readonly Check[]): Piece[][] {
 		});
 }
 
-function marginWords({check, margin}: Check): string {
-	if (margin === null) return '';
+/** What is right although it is below its bound has its reason elsewhere. */
+function marginWords({check, margin, verdict}: Check): string {
+	if (margin === null || (verdict === 'pass' && margin < 0)) return '';
 	if (check === 'settle') return ` ${signed(margin, 1)} s`;
 	const rpms: readonly Check['check'][] = ['limit', 'band', 'afterShift', 'pitRoad', 'restart', 'downshift'];
 	return rpms.includes(check) ? ` ${margin > 0 ? '+' : ''}${margin < 0 ? rpmUp(margin) : rpmDown(margin)}` : '';
