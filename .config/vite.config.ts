@@ -15,7 +15,7 @@ export default defineConfig(({command}) => ({
 	// Only for the build: in tests it would send every library through the transformer.
 	...(command === 'build' && {
 		ssr: {noExternal: true as const},
-		define: {'process.env.NODE_ENV': '"production"', 'process.env.DEV': '"false"'},
+		define: {'process.env.NODE_ENV': '"production"', 'process.env.DEV': '"false"', fetch: 'undefined'},
 		resolve: {alias: {'react-devtools-core': new URL('no-devtools.ts', import.meta.url).pathname}},
 	}),
 	build: {

@@ -41,7 +41,7 @@ function sections(schema: Schema, document: JsonObject, path: Path, title: strin
 	);
 	// At the top each group is a section of its own; inside an entry of a list its groups are fields among the others.
 	const groups = path.length === 0 ? topGroups(schema, document) : [];
-	return [{title, rows: own.map(field => [field])}, ...groups, ...lists];
+	return [{title, rows: own.map(field => [field])}, ...lists, ...groups];
 }
 
 function topGroups(schema: Schema, document: JsonObject): Section[] {

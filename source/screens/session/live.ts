@@ -1,5 +1,5 @@
 /** A session that runs: its state, the answer that follows from it, and who is told when either changes. */
-import type {Ranked} from '../../planning/rank-rack.ts';
+import {type Ranked, rowName} from '../../planning/rank-rack.ts';
 import type {Keeper} from '../keeper.ts';
 import {type ActionName, actionFor} from '../key-table.ts';
 import {type KeyEvent, keyName} from '../terminal/key-event.ts';
@@ -165,6 +165,6 @@ const startsNumber = (event: KeyEvent): event is KeyEvent & {kind: 'text'} =>
 
 /** Before the rack has been ranked there is the pair in the car. */
 const firstRow = (answer: Answer): Placed[] =>
-	answer.is === 'working' && answer.first !== undefined ? placedRows([answer.first.row]) : [];
+	answer.is === 'working' && answer.first !== undefined ? [{place: undefined, name: rowName(answer.first.row), row: answer.first.row}] : [];
 
 const inputsOf = ({history, situation}: Session) => ({documents: history.present, situation});

@@ -3,8 +3,8 @@ import {rowName} from '../../planning/rank-rack.ts';
 import type {Row} from '../../planning/results.ts';
 import {limitMarginRpm, lowestExitRpm, shiftsPerLap} from './figures.ts';
 
-/** A row with its place in the ranking, counted from 1. */
-export type Placed = {readonly place: number; readonly name: string; readonly row: Row};
+/** A row with its place in the ranking, counted from 1; undefined before there is one. */
+export type Placed = {readonly place: number | undefined; readonly name: string; readonly row: Row};
 
 export const orders = ['place', 'ratio', 'margin', 'exit rpm', 'shifts'] as const;
 export type Order = (typeof orders)[number];
@@ -25,7 +25,7 @@ export function shownRows(rows: readonly Placed[], order: Order, filter: Filter)
 	const kept = rows.filter(({row}) => passes(row, filter));
 	return order === 'place'
 		? kept
-		: kept.sort((a, b) => valueBy[order](b.row) - valueBy[order](a.row) || a.place - b.place);
+		: kept.sort((a, b) => valueBy[order](b.row) - valueBy[order](a.row) || placeOf(a) - placeOf(b));
 }
 
 function passes(row: Row, {hideFailing, gearbox, leastMarginRpm}: Filter): boolean {
@@ -33,6 +33,8 @@ function passes(row: Row, {hideFailing, gearbox, leastMarginRpm}: Filter): boole
 	if (gearbox !== undefined && row.gearbox !== gearbox) return false;
 	return leastMarginRpm === undefined || (limitMarginRpm(row) ?? Number.NEGATIVE_INFINITY) >= leastMarginRpm;
 }
+
+const placeOf = ({place}: Placed): number => place ?? 0;
 
 /** The largest comes first. */
 const valueBy: Record<Exclude<Order, 'place'>, (row: Row) => number> = {
@@ -53,6 +55,6 @@ export const cursorIn = (rows: readonly Placed[], name: string | undefined): num
 export function stepped(rows: readonly Placed[], from: Placed, by: 1 | -1): Placed | undefined {
 	const ahead = rows
 		.filter(({row}) => row.gearbox === from.row.gearbox && (row.pairRatio - from.row.pairRatio) * by > 0)
-		.sort((a, b) => (a.row.pairRatio - b.row.pairRatio) * by || a.place - b.place);
+		.sort((a, b) => (a.row.pairRatio - b.row.pairRatio) * by || placeOf(a) - placeOf(b));
 	return ahead[0];
 }

@@ -47,7 +47,7 @@ const verdictTone = (row: TableRow): Meaning =>
 	row.verdict === 'FAIL' ? 'fail' : row.verdict === 'near' ? 'near' : 'pass';
 
 const columns: readonly Column[] = [
-	{head: '#', align: 'right', keep: 0, text: ({place}) => String(place), tone: () => 'muted'},
+	{head: '#', align: 'right', keep: 0, text: ({place}) => String(place ?? ''), tone: () => 'muted'},
 	{head: 'pair', align: 'left', keep: 0, text: ({row}) => row.pair, tone: () => 'strong'},
 	{head: 'set', align: 'left', keep: 2, shortest: 3, text: ({row}) => visible(row.gearbox)},
 	{head: 'ratio', align: 'right', keep: 8, text: ({row}) => fixed(row.pairRatio, 4)},
