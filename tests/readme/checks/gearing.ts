@@ -1,0 +1,133 @@
+/** Ratios, engine speed and road speed, gears in mesh. */
+import {inchM, mileM, mphMps} from '../../../source/drivetrain/constants.ts';
+import {centerDistanceM, turnsUntilMeeting} from '../../../source/drivetrain/gear-mesh.ts';
+import {handTurns, overallRatios} from '../../../source/drivetrain/gear-pair.ts';
+import {engineRpm, speedAtRpmMps} from '../../../source/drivetrain/tire.ts';
+import {casesOf, type OutsideCheck} from '../outside-check.ts';
+
+const evenPair = {driving: 36, driven: 36};
+
+/** Gillespie, Fundamentals of Vehicle Dynamics (SAE, 1992), p. 32: gears, final drive 2.92, 801 rev/mile. */
+const gillespieMph = (rpm: number, gear: number) =>
+	speedAtRpmMps(rpm, overallRatios([gear], evenPair, 2.92)[0]!, mileM / 801, 0, 0) / mphMps;
+
+/** Tire, overall ratio in high gear, engine rpm at 60 mph of 20 road cars; the turns a mile are one car's of each tire. */
+const roadCars: readonly [rpm: string, overall: number, perMile: number][] = [
+	['2160', 2.51, 860.5],
+	['2195', 2.55, 860.5],
+	['2390', 2.78, 860.5],
+	['2530', 2.94, 860.5],
+	['2615', 3.04, 860.5],
+	['2810', 3.27, 860.5],
+	['2330', 2.71, 860.5],
+	['2855', 3.13, 911.6],
+	['2980', 3.27, 911.6],
+	['2510', 2.75, 911.6],
+	['2505', 2.95, 848.9],
+	['2775', 3.27, 848.9],
+	['2130', 2.51, 848.9],
+	['2430', 2.86, 848.9],
+	['3225', 3.5, 920.9],
+	['3000', 3.26, 920.9],
+	['2935', 3.26, 900.3],
+	['3125', 3.47, 900.3],
+	['2780', 3.27, 850.2],
+	['2305', 2.71, 850.2],
+];
+
+/** Mannering's slippage i is V = ω·r·(1 − i); SAE J670's slip ratio is i/(1 − i). */
+const slipRatio = (slippage: number) => slippage / (1 - slippage);
+
+export const gearing: readonly OutsideCheck[] = [
+	{
+		what: 'Engine speed at 130 mph, overall 2.5, 12.6 in radius, 3 % slippage',
+		source: 'Mannering & Washburn, problem 2.7',
+		mark: 'published',
+		unit: 'rpm',
+		cases: casesOf([['4469.15', 130]], mph =>
+			engineRpm(mph * mphMps, 2.5, 2 * Math.PI * 12.6 * inchM, 0, slipRatio(0.03)),
+		),
+		tolerance: 2e-6,
+	},
+	{
+		what: 'Engine speed at 60 mph of 20 road cars, by ratio and tire',
+		source: 'Consumer Reports, April 1990 (R, rpart::car90)',
+		mark: 'published',
+		unit: 'rpm',
+		cases: casesOf(roadCars, (overall, perMile) => engineRpm(60 * mphMps, overall, mileM / perMile, 0, 0)),
+		tolerance: 3.5e-3,
+	},
+	{
+		what: 'Road speed at 4400 rpm in first and fifth',
+		source: 'Gillespie, Fundamentals of Vehicle Dynamics, p. 32',
+		mark: 'from memory',
+		unit: 'mph',
+		cases: casesOf(
+			[
+				['26.4', 4.28],
+				['113', 1],
+			],
+			gear => gillespieMph(4400, gear),
+		),
+		tolerance: 2e-3,
+	},
+	{
+		what: 'The same in all five gears',
+		source: 'the same data, by hand',
+		mark: 'recomputed',
+		unit: 'mph',
+		cases: casesOf(
+			[
+				['26.372', 4.28],
+				['40.456', 2.79],
+				['61.679', 1.83],
+				['82.995', 1.36],
+				['112.873', 1],
+			],
+			gear => gillespieMph(4400, gear),
+		),
+		tolerance: 3e-5,
+	},
+	{
+		what: 'Last shaft of the compound train 20/50, 25/75, 26/65 at 975 rpm',
+		source: 'Khurmi & Gupta, Theory of Machines, ex. 13.1',
+		mark: 'published',
+		unit: 'rpm',
+		cases: casesOf([['52', 975]], rpm => rpm / overallRatios([50 / 20], {driving: 25, driven: 75}, 65 / 26)[0]!),
+		tolerance: 1e-15,
+	},
+	{
+		what: 'Pinion of a 12/60 differential, wheels at 210 and 190 rpm',
+		source: 'Khurmi & Gupta, fig. 13.24',
+		mark: 'published',
+		unit: 'rpm',
+		cases: casesOf([['1000', 210, 190]], (left, right) => handTurns(60 / 12, left, right)),
+		tolerance: 1e-15,
+	},
+	{
+		what: 'Turns until two teeth meet again, six pairs',
+		source: 'z2/gcd (Euclid)',
+		mark: 'recomputed',
+		unit: 'turns',
+		cases: casesOf(
+			[
+				['43', 17, 43],
+				['67', 23, 67],
+				['36', 25, 36],
+				['25', 28, 100],
+				['3', 24, 36],
+				['3', 20, 60],
+			],
+			turnsUntilMeeting,
+		),
+		tolerance: 1e-15,
+	},
+	{
+		what: 'Center distance, module 3, 12 and 24 teeth',
+		source: 'KHK gear handbook, table 4.1 (ISO 21771)',
+		mark: 'from memory',
+		unit: 'mm',
+		cases: casesOf([['54.000', 36]], sum => 1000 * centerDistanceM(0.003, sum)),
+		tolerance: 1e-14,
+	},
+];
