@@ -5,11 +5,17 @@ import {cellOf} from './monotone-cubic.ts';
 import type {Vehicle} from './straight.ts';
 import {engineRpm, growthReferenceMps, speedAtRpmMps} from './tire.ts';
 
+/** No car on wheels is faster: where every gear ends that no limiter and no growing tire ends before. */
+const fastestMps = 500;
+
+/** Kinks closer together than this are one. */
+const apartMps = 1e-9;
+
 /** Both sides meet at a crossing, so an integral split this far beside it is off by no more than the square of this. */
 const crossingMps = 1e-7;
 
 export class GearMotion {
-	/** Speed at the limiter: thrust ends above it. Infinity without one. */
+	/** Speed at the limiter: thrust ends above it. The fastest that there is where it is never reached. */
 	readonly limiterMps: number;
 	/** Rising speeds from 0 to the limiter; between two neighbors the acceleration is smooth. */
 	readonly breaks: readonly number[];
@@ -31,8 +37,9 @@ export class GearMotion {
 		this.#rpmFactor = 60 * (1 + vehicle.slip) * overall;
 		this.#thrustFactor = 2 * Math.PI * efficiency * overall;
 		this.#drivenKgM2 = vehicle.wheelInertiaKgM2 + vehicle.engineInertiaKgM2 * overall * overall;
-		this.limiterMps = limiterRpm === Number.POSITIVE_INFINITY ? limiterRpm : this.speedAt(limiterRpm);
-		this.breaks = this.#withGripCrossings(this.#curveImages());
+		const limiterMps = limiterRpm === Number.POSITIVE_INFINITY ? limiterRpm : this.speedAt(limiterRpm);
+		this.limiterMps = Math.min(limiterMps, fastestMps);
+		this.breaks = apart(this.#withGripCrossings(this.#curveImages()));
 	}
 
 	/** Engine speed under full throttle at a road speed, rev/min. */
@@ -97,7 +104,7 @@ export class GearMotion {
 			const speed = this.speedAt(rpm);
 			if (speed < this.limiterMps) images.push(speed);
 		}
-		if (this.limiterMps < Number.POSITIVE_INFINITY) images.push(this.limiterMps);
+		images.push(this.limiterMps);
 		const still = -this.#forces.headwindMps;
 		if (still > 0 && still < this.limiterMps) images.splice(cellOf(images, still) + 1, 0, still);
 		return images;
@@ -124,4 +131,10 @@ export class GearMotion {
 		}
 		return all;
 	}
+}
+
+/** Without the kinks that a neighbor above, or the start, stands for; both ends stay. */
+function apart(rising: readonly number[]): number[] {
+	const last = rising.length - 1;
+	return rising.filter((speed, i) => i === 0 || i === last || (speed > apartMps && rising[i + 1]! - speed > apartMps));
 }

@@ -5,10 +5,13 @@
 import type {GearMotion} from './gear-motion.ts';
 import {cellOf} from './monotone-cubic.ts';
 import {
-	balancedBetween,
+	balancedBefore,
 	brakingDistanceM,
+	cruise,
+	evenly,
 	type Goal,
 	gentle,
+	holds,
 	integrate,
 	integrateSliver,
 	newtonCap,
@@ -17,6 +20,9 @@ import {
 	settled,
 	type Travel,
 } from './travel.ts';
+
+/** Up to this share of a piece three points of quadrature do. */
+const sliverShare = 0.02;
 
 export class GearTable {
 	readonly #motion: GearMotion;
@@ -42,8 +48,8 @@ export class GearTable {
 			const room = goal.distanceM - distance - brakingDistanceM(speed, goal.braking);
 			if (room <= 0) return {speedMps: speed, distanceM: distance, timeS: time, why: 'end'};
 			const far = this.#cellEnd(cell, speed, rising, goal);
-			if (Math.abs(far - speed) <= settled * speed)
-				return {speedMps: speed, distanceM: distance + room, timeS: time + room / speed, why: 'end'};
+			if (holds(this.#motion, speed, far))
+				return cruise({speedMps: speed, distanceM: distance, timeS: time, why: 'end'}, room);
 			const piece = this.#piece(cell, speed, far);
 			if (distance + piece.distanceM + brakingDistanceM(far, goal.braking) > goal.distanceM)
 				return this.#meet({speedMps: speed, distanceM: distance, timeS: time, why: 'end'}, far, piece, goal);
@@ -84,12 +90,19 @@ export class GearTable {
 			const left = room(speed, distanceM);
 			const next = Math.min(high, Math.max(low, speed + left / this.#roomSlope(speed, goal)));
 			if (Math.abs(next - speed) <= newtonEnd * speed) break;
-			const step = integrateSliver(this.#motion, speed, next);
+			const short = Math.abs(next - speed) <= sliverShare * (high - low);
+			const step = short ? integrateSliver(this.#motion, speed, next) : integrate(this.#motion, speed, next);
 			distanceM += step.distanceM;
 			timeS += step.timeS;
 			speed = next;
 		}
-		return {speedMps: speed, distanceM: here.distanceM + distanceM, timeS: here.timeS + timeS, why: 'end'};
+		const there: Travel = {
+			speedMps: speed,
+			distanceM: here.distanceM + distanceM,
+			timeS: here.timeS + timeS,
+			why: 'end',
+		};
+		return evenly(there, room(speed, distanceM));
 	}
 
 	/** By how much the room shrinks for each m/s gained. */
@@ -121,15 +134,15 @@ function cellEdges(motion: GearMotion): number[] {
 		const high = mark(motion.breaks[i]!);
 		const middle = mark((low.speedMps + high.speedMps) / 2);
 		if (gentle(low.mps2, middle.mps2) && gentle(middle.mps2, high.mps2)) edges.push(high.speedMps);
-		else cutAround(motion, low, middle, high, edges);
+		else cutAround(motion, low, high, edges);
 		low = high;
 	}
 	return edges;
 }
 
 /** A piece with a zero of the acceleration in it is cut there first. */
-function cutAround(motion: GearMotion, low: Mark, middle: Mark, high: Mark, edges: number[]): void {
-	const zero = balancedBetween(motion, low.speedMps, middle.speedMps, high.speedMps);
+function cutAround(motion: GearMotion, low: Mark, high: Mark, edges: number[]): void {
+	const zero = balancedBefore(motion, low.speedMps, high.speedMps);
 	if (zero === undefined || zero <= low.speedMps || zero >= high.speedMps) {
 		cut(motion, low, high, edges);
 		return;

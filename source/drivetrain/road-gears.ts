@@ -73,7 +73,8 @@ export class RoadGears {
 
 	#planShift(gear: number): PlannedShift {
 		const [here, next] = [this.motion(gear), this.motion(gear + 1)];
-		return this.#shiftAt(gear, shiftSpeedMps(here, next, here.speedAt(this.vehicle.shiftCapRpm)));
+		const capMps = Math.min(here.speedAt(this.vehicle.shiftCapRpm), here.limiterMps);
+		return this.#shiftAt(gear, shiftSpeedMps(here, next, capMps));
 	}
 
 	#shiftAt(gear: number, speedMps: number): PlannedShift {
