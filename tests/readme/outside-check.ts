@@ -2,14 +2,20 @@
 import {relativeError} from '../close.ts';
 
 /** A value as it is printed outside, and ours. */
-export type Case = {readonly outside: string; readonly ours: number};
+export type Case = {
+	readonly outside: string;
+	readonly ours: number;
+	/** Where the cases of a check differ in it. */
+	readonly unit?: string;
+};
 
 export type OutsideCheck = {
 	readonly what: string;
 	readonly source: string;
 	/** Read in the source's text, worked out again with a closed form or another library, or the source known but not at hand. */
 	readonly mark: 'published' | 'recomputed' | 'from memory';
-	readonly unit: string;
+	/** Of every case that has none of its own; left out for a plain number. */
+	readonly unit?: string;
 	/** One or more; the worst is shown. */
 	readonly cases: readonly Case[];
 	/** The relative error that no case may pass: what rounding of the outside value or a stated difference in method explains. */
@@ -18,8 +24,13 @@ export type OutsideCheck = {
 
 export const errorOf = ({outside, ours}: Case): number => relativeError(ours, Number(outside));
 
-export const worstCase = (check: OutsideCheck): Case =>
-	check.cases.reduce((worst, next) => (errorOf(next) > errorOf(worst) ? next : worst));
+/** Errors below this are not told apart: they would differ from machine to machine. */
+export const finestError = 1e-9;
+
+export const worstCase = (check: OutsideCheck): Case => {
+	const shownError = (one: Case) => Math.max(errorOf(one), finestError);
+	return check.cases.reduce((worst, next) => (shownError(next) > shownError(worst) ? next : worst));
+};
 
 /** Cases from rows whose first number is the outside one, with the function that gives ours from the others. */
 export const casesOf = <Inputs extends readonly unknown[]>(

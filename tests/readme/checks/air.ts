@@ -87,7 +87,6 @@ export const dayAndEngine: readonly OutsideCheck[] = [
 		what: 'Power correction in dry air, eight days',
 		source: 'SAE J1349, as commonly published for JUN 1990',
 		mark: 'recomputed',
-		unit: '',
 		cases: casesOf(
 			[
 				['1.000000', 990, 25],
@@ -107,7 +106,6 @@ export const dayAndEngine: readonly OutsideCheck[] = [
 		what: 'Power correction in humid air, four days',
 		source: 'SAE J1349 with the vapor pressure of IAPWS-IF97',
 		mark: 'recomputed',
-		unit: '',
 		cases: casesOf(
 			[
 				['1.04928', 29, 85, 0.6],
@@ -124,7 +122,6 @@ export const dayAndEngine: readonly OutsideCheck[] = [
 		what: 'The older power correction in dry air, eight days',
 		source: 'SAE J607 (60 °F, 29.92 inHg), with 460 and 520 °R',
 		mark: 'recomputed',
-		unit: '',
 		cases: casesOf(
 			[
 				['1.040037', 990, 25],

@@ -16,7 +16,6 @@ export const curve: readonly OutsideCheck[] = [
 		what: 'Monotone cubic through RPN14, seven places',
 		source: 'NAG e01bec/e01bff, printed example',
 		mark: 'published',
-		unit: '',
 		cases: casesOf(
 			[
 				['0.4640', 9.191],
@@ -35,7 +34,6 @@ export const curve: readonly OutsideCheck[] = [
 		what: 'The same in full digits',
 		source: 'scipy 1.10.1, PchipInterpolator',
 		mark: 'recomputed',
-		unit: '',
 		cases: casesOf(
 			[
 				['0.46401431', 9.191],

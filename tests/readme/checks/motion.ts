@@ -34,8 +34,8 @@ const runs = (motion: Motion, rows: readonly Row[]): Case[] =>
 	rows.flatMap(([fromMps, distanceM, speedMps, timeS]) => {
 		const end = over(motion, fromMps, distanceM);
 		return [
-			{outside: speedMps, ours: end.speedMps},
-			{outside: timeS, ours: end.timeS},
+			{outside: speedMps, ours: end.speedMps, unit: 'm/s'},
+			{outside: timeS, ours: end.timeS, unit: 's'},
 		];
 	});
 
@@ -50,7 +50,6 @@ export const motion: readonly OutsideCheck[] = [
 		what: 'Constant thrust against drag: speed and time, four runs',
 		source: 'closed form (tanh, ln cosh)',
 		mark: 'recomputed',
-		unit: 'm/s, s',
 		cases: runs(constantThrust, [
 			[0, quarterMileM, '43.167426304', '17.792441009'],
 			[0, 1000, '61.677135774', '29.051884048'],
@@ -63,7 +62,6 @@ export const motion: readonly OutsideCheck[] = [
 		what: 'Constant power against drag: speed and time, five runs',
 		source: 'closed form (logarithm, arctangent)',
 		mark: 'recomputed',
-		unit: 'm/s, s',
 		cases: runs(constantPower, [
 			[nearlyAtRestMps, quarterMileM, '58.074574194', '9.972480872'],
 			[nearlyAtRestMps, 1000, '71.608579186', '19.056575537'],
@@ -77,10 +75,9 @@ export const motion: readonly OutsideCheck[] = [
 		what: 'Coasting from 60 m/s to rest: time and distance',
 		source: 'closed form (arctangent, logarithm)',
 		mark: 'recomputed',
-		unit: 's, m',
 		cases: [
-			{outside: '158.445625468', ours: over(coasting, 60, 10_000).timeS},
-			{outside: '3020.00724027', ours: over(coasting, 60, 10_000).distanceM},
+			{outside: '158.445625468', ours: over(coasting, 60, 10_000).timeS, unit: 's'},
+			{outside: '3020.00724027', ours: over(coasting, 60, 10_000).distanceM, unit: 'm'},
 		],
 		tolerance: 1e-9,
 	},
@@ -88,7 +85,6 @@ export const motion: readonly OutsideCheck[] = [
 		what: 'Grip, then power: speed and time at the quarter mile',
 		source: 'closed form (by pieces)',
 		mark: 'recomputed',
-		unit: 'm/s, s',
 		cases: runs(gripThenPower, [[0, quarterMileM, '56.347079109', '14.187483310']]),
 		tolerance: 1e-9,
 	},
@@ -112,10 +108,9 @@ export const motion: readonly OutsideCheck[] = [
 		what: 'The same for 3400 lb and 350 hp: time and speed',
 		source: 'closed form, (9·m·X²/8·P)^⅓',
 		mark: 'recomputed',
-		unit: 's, mph',
 		cases: [
-			{outside: '10.24741', ours: dragster().timeS},
-			{outside: '131.7406', ours: dragster().speedMps / mphMps},
+			{outside: '10.24741', ours: dragster().timeS, unit: 's'},
+			{outside: '131.7406', ours: dragster().speedMps / mphMps, unit: 'mph'},
 		],
 		tolerance: 1e-6,
 	},
