@@ -54,7 +54,7 @@ export const settled = 1e-13;
 
 /** Newton doubles its digits: more steps than this are never needed from a guess inside one piece. */
 export const newtonCap = 12;
-export const newtonEnd = 1e-15;
+export const newtonEnd = 4e-16;
 
 /** The run from a speed until the goal is met, with the driver at full throttle. */
 export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
@@ -130,6 +130,8 @@ function pieceEnd(motion: Motion, speedMps: number, rising: boolean, goal: Goal)
 	const entry = goal.braking?.entryMps ?? 0;
 	const kink = rising ? Math.min(breakAbove(motion, speedMps), goal.toMps) : breakBelow(motion, speedMps);
 	const next = (entry > speedMps && entry < kink) || (entry < speedMps && entry > kink) ? entry : kink;
+	const [start, middle] = [motion.acceleration(speedMps), motion.acceleration((speedMps + next) / 2)];
+	if (gentle(start, middle) && gentle(middle, motion.acceleration(next))) return next;
 	return balancedBefore(motion, speedMps, next) ?? next;
 }
 
@@ -198,27 +200,17 @@ function meet(motion: Motion, here: Travel, endMps: number, goal: Goal): Travel 
 	return evenly(there, roomM(there, goal));
 }
 
-/** The speed at which the car was `timeS` seconds before it reached `atMps` gaining speed; 0 where it gains none. */
-export function speedBefore(motion: Motion, atMps: number, timeS: number): number {
-	let [speed, left] = [atMps, timeS];
-	while (speed > 0) {
-		const end = gentleEnd(motion, speed, breakBelow(motion, speed));
-		const tookS = integrate(motion, end, speed).timeS;
-		if (tookS < 0) return 0;
-		if (tookS >= left) return earlierBy(motion, end, speed, left);
-		left -= tookS;
-		speed = end;
-	}
-	return 0;
-}
-
-/** Inside one piece: Newton's method on the time, from the speed that an even acceleration would give. */
-function earlierBy(motion: Motion, lowMps: number, atMps: number, timeS: number): number {
+/**
+ * The speed at which the car, gaining speed inside one piece, was `timeS` seconds before it reached `atMps`, not below
+ * `lowMps`: Newton's method on the time, from the speed that an even acceleration would give.
+ */
+export function earlierBy(motion: Motion, lowMps: number, atMps: number, timeS: number): number {
 	const slowed = (fromMps: number, byS: number) => Math.max(lowMps, fromMps - byS * motion.acceleration(fromMps));
 	let speed = slowed(atMps, timeS);
 	let left = timeS - integrate(motion, speed, atMps).timeS;
-	for (let i = 0; i < newtonCap && Math.abs(left) > newtonEnd * timeS; i++) {
+	for (let i = 0; i < newtonCap; i++) {
 		const next = slowed(speed, left);
+		if (Math.abs(next - speed) <= newtonEnd * speed) break;
 		left -= integrateSliver(motion, next, speed).timeS;
 		speed = next;
 	}
