@@ -10,6 +10,18 @@ const air = (pressurePa: number, temperatureC: number, humidity: number) =>
 /** Humidity ratio W to vapor pressure, by the ratio of the molar masses. */
 const vaporOfRatioPa = (pressurePa: number, ratio: number) => (pressurePa * ratio) / (0.621945 + ratio);
 
+/** Dry air in hPa and °C with the factors by SAE J1349 and J607. */
+const dryDays = [
+	['1.000000', '1.040037', 990, 25],
+	['0.953414', '0.998996', 1013.25, 15],
+	['0.963211', '1.007621', 1013.25, 20],
+	['0.997960', '1.038229', 1000, 30],
+	['1.031876', '1.068113', 980, 35],
+	['1.049684', '1.083828', 950, 25],
+	['1.107065', '1.134413', 900, 20],
+	['1.159317', '1.180492', 850, 10],
+] as const;
+
 export const dayAndEngine: readonly OutsideCheck[] = [
 	{
 		what: 'Standard pressure from -500 to 10 000 m, six altitudes',
@@ -87,19 +99,10 @@ export const dayAndEngine: readonly OutsideCheck[] = [
 		what: 'Power correction in dry air, eight days',
 		source: 'SAE J1349, as commonly published for JUN 1990',
 		mark: 'recomputed',
-		cases: casesOf(
-			[
-				['1.000000', 990, 25],
-				['0.953414', 1013.25, 15],
-				['0.963211', 1013.25, 20],
-				['0.997960', 1000, 30],
-				['1.031876', 980, 35],
-				['1.049684', 950, 25],
-				['1.107065', 900, 20],
-				['1.159317', 850, 10],
-			],
-			(hpa, temperatureC) => correctionFactor('J1349', air(100 * hpa, temperatureC, 0)),
-		),
+		cases: dryDays.map(([outside, , hpa, temperatureC]) => ({
+			outside,
+			ours: correctionFactor('J1349', air(100 * hpa, temperatureC, 0)),
+		})),
 		tolerance: 1e-5,
 	},
 	{
@@ -122,19 +125,10 @@ export const dayAndEngine: readonly OutsideCheck[] = [
 		what: 'The older power correction in dry air, eight days',
 		source: 'SAE J607 (60 °F, 29.92 inHg), with 460 and 520 °R',
 		mark: 'recomputed',
-		cases: casesOf(
-			[
-				['1.040037', 990, 25],
-				['0.998996', 1013.25, 15],
-				['1.007621', 1013.25, 20],
-				['1.038229', 1000, 30],
-				['1.068113', 980, 35],
-				['1.083828', 950, 25],
-				['1.134413', 900, 20],
-				['1.180492', 850, 10],
-			],
-			(hpa, temperatureC) => correctionFactor('J607', air(100 * hpa, temperatureC, 0)),
-		),
+		cases: dryDays.map(([, outside, hpa, temperatureC]) => ({
+			outside,
+			ours: correctionFactor('J607', air(100 * hpa, temperatureC, 0)),
+		})),
 		tolerance: 2.5e-5,
 	},
 ];

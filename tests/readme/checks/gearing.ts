@@ -3,6 +3,7 @@ import {inchM, mileM, mphMps} from '../../../source/drivetrain/constants.ts';
 import {centerDistanceM, turnsUntilMeeting} from '../../../source/drivetrain/gear-mesh.ts';
 import {handTurns, overallRatios} from '../../../source/drivetrain/gear-pair.ts';
 import {engineRpm, speedAtRpmMps} from '../../../source/drivetrain/tire.ts';
+import {roadCars, turnsPerMile} from '../../road-cars.ts';
 import {casesOf, type OutsideCheck} from '../outside-check.ts';
 
 const evenPair = {driving: 36, driven: 36};
@@ -10,30 +11,6 @@ const evenPair = {driving: 36, driven: 36};
 /** Gillespie, Fundamentals of Vehicle Dynamics (SAE, 1992), p. 32: gears, final drive 2.92, 801 rev/mile. */
 const gillespieMph = (rpm: number, gear: number) =>
 	speedAtRpmMps(rpm, overallRatios([gear], evenPair, 2.92)[0]!, mileM / 801, 0, 0) / mphMps;
-
-/** Tire, overall ratio in high gear, engine rpm at 60 mph of 20 road cars; the turns a mile are one car's of each tire. */
-const roadCars: readonly [rpm: string, overall: number, perMile: number][] = [
-	['2160', 2.51, 860.5],
-	['2195', 2.55, 860.5],
-	['2390', 2.78, 860.5],
-	['2530', 2.94, 860.5],
-	['2615', 3.04, 860.5],
-	['2810', 3.27, 860.5],
-	['2330', 2.71, 860.5],
-	['2855', 3.13, 911.6],
-	['2980', 3.27, 911.6],
-	['2510', 2.75, 911.6],
-	['2505', 2.95, 848.9],
-	['2775', 3.27, 848.9],
-	['2130', 2.51, 848.9],
-	['2430', 2.86, 848.9],
-	['3225', 3.5, 920.9],
-	['3000', 3.26, 920.9],
-	['2935', 3.26, 900.3],
-	['3125', 3.47, 900.3],
-	['2780', 3.27, 850.2],
-	['2305', 2.71, 850.2],
-];
 
 /** Mannering's slippage i is V = ω·r·(1 − i); SAE J670's slip ratio is i/(1 − i). */
 const slipRatio = (slippage: number) => slippage / (1 - slippage);
@@ -54,7 +31,10 @@ export const gearing: readonly OutsideCheck[] = [
 		source: 'Consumer Reports, April 1990 (R, rpart::car90)',
 		mark: 'published',
 		unit: 'rpm',
-		cases: casesOf(roadCars, (overall, perMile) => engineRpm(60 * mphMps, overall, mileM / perMile, 0, 0)),
+		cases: roadCars.map(([size, overall, rpm]) => ({
+			outside: String(rpm),
+			ours: engineRpm(60 * mphMps, overall, mileM / turnsPerMile[size]!, 0, 0),
+		})),
 		tolerance: 3.5e-3,
 	},
 	{

@@ -1,26 +1,13 @@
 /** What a tire's size tells of how far it rolls. */
 import {mileM} from '../../../source/drivetrain/constants.ts';
 import {etrtoCircumferenceM, overallDiameterM, parseTireSize} from '../../../source/drivetrain/tire-size.ts';
+import {turnsPerMile} from '../../road-cars.ts';
 import {casesOf, type OutsideCheck} from '../outside-check.ts';
 
 const diameterM = (text: string): number => {
 	const size = parseTireSize(text)!;
 	return overallDiameterM(size.widthMm, size.aspectPercent, size.rimIn);
 };
-
-/** Turns a mile: the median of the road cars on that size, 1 to 11 of them. */
-const observed: readonly [perMile: string, size: string][] = [
-	['860.5', '185/70R14'],
-	['911.6', '175/70R13'],
-	['848.9', '205/60R15'],
-	['920.9', '185/60R14'],
-	['900.3', '195/60R14'],
-	['872.3', '175/70R14'],
-	['905.4', '155/80R13'],
-	['850.2', '185/65R15'],
-	['838.1', '195/65R15'],
-	['799.4', '275/40R17'],
-];
 
 export const tires: readonly OutsideCheck[] = [
 	{
@@ -44,7 +31,10 @@ export const tires: readonly OutsideCheck[] = [
 		source: 'Consumer Reports, April 1990 (R, rpart::car90)',
 		mark: 'published',
 		unit: 'rev/mi',
-		cases: casesOf(observed, size => mileM / etrtoCircumferenceM(diameterM(size))),
+		cases: Object.entries(turnsPerMile).map(([size, outside]) => ({
+			outside: String(outside),
+			ours: mileM / etrtoCircumferenceM(diameterM(size)),
+		})),
 		tolerance: 0.015,
 	},
 ];
