@@ -3,7 +3,7 @@
  * crosses it. Same answers, for a rack of runs at a fraction of the work.
  */
 import type {GearMotion} from './gear-motion.ts';
-import {type Cell, SpeedCells} from './speed-cells.ts';
+import {type Cell, gains, SpeedCells} from './speed-cells.ts';
 import {
 	brakingDistanceM,
 	cruise,
@@ -21,6 +21,9 @@ import {
 
 /** The cubic is nearly straight: regula falsi is there in two steps. */
 const guessSteps = 2;
+
+/** Newton squares its error: after a step this small, relatively, nothing is left. */
+const newtonLast = 1e-7;
 
 /** Up to this share of a piece three points of quadrature do. */
 const sliverShare = 0.02;
@@ -43,11 +46,11 @@ export class GearTable {
 
 	/** As `travel(motion, fromMps, goal)`. */
 	travel(fromMps: number, goal: Goal): Travel {
-		const rising = this.#motion.acceleration(fromMps) >= 0;
 		let [speedMps, distanceM, timeS] = [fromMps, 0, 0];
-		for (let cell = this.#cells.at(fromMps, rising); ; ) {
-			if (rising && speedMps >= goal.toMps) return {speedMps, distanceM, timeS, why: 'speed'};
-			if (cell === undefined || (speedMps <= 0 && !rising)) return {speedMps, distanceM, timeS, why: 'stopped'};
+		if (speedMps >= goal.toMps) return {speedMps, distanceM, timeS, why: 'speed'};
+		let cell = this.#cells.from(fromMps);
+		const rising = cell !== undefined && gains(cell);
+		while (cell !== undefined) {
 			const room = goal.distanceM - distanceM - brakingDistanceM(speedMps, goal.braking);
 			if (room <= 0) return {speedMps, distanceM, timeS, why: 'end'};
 			const far = farEnd(cell, speedMps, rising, goal);
@@ -58,15 +61,17 @@ export class GearTable {
 			distanceM += stretch.distanceM;
 			timeS += stretch.timeS;
 			speedMps = far;
+			if (rising && speedMps >= goal.toMps) return {speedMps, distanceM, timeS, why: 'speed'};
 			if (rising && far === cell.highMps) cell = this.#cells.above(cell);
 			else if (!rising && far === cell.lowMps) cell = this.#cells.below(cell);
 		}
+		return {speedMps, distanceM, timeS, why: 'stopped'};
 	}
 
 	/** The speed at which the car was `timeS` seconds before it reached `atMps` gaining speed; 0 where it gains none. */
 	speedBefore(atMps: number, timeS: number): number {
 		let [speed, left] = [atMps, timeS];
-		for (let cell = this.#cells.at(atMps, false); cell !== undefined; cell = this.#cells.below(cell)) {
+		for (let cell = this.#cells.under(atMps); cell !== undefined; cell = this.#cells.below(cell)) {
 			const tookS = this.#stretch(cell, cell.lowMps, speed).timeS;
 			if (tookS < 0) return 0;
 			if (tookS >= left) return earlierBy(this.#motion, cell.lowMps, speed, left);
@@ -98,18 +103,21 @@ export class GearTable {
 		for (let i = 0; i < newtonCap; i++) {
 			const left = room(speed, distanceM);
 			const next = Math.min(high, Math.max(low, speed + left / this.#roomSlope(speed, goal)));
-			if (Math.abs(next - speed) <= newtonEnd * speed) break;
-			const short = Math.abs(next - speed) <= sliverShare * (high - low);
+			const change = Math.abs(next - speed);
+			if (change <= newtonEnd * speed) break;
+			const short = change <= sliverShare * (high - low);
 			const step = short ? integrateSliver(this.#motion, speed, next) : integrate(this.#motion, speed, next);
 			distanceM += step.distanceM;
 			timeS += step.timeS;
 			speed = next;
+			if (change <= newtonLast * speed) break;
 		}
 		const there: Travel = {
 			speedMps: speed,
 			distanceM: here.distanceM + distanceM,
 			timeS: here.timeS + timeS,
 			why: 'end',
+			shortlyBefore: here,
 		};
 		return evenly(there, room(speed, distanceM));
 	}

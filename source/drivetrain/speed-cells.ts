@@ -9,12 +9,20 @@ import {balancedBefore, gentle, integrate, type Stretch, settled} from './travel
 export type Cell = {
 	readonly lowMps: number;
 	readonly highMps: number;
+	/** The acceleration at both ends; it has one sign on the way between them. */
+	readonly lowMps2: number;
+	readonly highMps2: number;
 	/** The images of the motion between which it lies, and its place among the cells there. */
 	readonly between: number;
 	readonly place: number;
 	/** From its low end to its high end, once it was asked for. */
 	stretch: Stretch | undefined;
 };
+
+/** Whether the car gains speed in the cell. */
+export function gains({lowMps2, highMps2}: Cell): boolean {
+	return lowMps2 + highMps2 > 0;
+}
 
 export class SpeedCells {
 	readonly #motion: GearMotion;
@@ -24,13 +32,23 @@ export class SpeedCells {
 		this.#motion = motion;
 	}
 
-	/** The cell that a run at a speed goes into, upward or downward; undefined at the end of the speeds. */
-	at(speedMps: number, rising: boolean): Cell | undefined {
-		const {images} = this.#motion;
-		const above = cellOf(images, speedMps);
-		const between = !rising && speedMps === images[above] ? above - 1 : above;
-		const cells = this.#cellsBetween(between);
-		return cells.find(cell => (rising ? speedMps < cell.highMps : speedMps <= cell.highMps));
+	/** The cell that a run at a speed goes on into: upward where the car gains speed there, else downward; undefined at the end of the speeds. */
+	from(speedMps: number): Cell | undefined {
+		const cell = this.#holding(speedMps);
+		if (cell === undefined || gains(cell) || speedMps > cell.lowMps) return cell;
+		return this.below(cell);
+	}
+
+	/** The cell below a speed. */
+	under(speedMps: number): Cell | undefined {
+		const cell = this.#holding(speedMps);
+		return cell !== undefined && speedMps > cell.lowMps ? cell : cell && this.below(cell);
+	}
+
+	/** The cell with lowMps ≤ speedMps < highMps, or the last one at the top. */
+	#holding(speedMps: number): Cell | undefined {
+		const cells = this.#cellsBetween(cellOf(this.#motion.images, speedMps));
+		return cells.find(({highMps}) => speedMps < highMps) ?? cells.at(-1);
 	}
 
 	above({between, place}: Cell): Cell | undefined {
@@ -56,17 +74,24 @@ export class SpeedCells {
 
 	/** At the kinks first, and then until the acceleration changes little over each cell. */
 	#cut(between: number, lowMps: number, highMps: number): readonly Cell[] {
-		const edges = [lowMps];
-		for (const kink of [...this.#motion.gripCrossings(lowMps, highMps), highMps]) {
-			cutSmooth(this.#motion, edges.at(-1)!, kink, edges);
+		const mark = (speedMps: number): Mark => ({speedMps, mps2: this.#motion.acceleration(speedMps)});
+		const marks = [mark(lowMps)];
+		for (const kink of this.#motion.gripCrossings(lowMps, highMps)) cutSmooth(this.#motion, mark(kink), marks);
+		cutSmooth(this.#motion, mark(highMps), marks);
+		const cells: Cell[] = [];
+		for (let place = 0; place < marks.length - 1; place++) {
+			const [low, high] = [marks[place]!, marks[place + 1]!];
+			cells.push({
+				lowMps: low.speedMps,
+				highMps: high.speedMps,
+				lowMps2: low.mps2,
+				highMps2: high.mps2,
+				between,
+				place,
+				stretch: undefined,
+			});
 		}
-		return edges.slice(1).map((edge, place) => ({
-			lowMps: edges[place]!,
-			highMps: edge,
-			between,
-			place,
-			stretch: undefined,
-		}));
+		return cells;
 	}
 }
 
@@ -76,30 +101,30 @@ type Mark = {readonly speedMps: number; readonly mps2: number};
 /** Below this speed nothing is cut any more. */
 const standstillMps = 1e-9;
 
-/** Adds the edges above `lowMps` of a piece without kinks; one with a zero of the acceleration in it is cut there first. */
-function cutSmooth(motion: GearMotion, lowMps: number, highMps: number, edges: number[]): void {
-	const mark = (speedMps: number): Mark => ({speedMps, mps2: motion.acceleration(speedMps)});
-	const [low, middle, high] = [mark(lowMps), mark((lowMps + highMps) / 2), mark(highMps)];
-	if (gentle(low.mps2, middle.mps2) && gentle(middle.mps2, high.mps2)) {
-		edges.push(highMps);
+/** Adds the marks up to `high` to a piece without kinks; one with a zero of the acceleration in it is cut there first. */
+function cutSmooth(motion: GearMotion, high: Mark, marks: Mark[]): void {
+	const low = marks.at(-1)!;
+	const middle = motion.acceleration((low.speedMps + high.speedMps) / 2);
+	if (gentle(low.mps2, middle) && gentle(middle, high.mps2)) {
+		marks.push(high);
 		return;
 	}
-	const zero = balancedBefore(motion, lowMps, highMps);
-	if (zero !== undefined && zero > lowMps && zero < highMps) {
+	const zero = balancedBefore(motion, low.speedMps, high.speedMps);
+	if (zero !== undefined && zero > low.speedMps && zero < high.speedMps) {
 		const balanced = {speedMps: zero, mps2: 0};
-		halve(motion, low, balanced, edges);
-		halve(motion, balanced, high, edges);
-	} else halve(motion, low, high, edges);
+		halve(motion, low, balanced, marks);
+		halve(motion, balanced, high, marks);
+	} else halve(motion, low, high, marks);
 }
 
-function halve(motion: GearMotion, low: Mark, high: Mark, edges: number[]): void {
+function halve(motion: GearMotion, low: Mark, high: Mark, marks: Mark[]): void {
 	const tiny = high.speedMps - low.speedMps <= settled * high.speedMps || high.speedMps <= standstillMps;
 	if (tiny || gentle(low.mps2, high.mps2)) {
-		edges.push(high.speedMps);
+		marks.push(high);
 		return;
 	}
 	const speedMps = (low.speedMps + high.speedMps) / 2;
 	const middle = {speedMps, mps2: motion.acceleration(speedMps)};
-	halve(motion, low, middle, edges);
-	halve(motion, middle, high, edges);
+	halve(motion, low, middle, marks);
+	halve(motion, middle, high, marks);
 }

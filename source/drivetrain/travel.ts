@@ -32,6 +32,8 @@ export type Travel = {
 	readonly timeS: number;
 	/** `speed`: at the goal's speed; `end`: at the end or the braking point; `stopped`: the car came to rest. */
 	readonly why: 'speed' | 'end' | 'stopped';
+	/** With `end`, where it is known: a place on the way shortly before. */
+	readonly shortlyBefore?: {readonly speedMps: number; readonly distanceM: number};
 };
 
 const piece = gaussLegendre(6);
