@@ -2,6 +2,7 @@
 import {commands} from '../../source/commands/command-table.ts';
 import {answer} from '../../source/commands/main.ts';
 import {option, options} from '../../source/commands/options.ts';
+import {demo} from '../../source/commands/shelf.ts';
 import type {Surroundings} from '../../source/commands/surroundings.ts';
 import {errorOf, finestError, type OutsideCheck, worstCase} from './outside-check.ts';
 import {outsideChecks} from './outside-checks.ts';
@@ -19,7 +20,7 @@ const around: Surroundings = {
 };
 
 const ranking = async (): Promise<string> => {
-	const words = ['rank', 'quillmere', '--top', '5'];
+	const words = ['rank', demo.track, '--top', '5'];
 	const {out} = await answer(words, around);
 	return ['```', `$ droprack ${words.join(' ')}`, `${out}\`\`\``].join('\n');
 };
