@@ -4,6 +4,8 @@ import {relativeError} from '../close.ts';
 /** A value as it is printed outside, and ours. */
 export type Case = {
 	readonly outside: string;
+	/** Where the text is a rounding of it. */
+	readonly exact?: number;
 	readonly ours: number;
 	/** Where the cases of a check differ in it. */
 	readonly unit?: string;
@@ -22,7 +24,7 @@ export type OutsideCheck = {
 	readonly tolerance: number;
 };
 
-export const errorOf = ({outside, ours}: Case): number => relativeError(ours, Number(outside));
+export const errorOf = ({outside, exact = Number(outside), ours}: Case): number => relativeError(ours, exact);
 
 /** Errors below this are not told apart: they would differ from machine to machine. */
 export const finestError = 1e-9;

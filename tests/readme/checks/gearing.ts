@@ -1,16 +1,26 @@
 /** Ratios, engine speed and road speed, gears in mesh. */
 import {inchM, mileM, mphMps} from '../../../source/drivetrain/constants.ts';
+import {powerW} from '../../../source/drivetrain/engine.ts';
 import {centerDistanceM, turnsUntilMeeting} from '../../../source/drivetrain/gear-mesh.ts';
 import {handTurns, overallRatios} from '../../../source/drivetrain/gear-pair.ts';
+import {monotoneCubic} from '../../../source/drivetrain/monotone-cubic.ts';
 import {engineRpm, speedAtRpmMps} from '../../../source/drivetrain/tire.ts';
 import {roadCars, turnsPerMile} from '../../road-cars.ts';
 import {casesOf, type OutsideCheck} from '../outside-check.ts';
 
+const poundForceN = 0.45359237 * 9.80665;
 const evenPair = {driving: 36, driven: 36};
 
 /** Gillespie, Fundamentals of Vehicle Dynamics (SAE, 1992), p. 32: gears, final drive 2.92, 801 rev/mile. */
 const gillespieMph = (rpm: number, gear: number) =>
 	speedAtRpmMps(rpm, overallRatios([gear], evenPair, 2.92)[0]!, mileM / 801, 0, 0) / mphMps;
+
+/** What the engine gives at 4400 rpm, 201 lbf ft, less the losses, over the road speed: the thrust. */
+const gillespiePounds = (gear: number, efficiency: number) => {
+	const torqueNm = 201 * poundForceN * 0.3048;
+	const powerAtWheelsW = powerW(monotoneCubic([800, 5200], [torqueNm, torqueNm]), 4400) * efficiency * 0.99;
+	return powerAtWheelsW / (gillespieMph(4400, gear) * mphMps) / poundForceN;
+};
 
 /** Mannering's slippage i is V = ω·r·(1 − i); SAE J670's slip ratio is i/(1 − i). */
 const slipRatio = (slippage: number) => slippage / (1 - slippage);
@@ -67,6 +77,20 @@ export const gearing: readonly OutsideCheck[] = [
 			gear => gillespieMph(4400, gear),
 		),
 		tolerance: 3e-5,
+	},
+	{
+		what: 'Thrust there in first and fifth, 201 lbf ft',
+		source: 'Gillespie, p. 32',
+		mark: 'from memory',
+		unit: 'lbf',
+		cases: casesOf(
+			[
+				['2290', 4.28, 0.966],
+				['537', 1, 0.97],
+			],
+			gillespiePounds,
+		),
+		tolerance: 1e-3,
 	},
 	{
 		what: 'Last shaft of the compound train 20/50, 25/75, 26/65 at 975 rpm',
