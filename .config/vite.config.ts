@@ -1,17 +1,21 @@
 import {defineConfig} from 'vitest/config';
 import {inkTable} from './ink-table.ts';
+import {thirdParty} from './third-party.ts';
 
 const root = new URL('..', import.meta.url).pathname;
 /** What every listing loads, and what every answer about a track loads: few files, since opening one costs more than reading it. */
 const groups = [
-	{name: 'common', test: /source\/store\/|source\/commands\/(text\/|print|reply|shelf|find-document)|source\/documents\/(visible|nearest)|picocolors|fast-string|fastest-lev/},
+	{
+		name: 'common',
+		test: /source\/store\/|source\/commands\/(text\/|print|reply|shelf|find-document)|source\/documents\/(visible|nearest)|picocolors|fast-string|fastest-lev/,
+	},
 	{name: 'plan', test: /source\/(planning|drivetrain)\/|source\/commands\/(load-documents|read-input|faults)/},
 ];
 const hashBang = '#!/usr/bin/env node';
 
 export default defineConfig(({command}) => ({
 	root,
-	plugins: [inkTable()],
+	plugins: [inkTable(), thirdParty()],
 	// Only for the build: in tests it would send every library through the transformer.
 	...(command === 'build' && {
 		ssr: {noExternal: true as const},
@@ -37,5 +41,7 @@ export default defineConfig(({command}) => ({
 		include: ['tests/**/*.test.ts', 'tests/**/*.test.tsx'],
 		testTimeout: 30_000,
 		server: {deps: {inline: ['ink-table']}},
+		globalSetup: '.config/build-when-stale.ts',
+		reporters: ['default', './.config/tally-reporter.ts'],
 	},
 }));
