@@ -20,6 +20,8 @@ export default defineConfig(({command}) => ({
 	...(command === 'build' && {
 		ssr: {noExternal: true as const},
 		define: {'process.env.NODE_ENV': '"production"', 'process.env.DEV': '"false"', fetch: 'undefined'},
+		// Also where NODE_ENV says otherwise, as in a build that a test asks for.
+		oxc: {jsx: {development: false}},
 		resolve: {alias: {'react-devtools-core': new URL('no-devtools.ts', import.meta.url).pathname}},
 	}),
 	build: {

@@ -22,23 +22,31 @@ const Lines = ({lines, theme}: {lines: readonly Pieces[]; theme: Theme}) => (
 
 type Dimensions = {readonly width: number; readonly height: number};
 
-function useSize(): Dimensions {
+/** Of the terminal; Ink itself only follows its width. */
+function useTerminalSize(): Dimensions {
 	const {stdout} = useStdout();
-	const measure = (): Dimensions => ({width: stdout.columns ?? 80, height: stdout.rows ?? 24});
-	const [size, setSize] = useState(measure);
+	const [size, setSize] = useState(() => ({width: stdout.columns, height: stdout.rows}));
 	useEffect(() => {
-		const resized = () => setSize(measure());
+		const resized = () => setSize({width: stdout.columns, height: stdout.rows});
 		stdout.on('resize', resized);
 		return () => {
 			stdout.off('resize', resized);
 		};
-	});
+	}, [stdout]);
 	return size;
 }
 
-export function App({live, theme}: {live: LiveSession; theme: Theme}) {
+type Given = {
+	readonly live: LiveSession;
+	readonly theme: Theme;
+	/** The terminal's unless given. */
+	readonly size?: Dimensions;
+};
+
+export function App({live, theme, size}: Given) {
 	const state = useSyncExternalStore(live.subscribe, live.state);
-	const {width, height} = useSize();
+	const terminal = useTerminalSize();
+	const {width, height} = size ?? terminal;
 	useKeys(event => live.press(event));
 	const start = useRef(0);
 	const frame = useMemo(

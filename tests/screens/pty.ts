@@ -41,7 +41,10 @@ export class Pty {
 
 	lines(): string[] {
 		const {active} = this.emulator.buffer;
-		return Array.from({length: this.emulator.rows}, (_, y) => active.getLine(active.viewportY + y)?.translateToString(true) ?? '');
+		return Array.from(
+			{length: this.emulator.rows},
+			(_, y) => active.getLine(active.viewportY + y)?.translateToString(true) ?? '',
+		);
 	}
 
 	screen(): string {
@@ -74,7 +77,8 @@ export class Pty {
 				if (holds()) done(() => resolve(this.screen()));
 			};
 			const timer = setTimeout(
-				() => done(() => reject(new Error(`waited ${limitMs} ms for ${String(what)}; the screen is:\n${this.screen()}`))),
+				() =>
+					done(() => reject(new Error(`waited ${limitMs} ms for ${String(what)}; the screen is:\n${this.screen()}`))),
 				limitMs,
 			);
 			this.#listeners.add(check);

@@ -2,34 +2,25 @@
 import {Text} from 'ink';
 import Table from 'ink-table';
 import {memo, type ReactElement} from 'react';
-import {displayWidth, padTo} from '../../commands/text/width.ts';
-import {type Meaning, type Piece, piece} from './pieces.ts';
+import type {Pieces} from './pieces.ts';
+import {type TableColumn, type TableRow, tableBar, tableHeading, tableLine} from './table-line.ts';
 import {painted, type Theme} from './theme.ts';
 
-/** A row by the heads of its columns. */
-export type TableRow = Record<string, string>;
-export type TableColumn = {
-	readonly head: string;
-	readonly align: 'left' | 'right';
-	readonly width: number;
-	/** What the text of a row means; plain unless given. */
-	readonly tone?: (row: TableRow) => Meaning;
-};
-
 type Props = {
-	data: TableRow[];
+	data: Record<string, string>[];
 	columns: string[];
 	layout: readonly TableColumn[];
 	theme: Theme;
+	/** Of the rows here; -1: none. */
 	selected: number;
 };
-type Part = Parameters<Table<TableRow>['data']>[0];
+type Part = Parameters<Table<Record<string, string>>['data']>[0];
 
 const Line = memo(({text}: {text: string}) => <Text wrap="truncate">{text}</Text>);
 
 const nothing = null as unknown as ReactElement;
 
-export class LineTable extends Table<TableRow> {
+export class LineTable extends Table<Record<string, string>> {
 	declare readonly props: Readonly<Props>;
 
 	/** Widths are given: ink-table would count code units. */
@@ -41,33 +32,15 @@ export class LineTable extends Table<TableRow> {
 	override footer = () => nothing;
 	override separator = () => nothing;
 
-	override heading = ({data}: Part) => <Line text={this.#line(data, () => 'muted')} />;
+	override heading = () => this.#line(tableHeading(this.props.layout));
 
 	override data = ({data}: Part) => {
-		if (data === this.props.data[this.props.selected]) return <Line text={this.#bar(data)} />;
-		return <Line text={this.#line(data, column => column.tone?.(data as TableRow) ?? 'plain')} />;
+		const {layout, selected} = this.props;
+		const isSelected = data === this.props.data[selected];
+		return this.#line(isSelected ? tableBar(data as TableRow, layout) : tableLine(data as TableRow, layout));
 	};
 
-	/** The selected row is inverted as a whole: colors inside would break the bar. */
-	#bar(data: Partial<TableRow>): string {
-		const text = this.props.layout.map(({head, width, align}) => padTo(data[head] ?? '', width, align)).join('  ');
-		return painted([{text, tone: 'chosen'}], this.props.theme);
+	#line(pieces: Pieces) {
+		return <Line text={painted(pieces, this.props.theme)} />;
 	}
-
-	#line(data: Partial<TableRow>, toneOf: (column: TableColumn) => Meaning): string {
-		const pieces = this.props.layout.flatMap((column, index): Piece[] => {
-			const cell = {text: padTo(data[column.head] ?? '', column.width, column.align), tone: toneOf(column)};
-			return index === 0 ? [cell] : [piece('  '), ...tight(cell)];
-		});
-		return painted(pieces, this.props.theme);
-	}
-}
-
-/** Only the word itself is marked, not the blanks that fill its column. */
-function tight({text, tone}: Piece): Piece[] {
-	if (tone === 'plain') return [{text, tone}];
-	const word = text.trim();
-	const start = text.length - text.trimStart().length;
-	const blanks = displayWidth(text) - start - displayWidth(word);
-	return [piece(' '.repeat(start)), {text: word, tone}, piece(' '.repeat(Math.max(0, blanks)))];
 }

@@ -3,6 +3,7 @@
 const steps = [1, 2, 2.5, 5, 10];
 /** Enough to tell neighboring ticks apart, and without the noise of the multiplication. */
 const digits = 12;
+const rounding = 1e-9;
 
 /** Multiples of 1, 2, 2.5 or 5 times a power of ten between two numbers, about so many; rising. */
 export function niceTicks(from: number, to: number, about: number): number[] {
@@ -10,11 +11,11 @@ export function niceTicks(from: number, to: number, about: number): number[] {
 	const rough = (to - from) / Math.max(1, about);
 	const power = 10 ** Math.floor(Math.log10(rough));
 	const step = (steps.find(step => step * power >= rough) ?? 10) * power;
-	const ticks: number[] = [];
-	for (let i = Math.ceil(from / step - 1e-9); i * step <= to + step * 1e-9; i++) {
-		ticks.push(Number((i * step).toPrecision(digits)));
-	}
-	return ticks;
+	const first = Math.ceil(from / step - rounding);
+	const last = Math.floor(to / step + rounding);
+	// Numbers so near each other, or so near 0, that they have no round ones between them.
+	if (!Number.isSafeInteger(first) || !Number.isSafeInteger(last)) return [from];
+	return Array.from({length: last - first + 1}, (_, i) => Number(((first + i) * step).toPrecision(digits)));
 }
 
 /** All ticks with the digits that the finest of them needs. */

@@ -21,6 +21,7 @@ export type Schema = {
 	readonly default?: unknown;
 	readonly description?: string;
 	readonly examples?: readonly unknown[];
+	readonly pattern?: string;
 };
 
 const dimensions: readonly Dimension[] = [
@@ -52,6 +53,8 @@ export function fieldKind(schema: Schema): FieldKind | undefined {
 		return of && {is: 'list', of};
 	}
 	if (schema.type !== 'string') return undefined;
+	// What has a pattern is no quantity, though it may look like one: 33/38 is a pair.
+	if (schema.pattern !== undefined) return {is: 'text'};
 	return quantity(schema.examples ?? []) ?? {is: 'text'};
 }
 

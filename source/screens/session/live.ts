@@ -165,6 +165,8 @@ const startsNumber = (event: KeyEvent): event is KeyEvent & {kind: 'text'} =>
 
 /** Before the rack has been ranked there is the pair in the car. */
 const firstRow = (answer: Answer): Placed[] =>
-	answer.is === 'working' && answer.first !== undefined ? [{place: undefined, name: rowName(answer.first.row), row: answer.first.row}] : [];
+	answer.is === 'working' && answer.first !== undefined
+		? [{place: undefined, name: rowName(answer.first.row), row: answer.first.row}]
+		: [];
 
 const inputsOf = ({history, situation}: Session) => ({documents: history.present, situation});

@@ -84,21 +84,27 @@ export class Ranker {
 
 	/** One slice; what is left comes later. */
 	#work(steps: Steps, budgetMs: number): void {
+		if (budgetMs > 0 && this.#slice(steps, budgetMs)) return;
+		this.#cancel = this.#clock.later(() => {
+			this.#work(steps, sliceMs);
+			this.#tell();
+		});
+	}
+
+	/** At least one step; whether it was the last. */
+	#slice(steps: Steps, budgetMs: number): boolean {
 		const end = this.#clock.now() + budgetMs;
-		while (this.#clock.now() < end) {
+		do {
 			const step = steps.next();
 			if (step.done) {
 				this.#answer = step.value.ok
 					? {is: 'ready', ranked: step.value.value}
 					: {is: 'faulty', wrong: step.value.faults.map(wrongFromFault)};
-				return;
+				return true;
 			}
 			if (this.#answer.is === 'working') this.#answer = {...this.#answer, progress: step.value};
-		}
-		this.#cancel = this.#clock.later(() => {
-			this.#work(steps, sliceMs);
-			this.#tell();
-		});
+		} while (this.#clock.now() < end);
+		return false;
 	}
 
 	#tell(): void {

@@ -3,6 +3,7 @@ import {absent, unitsOf} from '../../commands/text/units.ts';
 import {wrap} from '../../commands/text/width.ts';
 import {visible} from '../../documents/visible.ts';
 import {beside, blank, fitted, line, type Pieces, piece, tall} from '../parts/pieces.ts';
+import {tableWidth} from '../parts/table-line.ts';
 import type {Wrong} from '../session/answer.ts';
 import {unsaved} from '../session/documents.ts';
 import {scopesOf} from '../session/intend.ts';
@@ -15,7 +16,7 @@ import {headerView, settingOf} from './header-view.ts';
 import {helpView} from './help-view.ts';
 import {keyLines} from './key-line.ts';
 import {pictureView} from './picture-view.ts';
-import {type RankingTable, rankingTable, tableWidth} from './ranking-view.ts';
+import {type RankingTable, rankingTable} from './ranking-view.ts';
 import {reasonView, sentenceView} from './reason-view.ts';
 import {whyHalves, whyView} from './why-view.ts';
 
@@ -93,7 +94,7 @@ function ranking(
 	const given = {session, setting, shown: scene.shown, cursor, compared};
 	if (width < wide) {
 		const reason = reasonView(here.row, width);
-		const under = [rule(width), ...tall(reason, reasonHeight(body))];
+		const under = [rule(width), ...tall(reason, reasonHeight(body, scene.shown.length))];
 		const table = rankingTable(given, width, body - under.length, previousStart);
 		return {top: head, table: padTable(table, body - under.length), beside: [], bottom: [...under, ...foot]};
 	}
@@ -104,8 +105,12 @@ function ranking(
 	return {top: head, table: padTable(table, body), beside: column, bottom: foot};
 }
 
-/** A quarter of the room, from five lines on a small screen to nine. */
-const reasonHeight = (body: number): number => Math.max(5, Math.min(9, Math.floor(body / 4)));
+/** A quarter of the room, from five lines on a small screen to nine; all that few rows leave. The same for every row. */
+function reasonHeight(body: number, rows: number): number {
+	const quarter = Math.max(5, Math.min(9, Math.floor(body / 4)));
+	const left = body - rows - 2;
+	return Math.max(quarter, Math.min(left, 12));
+}
 
 /** The room that the rows do not need stays blank. */
 const padTable = (table: RankingTable, height: number): RankingTable => ({

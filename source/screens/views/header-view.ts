@@ -36,7 +36,12 @@ export function headerView(
 function rowLine({name, place, row}: Placed, answer: Answer, width: number): Pieces {
 	const verdict = row.verdict === 'fail' ? 'FAIL' : row.verdict;
 	const margin = `margin ${rpmDown(limitMarginRpm(row))} rpm`;
-	const words = [place === undefined ? '' : ` place ${place}`, margin, `lap ${seconds(row.fastestS)} s`, visible(row.reason)].join(' · ');
+	const words = [
+		place === undefined ? '' : ` place ${place}`,
+		margin,
+		`lap ${seconds(row.fastestS)} s`,
+		visible(row.reason),
+	].join(' · ');
 	const pieces = [piece(name, 'strong'), piece(' '), piece(verdict, row.verdict), piece(words, 'muted')];
 	return spread(pieces, progressPieces(answer), width);
 }

@@ -4,9 +4,9 @@ import {absent, fixed, rpm, rpmDown, rpmUp, signed} from '../../commands/text/un
 import {displayWidth} from '../../commands/text/width.ts';
 import {visible} from '../../documents/visible.ts';
 import type {Row, Setting} from '../../planning/results.ts';
-import type {TableColumn, TableRow} from '../parts/line-table.tsx';
 import {listWindow} from '../parts/list-window.ts';
 import type {Meaning} from '../parts/pieces.ts';
+import type {TableColumn, TableRow} from '../parts/table-line.ts';
 import {checkNamed, highestRpm, limitMarginRpm, lowestExitRpm, shiftsPerLap} from '../session/figures.ts';
 import type {Placed} from '../session/rows.ts';
 import type {Session} from '../session/session.ts';
@@ -14,7 +14,7 @@ import {marksOf} from './marks.ts';
 
 export type RankingTable = {
 	readonly columns: readonly TableColumn[];
-	readonly rows: TableRow[];
+	readonly rows: Record<string, string>[];
 	/** Of the rows here. */
 	readonly selected: number;
 	/** The first one here of all. */
@@ -115,7 +115,7 @@ export function rankingTable(given: Given, width: number, height: number, previo
 	const texts = shown.map(placed => used.map(column => column.text(placed, given)));
 	const natural = used.map(({head}, i) => Math.max(displayWidth(head), ...texts.map(row => displayWidth(row[i]!))));
 	const widths = fitColumns(used, natural, width - marksWidth - gap);
-	const rowAt = (index: number): TableRow => ({
+	const rowAt = (index: number): Record<string, string> => ({
 		' ': marksOf(shown[index]!, session, index === cursor),
 		...Object.fromEntries(used.map(({head}, column) => [head, texts[index]![column]!])),
 	});
@@ -137,7 +137,3 @@ function windowAndPinned({shown, cursor, session}: Given, height: number, previo
 	const pinned = wanted.filter(index => index >= 0 && (index < window.start || index >= window.end));
 	return {...window, pinned: [...new Set(pinned)].sort((a, b) => a - b).slice(0, outside.length)};
 }
-
-/** What the table takes of a width. */
-export const tableWidth = (columns: readonly TableColumn[]): number =>
-	columns.reduce((sum, {width}) => sum + width + gap, -gap);

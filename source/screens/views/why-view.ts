@@ -45,7 +45,12 @@ function headBlocks({here}: Why): Block[] {
 	const verdict = row.verdict === 'fail' ? 'FAIL' : row.verdict;
 	const overall = `overall ${row.overall.map(ratio => fixed(ratio, 3)).join('  ')}`;
 	return [
-		line(cell(name, 'strong'), cell(place === undefined ? ' · ' : ` · place ${place} · `), cell(verdict, row.verdict), cell(` · ${timeWords(row)}`)),
+		line(
+			cell(name, 'strong'),
+			cell(place === undefined ? ' · ' : ` · place ${place} · `),
+			cell(verdict, row.verdict),
+			cell(` · ${timeWords(row)}`),
+		),
 		line(cell(overall, 'muted')),
 		text(row.reason),
 		...row.remarks.map(remark => text(`- ${remark}`, 'plain', 2)),
