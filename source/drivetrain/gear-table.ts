@@ -133,7 +133,7 @@ function cellEdges(motion: GearMotion): number[] {
 	for (let i = 1; i < motion.breaks.length; i++) {
 		const high = mark(motion.breaks[i]!);
 		const middle = mark((low.speedMps + high.speedMps) / 2);
-		if (gentle(low.mps2, middle.mps2) && gentle(middle.mps2, high.mps2)) edges.push(high.speedMps);
+		if (gentle(low.mps2, middle.mps2, high.mps2)) edges.push(high.speedMps);
 		else cutAround(motion, low, high, edges);
 		low = high;
 	}
@@ -153,13 +153,13 @@ function cutAround(motion: GearMotion, low: Mark, high: Mark, edges: number[]): 
 }
 
 function cut(motion: GearMotion, low: Mark, high: Mark, edges: number[]): void {
+	const speedMps = (low.speedMps + high.speedMps) / 2;
+	const middle = {speedMps, mps2: motion.acceleration(speedMps)};
 	const tiny = high.speedMps - low.speedMps <= settled * high.speedMps || high.speedMps <= standstillMps;
-	if (tiny || gentle(low.mps2, high.mps2)) {
+	if (tiny || gentle(low.mps2, middle.mps2, high.mps2)) {
 		edges.push(high.speedMps);
 		return;
 	}
-	const speedMps = (low.speedMps + high.speedMps) / 2;
-	const middle = {speedMps, mps2: motion.acceleration(speedMps)};
 	cut(motion, low, middle, edges);
 	cut(motion, middle, high, edges);
 }
