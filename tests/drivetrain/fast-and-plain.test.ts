@@ -28,12 +28,10 @@ function expectSame(fast: StraightRun, plain: StraightRun) {
 		expect(relativeError(one.finalMps, other.finalMps)).toBeLessThan(1e-9);
 		expect(Math.abs(one.limiterM - other.limiterM)).toBeLessThan(1e-6 * (1 + other.limiterM));
 		expect(relativeError(one.reachRpm, other.reachRpm)).toBeLessThan(1e-9);
-		expect([one.topGear, one.slows, one.entryMissed, one.pushed]).toEqual([
-			other.topGear,
-			other.slows,
-			other.entryMissed,
-			other.pushed,
-		]);
+		// A car that neither gains nor loses may end a rounding above its exit speed or below it.
+		const changes = relativeError(one.finalMps, one.topMps) > 1e-12;
+		expect([one.topGear, one.entryMissed, one.pushed]).toEqual([other.topGear, other.entryMissed, other.pushed]);
+		if (changes) expect(one.slows).toBe(other.slows);
 		one.shifts.forEach((shift, i) => {
 			expect(shift.rpm).toBe(other.shifts[i]!.rpm);
 			expect(shift.lightRpm).toBe(other.shifts[i]!.lightRpm);
