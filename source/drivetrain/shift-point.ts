@@ -5,7 +5,8 @@ import type {GearMotion} from './gear-motion.ts';
 /**
  * The planned shift speed from one gear to the next, m/s: the highest speed at which a_next − a_here goes from negative to
  * positive, where the limiter ends the thrust of the gear at the latest, but never above `capMps`. Stretches where both are
- * equal (grip holds both) do not count. 0 where the lower gear is nowhere better.
+ * equal (grip holds both) do not count. 0 where the lower gear is nowhere better. Signs are looked for at the kinks of both
+ * gears and halfway between them: two crossings closer together than that are not told apart.
  */
 export function shiftSpeedMps(here: GearMotion, next: GearMotion, capMps: number): number {
 	const advantage = (speedMps: number) => next.acceleration(speedMps) - here.acceleration(speedMps);
