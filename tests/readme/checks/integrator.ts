@@ -1,4 +1,5 @@
 /** Runs in one gear against a general integrator that steps the equations of motion, written a second time, in time. */
+import {RoadGears} from '../../../source/drivetrain/road-gears.ts';
 import {runStraight} from '../../../source/drivetrain/run-straight.ts';
 import type {Course, Vehicle} from '../../../source/drivetrain/straight.ts';
 import {accelerationIn, stepped} from '../../drivetrain/equations.ts';
@@ -8,7 +9,7 @@ import type {Case, OutsideCheck} from '../outside-check.ts';
 /** Speed and distance that the integrator reaches in the time that our run takes. */
 const cases = (gear: number, course: Partial<Course>, vehicle: Partial<Vehicle> = {}): Case[] => {
 	const [car, road] = [sampleVehicle(vehicle), sampleCourse({lowestGear: gear, highestGear: gear, ...course})];
-	const run = runStraight(car, sampleTrain, road);
+	const run = runStraight(new RoadGears(car, sampleTrain, road), road);
 	if (run.kind !== 'ran') throw new Error(`Expected a run, got ${run.kind}.`);
 	const acceleration = (speedMps: number) => accelerationIn(car, sampleTrain, road, gear, speedMps);
 	const end = stepped(acceleration, {speedMps: road.exitMps, distanceM: 0}, run.fastest.timeS);
