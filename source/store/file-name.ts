@@ -17,7 +17,7 @@ export const sameSpelling = (name: string): string => name.normalize('NFC');
 export const fileNameOf = (name: string): string => {
 	const exact = sameSpelling(name);
 	const word = wordOf(exact);
-	if (word === exact && !device.test(word)) return `${word}.json`;
+	if (word !== '' && word === exact && !device.test(word)) return `${word}.json`;
 	// UTF-16, because halves of surrogate pairs are all one character in UTF-8.
 	const hash = createHash('sha256').update(Buffer.from(exact, 'utf16le')).digest('hex').slice(0, hashLength);
 	return `${word || 'name'}_${hash}.json`;

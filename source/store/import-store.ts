@@ -6,13 +6,23 @@ import {entriesOf, isLink} from './directory.ts';
 import {isSameDirectory, isTheStore} from './export-store.ts';
 import {sameSpelling} from './file-name.ts';
 import {addMissing} from './history.ts';
-import {canonical, folders, type History, keptKinds, nameOf, type Preset, type SavedCar} from './kept-documents.ts';
+import {
+	canonical,
+	folders,
+	type History,
+	type KeptKind,
+	keptKinds,
+	nameOf,
+	type Preset,
+	type SavedCar,
+} from './kept-documents.ts';
 import {type ImportChoice, readForImport} from './read-for-import.ts';
 import type {Kept} from './read-kept.ts';
 import {keptNamed, saveKept} from './shelves.ts';
 
 export type Imported = {
 	file: string;
+	kind: KeptKind;
 	name: string;
 	/** changed: the store has another one, which stays; merged: entries that the store's history lacked were added. */
 	state: 'new' | 'changed' | 'replaced' | 'merged' | 'same';
@@ -70,7 +80,7 @@ const importHistory = (home: string, file: string, {track, entries}: History): A
 	const answer = addMissing(home, track, entries);
 	if (!answer.ok) return answer;
 	const merged = answer.value === 0 ? 'same' : 'merged';
-	return done({file, name: track, state: isNew ? 'new' : merged});
+	return done({file, kind: 'history', name: track, state: isNew ? 'new' : merged});
 };
 
 const importDocument = (
@@ -79,14 +89,14 @@ const importDocument = (
 	document: Preset | SavedCar,
 	replace: boolean,
 ): Answer<Imported> => {
-	const name = nameOf(document);
-	const present: Kept<Preset | SavedCar> | undefined = keptNamed(home, document.kind, name);
-	if (present && isSame(present.document, document)) return done({file, name, state: 'same'});
-	if (present && !replace) return done({file, name, state: 'changed'});
+	const one = {file, kind: document.kind, name: nameOf(document)};
+	const present: Kept<Preset | SavedCar> | undefined = keptNamed(home, one.kind, one.name);
+	if (present && isSame(present.document, document)) return done({...one, state: 'same'});
+	if (present && !replace) return done({...one, state: 'changed'});
 	const answer = saveKept(home, document, present?.revision);
 	if (answer.kind === 'failed') return failed(answer.problem);
-	if (answer.kind === 'changed') return done({file, name, state: 'changed'});
-	return done({file, name, state: present ? 'replaced' : 'new'});
+	if (answer.kind === 'changed') return done({...one, state: 'changed'});
+	return done({...one, state: present ? 'replaced' : 'new'});
 };
 
 /** When they were saved makes no difference. */

@@ -54,9 +54,9 @@ export const keptNamed = <K extends KeptKind>(home: string, kind: K, name: strin
  */
 export const saveKept = <K extends KeptKind>(
 	home: string,
-	document: Documents[K],
+	document: Documents[K] & {readonly kind: K},
 	base: string | undefined,
-): SaveAnswer<Documents[K]> => changeKept(home, document.kind as K, nameOf(document), base, () => document);
+): SaveAnswer<Documents[K]> => changeKept(home, document.kind, nameOf(document), base, () => document);
 
 /**
  * Keeps what is made of the present document, which nobody else changes meanwhile. With a `base` it must be that
