@@ -1,6 +1,6 @@
 /** `droprack rank`: every pair and gearbox set, best first. */
 import {rankRack} from '../planning/rank-rack.ts';
-import type {CommandRun} from './command-table.ts';
+import type {CommandRun} from './command.ts';
 import {refuseFaults} from './faults.ts';
 import {loadDocuments} from './load-documents.ts';
 import {printJson, printText} from './print.ts';
