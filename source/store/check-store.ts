@@ -5,12 +5,12 @@ import {type Entry, entriesOf} from './directory.ts';
 import {isTemporary} from './durable-write.ts';
 import {sameSpelling} from './file-name.ts';
 import {keptKinds} from './kept-documents.ts';
+import {folderOf, listKept} from './list-kept.ts';
 import {isPreparedLock, lockHolder, lockName} from './lock.ts';
 import {preferencesFile, readPreferences} from './preferences.ts';
 import {hasEnded} from './process-identity.ts';
 import type {Kept} from './read-kept.ts';
 import {sessionFolder, type UnsavedSession, unsavedSessions} from './session.ts';
-import {folderOf, listKept} from './shelves.ts';
 
 export type Finding = {file: string /** Names the file too. */; message: string};
 

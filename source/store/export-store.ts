@@ -6,8 +6,8 @@ import {entriesOf, isLink, makeDirectory} from './directory.ts';
 import {writeDurably} from './durable-write.ts';
 import {fileNameOf, sameSpelling} from './file-name.ts';
 import {type KeptKind, keptKinds, textOf} from './kept-documents.ts';
+import {folderOf, listKept} from './list-kept.ts';
 import {type Kept, notPlain, readKept} from './read-kept.ts';
-import {folderOf, listKept} from './shelves.ts';
 
 export type Exported = {
 	/** Files that are new or have changed. */

@@ -1,8 +1,9 @@
 /** What was run at a track, and what was seen. */
 import {type Answer, done, failed} from './answer.ts';
 import {canonical, type History, type HistoryEntry} from './kept-documents.ts';
+import {keptNamed} from './list-kept.ts';
 import type {Kept} from './read-kept.ts';
-import {changeKept, keptNamed} from './shelves.ts';
+import {changeKept} from './save-kept.ts';
 
 /** Adds entries to what is kept of the track, after all that others have added. */
 export const addToHistory = (home: string, track: string, entries: readonly HistoryEntry[]): Answer<Kept<History>> =>

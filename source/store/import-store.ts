@@ -16,9 +16,10 @@ import {
 	type Preset,
 	type SavedCar,
 } from './kept-documents.ts';
+import {keptNamed} from './list-kept.ts';
 import {type ImportChoice, readForImport} from './read-for-import.ts';
 import type {Kept} from './read-kept.ts';
-import {keptNamed, saveKept} from './shelves.ts';
+import {saveKept} from './save-kept.ts';
 
 export type Imported = {
 	file: string;

@@ -9,8 +9,8 @@ import {
 	shapeProblem,
 	type Written,
 } from './kept-documents.ts';
+import {keptNamed} from './list-kept.ts';
 import {broken, readContent, understood} from './read-kept.ts';
-import {keptNamed} from './shelves.ts';
 
 export type ImportChoice = {
 	/** Whether a document of the store gives way to one that differs from it; it stays as `.bak`. */

@@ -3,7 +3,7 @@ import {join} from 'node:path';
 import {afterAll, beforeAll, expect, test} from 'vitest';
 import {checkStore} from '../../source/store/check-store.ts';
 import {processIdentity} from '../../source/store/process-identity.ts';
-import {saveKept} from '../../source/store/shelves.ts';
+import {saveKept} from '../../source/store/save-kept.ts';
 import {bundleChild, type Children, ended, firstWords} from './children.ts';
 import {preset} from './documents.ts';
 import {temporaryHome} from './temporary-home.ts';

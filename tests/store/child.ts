@@ -1,9 +1,10 @@
 /** A second copy of the program for the tests of the store: does what its words say and prints what came of it. */
 import {writeSync} from 'node:fs';
 import {addToHistory} from '../../source/store/history.ts';
+import {keptNamed} from '../../source/store/list-kept.ts';
 import {withLock} from '../../source/store/lock.ts';
+import {saveKept} from '../../source/store/save-kept.ts';
 import {keepSession} from '../../source/store/session.ts';
-import {keptNamed, saveKept} from '../../source/store/shelves.ts';
 import {preset} from './documents.ts';
 
 const [verb, home = '', ...rest] = process.argv.slice(2);

@@ -1,7 +1,8 @@
 import {readdirSync, readFileSync} from 'node:fs';
 import {join} from 'node:path';
 import {afterAll, beforeAll, expect, test} from 'vitest';
-import {keptNamed, saveKept} from '../../source/store/shelves.ts';
+import {keptNamed} from '../../source/store/list-kept.ts';
+import {saveKept} from '../../source/store/save-kept.ts';
 import {full, runs} from '../runs.ts';
 import {bundleChild, type Children, ended, firstWords} from './children.ts';
 import {preset} from './documents.ts';

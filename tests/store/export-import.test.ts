@@ -5,8 +5,9 @@ import {exportStore} from '../../source/store/export-store.ts';
 import {addToHistory} from '../../source/store/history.ts';
 import {type ImportAnswer, importStore} from '../../source/store/import-store.ts';
 import type {Preset} from '../../source/store/kept-documents.ts';
+import {keptNamed, listKept} from '../../source/store/list-kept.ts';
 import type {ImportChoice} from '../../source/store/read-for-import.ts';
-import {keptNamed, listKept, saveKept} from '../../source/store/shelves.ts';
+import {saveKept} from '../../source/store/save-kept.ts';
 import {preset, savedCar, track} from './documents.ts';
 import {temporaryHome} from './temporary-home.ts';
 

@@ -1,7 +1,7 @@
 import {readFileSync, writeFileSync} from 'node:fs';
 import {expect, test} from 'vitest';
 import {addMissing, addToHistory} from '../../source/store/history.ts';
-import {keptNamed} from '../../source/store/shelves.ts';
+import {keptNamed} from '../../source/store/list-kept.ts';
 import {temporaryHome} from './temporary-home.ts';
 
 const home = temporaryHome();

@@ -1,7 +1,7 @@
 import {mkdirSync, readdirSync, writeFileSync} from 'node:fs';
 import {join} from 'node:path';
 import {afterAll, beforeAll, expect, test} from 'vitest';
-import {keptNamed, listKept} from '../../source/store/shelves.ts';
+import {keptNamed, listKept} from '../../source/store/list-kept.ts';
 import {runs} from '../runs.ts';
 import {bundleChild, type Children, ended, firstWords} from './children.ts';
 import {temporaryHome} from './temporary-home.ts';

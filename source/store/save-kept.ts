@@ -1,52 +1,20 @@
-/** Presets, cars and histories: listed, saved and forgotten. */
+/** Presets, cars and histories: saved and forgotten. */
 import {lstatSync} from 'node:fs';
 import {join} from 'node:path';
 import {type Answer, done, failed, type StoreProblem, unreachable} from './answer.ts';
-import {entriesOf, makeDirectory} from './directory.ts';
+import {makeDirectory} from './directory.ts';
 import {retire, sweepTemporaries, writeDurably} from './durable-write.ts';
-import {fileNameOf, sameSpelling} from './file-name.ts';
-import {type Documents, folders, type KeptKind, nameOf, textOf} from './kept-documents.ts';
+import {fileNameOf} from './file-name.ts';
+import {type Documents, type KeptKind, nameOf, textOf} from './kept-documents.ts';
+import {folderOf, keptNamed} from './list-kept.ts';
 import {withLock} from './lock.ts';
 import {type Kept, readKept, revisionOf} from './read-kept.ts';
-
-export type Shelf<D> = {
-	/** By file name. */
-	kept: Kept<D>[];
-	/** The files that could not be read; they cost nothing but themselves. */
-	problems: StoreProblem[];
-};
 
 export type SaveAnswer<D> =
 	| {kind: 'saved'; kept: Kept<D>}
 	/** Somebody else saved or forgot it meanwhile; nothing was written. Ask, then save on the revision of theirs. */
 	| {kind: 'changed'; theirs: Kept<D> | undefined}
 	| {kind: 'failed'; problem: StoreProblem};
-
-export const folderOf = (home: string, kind: KeptKind): string => join(home, folders[kind]);
-
-/** All documents of a kind in the store. */
-export const listKept = <K extends KeptKind>(home: string, kind: K): Shelf<Documents[K]> => {
-	const shelf: Shelf<Documents[K]> = {kept: [], problems: []};
-	const folder = folderOf(home, kind);
-	try {
-		for (const {name, path} of entriesOf(folder)) {
-			if (!name.endsWith('.json')) continue;
-			const answer = readKept(path, kind);
-			if (answer.ok) shelf.kept.push(answer.value);
-			else shelf.problems.push(answer.problem);
-		}
-	} catch (error) {
-		shelf.problems.push(unreachable(folder, error));
-	}
-	return shelf;
-};
-
-/** The document of that very name, in whatever file; of several the one whose file has the name's own file name. */
-export const keptNamed = <K extends KeptKind>(home: string, kind: K, name: string): Kept<Documents[K]> | undefined => {
-	const named = listKept(home, kind).kept.filter(kept => sameSpelling(kept.name) === sameSpelling(name));
-	const own = join(folderOf(home, kind), fileNameOf(name));
-	return named.find(kept => kept.file === own) ?? named[0];
-};
 
 /**
  * Keeps a document under its name. `base` is the revision that it was made from, undefined where there was none: if the
