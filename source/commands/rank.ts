@@ -10,7 +10,7 @@ import {rankView} from './text/rank-view.ts';
 import {unitsOf} from './text/units.ts';
 
 /** As many rows as a person compares. */
-const shownUnlessAsked = 12;
+const shownUnlessAsked = 8;
 
 export const rank: CommandRun = async (request, around) => {
 	const loaded = await loadDocuments(request, around);

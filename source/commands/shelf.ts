@@ -53,7 +53,7 @@ export const shelf = (kind: Kind, {shipped, environment}: Place): Shelf => {
 };
 
 /** The track of the bare command, and the car that is taken where none is named. */
-export const demo = {track: 'quillmere', car: 'demo'} as const;
+export const demo = {track: 'tarrowdale', car: 'demo'} as const;
 
 export const shippedShelf = (kind: Kind, shipped: URL): Shelved[] => {
 	const directory = fileURLToPath(kind === 'car' ? new URL('cars/', shipped) : shipped);

@@ -36,7 +36,9 @@ export function brakingOf(course: Course): Braking | undefined {
 export function shifted(gears: RoadGears, course: Course, gear: number, from: Place, carry: Carry): Entry | undefined {
 	const {speedMps: shiftMps, coasted} = gears.shiftFrom(gear, from.speedMps);
 	const braking = brakingOf(course);
-	const run = carry(gear, from.speedMps, {distanceM: course.lengthM - from.distanceM, toMps: shiftMps, braking});
+	const atOnce = {distanceM: 0, timeS: 0, why: 'speed'};
+	const goal = {distanceM: course.lengthM - from.distanceM, toMps: shiftMps, braking};
+	const run = from.speedMps >= shiftMps ? atOnce : carry(gear, from.speedMps, goal);
 	if (run.why !== 'speed') return undefined;
 	const distanceM = from.distanceM + run.distanceM + coasted.distanceM;
 	const {speedMps} = coasted;
@@ -122,13 +124,10 @@ function highest(course: Course, {firstGear, entered, fullThrottleEnd}: Finish) 
 	return top;
 }
 
-/** The speed that no car on wheels passes: where the search without a limiter ends. */
-const beyondMps = 500;
-
 /** The highest RPM in the gear had the limiter not cut, from where it was met. */
 function reachRpm(gears: RoadGears, course: Course, gear: number, heldFrom: Place): number {
 	const motion = gears.unlimited(gear);
-	const goal = {distanceM: course.lengthM - heldFrom.distanceM, toMps: beyondMps, braking: brakingOf(course)};
+	const goal = {distanceM: course.lengthM - heldFrom.distanceM, toMps: motion.limiterMps, braking: brakingOf(course)};
 	return motion.rpmAt(Math.max(heldFrom.speedMps, travel(motion, heldFrom.speedMps, goal).speedMps));
 }
 

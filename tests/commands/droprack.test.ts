@@ -126,7 +126,7 @@ test('the version is that of the package', async () => {
 
 test('tracks and cars are listed, and shown as they were written', async () => {
 	expect((await program.run(['tracks'])).out).toMatch(
-		/^Fixture Oval +quillmere +short +2 straights +2 situations +shipped$/m,
+		/^Fixture Oval +tarrowdale +short +2 straights +2 situations +shipped$/m,
 	);
 	expect((await program.run(['cars'])).out).toMatch(/^Fixture Car +demo +short, road +2 sets +5 pairs +shipped$/m);
 	expect(JSON.parse((await program.run(['tracks', '--json'])).out).tracks).toHaveLength(1);

@@ -1,6 +1,6 @@
 /** The ranking as a person reads it: one line a row, the reasons, the remarks. */
 import type {Check, Ranking, Row} from '../../planning/results.ts';
-import {type Block, cell, gap, line, type Making, tableOf, text} from './blocks.ts';
+import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
 import {checkLabel} from './check-view.ts';
 import {closingView, type Heading, headingView, verdictCell} from './heading-view.ts';
 import {absent, fixed, rpm, rpmDown, rpmUp, seconds, signed, type Units} from './units.ts';
@@ -82,10 +82,9 @@ const shownRows = ({ranking, top}: RankAnswer): Placed[] =>
 
 const reasonsView = (shown: readonly Placed[]): Block[] => {
 	const widest = Math.max(...shown.map(({place}) => String(place).length));
-	return shown.map(({place, row}, index) => {
+	return shown.map(({place, row}) => {
 		const start = `${String(place).padStart(widest)}  ${row.pair} ${row.gearbox}  `;
-		if (index === 0) return text(start + row.reason, 'plain', widest + 2);
-		return line(cell(start, 'muted'), cell(row.reason));
+		return text(start + row.reason, 'plain', widest + 2);
 	});
 };
 
