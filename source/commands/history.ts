@@ -8,7 +8,7 @@ import type {CommandRun} from './command.ts';
 import {findDocument, isFileName} from './find-document.ts';
 import {printJson, printText} from './print.ts';
 import {readAny} from './read-any.ts';
-import {badInput, type Found, found, replyDone, replyRefused} from './reply.ts';
+import {badInput, type Found, found, type Reply, replyDone, replyRefused} from './reply.ts';
 import type {Request} from './request.ts';
 import {shelf} from './shelf.ts';
 import {replyProblem, replyWritten} from './store-reply.ts';
@@ -49,19 +49,18 @@ const trackOf = async (asked: string, around: Surroundings): Promise<Found<Track
 	return found({name, ...(air && {air})});
 };
 
-const list: (name: string, request: Request, around: Surroundings) => ReturnType<typeof replyDone> = (
-	name,
-	request,
-	around,
-) => {
+/** A season or two; `--top` and `--json` give more. */
+const mostShown = 50;
+
+const list = (name: string, request: Request, around: Surroundings): Reply => {
 	const home = homeDirectory(around.environment);
 	const entries = keptNamed(home, 'history', name)?.document.entries ?? [];
 	if (request.json) return replyDone(printJson({track: name, entries}, request));
-	return replyDone(printText(historyView(name, entries), request, around));
+	return replyDone(printText(historyView(name, entries, request.top ?? mostShown), request, around));
 };
 
 /** The day's air and the chosen pair and set are those of the track as saved, unless given. */
-const add = ({name, air}: TrackOfHistory, request: Request, around: Surroundings) => {
+const add = ({name, air}: TrackOfHistory, request: Request, around: Surroundings): Reply => {
 	const home = homeDirectory(around.environment);
 	const preset = keptNamed(home, 'preset', name)?.document;
 	const {session, gearbox = preset?.gearbox, rpm, at, situation, remark} = request;

@@ -1,6 +1,5 @@
 /** A track or a car, whichever a word of the command line means, read and checked. */
 import {type Reading, readCar, readTrack} from '../documents/read.ts';
-import {readJson} from '../documents/read-json.ts';
 import type {Named} from '../store/kept-documents.ts';
 import {inputOf} from './document-input.ts';
 import {load} from './load-documents.ts';
@@ -23,18 +22,21 @@ export const readAny = async (
 	around: Surroundings,
 ): Promise<Found<AnyDocument>> => {
 	const input = await inputOf(asked, kinds, around);
+	const [kind = 'track', other] = kinds;
+	const loaded = await load(input, other ? readEither : readers[kind]);
 	if (!input.ok) return input;
-	const {text, from, car, notes} = input.value;
-	const kind = kinds.length === 1 ? kinds[0]! : await kindOf(text);
-	const read: (text: string) => Promise<Reading<unknown>> = kind === 'car' ? readCar : readTrack;
-	const loaded = await load(input, read);
 	if (!loaded.ok) return loaded;
-	// A document that the readers take has a name.
-	return found({kind, document: loaded.value.document as Named, from, car, notes});
+	const {from, car, notes} = input.value;
+	// A document that the readers take has its kind and a name.
+	const document = loaded.value.document as Named & {kind: Kind};
+	return found({kind: document.kind, document, from, car, notes});
 };
 
-/** What a text says it is; of one that says nothing a track's reader tells what is missing. */
-const kindOf = async (text: string): Promise<Kind> => {
-	const json = await readJson(text);
-	return json.ok && json.document.kind === 'car' ? 'car' : 'track';
+const readers: Record<Kind, (text: string) => Promise<Reading<unknown>>> = {track: readTrack, car: readCar};
+
+/** As a track, unless it says that it is a car. */
+const readEither = async (text: string): Promise<Reading<unknown>> => {
+	const reading = await readTrack(text);
+	const [first] = reading.ok ? [] : reading.problems;
+	return first?.path === 'kind' && first.found === '"car"' ? readCar(text) : reading;
 };

@@ -35,7 +35,7 @@ export const storeCommands: readonly Command[] = [
 		name: 'history',
 		summary: 'what was run at a track and seen there; with --add an entry more',
 		argument: track,
-		options: ['add', 'date', 'session', 'pair', 'gearbox', 'rpm', 'at', 'situation', 'remark', ...everywhere],
+		options: ['add', 'date', 'session', 'pair', 'gearbox', 'rpm', 'at', 'situation', 'remark', 'top', ...everywhere],
 		examples: [
 			{line: 'droprack history "Half mile"', gives: 'the latest first'},
 			{line: 'droprack history "Half mile" --add --session race --rpm 8840', gives: 'with pair, set and air as saved'},

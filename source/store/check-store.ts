@@ -65,6 +65,7 @@ const leftovers = (home: string): StoreProblem[] => {
 		const inHome = entriesOf(home);
 		return [
 			...inHome.filter(({name}) => name === lockName && !isBusy).map(left),
+			...inHome.filter(({name}) => confTemporary.test(name)).map(leftByConf),
 			...inHome.filter(({name}) => isPreparedLock(name) && hasEnded(name.slice(lockName.length + 1))).map(left),
 			...keptKinds.flatMap(kind => entriesOf(folderOf(home, kind)).filter(isLeft)).map(left),
 			...entriesOf(sessionFolder(home))
@@ -75,6 +76,11 @@ const leftovers = (home: string): StoreProblem[] => {
 		return [unreachable(home, error)];
 	}
 };
+
+/** What conf leaves of preferences that it was ended in writing, and never clears away. */
+const confTemporary = /^preferences\.json\.tmp-/;
+
+const leftByConf = (entry: Entry): StoreProblem => ({...left(entry), todo: 'Nothing is lost. Remove it.'});
 
 const left = ({path}: Entry): StoreProblem => ({
 	reason: 'inTheWay',

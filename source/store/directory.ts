@@ -40,22 +40,18 @@ const madeAlone = (directory: string): boolean => {
 	return true;
 };
 
-export type Entry = {name: string; path: string /** Neither a directory nor a link. */; isPlain: boolean};
+export type Entry = {name: string; path: string};
 
-/** What is in a directory, by name; nothing where there is no directory. Links are not followed. */
+/** What is in a directory, by name; nothing where there is no directory. */
 export const entriesOf = (directory: string): Entry[] => {
-	let names: string[];
 	try {
-		names = readdirSync(directory).sort();
+		return readdirSync(directory)
+			.sort()
+			.map(name => ({name, path: join(directory, name)}));
 	} catch (error) {
 		if (codeOf(error) === 'ENOENT') return [];
 		throw error;
 	}
-	return names.flatMap(name => {
-		const path = join(directory, name);
-		const about = lstatSync(path, {throwIfNoEntry: false});
-		return about ? [{name, path, isPlain: about.isFile()}] : [];
-	});
 };
 
 export const isLink = (path: string): boolean => lstatSync(path, {throwIfNoEntry: false})?.isSymbolicLink() === true;

@@ -40,6 +40,7 @@ test('everything wrong is named with what to do, and nothing is changed', () => 
 	put('cars/kind.json', JSON.stringify(preset('Oval')));
 	put('history/empty.json', '');
 	put('preferences.json', '[]');
+	put('preferences.json.tmp-1', '{');
 	const session = `sessions/${identityOf('4194305')}.json`;
 	put(session, '{"kind": "session", "version": 1, "saved": "2026-01-01", "document": {}}');
 	mkdirSync(join(home(), 'lock'));
@@ -55,6 +56,7 @@ test('everything wrong is named with what to do, and nothing is changed', () => 
 		'HOME/tracks/c.json: "OVAL" has the name of a.json but for upper and lower case. Write the name exactly, or rename one.',
 		`HOME/${session}: unsaved work of 2026-01-01, of a screen that ended without saving. Open the screen to take it up, or remove the file.`,
 		`HOME/lock: ${clear}`,
+		'HOME/preferences.json.tmp-1: left by a process that was ended while it was saving. Nothing is lost. Remove it.',
 		`HOME/tracks/a.json.0123456789ab.tmp: ${clear}`,
 		'HOME/preferences.json: the preferences are not an object; left as it is. Mend it or remove it.',
 	]);

@@ -15,11 +15,19 @@ const columns: readonly Making<HistoryEntry>[] = [
 	{head: 'situation', align: 'left', keep: 5, cell: ({situation}) => cell(words(situation))},
 ];
 
-export const historyView = (track: string, entries: readonly HistoryEntry[]): Block[] => {
+export const historyView = (track: string, entries: readonly HistoryEntry[], most: number): Block[] => {
 	if (entries.length === 0) return [text(`${track}: nothing is kept of it yet.`)];
-	const latestFirst = [...entries].reverse().sort((a, b) => words(b.date).localeCompare(words(a.date), 'en'));
-	const remarks = latestFirst.filter(({remark}) => remark !== undefined).map(remarkOf);
-	return [text(track, 'strong'), gap, tableOf(columns, latestFirst), ...(remarks.length > 0 ? [gap] : []), ...remarks];
+	const latestFirst = [...entries].reverse().sort((a, b) => (words(a.date) < words(b.date) ? 1 : -1));
+	const shown = latestFirst.slice(0, most);
+	const remarks = shown.filter(({remark}) => remark !== undefined).map(remarkOf);
+	const left = entries.length - shown.length;
+	return [
+		text(track, 'strong'),
+		gap,
+		tableOf(columns, shown),
+		...(remarks.length > 0 ? [gap, ...remarks] : []),
+		...(left > 0 ? [gap, text(`and ${left} earlier; --top N shows more.`, 'muted')] : []),
+	];
 };
 
 /** Below the table, where it is read in full. */
