@@ -1,10 +1,10 @@
-/** The text of the document that a word of the command line means. */
+/** The document that a word of the command line means: found, and read. */
 import {sep} from 'node:path';
-import {maxDocumentBytes} from '../documents/read.ts';
+import {describeProblems, maxDocumentBytes, type Reading} from '../documents/read.ts';
 import {visible} from '../documents/visible.ts';
 import {findDocument, isFileName} from './find-document.ts';
 import {type Input, readFileText, readStandardInput} from './read-input.ts';
-import {type Found, found} from './reply.ts';
+import {badInput, type Found, found} from './reply.ts';
 import {type Kind, type Shelved, shelf} from './shelf.ts';
 import type {Surroundings} from './surroundings.ts';
 
@@ -44,3 +44,17 @@ const unnamed = (input: Found<Input>): Found<DocumentInput> =>
 /** A saved document is a part of its file, whose lines count otherwise. */
 const labelOf = ({from, kind, name, file}: Shelved): string =>
 	from === 'saved' ? `the saved ${kind} ${visible(name)}` : file;
+
+type Read<T> = {label: string; value: T; document: Record<string, unknown>; notes: string[]};
+
+/** The document in a text that was found. */
+export const load = async <T>(
+	input: Found<DocumentInput>,
+	read: (text: string) => Promise<Reading<T>>,
+): Promise<Found<Read<T>>> => {
+	if (!input.ok) return input;
+	const {label, text, notes} = input.value;
+	const reading = await read(text);
+	if (!reading.ok) return badInput(describeProblems(label, reading.problems));
+	return found({label, value: reading.value, document: reading.document, notes});
+};

@@ -1,11 +1,11 @@
 /** The track and the car that a command is asked about, read and checked. */
-import {describeProblems, type Reading, readCar, readTrack} from '../documents/read.ts';
+import {readCar, readTrack} from '../documents/read.ts';
 import type {Car} from '../drivetrain/car.ts';
 import type {Track} from '../drivetrain/track.ts';
 import {homeDirectory} from '../store/home.ts';
 import {readPreferences} from '../store/preferences.ts';
-import {type DocumentInput, inputOf} from './document-input.ts';
-import {badInput, type Found, found} from './reply.ts';
+import {inputOf, load} from './document-input.ts';
+import {type Found, found} from './reply.ts';
 import type {Request} from './request.ts';
 import {demo} from './shelf.ts';
 import type {Surroundings} from './surroundings.ts';
@@ -50,18 +50,4 @@ const chooseCar = (request: Request, savedWithTrack: string | undefined, around:
 	if (preferred === undefined) return {car: demo.car, notes: [], reasons: []};
 	const reason = 'The car is the preferred one; droprack cars --prefer chooses another, --prefer none the demo car.';
 	return {car: preferred, notes: [], reasons: [reason]};
-};
-
-type Read<T> = {label: string; value: T; document: Record<string, unknown>; notes: string[]};
-
-/** The document in a text that was found. */
-export const load = async <T>(
-	input: Found<DocumentInput>,
-	read: (text: string) => Promise<Reading<T>>,
-): Promise<Found<Read<T>>> => {
-	if (!input.ok) return input;
-	const {label, text, notes} = input.value;
-	const reading = await read(text);
-	if (!reading.ok) return badInput(describeProblems(label, reading.problems));
-	return found({label, value: reading.value, document: reading.document, notes});
 };

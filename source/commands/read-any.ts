@@ -1,8 +1,7 @@
 /** A track or a car, whichever a word of the command line means, read and checked. */
 import {type Reading, readCar, readTrack} from '../documents/read.ts';
 import type {Named} from '../store/kept-documents.ts';
-import {inputOf} from './document-input.ts';
-import {load} from './load-documents.ts';
+import {inputOf, load} from './document-input.ts';
 import {type Found, found} from './reply.ts';
 import type {Kind, Shelved} from './shelf.ts';
 import type {Surroundings} from './surroundings.ts';
