@@ -20,6 +20,8 @@ export type Finish = {
 	/** Where the limiter was met; undefined where it was not. */
 	readonly heldFrom: Place | undefined;
 	readonly fullThrottleEnd: Place;
+	/** A place shortly before the end of full throttle, its distance since the last gear was entered; undefined where none is known. */
+	readonly shortlyBefore: Travel['shortlyBefore'] | undefined;
 	readonly timeS: number;
 	readonly limiterM: number;
 };
@@ -63,20 +65,21 @@ export function finished(
 		braking,
 	});
 	if (run.why === 'stopped') return undefined;
-	const reached = {
-		speedMps: run.speedMps,
-		distanceM: from.distanceM + run.distanceM,
-		timeS: from.timeS + run.timeS,
+	const speedMps = run.speedMps;
+	const distanceM = from.distanceM + run.distanceM;
+	const timeS = from.timeS + run.timeS;
+	const heldFrom = run.why === 'speed' ? {speedMps, distanceM, timeS} : undefined;
+	const limiterM = heldFrom === undefined ? 0 : roomM(course, heldFrom, braking);
+	const throttleS = timeS + limiterM / speedMps;
+	return {
+		firstGear,
+		entered,
+		heldFrom,
+		fullThrottleEnd: {speedMps, distanceM: distanceM + limiterM, timeS: throttleS},
+		shortlyBefore: run.shortlyBefore,
+		timeS: throttleS + brakingTimeS(speedMps, braking),
+		limiterM,
 	};
-	const heldFrom = run.why === 'speed' ? reached : undefined;
-	const limiterM = heldFrom === undefined ? 0 : roomM(course, reached, braking);
-	const fullThrottleEnd = {
-		...reached,
-		distanceM: reached.distanceM + limiterM,
-		timeS: reached.timeS + limiterM / reached.speedMps,
-	};
-	const timeS = fullThrottleEnd.timeS + brakingTimeS(fullThrottleEnd.speedMps, braking);
-	return {firstGear, entered, heldFrom, fullThrottleEnd, timeS, limiterM};
 }
 
 /** The whole story of a sequence that reached the end. */

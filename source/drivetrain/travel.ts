@@ -32,6 +32,8 @@ export type Travel = {
 	readonly timeS: number;
 	/** `speed`: at the goal's speed; `end`: at the end or the braking point; `stopped`: the car came to rest. */
 	readonly why: 'speed' | 'end' | 'stopped';
+	/** With `end`, where it is known: a place on the way shortly before. */
+	readonly shortlyBefore?: {readonly speedMps: number; readonly distanceM: number};
 };
 
 const piece = gaussLegendre(6);
@@ -82,8 +84,12 @@ export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
 /** Distance and time over which the acceleration, of one sign, takes the car from one speed to another inside a piece. */
 export function integrate(motion: Motion, fromMps: number, toMps: number, halvings = mostHalvings): Stretch {
 	const {nodes, weights, lastCoefficient, nextToLastCoefficient} = piece;
-	const [middle, half] = [(fromMps + toMps) / 2, (toMps - fromMps) / 2];
-	let [distanceM, timeS, last, nextToLast] = [0, 0, 0, 0];
+	const middle = (fromMps + toMps) / 2;
+	const half = (toMps - fromMps) / 2;
+	let distanceM = 0;
+	let timeS = 0;
+	let last = 0;
+	let nextToLast = 0;
 	for (let i = 0; i < nodes.length; i++) {
 		const speed = middle + half * nodes[i]!;
 		const slowness = 1 / motion.acceleration(speed);
@@ -103,8 +109,10 @@ export function integrate(motion: Motion, fromMps: number, toMps: number, halvin
 /** The same over a small part of a piece. */
 export function integrateSliver(motion: Motion, fromMps: number, toMps: number): Stretch {
 	const {nodes, weights} = sliver;
-	const [middle, half] = [(fromMps + toMps) / 2, (toMps - fromMps) / 2];
-	let [distanceM, timeS] = [0, 0];
+	const middle = (fromMps + toMps) / 2;
+	const half = (toMps - fromMps) / 2;
+	let distanceM = 0;
+	let timeS = 0;
 	for (let i = 0; i < nodes.length; i++) {
 		const speed = middle + half * nodes[i]!;
 		const weight = weights[i]! / motion.acceleration(speed);
