@@ -104,7 +104,9 @@ function shiftCount(row: Row): number {
 
 /** Over all situations; shifts are left out, as they are planned at the same RPM with every pair. */
 function highestEndRpm(row: Row): number {
-	return Math.max(...row.situations.flatMap(({straights}) => straights.map(({endRpm}) => endRpm)));
+	let highest = 0;
+	for (const {straights} of row.situations) for (const {endRpm} of straights) highest = Math.max(highest, endRpm);
+	return highest;
 }
 
 function highestRpm(row: Row): number {
