@@ -1,6 +1,11 @@
 import {defineConfig} from 'vitest/config';
 
 const root = new URL('..', import.meta.url).pathname;
+/** What every listing loads, and what every answer about a track loads: few files, since opening one costs more than reading it. */
+const groups = [
+	{name: 'common', test: /source\/store\/|source\/commands\/(text\/|print|reply|shelf|find-document)|source\/documents\/(visible|nearest)|picocolors|fast-string|fastest-lev/},
+	{name: 'plan', test: /source\/(planning|drivetrain)\/|source\/commands\/(load-documents|read-input|faults)/},
+];
 const hashBang = '#!/usr/bin/env node';
 
 export default defineConfig(({command}) => ({
@@ -16,6 +21,7 @@ export default defineConfig(({command}) => ({
 		rolldownOptions: {
 			output: {
 				entryFileNames: 'droprack.js',
+				codeSplitting: {groups},
 				chunkFileNames: 'chunks/[name].js',
 				banner: (chunk: {isEntry: boolean}) => (chunk.isEntry ? hashBang : ''),
 			},

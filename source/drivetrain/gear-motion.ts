@@ -17,8 +17,8 @@ const crossingMps = 1e-7;
 export class GearMotion {
 	/** Speed at the limiter: thrust ends above it. The fastest that there is where it is never reached. */
 	readonly limiterMps: number;
-	/** Rising speeds from 0 to the limiter; between two neighbors the acceleration is smooth. */
-	readonly breaks: readonly number[];
+	/** Rising from 0 to the limiter: the speeds at the curve's points, and where the air stands still. */
+	readonly images: readonly number[];
 	readonly #vehicle: Vehicle;
 	readonly #forces: RoadForces;
 	readonly #overall: number;
@@ -27,6 +27,7 @@ export class GearMotion {
 	readonly #thrustFactor: number;
 	readonly #drivenKgM2: number;
 	#cell = 0;
+	#breaks: readonly number[] | undefined;
 
 	/** `overall` is R_k, `efficiency` η_k; `limiterRpm` Infinity looks past the limiter. */
 	constructor(vehicle: Vehicle, forces: RoadForces, overall: number, efficiency: number, limiterRpm: number) {
@@ -39,7 +40,32 @@ export class GearMotion {
 		this.#drivenKgM2 = vehicle.wheelInertiaKgM2 + vehicle.engineInertiaKgM2 * overall * overall;
 		const limiterMps = limiterRpm === Number.POSITIVE_INFINITY ? limiterRpm : this.speedAt(limiterRpm);
 		this.limiterMps = Math.min(limiterMps, fastestMps);
-		this.breaks = apart(this.#withGripCrossings(this.#curveImages()));
+		this.images = apart(this.#curveImages());
+	}
+
+	/** Rising speeds from 0 to the limiter; between two neighbors the acceleration is smooth. */
+	get breaks(): readonly number[] {
+		this.#breaks ??= apart(
+			this.images.flatMap((image, i) => [...(i === 0 ? [] : this.gripCrossings(this.images[i - 1]!, image)), image]),
+		);
+		return this.#breaks;
+	}
+
+	/** The speeds between two neighboring images at which grip takes over from the engine or lets go, rising. */
+	gripCrossings(lowMps: number, highMps: number): number[] {
+		const surplus = (speedMps: number) => {
+			const {powered, held} = this.#bothSides(speedMps);
+			return powered - held;
+		};
+		const crossings: number[] = [];
+		let [low, atLow] = [lowMps, surplus(lowMps)];
+		for (const high of [(lowMps + highMps) / 2, highMps]) {
+			const atHigh = surplus(high);
+			const crossing = atLow < 0 === atHigh < 0 ? undefined : brentRoot(surplus, low, high, crossingMps);
+			if (crossing !== undefined && crossing - low > apartMps && high - crossing > apartMps) crossings.push(crossing);
+			[low, atLow] = [high, atHigh];
+		}
+		return crossings;
 	}
 
 	/** Engine speed under full throttle at a road speed, rev/min. */
@@ -108,28 +134,6 @@ export class GearMotion {
 		const still = -this.#forces.headwindMps;
 		if (still > 0 && still < this.limiterMps) images.splice(cellOf(images, still) + 1, 0, still);
 		return images;
-	}
-
-	/** Adds the speeds at which grip takes over from the engine or lets go. */
-	#withGripCrossings(images: number[]): number[] {
-		const surplus = (speedMps: number) => {
-			const {powered, held} = this.#bothSides(speedMps);
-			return powered - held;
-		};
-		const all: number[] = [images[0]!];
-		let [low, atLow] = [images[0]!, surplus(images[0]!)];
-		for (let i = 1; i < images.length; i++) {
-			for (const high of [(images[i - 1]! + images[i]!) / 2, images[i]!]) {
-				const atHigh = surplus(high);
-				if (atLow < 0 !== atHigh < 0) {
-					const crossing = brentRoot(surplus, low, high, crossingMps);
-					if (crossing !== undefined && crossing > low && crossing < high) all.push(crossing);
-				}
-				[low, atLow] = [high, atHigh];
-			}
-			all.push(images[i]!);
-		}
-		return all;
 	}
 }
 

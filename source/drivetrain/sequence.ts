@@ -20,6 +20,8 @@ export type Finish = {
 	/** Where the limiter was met; undefined where it was not. */
 	readonly heldFrom: Place | undefined;
 	readonly fullThrottleEnd: Place;
+	/** A place in the last gear shortly before the end of full throttle; undefined where none is known. */
+	readonly shortlyBefore: {readonly speedMps: number; readonly distanceM: number} | undefined;
 	readonly timeS: number;
 	readonly limiterM: number;
 };
@@ -76,7 +78,9 @@ export function finished(
 		timeS: reached.timeS + limiterM / reached.speedMps,
 	};
 	const timeS = fullThrottleEnd.timeS + brakingTimeS(fullThrottleEnd.speedMps, braking);
-	return {firstGear, entered, heldFrom, fullThrottleEnd, timeS, limiterM};
+	const before = run.shortlyBefore;
+	const shortlyBefore = before && {...before, distanceM: from.distanceM + before.distanceM};
+	return {firstGear, entered, heldFrom, fullThrottleEnd, shortlyBefore, timeS, limiterM};
 }
 
 /** The whole story of a sequence that reached the end. */

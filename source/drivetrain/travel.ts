@@ -32,6 +32,8 @@ export type Travel = {
 	readonly timeS: number;
 	/** `speed`: at the goal's speed; `end`: at the end or the braking point; `stopped`: the car came to rest. */
 	readonly why: 'speed' | 'end' | 'stopped';
+	/** With `end`, where it is known: a place on the way shortly before. */
+	readonly shortlyBefore?: {readonly speedMps: number; readonly distanceM: number};
 };
 
 const piece = gaussLegendre(6);
@@ -49,12 +51,15 @@ const mostHalvings = 10;
 /** A piece is halved until the acceleration at its end is within this factor of that at its start. */
 const steepest = 0.4;
 
+/** An acceleration that is nothing but rounding: in an hour it would change the speed by less than 1e-9 m/s. */
+const stillMps2 = 1e-13;
+
 /** This close to a speed at which the acceleration is 0, relatively, the car is taken to stay at it. */
 export const settled = 1e-13;
 
 /** Newton doubles its digits: more steps than this are never needed from a guess inside one piece. */
 export const newtonCap = 12;
-export const newtonEnd = 1e-15;
+export const newtonEnd = 4e-16;
 
 /** The run from a speed until the goal is met, with the driver at full throttle. */
 export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
@@ -130,6 +135,8 @@ function pieceEnd(motion: Motion, speedMps: number, rising: boolean, goal: Goal)
 	const entry = goal.braking?.entryMps ?? 0;
 	const kink = rising ? Math.min(breakAbove(motion, speedMps), goal.toMps) : breakBelow(motion, speedMps);
 	const next = (entry > speedMps && entry < kink) || (entry < speedMps && entry > kink) ? entry : kink;
+	const [start, middle] = [motion.acceleration(speedMps), motion.acceleration((speedMps + next) / 2)];
+	if (gentle(start, middle, motion.acceleration(next))) return next;
 	return balancedBefore(motion, speedMps, next) ?? next;
 }
 
@@ -171,7 +178,7 @@ function gentleEnd(motion: Motion, fromMps: number, boundMps: number): number {
  */
 export function gentle(start: number, middle: number, end: number): boolean {
 	const ratio = end / start;
-	return middle / start > 0 && ratio >= steepest && ratio <= 1 / steepest;
+	return Math.abs(start) > stillMps2 && middle / start > 0 && ratio >= steepest && ratio <= 1 / steepest;
 }
 
 /** Whether the way to the next speed is no way at all and the acceleration falls to 0 on it; a kink or a goal so near is passed. */
@@ -206,27 +213,17 @@ function meet(motion: Motion, here: Travel, endMps: number, goal: Goal): Travel 
 	return evenly(there, roomM(there, goal));
 }
 
-/** The speed at which the car was `timeS` seconds before it reached `atMps` gaining speed; 0 where it gains none. */
-export function speedBefore(motion: Motion, atMps: number, timeS: number): number {
-	let [speed, left] = [atMps, timeS];
-	while (speed > 0) {
-		const end = gentleEnd(motion, speed, breakBelow(motion, speed));
-		const tookS = integrate(motion, end, speed).timeS;
-		if (tookS < 0) return 0;
-		if (tookS >= left) return earlierBy(motion, end, speed, left);
-		left -= tookS;
-		speed = end;
-	}
-	return 0;
-}
-
-/** Inside one piece: Newton's method on the time, from the speed that an even acceleration would give. */
-function earlierBy(motion: Motion, lowMps: number, atMps: number, timeS: number): number {
+/**
+ * The speed at which the car, gaining speed inside one piece, was `timeS` seconds before it reached `atMps`, not below
+ * `lowMps`: Newton's method on the time, from the speed that an even acceleration would give.
+ */
+export function earlierBy(motion: Motion, lowMps: number, atMps: number, timeS: number): number {
 	const slowed = (fromMps: number, byS: number) => Math.max(lowMps, fromMps - byS * motion.acceleration(fromMps));
 	let speed = slowed(atMps, timeS);
 	let left = timeS - integrate(motion, speed, atMps).timeS;
-	for (let i = 0; i < newtonCap && Math.abs(left) > newtonEnd * timeS; i++) {
+	for (let i = 0; i < newtonCap; i++) {
 		const next = slowed(speed, left);
+		if (Math.abs(next - speed) <= newtonEnd * speed) break;
 		left -= integrateSliver(motion, next, speed).timeS;
 		speed = next;
 	}

@@ -10,6 +10,7 @@ function finish(timeS: number, shifts: number, limiterM = 0): Finish {
 		entered: Array.from({length: shifts}, () => ({...place, shiftMps: 51})),
 		heldFrom: limiterM > 0 ? place : undefined,
 		fullThrottleEnd: place,
+		shortlyBefore: undefined,
 		timeS,
 		limiterM,
 	};

@@ -1,6 +1,5 @@
 import fc from 'fast-check';
 import {describe, expect, test} from 'vitest';
-import type {GearMotion} from '../../source/drivetrain/gear-motion.ts';
 import {monotoneCubic} from '../../source/drivetrain/monotone-cubic.ts';
 import {RoadGears} from '../../source/drivetrain/road-gears.ts';
 import {shiftSpeedMps} from '../../source/drivetrain/shift-point.ts';

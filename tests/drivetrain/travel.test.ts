@@ -1,13 +1,6 @@
 import {describe, expect, test} from 'vitest';
 import {mileM, mphMps} from '../../source/drivetrain/constants.ts';
-import {
-	brakingDistanceM,
-	type Goal,
-	integrate,
-	type Motion,
-	speedBefore,
-	travel,
-} from '../../source/drivetrain/travel.ts';
+import {brakingDistanceM, type Goal, integrate, type Motion, travel} from '../../source/drivetrain/travel.ts';
 import {relativeError} from '../close.ts';
 
 // Recomputed closed forms for a mass m, drag k·V² and one simple force; each is worked out here in full and the printed
@@ -281,31 +274,5 @@ describe('where speeds and goals meet', () => {
 		const dip = motion(v => 0.01 - 0.3 * (v - 30) + (v - 30) ** 2, [0, 30, 40]);
 		const run = travel(dip, 30, over(5000));
 		expectClose(run.speedMps, 30 + (0.3 - Math.sqrt(0.09 - 0.04)) / 2);
-	});
-});
-
-describe('the speed some time before', () => {
-	test('on an even acceleration is the speed less a·t, and never below 0', () => {
-		const even = motion(() => 3, [0, 20, 60]);
-		expectClose(speedBefore(even, 40, 0.25), 39.25);
-		expectClose(speedBefore(even, 20.3, 0.25), 19.55);
-		expect(speedBefore(even, 40, 100)).toBe(0);
-		expect(speedBefore(even, 40, 0)).toBe(40);
-	});
-
-	test('is undone by the time between', () => {
-		const car = motion(v => (4000 - k * v * v) / m);
-		const before = speedBefore(car, 70, 4);
-		expectClose(travel(car, before, upTo(70)).timeS, 4);
-	});
-
-	test('of a car that gains none is 0', () => {
-		expect(
-			speedBefore(
-				motion(() => -1, [0, 60]),
-				40,
-				0.25,
-			),
-		).toBe(0);
 	});
 });
