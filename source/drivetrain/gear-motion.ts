@@ -8,6 +8,8 @@ import {engineRpm, growthReferenceMps, speedAtRpmMps} from './tire.ts';
 /** No car on wheels is faster: where every gear ends that no limiter and no growing tire ends before. */
 const fastestMps = 500;
 
+const none: readonly number[] = [];
+
 /** Kinks closer together than this are one. */
 const apartMps = 1e-9;
 
@@ -52,20 +54,28 @@ export class GearMotion {
 	}
 
 	/** The speeds between two neighboring images at which grip takes over from the engine or lets go, rising. */
-	gripCrossings(lowMps: number, highMps: number): number[] {
-		const surplus = (speedMps: number) => {
-			const {powered, held} = this.#bothSides(speedMps);
-			return powered - held;
-		};
+	gripCrossings(lowMps: number, highMps: number): readonly number[] {
+		const middleMps = (lowMps + highMps) / 2;
+		const low = this.#surplus(lowMps) < 0;
+		const middle = this.#surplus(middleMps) < 0;
+		const high = this.#surplus(highMps) < 0;
+		if (low === middle && middle === high) return none;
 		const crossings: number[] = [];
-		let [low, atLow] = [lowMps, surplus(lowMps)];
-		for (const high of [(lowMps + highMps) / 2, highMps]) {
-			const atHigh = surplus(high);
-			const crossing = atLow < 0 === atHigh < 0 ? undefined : brentRoot(surplus, low, high, crossingMps);
-			if (crossing !== undefined && crossing - low > apartMps && high - crossing > apartMps) crossings.push(crossing);
-			[low, atLow] = [high, atHigh];
-		}
+		if (low !== middle) this.#addCrossing(lowMps, middleMps, crossings);
+		if (middle !== high) this.#addCrossing(middleMps, highMps, crossings);
 		return crossings;
+	}
+
+	#addCrossing(lowMps: number, highMps: number, crossings: number[]): void {
+		const crossing = brentRoot(speedMps => this.#surplus(speedMps), lowMps, highMps, crossingMps);
+		if (crossing !== undefined && crossing - lowMps > apartMps && highMps - crossing > apartMps)
+			crossings.push(crossing);
+	}
+
+	/** By how much what the engine gives, as acceleration, is above what grip holds, m/s². */
+	#surplus(speedMps: number): number {
+		const {powered, held} = this.#bothSides(speedMps);
+		return powered - held;
 	}
 
 	/** Engine speed under full throttle at a road speed, rev/min. */

@@ -8,6 +8,7 @@ import {
 	brakingDistanceM,
 	cruise,
 	earlierBy,
+	endless,
 	evenly,
 	type Goal,
 	gentle,
@@ -21,8 +22,8 @@ import {
 	travel,
 } from './travel.ts';
 
-/** The cubic is nearly straight: regula falsi is there in two steps. */
-const guessSteps = 2;
+/** The cubic is nearly straight: regula falsi is there in three steps. */
+const guessSteps = 3;
 
 /** Newton squares its error: after a step this small, relatively, nothing is left. */
 const newtonLast = 1e-7;
@@ -48,7 +49,9 @@ export class GearTable {
 
 	/** As `travel(motion, fromMps, goal)`. */
 	travel(fromMps: number, goal: Goal): Travel {
-		let [speedMps, distanceM, timeS] = [fromMps, 0, 0];
+		let speedMps = fromMps;
+		let distanceM = 0;
+		let timeS = 0;
 		let cell = this.#cells.from(fromMps);
 		if (cell !== undefined && !this.#fits(cell, fromMps)) return travel(this.#motion, fromMps, goal);
 		const rising = cell !== undefined && gains(cell);
@@ -59,6 +62,7 @@ export class GearTable {
 			const far = farEnd(cell, speedMps, rising, goal);
 			if (holds(this.#motion, speedMps, far)) return cruise({speedMps, distanceM, timeS, why: 'end'}, room);
 			const stretch = this.#stretch(cell, speedMps, far);
+			if (stretch === endless) return this.#onPlainly({speedMps, distanceM, timeS}, goal);
 			if (distanceM + stretch.distanceM + brakingDistanceM(far, goal.braking) > goal.distanceM)
 				return this.#meet({speedMps, distanceM, timeS, why: 'end'}, far, stretch, goal);
 			distanceM += stretch.distanceM;
@@ -71,6 +75,12 @@ export class GearTable {
 		return {speedMps, distanceM, timeS, why: 'stopped'};
 	}
 
+	/** The rest of a run that comes to a speed at which the acceleration is 0 inside a cell. */
+	#onPlainly(here: Stretch & {speedMps: number}, goal: Goal): Travel {
+		const rest = travel(this.#motion, here.speedMps, {...goal, distanceM: goal.distanceM - here.distanceM});
+		return {...rest, distanceM: here.distanceM + rest.distanceM, timeS: here.timeS + rest.timeS};
+	}
+
 	/** Whether one quadrature serves from a speed inside the cell on; not so at a speed that the resistances just hold. */
 	#fits(cell: Cell, speedMps: number): boolean {
 		const here = this.#motion.acceleration(speedMps);
@@ -79,7 +89,8 @@ export class GearTable {
 
 	/** The speed at which the car was `timeS` seconds before it reached `atMps` gaining speed; 0 where it gains none. */
 	speedBefore(atMps: number, timeS: number): number {
-		let [speed, left] = [atMps, timeS];
+		let speed = atMps;
+		let left = timeS;
 		for (let cell = this.#cells.under(atMps); cell !== undefined; cell = this.#cells.below(cell)) {
 			const tookS = this.#stretch(cell, cell.lowMps, speed).timeS;
 			if (tookS < 0) return 0;
@@ -104,13 +115,12 @@ export class GearTable {
 
 	/** Newton's method from a guess that is nearly there; each step adds its own short integral. */
 	#meet(here: Travel, farMps: number, whole: Stretch, goal: Goal): Travel {
-		const [low, high] = here.speedMps < farMps ? [here.speedMps, farMps] : [farMps, here.speedMps];
-		const room = (speedMps: number, distanceM: number) =>
-			goal.distanceM - here.distanceM - distanceM - brakingDistanceM(speedMps, goal.braking);
+		const low = Math.min(here.speedMps, farMps);
+		const high = Math.max(here.speedMps, farMps);
 		let speed = this.#guess(here, farMps, whole, goal);
 		let {distanceM, timeS} = integrate(this.#motion, here.speedMps, speed);
 		for (let i = 0; i < newtonCap; i++) {
-			const left = room(speed, distanceM);
+			const left = roomM(here, distanceM, speed, goal);
 			const next = Math.min(high, Math.max(low, speed + left / this.#roomSlope(speed, goal)));
 			const change = Math.abs(next - speed);
 			if (change <= newtonEnd * speed) break;
@@ -128,37 +138,42 @@ export class GearTable {
 			why: 'end',
 			shortlyBefore: here,
 		};
-		return evenly(there, room(speed, distanceM));
+		return evenly(there, roomM(here, distanceM, speed, goal));
 	}
 
 	/**
 	 * Where the room would fall to 0 if V² ran over the distance as the cubic with the right values and slopes (2·a) at both
-	 * ends of the piece; where that leaves the piece's speeds, its ends. Braking adds to it in proportion to V².
+	 * ends of the piece. The piece's speeds are
+	 * not left. Braking adds to it in proportion to V².
 	 */
 	#guess(here: Travel, farMps: number, whole: Stretch, goal: Goal): number {
-		const lengthM = whole.distanceM;
-		const [squared, farSquared] = [here.speedMps ** 2, farMps ** 2];
-		const slope = 2 * lengthM * this.#motion.acceleration(here.speedMps);
-		const farSlope = 2 * lengthM * this.#motion.acceleration(farMps);
+		const squared = here.speedMps ** 2;
+		const farSquared = farMps ** 2;
+		const slope = 2 * whole.distanceM * this.#motion.acceleration(here.speedMps);
+		const farSlope = 2 * whole.distanceM * this.#motion.acceleration(farMps);
 		const bend = 3 * (farSquared - squared) - 2 * slope - farSlope;
 		const twist = 2 * (squared - farSquared) + slope + farSlope;
-		const [least, most] = squared < farSquared ? [squared, farSquared] : [farSquared, squared];
-		const squaredAt = (part: number) =>
-			Math.min(most, Math.max(least, squared + part * (slope + part * (bend + part * twist))));
-		const roomAt = (part: number) =>
-			goal.distanceM - here.distanceM - part * lengthM - brakingDistanceM(Math.sqrt(squaredAt(part)), goal.braking);
-		let [low, high] = [
-			{part: 0, room: roomAt(0)},
-			{part: 1, room: roomAt(1)},
-		];
+		const least = Math.min(squared, farSquared);
+		const most = Math.max(squared, farSquared);
+		let low = 0;
+		let lowRoom = roomM(here, 0, here.speedMps, goal);
+		let high = 1;
+		let highRoom = roomM(here, whole.distanceM, farMps, goal);
+		let speed = here.speedMps;
 		for (let i = 0; i < guessSteps; i++) {
-			const part = low.part + ((high.part - low.part) * low.room) / (low.room - high.room);
-			const middle = {part, room: roomAt(part)};
-			if (middle.room > 0) low = middle;
-			else high = middle;
+			const part = low + ((high - low) * lowRoom) / (lowRoom - highRoom);
+			const guess = squared + part * (slope + part * (bend + part * twist));
+			speed = Math.sqrt(Math.min(most, Math.max(least, guess)));
+			const room = roomM(here, part * whole.distanceM, speed, goal);
+			if (room > 0) {
+				low = part;
+				lowRoom = room;
+			} else {
+				high = part;
+				highRoom = room;
+			}
 		}
-		const part = low.part + ((high.part - low.part) * low.room) / (low.room - high.room);
-		return Math.sqrt(squaredAt(part));
+		return speed;
 	}
 
 	/** By how much the room shrinks for each m/s gained. */
@@ -174,4 +189,9 @@ function farEnd(cell: Cell, speedMps: number, rising: boolean, goal: Goal): numb
 	const entry = goal.braking?.entryMps ?? 0;
 	const edge = rising ? Math.min(cell.highMps, goal.toMps) : cell.lowMps;
 	return (entry > speedMps && entry < edge) || (entry < speedMps && entry > edge) ? entry : edge;
+}
+
+/** What is left of the distance before the brakes must go on, so far on from a place. */
+function roomM(here: Travel, furtherM: number, speedMps: number, goal: Goal): number {
+	return goal.distanceM - here.distanceM - furtherM - brakingDistanceM(speedMps, goal.braking);
 }

@@ -20,10 +20,12 @@ export type Finish = {
 	/** Where the limiter was met; undefined where it was not. */
 	readonly heldFrom: Place | undefined;
 	readonly fullThrottleEnd: Place;
-	/** A place in the last gear shortly before the end of full throttle; undefined where none is known. */
-	readonly shortlyBefore: {readonly speedMps: number; readonly distanceM: number} | undefined;
+	/** A place shortly before the end of full throttle, its distance since the last gear was entered; undefined where none is known. */
+	readonly shortlyBefore: Travel['shortlyBefore'] | undefined;
 	readonly timeS: number;
 	readonly limiterM: number;
+	/** On the limiter, or above the limit where the limiter stands higher. */
+	readonly pastTop: boolean;
 };
 
 export const atExit = (course: Course): Place => ({speedMps: course.exitMps, distanceM: 0, timeS: 0});
@@ -65,22 +67,22 @@ export function finished(
 		braking,
 	});
 	if (run.why === 'stopped') return undefined;
-	const reached = {
-		speedMps: run.speedMps,
-		distanceM: from.distanceM + run.distanceM,
-		timeS: from.timeS + run.timeS,
+	const speedMps = run.speedMps;
+	const distanceM = from.distanceM + run.distanceM;
+	const timeS = from.timeS + run.timeS;
+	const heldFrom = run.why === 'speed' ? {speedMps, distanceM, timeS} : undefined;
+	const limiterM = heldFrom === undefined ? 0 : roomM(course, heldFrom, braking);
+	const throttleS = timeS + limiterM / speedMps;
+	return {
+		firstGear,
+		entered,
+		heldFrom,
+		fullThrottleEnd: {speedMps, distanceM: distanceM + limiterM, timeS: throttleS},
+		shortlyBefore: run.shortlyBefore,
+		timeS: throttleS + brakingTimeS(speedMps, braking),
+		limiterM,
+		pastTop: limiterM > 0 || speedMps > gears.topMps(gear) * (1 + Number.EPSILON),
 	};
-	const heldFrom = run.why === 'speed' ? reached : undefined;
-	const limiterM = heldFrom === undefined ? 0 : roomM(course, reached, braking);
-	const fullThrottleEnd = {
-		...reached,
-		distanceM: reached.distanceM + limiterM,
-		timeS: reached.timeS + limiterM / reached.speedMps,
-	};
-	const timeS = fullThrottleEnd.timeS + brakingTimeS(fullThrottleEnd.speedMps, braking);
-	const before = run.shortlyBefore;
-	const shortlyBefore = before && {...before, distanceM: from.distanceM + before.distanceM};
-	return {firstGear, entered, heldFrom, fullThrottleEnd, shortlyBefore, timeS, limiterM};
 }
 
 /** The whole story of a sequence that reached the end. */

@@ -74,38 +74,49 @@ export class SpeedCells {
 
 	/** At the kinks first, and then until the acceleration changes little over each cell. */
 	#cut(between: number, lowMps: number, highMps: number): readonly Cell[] {
-		const mark = (speedMps: number): Mark => ({speedMps, mps2: this.#motion.acceleration(speedMps)});
-		const marks = [mark(lowMps)];
-		for (const kink of this.#motion.gripCrossings(lowMps, highMps)) cutSmooth(this.#motion, mark(kink), marks);
-		cutSmooth(this.#motion, mark(highMps), marks);
-		const cells: Cell[] = [];
-		for (let place = 0; place < marks.length - 1; place++) {
-			const [low, high] = [marks[place]!, marks[place + 1]!];
-			cells.push({
-				lowMps: low.speedMps,
-				highMps: high.speedMps,
-				lowMps2: low.mps2,
-				highMps2: high.mps2,
-				between,
-				place,
-				stretch: undefined,
-			});
-		}
-		return cells;
+		const low = markAt(this.#motion, lowMps);
+		const high = markAt(this.#motion, highMps);
+		const kinks = this.#motion.gripCrossings(lowMps, highMps);
+		if (kinks.length === 0 && smooth(this.#motion, low, high)) return [cellBetween(low, high, between, 0)];
+		const marks = [low];
+		for (const kink of kinks) cutSmooth(this.#motion, markAt(this.#motion, kink), marks);
+		cutSmooth(this.#motion, high, marks);
+		return marks.slice(1).map((mark, place) => cellBetween(marks[place]!, mark, between, place));
 	}
+}
+
+function cellBetween(low: Mark, high: Mark, between: number, place: number): Cell {
+	return {
+		lowMps: low.speedMps,
+		highMps: high.speedMps,
+		lowMps2: low.mps2,
+		highMps2: high.mps2,
+		between,
+		place,
+		stretch: undefined,
+	};
 }
 
 /** A speed and the acceleration there. */
 type Mark = {readonly speedMps: number; readonly mps2: number};
 
+function markAt(motion: GearMotion, speedMps: number): Mark {
+	return {speedMps, mps2: motion.acceleration(speedMps)};
+}
+
 /** Below this speed nothing is cut any more. */
 const standstillMps = 1e-9;
 
-/** Adds the marks up to `high` to a piece without kinks; one with a zero of the acceleration in it is cut there first. */
+/** Whether one cell will do for a piece without kinks. */
+function smooth(motion: GearMotion, low: Mark, high: Mark): boolean {
+	const middle = motion.acceleration((low.speedMps + high.speedMps) / 2);
+	return gentle(low.mps2, middle, high.mps2);
+}
+
+/** Adds the marks up to `high` of a piece without kinks; one with a zero of the acceleration in it is cut there first. */
 function cutSmooth(motion: GearMotion, high: Mark, marks: Mark[]): void {
 	const low = marks.at(-1)!;
-	const middle = motion.acceleration((low.speedMps + high.speedMps) / 2);
-	if (gentle(low.mps2, middle, high.mps2)) {
+	if (smooth(motion, low, high)) {
 		marks.push(high);
 		return;
 	}
@@ -118,8 +129,7 @@ function cutSmooth(motion: GearMotion, high: Mark, marks: Mark[]): void {
 }
 
 function halve(motion: GearMotion, low: Mark, high: Mark, marks: Mark[]): void {
-	const speedMps = (low.speedMps + high.speedMps) / 2;
-	const middle = {speedMps, mps2: motion.acceleration(speedMps)};
+	const middle = markAt(motion, (low.speedMps + high.speedMps) / 2);
 	const tiny = high.speedMps - low.speedMps <= settled * high.speedMps || high.speedMps <= standstillMps;
 	if (tiny || gentle(low.mps2, middle.mps2, high.mps2)) {
 		marks.push(high);

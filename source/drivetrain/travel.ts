@@ -70,25 +70,42 @@ export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
 		if (here.speedMps <= 0 && !rising) return {...here, why: 'stopped'};
 		if (roomM(here, goal) <= 0) return here;
 		const bound = pieceEnd(motion, here.speedMps, rising, goal);
-		const end = gentleEnd(motion, here.speedMps, bound);
-		if (holds(motion, here.speedMps, end)) return cruise(here, roomM(here, goal));
-		const stretch = integrate(motion, here.speedMps, end);
+		const next = nextPiece(motion, here.speedMps, bound);
+		if (next === undefined) return cruise(here, roomM(here, goal));
 		const there: Travel = {
-			speedMps: end,
-			distanceM: here.distanceM + stretch.distanceM,
-			timeS: here.timeS + stretch.timeS,
+			speedMps: next.endMps,
+			distanceM: here.distanceM + next.distanceM,
+			timeS: here.timeS + next.timeS,
 			why: 'end',
 		};
-		if (roomM(there, goal) < 0) return meet(motion, here, end, goal);
+		if (roomM(there, goal) < 0) return meet(motion, here, next.endMps, goal);
 		here = there;
 	}
 }
 
-/** Distance and time over which the acceleration, of one sign, takes the car from one speed to another inside a piece. */
+/** The piece from a speed toward another, shortened until it can be integrated; undefined where the car holds its speed. */
+function nextPiece(motion: Motion, fromMps: number, boundMps: number): (Stretch & {endMps: number}) | undefined {
+	let endMps = gentleEnd(motion, fromMps, boundMps);
+	while (!holds(motion, fromMps, endMps)) {
+		const stretch = integrate(motion, fromMps, endMps);
+		if (stretch !== endless) return {...stretch, endMps};
+		endMps = gentleEnd(motion, fromMps, (fromMps + endMps) / 2);
+	}
+	return undefined;
+}
+
+/** What it takes to get past a speed at which the acceleration is 0. */
+export const endless: Stretch = {distanceM: Number.POSITIVE_INFINITY, timeS: Number.POSITIVE_INFINITY};
+
+/** Distance and time over which the acceleration, of one sign, takes the car from one speed to another inside a piece; `endless` where it is seen to change sign. */
 export function integrate(motion: Motion, fromMps: number, toMps: number, halvings = mostHalvings): Stretch {
 	const {nodes, weights, lastCoefficient, nextToLastCoefficient} = piece;
-	const [middle, half] = [(fromMps + toMps) / 2, (toMps - fromMps) / 2];
-	let [distanceM, timeS, last, nextToLast] = [0, 0, 0, 0];
+	const middle = (fromMps + toMps) / 2;
+	const half = (toMps - fromMps) / 2;
+	let distanceM = 0;
+	let timeS = 0;
+	let last = 0;
+	let nextToLast = 0;
 	for (let i = 0; i < nodes.length; i++) {
 		const speed = middle + half * nodes[i]!;
 		const slowness = 1 / motion.acceleration(speed);
@@ -98,18 +115,28 @@ export function integrate(motion: Motion, fromMps: number, toMps: number, halvin
 		nextToLast += nextToLastCoefficient[i]! * slowness;
 	}
 	if (halvings > 0 && Math.abs(last) + Math.abs(nextToLast) > (smooth / 2) * Math.abs(timeS)) {
+		if (changesSign(motion, middle, half)) return endless;
 		const one = integrate(motion, fromMps, middle, halvings - 1);
 		const other = integrate(motion, middle, toMps, halvings - 1);
+		if (one === endless || other === endless) return endless;
 		return {distanceM: one.distanceM + other.distanceM, timeS: one.timeS + other.timeS};
 	}
 	return {distanceM: distanceM * half, timeS: timeS * half};
 }
 
+/** Whether the acceleration differs in sign among the nodes of a piece. */
+function changesSign(motion: Motion, middleMps: number, halfMps: number): boolean {
+	const positive = motion.acceleration(middleMps) > 0;
+	return piece.nodes.some(node => motion.acceleration(middleMps + halfMps * node) > 0 !== positive);
+}
+
 /** The same over a small part of a piece. */
 export function integrateSliver(motion: Motion, fromMps: number, toMps: number): Stretch {
 	const {nodes, weights} = sliver;
-	const [middle, half] = [(fromMps + toMps) / 2, (toMps - fromMps) / 2];
-	let [distanceM, timeS] = [0, 0];
+	const middle = (fromMps + toMps) / 2;
+	const half = (toMps - fromMps) / 2;
+	let distanceM = 0;
+	let timeS = 0;
 	for (let i = 0; i < nodes.length; i++) {
 		const speed = middle + half * nodes[i]!;
 		const weight = weights[i]! / motion.acceleration(speed);

@@ -58,7 +58,10 @@ describe('arithmetic', () => {
 				fc.pre(text.length < 190);
 				const oracle = evaluate(text) as number;
 				const reading = quantityOf(`${text} m`, 'length');
-				if (!Number.isFinite(oracle)) return expect(reading.ok).toBe(false);
+				if (!Number.isFinite(oracle)) {
+					expect(reading.ok).toBe(false);
+					return;
+				}
 				expect(Math.abs(value(reading) - oracle)).toBeLessThanOrEqual(1e-12 * Math.max(1, Math.abs(oracle)));
 			}),
 			{numRuns: runs(300, 10_000)},

@@ -85,7 +85,7 @@ test('a full track is read to SI', async () => {
 });
 
 test('an altimeter setting with its elevation becomes station pressure', async () => {
-	// ISO 2533 at 1000 m: 89874.57 Pa (recomputed, published-checks 3a); a setting of 101325 Pa is the standard day.
+	// ISO 2533 at 1000 m: 89874.57 Pa (recomputed); a setting of 101325 Pa is the standard day.
 	const {air, situations} = await track({
 		air: {altimeter: '1013.25 hPa', elevation: '1000 m'},
 		situations: [

@@ -10,7 +10,7 @@ const si = (number: number, spelling: string, dimension: Dimension) => {
 const expectRelative = (value: number, wanted: number, tolerance: number) =>
 	expect(Math.abs(value / wanted - 1), `${value} against ${wanted}`).toBeLessThanOrEqual(tolerance);
 
-// published-checks, section 0: recomputed (GNU units 2.22 and definitions), exact unless a digit string is longer than the tolerance.
+// Recomputed (GNU units 2.22 and the definitions), exact unless a digit string is longer than the tolerance.
 test.each<[number, string, Dimension, number]>([
 	[1, 'mi', 'length', 1609.344],
 	[5280, 'ft', 'length', 1609.344],
@@ -37,7 +37,7 @@ test.each<[number, string, Dimension, number]>([
 });
 
 test('an inch of mercury is the conventional 3386.389 Pa', () => {
-	// published-checks, section 0: recomputed; GNU units prints 3386.38864.
+	// Recomputed; GNU units prints 3386.38864.
 	expectRelative(si(1, 'inHg', 'pressure'), 3386.38864, 2e-7);
 });
 

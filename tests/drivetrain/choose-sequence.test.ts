@@ -13,6 +13,7 @@ function finish(timeS: number, shifts: number, limiterM = 0): Finish {
 		shortlyBefore: undefined,
 		timeS,
 		limiterM,
+		pastTop: limiterM > 0,
 	};
 }
 
