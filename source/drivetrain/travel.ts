@@ -51,6 +51,9 @@ const mostHalvings = 10;
 /** A piece is halved until the acceleration at its end is within this factor of that at its start. */
 const steepest = 0.4;
 
+/** An acceleration that is nothing but rounding: in an hour it would change the speed by less than 1e-9 m/s. */
+const stillMps2 = 1e-13;
+
 /** This close to a speed at which the acceleration is 0, relatively, the car is taken to stay at it. */
 export const settled = 1e-13;
 
@@ -67,21 +70,34 @@ export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
 		if (here.speedMps <= 0 && !rising) return {...here, why: 'stopped'};
 		if (roomM(here, goal) <= 0) return here;
 		const bound = pieceEnd(motion, here.speedMps, rising, goal);
-		const end = gentleEnd(motion, here.speedMps, bound);
-		if (holds(motion, here.speedMps, end)) return cruise(here, roomM(here, goal));
-		const stretch = integrate(motion, here.speedMps, end);
+		const next = nextPiece(motion, here.speedMps, bound);
+		if (next === undefined) return cruise(here, roomM(here, goal));
 		const there: Travel = {
-			speedMps: end,
-			distanceM: here.distanceM + stretch.distanceM,
-			timeS: here.timeS + stretch.timeS,
+			speedMps: next.endMps,
+			distanceM: here.distanceM + next.distanceM,
+			timeS: here.timeS + next.timeS,
 			why: 'end',
 		};
-		if (roomM(there, goal) < 0) return meet(motion, here, end, goal);
+		if (roomM(there, goal) < 0) return meet(motion, here, next.endMps, goal);
 		here = there;
 	}
 }
 
-/** Distance and time over which the acceleration, of one sign, takes the car from one speed to another inside a piece. */
+/** The piece from a speed toward another, shortened until it can be integrated; undefined where the car holds its speed. */
+function nextPiece(motion: Motion, fromMps: number, boundMps: number): (Stretch & {endMps: number}) | undefined {
+	let endMps = gentleEnd(motion, fromMps, boundMps);
+	while (!holds(motion, fromMps, endMps)) {
+		const stretch = integrate(motion, fromMps, endMps);
+		if (stretch !== endless) return {...stretch, endMps};
+		endMps = gentleEnd(motion, fromMps, (fromMps + endMps) / 2);
+	}
+	return undefined;
+}
+
+/** What it takes to get past a speed at which the acceleration is 0. */
+export const endless: Stretch = {distanceM: Number.POSITIVE_INFINITY, timeS: Number.POSITIVE_INFINITY};
+
+/** Distance and time over which the acceleration, of one sign, takes the car from one speed to another inside a piece; `endless` where it is seen to change sign. */
 export function integrate(motion: Motion, fromMps: number, toMps: number, halvings = mostHalvings): Stretch {
 	const {nodes, weights, lastCoefficient, nextToLastCoefficient} = piece;
 	const middle = (fromMps + toMps) / 2;
@@ -99,11 +115,19 @@ export function integrate(motion: Motion, fromMps: number, toMps: number, halvin
 		nextToLast += nextToLastCoefficient[i]! * slowness;
 	}
 	if (halvings > 0 && Math.abs(last) + Math.abs(nextToLast) > (smooth / 2) * Math.abs(timeS)) {
+		if (changesSign(motion, middle, half)) return endless;
 		const one = integrate(motion, fromMps, middle, halvings - 1);
 		const other = integrate(motion, middle, toMps, halvings - 1);
+		if (one === endless || other === endless) return endless;
 		return {distanceM: one.distanceM + other.distanceM, timeS: one.timeS + other.timeS};
 	}
 	return {distanceM: distanceM * half, timeS: timeS * half};
+}
+
+/** Whether the acceleration differs in sign among the nodes of a piece. */
+function changesSign(motion: Motion, middleMps: number, halfMps: number): boolean {
+	const positive = motion.acceleration(middleMps) > 0;
+	return piece.nodes.some(node => motion.acceleration(middleMps + halfMps * node) > 0 !== positive);
 }
 
 /** The same over a small part of a piece. */
@@ -181,7 +205,7 @@ function gentleEnd(motion: Motion, fromMps: number, boundMps: number): number {
  */
 export function gentle(start: number, middle: number, end: number): boolean {
 	const ratio = end / start;
-	return middle / start > 0 && ratio >= steepest && ratio <= 1 / steepest;
+	return Math.abs(start) > stillMps2 && middle / start > 0 && ratio >= steepest && ratio <= 1 / steepest;
 }
 
 /** Whether the way to the next speed is no way at all and the acceleration falls to 0 on it; a kink or a goal so near is passed. */

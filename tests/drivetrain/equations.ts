@@ -69,12 +69,12 @@ export function accelerationIn(vehicle: Vehicle, train: GearTrain, course: Cours
 export const accelerationOut = (vehicle: Vehicle, course: Course, v: number) =>
 	-resistance(vehicle, course, v) / spun(vehicle, vehicle.wheelInertiaKgM2, v);
 
-/** Steps dV/dt = a(V), ds/dt = V for a time, to about 1e-11. */
-export function stepped(acceleration: (v: number) => number, from: State, timeS: number): State {
+/** Steps dV/dt = a(V), ds/dt = V for a time. */
+export function stepped(acceleration: (v: number) => number, from: State, timeS: number, tolerance = 1e-13): State {
 	if (timeS === 0) return from;
 	const solver = new Solver(2);
-	solver.absoluteTolerance = 1e-11;
-	solver.relativeTolerance = 1e-11;
+	solver.absoluteTolerance = tolerance;
+	solver.relativeTolerance = tolerance;
 	solver.maxSteps = 100_000;
 	const {y} = solver.solve((_, [v]) => [acceleration(v!), v!], 0, [from.speedMps, from.distanceM], timeS);
 	return {speedMps: y[0]!, distanceM: y[1]!};

@@ -207,6 +207,23 @@ describe('shifts', () => {
 		expect(relativeError(travel(gears.motion(2), lightMps, goal).timeS, 0.25)).toBeLessThan(1e-9);
 	});
 
+	test('the speed some time before is undone by the time between; below 0 there is none', () => {
+		const gears = gearsFor(shifting);
+		for (const [gear, atMps, beforeS] of [
+			[3, 50, 4],
+			[3, 30, 0.01],
+			[5, 75, 20],
+		] as const) {
+			const before = gears.table(gear).speedBefore(atMps, beforeS);
+			const goal = {distanceM: 1e5, toMps: atMps, braking: undefined};
+			expect(relativeError(travel(gears.motion(gear), before, goal).timeS, beforeS)).toBeLessThan(1e-9);
+		}
+		expect(gears.table(3).speedBefore(50, 0)).toBe(50);
+		expect(gears.table(3).speedBefore(50, 1000)).toBe(0);
+		const uphill = gearsFor({...shifting, grade: 0.5});
+		expect(uphill.table(5).speedBefore(50, 0.25)).toBe(0);
+	});
+
 	test('between two like gears is possible and gains nothing', () => {
 		const twins = trainOf([5.9, 5.9]);
 		const course = sampleCourse({exitMps: 35, lengthM: 300, highestGear: 2});
