@@ -11,6 +11,17 @@ export type Request = {
 	pair?: {driving: number; driven: number};
 	gearbox?: string;
 	prefer?: string;
+	name?: string;
+	from?: string;
+	notes?: string;
+	replace?: boolean;
+	shipped?: boolean;
+	add?: boolean;
+	date?: string;
+	session?: string;
+	rpm?: number;
+	at?: string;
+	remark?: string;
 	json: boolean;
 	units: UnitSystem;
 	strict: boolean;
@@ -22,19 +33,37 @@ export type Given = Partial<Record<OptionName, string | true>>;
 
 const pairPattern = /^\s*(\d{1,4})\s*\/\s*(\d{1,4})\s*$/;
 
+/** Options that are taken as they were written. */
+const texts = [
+	'car',
+	'situation',
+	'gearbox',
+	'prefer',
+	'name',
+	'from',
+	'notes',
+	'date',
+	'session',
+	'at',
+	'remark',
+] as const satisfies OptionName[];
+
+const switchesOf = (given: Given) => ({
+	json: given.json === true,
+	strict: given.strict === true,
+	ascii: given.ascii === true,
+	...(given.replace && {replace: true}),
+	...(given.shipped && {shipped: true}),
+	...(given.add && {add: true}),
+});
+
 /** The request that the options make, or what is wrong with a value. */
 export const toRequest = (argument: string | undefined, given: Given): Request | string => {
-	const text = (name: OptionName) => (typeof given[name] === 'string' ? {[name]: given[name]} : {});
 	const request: Request = {
 		argument,
-		json: given.json === true,
 		units: 'us',
-		strict: given.strict === true,
-		ascii: given.ascii === true,
-		...text('car'),
-		...text('situation'),
-		...text('gearbox'),
-		...text('prefer'),
+		...switchesOf(given),
+		...Object.fromEntries(texts.flatMap(name => (typeof given[name] === 'string' ? [[name, given[name]]] : []))),
 	};
 	if (given.units === 'metric') request.units = 'metric';
 	else if (given.units !== undefined && given.units !== 'us') return `--units is us or metric, found ${given.units}.`;
@@ -47,6 +76,16 @@ export const toRequest = (argument: string | undefined, given: Given): Request |
 		if (!Number(driving) || !Number(driven)) return `--pair is driving/driven, such as 33/38, found ${given.pair}.`;
 		request.pair = {driving: Number(driving), driven: Number(driven)};
 	}
+	if (typeof given.rpm === 'string') {
+		if (!/^[1-9]\d{2,4}$/.test(given.rpm)) return `--rpm is a whole number from 100 to 99999, found ${given.rpm}.`;
+		request.rpm = Number(given.rpm);
+	}
+	if (request.date !== undefined && !isDay(request.date))
+		return `--date is a day such as 2026-05-31, found ${request.date}.`;
 	if (argument === '-' && request.car === '-') return 'only one of TRACK and --car can be standard input.';
 	return request;
 };
+
+/** A day of the calendar, written as in ISO 8601. */
+const isDay = (text: string): boolean =>
+	/^\d{4}-\d\d-\d\d$/.test(text) && new Date(`${text}T00:00:00Z`).toJSON()?.startsWith(text) === true;

@@ -16,6 +16,14 @@ const apartMps = 1e-9;
 /** Both sides meet at a crossing, so an integral split this far beside it is off by no more than the square of this. */
 const crossingMps = 1e-7;
 
+/** A speed, and the acceleration there. */
+export type Mark = {
+	readonly speedMps: number;
+	readonly mps2: number;
+	/** Whether grip is what bounds it. */
+	readonly gripHolds: boolean;
+};
+
 export class GearMotion {
 	/** Speed at the limiter: thrust ends above it. The fastest that there is where it is never reached. */
 	readonly limiterMps: number;
@@ -70,6 +78,12 @@ export class GearMotion {
 		const crossing = brentRoot(speedMps => this.#surplus(speedMps), lowMps, highMps, crossingMps);
 		if (crossing !== undefined && crossing - lowMps > apartMps && highMps - crossing > apartMps)
 			crossings.push(crossing);
+	}
+
+	/** The acceleration at a speed, and what bounds it. */
+	mark(speedMps: number): Mark {
+		const {powered, held} = this.#bothSides(speedMps);
+		return {speedMps, mps2: Math.min(powered, held), gripHolds: held < powered};
 	}
 
 	/** By how much what the engine gives, as acceleration, is above what grip holds, m/s². */

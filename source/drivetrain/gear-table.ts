@@ -8,8 +8,10 @@ import {
 	brakingDistanceM,
 	cruise,
 	earlierBy,
+	endless,
 	evenly,
 	type Goal,
+	gentle,
 	holds,
 	integrate,
 	integrateSliver,
@@ -17,6 +19,7 @@ import {
 	newtonEnd,
 	type Stretch,
 	type Travel,
+	travel,
 } from './travel.ts';
 
 /** The cubic is nearly straight: regula falsi is there in three steps. */
@@ -49,15 +52,17 @@ export class GearTable {
 		let speedMps = fromMps;
 		let distanceM = 0;
 		let timeS = 0;
-		if (speedMps >= goal.toMps) return {speedMps, distanceM, timeS, why: 'speed'};
 		let cell = this.#cells.from(fromMps);
+		if (cell !== undefined && !this.#fits(cell, fromMps)) return travel(this.#motion, fromMps, goal);
 		const rising = cell !== undefined && gains(cell);
+		if (rising && speedMps >= goal.toMps) return {speedMps, distanceM, timeS, why: 'speed'};
 		while (cell !== undefined) {
 			const room = goal.distanceM - distanceM - brakingDistanceM(speedMps, goal.braking);
 			if (room <= 0) return {speedMps, distanceM, timeS, why: 'end'};
 			const far = farEnd(cell, speedMps, rising, goal);
 			if (holds(this.#motion, speedMps, far)) return cruise({speedMps, distanceM, timeS, why: 'end'}, room);
 			const stretch = this.#stretch(cell, speedMps, far);
+			if (stretch === endless) return this.#onPlainly({speedMps, distanceM, timeS}, goal);
 			if (distanceM + stretch.distanceM + brakingDistanceM(far, goal.braking) > goal.distanceM)
 				return this.#meet({speedMps, distanceM, timeS, why: 'end'}, far, stretch, goal);
 			distanceM += stretch.distanceM;
@@ -68,6 +73,18 @@ export class GearTable {
 			else if (!rising && far === cell.lowMps) cell = this.#cells.below(cell);
 		}
 		return {speedMps, distanceM, timeS, why: 'stopped'};
+	}
+
+	/** The rest of a run that comes to a speed at which the acceleration is 0 inside a cell. */
+	#onPlainly(here: Stretch & {speedMps: number}, goal: Goal): Travel {
+		const rest = travel(this.#motion, here.speedMps, {...goal, distanceM: goal.distanceM - here.distanceM});
+		return {...rest, distanceM: here.distanceM + rest.distanceM, timeS: here.timeS + rest.timeS};
+	}
+
+	/** Whether one quadrature serves from a speed inside the cell on; not so at a speed that the resistances just hold. */
+	#fits(cell: Cell, speedMps: number): boolean {
+		const here = this.#motion.acceleration(speedMps);
+		return gentle(here, here, gains(cell) ? cell.highMps2 : cell.lowMps2);
 	}
 
 	/** The speed at which the car was `timeS` seconds before it reached `atMps` gaining speed; 0 where it gains none. */
@@ -126,7 +143,8 @@ export class GearTable {
 
 	/**
 	 * Where the room would fall to 0 if V² ran over the distance as the cubic with the right values and slopes (2·a) at both
-	 * ends of the piece. Braking adds to it in proportion to V².
+	 * ends of the piece. The piece's speeds are
+	 * not left. Braking adds to it in proportion to V².
 	 */
 	#guess(here: Travel, farMps: number, whole: Stretch, goal: Goal): number {
 		const squared = here.speedMps ** 2;
@@ -135,6 +153,8 @@ export class GearTable {
 		const farSlope = 2 * whole.distanceM * this.#motion.acceleration(farMps);
 		const bend = 3 * (farSquared - squared) - 2 * slope - farSlope;
 		const twist = 2 * (squared - farSquared) + slope + farSlope;
+		const least = Math.min(squared, farSquared);
+		const most = Math.max(squared, farSquared);
 		let low = 0;
 		let lowRoom = roomM(here, 0, here.speedMps, goal);
 		let high = 1;
@@ -142,7 +162,8 @@ export class GearTable {
 		let speed = here.speedMps;
 		for (let i = 0; i < guessSteps; i++) {
 			const part = low + ((high - low) * lowRoom) / (lowRoom - highRoom);
-			speed = Math.sqrt(squared + part * (slope + part * (bend + part * twist)));
+			const guess = squared + part * (slope + part * (bend + part * twist));
+			speed = Math.sqrt(Math.min(most, Math.max(least, guess)));
 			const room = roomM(here, part * whole.distanceM, speed, goal);
 			if (room > 0) {
 				low = part;

@@ -3,6 +3,7 @@ import {type Coast, coast} from './coast.ts';
 import {type Road, type RoadForces, roadForces} from './forces.ts';
 import {GearMotion} from './gear-motion.ts';
 import {GearTable} from './gear-table.ts';
+import {mostMps2, peakTorqueNm} from './least-time.ts';
 import {shiftSpeedMps} from './shift-point.ts';
 import type {GearTrain, Vehicle} from './straight.ts';
 import {speedAtRpmMps} from './tire.ts';
@@ -25,6 +26,7 @@ export class RoadGears {
 	readonly #tables: GearTable[] = [];
 	readonly #shifts: PlannedShift[] = [];
 	readonly #lights: number[] = [];
+	#peakTorqueNm: number | undefined;
 
 	constructor(vehicle: Vehicle, train: GearTrain, road: Road) {
 		this.vehicle = vehicle;
@@ -56,6 +58,13 @@ export class RoadGears {
 	/** The speed in a gear above which no shift is planned. */
 	capMps(gear: number): number {
 		return this.#speedAt(gear, this.vehicle.shiftCapRpm);
+	}
+
+	/** A bound above the acceleration in a gear from a speed up. */
+	mostMps2(gear: number, fromMps: number): number {
+		this.#peakTorqueNm ??= peakTorqueNm(this.vehicle);
+		const wheelTorqueNm = this.#peakTorqueNm * this.train.efficiency[gear - 1]! * this.train.overall[gear - 1]!;
+		return mostMps2(this.vehicle, this.forces, wheelTorqueNm, fromMps);
 	}
 
 	/** The shift from a gear to the next. */

@@ -1,4 +1,5 @@
 /** Every sequence that can be driven, at a fraction of the work: shared ways, kept integrals, and none that cannot matter. */
+import {leastTimeS} from './least-time.ts';
 import type {RoadGears} from './road-gears.ts';
 import {atExit, brakingOf, type Carry, type Entry, type Finish, finished, type Place, shifted} from './sequence.ts';
 import type {Course} from './straight.ts';
@@ -31,6 +32,7 @@ class SharedSequences {
 	}
 
 	addFrom(first: number): void {
+		if (this.#leastFromStartS(first) > this.#boundS) return;
 		let entered: readonly Entry[] = [];
 		let from = atExit(this.#course);
 		for (let gear = first; ; gear++) {
@@ -41,6 +43,15 @@ class SharedSequences {
 			entered = [...entered, next];
 			from = next;
 		}
+	}
+
+	/** A bound below the time of every sequence from a gear. */
+	#leastFromStartS(first: number): number {
+		if (this.#boundS === Number.POSITIVE_INFINITY) return 0;
+		const {exitMps, lengthM, highestGear} = this.#course;
+		let most = 0;
+		for (let gear = first; gear <= highestGear; gear++) most = Math.max(most, this.#gears.mostMps2(gear, exitMps));
+		return leastTimeS(lengthM, exitMps, most);
 	}
 
 	readonly #carry: Carry = (gear, fromMps, goal) => this.#gears.table(gear).travel(fromMps, goal);

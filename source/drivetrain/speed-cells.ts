@@ -2,7 +2,7 @@
  * The speeds of a gear, cut into cells over each of which one quadrature is exact enough. Cut where a run first comes by:
  * most runs see a small part of a gear's speeds.
  */
-import type {GearMotion} from './gear-motion.ts';
+import type {GearMotion, Mark} from './gear-motion.ts';
 import {cellOf} from './monotone-cubic.ts';
 import {balancedBefore, gentle, integrate, type Stretch, settled} from './travel.ts';
 
@@ -27,6 +27,7 @@ export function gains({lowMps2, highMps2}: Cell): boolean {
 export class SpeedCells {
 	readonly #motion: GearMotion;
 	readonly #cells: (readonly Cell[])[] = [];
+	readonly #marks: Mark[] = [];
 
 	constructor(motion: GearMotion) {
 		this.#motion = motion;
@@ -68,20 +69,28 @@ export class SpeedCells {
 	#cellsBetween(between: number): readonly Cell[] {
 		const {images} = this.#motion;
 		if (between < 0 || between >= images.length - 1) return [];
-		this.#cells[between] ??= this.#cut(between, images[between]!, images[between + 1]!);
+		this.#cells[between] ??= this.#cut(between);
 		return this.#cells[between];
 	}
 
 	/** At the kinks first, and then until the acceleration changes little over each cell. */
-	#cut(between: number, lowMps: number, highMps: number): readonly Cell[] {
-		const low = markAt(this.#motion, lowMps);
-		const high = markAt(this.#motion, highMps);
-		const kinks = this.#motion.gripCrossings(lowMps, highMps);
-		if (kinks.length === 0 && smooth(this.#motion, low, high)) return [cellBetween(low, high, between, 0)];
+	#cut(between: number): readonly Cell[] {
+		const low = this.#markAt(between);
+		const high = this.#markAt(between + 1);
+		const middle = this.#motion.mark((low.speedMps + high.speedMps) / 2);
+		const kinked = low.gripHolds !== middle.gripHolds || middle.gripHolds !== high.gripHolds;
+		if (!kinked && gentle(low.mps2, middle.mps2, high.mps2)) return [cellBetween(low, high, between, 0)];
 		const marks = [low];
-		for (const kink of kinks) cutSmooth(this.#motion, markAt(this.#motion, kink), marks);
+		const kinks = kinked ? this.#motion.gripCrossings(low.speedMps, high.speedMps) : [];
+		for (const kink of kinks) cutSmooth(this.#motion, this.#motion.mark(kink), marks);
 		cutSmooth(this.#motion, high, marks);
 		return marks.slice(1).map((mark, place) => cellBetween(marks[place]!, mark, between, place));
+	}
+
+	/** At an image, for the cells on both its sides. */
+	#markAt(image: number): Mark {
+		this.#marks[image] ??= this.#motion.mark(this.#motion.images[image]!);
+		return this.#marks[image];
 	}
 }
 
@@ -97,44 +106,32 @@ function cellBetween(low: Mark, high: Mark, between: number, place: number): Cel
 	};
 }
 
-/** A speed and the acceleration there. */
-type Mark = {readonly speedMps: number; readonly mps2: number};
-
-function markAt(motion: GearMotion, speedMps: number): Mark {
-	return {speedMps, mps2: motion.acceleration(speedMps)};
-}
-
 /** Below this speed nothing is cut any more. */
 const standstillMps = 1e-9;
-
-/** Whether one cell will do for a piece without kinks. */
-function smooth(motion: GearMotion, low: Mark, high: Mark): boolean {
-	const middle = motion.acceleration((low.speedMps + high.speedMps) / 2);
-	return gentle(low.mps2, middle) && gentle(middle, high.mps2);
-}
 
 /** Adds the marks up to `high` of a piece without kinks; one with a zero of the acceleration in it is cut there first. */
 function cutSmooth(motion: GearMotion, high: Mark, marks: Mark[]): void {
 	const low = marks.at(-1)!;
-	if (smooth(motion, low, high)) {
+	const middle = motion.acceleration((low.speedMps + high.speedMps) / 2);
+	if (gentle(low.mps2, middle, high.mps2)) {
 		marks.push(high);
 		return;
 	}
 	const zero = balancedBefore(motion, low.speedMps, high.speedMps);
 	if (zero !== undefined && zero > low.speedMps && zero < high.speedMps) {
-		const balanced = {speedMps: zero, mps2: 0};
+		const balanced = {...low, speedMps: zero, mps2: 0};
 		halve(motion, low, balanced, marks);
 		halve(motion, balanced, high, marks);
 	} else halve(motion, low, high, marks);
 }
 
 function halve(motion: GearMotion, low: Mark, high: Mark, marks: Mark[]): void {
+	const middle = motion.mark((low.speedMps + high.speedMps) / 2);
 	const tiny = high.speedMps - low.speedMps <= settled * high.speedMps || high.speedMps <= standstillMps;
-	if (tiny || gentle(low.mps2, high.mps2)) {
+	if (tiny || gentle(low.mps2, middle.mps2, high.mps2)) {
 		marks.push(high);
 		return;
 	}
-	const middle = markAt(motion, (low.speedMps + high.speedMps) / 2);
 	halve(motion, low, middle, marks);
 	halve(motion, middle, high, marks);
 }

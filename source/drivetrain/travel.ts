@@ -51,6 +51,9 @@ const mostHalvings = 10;
 /** A piece is halved until the acceleration at its end is within this factor of that at its start. */
 const steepest = 0.4;
 
+/** An acceleration that is nothing but rounding: in an hour it would change the speed by less than 1e-9 m/s. */
+const stillMps2 = 1e-13;
+
 /** This close to a speed at which the acceleration is 0, relatively, the car is taken to stay at it. */
 export const settled = 1e-13;
 
@@ -67,21 +70,34 @@ export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
 		if (here.speedMps <= 0 && !rising) return {...here, why: 'stopped'};
 		if (roomM(here, goal) <= 0) return here;
 		const bound = pieceEnd(motion, here.speedMps, rising, goal);
-		const end = gentleEnd(motion, here.speedMps, bound);
-		if (holds(motion, here.speedMps, end)) return cruise(here, roomM(here, goal));
-		const stretch = integrate(motion, here.speedMps, end);
+		const next = nextPiece(motion, here.speedMps, bound);
+		if (next === undefined) return cruise(here, roomM(here, goal));
 		const there: Travel = {
-			speedMps: end,
-			distanceM: here.distanceM + stretch.distanceM,
-			timeS: here.timeS + stretch.timeS,
+			speedMps: next.endMps,
+			distanceM: here.distanceM + next.distanceM,
+			timeS: here.timeS + next.timeS,
 			why: 'end',
 		};
-		if (roomM(there, goal) < 0) return meet(motion, here, end, goal);
+		if (roomM(there, goal) < 0) return meet(motion, here, next.endMps, goal);
 		here = there;
 	}
 }
 
-/** Distance and time over which the acceleration, of one sign, takes the car from one speed to another inside a piece. */
+/** The piece from a speed toward another, shortened until it can be integrated; undefined where the car holds its speed. */
+function nextPiece(motion: Motion, fromMps: number, boundMps: number): (Stretch & {endMps: number}) | undefined {
+	let endMps = gentleEnd(motion, fromMps, boundMps);
+	while (!holds(motion, fromMps, endMps)) {
+		const stretch = integrate(motion, fromMps, endMps);
+		if (stretch !== endless) return {...stretch, endMps};
+		endMps = gentleEnd(motion, fromMps, (fromMps + endMps) / 2);
+	}
+	return undefined;
+}
+
+/** What it takes to get past a speed at which the acceleration is 0. */
+export const endless: Stretch = {distanceM: Number.POSITIVE_INFINITY, timeS: Number.POSITIVE_INFINITY};
+
+/** Distance and time over which the acceleration, of one sign, takes the car from one speed to another inside a piece; `endless` where it is seen to change sign. */
 export function integrate(motion: Motion, fromMps: number, toMps: number, halvings = mostHalvings): Stretch {
 	const {nodes, weights, lastCoefficient, nextToLastCoefficient} = piece;
 	const middle = (fromMps + toMps) / 2;
@@ -99,11 +115,19 @@ export function integrate(motion: Motion, fromMps: number, toMps: number, halvin
 		nextToLast += nextToLastCoefficient[i]! * slowness;
 	}
 	if (halvings > 0 && Math.abs(last) + Math.abs(nextToLast) > (smooth / 2) * Math.abs(timeS)) {
+		if (changesSign(motion, middle, half)) return endless;
 		const one = integrate(motion, fromMps, middle, halvings - 1);
 		const other = integrate(motion, middle, toMps, halvings - 1);
+		if (one === endless || other === endless) return endless;
 		return {distanceM: one.distanceM + other.distanceM, timeS: one.timeS + other.timeS};
 	}
 	return {distanceM: distanceM * half, timeS: timeS * half};
+}
+
+/** Whether the acceleration differs in sign among the nodes of a piece. */
+function changesSign(motion: Motion, middleMps: number, halfMps: number): boolean {
+	const positive = motion.acceleration(middleMps) > 0;
+	return piece.nodes.some(node => motion.acceleration(middleMps + halfMps * node) > 0 !== positive);
 }
 
 /** The same over a small part of a piece. */
@@ -139,7 +163,7 @@ function pieceEnd(motion: Motion, speedMps: number, rising: boolean, goal: Goal)
 	const kink = rising ? Math.min(breakAbove(motion, speedMps), goal.toMps) : breakBelow(motion, speedMps);
 	const next = (entry > speedMps && entry < kink) || (entry < speedMps && entry > kink) ? entry : kink;
 	const [start, middle] = [motion.acceleration(speedMps), motion.acceleration((speedMps + next) / 2)];
-	if (gentle(start, middle) && gentle(middle, motion.acceleration(next))) return next;
+	if (gentle(start, middle, motion.acceleration(next))) return next;
 	return balancedBefore(motion, speedMps, next) ?? next;
 }
 
@@ -165,22 +189,30 @@ export function balancedBefore(motion: Motion, fromMps: number, toMps: number): 
 /** The end of the piece, drawn nearer until the acceleration changes little over it. */
 function gentleEnd(motion: Motion, fromMps: number, boundMps: number): number {
 	const start = motion.acceleration(fromMps);
-	let end = boundMps;
-	while (Math.abs(end - fromMps) > settled * fromMps && !gentle(start, motion.acceleration(end)))
-		end = (fromMps + end) / 2;
+	let [end, atEnd] = [boundMps, motion.acceleration(boundMps)];
+	while (Math.abs(end - fromMps) > settled * fromMps) {
+		const middle = (fromMps + end) / 2;
+		const atMiddle = motion.acceleration(middle);
+		if (gentle(start, atMiddle, atEnd)) break;
+		[end, atEnd] = [middle, atMiddle];
+	}
 	return end;
 }
 
-/** Whether two accelerations are near enough for one quadrature between them: any pole of 1/a then lies outside the piece by its length. */
-export function gentle(from: number, to: number): boolean {
-	const ratio = to / from;
-	return ratio >= steepest && ratio <= 1 / steepest;
+/**
+ * Whether the accelerations at the start, the middle and the end of a piece are near enough for one quadrature: any pole of
+ * 1/a then lies outside the piece by about its length. The middle tells a dip below 0 between two like ends.
+ */
+export function gentle(start: number, middle: number, end: number): boolean {
+	const ratio = end / start;
+	return Math.abs(start) > stillMps2 && middle / start > 0 && ratio >= steepest && ratio <= 1 / steepest;
 }
 
 /** Whether the way to the next speed is no way at all and the acceleration falls to 0 on it; a kink or a goal so near is passed. */
 export function holds(motion: Motion, speedMps: number, nextMps: number): boolean {
 	if (Math.abs(nextMps - speedMps) > settled * speedMps) return false;
-	return nextMps === speedMps || !gentle(motion.acceleration(speedMps), motion.acceleration(nextMps));
+	const [here, next] = [motion.acceleration(speedMps), motion.acceleration(nextMps)];
+	return nextMps === speedMps || !gentle(here, here, next);
 }
 
 /** The car holds its speed to the end; at no speed it stands. */

@@ -5,7 +5,7 @@ import {fixture, makeProgram} from './program.ts';
 let program: ReturnType<typeof makeProgram>;
 beforeAll(() => {
 	program = makeProgram();
-}, 120_000);
+});
 afterAll(() => program.remove());
 
 const oval = JSON.parse(readFileSync(fixture('oval.json'), 'utf8'));

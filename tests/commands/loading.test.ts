@@ -5,7 +5,7 @@ import {makeProgram} from './program.ts';
 let program: ReturnType<typeof makeProgram>;
 beforeAll(() => {
 	program = makeProgram();
-}, 120_000);
+});
 afterAll(() => program.remove());
 
 /** Sentences that stay in a library's code when it is made small. */

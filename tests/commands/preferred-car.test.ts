@@ -6,7 +6,7 @@ import {asNobody, fixture, makeProgram} from './program.ts';
 let program: ReturnType<typeof makeProgram>;
 beforeAll(() => {
 	program = makeProgram();
-}, 120_000);
+});
 afterAll(() => program.remove());
 
 const car = JSON.parse(readFileSync(fixture('car.json'), 'utf8'));

@@ -1,6 +1,6 @@
-/** The built program in a directory of its own, with the fixtures as its shipped documents. */
-import {execFileSync, type SpawnOptions, spawn} from 'node:child_process';
-import {chmodSync, copyFileSync, mkdirSync, mkdtempSync, readdirSync, rmSync} from 'node:fs';
+/** The program as built before the run, in a directory of its own, with the fixtures as its shipped documents. */
+import {type SpawnOptions, spawn} from 'node:child_process';
+import {chmodSync, copyFileSync, cpSync, mkdirSync, mkdtempSync, readdirSync, rmSync} from 'node:fs';
 import {tmpdir} from 'node:os';
 import {join} from 'node:path';
 import {fileURLToPath} from 'node:url';
@@ -25,22 +25,7 @@ export const makeProgram = () => {
 	// Readable by the user that some tests become.
 	chmodSync(place, 0o755);
 	const dist = join(place, 'dist');
-	const vite = join(root, 'node_modules', 'vite', 'bin', 'vite.js');
-	const words = [
-		'build',
-		'--config',
-		'.config/vite.config.ts',
-		'--logLevel',
-		'warn',
-		'--outDir',
-		dist,
-		'--emptyOutDir',
-	];
-	const said = execFileSync(process.execPath, [vite, ...words], {
-		cwd: root,
-		encoding: 'utf8',
-		stdio: ['ignore', 'pipe', 'inherit'],
-	});
+	cpSync(join(root, 'dist'), dist, {recursive: true});
 	mkdirSync(join(place, 'tracks', 'cars'), {recursive: true});
 	copyFileSync(fixture('oval.json'), join(place, 'tracks', `${demo.track}.json`));
 	copyFileSync(fixture('car.json'), join(place, 'tracks', 'cars', `${demo.car}.json`));
@@ -70,5 +55,5 @@ export const makeProgram = () => {
 			child.on('close', status => resolve({...ended, status}));
 		});
 	const chunks = () => readdirSync(join(dist, 'chunks')).map(name => join(dist, 'chunks', name));
-	return {place, home, dist, entry, said, start, run, chunks, remove: () => rmSync(place, {recursive: true})};
+	return {place, home, dist, entry, start, run, chunks, remove: () => rmSync(place, {recursive: true})};
 };

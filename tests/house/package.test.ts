@@ -85,3 +85,8 @@ describe('installed from the package, without a network', () => {
 		expect(droprack('tracks')).toContain('Quillmere');
 	});
 });
+
+test('the build before a start says nothing', () => {
+	// Elsewhere than in dist: other tests are reading that.
+	expect(npm('run', '--silent', 'build', '--', '--outDir', join(place, 'dist'), '--emptyOutDir')).toBe('');
+});

@@ -2,8 +2,16 @@
 import {dayAndEngine} from './checks/air.ts';
 import {curve} from './checks/curve.ts';
 import {gearing} from './checks/gearing.ts';
+import {integrator} from './checks/integrator.ts';
 import {motion} from './checks/motion.ts';
 import {tires} from './checks/tires.ts';
 import type {OutsideCheck} from './outside-check.ts';
 
-export const outsideChecks: readonly OutsideCheck[] = [...gearing, ...tires, ...dayAndEngine, ...curve, ...motion];
+export const outsideChecks: readonly OutsideCheck[] = [
+	...gearing,
+	...tires,
+	...dayAndEngine,
+	...curve,
+	...motion,
+	...integrator,
+];

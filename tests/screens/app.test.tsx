@@ -41,7 +41,7 @@ function opened(width: number, height: number) {
 	return {press: (keys: string) => app.stdin.write(keys), lines, frame};
 }
 
-const [down, right, escape] = ['\x1B[B', '\x1B[C', '\x1B'];
+const [down, right, esc] = ['\x1B[B', '\x1B[C', '\x1B'];
 
 test.each([
 	[80, 24],
@@ -113,11 +113,11 @@ test('pictures, help and back', async () => {
 	await frame('No shorter pair on the rack');
 	press('?');
 	await frame('In the pictures');
-	press(escape);
+	press(esc);
 	await frame('Speed along Front');
 });
 
-test('Ctrl with F1 and a pasted escape sequence do no harm', async () => {
+test('Ctrl with F1 and a pasted esc sequence do no harm', async () => {
 	const {press, frame} = opened(80, 24);
 	await frame('10 rows');
 	press('\x1B[1;5P\x1B[1;5R\x1B[25;5~\x1B[200~\x1B[31m\x1B[201~');

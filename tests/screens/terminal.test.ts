@@ -17,7 +17,7 @@ function open({columns = 80, rows = 24, environment = {}, words = []}: Options =
 	return terminal;
 }
 const ranked = /10 rows[\s\S]*▸ +1 /;
-const [down, right, escape] = ['\x1B[B', '\x1B[C', '\x1B'];
+const [down, right, esc] = ['\x1B[B', '\x1B[C', '\x1B'];
 
 /** The terminal as a shell expects it, and nothing of ours left on it. */
 function expectGivenBack(pty: Pty): void {
@@ -110,7 +110,7 @@ test('CI in the environment does not keep it from drawing', async () => {
 test('with NO_COLOR there is no color, and what is chosen is still marked', async () => {
 	const pty = open({environment: {NO_COLOR: '1'}});
 	await pty.waitFor(ranked);
-	expect(pty.written).not.toMatch(new RegExp(`${escape}\\[[0-9;]*(3[0-7]|4[0-7]|9[0-7])m`));
+	expect(pty.written).not.toMatch(new RegExp(`${esc}\\[[0-9;]*(3[0-7]|4[0-7]|9[0-7])m`));
 	expect(pty.screen()).toContain('▸');
 });
 

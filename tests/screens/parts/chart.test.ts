@@ -2,14 +2,16 @@ import fc from 'fast-check';
 import {describe, expect, test} from 'vitest';
 import {displayWidth} from '../../../source/commands/text/width.ts';
 import {type Chart, drawChart, type Point} from '../../../source/screens/parts/chart.ts';
-import {painted} from '../../../source/screens/parts/theme.ts';
+import {shown} from '../../../source/screens/parts/theme.ts';
 import {niceTicks, tickLabels} from '../../../source/screens/parts/ticks.ts';
 import {runs} from '../../runs.ts';
 
 const plain = (chart: Chart, width: number, height: number, ascii: boolean): string[] =>
 	drawChart(chart, {width, height, ascii}).map(pieces =>
-		(ascii ? painted(pieces, {color: false, ascii}) : pieces.map(({text}) => text).join(''))
-			.replace(/\x1B\[[\d;]*m/g, '')
+		pieces
+			.map(({text}) => shown(text, {color: false, ascii}))
+			.join('')
+
 			.trimEnd(),
 	);
 

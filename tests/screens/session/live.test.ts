@@ -47,7 +47,7 @@ function started(start: Session = session()) {
 	};
 	return {live, press, kept, asked};
 }
-const [down, up, right, left, escape] = ['\x1B[B', '\x1B[A', '\x1B[C', '\x1B[D', '\x1B'];
+const [down, up, right, left, esc] = ['\x1B[B', '\x1B[A', '\x1B[C', '\x1B[D', '\x1B'];
 const here = ({session: {row}}: {session: Session}) => row;
 
 test('from a start to the ranking of another track in three keys', () => {
@@ -88,7 +88,7 @@ test('an edit is ranked anew, and the cursor stays on its pair', () => {
 	const {press, live} = started();
 	press(down);
 	const before = here(live.state());
-	const state = press(`e\t${down}60\r${escape}`);
+	const state = press(`e\t${down}60\r${esc}`);
 	expect(state.answer).toMatchObject({is: 'ready', ranked: {ranking: {rows: expect.any(Array)}}});
 	expect(here(state)).toBe(before);
 	expect(state.scene.all[0]!.row.situations[0]!.straights[0]!.exitSpeedMps).toBeCloseTo(60 * 0.44704, 9);
@@ -124,7 +124,7 @@ test('the pair under the cursor goes into the car', () => {
 
 test('leaving with unsaved changes asks first; saving then leaves', async () => {
 	const {press, kept, asked, live} = started();
-	press(`e\t${down}80\r${escape}`);
+	press(`e\t${down}80\r${esc}`);
 	expect(press('q').session.over?.is).toBe('quitting');
 	expect(asked).toEqual([]);
 	press('s');
@@ -145,7 +145,7 @@ test('without changes leaving does not ask; Ctrl+C never does, and keeps what wa
 
 test('what was discarded is not kept', () => {
 	const {press, kept} = started();
-	press(`e\t${down}80\r${escape}`);
+	press(`e\t${down}80\r${esc}`);
 	press('qd');
 	expect(kept.documents).toBeUndefined();
 });
@@ -163,7 +163,7 @@ test('any key that is not known changes nothing, in any place', () => {
 		'\x1B[<0;3;3M',
 		'\x1B]0;x\x07',
 	];
-	for (const open of ['', 'e', '1', escape + escape + 't', escape + 'w', 'g', '?', escape]) {
+	for (const open of ['', 'e', '1', `${esc}${esc}t`, `${esc}w`, 'g', '?', esc]) {
 		press(open);
 		const before = live.state().session;
 		for (const keys of unknown) press(keys);
@@ -187,7 +187,7 @@ test('thousands of keys in every place end in a session that still ranks', () =>
 		left,
 		'\r',
 		'\t',
-		escape,
+		esc,
 		'e',
 		'g',
 		'w',

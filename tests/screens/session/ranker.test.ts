@@ -17,7 +17,10 @@ function clock(lookMs: number) {
 			return () => waiting.splice(waiting.indexOf(act), 1);
 		},
 	};
-	return {made, waiting, letGo: () => waiting.splice(0).forEach(act => act())};
+	const letGo = () => {
+		for (const act of waiting.splice(0)) act();
+	};
+	return {made, waiting, letGo};
 }
 
 const inputs = {documents, situation: undefined};

@@ -14,7 +14,7 @@ import type {Session} from '../../../source/screens/session/session.ts';
 import {frameOf, type Size} from '../../../source/screens/views/frame.ts';
 import {catalog} from '../session/documents.ts';
 
-const escape = '\x1B';
+const esc = '\x1B';
 
 export function stateOf(session: Session): State {
 	const answer = answerTo(session);
@@ -49,6 +49,6 @@ export function linesOf(state: State, size: Size): string[] {
 }
 
 /** Without what makes it bold or inverted. */
-export const bare = (text: string): string => text.replace(new RegExp(`${escape}\\[[\\d;]*m`, 'g'), '');
+export const bare = (text: string): string => text.replace(new RegExp(`${esc}\\[[\\d;]*m`, 'g'), '');
 
 export const widest = (lines: readonly string[]): number => Math.max(...lines.map(displayWidth));

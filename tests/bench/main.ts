@@ -1,0 +1,17 @@
+/** All benchmarks: correctness first, then times; ends with 1 where a budget is missed. Another seed may be given. */
+import {finish, line, machine} from './harness.ts';
+import {benchOneStraight} from './one-straight.ts';
+import {benchProcesses} from './processes.ts';
+import {benchGrowth, benchWholeSolver} from './whole-solver.ts';
+
+const seed = Number(process.argv[2] ?? 20_260_731);
+line(`${machine()}, seed ${seed}`);
+line();
+benchWholeSolver(seed);
+line();
+benchOneStraight();
+line();
+benchGrowth(seed);
+line();
+benchProcesses();
+finish();
