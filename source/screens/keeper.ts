@@ -1,7 +1,11 @@
 /** What the screen asks of whoever started it: to keep what was changed, beyond this process. */
 import type {Documents, OpenDocument} from './session/documents.ts';
 
-export type Saving = {readonly ok: true; readonly words: string} | {readonly ok: false; readonly words: string};
+/** `words` are for the person. */
+export type Saving = {readonly ok: boolean; readonly words: string};
+
+/** What is saved beside a track: the car it was ranked with, and the pair and set that were chosen. */
+export type Chosen = {readonly car: string; readonly plan: string | undefined};
 
 export type Keeper = {
 	/** The session as it stands, for the next start; called after every change, and must not keep a key waiting. */
@@ -10,10 +14,10 @@ export type Keeper = {
 	drop(): void;
 	/** An earlier session that ended without being saved. */
 	readonly earlier: Documents | undefined;
-	/** That one is not wanted any more. */
+	/** That one was taken up, or is not wanted any more. */
 	dropEarlier(): void;
-	/** Saves documents under their own names. */
-	save(documents: readonly OpenDocument[]): Promise<Saving>;
+	/** Saves a document under its own name. */
+	save(document: OpenDocument, chosen: Chosen): Saving;
 	/** Where the session is, for a person to read after a crash; undefined where nothing had to be kept. */
 	where(): string | undefined;
 };

@@ -16,9 +16,11 @@ export type Opening = {
 	readonly units: UnitSystem;
 	readonly theme: Theme;
 	readonly keeper: Keeper;
+	/** Something that a person should know at the start. */
+	readonly notice: string | undefined;
 };
 
-export async function openScreen({documents, catalog, units, theme, keeper}: Opening): Promise<void> {
+export async function openScreen({documents, catalog, units, theme, keeper, notice}: Opening): Promise<void> {
 	const screen = new Screen(process.stdout);
 	let unmount = () => {};
 	const terminal = takeTerminal({
@@ -43,7 +45,7 @@ export async function openScreen({documents, catalog, units, theme, keeper}: Ope
 			return () => clearImmediate(waiting);
 		},
 	};
-	const session = startSession(documents, units);
+	const session = {...startSession(documents, units), notice};
 	const offered = keeper.earlier ? {...session, over: {is: 'recovery' as const, documents: keeper.earlier}} : session;
 	const live = new LiveSession(offered, catalog, keeper, outside, clock);
 	const app = render(<App live={live} theme={theme} />, {

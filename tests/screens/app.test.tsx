@@ -10,7 +10,7 @@ const keeper = {
 	drop() {},
 	earlier: undefined,
 	dropEarlier() {},
-	save: async () => ({ok: true, words: 'Saved.'}) as const,
+	save: () => ({ok: true, words: 'Saved.'}),
 	where: () => undefined,
 };
 const outside = {leave() {}, suspend() {}, redraw() {}};

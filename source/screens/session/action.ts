@@ -20,7 +20,8 @@ export type Action =
 	| {readonly do: 'take'; readonly document: OpenDocument}
 	| {readonly do: 'start new'; readonly kind: Kind}
 	| {readonly do: 'recover'; readonly documents: Documents}
-	| {readonly do: 'saved'; readonly documents: readonly OpenDocument[]}
+	/** As it was written, and with which plan. */
+	| {readonly do: 'saved'; readonly document: OpenDocument; readonly plan: string | undefined}
 	| {readonly do: 'undo'}
 	| {readonly do: 'redo'}
 	/** Typed into whatever takes text: a field, the search, the least margin. */

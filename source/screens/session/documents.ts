@@ -14,6 +14,8 @@ export type OpenDocument = {
 	readonly saved: JsonObject | undefined;
 	/** As the program ships it; undefined where it does not. */
 	readonly shipped: JsonObject | undefined;
+	/** Of a track: pair and set that were saved with it, "33/38 A". */
+	readonly plan: string | undefined;
 };
 
 export type Documents = {
@@ -52,7 +54,7 @@ export function newDocument(kind: Kind, open: Documents['open']): OpenDocument {
 	let number = 1;
 	while (`${kind}:new ${number}` in open) number++;
 	const json = kind === 'track' ? emptyTrack : emptyCar;
-	return {id: `${kind}:new ${number}`, kind, from: 'new', json, saved: undefined, shipped: undefined};
+	return {id: `${kind}:new ${number}`, kind, from: 'new', json, saved: undefined, shipped: undefined, plan: undefined};
 }
 
 const emptyTrack: JsonObject = {
@@ -72,3 +74,6 @@ const emptyCar: JsonObject = {
 	tires: {},
 	rack: {pairs: []},
 };
+
+/** Whether a content says itself to be of a kind. */
+export const describesKind = (json: JsonObject, kind: Kind): boolean => json.kind === kind;

@@ -6,7 +6,7 @@ import {type KeyEvent, keyName} from '../terminal/key-event.ts';
 import type {Action} from './action.ts';
 import {type Answer, rankedIn} from './answer.ts';
 import {choicesFor} from './catalog.ts';
-import {isChanged, type OpenDocument, unsaved} from './documents.ts';
+import {current, type Documents, isChanged, type OpenDocument, titleOf, unsaved} from './documents.ts';
 import {readTrackOf} from './forms.ts';
 import {type Effect, intend, type Scene, scopesOf, takesText} from './intend.ts';
 import {type Clock, Ranker} from './ranker.ts';
@@ -69,8 +69,11 @@ export class LiveSession {
 		const session = reduce(before, action);
 		const documents = session.history.present;
 		const edited = documents !== before.history.present;
-		if (edited || session.situation !== before.situation) this.#ranker.rank(inputsOf(session));
-		if (edited) this.#keep(session);
+		const isOther = session.situation !== before.situation || !sameContent(documents, before.history.present);
+		if (isOther) this.#ranker.rank(inputsOf(session));
+		// What 'saved' marks is no edit: `#save` keeps by itself.
+		if (edited && action.do !== 'saved') this.#keep(session);
+		if (action.do === 'recover') this.#keeper.dropEarlier();
 		this.#settle(session);
 	}
 
@@ -87,7 +90,9 @@ export class LiveSession {
 			this.#outside.leave();
 		},
 		save: () => void this.#save(),
-		'save and leave': () => void this.#save().then(saved => saved && this.#outside.leave()),
+		'save and leave': () => {
+			if (this.#save()) this.#outside.leave();
+		},
 		suspend: () => this.#outside.suspend(),
 		redraw: () => {
 			if (this.#state.answer.is === 'stopped') this.#ranker.rank(inputsOf(this.#state.session));
@@ -109,20 +114,24 @@ export class LiveSession {
 		},
 	};
 
-	async #save(): Promise<boolean> {
-		const changed = unsaved(this.#state.session.history.present);
-		if (changed.length === 0) {
-			this.dispatch({do: 'tell', notice: 'Nothing has changed since it was saved.'});
-			return true;
-		}
-		const saving = await this.#keeper.save(changed);
-		if (saving.ok) {
-			this.dispatch({do: 'saved', documents: changed});
-			this.#keep(this.#state.session);
-		}
+	/** Everything that was changed, one document after the other; whether all of it was saved. */
+	#save(): boolean {
+		const {history, plan} = this.#state.session;
+		const track = current(history.present, 'track');
+		const changed = unsaved(history.present);
+		const documents = plan === track.plan || changed.includes(track) ? changed : [...changed, track];
+		const car = titleOf(current(history.present, 'car'));
+		const savings = documents.map(document => {
+			const chosen = document === track ? plan : document.plan;
+			const saving = this.#keeper.save(document, {car, plan: chosen});
+			if (saving.ok) this.dispatch({do: 'saved', document, plan: chosen});
+			return saving;
+		});
+		this.#keep(this.#state.session);
 		this.dispatch({do: 'cover', over: undefined});
-		this.dispatch({do: 'tell', notice: saving.words});
-		return saving.ok;
+		const words = savings.length === 0 ? ['Nothing has changed since it was saved.'] : savings.map(({words}) => words);
+		this.dispatch({do: 'tell', notice: words.join(' ')});
+		return savings.every(({ok}) => ok);
 	}
 
 	#keep({history}: Session): void {
@@ -168,5 +177,11 @@ const firstRow = (answer: Answer): Placed[] =>
 	answer.is === 'working' && answer.first !== undefined
 		? [{place: undefined, name: rowName(answer.first.row), row: answer.first.row}]
 		: [];
+
+/** Whether there is nothing to rank anew. */
+const sameContent = (one: Documents, other: Documents): boolean =>
+	(['track', 'car'] as const).every(
+		kind => one[kind] === other[kind] && current(one, kind).json === current(other, kind).json,
+	);
 
 const inputsOf = ({history, situation}: Session) => ({documents: history.present, situation});

@@ -41,7 +41,7 @@ export function reduce(before: Session, action: Action): Session {
 		case 'recover':
 			return {...taken(session, action.documents), notice: 'The unsaved session is back. u undoes even this.'};
 		case 'saved':
-			return saved(session, action.documents);
+			return saved(session, action.document, action.plan);
 		case 'undo':
 			return timeTravelled(session, undone(session.history), 'Nothing to undo.');
 		case 'redo':
@@ -82,7 +82,7 @@ function taken(session: Session, documents: Documents): Session {
 	const {present} = session.history;
 	const next = {...withDocuments(session, documents), place: {at: 'ranking'} as const, over: undefined};
 	if (documents.track === present.track && documents.car === present.car) return next;
-	return {...next, situation: undefined, plan: undefined};
+	return {...next, situation: undefined, plan: current(documents, 'track').plan};
 }
 
 function startedNew(session: Session, kind: 'track' | 'car'): Session {
@@ -92,14 +92,10 @@ function startedNew(session: Session, kind: 'track' | 'car'): Session {
 }
 
 /** What was written is what a document is now compared with, in every state of the history. */
-function saved(session: Session, written: readonly OpenDocument[]): Session {
+function saved(session: Session, {id, json}: OpenDocument, plan: string | undefined): Session {
 	const marked = (state: Documents): Documents => {
-		const open = {...state.open};
-		for (const {id, json} of written) {
-			const one = open[id];
-			if (one) open[id] = {...one, saved: json};
-		}
-		return {...state, open};
+		const one = state.open[id];
+		return one === undefined ? state : {...state, open: {...state.open, [id]: {...one, saved: json, plan}}};
 	};
 	return {...session, history: amended(session.history, marked)};
 }

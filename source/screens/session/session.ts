@@ -1,7 +1,7 @@
 /** What a session at the screen holds: inputs only. What follows from them is in `answer.ts` and in the views. */
 import type {UnitSystem} from '../../commands/text/units.ts';
 import type {EditLine} from '../parts/edit-line.ts';
-import type {Documents, Kind} from './documents.ts';
+import {current, type Documents, type Kind} from './documents.ts';
 import {type History, startHistory} from './history.ts';
 import {type Filter, noFilter, type Order} from './rows.ts';
 
@@ -55,7 +55,7 @@ export const startSession = (documents: Documents, units: UnitSystem): Session =
 	over: undefined,
 	row: undefined,
 	comparison: undefined,
-	plan: undefined,
+	plan: current(documents, 'track').plan,
 	order: 'place',
 	filter: noFilter,
 	situation: undefined,

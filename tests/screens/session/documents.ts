@@ -16,6 +16,7 @@ const shipped = (kind: 'track' | 'car', stem: string, json: JsonObject): OpenDoc
 	json,
 	saved: json,
 	shipped: json,
+	plan: undefined,
 });
 
 export const oval = shipped('track', 'oval', fixture('oval'));

@@ -1,4 +1,4 @@
-import {expect, test, vi} from 'vitest';
+import {expect, test} from 'vitest';
 import type {Keeper} from '../../../source/screens/keeper.ts';
 import {current, type Documents, type OpenDocument} from '../../../source/screens/session/documents.ts';
 import {valueAt} from '../../../source/screens/session/json.ts';
@@ -18,8 +18,8 @@ function started(start: Session = session()) {
 		},
 		earlier: undefined,
 		dropEarlier() {},
-		save: async documents => {
-			kept.saved.push(...documents);
+		save: document => {
+			kept.saved.push(document);
 			return {ok: true, words: 'Saved.'};
 		},
 		where: () => undefined,
@@ -122,13 +122,13 @@ test('the pair under the cursor goes into the car', () => {
 	expect(`${row.pair} ${row.gearbox}`).toBe(here(state));
 });
 
-test('leaving with unsaved changes asks first; saving then leaves', async () => {
+test('leaving with unsaved changes asks first; saving then leaves', () => {
 	const {press, kept, asked, live} = started();
 	press(`e\t${down}80\r${esc}`);
 	expect(press('q').session.over?.is).toBe('quitting');
 	expect(asked).toEqual([]);
 	press('s');
-	await vi.waitFor(() => expect(asked).toEqual(['leave']));
+	expect(asked).toEqual(['leave']);
 	expect(kept.saved.map(({id}) => id)).toEqual(['track:oval']);
 	expect(live.state().session.notice).toBe('Saved.');
 	expect(kept.documents).toBeUndefined();

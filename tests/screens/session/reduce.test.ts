@@ -162,7 +162,7 @@ test('a document from nothing opens at its form', () => {
 
 test('what was saved is what changes are counted from, also after undoing', () => {
 	const changed = after(session({place: exit}), {do: 'open field', text: ''}, ...typed('80 mph'), accept);
-	const saved = after(changed, {do: 'saved', documents: unsaved(changed.history.present)});
+	const saved = after(changed, {do: 'saved', document: current(changed.history.present, 'track'), plan: undefined});
 	expect(unsaved(saved.history.present)).toEqual([]);
 	expect(unsaved(after(saved, {do: 'undo'}).history.present).map(({id}) => id)).toEqual(['track:oval']);
 });
