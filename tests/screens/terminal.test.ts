@@ -1,5 +1,7 @@
 /** The built program in a pseudo-terminal, its screen read back through a terminal emulator. */
-import {afterAll, afterEach, expect, test} from 'vitest';
+import {existsSync, readdirSync} from 'node:fs';
+import {join} from 'node:path';
+import {afterAll, afterEach, expect, test, vi} from 'vitest';
 import {makeProgram} from '../commands/program.ts';
 import {Pty} from './pty.ts';
 
@@ -100,6 +102,48 @@ test('Ctrl+C leaves at once, also while something is typed', async () => {
 	pty.press(`e\t${down}12\x03`);
 	await pty.ended();
 	expectGivenBack(pty);
+});
+
+test('killed in the middle of its work, the next start offers it, and takes it up', async () => {
+	const home = join(program.place, 'killed');
+	const pty = open({environment: {DROPRACK_HOME: home}});
+	await pty.waitFor(ranked);
+	pty.press(`e\t${down}61\r`);
+	await pty.waitFor(/exit +~61 mph/);
+	const kept = () =>
+		existsSync(join(home, 'sessions')) && readdirSync(join(home, 'sessions')).some(name => name.endsWith('.json'));
+	await vi.waitFor(() => expect(kept()).toBe(true), 5000);
+	pty.signal('SIGKILL');
+	await pty.ended();
+
+	const next = open({environment: {DROPRACK_HOME: home}});
+	await next.waitFor('An earlier session ended with unsaved changes');
+	next.press('\r');
+	await next.waitFor('Fixture Oval (changed)');
+	next.press(`e\t${down}`);
+	await next.waitFor(/exit +~61 mph/);
+	next.press('\x13');
+	await next.waitFor('Fixture Oval is saved.');
+	next.press('q');
+	expect(await next.ended()).toMatchObject({exitCode: 0});
+	expect(kept()).toBe(false);
+	const {out} = await program.run(['show', 'Fixture Oval'], {environment: {DROPRACK_HOME: home}});
+	expect(JSON.parse(out)).toMatchObject({straights: [{exit: '61 mph'}, {}]});
+});
+
+test('a plan that was chosen and saved is there at the next start', async () => {
+	const environment = {DROPRACK_HOME: join(program.place, 'planned')};
+	const pty = open({environment});
+	await pty.waitFor(ranked);
+	pty.press(`${down}p`);
+	await pty.waitFor('35/36 A is the plan.');
+	pty.press('\x13');
+	await pty.waitFor('Fixture Oval is saved.');
+	pty.press('q');
+	await pty.ended();
+	const next = open({environment});
+	await next.waitFor('plan 35/36 A');
+	await next.waitFor(/P +2 +35\/36/);
 });
 
 test('CI in the environment does not keep it from drawing', async () => {
