@@ -22,7 +22,13 @@ export default defineConfig(({command}) => ({
 		define: {'process.env.NODE_ENV': '"production"', 'process.env.DEV': '"false"', fetch: 'undefined'},
 		// Also where NODE_ENV says otherwise, as in a build that a test asks for.
 		oxc: {jsx: {development: false}},
-		resolve: {alias: {'react-devtools-core': new URL('no-devtools.ts', import.meta.url).pathname}},
+		resolve: {
+			alias: {
+				'react-devtools-core': new URL('no-devtools.ts', import.meta.url).pathname,
+				// The same widths at a fraction of the start: the other's patterns take 45 ms to be made ready.
+				'string-width': 'fast-string-width',
+			},
+		},
 	}),
 	build: {
 		ssr: 'source/droprack.ts',

@@ -1,5 +1,5 @@
 /** The screen as Ink draws it. It lays out and calculates nothing: the lines come from `views/frame.ts`. */
-import {Box, Text, useStdout} from 'ink';
+import {Box, Text} from 'ink';
 import {memo, useEffect, useMemo, useRef, useState, useSyncExternalStore} from 'react';
 import {LineTable} from './parts/line-table.tsx';
 import type {Pieces} from './parts/pieces.ts';
@@ -20,33 +20,28 @@ const Lines = ({lines, theme}: {lines: readonly Pieces[]; theme: Theme}) => (
 	</Box>
 );
 
-type Dimensions = {readonly width: number; readonly height: number};
+/** Something of a size that may change, and tells. */
+export type Sized = {
+	readonly size: {readonly width: number; readonly height: number};
+	on(event: 'resize', told: () => void): unknown;
+	off(event: 'resize', told: () => void): unknown;
+};
 
-/** Of the terminal; Ink itself only follows its width. */
-function useTerminalSize(): Dimensions {
-	const {stdout} = useStdout();
-	const [size, setSize] = useState(() => ({width: stdout.columns, height: stdout.rows}));
+function useSize(sized: Sized): Sized['size'] {
+	const [size, setSize] = useState(sized.size);
 	useEffect(() => {
-		const resized = () => setSize({width: stdout.columns, height: stdout.rows});
-		stdout.on('resize', resized);
+		const resized = () => setSize(sized.size);
+		sized.on('resize', resized);
 		return () => {
-			stdout.off('resize', resized);
+			sized.off('resize', resized);
 		};
-	}, [stdout]);
+	}, [sized]);
 	return size;
 }
 
-type Given = {
-	readonly live: LiveSession;
-	readonly theme: Theme;
-	/** The terminal's unless given. */
-	readonly size?: Dimensions;
-};
-
-export function App({live, theme, size}: Given) {
+export function App({live, theme, screen}: {live: LiveSession; theme: Theme; screen: Sized}) {
 	const state = useSyncExternalStore(live.subscribe, live.state);
-	const terminal = useTerminalSize();
-	const {width, height} = size ?? terminal;
+	const {width, height} = useSize(screen);
 	useKeys(event => live.press(event));
 	const start = useRef(0);
 	const frame = useMemo(
@@ -55,7 +50,7 @@ export function App({live, theme, size}: Given) {
 	);
 	if (frame.table) start.current = frame.table.start;
 	return (
-		<Box flexDirection="column" width={width}>
+		<Box flexDirection="column" width={width} flexShrink={0}>
 			<Lines lines={frame.top} theme={theme} />
 			{frame.table && (
 				<Box>

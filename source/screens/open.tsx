@@ -48,7 +48,7 @@ export async function openScreen({documents, catalog, units, theme, keeper, noti
 	const session = {...startSession(documents, units), notice};
 	const offered = keeper.earlier ? {...session, over: {is: 'recovery' as const, documents: keeper.earlier}} : session;
 	const live = new LiveSession(offered, catalog, keeper, outside, clock);
-	const app = render(<App live={live} theme={theme} />, {
+	const app = render(<App live={live} theme={theme} screen={screen} />, {
 		stdout: screen as unknown as NodeJS.WriteStream,
 		debug: true,
 		exitOnCtrlC: false,

@@ -1,3 +1,4 @@
+import {EventEmitter} from 'node:events';
 import {render} from 'ink-testing-library';
 import {afterEach, expect, test, vi} from 'vitest';
 import {App} from '../../source/screens/app.tsx';
@@ -22,13 +23,28 @@ const clock = {
 	},
 };
 
+/** A window that a test makes larger or smaller. */
+class Window extends EventEmitter {
+	size: {width: number; height: number};
+
+	constructor(width: number, height: number) {
+		super();
+		this.size = {width, height};
+	}
+
+	resize(width: number, height: number): void {
+		this.size = {width, height};
+		this.emit('resize');
+	}
+}
+
 let unmount = () => {};
 afterEach(() => unmount());
 
 function opened(width: number, height: number) {
 	const live = new LiveSession(session(), catalog, keeper, outside, clock);
 	const theme = {color: false, ascii: false};
-	const app = render(<App live={live} theme={theme} size={{width, height}} />);
+	const app = render(<App live={live} theme={theme} screen={new Window(width, height)} />);
 	unmount = app.unmount;
 	const lines = () => bare(app.lastFrame() ?? '').split('\n');
 	/** The frame once it shows what is waited for; never a sleep. */
@@ -90,14 +106,15 @@ test('a field is typed, refused, mended and taken; the ranking follows', async (
 test('a resize while typing keeps what was typed', async () => {
 	const live = new LiveSession(session(), catalog, keeper, outside, clock);
 	const theme = {color: false, ascii: false};
-	const app = render(<App live={live} theme={theme} size={{width: 100, height: 30}} />);
+	const screen = new Window(100, 30);
+	const app = render(<App live={live} theme={theme} screen={screen} />);
 	unmount = app.unmount;
 	app.stdin.write(`e\t${down}123`);
 	await vi.waitFor(() => expect(bare(app.lastFrame() ?? '')).toContain('Understood 123 mph'));
-	app.rerender(<App live={live} theme={theme} size={{width: 60, height: 10}} />);
-	expect(app.lastFrame()).toContain('Droprack needs 80 columns');
-	app.rerender(<App live={live} theme={theme} size={{width: 140, height: 45}} />);
-	expect(bare(app.lastFrame() ?? '')).toContain('Understood 123 mph');
+	screen.resize(60, 10);
+	await vi.waitFor(() => expect(app.lastFrame()).toContain('Droprack needs 80 columns'));
+	screen.resize(140, 45);
+	await vi.waitFor(() => expect(bare(app.lastFrame() ?? '')).toContain('Understood 123 mph'));
 });
 
 test('pictures, help and back', async () => {

@@ -16,8 +16,8 @@ export const blank: Pieces = [];
 
 export const widthOf = (pieces: Pieces): number => pieces.reduce((sum, {text}) => sum + displayWidth(text), 0);
 
-/** The pieces made exactly so wide: cut with a mark, or filled with blanks. */
-export function fitted(pieces: Pieces, width: number): Pieces {
+/** The pieces made no wider than this: cut with a mark. */
+export function clipped(pieces: Pieces, width: number): Pieces {
 	const fit: Piece[] = [];
 	let left = width;
 	for (const [index, {text, tone}] of pieces.entries()) {
@@ -28,13 +28,21 @@ export function fitted(pieces: Pieces, width: number): Pieces {
 		fit.push({text: full, tone});
 		left -= displayWidth(full);
 	}
+	return fit;
+}
+
+/** The pieces made exactly so wide: cut, or filled with blanks. */
+export function fitted(pieces: Pieces, width: number): Pieces {
+	const fit = clipped(pieces, width);
+	const left = width - widthOf(fit);
 	return left > 0 ? [...fit, {text: ' '.repeat(left), tone: 'plain'}] : fit;
 }
 
 /** Text and what stands at the far end of the same line. */
 export function spread(left: Pieces, right: Pieces, width: number): Pieces {
 	const room = width - widthOf(right);
-	return room < 1 ? fitted(left, width) : [...fitted(left, room - 1), piece(' '), ...right];
+	if (right.length === 0) return clipped(left, width);
+	return room < 1 ? clipped(left, width) : [...fitted(left, room - 1), piece(' '), ...right];
 }
 
 /** Columns of lines beside each other, with a rule between. */

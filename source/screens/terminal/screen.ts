@@ -39,12 +39,19 @@ export class Screen extends EventEmitter {
 		});
 	}
 
-	get columns(): number {
-		return this.#terminal.columns || usualColumns;
-	}
+	/**
+	 * For Ink, which makes every cell of its own width ready for each frame, blank or not. What is wider than that is drawn all
+	 * the same, and our lines bring their width with them: with one column only what is there is made ready.
+	 */
+	readonly columns = 1;
 
 	get rows(): number {
 		return this.#terminal.rows || usualRows;
+	}
+
+	/** The terminal's size. */
+	get size(): {readonly width: number; readonly height: number} {
+		return {width: this.#terminal.columns || usualColumns, height: this.rows};
 	}
 
 	/** Draws everything anew: after a suspension, or when something else wrote on the screen. */

@@ -2,7 +2,7 @@
 import {absent, unitsOf} from '../../commands/text/units.ts';
 import {wrap} from '../../commands/text/width.ts';
 import {visible} from '../../documents/visible.ts';
-import {beside, blank, fitted, line, type Pieces, piece, tall} from '../parts/pieces.ts';
+import {beside, blank, clipped, line, type Pieces, piece, tall} from '../parts/pieces.ts';
 import {tableWidth} from '../parts/table-line.ts';
 import type {Wrong} from '../session/answer.ts';
 import {unsaved} from '../session/documents.ts';
@@ -49,7 +49,7 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 	const foot = [noticeLine(state, width), ...keyLines(scopesOf(session), width, height < roomy ? 1 : 2)];
 	const body = height - head.length - foot.length;
 	const plain = (lines: readonly Pieces[]): Frame => ({
-		top: [...head, ...tall(lines, body).map(one => fitted(one, width))],
+		top: [...head, ...tall(lines, body).map(one => clipped(one, width))],
 		table: undefined,
 		beside: [],
 		bottom: foot,
@@ -101,7 +101,7 @@ function ranking(
 	const table = rankingTable(given, Math.min(widestTable, Math.round(width * 0.6)), body, previousStart);
 	const side = width - tableWidth(table.columns) - 3;
 	const lines = scene.ranked === undefined ? reasonView(here.row, side) : whyView(whyOf(state, here), side);
-	const column = tall(lines, body).map((one): Pieces => [piece(' │ ', 'muted'), ...fitted(one, side)]);
+	const column = tall(lines, body).map((one): Pieces => [piece(' │ ', 'muted'), ...clipped(one, side)]);
 	return {top: head, table: padTable(table, body), beside: column, bottom: foot};
 }
 
@@ -185,19 +185,19 @@ function noticeLine({session}: State, width: number): Pieces {
 		const names = unsaved(session.history.present)
 			.map(({json}) => visible(String(json.name)))
 			.join(', ');
-		return fitted([piece(` Not saved: ${names}. `, 'near'), piece(' Leave?')], width);
+		return clipped([piece(` Not saved: ${names}. `, 'near'), piece(' Leave?')], width);
 	}
 	if (over?.is === 'recovery') {
 		const names = unsaved(over.documents)
 			.map(({json}) => visible(String(json.name)))
 			.join(', ');
-		return fitted([piece(' An earlier session ended with unsaved changes. ', 'near'), piece(` ${names}`)], width);
+		return clipped([piece(' An earlier session ended with unsaved changes. ', 'near'), piece(` ${names}`)], width);
 	}
 	if (over?.is === 'margin') {
 		const wrong = over.wrong === undefined ? [] : [piece(` ${over.wrong}`, 'fail')];
-		return fitted([piece('Least margin to the limit, RPM: ', 'strong'), ...caretPieces(over.line), ...wrong], width);
+		return clipped([piece('Least margin to the limit, RPM: ', 'strong'), ...caretPieces(over.line), ...wrong], width);
 	}
-	return fitted(line(notice ?? '', 'strong'), width);
+	return clipped(line(notice ?? '', 'strong'), width);
 }
 
 function tooSmall({width, height}: Size): Frame {

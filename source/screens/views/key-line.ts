@@ -1,6 +1,6 @@
 /** The keys of the place: as many as fit, the rest is in the help. */
 import {type Binding, bindingsOf, keyWords, type Scope} from '../key-table.ts';
-import {fitted, type Piece, type Pieces, piece, widthOf} from '../parts/pieces.ts';
+import {clipped, type Piece, type Pieces, piece, widthOf} from '../parts/pieces.ts';
 
 const between = '  ';
 
@@ -31,7 +31,7 @@ export function keyLines(scopes: readonly Scope[], width: number, count: number)
 	}
 	const final = lines[count - 1]!;
 	final.push(...(final.length > 0 && end.length > 0 ? [piece(between)] : []), ...end);
-	return lines.map(line => fitted(line, width));
+	return lines.map(line => clipped(line, width));
 }
 
 const joined = (bindings: readonly Binding[]): Piece[] =>
