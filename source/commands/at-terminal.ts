@@ -1,4 +1,5 @@
 /** The bare command in a terminal: the screen, on the documents that the ranking would be printed of. */
+import {openScreen} from '../screens/open.ts';
 import type {OpenDocument} from '../screens/session/documents.ts';
 import type {JsonObject} from '../screens/session/json.ts';
 import {homeDirectory} from '../store/home.ts';
@@ -10,7 +11,6 @@ import {demo, type Kind, type Shelved, shelf, shippedShelf} from './shelf.ts';
 import type {Surroundings} from './surroundings.ts';
 
 export async function openAtTerminal({units, ascii, car}: Request, around: Surroundings): Promise<void> {
-	const {openScreen} = await import('../screens/open.tsx');
 	const home = homeDirectory(around.environment);
 	const [tracks, cars] = [shelf('track', around), shelf('car', around)];
 	const catalog = [...openDocuments('track', tracks.entries, around), ...openDocuments('car', cars.entries, around)];

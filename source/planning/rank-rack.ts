@@ -3,7 +3,7 @@ import type {Car} from '../drivetrain/car.ts';
 import type {Track} from '../drivetrain/track.ts';
 import type {Ground} from './checks/check.ts';
 import {done} from './faults.ts';
-import {compareRows} from './order.ts';
+import {compareRows, type Judged} from './order.ts';
 import {type PlanOptions, settingOf} from './plan.ts';
 import {reasonsOf} from './reasons.ts';
 import {remarksOn} from './remarks.ts';
@@ -36,11 +36,17 @@ export function* rankSteps(
 	options: PlanOptions = {},
 ): Generator<Progress, Outcome<Ranked>, void> {
 	const rack = yield* rackSteps(car, track, options);
-	return rack.ok ? done(rankedFrom(rack.value)) : rack;
+	if (!rack.ok) return rack;
+	const {ground, runs} = rack.value;
+	const judged: Judged[] = [];
+	for (const run of runs) {
+		judged.push({run, row: rowOf(run, ground)});
+		yield {done: runs.length, total: runs.length};
+	}
+	return done(rankedFrom(judged.sort(compareRows), rack.value));
 }
 
-function rankedFrom({ground, runs}: RackRuns): Ranked {
-	const judged = runs.map(run => ({run, row: rowOf(run, ground)})).sort(compareRows);
+function rankedFrom(judged: readonly Judged[], {ground, runs}: RackRuns): Ranked {
 	const rows = judged.map(({row}) => row);
 	const installedS = rows.find(({installed}) => installed)?.fastestS ?? null;
 	const reasons = reasonsOf(judged, ground.plan);

@@ -31,6 +31,8 @@ export type Leaving = {
 export function takeTerminal({stopDrawing, lastWords}: Leaving): Taken {
 	let taken = true;
 	writeSync(standardOutput, enter);
+	// Before anything listens: what is typed meanwhile must not be echoed.
+	setRawMode(true);
 
 	const giveBack = () => {
 		if (!taken) return;

@@ -3,7 +3,7 @@ import {absent, unitsOf} from '../../commands/text/units.ts';
 import {wrap} from '../../commands/text/width.ts';
 import {visible} from '../../documents/visible.ts';
 import {beside, blank, clipped, line, type Pieces, piece, tall} from '../parts/pieces.ts';
-import {tableWidth} from '../parts/table-line.ts';
+import {tableBar, tableHeading, tableLine, tableWidth} from '../parts/table-line.ts';
 import type {Wrong} from '../session/answer.ts';
 import {unsaved} from '../session/documents.ts';
 import {scopesOf} from '../session/intend.ts';
@@ -30,6 +30,17 @@ export type Frame = {
 	readonly beside: readonly Pieces[];
 	readonly bottom: readonly Pieces[];
 };
+
+/** All lines from top to bottom, as they are without a component to lay them out. */
+export function frameLines({top, table, beside: side, bottom}: Frame): Pieces[] {
+	if (table === undefined) return [...top, ...bottom];
+	const {columns, rows, selected} = table;
+	const lines = [
+		tableHeading(columns),
+		...rows.map((row, i) => (i === selected ? tableBar(row, columns) : tableLine(row, columns))),
+	];
+	return [...top, ...lines.map((one, i): Pieces => [...one, ...(side[i] ?? [])]), ...bottom];
+}
 
 /** From this width on the reasons stand beside the ranking, or halves beside each other. */
 const wide = 120;

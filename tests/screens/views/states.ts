@@ -2,8 +2,6 @@
 import {displayWidth} from '../../../source/commands/text/width.ts';
 import {rankSteps} from '../../../source/planning/rank-rack.ts';
 import {finish} from '../../../source/planning/run-rack.ts';
-import type {Pieces} from '../../../source/screens/parts/pieces.ts';
-import {tableHeading, tableLine} from '../../../source/screens/parts/table-line.ts';
 import {painted} from '../../../source/screens/parts/theme.ts';
 import type {Answer} from '../../../source/screens/session/answer.ts';
 import {readBoth, wrongFromFault} from '../../../source/screens/session/answer.ts';
@@ -11,7 +9,7 @@ import {choicesFor} from '../../../source/screens/session/catalog.ts';
 import type {State} from '../../../source/screens/session/live.ts';
 import {placedRows, shownRows} from '../../../source/screens/session/rows.ts';
 import type {Session} from '../../../source/screens/session/session.ts';
-import {frameOf, type Size} from '../../../source/screens/views/frame.ts';
+import {frameLines, frameOf, type Size} from '../../../source/screens/views/frame.ts';
 import {catalog} from '../session/documents.ts';
 
 const esc = '\x1B';
@@ -39,14 +37,8 @@ function answerTo({history, situation}: Session): Answer {
 }
 
 /** A frame as its lines of text, without color. */
-export function linesOf(state: State, size: Size): string[] {
-	const {top, table, beside, bottom} = frameOf(state, size, 0);
-	const rows = table ? [tableHeading(table.columns), ...table.rows.map(row => tableLine(row, table.columns))] : [];
-	const middle = rows.map((row, i): Pieces => [...row, ...(beside[i] ?? [])]);
-	return [...top, ...middle, ...bottom].map(pieces =>
-		bare(painted(pieces, {color: false, ascii: size.ascii})).trimEnd(),
-	);
-}
+export const linesOf = (state: State, size: Size): string[] =>
+	frameLines(frameOf(state, size, 0)).map(pieces => bare(painted(pieces, {color: false, ascii: size.ascii})).trimEnd());
 
 /** Without what makes it bold or inverted. */
 export const bare = (text: string): string => text.replace(new RegExp(`${esc}\\[[\\d;]*m`, 'g'), '');
