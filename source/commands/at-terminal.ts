@@ -23,6 +23,8 @@ export async function openAtTerminal({units, ascii, car}: Request, around: Surro
 		units,
 		theme: {color: around.color, ascii},
 		keeper: screenKeeper(home),
+		// The name that Ink gave it.
+		reader: around.environment.INK_SCREEN_READER === 'true',
 		notice: [...tracks.notes, ...cars.notes][0],
 	});
 }

@@ -267,6 +267,18 @@ export function actionFor(key: string, held: readonly Scope[]): ActionName | und
 		?.does;
 }
 
+/** The bindings that work where these scopes hold, each without the keys that an earlier scope takes from it. */
+export function workingIn(held: readonly Scope[]): Binding[] {
+	const taken = new Set<string>();
+	return held.flatMap(scope => {
+		const working = bindingsOf(scope)
+			.map(binding => ({...binding, keys: binding.keys.filter(key => !taken.has(key))}))
+			.filter(({keys}) => keys.length > 0);
+		for (const {keys} of bindingsOf(scope)) for (const key of keys) taken.add(key);
+		return working;
+	});
+}
+
 /** The bindings of a scope, in the order of the table. */
 export const bindingsOf = (scope: Scope): readonly Binding[] => table.filter(binding => binding.scope === scope);
 

@@ -15,11 +15,28 @@ export type Opening = {
 	readonly units: UnitSystem;
 	readonly theme: Theme;
 	readonly keeper: Keeper;
+	/** Whether the screen is read aloud. */
+	readonly reader: boolean;
 	/** Something that a person should know at the start. */
 	readonly notice: string | undefined;
 };
 
 export async function openScreen(opening: Opening): Promise<void> {
+	await (opening.reader ? openForReader(opening) : openOnScreen(opening));
+}
+
+/** Nothing is drawn at a place: Ink writes text, and Ctrl+Z and signals do what they do to every program. */
+async function openForReader(opening: Opening): Promise<void> {
+	let unmount = () => {};
+	const outside = {leave: () => unmount(), suspend() {}, redraw() {}};
+	const live = new LiveSession(sessionOf(opening), opening.catalog, opening.keeper, outside, clock);
+	const {readAloud} = await import('./draw-reader.tsx');
+	const ink = readAloud(live);
+	unmount = ink.unmount;
+	await ink.left;
+}
+
+async function openOnScreen(opening: Opening): Promise<void> {
 	const {keeper, theme} = opening;
 	const screen = new Screen(process.stdout);
 	let unmount = () => {};

@@ -8,6 +8,7 @@ import {
 	keyWords,
 	type Scope,
 	scopes,
+	workingIn,
 } from '../../source/screens/key-table.ts';
 
 const table: readonly Binding[] = bindings;
@@ -29,6 +30,12 @@ test('where something is typed only its own keys are taken, and those that alway
 	expect(actionFor('enter', ['field'])).toBe('accept');
 	expect(actionFor('ctrl+c', ['field'])).toBe('leave');
 	expect(actionFor('ctrl+z', ['choose'])).toBe('suspend');
+});
+
+test('a key that the place takes is not shown for what it does elsewhere', () => {
+	const forms = workingIn(['edit', 'everywhere']);
+	expect(forms.find(({does}) => does === 'edit')).toBeUndefined();
+	expect(forms.find(({does}) => does === 'shorter')?.keys).toEqual(['+']);
 });
 
 test('an unknown key does nothing anywhere', () => {

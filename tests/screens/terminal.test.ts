@@ -167,6 +167,17 @@ test('with --ascii there are ASCII characters only', async () => {
 	expect(pty.screen()).toMatch(/^[\x20-\x7e\n]*$/);
 });
 
+test('for a screen reader it is text in reading order, on the normal screen', async () => {
+	const pty = open({rows: 60, environment: {INK_SCREEN_READER: 'true'}});
+	await pty.waitFor('selected, 1, pair 34/37');
+	expect(pty.emulator.buffer.active.type).toBe('normal');
+	pty.press(down);
+	await pty.waitFor('selected, 2, pair 35/36');
+	expect(pty.screen()).not.toMatch(/[─│▸]/);
+	pty.press('q');
+	expect(await pty.ended()).toMatchObject({exitCode: 0});
+});
+
 test('without a terminal on standard output the ranking is printed', async () => {
 	const {status, out} = await program.run([]);
 	expect(status).toBe(0);

@@ -1,5 +1,5 @@
 /** Every key, those of the place first. */
-import {bindingsOf, keyWords, type Scope, scopes} from '../key-table.ts';
+import {bindingsOf, keyWords, type Scope, scopes, workingIn} from '../key-table.ts';
 import {blank, line, type Pieces, padded, piece} from '../parts/pieces.ts';
 import {marks} from './marks.ts';
 
@@ -7,9 +7,12 @@ const keysWidth = 18;
 
 export function helpView(held: readonly Scope[]): Pieces[] {
 	const others = (Object.keys(scopes) as Scope[]).filter(scope => !held.includes(scope));
+	const working = workingIn(held);
+	const bindings = (scope: Scope) =>
+		held.includes(scope) ? working.filter(binding => binding.scope === scope) : bindingsOf(scope);
 	const sections = [...held, ...others].flatMap((scope): Pieces[] => [
 		line(scopes[scope], 'strong'),
-		...bindingsOf(scope).map(
+		...bindings(scope).map(
 			({keys, words}): Pieces => [
 				piece('  '),
 				padded(keys.map(keyWords).join(' '), keysWidth, 'key'),

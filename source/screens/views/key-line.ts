@@ -1,5 +1,5 @@
 /** The keys of the place: as many as fit, the rest is in the help. */
-import {type Binding, bindingsOf, keyWords, type Scope} from '../key-table.ts';
+import {type Binding, keyWords, type Scope, workingIn} from '../key-table.ts';
 import {clipped, type Piece, type Pieces, piece, widthOf} from '../parts/pieces.ts';
 
 const between = '  ';
@@ -8,7 +8,7 @@ const usualRank = 5;
 
 /** So many lines of keys; help and the way out are always there. */
 export function keyLines(scopes: readonly Scope[], width: number, count: number): Pieces[] {
-	const shown = scopes.flatMap(scope => bindingsOf(scope).filter(({short}) => short !== undefined));
+	const shown = workingIn(scopes).filter(({short}) => short !== undefined);
 	const once = shown.filter((binding, i) => shown.findIndex(other => other.short === binding.short) === i);
 	const last = once.filter(({does}) => does === 'help' || does === 'quit');
 	const rest = once
