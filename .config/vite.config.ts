@@ -33,6 +33,7 @@ export default defineConfig(({command}) => ({
 		},
 	},
 	test: {
+		setupFiles: ['tests/seed.ts'],
 		include: ['tests/**/*.test.ts'],
 		// With the full counts one property may take minutes, on two cores that others use too.
 		testTimeout: process.env.DROPRACK_FULL === '1' ? 900_000 : 30_000,
