@@ -1,0 +1,44 @@
+/** A message as words, with what mail and phones do to text undone. */
+
+export type Word = {text: string /** Counted from 1 in the message as it came. */; line: number};
+
+/** A longer text is no plan: the longest valid one has a part of it. */
+export const longestMessage = 4_000_000;
+
+/**
+ * Compatibility forms, dashes and fraction bars become ASCII, invisible characters go, quote marks of a reply are blanks.
+ * Brackets end a word, so that entries that were joined come apart; a word ends in `-` or `/` only where a line was broken there.
+ */
+export function wordsOf(message: string): Word[] {
+	const words: Word[] = [];
+	const lines = message.split(/\r\n|[\n\r\u2028\u2029]/);
+	lines.forEach((line, i) => {
+		for (const text of plain(line).split(' ')) {
+			if (text === '') continue;
+			const last = words.at(-1);
+			if (last !== undefined && last.line <= i && /[A-Za-z0-9][-/]$/.test(last.text)) last.text += text;
+			else words.push({text, line: i + 1});
+		}
+	});
+	return words;
+}
+
+function plain(line: string): string {
+	return (isAscii(line) ? line : fromForeign(line))
+		.replaceAll('[', ' [')
+		.replaceAll(']', '] ')
+		.replace(/[\s>]+/g, ' ');
+}
+
+function isAscii(line: string): boolean {
+	// biome-ignore lint/suspicious/noControlCharactersInRegex: every ASCII character, controls included
+	return /^[\x00-\x7f]*$/.test(line);
+}
+
+function fromForeign(line: string): string {
+	return line
+		.normalize('NFKC')
+		.replace(/[\u00ad\u061c\u200b-\u200f\u202a-\u202e\u2060-\u206f\ufeff]/g, '')
+		.replace(/[\u2010-\u2015\u2212]/g, '-')
+		.replaceAll('\u2044', '/');
+}
