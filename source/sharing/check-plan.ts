@@ -1,7 +1,6 @@
 /** A plan's JSON held against its shape. */
 import * as z from 'zod/mini';
 import {carFrom} from '../documents/car-from-document.ts';
-import {learnUnits} from '../documents/learn-units.ts';
 import {type Problem, shown} from '../documents/problem.ts';
 import {problemsFrom, unknownUnitsIn} from '../documents/problems-from-issues.ts';
 import {readJson} from '../documents/read-json.ts';
@@ -24,14 +23,21 @@ export async function checkPlan(document: Record<string, unknown>): Promise<Plan
 	const {kind, version} = document;
 	if (kind !== 'plan') return refused('kind', shown(kind), '"plan"');
 	if (version !== 1) return refused('version', shown(version), '1');
-	const first = z.safeParse(planFields(), document);
-	const unknown = first.success ? [] : unknownUnitsIn(first.error.issues);
-	const checked = unknown.length > 0 && (await learnUnits(unknown)) ? z.safeParse(planFields(), document) : first;
+	const checked = await checkFields(document);
 	if (!checked.success) {
 		return {ok: false, problems: problemsFrom(checked.error.issues, document).map(({problem}) => problem)};
 	}
 	const plan = document as PlanDocument;
 	return {ok: true, plan, car: carFrom(checked.data.car), track: trackFrom(checked.data.track)};
+}
+
+/** Units that the table lacks are looked up once, which loads a library. */
+async function checkFields(document: unknown) {
+	const first = z.safeParse(planFields(), document);
+	const unknown = first.success ? [] : unknownUnitsIn(first.error.issues);
+	if (unknown.length === 0) return first;
+	const {learnUnits} = await import('../documents/learn-units.ts');
+	return (await learnUnits(unknown)) ? z.safeParse(planFields(), document) : first;
 }
 
 /** The plan in the text of a JSON file. */

@@ -31,8 +31,8 @@ export function escapeMarked(text: string): string {
 export function unescapeText(escaped: string): string | undefined {
 	if (escaped === emptyText) return '';
 	let broken = false;
-	const text = escaped.replace(/\{-\} ?/g, '').replace(/\{([^{}]*)\}?/g, (_, digits: string) => {
-		const code = /^[0-9a-f]{1,6}$/.test(digits) ? Number.parseInt(digits, 16) : Number.NaN;
+	const text = escaped.replace(/\{-\} ?/g, '').replace(/\{([^{}]*)(\}?)/g, (_, digits: string, end: string) => {
+		const code = end !== '' && /^[0-9a-f]{1,6}$/.test(digits) ? Number.parseInt(digits, 16) : Number.NaN;
 		if (code <= 0x10ffff) return String.fromCodePoint(code);
 		broken = true;
 		return '';

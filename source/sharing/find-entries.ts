@@ -8,7 +8,7 @@ export type Entry = {text: string; line: number};
 export type Found = {ok: true; entries: Entry[]} | {ok: false; problems: Problem[]};
 
 /** Far more than a valid plan has. */
-const mostEntries = 3000;
+export const mostEntries = 3000;
 const newestVersion = 1;
 const asSent = 'the entry as it was sent';
 

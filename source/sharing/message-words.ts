@@ -16,11 +16,18 @@ export function wordsOf(message: string): Word[] {
 		for (const text of plain(line).split(' ')) {
 			if (text === '') continue;
 			const last = words.at(-1);
-			if (last !== undefined && last.line <= i && /[A-Za-z0-9][-/]$/.test(last.text)) last.text += text;
+			if (last !== undefined && last.line <= i && wasBroken(last.text)) last.text += text;
 			else words.push({text, line: i + 1});
 		}
 	});
 	return words;
+}
+
+/** A plan has no longer word, and joining without end would take its time. */
+const longestWord = 200;
+
+function wasBroken(word: string): boolean {
+	return word.length <= longestWord && /[A-Za-z0-9][-/]$/.test(word);
 }
 
 function plain(line: string): string {
@@ -36,9 +43,26 @@ function isAscii(line: string): boolean {
 }
 
 function fromForeign(line: string): string {
-	return line
+	// biome-ignore lint/suspicious/noControlCharactersInRegex: everything outside ASCII
+	return line.replace(/[^\x00-\x7f]/gu, foreign);
+}
+
+const known = new Map<string, string>();
+
+/** Each character once: a message of a million of them is no reason to wait. */
+function foreign(character: string): string {
+	const ready = known.get(character);
+	if (ready !== undefined) return ready;
+	const plainForm = character
 		.normalize('NFKC')
 		.replace(/[\u00ad\u061c\u200b-\u200f\u202a-\u202e\u2060-\u206f\ufeff]/g, '')
 		.replace(/[\u2010-\u2015\u2212]/g, '-')
 		.replaceAll('\u2044', '/');
+	const form = plainForm.length > longestForm ? character : plainForm;
+	if (known.size < mostKnown) known.set(character, form);
+	return form;
 }
+
+/** An ellipsis and a fraction have three characters; what has more is no part of a plan. */
+const longestForm = 3;
+const mostKnown = 1000;

@@ -36,7 +36,9 @@ export type PlanDocument = {
 
 export const longestNotes = 2000;
 /** A reach beyond the limiter may be stated, so above what an engine may turn. */
-const statedRpm: Range = {from: 0, to: 10_000_000};
+const statedRpm: Range = {from: 0, to: 999_999};
+const shiftRpm: Range = {from: 0, to: ranges.rpm.to};
+const shiftedFrom: Range = {from: ranges.gear.from, to: ranges.gear.to - 1};
 const statedRpmOf = (what: string) => wholeNumber(statedRpm, what);
 const sources = ['engine', 'rules', 'track'] as const;
 
@@ -76,7 +78,11 @@ const results = () =>
 			),
 			shifts: list(
 				group(
-					{from: gear('Gear before.'), rpm: statedRpmOf('RPM of the shift.'), light: statedRpmOf('RPM of the light.')},
+					{
+						from: wholeNumber(shiftedFrom, 'Gear before.'),
+						rpm: wholeNumber(shiftRpm, 'RPM of the shift.'),
+						light: wholeNumber(shiftRpm, 'RPM of the light.'),
+					},
 					'A shift.',
 				),
 				[0, ranges.gear.to],

@@ -1,5 +1,5 @@
 /** What a plan says comes out, taken from the row of its pair and set. Whole RPM. */
-import type {Row, Setting, StraightResult} from '../planning/results.ts';
+import type {Row, Setting, Shift, StraightResult} from '../planning/results.ts';
 import type {Stated} from './plan-document.ts';
 
 /** Floating-point noise of a speed turned into RPM and back; less than this is not a whole rev. */
@@ -51,16 +51,25 @@ function pointsOf({name, exitRpm, endRpm, minimumRpm, reachRpm, shifts}: Straigh
 	];
 }
 
-/** Of each gear shifted from, the lowest shift and the lowest light over straights, restarts and situations. */
-export function shiftsByGear(row: Row): ShiftRpm[] {
-	const byGear = new Map<number, ShiftRpm>();
-	for (const {straights, restart} of row.situations) {
-		for (const {shifts} of restart === null ? straights : [...straights, restart]) {
-			for (const {from, rpm, lightRpm} of shifts) {
-				const known = byGear.get(from) ?? {from, rpm, light: lightRpm};
-				byGear.set(from, {from, rpm: Math.min(known.rpm, rpm), light: Math.min(known.light, lightRpm)});
-			}
-		}
+/**
+ * Of each gear shifted from, the lowest shift and the lowest light over straights and situations. A shift that only a restart
+ * makes stands as it is there.
+ */
+export function shiftsByGear({situations}: Row): ShiftRpm[] {
+	const lowest = lowestShifts(situations.flatMap(({restart}) => restart?.shifts ?? []));
+	for (const [from, shift] of lowestShifts(
+		situations.flatMap(({straights}) => straights.flatMap(({shifts}) => shifts)),
+	)) {
+		lowest.set(from, shift);
 	}
-	return [...byGear.values()].sort((one, other) => one.from - other.from);
+	return [...lowest.values()].sort((one, other) => one.from - other.from);
+}
+
+function lowestShifts(shifts: readonly Shift[]): Map<number, ShiftRpm> {
+	const byGear = new Map<number, ShiftRpm>();
+	for (const {from, rpm, lightRpm} of shifts) {
+		const known = byGear.get(from) ?? {from, rpm, light: lightRpm};
+		byGear.set(from, {from, rpm: Math.min(known.rpm, rpm), light: Math.min(known.light, lightRpm)});
+	}
+	return byGear;
 }

@@ -256,7 +256,7 @@ const results = record(
 			minLength: 1,
 			maxLength: 4,
 		}),
-		shifts: fc.array(whole({from: gear, rpm, light: rpm}), {maxLength: 5}),
+		shifts: fc.array(whole({from: fc.integer({min: 1, max: 19}), rpm, light: rpm}), {maxLength: 5}),
 		pitRoad: whole({gear, rpm, tolerance: rpm}),
 		restart: whole({gear, rpm}),
 	},
