@@ -1,24 +1,10 @@
 /** From the words of the command line to a request, or to what is wrong with them. */
 import {parseArgs} from 'node:util';
-import {type Command, commandNamed, commands, type OptionName, option, options} from './command-table.ts';
-import {didYouMean} from './nearest.ts';
-
-export type UnitSystem = 'us' | 'metric';
-
-export type Request = {
-	/** The one argument as it was written; undefined where none was given. */
-	argument: string | undefined;
-	car?: string;
-	situation?: string;
-	top?: number;
-	pair?: {driving: number; driven: number};
-	gearbox?: string;
-	prefer?: string;
-	json: boolean;
-	units: UnitSystem;
-	strict: boolean;
-	ascii: boolean;
-};
+import {didYouMean} from '../documents/nearest.ts';
+import type {Command} from './command.ts';
+import {commandNamed, commands} from './command-table.ts';
+import {type OptionName, option, options} from './options.ts';
+import {type Given, type Request, toRequest} from './request.ts';
 
 export type CommandLine =
 	/** Without a command the request is for the demo. */
@@ -27,7 +13,6 @@ export type CommandLine =
 	| {kind: 'version'}
 	| {kind: 'bad'; message: string};
 
-type Given = Partial<Record<OptionName, string | true>>;
 type Token = {
 	kind: string;
 	name?: string;
@@ -62,7 +47,7 @@ const optionProblem = (
 			written,
 			allowed.map(known => `--${known}`),
 		);
-		return `unknown option ${written}.${meant} ${where} --help lists the options.`;
+		return [`unknown option ${written}.`, meant, `${where} --help lists the options.`].filter(Boolean).join(' ');
 	}
 	if (!allowed.includes(name)) return `${where} takes no ${written}. ${where} --help lists its options.`;
 	const {value} = option(name);
@@ -71,42 +56,12 @@ const optionProblem = (
 	return missing || token.value === '' ? `${written} needs a value: ${written} ${value}.` : undefined;
 };
 
-const pairPattern = /^\s*(\d{1,4})\s*\/\s*(\d{1,4})\s*$/;
-
-/** The request that the options make, or what is wrong with a value. */
-const toRequest = (argument: string | undefined, given: Given): Request | string => {
-	const text = (name: OptionName) => (typeof given[name] === 'string' ? {[name]: given[name]} : {});
-	const request: Request = {
-		argument,
-		json: given.json === true,
-		units: 'us',
-		strict: given.strict === true,
-		ascii: given.ascii === true,
-		...text('car'),
-		...text('situation'),
-		...text('gearbox'),
-		...text('prefer'),
-	};
-	if (given.units === 'metric') request.units = 'metric';
-	else if (given.units !== undefined && given.units !== 'us') return `--units is us or metric, found ${given.units}.`;
-	if (typeof given.top === 'string') {
-		if (!/^[1-9]\d{0,5}$/.test(given.top)) return `--top is a whole number from 1, found ${given.top}.`;
-		request.top = Number(given.top);
-	}
-	if (typeof given.pair === 'string') {
-		const [, driving, driven] = pairPattern.exec(given.pair) ?? [];
-		if (!Number(driving) || !Number(driven)) return `--pair is driving/driven, such as 33/38, found ${given.pair}.`;
-		request.pair = {driving: Number(driving), driven: Number(driven)};
-	}
-	if (argument === '-' && request.car === '-') return 'only one of TRACK and --car can be standard input.';
-	return request;
-};
-
 const unknownCommand = (name: string): string => {
 	const looksLikeFile = name.includes('/') || name.endsWith('.json');
 	const names = commands.map(command => command.name);
-	const meant = looksLikeFile ? ` To rank a track: droprack rank ${name}` : didYouMean(name, names);
-	return `unknown command ${name}.${meant}\nCommands: ${names.join(', ')}. droprack --help says more.`;
+	const meant = looksLikeFile ? `To rank a track: droprack rank ${name}` : didYouMean(name, names);
+	const first = [`unknown command ${name}.`, meant].filter(Boolean).join(' ');
+	return `${first}\nCommands: ${names.join(', ')}. droprack --help says more.`;
 };
 
 /**

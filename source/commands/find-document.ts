@@ -1,6 +1,6 @@
 /** Which document a name means. */
+import {nearest} from '../documents/nearest.ts';
 import {visible} from '../documents/visible.ts';
-import {nearestNames} from './nearest.ts';
 import {badInput, type Found, found} from './reply.ts';
 
 type Named = {name: string; stem: string; from: string; kind: string};
@@ -34,13 +34,26 @@ const ambiguous = (asked: string, matches: readonly Named[]): string =>
 		'\n',
 	);
 
+/** As many as a message lists where none is near. */
+const mostListed = 20;
+
 const unknown = (asked: string, shelved: readonly Named[], what: string): string => {
-	const byName = nearestNames(
+	const near = nearestFew(asked, shelved);
+	const all = shelved.slice(0, mostListed);
+	const left = shelved.length > all.length ? [`  and ${shelved.length - all.length} more`] : [];
+	const lines = near.length > 0 ? ['Nearest:', ...near.map(listed)] : ['There are:', ...all.map(listed), ...left];
+	const hint = 'A file is given with a slash or with the ending .json.';
+	return [`droprack: there is no ${what} called ${visible(asked)}.`, ...lines, hint].join('\n');
+};
+
+/** The nearest by name or stem, then the nearest of the others, and one more. */
+const nearestFew = (asked: string, shelved: readonly Named[], most = 3): Named[] => {
+	const name = nearest(
 		asked,
 		shelved.flatMap(entry => [entry.name, entry.stem]),
 	);
-	const near = shelved.filter(entry => byName.includes(entry.name) || byName.includes(entry.stem));
-	const lines = near.length > 0 ? ['Nearest:', ...near.map(listed)] : ['There are:', ...shelved.map(listed)];
-	const hint = 'A file is given with a slash or with the ending .json.';
-	return [`droprack: there is no ${what} called ${visible(asked)}.`, ...lines, hint].join('\n');
+	if (name === undefined || most === 0) return [];
+	const same = (entry: Named) => entry.name === name || entry.stem === name;
+	const others = shelved.filter(entry => !same(entry));
+	return [...shelved.filter(same), ...nearestFew(asked, others, most - 1)];
 };

@@ -1,5 +1,7 @@
 /** Help, made from the table of commands. */
-import {type Command, commands, type OptionName, option} from './command-table.ts';
+import type {Command} from './command.ts';
+import {commands} from './command-table.ts';
+import {type OptionName, option} from './options.ts';
 
 const width = 80;
 

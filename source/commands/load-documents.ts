@@ -5,10 +5,10 @@ import type {Car} from '../drivetrain/car.ts';
 import type {Track} from '../drivetrain/track.ts';
 import {homeDirectory} from '../store/home.ts';
 import {readPreferences} from '../store/preferences.ts';
-import type {Request} from './arguments.ts';
 import {findDocument, isFileName} from './find-document.ts';
 import {type Input, readFileText, readStandardInput} from './read-input.ts';
 import {badInput, type Found, found} from './reply.ts';
+import type {Request} from './request.ts';
 import {demo, type Kind, shelf} from './shelf.ts';
 import type {Surroundings} from './surroundings.ts';
 

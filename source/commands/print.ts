@@ -1,5 +1,5 @@
 /** A result as text for a terminal or as JSON for programs. */
-import type {Request} from './arguments.ts';
+import type {Request} from './request.ts';
 import type {Surroundings} from './surroundings.ts';
 import type {Block} from './text/blocks.ts';
 import {layOut} from './text/layout.ts';

@@ -1,6 +1,6 @@
 /** `droprack rank`: every pair and gearbox set, best first. */
 import {rankRack} from '../planning/rank-rack.ts';
-import type {CommandRun} from './command-table.ts';
+import type {CommandRun} from './command.ts';
 import {refuseFaults} from './faults.ts';
 import {loadDocuments} from './load-documents.ts';
 import {printJson, printText} from './print.ts';
@@ -10,7 +10,7 @@ import {rankView} from './text/rank-view.ts';
 import {unitsOf} from './text/units.ts';
 
 /** As many rows as a person compares. */
-const shownUnlessAsked = 12;
+const shownUnlessAsked = 8;
 
 export const rank: CommandRun = async (request, around) => {
 	const loaded = await loadDocuments(request, around);

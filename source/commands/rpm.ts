@@ -1,6 +1,6 @@
 /** `droprack rpm`: RPM at every point in every gear. */
 import {rpmTable} from '../planning/rpm-table.ts';
-import type {CommandRun} from './command-table.ts';
+import type {CommandRun} from './command.ts';
 import {refuseFaults} from './faults.ts';
 import {loadDocuments} from './load-documents.ts';
 import {printJson, printText} from './print.ts';

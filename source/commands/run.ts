@@ -1,6 +1,6 @@
 /** `droprack run`: each straight with one pair and set, and all checks. */
 import {runPair} from '../planning/run-pair.ts';
-import type {CommandRun} from './command-table.ts';
+import type {CommandRun} from './command.ts';
 import {refuseFaults} from './faults.ts';
 import {loadDocuments} from './load-documents.ts';
 import {printJson, printText} from './print.ts';

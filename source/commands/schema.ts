@@ -1,6 +1,6 @@
 /** `droprack schema`: the JSON Schema that an editor completes and checks documents with. */
 import {carSchema, trackSchema} from '../documents/schema.ts';
-import type {CommandRun} from './command-table.ts';
+import type {CommandRun} from './command.ts';
 import {printJson} from './print.ts';
 import {badInput, replyDone, replyRefused} from './reply.ts';
 

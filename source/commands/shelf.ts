@@ -21,7 +21,7 @@ export const shelf = (kind: Kind, shipped: URL): Shelved[] =>
 	readDirectory(kind, 'shipped', directoryOf(kind, shipped));
 
 /** The track of the bare command, and the car that is taken where none is named. */
-export const demo = {track: 'short', car: 'demo'} as const;
+export const demo = {track: 'tarrowdale', car: 'demo'} as const;
 
 const directoryOf = (kind: Kind, shipped: URL): string =>
 	fileURLToPath(kind === 'car' ? new URL('cars/', shipped) : shipped);

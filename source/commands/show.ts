@@ -1,5 +1,5 @@
 /** `droprack show`: a named document as it was written. */
-import type {CommandRun} from './command-table.ts';
+import type {CommandRun} from './command.ts';
 import {findDocument, isFileName} from './find-document.ts';
 import {badInput, replyDone, replyRefused} from './reply.ts';
 import {shelf} from './shelf.ts';

@@ -1,5 +1,5 @@
 /** `droprack tracks`: what there is to rank. Loads no reader, so that it answers at once. */
-import type {CommandRun} from './command-table.ts';
+import type {CommandRun} from './command.ts';
 import {printJson, printText} from './print.ts';
 import {replyDone} from './reply.ts';
 import {type Shelved, shelf} from './shelf.ts';

@@ -55,7 +55,7 @@ function given(reading: ChangeReading, input: unknown, context: z.core.ParsePayl
 }
 
 /** The change that a text states. */
-export function changeOf(text: string, dimension: Dimension, range: Range, shareOfWhole = false): ChangeReading {
+function changeOf(text: string, dimension: Dimension, range: Range, shareOfWhole = false): ChangeReading {
 	const reading = quantityOf(text, [dimension, 'share']);
 	if (!reading.ok) return reading;
 	const {value, signed} = reading;

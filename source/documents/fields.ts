@@ -1,5 +1,6 @@
 /** The kinds of fields that documents are made of. Each one reads, says what it allows, and becomes JSON Schema. */
 import * as z from 'zod/mini';
+import {shown} from './problem.ts';
 import {
 	allowedText,
 	type Dimension,
@@ -42,22 +43,14 @@ export function quantity(dimension: Dimension, range: Range, description: string
 	);
 }
 
-export function quantityText(
-	dimensions: readonly Dimension[],
-	description: string,
-	examples = dimensions.map(exampleOf),
-) {
+function quantityText(dimensions: readonly Dimension[], description: string, examples = dimensions.map(exampleOf)) {
 	return z.string({error: allowedText(dimensions)}).check(z.meta({description, examples}));
 }
 
 /** What is wrong with a value outside the range, in the reader's own unit; undefined inside. */
-export function outOfRange(
-	text: string,
-	reading: QuantityReading & {ok: true},
-	range: Range,
-): QuantityProblem | undefined {
+function outOfRange(text: string, reading: QuantityReading & {ok: true}, range: Range): QuantityProblem | undefined {
 	if (isWithin(reading.value, range)) return undefined;
-	return {found: `"${text}"`, allowed: rangeText(range, reading.unit)};
+	return {found: shown(text), allowed: rangeText(range, reading.unit)};
 }
 
 export function isWithin(value: number, {above = -Infinity, from = -Infinity, to}: Range): boolean {

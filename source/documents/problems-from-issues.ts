@@ -2,6 +2,7 @@ import type * as z from 'zod/mini';
 import type {IssueParams} from './fields.ts';
 import {didYouMean} from './nearest.ts';
 import {type Problem, pathText, shown} from './problem.ts';
+import {visible} from './visible.ts';
 
 type Issue = z.core.$ZodIssue;
 /** A problem and where in the document to look for its place. */
@@ -21,9 +22,11 @@ function problemFrom(issue: Issue, document: unknown): Unplaced {
 	const {path} = issue;
 	const params: IssueParams = issue.code === 'custom' ? (issue.params ?? {}) : {};
 	const value = valueAt(document, path);
-	const found = params.found ?? shown(value);
+	// Names from the document stand in what the rules say.
+	const found = visible(params.found ?? shown(value));
+	const allowed = visible(issue.message);
 	const hint = params.hint ?? hintFor(issue, value);
-	return {problem: {path: pathText(path), found, allowed: issue.message, ...(hint !== undefined && {hint})}, path};
+	return {problem: {path: pathText(path), found, allowed, ...(hint !== undefined && {hint: visible(hint)})}, path};
 }
 
 function hintFor(issue: Issue, value: unknown): string | undefined {

@@ -27,7 +27,7 @@ export type Quantity = {
 export type QuantityReading = ({ok: true} & Quantity) | ({ok: false} & QuantityProblem);
 
 /** Longer text is no quantity. */
-export const maxQuantityLength = 200;
+const maxQuantityLength = 200;
 
 const examples: Record<Dimension, string> = {
 	length: '650 ft',

@@ -5,6 +5,7 @@ export const standardGravityMps2 = 9.80665;
 
 /** The inch and the mile (63 360 in) of the international yard and pound agreement (1959), m. Exact. */
 export const inchM = 0.0254;
+export const footM = 0.3048;
 export const mileM = 1609.344;
 
 /** One mile per hour, m/s. Exact. */

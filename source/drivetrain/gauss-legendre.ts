@@ -1,4 +1,10 @@
-export type Quadrature = {readonly nodes: Float64Array; readonly weights: Float64Array};
+export type Quadrature = {
+	readonly nodes: Float64Array;
+	readonly weights: Float64Array;
+	/** Each gives, summed with the integrand's values, one of the last two Legendre coefficients: how much the rule does not see. */
+	readonly lastCoefficient: Float64Array;
+	readonly nextToLastCoefficient: Float64Array;
+};
 
 /** Newton doubles its digits at each step from a start that is good to two of them; more than these are never needed. */
 const cap = 20;
@@ -19,7 +25,17 @@ export function gaussLegendre(order: number): Quadrature {
 		weights[i] = weight;
 		weights[order - 1 - i] = weight;
 	}
-	return {nodes, weights};
+	return {
+		nodes,
+		weights,
+		lastCoefficient: coefficientWeights(nodes, weights, order - 1),
+		nextToLastCoefficient: coefficientWeights(nodes, weights, Math.max(0, order - 2)),
+	};
+}
+
+/** The discrete Legendre coefficient of degree k: (k + 1/2)·Σ w_i·P_k(x_i)·f_i. */
+function coefficientWeights(nodes: Float64Array, weights: Float64Array, degree: number): Float64Array {
+	return nodes.map((node, i) => (degree + 0.5) * weights[i]! * legendre(degree, node).value);
 }
 
 function legendreRoot(order: number, start: number): number {

@@ -5,14 +5,22 @@ import {cellOf} from './monotone-cubic.ts';
 import type {Vehicle} from './straight.ts';
 import {engineRpm, growthReferenceMps, speedAtRpmMps} from './tire.ts';
 
+/** No car on wheels is faster: where every gear ends that no limiter and no growing tire ends before. */
+const fastestMps = 500;
+
+const none: readonly number[] = [];
+
+/** Kinks closer together than this are one. */
+const apartMps = 1e-9;
+
 /** Both sides meet at a crossing, so an integral split this far beside it is off by no more than the square of this. */
 const crossingMps = 1e-7;
 
 export class GearMotion {
-	/** Speed at the limiter: thrust ends above it. Infinity without one. */
+	/** Speed at the limiter: thrust ends above it. The fastest that there is where it is never reached. */
 	readonly limiterMps: number;
-	/** Rising speeds from 0 to the limiter; between two neighbors the acceleration is smooth. */
-	readonly breaks: readonly number[];
+	/** Rising from 0 to the limiter: the speeds at the curve's points, and where the air stands still. */
+	readonly images: readonly number[];
 	readonly #vehicle: Vehicle;
 	readonly #forces: RoadForces;
 	readonly #overall: number;
@@ -21,6 +29,7 @@ export class GearMotion {
 	readonly #thrustFactor: number;
 	readonly #drivenKgM2: number;
 	#cell = 0;
+	#breaks: readonly number[] | undefined;
 
 	/** `overall` is R_k, `efficiency` η_k; `limiterRpm` Infinity looks past the limiter. */
 	constructor(vehicle: Vehicle, forces: RoadForces, overall: number, efficiency: number, limiterRpm: number) {
@@ -31,8 +40,42 @@ export class GearMotion {
 		this.#rpmFactor = 60 * (1 + vehicle.slip) * overall;
 		this.#thrustFactor = 2 * Math.PI * efficiency * overall;
 		this.#drivenKgM2 = vehicle.wheelInertiaKgM2 + vehicle.engineInertiaKgM2 * overall * overall;
-		this.limiterMps = limiterRpm === Number.POSITIVE_INFINITY ? limiterRpm : this.speedAt(limiterRpm);
-		this.breaks = this.#withGripCrossings(this.#curveImages());
+		const limiterMps = limiterRpm === Number.POSITIVE_INFINITY ? limiterRpm : this.speedAt(limiterRpm);
+		this.limiterMps = Math.min(limiterMps, fastestMps);
+		this.images = apart(this.#curveImages());
+	}
+
+	/** Rising speeds from 0 to the limiter; between two neighbors the acceleration is smooth. */
+	get breaks(): readonly number[] {
+		this.#breaks ??= apart(
+			this.images.flatMap((image, i) => [...(i === 0 ? [] : this.gripCrossings(this.images[i - 1]!, image)), image]),
+		);
+		return this.#breaks;
+	}
+
+	/** The speeds between two neighboring images at which grip takes over from the engine or lets go, rising. */
+	gripCrossings(lowMps: number, highMps: number): readonly number[] {
+		const middleMps = (lowMps + highMps) / 2;
+		const low = this.#surplus(lowMps) < 0;
+		const middle = this.#surplus(middleMps) < 0;
+		const high = this.#surplus(highMps) < 0;
+		if (low === middle && middle === high) return none;
+		const crossings: number[] = [];
+		if (low !== middle) this.#addCrossing(lowMps, middleMps, crossings);
+		if (middle !== high) this.#addCrossing(middleMps, highMps, crossings);
+		return crossings;
+	}
+
+	#addCrossing(lowMps: number, highMps: number, crossings: number[]): void {
+		const crossing = brentRoot(speedMps => this.#surplus(speedMps), lowMps, highMps, crossingMps);
+		if (crossing !== undefined && crossing - lowMps > apartMps && highMps - crossing > apartMps)
+			crossings.push(crossing);
+	}
+
+	/** By how much what the engine gives, as acceleration, is above what grip holds, m/s². */
+	#surplus(speedMps: number): number {
+		const {powered, held} = this.#bothSides(speedMps);
+		return powered - held;
 	}
 
 	/** Engine speed under full throttle at a road speed, rev/min. */
@@ -97,31 +140,15 @@ export class GearMotion {
 			const speed = this.speedAt(rpm);
 			if (speed < this.limiterMps) images.push(speed);
 		}
-		if (this.limiterMps < Number.POSITIVE_INFINITY) images.push(this.limiterMps);
+		images.push(this.limiterMps);
 		const still = -this.#forces.headwindMps;
 		if (still > 0 && still < this.limiterMps) images.splice(cellOf(images, still) + 1, 0, still);
 		return images;
 	}
+}
 
-	/** Adds the speeds at which grip takes over from the engine or lets go. */
-	#withGripCrossings(images: number[]): number[] {
-		const surplus = (speedMps: number) => {
-			const {powered, held} = this.#bothSides(speedMps);
-			return powered - held;
-		};
-		const all: number[] = [images[0]!];
-		let [low, atLow] = [images[0]!, surplus(images[0]!)];
-		for (let i = 1; i < images.length; i++) {
-			for (const high of [(images[i - 1]! + images[i]!) / 2, images[i]!]) {
-				const atHigh = surplus(high);
-				if (atLow < 0 !== atHigh < 0) {
-					const crossing = brentRoot(surplus, low, high, crossingMps);
-					if (crossing !== undefined && crossing > low && crossing < high) all.push(crossing);
-				}
-				[low, atLow] = [high, atHigh];
-			}
-			all.push(images[i]!);
-		}
-		return all;
-	}
+/** Without the kinks that a neighbor above, or the start, stands for; both ends stay. */
+function apart(rising: readonly number[]): number[] {
+	const last = rising.length - 1;
+	return rising.filter((speed, i) => i === 0 || i === last || (speed > apartMps && rising[i + 1]! - speed > apartMps));
 }

@@ -1,95 +1,158 @@
 /**
- * The run of `travel.ts` in one gear with its integrals kept: the speeds are cut once into cells, and each cell's distance
- * and time are worked out when a run first crosses it. Same answers, for a rack of runs at a fraction of the work.
+ * The run of `travel.ts` in one gear with its integrals kept: each cell's distance and time are worked out when a run first
+ * crosses it. Same answers, for a rack of runs at a fraction of the work.
  */
 import type {GearMotion} from './gear-motion.ts';
-import {cellOf} from './monotone-cubic.ts';
+import {type Cell, gains, SpeedCells} from './speed-cells.ts';
 import {
-	balancedBetween,
 	brakingDistanceM,
+	cruise,
+	earlierBy,
+	evenly,
 	type Goal,
-	gentle,
+	holds,
 	integrate,
 	integrateSliver,
 	newtonCap,
 	newtonEnd,
 	type Stretch,
-	settled,
 	type Travel,
 } from './travel.ts';
 
+/** The cubic is nearly straight: regula falsi is there in three steps. */
+const guessSteps = 3;
+
+/** Newton squares its error: after a step this small, relatively, nothing is left. */
+const newtonLast = 1e-7;
+
+/** Up to this share of a piece three points of quadrature do. */
+const sliverShare = 0.02;
+
+type Part = {readonly fromMps: number; readonly toMps: number; readonly stretch: Stretch};
+
+const keptParts = 4;
+
 export class GearTable {
 	readonly #motion: GearMotion;
-	/** Rising from 0 to the limiter: the kinks, the speeds at which the acceleration is 0, and cuts between them. */
-	readonly #edges: number[];
-	readonly #cells: Stretch[] = [];
-	#entry: {fromMps: number; toMps: number; piece: Stretch} | undefined;
+	readonly #cells: SpeedCells;
+	/** The parts of cells that were asked for last: every run after a shift starts and ends with the same. */
+	readonly #parts: Part[] = [];
+	#oldest = 0;
 
 	constructor(motion: GearMotion) {
 		this.#motion = motion;
-		this.#edges = cellEdges(motion);
+		this.#cells = new SpeedCells(motion);
 	}
 
 	/** As `travel(motion, fromMps, goal)`. */
 	travel(fromMps: number, goal: Goal): Travel {
-		const rising = this.#motion.acceleration(fromMps) >= 0;
-		let [speed, distance, time] = [fromMps, 0, 0];
-		let cell = cellOf(this.#edges, fromMps);
-		if (!rising && speed === this.#edges[cell]) cell--;
-		for (;;) {
-			if (rising && speed >= goal.toMps) return {speedMps: speed, distanceM: distance, timeS: time, why: 'speed'};
-			if (speed <= 0 && !rising) return {speedMps: 0, distanceM: distance, timeS: time, why: 'stopped'};
-			const room = goal.distanceM - distance - brakingDistanceM(speed, goal.braking);
-			if (room <= 0) return {speedMps: speed, distanceM: distance, timeS: time, why: 'end'};
-			const far = this.#cellEnd(cell, speed, rising, goal);
-			if (Math.abs(far - speed) <= settled * speed)
-				return {speedMps: speed, distanceM: distance + room, timeS: time + room / speed, why: 'end'};
-			const piece = this.#piece(cell, speed, far);
-			if (distance + piece.distanceM + brakingDistanceM(far, goal.braking) > goal.distanceM)
-				return this.#meet({speedMps: speed, distanceM: distance, timeS: time, why: 'end'}, far, piece, goal);
-			distance += piece.distanceM;
-			time += piece.timeS;
-			speed = far;
-			if (rising && far === this.#edges[cell + 1]) cell++;
-			else if (!rising && far === this.#edges[cell]) cell--;
+		let speedMps = fromMps;
+		let distanceM = 0;
+		let timeS = 0;
+		if (speedMps >= goal.toMps) return {speedMps, distanceM, timeS, why: 'speed'};
+		let cell = this.#cells.from(fromMps);
+		const rising = cell !== undefined && gains(cell);
+		while (cell !== undefined) {
+			const room = goal.distanceM - distanceM - brakingDistanceM(speedMps, goal.braking);
+			if (room <= 0) return {speedMps, distanceM, timeS, why: 'end'};
+			const far = farEnd(cell, speedMps, rising, goal);
+			if (holds(this.#motion, speedMps, far)) return cruise({speedMps, distanceM, timeS, why: 'end'}, room);
+			const stretch = this.#stretch(cell, speedMps, far);
+			if (distanceM + stretch.distanceM + brakingDistanceM(far, goal.braking) > goal.distanceM)
+				return this.#meet({speedMps, distanceM, timeS, why: 'end'}, far, stretch, goal);
+			distanceM += stretch.distanceM;
+			timeS += stretch.timeS;
+			speedMps = far;
+			if (rising && speedMps >= goal.toMps) return {speedMps, distanceM, timeS, why: 'speed'};
+			if (rising && far === cell.highMps) cell = this.#cells.above(cell);
+			else if (!rising && far === cell.lowMps) cell = this.#cells.below(cell);
 		}
+		return {speedMps, distanceM, timeS, why: 'stopped'};
 	}
 
-	#cellEnd(cell: number, speedMps: number, rising: boolean, goal: Goal): number {
-		const entry = goal.braking?.entryMps ?? 0;
-		if (!rising) return entry < speedMps && entry > this.#edges[cell]! ? entry : this.#edges[cell]!;
-		const edge = Math.min(this.#edges[cell + 1] ?? goal.toMps, goal.toMps);
-		return entry > speedMps && entry < edge ? entry : edge;
-	}
-
-	/** A whole cell is kept; of the parts, the last one that was asked for: every run after a shift starts with the same. */
-	#piece(cell: number, fromMps: number, toMps: number): Stretch {
-		if (fromMps === this.#edges[cell] && toMps === this.#edges[cell + 1]) {
-			this.#cells[cell] ??= integrate(this.#motion, fromMps, toMps);
-			return this.#cells[cell];
+	/** The speed at which the car was `timeS` seconds before it reached `atMps` gaining speed; 0 where it gains none. */
+	speedBefore(atMps: number, timeS: number): number {
+		let speed = atMps;
+		let left = timeS;
+		for (let cell = this.#cells.under(atMps); cell !== undefined; cell = this.#cells.below(cell)) {
+			const tookS = this.#stretch(cell, cell.lowMps, speed).timeS;
+			if (tookS < 0) return 0;
+			if (tookS >= left) return earlierBy(this.#motion, cell.lowMps, speed, left);
+			left -= tookS;
+			speed = cell.lowMps;
 		}
-		if (this.#entry?.fromMps !== fromMps || this.#entry.toMps !== toMps)
-			this.#entry = {fromMps, toMps, piece: integrate(this.#motion, fromMps, toMps)};
-		return this.#entry.piece;
+		return 0;
 	}
 
-	/** Newton's method from the speed that an even acceleration over the piece would give; each step adds its own short integral. */
+	/** A whole cell is kept, and the last few parts. */
+	#stretch(cell: Cell, fromMps: number, toMps: number): Stretch {
+		if (fromMps === cell.lowMps && toMps === cell.highMps) return this.#cells.stretchOf(cell);
+		for (const part of this.#parts) {
+			if (part.fromMps === fromMps && part.toMps === toMps) return part.stretch;
+		}
+		const stretch = integrate(this.#motion, fromMps, toMps);
+		this.#parts[this.#oldest] = {fromMps, toMps, stretch};
+		this.#oldest = (this.#oldest + 1) % keptParts;
+		return stretch;
+	}
+
+	/** Newton's method from a guess that is nearly there; each step adds its own short integral. */
 	#meet(here: Travel, farMps: number, whole: Stretch, goal: Goal): Travel {
-		const [low, high] = here.speedMps < farMps ? [here.speedMps, farMps] : [farMps, here.speedMps];
-		const room = (speedMps: number, distanceM: number) =>
-			goal.distanceM - here.distanceM - distanceM - brakingDistanceM(speedMps, goal.braking);
-		let speed = evenGuess(here.speedMps, farMps, room(here.speedMps, 0), room(farMps, whole.distanceM));
+		const low = Math.min(here.speedMps, farMps);
+		const high = Math.max(here.speedMps, farMps);
+		let speed = this.#guess(here, farMps, whole, goal);
 		let {distanceM, timeS} = integrate(this.#motion, here.speedMps, speed);
 		for (let i = 0; i < newtonCap; i++) {
-			const left = room(speed, distanceM);
+			const left = roomM(here, distanceM, speed, goal);
 			const next = Math.min(high, Math.max(low, speed + left / this.#roomSlope(speed, goal)));
-			if (Math.abs(next - speed) <= newtonEnd * speed) break;
-			const step = integrateSliver(this.#motion, speed, next);
+			const change = Math.abs(next - speed);
+			if (change <= newtonEnd * speed) break;
+			const short = change <= sliverShare * (high - low);
+			const step = short ? integrateSliver(this.#motion, speed, next) : integrate(this.#motion, speed, next);
 			distanceM += step.distanceM;
 			timeS += step.timeS;
 			speed = next;
+			if (change <= newtonLast * speed) break;
 		}
-		return {speedMps: speed, distanceM: here.distanceM + distanceM, timeS: here.timeS + timeS, why: 'end'};
+		const there: Travel = {
+			speedMps: speed,
+			distanceM: here.distanceM + distanceM,
+			timeS: here.timeS + timeS,
+			why: 'end',
+			shortlyBefore: here,
+		};
+		return evenly(there, roomM(here, distanceM, speed, goal));
+	}
+
+	/**
+	 * Where the room would fall to 0 if V² ran over the distance as the cubic with the right values and slopes (2·a) at both
+	 * ends of the piece. Braking adds to it in proportion to V².
+	 */
+	#guess(here: Travel, farMps: number, whole: Stretch, goal: Goal): number {
+		const squared = here.speedMps ** 2;
+		const farSquared = farMps ** 2;
+		const slope = 2 * whole.distanceM * this.#motion.acceleration(here.speedMps);
+		const farSlope = 2 * whole.distanceM * this.#motion.acceleration(farMps);
+		const bend = 3 * (farSquared - squared) - 2 * slope - farSlope;
+		const twist = 2 * (squared - farSquared) + slope + farSlope;
+		let low = 0;
+		let lowRoom = roomM(here, 0, here.speedMps, goal);
+		let high = 1;
+		let highRoom = roomM(here, whole.distanceM, farMps, goal);
+		let speed = here.speedMps;
+		for (let i = 0; i < guessSteps; i++) {
+			const part = low + ((high - low) * lowRoom) / (lowRoom - highRoom);
+			speed = Math.sqrt(squared + part * (slope + part * (bend + part * twist)));
+			const room = roomM(here, part * whole.distanceM, speed, goal);
+			if (room > 0) {
+				low = part;
+				lowRoom = room;
+			} else {
+				high = part;
+				highRoom = room;
+			}
+		}
+		return speed;
 	}
 
 	/** By how much the room shrinks for each m/s gained. */
@@ -100,53 +163,14 @@ export class GearTable {
 	}
 }
 
-/** Below this speed nothing is cut any more. */
-const standstillMps = 1e-9;
-
-/** Between two speeds, where the room falls to 0 if it falls evenly with V². */
-function evenGuess(fromMps: number, toMps: number, roomFrom: number, roomTo: number): number {
-	const share = roomFrom / (roomFrom - roomTo);
-	return Math.sqrt(fromMps ** 2 + share * (toMps ** 2 - fromMps ** 2));
+/** The end of the cell on the way, or the goal's speed or the entry speed before it. */
+function farEnd(cell: Cell, speedMps: number, rising: boolean, goal: Goal): number {
+	const entry = goal.braking?.entryMps ?? 0;
+	const edge = rising ? Math.min(cell.highMps, goal.toMps) : cell.lowMps;
+	return (entry > speedMps && entry < edge) || (entry < speedMps && entry > edge) ? entry : edge;
 }
 
-/** A speed and the acceleration there. */
-type Mark = {readonly speedMps: number; readonly mps2: number};
-
-/** The kinks and the speeds of no acceleration, cut until the acceleration changes little over each cell. */
-function cellEdges(motion: GearMotion): number[] {
-	const mark = (speedMps: number): Mark => ({speedMps, mps2: motion.acceleration(speedMps)});
-	let low = mark(motion.breaks[0]!);
-	const edges = [low.speedMps];
-	for (let i = 1; i < motion.breaks.length; i++) {
-		const high = mark(motion.breaks[i]!);
-		const middle = mark((low.speedMps + high.speedMps) / 2);
-		if (gentle(low.mps2, middle.mps2) && gentle(middle.mps2, high.mps2)) edges.push(high.speedMps);
-		else cutAround(motion, low, middle, high, edges);
-		low = high;
-	}
-	return edges;
-}
-
-/** A piece with a zero of the acceleration in it is cut there first. */
-function cutAround(motion: GearMotion, low: Mark, middle: Mark, high: Mark, edges: number[]): void {
-	const zero = balancedBetween(motion, low.speedMps, middle.speedMps, high.speedMps);
-	if (zero === undefined || zero <= low.speedMps || zero >= high.speedMps) {
-		cut(motion, low, high, edges);
-		return;
-	}
-	const balanced = {speedMps: zero, mps2: 0};
-	cut(motion, low, balanced, edges);
-	cut(motion, balanced, high, edges);
-}
-
-function cut(motion: GearMotion, low: Mark, high: Mark, edges: number[]): void {
-	const tiny = high.speedMps - low.speedMps <= settled * high.speedMps || high.speedMps <= standstillMps;
-	if (tiny || gentle(low.mps2, high.mps2)) {
-		edges.push(high.speedMps);
-		return;
-	}
-	const speedMps = (low.speedMps + high.speedMps) / 2;
-	const middle = {speedMps, mps2: motion.acceleration(speedMps)};
-	cut(motion, low, middle, edges);
-	cut(motion, middle, high, edges);
+/** What is left of the distance before the brakes must go on, so far on from a place. */
+function roomM(here: Travel, furtherM: number, speedMps: number, goal: Goal): number {
+	return goal.distanceM - here.distanceM - furtherM - brakingDistanceM(speedMps, goal.braking);
 }

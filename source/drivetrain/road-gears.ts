@@ -5,7 +5,7 @@ import {GearMotion} from './gear-motion.ts';
 import {GearTable} from './gear-table.ts';
 import {shiftSpeedMps} from './shift-point.ts';
 import type {GearTrain, Vehicle} from './straight.ts';
-import {speedBefore} from './travel.ts';
+import {speedAtRpmMps} from './tire.ts';
 
 export type PlannedShift = {
 	/** Where the interruption starts, and the RPM there. */
@@ -48,6 +48,16 @@ export class RoadGears {
 		return this.#tables[gear];
 	}
 
+	/** The speed in a gear above which no straight starts. */
+	topMps(gear: number): number {
+		return this.#speedAt(gear, this.vehicle.topRpm);
+	}
+
+	/** The speed in a gear above which no shift is planned. */
+	capMps(gear: number): number {
+		return this.#speedAt(gear, this.vehicle.shiftCapRpm);
+	}
+
 	/** The shift from a gear to the next. */
 	shift(gear: number): PlannedShift {
 		this.#shifts[gear] ??= this.#planShift(gear);
@@ -56,7 +66,7 @@ export class RoadGears {
 
 	/** The speed one reaction time before the planned shift: where the light must come on. */
 	lightMps(gear: number): number {
-		this.#lights[gear] ??= speedBefore(this.motion(gear), this.shift(gear).speedMps, this.vehicle.reactionTimeS);
+		this.#lights[gear] ??= this.table(gear).speedBefore(this.shift(gear).speedMps, this.vehicle.reactionTimeS);
 		return this.#lights[gear];
 	}
 
@@ -71,9 +81,14 @@ export class RoadGears {
 		return new GearMotion(this.vehicle, this.forces, overall[gear - 1]!, efficiency[gear - 1]!, limiterRpm);
 	}
 
+	#speedAt(gear: number, rpm: number): number {
+		const {rolloutM, growth, slip} = this.vehicle;
+		return speedAtRpmMps(rpm, this.train.overall[gear - 1]!, rolloutM, growth, slip);
+	}
+
 	#planShift(gear: number): PlannedShift {
 		const [here, next] = [this.motion(gear), this.motion(gear + 1)];
-		return this.#shiftAt(gear, shiftSpeedMps(here, next, here.speedAt(this.vehicle.shiftCapRpm)));
+		return this.#shiftAt(gear, shiftSpeedMps(here, next, Math.min(this.capMps(gear), here.limiterMps)));
 	}
 
 	#shiftAt(gear: number, speedMps: number): PlannedShift {

@@ -2,6 +2,7 @@
 import {chosenOf, fastestOf} from './choose-sequence.ts';
 import {RoadGears} from './road-gears.ts';
 import {atExit, brakingOf, type Carry, described, type Entry, type Finish, finished, shifted} from './sequence.ts';
+import {finishesTogether} from './shared-sequences.ts';
 import type {Course, GearTrain, StraightRun, Vehicle} from './straight.ts';
 import {brakingDistanceM, travel} from './travel.ts';
 
@@ -10,10 +11,7 @@ import {brakingDistanceM, travel} from './travel.ts';
  * gear's integrals are kept in `gears` for every run on the same kind of road. Agrees with `runStraightPlainly` to 1e-9.
  */
 export function runStraight(gears: RoadGears, course: Course): StraightRun {
-	return run(gears, course, startGears => {
-		const carry: Carry = (gear, fromMps, goal) => gears.table(gear).travel(fromMps, goal);
-		return startGears.flatMap(first => finishesFrom(gears, course, first, carry));
-	});
+	return run(gears, course, startGears => finishesTogether(gears, course, startGears));
 }
 
 /** The definition: each straight and each sequence by itself, integrated afresh. What the fast way is tested and timed against. */
@@ -47,27 +45,9 @@ const gearsFrom = (lowest: number, highest: number) =>
 
 /** No one starts above the limit, nor in a gear whose shift speed is already behind; a start gear that is given only heeds the limit. */
 function mayStart(gears: RoadGears, course: Course, gear: number): boolean {
-	if (course.startGear !== undefined && gear !== course.startGear) return false;
-	const given = course.startGear === gear;
-	const bound =
-		gear === course.highestGear || given
-			? gears.motion(gear).speedAt(gears.vehicle.topRpm)
-			: gears.shift(gear).speedMps;
-	return course.exitMps <= bound;
-}
-
-/** All sequences from one gear, the longer ones going on from the shorter. */
-function finishesFrom(gears: RoadGears, course: Course, first: number, carry: Carry): (Finish | undefined)[] {
-	const finishes: (Finish | undefined)[] = [];
-	let entered: Entry[] = [];
-	for (let gear = first; ; gear++) {
-		finishes.push(finished(gears, course, first, entered, carry));
-		if (gear === course.highestGear) break;
-		const next = shifted(gears, course, gear, entered.at(-1) ?? atExit(course), carry);
-		if (next === undefined) break;
-		entered = [...entered, next];
-	}
-	return finishes;
+	if (course.startGear !== undefined) return gear === course.startGear && course.exitMps <= gears.topMps(gear);
+	if (gear === course.highestGear) return course.exitMps <= gears.topMps(gear);
+	return course.exitMps <= gears.capMps(gear) && course.exitMps <= gears.shift(gear).speedMps;
 }
 
 function sequence(gears: RoadGears, course: Course, first: number, last: number, carry: Carry): Finish | undefined {

@@ -20,6 +20,8 @@ export type Finish = {
 	/** Where the limiter was met; undefined where it was not. */
 	readonly heldFrom: Place | undefined;
 	readonly fullThrottleEnd: Place;
+	/** A place shortly before the end of full throttle, its distance since the last gear was entered; undefined where none is known. */
+	readonly shortlyBefore: Travel['shortlyBefore'] | undefined;
 	readonly timeS: number;
 	readonly limiterM: number;
 };
@@ -36,7 +38,9 @@ export function brakingOf(course: Course): Braking | undefined {
 export function shifted(gears: RoadGears, course: Course, gear: number, from: Place, carry: Carry): Entry | undefined {
 	const {speedMps: shiftMps, coasted} = gears.shiftFrom(gear, from.speedMps);
 	const braking = brakingOf(course);
-	const run = carry(gear, from.speedMps, {distanceM: course.lengthM - from.distanceM, toMps: shiftMps, braking});
+	const atOnce = {distanceM: 0, timeS: 0, why: 'speed'};
+	const goal = {distanceM: course.lengthM - from.distanceM, toMps: shiftMps, braking};
+	const run = from.speedMps >= shiftMps ? atOnce : carry(gear, from.speedMps, goal);
 	if (run.why !== 'speed') return undefined;
 	const distanceM = from.distanceM + run.distanceM + coasted.distanceM;
 	const {speedMps} = coasted;
@@ -61,20 +65,21 @@ export function finished(
 		braking,
 	});
 	if (run.why === 'stopped') return undefined;
-	const reached = {
-		speedMps: run.speedMps,
-		distanceM: from.distanceM + run.distanceM,
-		timeS: from.timeS + run.timeS,
+	const speedMps = run.speedMps;
+	const distanceM = from.distanceM + run.distanceM;
+	const timeS = from.timeS + run.timeS;
+	const heldFrom = run.why === 'speed' ? {speedMps, distanceM, timeS} : undefined;
+	const limiterM = heldFrom === undefined ? 0 : roomM(course, heldFrom, braking);
+	const throttleS = timeS + limiterM / speedMps;
+	return {
+		firstGear,
+		entered,
+		heldFrom,
+		fullThrottleEnd: {speedMps, distanceM: distanceM + limiterM, timeS: throttleS},
+		shortlyBefore: run.shortlyBefore,
+		timeS: throttleS + brakingTimeS(speedMps, braking),
+		limiterM,
 	};
-	const heldFrom = run.why === 'speed' ? reached : undefined;
-	const limiterM = heldFrom === undefined ? 0 : roomM(course, reached, braking);
-	const fullThrottleEnd = {
-		...reached,
-		distanceM: reached.distanceM + limiterM,
-		timeS: reached.timeS + limiterM / reached.speedMps,
-	};
-	const timeS = fullThrottleEnd.timeS + brakingTimeS(fullThrottleEnd.speedMps, braking);
-	return {firstGear, entered, heldFrom, fullThrottleEnd, timeS, limiterM};
 }
 
 /** The whole story of a sequence that reached the end. */
@@ -122,13 +127,10 @@ function highest(course: Course, {firstGear, entered, fullThrottleEnd}: Finish) 
 	return top;
 }
 
-/** The speed that no car on wheels passes: where the search without a limiter ends. */
-const beyondMps = 500;
-
 /** The highest RPM in the gear had the limiter not cut, from where it was met. */
 function reachRpm(gears: RoadGears, course: Course, gear: number, heldFrom: Place): number {
 	const motion = gears.unlimited(gear);
-	const goal = {distanceM: course.lengthM - heldFrom.distanceM, toMps: beyondMps, braking: brakingOf(course)};
+	const goal = {distanceM: course.lengthM - heldFrom.distanceM, toMps: motion.limiterMps, braking: brakingOf(course)};
 	return motion.rpmAt(Math.max(heldFrom.speedMps, travel(motion, heldFrom.speedMps, goal).speedMps));
 }
 

@@ -21,12 +21,12 @@ export function shiftSpeedMps(here: GearMotion, next: GearMotion, capMps: number
 
 /** Whether the lower gear is the better one again anywhere between the cap and its limiter. */
 function worseAbove(advantage: (speedMps: number) => number, here: GearMotion, capMps: number): boolean {
-	const places = [...here.breaks.filter(speed => speed > capMps), (capMps + here.limiterMps) / 2];
+	const places = [...here.images.filter(speed => speed > capMps), (capMps + here.limiterMps) / 2];
 	return here.limiterMps > capMps && places.some(speed => advantage(speed) < 0);
 }
 
-/** The kinks of both gears below the cap and the middles between them, falling. */
+/** The images of the curve's points in both gears below the cap and the middles between them, falling. */
 function downward(here: GearMotion, next: GearMotion, capMps: number): number[] {
-	const kinks = [...here.breaks, ...next.breaks].filter(speed => speed < capMps).sort((a, b) => b - a);
-	return kinks.flatMap((speed, i) => [(speed + (kinks[i - 1] ?? capMps)) / 2, speed]);
+	const images = [...here.images, ...next.images].filter(speed => speed < capMps).sort((a, b) => b - a);
+	return images.flatMap((speed, i) => [(speed + (images[i - 1] ?? capMps)) / 2, speed]);
 }

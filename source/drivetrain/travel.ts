@@ -3,7 +3,7 @@
  * between the kinks of a. Where a falls toward 0 the integral diverges, as it should; the pieces are halved toward that speed.
  */
 import {brentRoot} from './brent.ts';
-import {gaussLegendre, type Quadrature} from './gauss-legendre.ts';
+import {gaussLegendre} from './gauss-legendre.ts';
 import {cellOf} from './monotone-cubic.ts';
 
 export type Motion = {
@@ -32,12 +32,21 @@ export type Travel = {
 	readonly timeS: number;
 	/** `speed`: at the goal's speed; `end`: at the end or the braking point; `stopped`: the car came to rest. */
 	readonly why: 'speed' | 'end' | 'stopped';
+	/** With `end`, where it is known: a place on the way shortly before. */
+	readonly shortlyBefore?: {readonly speedMps: number; readonly distanceM: number};
 };
 
-/** On pieces over which the acceleration changes by no more than a factor of two the error is below 1e-10. */
 const piece = gaussLegendre(6);
 /** For the last, short steps of a search, a small part of a piece. */
 const sliver = gaussLegendre(3);
+
+/**
+ * The rule's error is about the square of its last Legendre coefficients over the mean, so where those are below this it is
+ * below 1e-9, and in practice 1e-11: the coefficients fall on between the last and twice their number.
+ */
+const smooth = 1e-4;
+/** Where it is not that smooth the piece is halved, so often at most: the rest of a kink is then below 1e-6 of the piece. */
+const mostHalvings = 10;
 
 /** A piece is halved until the acceleration at its end is within this factor of that at its start. */
 const steepest = 0.4;
@@ -47,7 +56,7 @@ export const settled = 1e-13;
 
 /** Newton doubles its digits: more steps than this are never needed from a guess inside one piece. */
 export const newtonCap = 12;
-export const newtonEnd = 1e-15;
+export const newtonEnd = 4e-16;
 
 /** The run from a speed until the goal is met, with the driver at full throttle. */
 export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
@@ -59,7 +68,7 @@ export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
 		if (roomM(here, goal) <= 0) return here;
 		const bound = pieceEnd(motion, here.speedMps, rising, goal);
 		const end = gentleEnd(motion, here.speedMps, bound);
-		if (Math.abs(end - here.speedMps) <= settled * here.speedMps) return cruise(here, goal);
+		if (holds(motion, here.speedMps, end)) return cruise(here, roomM(here, goal));
 		const stretch = integrate(motion, here.speedMps, end);
 		const there: Travel = {
 			speedMps: end,
@@ -73,10 +82,37 @@ export function travel(motion: Motion, fromMps: number, goal: Goal): Travel {
 }
 
 /** Distance and time over which the acceleration, of one sign, takes the car from one speed to another inside a piece. */
-export function integrate(motion: Motion, fromMps: number, toMps: number, rule: Quadrature = piece): Stretch {
-	const {nodes, weights} = rule;
-	const [middle, half] = [(fromMps + toMps) / 2, (toMps - fromMps) / 2];
-	let [distanceM, timeS] = [0, 0];
+export function integrate(motion: Motion, fromMps: number, toMps: number, halvings = mostHalvings): Stretch {
+	const {nodes, weights, lastCoefficient, nextToLastCoefficient} = piece;
+	const middle = (fromMps + toMps) / 2;
+	const half = (toMps - fromMps) / 2;
+	let distanceM = 0;
+	let timeS = 0;
+	let last = 0;
+	let nextToLast = 0;
+	for (let i = 0; i < nodes.length; i++) {
+		const speed = middle + half * nodes[i]!;
+		const slowness = 1 / motion.acceleration(speed);
+		timeS += weights[i]! * slowness;
+		distanceM += weights[i]! * slowness * speed;
+		last += lastCoefficient[i]! * slowness;
+		nextToLast += nextToLastCoefficient[i]! * slowness;
+	}
+	if (halvings > 0 && Math.abs(last) + Math.abs(nextToLast) > (smooth / 2) * Math.abs(timeS)) {
+		const one = integrate(motion, fromMps, middle, halvings - 1);
+		const other = integrate(motion, middle, toMps, halvings - 1);
+		return {distanceM: one.distanceM + other.distanceM, timeS: one.timeS + other.timeS};
+	}
+	return {distanceM: distanceM * half, timeS: timeS * half};
+}
+
+/** The same over a small part of a piece. */
+export function integrateSliver(motion: Motion, fromMps: number, toMps: number): Stretch {
+	const {nodes, weights} = sliver;
+	const middle = (fromMps + toMps) / 2;
+	const half = (toMps - fromMps) / 2;
+	let distanceM = 0;
+	let timeS = 0;
 	for (let i = 0; i < nodes.length; i++) {
 		const speed = middle + half * nodes[i]!;
 		const weight = weights[i]! / motion.acceleration(speed);
@@ -84,11 +120,6 @@ export function integrate(motion: Motion, fromMps: number, toMps: number, rule: 
 		distanceM += weight * speed;
 	}
 	return {distanceM: distanceM * half, timeS: timeS * half};
-}
-
-/** The same over a small part of a piece. */
-export function integrateSliver(motion: Motion, fromMps: number, toMps: number): Stretch {
-	return integrate(motion, fromMps, toMps, sliver);
 }
 
 /** Distance under braking from a speed to the entry speed, V² − V_e² = 2·a_b·s; 0 from below it or without braking. */
@@ -107,20 +138,27 @@ function pieceEnd(motion: Motion, speedMps: number, rising: boolean, goal: Goal)
 	const entry = goal.braking?.entryMps ?? 0;
 	const kink = rising ? Math.min(breakAbove(motion, speedMps), goal.toMps) : breakBelow(motion, speedMps);
 	const next = (entry > speedMps && entry < kink) || (entry < speedMps && entry > kink) ? entry : kink;
+	const [start, middle] = [motion.acceleration(speedMps), motion.acceleration((speedMps + next) / 2)];
+	if (gentle(start, middle) && gentle(middle, motion.acceleration(next))) return next;
 	return balancedBefore(motion, speedMps, next) ?? next;
 }
 
-/** The first speed on the way at which the acceleration is 0 or changes sign; undefined where it does neither. */
-function balancedBefore(motion: Motion, fromMps: number, toMps: number): number | undefined {
-	return balancedBetween(motion, fromMps, (fromMps + toMps) / 2, toMps);
-}
+/** In so many steps a piece is looked through for a speed at which the acceleration is 0. */
+const looks = 16;
 
-/** The same on the way over a third speed. What the acceleration is at the very start does not count. */
-export function balancedBetween(motion: Motion, fromMps: number, overMps: number, toMps: number): number | undefined {
+/** What the acceleration is at the very start does not count: the car may have settled there. Part of the piece. */
+const justAfter = 1e-6;
+
+/** The first speed on the way at which the acceleration is 0 or changes sign; undefined where it does neither. */
+export function balancedBefore(motion: Motion, fromMps: number, toMps: number): number | undefined {
 	const acceleration = (speedMps: number) => motion.acceleration(speedMps);
-	const positive = acceleration((fromMps + overMps) / 2) > 0;
-	if (acceleration(overMps) > 0 !== positive) return brentRoot(acceleration, fromMps, overMps) ?? fromMps;
-	if (acceleration(toMps) > 0 !== positive) return brentRoot(acceleration, overMps, toMps) ?? overMps;
+	const at = (share: number) => fromMps + share * (toMps - fromMps);
+	const positive = acceleration(at(justAfter)) > 0;
+	for (let i = 1; i <= looks; i++) {
+		if (acceleration(at(i / looks)) > 0 === positive) continue;
+		const before = i === 1 ? at(justAfter) : at((i - 1) / looks);
+		return brentRoot(acceleration, before, at(i / looks)) ?? before;
+	}
 	return undefined;
 }
 
@@ -139,10 +177,24 @@ export function gentle(from: number, to: number): boolean {
 	return ratio >= steepest && ratio <= 1 / steepest;
 }
 
-/** The car holds its speed to the end. */
-function cruise(here: Travel, goal: Goal): Travel {
-	const room = roomM(here, goal);
-	return {...here, distanceM: here.distanceM + room, timeS: here.timeS + room / here.speedMps};
+/** Whether the way to the next speed is no way at all and the acceleration falls to 0 on it; a kink or a goal so near is passed. */
+export function holds(motion: Motion, speedMps: number, nextMps: number): boolean {
+	if (Math.abs(nextMps - speedMps) > settled * speedMps) return false;
+	return nextMps === speedMps || !gentle(motion.acceleration(speedMps), motion.acceleration(nextMps));
+}
+
+/** The car holds its speed to the end; at no speed it stands. */
+export function cruise(here: Travel, roomM: number): Travel {
+	return here.speedMps > 0 ? evenly(here, roomM) : {...here, why: 'stopped'};
+}
+
+/**
+ * What is left of the distance at an even speed. Where the acceleration is next to nothing, meters lie between two
+ * neighboring doubles of speed, and a search for the speed at the end leaves as much over.
+ */
+export function evenly(here: Travel, leftM: number): Travel {
+	if (here.speedMps <= 0) return here;
+	return {...here, distanceM: here.distanceM + leftM, timeS: here.timeS + leftM / here.speedMps};
 }
 
 /** Inside the piece that starts here: where the distance ends or the brakes go on. */
@@ -152,30 +204,21 @@ function meet(motion: Motion, here: Travel, endMps: number, goal: Goal): Travel 
 		return {speedMps, distanceM: here.distanceM + part.distanceM, timeS: here.timeS + part.timeS, why: 'end'};
 	};
 	const speed = brentRoot(speedMps => roomM(at(speedMps), goal), here.speedMps, endMps);
-	return at(speed ?? here.speedMps);
+	const there = at(speed ?? here.speedMps);
+	return evenly(there, roomM(there, goal));
 }
 
-/** The speed at which the car was `timeS` seconds before it reached `atMps` gaining speed; 0 where it gains none. */
-export function speedBefore(motion: Motion, atMps: number, timeS: number): number {
-	let [speed, left] = [atMps, timeS];
-	while (speed > 0) {
-		const end = gentleEnd(motion, speed, breakBelow(motion, speed));
-		const tookS = integrate(motion, end, speed).timeS;
-		if (tookS < 0) return 0;
-		if (tookS >= left) return earlierBy(motion, end, speed, left);
-		left -= tookS;
-		speed = end;
-	}
-	return 0;
-}
-
-/** Inside one piece: Newton's method on the time, from the speed that an even acceleration would give. */
-function earlierBy(motion: Motion, lowMps: number, atMps: number, timeS: number): number {
+/**
+ * The speed at which the car, gaining speed inside one piece, was `timeS` seconds before it reached `atMps`, not below
+ * `lowMps`: Newton's method on the time, from the speed that an even acceleration would give.
+ */
+export function earlierBy(motion: Motion, lowMps: number, atMps: number, timeS: number): number {
 	const slowed = (fromMps: number, byS: number) => Math.max(lowMps, fromMps - byS * motion.acceleration(fromMps));
 	let speed = slowed(atMps, timeS);
 	let left = timeS - integrate(motion, speed, atMps).timeS;
-	for (let i = 0; i < newtonCap && Math.abs(left) > newtonEnd * timeS; i++) {
+	for (let i = 0; i < newtonCap; i++) {
 		const next = slowed(speed, left);
+		if (Math.abs(next - speed) <= newtonEnd * speed) break;
 		left -= integrateSliver(motion, next, speed).timeS;
 		speed = next;
 	}

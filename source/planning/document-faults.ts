@@ -1,6 +1,6 @@
 /** Names and gears in car and track that must be found in the other document, or elsewhere in the same one. */
 import {type Car, type Pair, type Rules, trackTypes} from '../drivetrain/car.ts';
-import {pairName} from '../drivetrain/gear-pair.ts';
+import {pairName, pairRatio} from '../drivetrain/gear-pair.ts';
 import type {GearRange, Track} from '../drivetrain/track.ts';
 import {gearboxNamed, mountable, onRack} from './candidates.ts';
 import {gearsOf} from './conditions.ts';
@@ -15,7 +15,17 @@ export function documentFaults(car: Car, track: Track): Fault[] {
 
 export function pairFaults(document: Fault['document'], path: string, car: Car, pair: Pair | undefined): Fault[] {
 	if (pair === undefined || onRack(car, pair)) return [];
-	return [unknownName(document, path, pairName(pair), mountable(car).map(pairName))];
+	return [fault(document, path, `"${pairName(pair)}"`, `a pair on the rack: ${nearestPairs(car, pair)}`)];
+}
+
+/** As many pairs as a reader takes in, nearest in ratio first. */
+const shownPairs = 8;
+
+function nearestPairs(car: Car, pair: Pair): string {
+	const away = (other: Pair) => Math.abs(Math.log(pairRatio(other) / pairRatio(pair)));
+	const sorted = mountable(car).sort((one, other) => away(one) - away(other));
+	const names = sorted.slice(0, shownPairs).map(pairName).join(', ');
+	return sorted.length > shownPairs ? `${names} and ${sorted.length - shownPairs} more` : names;
 }
 
 export function gearboxFaults(document: Fault['document'], path: string, car: Car, name: string | undefined): Fault[] {

@@ -1,6 +1,6 @@
 /** Why a row fails, in one sentence. */
 import type {Check, CheckName, Row} from './results.ts';
-import {feetText, grouped, milesText, placeText} from './words.ts';
+import {feetText, grouped, highestText, milesText, placeText} from './words.ts';
 
 /** The first failed check in words, and how many more fail. */
 export function failureReason(row: Row): string {
@@ -8,16 +8,16 @@ export function failureReason(row: Row): string {
 	const [first, ...more] = failed;
 	if (first === undefined) return '';
 	const words = sentences[first.check] ?? fallback;
-	const others = more.map(({check}) => names[check]);
+	const others = more.map(({check}) => names[check] ?? check);
 	return `${words(first)}${others.length > 0 ? `; also ${others.join(', ')}` : ''}.`;
 }
 
 const where = (check: Check) => placeText(check.at, check.situation);
-const fallback = (check: Check) => `${where(check) || names[check.check]}: ${check.remark ?? 'fails'}`;
+const fallback = (check: Check) => `${where(check) || check.check}: ${check.remark ?? 'fails'}`;
 
 const sentences: Partial<Record<CheckName, (check: Check) => string>> = {
 	limit: check =>
-		`Over the limit: ${grouped(check.value!)} at ${where(check)}, ${grouped(Math.ceil(-check.margin!))} above ${grouped(check.bound!)}`,
+		`Over the limit: ${highestText(check.value!)} at ${where(check)}, ${grouped(Math.ceil(-check.margin!))} above ${grouped(check.bound!)}`,
 	limiter: check => `On the limiter for ${feetText(check.value!)} at ${where(check)}`,
 	permitted: check => `Not permitted: ${check.remark}`,
 	housing: check =>
@@ -28,16 +28,12 @@ const sentences: Partial<Record<CheckName, (check: Check) => string>> = {
 	mileage: check => `Out of miles: ${milesText(check.value!)} of ${milesText(check.bound!)}`,
 };
 
-/** How a check is called in a sentence. */
-const names: Record<CheckName, string> = {
+/** How a check that can fail is called in a sentence. */
+const names: Partial<Record<CheckName, string>> = {
 	limit: 'over the limit',
 	limiter: 'on the limiter',
-	band: 'below the band',
-	afterShift: 'below the band after a shift',
-	settle: 'shifts while unsettled',
-	pitRoad: 'pit road',
-	restart: 'the restart',
-	downshift: 'the downshift',
+	band: 'stops on a straight',
+	restart: 'stops on the restart',
 	permitted: 'not permitted',
 	housing: 'does not fit the housing',
 	stock: 'no set on hand',

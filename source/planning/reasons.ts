@@ -3,7 +3,7 @@ import {failureReason} from './failure-reasons.ts';
 import {type Judged, limitMargin} from './order.ts';
 import type {Plan} from './plan.ts';
 import type {Row} from './results.ts';
-import {grouped, placeText, secondsText} from './words.ts';
+import {grouped, highestText, marginText, placeText, secondsText} from './words.ts';
 
 /** The reasons of rows in their ranked order. */
 export function reasonsOf(rows: readonly Judged[], plan: Plan): string[] {
@@ -18,40 +18,40 @@ export function reasonsOf(rows: readonly Judged[], plan: Plan): string[] {
 }
 
 function withNone(reason: string, place: number, passing: number, total: number): string {
-	return place === 0 && passing === 0 && total > 1 ? `None of ${total} passes. ${reason}` : reason;
+	return place === 0 && passing === 0 && total > 1 ? `Each of the ${total} fails a check. ${reason}` : reason;
 }
 
 function firstReason(row: Row, second: Row | undefined, passing: number, total: number, plan: Plan): string {
-	if (second === undefined) return `The only one of ${grouped(total)} that passes: ${highestText(row)}.`;
+	if (second === undefined) return `The only one of ${grouped(total)} that fails no check: ${topText(row)}.`;
 	if (row.fastestS === null || second.fastestS === null) {
-		return `Widest margin of ${grouped(passing)} that pass, without times: ${highestText(row)}.`;
+		return `Widest margin of ${grouped(passing)} that fail no check, without times: ${topText(row)}.`;
 	}
 	const ahead = second.fastestS - row.fastestS;
-	const lead = `Fastest of ${grouped(passing)} that pass`;
+	const lead = `Fastest of ${grouped(passing)} that fail no check`;
 	if (ahead > plan.car.margins.levelS)
-		return `${lead}: ${secondsText(ahead)} a lap ahead of ${nameOf(second)}; ${highestText(row)}.`;
+		return `${lead}: ${secondsText(ahead)} a lap ahead of ${nameOf(second)}; ${topText(row)}.`;
 	return `${lead}, level with ${nameOf(second)} (${secondsText(ahead)} a lap): ${differences(row, second)}.`;
 }
 
 function laterReason(row: Row, first: Row, plan: Plan): string {
-	if (row.fastestS === null || first.fastestS === null) return `${sentence(highestText(row))}.`;
+	if (row.fastestS === null || first.fastestS === null) return `${sentence(topText(row))}.`;
 	const behind = row.fastestS - first.fastestS;
 	if (behind <= plan.car.margins.levelS) {
 		return `Level with ${nameOf(first)} (${secondsText(behind)} a lap slower): ${differences(row, first)}.`;
 	}
-	return `${secondsText(behind)} a lap slower than ${nameOf(first)}${mostOn(row, first, plan)}; ${marginText(row)}.`;
+	return `${secondsText(behind)} a lap slower than ${nameOf(first)}${mostOn(row, first, plan)}; ${underLimit(row)}.`;
 }
 
 /** What tells two rows of the same time apart: margin to the limit, shifts, and how fast the engine turns at the ends. */
 function differences(row: Row, other: Row): string {
-	const pairs: [string, number, string, number][] = [
-		['margin', limitMargin(row), ' rpm', limitMargin(other)],
-		['', shiftCount(row), shiftCount(row) === 1 ? ' shift' : ' shifts', shiftCount(other)],
-		['at most', highestEndRpm(row), ' rpm at an end', highestEndRpm(other)],
+	const pairs: [string, string, string, string][] = [
+		['margin', marginText(limitMargin(row)), ' rpm', marginText(limitMargin(other))],
+		['', grouped(shiftCount(row)), shiftCount(row) === 1 ? ' shift' : ' shifts', grouped(shiftCount(other))],
+		['at most', highestText(highestEndRpm(row)), ' rpm at an end', highestText(highestEndRpm(other))],
 	];
 	const words = pairs
-		.filter(([, mine, , its]) => grouped(mine) !== grouped(its))
-		.map(([name, mine, unit, its]) => `${name} ${grouped(mine)}${unit} against ${grouped(its)}`.trim());
+		.filter(([, mine, , its]) => mine !== its)
+		.map(([name, mine, unit, its]) => `${name} ${mine}${unit} against ${its}`.trim());
 	return words.length === 0 ? 'the same margin and shifts' : words.join(', ');
 }
 
@@ -76,14 +76,14 @@ function lossesByStraight(row: Row, first: Row, plan: Plan): number[] {
 	);
 }
 
-function highestText(row: Row): string {
+function topText(row: Row): string {
 	const check = row.checks.find(({check}) => check === 'limit');
 	if (check?.value == null) return 'no RPM to show';
-	return `highest RPM ${grouped(check.value)} at ${placeText(check.at, check.situation)}, ${marginText(row)}`;
+	return `highest RPM ${highestText(check.value)} at ${placeText(check.at, check.situation)}, ${underLimit(row)}`;
 }
 
-function marginText(row: Row): string {
-	const margin = grouped(limitMargin(row));
+function underLimit(row: Row): string {
+	const margin = marginText(limitMargin(row));
 	return margin === '0' ? 'at the limit' : `${margin} under the limit`;
 }
 

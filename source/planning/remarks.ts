@@ -41,9 +41,12 @@ function airRemarks({conditions, engine}: Plan): string[] {
 function windRemarks({conditions, track}: Plan): string[] {
 	const windy = conditions.filter(({wind}) => (wind.speedMps ?? 0) > 0);
 	if (windy.length === 0) return [];
-	if (windy.some(({wind}) => wind.fromRad === undefined)) return ['Wind without a direction is left out.'];
+	const aimless = windy.some(({wind}) => wind.fromRad === undefined);
 	const without = track.straights.filter(({headingRad}) => headingRad === undefined).map(({name}) => name);
-	return without.length === 0 ? [] : [`No wind on ${listed(without)}: no heading given.`];
+	return [
+		...(aimless ? ['Wind without a direction is left out.'] : []),
+		...(without.length > 0 ? [`No wind on ${listed(without)}: no heading given.`] : []),
+	];
 }
 
 function lapRemarks({track}: Plan): string[] {

@@ -11,7 +11,7 @@ export function runRemarks(plan: Plan, rows: readonly RowRun[]): string[] {
 			plan,
 			rows,
 			run => run.sequence?.entryMissed === true,
-			'the entry speed is never reached, no braking',
+			'runs below its entry speed, without braking,',
 		),
 		...curveRemarks(plan, rows),
 	];

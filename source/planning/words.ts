@@ -1,16 +1,26 @@
 /** Numbers inside sentences: reasons, remarks and faults. Speeds in mph, lengths in ft, as they are read at the track. */
-const mileM = 1609.344;
-const footM = 0.3048;
-const mphMps = mileM / 3600;
+import {footM, mileM, mphMps} from '../drivetrain/constants.ts';
 
-/** "8,820": no decimals, thousands separated. */
+/** "8820", "12,400": no decimals; thousands are set apart from five digits on, as a tachometer has four. */
 export function grouped(value: number): string {
-	return Math.round(value)
-		.toString()
-		.replace(/\B(?=(\d{3})+$)/g, ',');
+	const digits = Math.round(value).toString();
+	return digits.length < 5 ? digits : digits.replace(/\B(?=(\d{3})+$)/g, ',');
 }
 
-/** "9,310 rpm" */
+/** An RPM that was turned into a speed and back is the same to within this. */
+export const roundingRpm = 1e-6;
+
+/** A highest RPM: rounded up, so that no one reads less than the engine turns. */
+export function highestText(rpm: number): string {
+	return grouped(Math.ceil(rpm - roundingRpm));
+}
+
+/** A margin in rpm: rounded down. */
+export function marginText(rpm: number): string {
+	return grouped(Math.floor(rpm + roundingRpm));
+}
+
+/** "9310 rpm" */
 export function rpmText(rpm: number): string {
 	return `${grouped(rpm)} rpm`;
 }
@@ -25,13 +35,14 @@ export function feetText(lengthM: number): string {
 	return `${grouped(lengthM / footM)} ft`;
 }
 
-/** "1,200 miles" */
+/** "1200 miles" */
 export function milesText(lengthM: number): string {
 	return `${grouped(lengthM / mileM)} miles`;
 }
 
 /** "0.021 s" */
 export function secondsText(timeS: number): string {
+	if (timeS < 0.0005) return 'under 0.001 s';
 	return `${timeS.toFixed(3)} s`;
 }
 

@@ -3,6 +3,7 @@ import {describe, expect, test} from 'vitest';
 import {inchM, mileM, mphMps} from '../../source/drivetrain/constants.ts';
 import {circumferenceM, engineRpm, harmonicRolloutM, speedAtRpmMps} from '../../source/drivetrain/tire.ts';
 import {relativeError} from '../close.ts';
+import {roadCars} from '../road-cars.ts';
 import {runs} from '../runs.ts';
 
 const rollout = fc.double({min: 1, max: 4, noNaN: true});
@@ -115,36 +116,11 @@ describe('road speed at an engine speed', () => {
 	});
 });
 
-// Published: Consumer Reports, April 1990, as R's rpart::car90: tire, overall ratio in high gear, engine rpm at 60 mph. The
-// ratio is rounded to 0.01 and the rpm to 5.
-const cars: readonly [size: string, overall: number, rpm: number][] = [
-	['185/70R14', 2.51, 2160],
-	['185/70R14', 2.55, 2195],
-	['185/70R14', 2.78, 2390],
-	['185/70R14', 2.94, 2530],
-	['185/70R14', 3.04, 2615],
-	['185/70R14', 3.27, 2810],
-	['185/70R14', 2.71, 2330],
-	['175/70R13', 3.13, 2855],
-	['175/70R13', 3.27, 2980],
-	['175/70R13', 2.75, 2510],
-	['205/60R15', 2.95, 2505],
-	['205/60R15', 3.27, 2775],
-	['205/60R15', 2.51, 2130],
-	['205/60R15', 2.86, 2430],
-	['185/60R14', 3.5, 3225],
-	['185/60R14', 3.26, 3000],
-	['195/60R14', 3.26, 2935],
-	['195/60R14', 3.47, 3125],
-	['185/65R15', 3.27, 2780],
-	['185/65R15', 2.71, 2305],
-];
-
 test('the rollout learned from one road car predicts the RPM of every other car on that tire size within rounding', () => {
 	let predictions = 0;
-	for (const [size, knownOverall, knownRpm] of cars) {
+	for (const [size, knownOverall, knownRpm] of roadCars) {
 		const rolloutM = (mileM * knownOverall) / knownRpm;
-		for (const [, other, rpm] of cars.filter(car => car[0] === size && car[1] !== knownOverall)) {
+		for (const [, other, rpm] of roadCars.filter(car => car[0] === size && car[1] !== knownOverall)) {
 			expect(relativeError(engineRpm(60 * mphMps, other, rolloutM, 0, 0), rpm)).toBeLessThan(0.0035);
 			predictions++;
 		}
@@ -153,7 +129,7 @@ test('the rollout learned from one road car predicts the RPM of every other car 
 });
 
 test('revolutions a mile are those of the magazine', () => {
-	// Published as above: 860.5 rev/mi for 185/70R14 is the median of eleven cars; 799.4 for 275/40R17 is one car, 1.67 and 1335 rpm.
+	// Published, as the table of road cars: 860.5 rev/mi for 185/70R14 is the median of eleven cars; 799.4 for 275/40R17 is one car, 1.67 and 1335 rpm.
 	expect(relativeError(engineRpm(60 * mphMps, 2.51, mileM / 860.5, 0, 0), 2160)).toBeLessThan(1e-4);
 	expect(relativeError(engineRpm(60 * mphMps, 1.67, mileM / 799.4, 0, 0), 1335)).toBeLessThan(1e-4);
 });

@@ -2,25 +2,22 @@
 import type {Check, CheckName} from '../../planning/results.ts';
 import {type Block, cell, type Making, tableOf, text} from './blocks.ts';
 import {verdictCell} from './heading-view.ts';
-import {absent, fixed, rpm, rpmDown, rpmUp, seconds, type Units} from './units.ts';
+import {absent, fixed, rpm, rpmDown, rpmUp, type Units} from './units.ts';
 
 type Words = {
 	label: string;
-	/** What the number counts; rounded so that a bound that is not kept never looks kept. */
-	unit: (units: Units) => string;
+	/** What the numbers count, where it is not RPM. */
+	unit?: (units: Units) => string;
+	/** Rounded so that a bound that is not kept never looks kept. */
 	value: (value: number | null, units: Units) => string;
+	bound?: (value: number | null) => string;
 	margin: (value: number | null, units: Units) => string;
 };
 
-const ofRpm = (label: string, value: (value: number | null) => string): Words => ({
-	label,
-	unit: () => 'rpm',
-	value,
-	margin: rpmDown,
-});
-const ofCount = (label: string, unit: string): Words => {
-	const count = (value: number | null) => (value === null ? absent : fixed(value, 0));
-	return {label, unit: () => unit, value: count, margin: count};
+const ofRpm = (label: string, value: Words['value'], bound = rpm): Words => ({label, value, bound, margin: rpmDown});
+const ofNumber = (label: string, unit: string, digits = 0): Words => {
+	const number = (value: number | null) => (value === null ? absent : fixed(value, digits));
+	return {label, ...(unit && {unit: () => unit}), value: number, margin: number};
 };
 const ofLength = (label: string, quantity: 'distance' | 'longDistance'): Words => {
 	const number = (value: number | null, units: Units) => units.number(quantity, value);
@@ -32,55 +29,40 @@ const words: Record<CheckName, Words> = {
 	limiter: ofLength('on the limiter', 'distance'),
 	band: ofRpm('power band', rpmDown),
 	afterShift: ofRpm('after a shift', rpmDown),
-	settle: {label: 'shift settled', unit: () => 's', value: seconds, margin: seconds},
+	settle: ofNumber('settle', 's', 3),
 	pitRoad: ofRpm('pit road', rpmDown),
 	restart: ofRpm('restart', rpmDown),
-	downshift: ofRpm('downshift', rpmUp),
-	permitted: ofCount('permitted', ''),
-	housing: ofCount('fits the housing', 'teeth'),
-	stock: ofCount('sets on hand', 'sets'),
+	downshift: ofRpm('downshift', rpmUp, rpmDown),
+	permitted: ofNumber('permitted', ''),
+	housing: ofNumber('housing', 'teeth'),
+	stock: ofNumber('on hand', 'sets'),
 	mileage: ofLength('mileage', 'longDistance'),
 };
 
-const columnsFor = (units: Units): Making<Check>[] => {
-	const of = (check: Check) => words[check.check];
-	const number = (check: Check, value: number | null) => of(check).value(value, units);
-	return [
-		{head: 'check', align: 'left', keep: 0, cell: check => cell(of(check).label)},
-		{head: 'verdict', align: 'left', keep: 0, cell: check => verdictCell(check.verdict)},
-		{head: 'value', align: 'right', keep: 1, cell: check => cell(number(check, check.value))},
-		{
-			head: 'bound',
-			align: 'right',
-			keep: 2,
-			cell: check => cell(check.bound === null ? absent : boundText(check, units)),
-		},
-		{head: 'margin', align: 'right', keep: 1, cell: check => cell(of(check).margin(check.margin, units))},
-		{
-			head: 'unit',
-			align: 'left',
-			keep: 3,
-			cell: check => cell(check.value === null ? '' : of(check).unit(units), 'muted'),
-		},
-		{head: 'at', align: 'left', keep: 4, shortest: 10, cell: check => cell(check.at)},
-		{head: 'situation', align: 'left', keep: 5, shortest: 8, cell: check => cell(check.situation, 'muted')},
-	];
+export const checkLabel = (name: CheckName): string => words[name].label;
+
+const labelled = (name: CheckName, units: Units): string => {
+	const {label, unit} = words[name];
+	return unit ? `${label}, ${unit(units)}` : label;
 };
 
-/** A bound is a given number or one to be kept below: never rounded up. */
-const boundText = (check: Check, units: Units): string => {
-	const {unit, value} = words[check.check];
-	return unit(units) === 'rpm'
-		? check.check === 'downshift'
-			? rpmDown(check.bound)
-			: rpm(check.bound)
-		: value(check.bound, units);
+const columnsFor = (units: Units): Making<Check>[] => {
+	const number = (check: Check, value: number | null) => words[check.check].value(value, units);
+	const bound = (check: Check) => words[check.check].bound?.(check.bound) ?? number(check, check.bound);
+	const margin = (check: Check) => words[check.check].margin(check.margin, units);
+	return [
+		{head: 'check', align: 'left', keep: 0, cell: check => cell(labelled(check.check, units))},
+		{head: 'verdict', align: 'left', keep: 0, cell: check => verdictCell(check.verdict)},
+		{head: 'value', align: 'right', keep: 1, cell: check => cell(number(check, check.value))},
+		{head: 'bound', align: 'right', keep: 2, cell: check => cell(bound(check))},
+		{head: 'margin', align: 'right', keep: 1, cell: check => cell(margin(check))},
+		{head: 'at', align: 'left', keep: 3, shortest: 12, cell: check => cell(check.at)},
+		{head: 'situation', align: 'left', keep: 4, shortest: 9, cell: check => cell(check.situation, 'muted')},
+	];
 };
 
 /** The table of checks, and below it what they remark. */
 export const checkView = (checks: readonly Check[], units: Units): Block[] => [
 	tableOf(columnsFor(units), checks),
-	...checks.flatMap(check =>
-		check.remark ? [text(`- ${words[check.check].label}: ${check.remark}`, 'plain', 2)] : [],
-	),
+	...checks.flatMap(check => (check.remark ? [text(`- ${checkLabel(check.check)}: ${check.remark}`, 'plain', 2)] : [])),
 ];

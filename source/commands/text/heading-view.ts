@@ -54,7 +54,7 @@ const settingWords = (setting: Setting, units: Units): string =>
 		`band ${rpm(setting.bandLowRpm)}-${rpm(setting.bandHighRpm)}`,
 		`${units.text('power', setting.peakPowerW)} at ${rpm(setting.peakPowerRpm)} today (correction ${fixed(setting.correction, 3)})`,
 		`air ${units.text('density', setting.airDensityKgM3)}`,
-		setting.anchored ? 'anchored to measured speeds' : 'not anchored to measured speeds',
+		...(setting.anchored ? ['anchored to measured speeds'] : []),
 	].join(' · ');
 
 /** What the reader must know before acting on an answer. */

@@ -1,6 +1,7 @@
 /** The ranking as a person reads it: one line a row, the reasons, the remarks. */
 import type {Check, Ranking, Row} from '../../planning/results.ts';
-import {type Block, cell, gap, line, type Making, tableOf, text} from './blocks.ts';
+import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
+import {checkLabel} from './check-view.ts';
 import {closingView, type Heading, headingView, verdictCell} from './heading-view.ts';
 import {absent, fixed, rpm, rpmDown, rpmUp, seconds, signed, type Units} from './units.ts';
 
@@ -39,10 +40,16 @@ const overBand = ({row, bandLowRpm}: Placed): string => {
 	return signed(lowest === null ? null : lowest - bandLowRpm, 0);
 };
 
+/** The checks that the verdict comes from; nothing beside a pass. */
+const verdictCauses = ({verdict, checks}: Row): string => {
+	const causes = checks.filter(check => verdict !== 'pass' && check.verdict === verdict);
+	return causes.map(({check}) => checkLabel(check)).join(', ');
+};
+
 const columns: readonly Making<Placed>[] = [
 	{head: '#', align: 'right', keep: 0, cell: ({place}) => cell(String(place), 'muted')},
 	{head: 'pair', align: 'left', keep: 0, cell: ({row}) => cell(row.pair + (row.installed ? '*' : ''), 'strong')},
-	{head: 'ratio', align: 'right', keep: 9, cell: ({row}) => cell(fixed(row.pairRatio, 4))},
+	{head: 'ratio', align: 'right', keep: 10, cell: ({row}) => cell(fixed(row.pairRatio, 4))},
 	{head: 'set', align: 'left', keep: 0, shortest: 4, cell: ({row}) => cell(row.gearbox)},
 	{head: 'time s', align: 'right', keep: 1, cell: ({row}) => cell(seconds(row.fastestS))},
 	{head: 'gain s', align: 'right', keep: 5, cell: ({row}) => cell(signed(row.gainS, 3))},
@@ -51,9 +58,21 @@ const columns: readonly Making<Placed>[] = [
 	{head: 'margin', align: 'right', keep: 3, cell: ({row}) => cell(rpmDown(checkOf(row, 'limit')?.margin ?? null))},
 	{head: 'exit rpm', align: 'right', keep: 4, cell: ({row}) => cell(rpm(lowestExitRpm(row)))},
 	{head: 'band', align: 'right', keep: 6, cell: placed => cell(overBand(placed))},
-	{head: 'shifts', align: 'right', keep: 8, cell: ({row}) => cell(shiftsPerLap(row))},
+	{head: 'shifts', align: 'right', keep: 9, cell: ({row}) => cell(shiftsPerLap(row))},
 	{head: 'verdict', align: 'left', keep: 0, cell: ({row}) => verdictCell(row.verdict)},
 ];
+
+const causesColumn: Making<Placed> = {
+	head: 'because of',
+	align: 'left',
+	keep: 8,
+	shortest: 14,
+	cell: ({row}) => cell(verdictCauses(row), 'muted'),
+};
+
+/** The causes have a column where there is one to tell. */
+const columnsFor = (shown: readonly Placed[]): readonly Making<Placed>[] =>
+	shown.some(({row}) => verdictCauses(row) !== '') ? [...columns, causesColumn] : columns;
 
 /** The first rows, and the installed one wherever it stands. */
 const shownRows = ({ranking, top}: RankAnswer): Placed[] =>
@@ -63,10 +82,9 @@ const shownRows = ({ranking, top}: RankAnswer): Placed[] =>
 
 const reasonsView = (shown: readonly Placed[]): Block[] => {
 	const widest = Math.max(...shown.map(({place}) => String(place).length));
-	return shown.map(({place, row}, index) => {
+	return shown.map(({place, row}) => {
 		const start = `${String(place).padStart(widest)}  ${row.pair} ${row.gearbox}  `;
-		if (index === 0) return text(start + row.reason, 'plain', widest + 2);
-		return line(cell(start, 'muted'), cell(row.reason));
+		return text(start + row.reason, 'plain', widest + 2);
 	});
 };
 
@@ -92,7 +110,7 @@ export const rankView = (answer: RankAnswer, units: Units): Block[] => {
 	return [
 		...headingView(heading, what, ranking.setting, units),
 		gap,
-		tableOf(columns, shown),
+		tableOf(columnsFor(shown), shown),
 		text(legend(shown), 'muted', 2),
 		...moreView(answer, shown),
 		gap,

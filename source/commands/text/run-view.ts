@@ -85,7 +85,7 @@ export const situationView = (situation: SituationResult, units: Units): Block[]
 	return [
 		text(`${situation.name} · ${seconds(situation.timeS)} s (fastest ${seconds(situation.fastestS)} s)`, 'strong', 2),
 		tableOf(straightColumns(straights, units), straights, 2),
-		...(shifts.length > 0 ? [tableOf(shiftColumns(units), shifts, 2)] : []),
+		...(shifts.length > 0 ? [gap, tableOf(shiftColumns(units), shifts, 2)] : []),
 		...remarks.map(remark => text(remark, 'plain', 2)),
 		gap,
 	];

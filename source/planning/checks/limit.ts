@@ -4,6 +4,7 @@ import {measuredRpm} from '../measured.ts';
 import type {Verdict} from '../results.ts';
 import type {PlaceRun} from '../run-place.ts';
 import {eachRun, type RowRun} from '../run-row.ts';
+import {roundingRpm} from '../words.ts';
 import {checkOf, type Ground, type Reading, type RowCheck, worseOf} from './check.ts';
 
 export const limit: RowCheck = (row, ground) => {
@@ -16,14 +17,11 @@ export const limit: RowCheck = (row, ground) => {
 	return checkOf('limit', worst);
 };
 
-/** An RPM that was turned into a speed and back is the same to within this. */
-const roundingRpm = 1e-6;
-
 /** Fail above the limit; near within the margin, which halves once the model agrees with what was measured. */
 export function limitVerdict(rpm: number, {plan, anchored}: Ground): Verdict {
 	const margin = plan.limit.rpm - rpm;
 	if (margin < -roundingRpm) return 'fail';
-	return margin < plan.car.margins.limitRpm / (anchored ? 2 : 1) ? 'near' : 'pass';
+	return margin < plan.car.margins.limitRpm / (anchored ? 2 : 1) - roundingRpm ? 'near' : 'pass';
 }
 
 function reading(
@@ -50,7 +48,8 @@ function highest({place, result, sequence}: PlaceRun, situation: string, ground:
 	for (const shift of result.shifts) if (shift.rpm > rpm) offer(shift.rpm, `shift ${shift.from}-${shift.from + 1}`);
 	if (result.minimumRpm !== null) offer(result.minimumRpm, 'minimum');
 	// A restart may be shifted out of early; a straight is driven to its end.
-	if (!place.isRestart && sequence !== undefined) offer(sequence.reachRpm, 'end', 'without the limiter');
+	const reachRpm = place.isRestart ? 0 : (sequence?.reachRpm ?? 0);
+	if (reachRpm > result.endRpm + roundingRpm) offer(reachRpm, 'end', 'without the limiter');
 	return reading(rpm, ground, place.name, part, situation, remark);
 }
 

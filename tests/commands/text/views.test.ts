@@ -29,7 +29,7 @@ test('without air the day is the reference of J1349', () => {
 
 test('the third line says what bounds the answer', () => {
 	expect(rank(160)[2]).toBe(
-		'limit 8900 rpm (track) · band 6904-8790 · 657 hp at 8210 today (correction 0.988) · air 0.0725 lb/ft³ · not anchored to measured speeds',
+		'limit 8900 rpm (track) · band 6904-8790 · 657 hp at 8210 today (correction 0.988) · air 0.0725 lb/ft³',
 	);
 });
 
@@ -40,6 +40,12 @@ test('a row of the ranking, at 120 columns and at 60', () => {
 	expect(lineWith(rank(60), /^ 1 /)).toBe(' 1  33/38   A    12.341     8861      39      6890  pass');
 });
 
+test('the checks that a verdict comes from stand beside it where there is room', () => {
+	const view = rankView({heading, ranking: {setting, remarks: [], rows: [row()]}, top: 1}, us);
+	expect(lineWith(lines(view, 160), /^1 /)).toMatch(/near {5}RPM limit, mileage$/);
+	expect(lineWith(lines(view, 80), /^1 /)).toMatch(/near$/);
+});
+
 test('the installed row is shown and marked wherever it stands', () => {
 	const shown = rank(80).filter(each => /^ ?\d+ {2}\d\d\/\d\d\*? +A {4}\d/.test(each));
 	expect(shown.map(each => each.slice(0, 10))).toEqual([' 1  33/38 ', ' 2  32/39 ', ' 3  31/40 ', '20  32/57*']);
@@ -47,12 +53,13 @@ test('the installed row is shown and marked wherever it stands', () => {
 	expect(rank(80, 20).join('\n')).not.toContain('more;');
 });
 
-test('the first reason is told in full, the others in a line', () => {
+test('every reason is told in full, hanging under its place', () => {
 	const all = rank(60).join('\n');
 	expect(all).toContain(
 		' 1  33/38 A  Fastest of the pairs that keep the limit in\n    every situation; 40 rpm are left in the tow at the end\n    of the front straight.',
 	);
-	expect(all).toMatch(/^ 2 {2}32\/39 A {2}Fastest of the pairs that keep the limit in ev…$/m);
+	expect(all).toContain(' 2  32/39 A  Fastest of the pairs that keep the limit in\n    every situation;');
+	expect(all).not.toContain('…');
 });
 
 test('every answer ends with its remarks and the caution', () => {
@@ -91,9 +98,9 @@ test('a run shows gears, shifts rounded down, pit road and checks', () => {
 	expect(all).toContain('- Back: the car slows on it');
 	expect(all).toContain('Pit road · gear 2 · 4211 rpm at the limit · 4737 at limit and tolerance, never above');
 	expect(lineWith(all, /^RPM limit/)).toBe(
-		'RPM limit         near      8861   8900      39  rpm    Front end        In the tow',
+		'RPM limit           near      8861   8900      39  Front end        In the tow',
 	);
-	expect(lineWith(all, /^mileage/)).toBe('mileage           near      1100   1200     100  mi');
+	expect(lineWith(all, /^mileage/)).toBe('mileage, mi         near      1100   1200     100');
 	expect(all).toContain('- mileage: change the pair soon');
 });
 

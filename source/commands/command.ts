@@ -1,0 +1,18 @@
+/** What a command is: its words for the table and the help, and what runs. */
+import type {OptionName} from './options.ts';
+import type {Reply} from './reply.ts';
+import type {Request} from './request.ts';
+import type {Surroundings} from './surroundings.ts';
+
+export type CommandRun = (request: Request, around: Surroundings) => Promise<Reply>;
+
+export type Command = {
+	name: string;
+	summary: string;
+	/** The one argument, where there is one. */
+	argument?: {name: string; summary: string};
+	options: readonly OptionName[];
+	examples: readonly {line: string; gives: string}[];
+	/** Loads what the command needs, and only that. */
+	load: () => Promise<CommandRun>;
+};

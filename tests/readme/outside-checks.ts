@@ -1,0 +1,9 @@
+/** Everything that the README's table compares, in its order. */
+import {dayAndEngine} from './checks/air.ts';
+import {curve} from './checks/curve.ts';
+import {gearing} from './checks/gearing.ts';
+import {motion} from './checks/motion.ts';
+import {tires} from './checks/tires.ts';
+import type {OutsideCheck} from './outside-check.ts';
+
+export const outsideChecks: readonly OutsideCheck[] = [...gearing, ...tires, ...dayAndEngine, ...curve, ...motion];
