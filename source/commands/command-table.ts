@@ -1,5 +1,6 @@
 /** Every command once: parsing, help and the messages about unknown ones are made from this table. */
 import type {Command} from './command.ts';
+import {sharingCommands} from './sharing-commands.ts';
 
 const everywhere = ['json', 'units', 'strict', 'ascii', 'help', 'version'] as const;
 const track = {
@@ -83,6 +84,7 @@ export const commands: readonly Command[] = [
 		],
 		load: async () => (await import('./schema.ts')).schema,
 	},
+	...sharingCommands,
 ];
 
 /** The command of that name. */

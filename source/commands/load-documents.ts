@@ -15,6 +15,8 @@ import type {Surroundings} from './surroundings.ts';
 export type Loaded = {
 	track: Track;
 	car: Car;
+	/** As they were written. */
+	documents: {track: Record<string, unknown>; car: Record<string, unknown>};
 	/** What messages call the documents that the two came from. */
 	labels: {track: string; car: string};
 	/** What is worth knowing beside the result. */
@@ -32,7 +34,8 @@ export const loadDocuments = async (request: Request, around: Surroundings): Pro
 		return {...first, message: [...refusals.map(one => one.message), ...choice.reasons].join('\n')};
 	}
 	const labels = {track: track.value.label, car: car.value.label};
-	return found({track: track.value.value, car: car.value.value, labels, notes: choice.notes});
+	const documents = {track: track.value.document, car: car.value.document};
+	return found({track: track.value.value, car: car.value.value, documents, labels, notes: choice.notes});
 };
 
 /** The car asked for, else the preferred one, else the demo car. */
@@ -46,7 +49,7 @@ const chooseCar = (request: Request, around: Surroundings): {car: string; notes:
 	return {car: preferred, notes: [], reasons: [reason]};
 };
 
-type Read<T> = {label: string; value: T};
+type Read<T> = {label: string; value: T; document: Record<string, unknown>};
 
 const load = async <T>(
 	asked: string,
@@ -58,7 +61,8 @@ const load = async <T>(
 	if (!input.ok) return input;
 	const {label, text} = input.value;
 	const reading = await read(text);
-	return reading.ok ? found({label, value: reading.value}) : badInput(describeProblems(label, reading.problems));
+	if (!reading.ok) return badInput(describeProblems(label, reading.problems));
+	return found({label, value: reading.value, document: reading.document});
 };
 
 const inputOf = async (asked: string, kind: Kind, around: Surroundings): Promise<Found<Input>> => {

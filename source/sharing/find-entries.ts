@@ -1,7 +1,7 @@
 /** The entries of a plan inside a message, each held against its check. */
 import {type Problem, shortened} from '../documents/problem.ts';
 import {checkCode, entryCheck} from './check-code.ts';
-import {longestMessage, type Word, wordsOf} from './message-words.ts';
+import {longestMessage, mostWords, type Word, wordsOf} from './message-words.ts';
 import {canonical, closingLabel} from './print-plan.ts';
 
 export type Entry = {text: string; line: number};
@@ -17,6 +17,7 @@ export function findEntries(message: string): Found {
 	if (message.length > longestMessage)
 		return refused({path: '', found: `${message.length} characters`, allowed: `at most ${longestMessage}`});
 	const words = wordsOf(message);
+	if (words === undefined) return refused({path: '', found: 'more words', allowed: `at most ${mostWords}`});
 	const start = words.findIndex((word, i) => word.text === 'DROPRACK' && words[i + 1]?.text === 'PLAN');
 	if (start < 0)
 		return refused({path: '', found: 'no plan', allowed: 'a text with a line that starts "DROPRACK PLAN 1:"'});

@@ -4,22 +4,23 @@ export type Word = {text: string /** Counted from 1 in the message as it came. *
 
 /** A longer text is no plan: the longest valid one has a part of it. */
 export const longestMessage = 4_000_000;
+export const mostWords = 300_000;
 
 /**
  * Compatibility forms, dashes and fraction bars become ASCII, invisible characters go, quote marks of a reply are blanks.
- * Brackets end a word, so that entries that were joined come apart; a word ends in `-` or `/` only where a line was broken there.
+ * Brackets end a word, so that entries that were joined come apart; a word ends in `-` or `/` only where a line was broken
+ * there. Undefined where there are more words than in any plan.
  */
-export function wordsOf(message: string): Word[] {
+export function wordsOf(message: string): Word[] | undefined {
 	const words: Word[] = [];
-	const lines = message.split(/\r\n|[\n\r\u2028\u2029]/);
-	lines.forEach((line, i) => {
+	for (const [i, line] of message.split(/\r\n|[\n\r\u2028\u2029]/).entries()) {
 		for (const text of plain(line).split(' ')) {
 			if (text === '') continue;
 			const last = words.at(-1);
 			if (last !== undefined && last.line <= i && wasBroken(last.text)) last.text += text;
-			else words.push({text, line: i + 1});
+			else if (words.push({text, line: i + 1}) > mostWords) return undefined;
 		}
-	});
+	}
 	return words;
 }
 
