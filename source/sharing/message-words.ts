@@ -13,16 +13,21 @@ export const mostWords = 300_000;
  */
 export function wordsOf(message: string): Word[] | undefined {
 	const words: Word[] = [];
-	for (const [i, line] of message.split(/\r\n|[\n\r\u2028\u2029]/).entries()) {
-		for (const text of plain(line).split(' ')) {
-			if (text === '') continue;
-			const last = words.at(-1);
-			if (last !== undefined && last.line <= i && wasBroken(last.text)) last.text += text;
-			else if (words.push({text, line: i + 1}) > mostWords) return undefined;
-		}
+	let line = 1;
+	for (const [piece] of message.matchAll(pieces)) {
+		if (lineEnd.test(piece)) line++;
+		const text = lineEnd.test(piece) ? '' : plain(piece);
+		if (text === '') continue;
+		const last = words.at(-1);
+		if (last !== undefined && last.line < line && wasBroken(last.text)) last.text += text;
+		else if (words.push({text, line}) > mostWords) return undefined;
 	}
 	return words;
 }
+
+/** A line end, a check in brackets, or what stands between blanks and quote marks; a byte order mark is no blank here. */
+const pieces = /\r\n|[\n\r\u2028\u2029]|\[(?:[^\s>[\]]|\ufeff)*\]?|(?:[^\s>[\]]|\ufeff)+|\]/g;
+const lineEnd = /^[\r\n\u2028\u2029]/;
 
 /** A plan has no longer word, and joining without end would take its time. */
 const longestWord = 200;
@@ -31,21 +36,18 @@ function wasBroken(word: string): boolean {
 	return word.length <= longestWord && /[A-Za-z0-9][-/]$/.test(word);
 }
 
-function plain(line: string): string {
-	return (isAscii(line) ? line : fromForeign(line))
-		.replaceAll('[', ' [')
-		.replaceAll(']', '] ')
-		.replace(/[\s>]+/g, ' ');
+function plain(piece: string): string {
+	return isAscii(piece) ? piece : fromForeign(piece);
 }
 
-function isAscii(line: string): boolean {
+function isAscii(piece: string): boolean {
 	// biome-ignore lint/suspicious/noControlCharactersInRegex: every ASCII character, controls included
-	return /^[\x00-\x7f]*$/.test(line);
+	return /^[\x00-\x7f]*$/.test(piece);
 }
 
-function fromForeign(line: string): string {
+function fromForeign(piece: string): string {
 	// biome-ignore lint/suspicious/noControlCharactersInRegex: everything outside ASCII
-	return line.replace(/[^\x00-\x7f]/gu, foreign);
+	return piece.replace(/[^\x00-\x7f]/gu, foreign);
 }
 
 const known = new Map<string, string>();
