@@ -21,12 +21,12 @@ const listed = ({name, stem, from, document}: Shelved, preferred: string | undef
 });
 
 export const cars: CommandRun = async (request, around) => {
-	const shelved = shelf('car', around.shipped);
+	const shelved = shelf('car', around);
 	const home = homeDirectory(around.environment);
-	if (request.prefer !== undefined) return prefer(request.prefer, shelved, home);
+	if (request.prefer !== undefined) return prefer(request.prefer, shelved.entries, home);
 	const preferences = readPreferences(home);
-	const notes = preferences.ok ? [] : [preferences.message];
-	const list = shelved.map(car => listed(car, preferences.ok ? preferences.value.car : undefined));
+	const notes = [...shelved.notes, ...(preferences.ok ? [] : [preferences.message])];
+	const list = shelved.entries.map(car => listed(car, preferences.ok ? preferences.value.car : undefined));
 	if (request.json) return replyDone(printJson({cars: list}, request), notes);
 	return replyDone(printText(carListView(list), request, around), notes);
 };

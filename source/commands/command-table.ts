@@ -1,6 +1,7 @@
 /** Every command once: parsing, help and the messages about unknown ones are made from this table. */
 import type {Command} from './command.ts';
 import {sharingCommands} from './sharing-commands.ts';
+import {storeCommands} from './store-commands.ts';
 
 const everywhere = ['json', 'units', 'strict', 'ascii', 'help', 'version'] as const;
 const track = {
@@ -66,7 +67,7 @@ export const commands: readonly Command[] = [
 		name: 'show',
 		summary: 'print a track or a car as a document, to start your own from',
 		argument: {name: 'NAME', summary: 'a saved or shipped track or car'},
-		options: everywhere,
+		options: ['shipped', ...everywhere],
 		examples: [
 			{line: 'droprack show NAME', gives: 'the document as it was written'},
 			{line: 'droprack show NAME > friday.json', gives: 'a file of your own to change'},
@@ -84,6 +85,7 @@ export const commands: readonly Command[] = [
 		],
 		load: async () => (await import('./schema.ts')).schema,
 	},
+	...storeCommands,
 	...sharingCommands,
 ];
 

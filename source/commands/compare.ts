@@ -1,15 +1,13 @@
 /** `droprack compare`: two documents side by side, differences only. */
-import {sep} from 'node:path';
 import {describeProblems, maxDocumentBytes, type Problem, readCar, readTrack} from '../documents/read.ts';
 import {visible} from '../documents/visible.ts';
 import {compare} from '../sharing/compare.ts';
 import {readShared} from '../sharing/read-shared.ts';
 import type {CommandRun} from './command.ts';
-import {findDocument, isFileName} from './find-document.ts';
+import {inputOf} from './document-input.ts';
 import {printJson, printText} from './print.ts';
-import {type Input, readFileText, readStandardInput} from './read-input.ts';
+import {type Input, readFileText} from './read-input.ts';
 import {badInput, type Found, found, replyDone, replyRefused} from './reply.ts';
-import {shelf} from './shelf.ts';
 import type {Surroundings} from './surroundings.ts';
 import {text} from './text/blocks.ts';
 import {differenceTable} from './text/plan-view.ts';
@@ -47,16 +45,11 @@ const alike = (a: Json, b: Json): [Json, Json] | undefined => {
 /** Text files of plans are named by their ending, too. */
 const isTextFile = (asked: string): boolean => /\.(txt|text|md|eml)$/i.test(asked);
 
-const inputOf = async (asked: string, around: Surroundings): Promise<Found<Input>> => {
-	if (asked === '-') return readStandardInput(around.standardInput(), maxDocumentBytes);
-	if (isFileName(asked, sep) || isTextFile(asked)) return readFileText(asked, maxDocumentBytes);
-	const shelved = [...shelf('track', around.shipped), ...shelf('car', around.shipped)];
-	const entry = findDocument(asked, shelved, 'track or car');
-	return entry.ok ? found({label: entry.value.file, text: entry.value.text}) : entry;
-};
+const textOf = async (asked: string, around: Surroundings): Promise<Found<Input>> =>
+	isTextFile(asked) ? readFileText(asked, maxDocumentBytes) : inputOf(asked, ['track', 'car'], around);
 
 const documentOf = async (asked: string, around: Surroundings): Promise<Found<Document>> => {
-	const input = await inputOf(asked, around);
+	const input = await textOf(asked, around);
 	if (!input.ok) return input;
 	const {label, text: content} = input.value;
 	const reading = await readAnyOf(content);

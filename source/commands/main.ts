@@ -34,7 +34,7 @@ const reply = async (words: readonly string[], around: Surroundings): Promise<Re
 };
 
 const whichTrack = (command: string, around: Surroundings): string => {
-	const names = shelf('track', around.shipped).map(({name, stem}) => `  ${visible(name)} (also called ${stem})`);
+	const names = shelf('track', around).entries.map(({name, stem}) => `  ${visible(name)} (also called ${stem})`);
 	return [`droprack ${command}: which TRACK? A file, - for standard input, or one of:`, ...names].join('\n');
 };
 

@@ -61,7 +61,7 @@ const computeAgain = ({plan, car, track}: Plan, label: string): Found<{compared:
 
 /** Against the documents of the same name; of the car, what the plan would hold of it. */
 const ownDifferences = ({plan}: Plan, around: Surroundings): Own => {
-	const named = (kind: Kind, name: unknown) => shelf(kind, around.shipped).find(entry => entry.name === name)?.document;
+	const named = (kind: Kind, name: unknown) => shelf(kind, around).entries.find(entry => entry.name === name)?.document;
 	const [track, car] = [named('track', plan.track.name), named('car', plan.car.name)];
 	return {
 		track: track && compare(track, plan.track),

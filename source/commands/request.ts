@@ -13,10 +13,20 @@ export type Request = {
 	pair?: {driving: number; driven: number};
 	gearbox?: string;
 	prefer?: string;
+	name?: string;
+	from?: string;
+	notes?: string;
+	replace?: boolean;
+	shipped?: boolean;
+	add?: boolean;
+	date?: string;
+	session?: string;
+	rpm?: number;
+	at?: string;
+	remark?: string;
 	short?: boolean;
 	qr?: boolean;
 	copy?: boolean;
-	notes?: string;
 	json: boolean;
 	units: UnitSystem;
 	strict: boolean;
@@ -28,24 +38,41 @@ export type Given = Partial<Record<OptionName, string | true>>;
 
 const pairPattern = /^\s*(\d{1,4})\s*\/\s*(\d{1,4})\s*$/;
 
+/** Options that are taken as they were written. */
+const texts = [
+	'car',
+	'situation',
+	'gearbox',
+	'prefer',
+	'name',
+	'from',
+	'notes',
+	'date',
+	'session',
+	'at',
+	'remark',
+] as const satisfies OptionName[];
+
+const switchesOf = (given: Given) => ({
+	json: given.json === true,
+	strict: given.strict === true,
+	ascii: given.ascii === true,
+	...(given.replace && {replace: true}),
+	...(given.shipped && {shipped: true}),
+	...(given.add && {add: true}),
+	...(given.short && {short: true}),
+	...(given.qr && {qr: true}),
+	...(given.copy && {copy: true}),
+});
+
 /** The request that the options make, or what is wrong with a value. */
 export const toRequest = (argument: string | undefined, given: Given, second?: string): Request | string => {
-	const text = (name: OptionName) => (typeof given[name] === 'string' ? {[name]: given[name]} : {});
 	const request: Request = {
 		argument,
-		json: given.json === true,
 		units: 'us',
-		strict: given.strict === true,
-		ascii: given.ascii === true,
-		...text('car'),
-		...text('situation'),
-		...text('gearbox'),
-		...text('prefer'),
-		...text('notes'),
+		...switchesOf(given),
+		...Object.fromEntries(texts.flatMap(name => (typeof given[name] === 'string' ? [[name, given[name]]] : []))),
 		...(second !== undefined && {second}),
-		...(given.short && {short: true}),
-		...(given.qr && {qr: true}),
-		...(given.copy && {copy: true}),
 	};
 	if (given.units === 'metric') request.units = 'metric';
 	else if (given.units !== undefined && given.units !== 'us') return `--units is us or metric, found ${given.units}.`;
@@ -58,9 +85,19 @@ export const toRequest = (argument: string | undefined, given: Given, second?: s
 		if (!Number(driving) || !Number(driven)) return `--pair is driving/driven, such as 33/38, found ${given.pair}.`;
 		request.pair = {driving: Number(driving), driven: Number(driven)};
 	}
+	if (typeof given.rpm === 'string') {
+		if (!/^[1-9]\d{2,4}$/.test(given.rpm)) return `--rpm is a whole number from 100 to 99999, found ${given.rpm}.`;
+		request.rpm = Number(given.rpm);
+	}
+	if (request.date !== undefined && !isDay(request.date))
+		return `--date is a day such as 2026-05-31, found ${request.date}.`;
 	if ([argument, second, request.car].filter(word => word === '-').length > 1)
 		return second === undefined
 			? 'only one of TRACK and --car can be standard input.'
 			: 'only one document can be standard input.';
 	return request;
 };
+
+/** A day of the calendar, written as in ISO 8601. */
+const isDay = (text: string): boolean =>
+	/^\d{4}-\d\d-\d\d$/.test(text) && new Date(`${text}T00:00:00Z`).toJSON()?.startsWith(text) === true;

@@ -23,7 +23,8 @@ const listed = ({name, stem, from, document}: Shelved): ListedTrack => ({
 });
 
 export const tracks: CommandRun = async (request, around) => {
-	const list = shelf('track', around.shipped).map(listed);
-	if (request.json) return replyDone(printJson({tracks: list}, request));
-	return replyDone(printText(trackListView(list), request, around));
+	const {entries, notes} = shelf('track', around);
+	const list = entries.map(listed);
+	if (request.json) return replyDone(printJson({tracks: list}, request), notes);
+	return replyDone(printText(trackListView(list), request, around), notes);
 };

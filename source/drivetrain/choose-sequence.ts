@@ -7,8 +7,8 @@ export function fastestOf(finishes: readonly Finish[]): Finish {
 }
 
 /**
- * Among those within `sameTimeS` of the fastest: first the ones that never touch the limiter, then the fewest shifts, then
- * the fastest. A shift that gains less than the driver can feel is not worth making.
+ * Among those within `sameTimeS` of the fastest: first the ones that never touch the limiter nor pass the limit, then the
+ * fewest shifts, then the fastest. A shift that gains less than the driver can feel is not worth making.
  */
 export function chosenOf(finishes: readonly Finish[], sameTimeS: number): Finish {
 	const bound = fastestOf(finishes).timeS + sameTimeS;
@@ -18,7 +18,7 @@ export function chosenOf(finishes: readonly Finish[], sameTimeS: number): Finish
 }
 
 function preferred(one: Finish, other: Finish): boolean {
-	const limiter = Number(one.limiterM > 0) - Number(other.limiterM > 0);
+	const limiter = Number(one.pastTop) - Number(other.pastTop);
 	if (limiter !== 0) return limiter < 0;
 	const shifts = one.entered.length - other.entered.length;
 	return shifts !== 0 ? shifts < 0 : one.timeS < other.timeS;

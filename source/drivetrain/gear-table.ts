@@ -49,9 +49,9 @@ export class GearTable {
 		let speedMps = fromMps;
 		let distanceM = 0;
 		let timeS = 0;
-		if (speedMps >= goal.toMps) return {speedMps, distanceM, timeS, why: 'speed'};
 		let cell = this.#cells.from(fromMps);
 		const rising = cell !== undefined && gains(cell);
+		if (rising && speedMps >= goal.toMps) return {speedMps, distanceM, timeS, why: 'speed'};
 		while (cell !== undefined) {
 			const room = goal.distanceM - distanceM - brakingDistanceM(speedMps, goal.braking);
 			if (room <= 0) return {speedMps, distanceM, timeS, why: 'end'};

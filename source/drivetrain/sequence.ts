@@ -24,6 +24,8 @@ export type Finish = {
 	readonly shortlyBefore: Travel['shortlyBefore'] | undefined;
 	readonly timeS: number;
 	readonly limiterM: number;
+	/** On the limiter, or above the limit where the limiter stands higher. */
+	readonly pastTop: boolean;
 };
 
 export const atExit = (course: Course): Place => ({speedMps: course.exitMps, distanceM: 0, timeS: 0});
@@ -79,6 +81,7 @@ export function finished(
 		shortlyBefore: run.shortlyBefore,
 		timeS: throttleS + brakingTimeS(speedMps, braking),
 		limiterM,
+		pastTop: limiterM > 0 || speedMps > gears.topMps(gear) * (1 + Number.EPSILON),
 	};
 }
 

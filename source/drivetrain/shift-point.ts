@@ -5,16 +5,21 @@ import type {GearMotion} from './gear-motion.ts';
 /**
  * The planned shift speed from one gear to the next, m/s: the highest speed at which a_next − a_here goes from negative to
  * positive, where the limiter ends the thrust of the gear at the latest, but never above `capMps`. Stretches where both are
- * equal (grip holds both) do not count. 0 where the lower gear is nowhere better.
+ * equal (grip holds both) do not count. 0 where the lower gear is nowhere better. Signs are looked for at the kinks of both
+ * gears and halfway between them: two crossings closer together than that are not told apart.
  */
 export function shiftSpeedMps(here: GearMotion, next: GearMotion, capMps: number): number {
 	const advantage = (speedMps: number) => next.acceleration(speedMps) - here.acceleration(speedMps);
 	if (advantage(capMps) <= 0 || worseAbove(advantage, here, capMps)) return capMps;
-	let better = capMps;
-	for (const speed of downward(here, next, capMps)) {
-		const at = advantage(speed);
-		if (at > 0) better = speed;
-		else if (at < 0) return brentRoot(advantage, speed, better) ?? better;
+	let lowestBetter = capMps;
+	let above = capMps;
+	for (let kink = kinkBelow(here, next, above); kink !== undefined; kink = kinkBelow(here, next, above)) {
+		for (const speed of [(above + kink) / 2, kink]) {
+			const at = advantage(speed);
+			if (at < 0) return brentRoot(advantage, speed, lowestBetter) ?? lowestBetter;
+			if (at > 0) lowestBetter = speed;
+		}
+		above = kink;
 	}
 	return 0;
 }
@@ -25,8 +30,9 @@ function worseAbove(advantage: (speedMps: number) => number, here: GearMotion, c
 	return here.limiterMps > capMps && places.some(speed => advantage(speed) < 0);
 }
 
-/** The images of the curve's points in both gears below the cap and the middles between them, falling. */
-function downward(here: GearMotion, next: GearMotion, capMps: number): number[] {
-	const images = [...here.images, ...next.images].filter(speed => speed < capMps).sort((a, b) => b - a);
-	return images.flatMap((speed, i) => [(speed + (images[i - 1] ?? capMps)) / 2, speed]);
+/** The next lower image of a point of the curve, in either gear. */
+function kinkBelow(here: GearMotion, next: GearMotion, speedMps: number): number | undefined {
+	const below = ({images}: GearMotion) => images.findLast(image => image < speedMps);
+	const [one, other] = [below(here), below(next)];
+	return one === undefined || (other !== undefined && other > one) ? other : one;
 }

@@ -110,7 +110,7 @@ const standstillMps = 1e-9;
 /** Whether one cell will do for a piece without kinks. */
 function smooth(motion: GearMotion, low: Mark, high: Mark): boolean {
 	const middle = motion.acceleration((low.speedMps + high.speedMps) / 2);
-	return gentle(low.mps2, middle) && gentle(middle, high.mps2);
+	return gentle(low.mps2, middle, high.mps2);
 }
 
 /** Adds the marks up to `high` of a piece without kinks; one with a zero of the acceleration in it is cut there first. */
@@ -129,12 +129,12 @@ function cutSmooth(motion: GearMotion, high: Mark, marks: Mark[]): void {
 }
 
 function halve(motion: GearMotion, low: Mark, high: Mark, marks: Mark[]): void {
+	const middle = markAt(motion, (low.speedMps + high.speedMps) / 2);
 	const tiny = high.speedMps - low.speedMps <= settled * high.speedMps || high.speedMps <= standstillMps;
-	if (tiny || gentle(low.mps2, high.mps2)) {
+	if (tiny || gentle(low.mps2, middle.mps2, high.mps2)) {
 		marks.push(high);
 		return;
 	}
-	const middle = markAt(motion, (low.speedMps + high.speedMps) / 2);
 	halve(motion, low, middle, marks);
 	halve(motion, middle, high, marks);
 }

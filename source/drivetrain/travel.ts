@@ -139,7 +139,7 @@ function pieceEnd(motion: Motion, speedMps: number, rising: boolean, goal: Goal)
 	const kink = rising ? Math.min(breakAbove(motion, speedMps), goal.toMps) : breakBelow(motion, speedMps);
 	const next = (entry > speedMps && entry < kink) || (entry < speedMps && entry > kink) ? entry : kink;
 	const [start, middle] = [motion.acceleration(speedMps), motion.acceleration((speedMps + next) / 2)];
-	if (gentle(start, middle) && gentle(middle, motion.acceleration(next))) return next;
+	if (gentle(start, middle, motion.acceleration(next))) return next;
 	return balancedBefore(motion, speedMps, next) ?? next;
 }
 
@@ -165,22 +165,30 @@ export function balancedBefore(motion: Motion, fromMps: number, toMps: number): 
 /** The end of the piece, drawn nearer until the acceleration changes little over it. */
 function gentleEnd(motion: Motion, fromMps: number, boundMps: number): number {
 	const start = motion.acceleration(fromMps);
-	let end = boundMps;
-	while (Math.abs(end - fromMps) > settled * fromMps && !gentle(start, motion.acceleration(end)))
-		end = (fromMps + end) / 2;
+	let [end, atEnd] = [boundMps, motion.acceleration(boundMps)];
+	while (Math.abs(end - fromMps) > settled * fromMps) {
+		const middle = (fromMps + end) / 2;
+		const atMiddle = motion.acceleration(middle);
+		if (gentle(start, atMiddle, atEnd)) break;
+		[end, atEnd] = [middle, atMiddle];
+	}
 	return end;
 }
 
-/** Whether two accelerations are near enough for one quadrature between them: any pole of 1/a then lies outside the piece by its length. */
-export function gentle(from: number, to: number): boolean {
-	const ratio = to / from;
-	return ratio >= steepest && ratio <= 1 / steepest;
+/**
+ * Whether the accelerations at the start, the middle and the end of a piece are near enough for one quadrature: any pole of
+ * 1/a then lies outside the piece by about its length. The middle tells a dip below 0 between two like ends.
+ */
+export function gentle(start: number, middle: number, end: number): boolean {
+	const ratio = end / start;
+	return middle / start > 0 && ratio >= steepest && ratio <= 1 / steepest;
 }
 
 /** Whether the way to the next speed is no way at all and the acceleration falls to 0 on it; a kink or a goal so near is passed. */
 export function holds(motion: Motion, speedMps: number, nextMps: number): boolean {
 	if (Math.abs(nextMps - speedMps) > settled * speedMps) return false;
-	return nextMps === speedMps || !gentle(motion.acceleration(speedMps), motion.acceleration(nextMps));
+	const [here, next] = [motion.acceleration(speedMps), motion.acceleration(nextMps)];
+	return nextMps === speedMps || !gentle(here, here, next);
 }
 
 /** The car holds its speed to the end; at no speed it stands. */

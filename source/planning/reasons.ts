@@ -1,4 +1,5 @@
 /** One plain sentence for each row: what makes it first, what the others lose and where, which check fails. */
+import {checkNames} from './check-names.ts';
 import {failureReason} from './failure-reasons.ts';
 import {type Judged, limitMargin} from './order.ts';
 import type {Plan} from './plan.ts';
@@ -12,8 +13,10 @@ export function reasonsOf(rows: readonly Judged[], plan: Plan): string[] {
 	if (first === undefined) return [];
 	return rows.map((judged, i) => {
 		if (judged.row.verdict === 'fail') return withNone(failureReason(judged.row), i, passing, rows.length);
-		if (i === 0) return firstReason(first.row, passing > 1 ? rows[1]!.row : undefined, passing, rows.length, plan);
-		return laterReason(judged.row, first.row, plan);
+		const second = passing > 1 ? rows[1]!.row : undefined;
+		const reason =
+			i === 0 ? firstReason(first.row, second, passing, rows.length, plan) : laterReason(judged.row, first.row, plan);
+		return reason + nearCauses(judged.row);
 	});
 }
 
@@ -47,12 +50,20 @@ function differences(row: Row, other: Row): string {
 	const pairs: [string, string, string, string][] = [
 		['margin', marginText(limitMargin(row)), ' rpm', marginText(limitMargin(other))],
 		['', grouped(shiftCount(row)), shiftCount(row) === 1 ? ' shift' : ' shifts', grouped(shiftCount(other))],
-		['at most', highestText(highestEndRpm(row)), ' rpm at an end', highestText(highestEndRpm(other))],
 	];
+	// Where the highest RPM of both is at an end, the margins have told it.
+	if ([row, other].some(each => highestEndRpm(each) < highestRpm(each)))
+		pairs.push(['at most', highestText(highestEndRpm(row)), ' rpm at an end', highestText(highestEndRpm(other))]);
 	const words = pairs
 		.filter(([, mine, , its]) => mine !== its)
 		.map(([name, mine, unit, its]) => `${name} ${mine}${unit} against ${its}`.trim());
 	return words.length === 0 ? 'the same margin and shifts' : words.join(', ');
+}
+
+/** " Near: settle, restart.": the checks that are near, but for the limit, whose margin is told. */
+function nearCauses({checks}: Row): string {
+	const near = checks.filter(({check, verdict}) => verdict === 'near' && check !== 'limit');
+	return near.length === 0 ? '' : ` Near: ${near.map(({check}) => checkNames[check]).join(', ')}.`;
 }
 
 /** ", most on Back (0.031 s)": the straight with the largest mean loss; nothing where there is only one to lose on. */
@@ -93,7 +104,13 @@ function shiftCount(row: Row): number {
 
 /** Over all situations; shifts are left out, as they are planned at the same RPM with every pair. */
 function highestEndRpm(row: Row): number {
-	return Math.max(...row.situations.flatMap(({straights}) => straights.map(({endRpm}) => endRpm)));
+	let highest = 0;
+	for (const {straights} of row.situations) for (const {endRpm} of straights) highest = Math.max(highest, endRpm);
+	return highest;
+}
+
+function highestRpm(row: Row): number {
+	return row.checks.find(({check}) => check === 'limit')?.value ?? 0;
 }
 
 function nameOf(row: Row): string {

@@ -4,8 +4,8 @@ import type {Ground} from './checks/check.ts';
 import {judge, verdictOf} from './checks/judge.ts';
 import type {Plan} from './plan.ts';
 import type {Row, SituationResult} from './results.ts';
-import type {RowRun, SituationRun} from './run-row.ts';
-import {placeText} from './words.ts';
+import {eachRun, type RowRun, type SituationRun} from './run-row.ts';
+import {listed} from './words.ts';
 
 export function rowOf(run: RowRun, ground: Ground): Row {
 	const {pair, pairName, gearbox, train} = run.candidate;
@@ -61,18 +61,25 @@ function meanS(situations: readonly SituationResult[], plan: Plan, field: 'timeS
 }
 
 function rowRemarks(run: RowRun, plan: Plan): string[] {
-	const remarks: string[] = [];
+	const remarks = notRunRemarks(run);
 	const count = run.candidate.train.overall.length;
-	for (const {condition, places, restart} of run.situations) {
-		for (const {place, state, result} of restart === undefined ? places : [...places, restart]) {
-			if (state === 'ran' || state === 'held') continue;
-			remarks.push(`${placeText(place.name, condition.name)}: ${result.remarks[0]}`);
-		}
-	}
 	const {pitRoad, restart} = plan.track;
 	if ((pitRoad?.gear ?? 0) > count)
 		remarks.push(`no gear ${pitRoad?.gear} for pit road: gear ${run.pitRoad?.gear} taken`);
 	if ((restart?.gear ?? 0) > count)
 		remarks.push(`no gear ${restart?.gear} for the restart: the gear of least time taken`);
 	return remarks;
+}
+
+/** "Front: exit speed above the limit in every allowed gear (Base and In the tow)." */
+function notRunRemarks(run: RowRun): string[] {
+	const situations = new Map<string, string[]>();
+	eachRun(run, ({place, state, result}, {condition}) => {
+		if (state === 'ran' || state === 'held') return;
+		const remark = `${place.name}: ${result.remarks[0]}`;
+		situations.set(remark, [...(situations.get(remark) ?? []), condition.name]);
+	});
+	return [...situations].map(([remark, names]) =>
+		names.length === run.situations.length ? remark : `${remark} (${listed(names)})`,
+	);
 }

@@ -28,7 +28,9 @@ export function rpmAt(vehicle: Vehicle, overall: number, speedMps: number, slip 
 	return engineRpm(speedMps, overall, vehicle.rolloutM, vehicle.growth, slip);
 }
 
-/** A straight in a situation, in the gears of the tie-break; the restart in those of least time. */
+type Ran = Extract<StraightRun, {kind: 'ran'}>;
+
+/** A straight in a situation, in the gears of the tie-break. */
 export function runPlace(condition: Condition, place: Place, gears: RoadGears): PlaceRun {
 	const course = place.courses.get(gears.train.overall.length);
 	const drive = {condition, place, gears, course};
@@ -36,7 +38,15 @@ export function runPlace(condition: Condition, place: Place, gears: RoadGears): 
 	if (place.straight.lengthM === undefined) return hold(drive, course);
 	const run = runStraight(gears, course);
 	if (run.kind !== 'ran') return notRun(drive, run.kind);
-	return ran(drive, place.isRestart ? run.fastest : run.chosen, run.fastest.timeS);
+	return ran(drive, place.isRestart ? inGearOfLeastTime(gears, course, run) : run.chosen, run.fastest.timeS);
+}
+
+/** The restart starts in the gear of least time; after that the tie-break holds as everywhere. */
+function inGearOfLeastTime(gears: RoadGears, course: Course, run: Ran): SequenceRun {
+	const {chosen, fastest} = run;
+	if (chosen.firstGear === fastest.firstGear) return chosen;
+	const again = runStraight(gears, {...course, startGear: fastest.firstGear});
+	return again.kind === 'ran' ? again.chosen : fastest;
 }
 
 type Drive = {

@@ -10,7 +10,8 @@ export function runRemarks(plan: Plan, rows: readonly RowRun[]): string[] {
 		...straightRemarks(
 			plan,
 			rows,
-			run => run.sequence?.entryMissed === true,
+			// On the limiter it is the limiter that is told.
+			({sequence}) => sequence?.entryMissed === true && sequence.limiterM === 0,
 			'runs below its entry speed, without braking,',
 		),
 		...curveRemarks(plan, rows),

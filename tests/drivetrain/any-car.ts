@@ -81,7 +81,11 @@ export const anyCourse = (train: GearTrain): fc.Arbitrary<Course> => {
 	return fc
 		.record({
 			lengthM: fc.oneof(within(1, 50), within(50, 1500), within(1500, 20_000)),
-			exitMps: fc.oneof(within(1, 15), within(15, 80), within(80, 110)),
+			exitMps: fc.oneof(
+				{weight: 2, arbitrary: within(1, 15)},
+				{weight: 4, arbitrary: within(15, 60)},
+				{weight: 1, arbitrary: within(60, 110)},
+			),
 			braking: often(undefined, fc.tuple(within(5, 80), within(2, 15))),
 			grade: often(0, within(-0.2, 0.2)),
 			headwindMps: often(0, within(-60, 30)),

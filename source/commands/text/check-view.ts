@@ -1,11 +1,11 @@
 /** The checks of a row: verdict, number, bound, margin, where. */
+import {checkNames} from '../../planning/check-names.ts';
 import type {Check, CheckName} from '../../planning/results.ts';
 import {type Block, cell, type Making, tableOf, text} from './blocks.ts';
 import {verdictCell} from './heading-view.ts';
 import {absent, fixed, rpm, rpmDown, rpmUp, type Units} from './units.ts';
 
 type Words = {
-	label: string;
 	/** What the numbers count, where it is not RPM. */
 	unit?: (units: Units) => string;
 	/** Rounded so that a bound that is not kept never looks kept. */
@@ -14,36 +14,34 @@ type Words = {
 	margin: (value: number | null, units: Units) => string;
 };
 
-const ofRpm = (label: string, value: Words['value'], bound = rpm): Words => ({label, value, bound, margin: rpmDown});
-const ofNumber = (label: string, unit: string, digits = 0): Words => {
+const ofRpm = (value: Words['value'], bound = rpm): Words => ({value, bound, margin: rpmDown});
+const ofNumber = (unit: string, digits = 0): Words => {
 	const number = (value: number | null) => (value === null ? absent : fixed(value, digits));
-	return {label, ...(unit && {unit: () => unit}), value: number, margin: number};
+	return {...(unit && {unit: () => unit}), value: number, margin: number};
 };
-const ofLength = (label: string, quantity: 'distance' | 'longDistance'): Words => {
+const ofLength = (quantity: 'distance' | 'longDistance'): Words => {
 	const number = (value: number | null, units: Units) => units.number(quantity, value);
-	return {label, unit: units => units.label(quantity), value: number, margin: number};
+	return {unit: units => units.label(quantity), value: number, margin: number};
 };
 
 const words: Record<CheckName, Words> = {
-	limit: ofRpm('RPM limit', rpmUp),
-	limiter: ofLength('on the limiter', 'distance'),
-	band: ofRpm('power band', rpmDown),
-	afterShift: ofRpm('after a shift', rpmDown),
-	settle: ofNumber('settle', 's', 3),
-	pitRoad: ofRpm('pit road', rpmDown),
-	restart: ofRpm('restart', rpmDown),
-	downshift: ofRpm('downshift', rpmUp, rpmDown),
-	permitted: ofNumber('permitted', ''),
-	housing: ofNumber('housing', 'teeth'),
-	stock: ofNumber('on hand', 'sets'),
-	mileage: ofLength('mileage', 'longDistance'),
+	limit: ofRpm(rpmUp),
+	limiter: ofLength('distance'),
+	band: ofRpm(rpmDown),
+	afterShift: ofRpm(rpmDown),
+	settle: ofNumber('s', 3),
+	pitRoad: ofRpm(rpmDown),
+	restart: ofRpm(rpmDown),
+	downshift: ofRpm(rpmUp, rpmDown),
+	permitted: ofNumber(''),
+	housing: ofNumber('teeth'),
+	stock: ofNumber('sets'),
+	mileage: ofLength('longDistance'),
 };
 
-export const checkLabel = (name: CheckName): string => words[name].label;
-
 const labelled = (name: CheckName, units: Units): string => {
-	const {label, unit} = words[name];
-	return unit ? `${label}, ${unit(units)}` : label;
+	const {unit} = words[name];
+	return unit ? `${checkNames[name]}, ${unit(units)}` : checkNames[name];
 };
 
 const columnsFor = (units: Units): Making<Check>[] => {
@@ -64,5 +62,5 @@ const columnsFor = (units: Units): Making<Check>[] => {
 /** The table of checks, and below it what they remark. */
 export const checkView = (checks: readonly Check[], units: Units): Block[] => [
 	tableOf(columnsFor(units), checks),
-	...checks.flatMap(check => (check.remark ? [text(`- ${checkLabel(check.check)}: ${check.remark}`, 'plain', 2)] : [])),
+	...checks.flatMap(check => (check.remark ? [text(`- ${checkNames[check.check]}: ${check.remark}`, 'plain', 2)] : [])),
 ];

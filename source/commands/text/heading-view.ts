@@ -23,7 +23,8 @@ export const headingOf = (car: {name: string}, track: Track, now: Date): Heading
 });
 
 const two = (value: number) => String(value).padStart(2, '0');
-const localDay = (now: Date): string => `${now.getFullYear()}-${two(now.getMonth() + 1)}-${two(now.getDate())}`;
+/** The calendar's day where the person is, as in ISO 8601. */
+export const localDay = (now: Date): string => `${now.getFullYear()}-${two(now.getMonth() + 1)}-${two(now.getDate())}`;
 
 /** A track without air is a day at the reference of SAE J1349: 25 °C, 990 hPa, dry. */
 const reference = {temperatureC: 25, pressurePa: 99_000, humidity: 0};

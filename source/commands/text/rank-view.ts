@@ -1,7 +1,7 @@
 /** The ranking as a person reads it: one line a row, the reasons, the remarks. */
+import {checkNames} from '../../planning/check-names.ts';
 import type {Check, Ranking, Row} from '../../planning/results.ts';
 import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
-import {checkLabel} from './check-view.ts';
 import {closingView, type Heading, headingView, verdictCell} from './heading-view.ts';
 import {absent, fixed, rpm, rpmDown, rpmUp, seconds, signed, type Units} from './units.ts';
 
@@ -43,7 +43,7 @@ const overBand = ({row, bandLowRpm}: Placed): string => {
 /** The checks that the verdict comes from; nothing beside a pass. */
 const verdictCauses = ({verdict, checks}: Row): string => {
 	const causes = checks.filter(check => verdict !== 'pass' && check.verdict === verdict);
-	return causes.map(({check}) => checkLabel(check)).join(', ');
+	return causes.map(({check}) => checkNames[check]).join(', ');
 };
 
 const columns: readonly Making<Placed>[] = [

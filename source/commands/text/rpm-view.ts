@@ -23,12 +23,12 @@ const gearCell = (point: RpmPoint, gear: number, rpmLimit: number) => {
 const columnsFor = ({overall, setting}: RpmTable, units: Units): Making<RpmPoint>[] => {
 	const gears = overall.map((_, index) => index + 1);
 	return [
-		{head: 'at', align: 'left', keep: 0, shortest: 14, cell: point => cell(point.at)},
-		{head: 'situation', align: 'left', keep: 2, shortest: 8, cell: point => cell(point.situation, 'muted')},
+		{head: 'at', align: 'left', keep: 0, shortest: 12, cell: point => cell(point.at)},
+		{head: 'situation', align: 'left', keep: 9, shortest: 6, cell: point => cell(point.situation, 'muted')},
 		{head: units.label('speed'), align: 'right', keep: 1, cell: point => cell(units.number('speed', point.speedMps))},
 		...gears.map(
 			(gear): Making<RpmPoint> => ({
-				head: `gear ${gear}  `,
+				head: `${gear}.  `,
 				align: 'right',
 				// The low gears matter least where the car is at speed.
 				keep: gears.length - gear + 3,
@@ -46,7 +46,11 @@ export const rpmView = (heading: Heading, answer: RpmTable, units: Units): Block
 	...headingView(heading, choiceWords(answer), answer.setting, units),
 	gap,
 	tableOf(columnsFor(answer, units), answer.points),
-	text(`${inUse} gear in use; ${above} above the limit of ${rpm(answer.setting.rpmLimit)} rpm`, 'muted', 2),
+	text(
+		`1. to ${answer.overall.length}. the gears; ${inUse} gear in use; ${above} above the limit of ${rpm(answer.setting.rpmLimit)} rpm`,
+		'muted',
+		2,
+	),
 	gap,
 	...closingView(answer.remarks),
 ];
