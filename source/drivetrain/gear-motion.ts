@@ -8,8 +8,6 @@ import {engineRpm, growthReferenceMps, speedAtRpmMps} from './tire.ts';
 /** No car on wheels is faster: where every gear ends that no limiter and no growing tire ends before. */
 const fastestMps = 500;
 
-const none: readonly number[] = [];
-
 /** Kinks closer together than this are one. */
 const apartMps = 1e-9;
 
@@ -27,8 +25,8 @@ export type Mark = {
 export class GearMotion {
 	/** Speed at the limiter: thrust ends above it. The fastest that there is where it is never reached. */
 	readonly limiterMps: number;
-	/** Rising from 0 to the limiter: the speeds at the curve's points, and where the air stands still. */
-	readonly images: readonly number[];
+	/** The last of the edges, from 0 on: 0 m/s, the speeds at the curve's points below the limiter, and the limiter. */
+	readonly lastEdge: number;
 	readonly #vehicle: Vehicle;
 	readonly #forces: RoadForces;
 	readonly #overall: number;
@@ -37,6 +35,7 @@ export class GearMotion {
 	readonly #thrustFactor: number;
 	readonly #drivenKgM2: number;
 	#cell = 0;
+	readonly #edges: number[] = [0];
 	#breaks: readonly number[] | undefined;
 
 	/** `overall` is R_k, `efficiency` η_k; `limiterRpm` Infinity looks past the limiter. */
@@ -50,28 +49,56 @@ export class GearMotion {
 		this.#drivenKgM2 = vehicle.wheelInertiaKgM2 + vehicle.engineInertiaKgM2 * overall * overall;
 		const limiterMps = limiterRpm === Number.POSITIVE_INFINITY ? limiterRpm : this.speedAt(limiterRpm);
 		this.limiterMps = Math.min(limiterMps, fastestMps);
-		this.images = apart(this.#curveImages());
+		this.lastEdge = this.#pointsBelowLimiter() + 1;
+		this.#edges[this.lastEdge] = this.limiterMps;
 	}
 
 	/** Rising speeds from 0 to the limiter; between two neighbors the acceleration is smooth. */
 	get breaks(): readonly number[] {
-		this.#breaks ??= apart(
-			this.images.flatMap((image, i) => [...(i === 0 ? [] : this.gripCrossings(this.images[i - 1]!, image)), image]),
-		);
+		this.#breaks ??= Array.from({length: this.lastEdge + 1}, (_, i) => [
+			...(i === 0 ? [] : this.kinks(i - 1)),
+			this.edge(i),
+		]).flat();
 		return this.#breaks;
 	}
 
-	/** The speeds between two neighboring images at which grip takes over from the engine or lets go, rising. */
-	gripCrossings(lowMps: number, highMps: number): readonly number[] {
+	/** The speed at an edge, worked out when it is first asked for. */
+	edge(index: number): number {
+		this.#edges[index] ??= this.speedAt(this.#vehicle.torqueNm.x[index - 1]!);
+		return this.#edges[index];
+	}
+
+	/** The edge at or below a speed, not the last. */
+	edgeBelow(speedMps: number): number {
+		const {x} = this.#vehicle.torqueNm;
+		const rpm = this.rpmAt(speedMps);
+		let index = rpm < x[0]! ? 0 : rpm >= x[x.length - 1]! ? this.lastEdge - 1 : cellOf(x, rpm) + 1;
+		index = Math.min(index, this.lastEdge - 1);
+		while (index > 0 && this.edge(index) > speedMps) index--;
+		while (index < this.lastEdge - 1 && this.edge(index + 1) <= speedMps) index++;
+		return index;
+	}
+
+	/** Between an edge and the next, rising: where grip takes over from the engine or lets go, and where the air stands still. */
+	kinks(edge: number): readonly number[] {
+		const lowMps = this.edge(edge);
+		const highMps = this.edge(edge + 1);
 		const middleMps = (lowMps + highMps) / 2;
+		const still = -this.#forces.headwindMps;
 		const low = this.#surplus(lowMps) < 0;
 		const middle = this.#surplus(middleMps) < 0;
 		const high = this.#surplus(highMps) < 0;
-		if (low === middle && middle === high) return none;
-		const crossings: number[] = [];
-		if (low !== middle) this.#addCrossing(lowMps, middleMps, crossings);
-		if (middle !== high) this.#addCrossing(middleMps, highMps, crossings);
-		return crossings;
+		const kinks: number[] = [];
+		if (still - lowMps > apartMps && highMps - still > apartMps) kinks.push(still);
+		if (low !== middle) this.#addCrossing(lowMps, middleMps, kinks);
+		if (middle !== high) this.#addCrossing(middleMps, highMps, kinks);
+		return kinks.length < 2 ? kinks : apart(kinks.sort((a, b) => a - b));
+	}
+
+	/** Whether the air stands still at a speed between an edge and the next. */
+	stillBetween(edge: number): boolean {
+		const still = -this.#forces.headwindMps;
+		return still > this.edge(edge) && still < this.edge(edge + 1);
 	}
 
 	#addCrossing(lowMps: number, highMps: number, crossings: number[]): void {
@@ -147,22 +174,15 @@ export class GearMotion {
 		return c[i]! + u * (c[i + 1]! + u * (c[i + 2]! + u * c[i + 3]!));
 	}
 
-	/** 0, the speeds at the curve's points below the limiter, where the air stands still, and the limiter. */
-	#curveImages(): number[] {
-		const images = [0];
-		for (const rpm of this.#vehicle.torqueNm.x) {
-			const speed = this.speedAt(rpm);
-			if (speed < this.limiterMps) images.push(speed);
-		}
-		images.push(this.limiterMps);
-		const still = -this.#forces.headwindMps;
-		if (still > 0 && still < this.limiterMps) images.splice(cellOf(images, still) + 1, 0, still);
-		return images;
+	#pointsBelowLimiter(): number {
+		const {x} = this.#vehicle.torqueNm;
+		let count = x.length;
+		while (count > 0 && !(this.limiterMps - this.speedAt(x[count - 1]!) > apartMps)) count--;
+		return count;
 	}
 }
 
-/** Without the kinks that a neighbor above, or the start, stands for; both ends stay. */
+/** Rising kinks without those that a neighbor above stands for. */
 function apart(rising: readonly number[]): number[] {
-	const last = rising.length - 1;
-	return rising.filter((speed, i) => i === 0 || i === last || (speed > apartMps && rising[i + 1]! - speed > apartMps));
+	return rising.filter((speed, i) => i === rising.length - 1 || rising[i + 1]! - speed > apartMps);
 }

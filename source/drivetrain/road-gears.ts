@@ -25,6 +25,7 @@ export class RoadGears {
 	readonly #motions: GearMotion[] = [];
 	readonly #tables: GearTable[] = [];
 	readonly #shifts: PlannedShift[] = [];
+	readonly #unlimited: GearTable[] = [];
 	readonly #lights: number[] = [];
 	#peakTorqueNm: number | undefined;
 
@@ -40,8 +41,9 @@ export class RoadGears {
 	}
 
 	/** The same gear with an engine that no limiter cuts. */
-	unlimited(gear: number): GearMotion {
-		return this.#newMotion(gear, Number.POSITIVE_INFINITY);
+	unlimited(gear: number): GearTable {
+		this.#unlimited[gear] ??= new GearTable(this.#newMotion(gear, Number.POSITIVE_INFINITY));
+		return this.#unlimited[gear];
 	}
 
 	/** The motion with its integrals kept. */

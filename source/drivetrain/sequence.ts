@@ -2,7 +2,7 @@
 import {resistanceN} from './forces.ts';
 import type {RoadGears} from './road-gears.ts';
 import type {Course, GearShift, SequenceRun} from './straight.ts';
-import {type Braking, brakingDistanceM, type Goal, type Travel, travel} from './travel.ts';
+import {type Braking, brakingDistanceM, type Goal, type Travel} from './travel.ts';
 
 /** Somewhere on a straight, since the exit. */
 export type Place = {readonly speedMps: number; readonly distanceM: number; readonly timeS: number};
@@ -132,9 +132,10 @@ function highest(course: Course, {firstGear, entered, fullThrottleEnd}: Finish) 
 
 /** The highest RPM in the gear had the limiter not cut, from where it was met. */
 function reachRpm(gears: RoadGears, course: Course, gear: number, heldFrom: Place): number {
-	const motion = gears.unlimited(gear);
+	const table = gears.unlimited(gear);
+	const {motion} = table;
 	const goal = {distanceM: course.lengthM - heldFrom.distanceM, toMps: motion.limiterMps, braking: brakingOf(course)};
-	return motion.rpmAt(Math.max(heldFrom.speedMps, travel(motion, heldFrom.speedMps, goal).speedMps));
+	return motion.rpmAt(Math.max(heldFrom.speedMps, table.travel(heldFrom.speedMps, goal).speedMps));
 }
 
 function shiftTold(

@@ -3,7 +3,6 @@
  * most runs see a small part of a gear's speeds.
  */
 import type {GearMotion, Mark} from './gear-motion.ts';
-import {cellOf} from './monotone-cubic.ts';
 import {balancedBefore, gentle, integrate, type Stretch, settled} from './travel.ts';
 
 export type Cell = {
@@ -12,7 +11,7 @@ export type Cell = {
 	/** The acceleration at both ends; it has one sign on the way between them. */
 	readonly lowMps2: number;
 	readonly highMps2: number;
-	/** The images of the motion between which it lies, and its place among the cells there. */
+	/** The edge of the motion above which it lies, and its place among the cells up to the next. */
 	readonly between: number;
 	readonly place: number;
 	/** From its low end to its high end, once it was asked for. */
@@ -48,7 +47,7 @@ export class SpeedCells {
 
 	/** The cell with lowMps ≤ speedMps < highMps, or the last one at the top. */
 	#holding(speedMps: number): Cell | undefined {
-		const cells = this.#cellsBetween(cellOf(this.#motion.images, speedMps));
+		const cells = this.#cellsBetween(this.#motion.edgeBelow(speedMps));
 		return cells.find(({highMps}) => speedMps < highMps) ?? cells.at(-1);
 	}
 
@@ -67,8 +66,7 @@ export class SpeedCells {
 	}
 
 	#cellsBetween(between: number): readonly Cell[] {
-		const {images} = this.#motion;
-		if (between < 0 || between >= images.length - 1) return [];
+		if (between < 0 || between >= this.#motion.lastEdge) return [];
 		this.#cells[between] ??= this.#cut(between);
 		return this.#cells[between];
 	}
@@ -78,19 +76,20 @@ export class SpeedCells {
 		const low = this.#markAt(between);
 		const high = this.#markAt(between + 1);
 		const middle = this.#motion.mark((low.speedMps + high.speedMps) / 2);
-		const kinked = low.gripHolds !== middle.gripHolds || middle.gripHolds !== high.gripHolds;
+		const crossed = low.gripHolds !== middle.gripHolds || middle.gripHolds !== high.gripHolds;
+		const kinked = crossed || this.#motion.stillBetween(between);
 		if (!kinked && gentle(low.mps2, middle.mps2, high.mps2)) return [cellBetween(low, high, between, 0)];
 		const marks = [low];
-		const kinks = kinked ? this.#motion.gripCrossings(low.speedMps, high.speedMps) : [];
+		const kinks = kinked ? this.#motion.kinks(between) : [];
 		for (const kink of kinks) cutSmooth(this.#motion, this.#motion.mark(kink), marks);
 		cutSmooth(this.#motion, high, marks);
 		return marks.slice(1).map((mark, place) => cellBetween(marks[place]!, mark, between, place));
 	}
 
-	/** At an image, for the cells on both its sides. */
-	#markAt(image: number): Mark {
-		this.#marks[image] ??= this.#motion.mark(this.#motion.images[image]!);
-		return this.#marks[image];
+	/** At an edge, for the cells on both its sides. */
+	#markAt(edge: number): Mark {
+		this.#marks[edge] ??= this.#motion.mark(this.#motion.edge(edge));
+		return this.#marks[edge];
 	}
 }
 
