@@ -5,8 +5,11 @@ import {cellOf} from './monotone-cubic.ts';
 import type {Vehicle} from './straight.ts';
 import {engineRpm, growthReferenceMps, speedAtRpmMps} from './tire.ts';
 
-/** No car on wheels is faster: where every gear ends that no limiter and no growing tire ends before. */
-const fastestMps = 500;
+/** No car on wheels is faster: where every gear ends. */
+export const fastestMps = 500;
+
+/** Above the curve's last point the torque is held; edges that far apart, each over the one below, keep the pieces short. */
+const stepAbove = 1.1;
 
 /** Kinks closer together than this are one. */
 const apartMps = 1e-9;
@@ -23,9 +26,9 @@ export type Mark = {
 };
 
 export class GearMotion {
-	/** Speed at the limiter: thrust ends above it. The fastest that there is where it is never reached. */
+	/** Speed at the limiter, where thrust ends; the other functions look past it. The fastest that there is where it is never reached. */
 	readonly limiterMps: number;
-	/** The last of the edges, from 0 on: 0 m/s, the speeds at the curve's points below the limiter, and the limiter. */
+	/** The last of the edges, from 0 on: 0 m/s, the speeds at the curve's points, steps above them, and the fastest that there is. */
 	readonly lastEdge: number;
 	readonly #vehicle: Vehicle;
 	readonly #forces: RoadForces;
@@ -35,11 +38,13 @@ export class GearMotion {
 	readonly #thrustFactor: number;
 	readonly #drivenKgM2: number;
 	#cell = 0;
+	/** How many of the curve's points lie below the fastest speed. */
+	readonly #points: number;
 	readonly #edges: number[] = [0];
 	#breaks: readonly number[] | undefined;
 
-	/** `overall` is R_k, `efficiency` η_k; `limiterRpm` Infinity looks past the limiter. */
-	constructor(vehicle: Vehicle, forces: RoadForces, overall: number, efficiency: number, limiterRpm: number) {
+	/** `overall` is R_k, `efficiency` η_k. */
+	constructor(vehicle: Vehicle, forces: RoadForces, overall: number, efficiency: number) {
 		this.#vehicle = vehicle;
 		this.#forces = forces;
 		this.#overall = overall;
@@ -47,13 +52,14 @@ export class GearMotion {
 		this.#rpmFactor = 60 * (1 + vehicle.slip) * overall;
 		this.#thrustFactor = 2 * Math.PI * efficiency * overall;
 		this.#drivenKgM2 = vehicle.wheelInertiaKgM2 + vehicle.engineInertiaKgM2 * overall * overall;
-		const limiterMps = limiterRpm === Number.POSITIVE_INFINITY ? limiterRpm : this.speedAt(limiterRpm);
-		this.limiterMps = Math.min(limiterMps, fastestMps);
-		this.lastEdge = this.#pointsBelowLimiter() + 1;
-		this.#edges[this.lastEdge] = this.limiterMps;
+		this.limiterMps = Math.min(this.speedAt(vehicle.limiterRpm), fastestMps);
+		this.#points = this.#pointsBelowFastest();
+		const highestMps = this.#points === 0 ? fastestMps : this.edge(this.#points);
+		this.lastEdge = this.#points + Math.max(1, Math.ceil(Math.log(fastestMps / highestMps) / Math.log(stepAbove)));
+		this.#edges[this.lastEdge] = fastestMps;
 	}
 
-	/** Rising speeds from 0 to the limiter; between two neighbors the acceleration is smooth. */
+	/** Rising speeds from 0 on; between two neighbors the acceleration is smooth. */
 	get breaks(): readonly number[] {
 		this.#breaks ??= Array.from({length: this.lastEdge + 1}, (_, i) => [
 			...(i === 0 ? [] : this.kinks(i - 1)),
@@ -64,7 +70,10 @@ export class GearMotion {
 
 	/** The speed at an edge, worked out when it is first asked for. */
 	edge(index: number): number {
-		this.#edges[index] ??= this.speedAt(this.#vehicle.torqueNm.x[index - 1]!);
+		this.#edges[index] ??=
+			index > this.#points
+				? this.edge(this.#points) * stepAbove ** (index - this.#points)
+				: this.speedAt(this.#vehicle.torqueNm.x[index - 1]!);
 		return this.#edges[index];
 	}
 
@@ -72,8 +81,8 @@ export class GearMotion {
 	edgeBelow(speedMps: number): number {
 		const {x} = this.#vehicle.torqueNm;
 		const rpm = this.rpmAt(speedMps);
-		let index = rpm < x[0]! ? 0 : rpm >= x[x.length - 1]! ? this.lastEdge - 1 : cellOf(x, rpm) + 1;
-		index = Math.min(index, this.lastEdge - 1);
+		const point = rpm < x[0]! ? 0 : rpm >= x[x.length - 1]! ? x.length : cellOf(x, rpm) + 1;
+		let index = Math.min(point, this.lastEdge - 1);
 		while (index > 0 && this.edge(index) > speedMps) index--;
 		while (index < this.lastEdge - 1 && this.edge(index + 1) <= speedMps) index++;
 		return index;
@@ -174,10 +183,10 @@ export class GearMotion {
 		return c[i]! + u * (c[i + 1]! + u * (c[i + 2]! + u * c[i + 3]!));
 	}
 
-	#pointsBelowLimiter(): number {
+	#pointsBelowFastest(): number {
 		const {x} = this.#vehicle.torqueNm;
 		let count = x.length;
-		while (count > 0 && !(this.limiterMps - this.speedAt(x[count - 1]!) > apartMps)) count--;
+		while (count > 0 && !(this.speedAt(x[count - 1]!) < fastestMps)) count--;
 		return count;
 	}
 }

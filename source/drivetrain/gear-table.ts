@@ -36,14 +36,14 @@ type Part = {readonly fromMps: number; readonly toMps: number; readonly stretch:
 const keptParts = 4;
 
 export class GearTable {
-	readonly motion: GearMotion;
+	readonly #motion: GearMotion;
 	readonly #cells: SpeedCells;
 	/** The parts of cells that were asked for last: every run after a shift starts and ends with the same. */
 	readonly #parts: Part[] = [];
 	#oldest = 0;
 
 	constructor(motion: GearMotion) {
-		this.motion = motion;
+		this.#motion = motion;
 		this.#cells = new SpeedCells(motion);
 	}
 
@@ -53,14 +53,14 @@ export class GearTable {
 		let distanceM = 0;
 		let timeS = 0;
 		let cell = this.#cells.from(fromMps);
-		if (cell !== undefined && !this.#fits(cell, fromMps)) return travel(this.motion, fromMps, goal);
+		if (cell !== undefined && !this.#fits(cell, fromMps)) return travel(this.#motion, fromMps, goal);
 		const rising = cell !== undefined && gains(cell);
 		if (rising && speedMps >= goal.toMps) return {speedMps, distanceM, timeS, why: 'speed'};
 		while (cell !== undefined) {
 			const room = goal.distanceM - distanceM - brakingDistanceM(speedMps, goal.braking);
 			if (room <= 0) return {speedMps, distanceM, timeS, why: 'end'};
 			const far = farEnd(cell, speedMps, rising, goal);
-			if (holds(this.motion, speedMps, far)) return cruise({speedMps, distanceM, timeS, why: 'end'}, room);
+			if (holds(this.#motion, speedMps, far)) return cruise({speedMps, distanceM, timeS, why: 'end'}, room);
 			const stretch = this.#stretch(cell, speedMps, far);
 			if (stretch === endless) return this.#onPlainly({speedMps, distanceM, timeS}, goal);
 			if (distanceM + stretch.distanceM + brakingDistanceM(far, goal.braking) > goal.distanceM)
@@ -77,13 +77,13 @@ export class GearTable {
 
 	/** The rest of a run that comes to a speed at which the acceleration is 0 inside a cell. */
 	#onPlainly(here: Stretch & {speedMps: number}, goal: Goal): Travel {
-		const rest = travel(this.motion, here.speedMps, {...goal, distanceM: goal.distanceM - here.distanceM});
+		const rest = travel(this.#motion, here.speedMps, {...goal, distanceM: goal.distanceM - here.distanceM});
 		return {...rest, distanceM: here.distanceM + rest.distanceM, timeS: here.timeS + rest.timeS};
 	}
 
 	/** Whether one quadrature serves from a speed inside the cell on; not so at a speed that the resistances just hold. */
 	#fits(cell: Cell, speedMps: number): boolean {
-		const here = this.motion.acceleration(speedMps);
+		const here = this.#motion.acceleration(speedMps);
 		return gentle(here, here, gains(cell) ? cell.highMps2 : cell.lowMps2);
 	}
 
@@ -94,7 +94,7 @@ export class GearTable {
 		for (let cell = this.#cells.under(atMps); cell !== undefined; cell = this.#cells.below(cell)) {
 			const tookS = this.#stretch(cell, cell.lowMps, speed).timeS;
 			if (tookS < 0) return 0;
-			if (tookS >= left) return earlierBy(this.motion, cell.lowMps, speed, left);
+			if (tookS >= left) return earlierBy(this.#motion, cell.lowMps, speed, left);
 			left -= tookS;
 			speed = cell.lowMps;
 		}
@@ -107,7 +107,7 @@ export class GearTable {
 		for (const part of this.#parts) {
 			if (part.fromMps === fromMps && part.toMps === toMps) return part.stretch;
 		}
-		const stretch = integrate(this.motion, fromMps, toMps);
+		const stretch = integrate(this.#motion, fromMps, toMps);
 		this.#parts[this.#oldest] = {fromMps, toMps, stretch};
 		this.#oldest = (this.#oldest + 1) % keptParts;
 		return stretch;
@@ -118,14 +118,14 @@ export class GearTable {
 		const low = Math.min(here.speedMps, farMps);
 		const high = Math.max(here.speedMps, farMps);
 		let speed = this.#guess(here, farMps, whole, goal);
-		let {distanceM, timeS} = integrate(this.motion, here.speedMps, speed);
+		let {distanceM, timeS} = integrate(this.#motion, here.speedMps, speed);
 		for (let i = 0; i < newtonCap; i++) {
 			const left = roomM(here, distanceM, speed, goal);
 			const next = Math.min(high, Math.max(low, speed + left / this.#roomSlope(speed, goal)));
 			const change = Math.abs(next - speed);
 			if (change <= newtonEnd * speed) break;
 			const short = change <= sliverShare * (high - low);
-			const step = short ? integrateSliver(this.motion, speed, next) : integrate(this.motion, speed, next);
+			const step = short ? integrateSliver(this.#motion, speed, next) : integrate(this.#motion, speed, next);
 			distanceM += step.distanceM;
 			timeS += step.timeS;
 			speed = next;
@@ -149,8 +149,8 @@ export class GearTable {
 	#guess(here: Travel, farMps: number, whole: Stretch, goal: Goal): number {
 		const squared = here.speedMps ** 2;
 		const farSquared = farMps ** 2;
-		const slope = 2 * whole.distanceM * this.motion.acceleration(here.speedMps);
-		const farSlope = 2 * whole.distanceM * this.motion.acceleration(farMps);
+		const slope = 2 * whole.distanceM * this.#motion.acceleration(here.speedMps);
+		const farSlope = 2 * whole.distanceM * this.#motion.acceleration(farMps);
 		const bend = 3 * (farSquared - squared) - 2 * slope - farSlope;
 		const twist = 2 * (squared - farSquared) + slope + farSlope;
 		const least = Math.min(squared, farSquared);
@@ -180,7 +180,7 @@ export class GearTable {
 	#roomSlope(speedMps: number, goal: Goal): number {
 		const braking =
 			goal.braking !== undefined && speedMps > goal.braking.entryMps ? goal.braking.brakingMps2 : Infinity;
-		return speedMps / this.motion.acceleration(speedMps) + speedMps / braking;
+		return speedMps / this.#motion.acceleration(speedMps) + speedMps / braking;
 	}
 }
 

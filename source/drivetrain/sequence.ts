@@ -1,5 +1,6 @@
 /** One rising sequence of gears on a straight: carried through shift by shift, and told in full. */
 import {resistanceN} from './forces.ts';
+import {fastestMps} from './gear-motion.ts';
 import type {RoadGears} from './road-gears.ts';
 import type {Course, GearShift, SequenceRun} from './straight.ts';
 import {type Braking, brakingDistanceM, type Goal, type Travel} from './travel.ts';
@@ -132,10 +133,9 @@ function highest(course: Course, {firstGear, entered, fullThrottleEnd}: Finish) 
 
 /** The highest RPM in the gear had the limiter not cut, from where it was met. */
 function reachRpm(gears: RoadGears, course: Course, gear: number, heldFrom: Place): number {
-	const table = gears.unlimited(gear);
-	const {motion} = table;
-	const goal = {distanceM: course.lengthM - heldFrom.distanceM, toMps: motion.limiterMps, braking: brakingOf(course)};
-	return motion.rpmAt(Math.max(heldFrom.speedMps, table.travel(heldFrom.speedMps, goal).speedMps));
+	const goal = {distanceM: course.lengthM - heldFrom.distanceM, toMps: fastestMps, braking: brakingOf(course)};
+	const {speedMps} = gears.table(gear).travel(heldFrom.speedMps, goal);
+	return gears.motion(gear).rpmAt(Math.max(heldFrom.speedMps, speedMps));
 }
 
 function shiftTold(

@@ -28,10 +28,10 @@ export function shiftSpeedMps(here: GearMotion, next: GearMotion, capMps: number
 function worseAbove(advantage: (speedMps: number) => number, here: GearMotion, capMps: number): boolean {
 	if (here.limiterMps <= capMps) return false;
 	if (advantage((capMps + here.limiterMps) / 2) < 0) return true;
-	for (let edge = here.edgeBelow(capMps) + 1; edge <= here.lastEdge; edge++) {
+	for (let edge = here.edgeBelow(capMps) + 1; here.edge(edge) < here.limiterMps; edge++) {
 		if (advantage(here.edge(edge)) < 0) return true;
 	}
-	return false;
+	return advantage(here.limiterMps) < 0;
 }
 
 /** The next lower edge of either gear. */
