@@ -30,6 +30,7 @@ export const options = {
 	remark: {value: 'TEXT', summary: 'what else was seen'},
 	short: {summary: 'one line with what is needed to act on the plan'},
 	qr: {summary: 'draw it as a QR code; with --short the one line'},
+	take: {summary: "keep the plan's track, with its pair, set and notes, once it is compared"},
 	copy: {summary: "send it to the terminal's clipboard too"},
 	json: {summary: 'print the result for programs: JSON, SI units, not rounded'},
 	units: {value: 'us|metric', summary: 'units of the text output; us unless given'},

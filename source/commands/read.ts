@@ -1,4 +1,4 @@
-/** `droprack read`: a plan that was sent, computed again and held beside what the reader has. Nothing is taken over. */
+/** `droprack read`: a plan that was sent, computed again and held beside what the reader has; taken over only when asked. */
 import {describeProblems, maxDocumentBytes} from '../documents/read.ts';
 import {parsePair} from '../drivetrain/gear-pair.ts';
 import {rpmTable} from '../planning/rpm-table.ts';
@@ -12,8 +12,11 @@ import {statedResults} from '../sharing/stated-results.ts';
 import type {CommandRun} from './command.ts';
 import {refuseFaults} from './faults.ts';
 import {printJson, printText} from './print.ts';
+import type {AnyDocument} from './read-any.ts';
 import {readFileText, readStandardInput} from './read-input.ts';
-import {badInput, type Found, found, replyDone, replyRefused} from './reply.ts';
+import {badInput, type Found, found, type Reply, replyDone, replyRefused, status} from './reply.ts';
+import type {Request} from './request.ts';
+import {keepDocument} from './save.ts';
 import {type Kind, shelf} from './shelf.ts';
 import type {Surroundings} from './surroundings.ts';
 import {planView, shortView} from './text/plan-view.ts';
@@ -34,6 +37,7 @@ export const read: CommandRun = async (request, around) => {
 	const reading = await readShared(text);
 	if (!reading.ok) return replyRefused(badInput(describeProblems(label, reading.problems)));
 	if (reading.form === 'short') {
+		if (request.take) return replyRefused(badInput(shortCannotBeTaken));
 		if (request.json) return replyDone(printJson({short: reading.fields}, request));
 		return replyDone(printText(shortView(reading.fields), request, around));
 	}
@@ -41,10 +45,32 @@ export const read: CommandRun = async (request, around) => {
 	if (!computed.ok) return replyRefused(computed);
 	const {compared, failed} = computed.value;
 	const own = ownDifferences(reading, around);
+	const taken = request.take ? takeOver(reading, request, around) : undefined;
+	if (taken && taken.status !== status.done) return taken;
 	const out = request.json
 		? printJson({plan: reading.plan, numbers: compared, differences: own}, request)
-		: printText(planView(reading.plan, compared, own), request, around);
-	return replyDone(out, [], request.strict && failed);
+		: printText(planView(reading.plan, compared, own, taken !== undefined), request, around);
+	const done = replyDone(out, [], request.strict && failed);
+	return {...done, err: taken?.err ?? ''};
+};
+
+const shortCannotBeTaken =
+	'droprack read: the short form holds no track to take over. The whole plan comes with droprack share.';
+
+/** The plan's track with its pair, set and notes, and with the car where there is one of that name. */
+const takeOver = ({plan}: Plan, request: Request, around: Surroundings): Reply => {
+	const named = shelf('car', around).entries.some(({name}) => name === plan.car.name);
+	const {car: _, ...asked} = request;
+	const choice: Request = {
+		...asked,
+		json: false,
+		pair: parsePair(plan.pair)!,
+		gearbox: plan.gearbox,
+		...(named && {car: String(plan.car.name)}),
+		...(plan.notes !== undefined && {notes: plan.notes}),
+	};
+	const document = plan.track as AnyDocument['document'];
+	return keepDocument({kind: 'track', document, from: undefined, car: undefined, notes: []}, choice, around);
 };
 
 const computeAgain = ({plan, car, track}: Plan, label: string): Found<{compared: Agreement[]; failed: boolean}> => {

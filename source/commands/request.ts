@@ -19,6 +19,7 @@ export type Request = {
 	replace?: boolean;
 	shipped?: boolean;
 	add?: boolean;
+	take?: boolean;
 	date?: string;
 	session?: string;
 	rpm?: number;
@@ -60,6 +61,7 @@ const switchesOf = (given: Given) => ({
 	...(given.replace && {replace: true}),
 	...(given.shipped && {shipped: true}),
 	...(given.add && {add: true}),
+	...(given.take && {take: true}),
 	...(given.short && {short: true}),
 	...(given.qr && {qr: true}),
 	...(given.copy && {copy: true}),

@@ -24,10 +24,10 @@ export const sharingCommands: readonly Command[] = [
 		name: 'read',
 		summary: 'read a plan that was sent, compute it again, and say what differs from yours',
 		argument: {name: 'FILE', summary: 'a file that holds the message, or - for standard input'},
-		options: everywhere,
+		options: ['take', 'replace', ...everywhere],
 		examples: [
 			{line: 'droprack read plan.txt', gives: 'which numbers agree; nothing is taken over'},
-			{line: 'droprack read - --json', gives: 'the plan as a document, pasted into the terminal'},
+			{line: 'droprack read plan.txt --take', gives: 'the same, and the track is kept with its pair and set'},
 		],
 		load: async () => (await import('./read.ts')).read,
 	},

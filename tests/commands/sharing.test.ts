@@ -107,6 +107,34 @@ describe('droprack read', () => {
 		expect(err).toMatch(/^standard input:\d+: Track Fixture Oval: found ".*which does not match its check/);
 	});
 
+	test('takes over nothing unless asked; then the track with pair, set and notes, and what differs only with --replace', async () => {
+		const environment = {DROPRACK_HOME: join(place, 'taking')};
+		const taking = (words: string[], input = '') => ask(['read', '-', ...words], input, {environment});
+		const shown = () => ask(['show', 'Fixture Oval'], '', {environment});
+		expect((await ask(['read', planFile], '', {environment})).out).toContain('Nothing was taken over.');
+		expect((await shown()).status).toBe(2);
+
+		const taken = await taking(['--take'], plan);
+		expect(taken.out).toContain('The track is kept with this pair and set.');
+		expect(taken.err).toContain('Fixture Oval is saved in ');
+		const kept = JSON.parse((await shown()).out);
+		expect(kept).toEqual(JSON.parse(readFileSync(fixture('oval.json'), 'utf8')));
+
+		const faster = {...kept, straights: [{...kept.straights[0], exit: '70 mph'}, ...kept.straights.slice(1)]};
+		const other = await ask(['share', '-', ...oval], JSON.stringify(faster));
+		const refused = await taking(['--take'], other.out);
+		expect(refused).toMatchObject({status: 2, out: ''});
+		expect(refused.err).toContain('Fixture Oval is saved already and differs in: straights.');
+		expect(JSON.parse((await shown()).out)).toEqual(kept);
+		expect((await taking(['--take', '--replace'], other.out)).status).toBe(0);
+		expect(JSON.parse((await shown()).out)).toEqual(faster);
+	});
+
+	test('takes over no short form', async () => {
+		const {out: short} = await ask(['share', fixture('oval.json'), ...oval, '--short']);
+		expect(await ask(['read', '-', '--take'], short)).toMatchObject({status: 2, out: ''});
+	});
+
 	test('reads the short form, and JSON for programs', async () => {
 		const short = (await ask(['share', fixture('oval.json'), ...oval, '--short'])).out;
 		expect((await ask(['read', '-'], short)).out).toContain('Fixture Oval · short');

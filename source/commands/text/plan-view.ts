@@ -9,7 +9,7 @@ import {absent} from './units.ts';
 
 type Own = {track: Difference[] | undefined; car: Difference[] | undefined};
 
-export const planView = (plan: PlanDocument, compared: readonly Agreement[], own: Own): Block[] => [
+export const planView = (plan: PlanDocument, compared: readonly Agreement[], own: Own, taken = false): Block[] => [
 	text(`${plan.car.name} · engine ${plan.engine} · plan of ${plan.date}`, 'strong', 2),
 	text(`${plan.track.name} · pair ${plan.pair} · gearbox ${plan.gearbox}`, 'plain', 2),
 	...(plan.notes ? [text(`Notes: ${plan.notes}`, 'plain', 2)] : []),
@@ -20,7 +20,7 @@ export const planView = (plan: PlanDocument, compared: readonly Agreement[], own
 	...ownView('track', String(plan.track.name), own.track),
 	...ownView('car', String(plan.car.name), own.car),
 	gap,
-	text('Nothing was taken over.'),
+	text(taken ? 'The track is kept with this pair and set.' : 'Nothing was taken over.'),
 	text(caution, 'muted'),
 ];
 
