@@ -46,6 +46,7 @@ export default defineConfig(({command}) => ({
 		},
 	},
 	test: {
+		setupFiles: ['tests/seed.ts'],
 		include: ['tests/**/*.test.ts', 'tests/**/*.test.tsx'],
 		// With the full counts one property may take minutes, on two cores that others use too.
 		testTimeout: process.env.DROPRACK_FULL === '1' ? 900_000 : 30_000,

@@ -92,14 +92,20 @@ export const readCommandLine = (words: readonly string[]): CommandLine => {
 		if (problem !== undefined) return bad(problem);
 		given[token.name as OptionName] = token.value ?? true;
 	}
-	const surplus = command?.argument ? more : [argument, ...more].filter(word => word !== undefined);
+	const following = [argument, ...more].filter(word => word !== undefined);
+	const surplus = following.slice(command?.second ? 2 : command?.argument ? 1 : 0);
 	if (command && surplus.length > 0) return bad(surplusWords(command, surplus));
-	const request = toRequest(argument, given);
+	const request = toRequest(argument, given, command?.second ? more[0] : undefined);
 	return typeof request === 'string' ? bad(request) : {kind: 'run', command, request};
 };
 
 const surplusWords = (command: Command, surplus: readonly string[]): string => {
-	const takes = command.argument ? `takes one ${command.argument.name}` : 'takes no argument';
-	const quote = command.argument ? ' A name with blanks needs quotes.' : '';
+	const {argument, second} = command;
+	const takes = second
+		? `takes ${argument?.name} and ${second.name}`
+		: argument
+			? `takes one ${argument.name}`
+			: 'takes no argument';
+	const quote = argument ? ' A name with blanks needs quotes.' : '';
 	return `droprack ${command.name} ${takes}, found also: ${surplus.join(' ')}.${quote}`;
 };

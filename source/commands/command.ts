@@ -9,8 +9,10 @@ export type CommandRun = (request: Request, around: Surroundings) => Promise<Rep
 export type Command = {
 	name: string;
 	summary: string;
-	/** The one argument, where there is one. */
+	/** The argument, where there is one. */
 	argument?: {name: string; summary: string};
+	/** The one after it, where there is one. */
+	second?: {name: string; summary: string};
 	options: readonly OptionName[];
 	examples: readonly {line: string; gives: string}[];
 	/** Loads what the command needs, and only that. */

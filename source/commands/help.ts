@@ -26,13 +26,14 @@ const optionRow = (name: OptionName): readonly [string, string] => {
 
 /** The help of one command. */
 export const commandHelp = (command: Command): string => {
-	const argument = command.argument ? ` ${command.argument.name}` : '';
+	const described = [command.argument, command.second].filter(one => one !== undefined);
+	const argument = described.map(({name}) => ` ${name}`).join('');
 	const parts = [
 		`droprack ${command.name}${argument} [options]`,
 		'',
 		`  ${command.summary[0]?.toUpperCase()}${command.summary.slice(1)}.`,
 		'',
-		...(command.argument ? [...twoColumns([[command.argument.name, command.argument.summary]]), ''] : []),
+		...(described.length > 0 ? [...twoColumns(described.map(({name, summary}) => [name, summary] as const)), ''] : []),
 		'Options',
 		...twoColumns(command.options.map(optionRow)),
 		'',
@@ -45,7 +46,8 @@ export const commandHelp = (command: Command): string => {
 /** The help of the whole program. */
 export const topHelp = (): string => {
 	const rows = commands.map(
-		({name, argument, summary}) => [argument ? `${name} ${argument.name}` : name, summary] as const,
+		({name, argument, second, summary}) =>
+			[[name, argument?.name, second?.name].filter(Boolean).join(' '), summary] as const,
 	);
 	const parts = [
 		'droprack ranks the drop gears on the rack for a stock car at a track.',

@@ -13,6 +13,8 @@ import type {Surroundings} from './surroundings.ts';
 export type Loaded = {
 	track: Track;
 	car: Car;
+	/** As they were written. */
+	documents: {track: Record<string, unknown>; car: Record<string, unknown>};
 	/** What messages call the documents that the two came from. */
 	labels: {track: string; car: string};
 	/** What is worth knowing beside the result. */
@@ -31,8 +33,9 @@ export const loadDocuments = async (request: Request, around: Surroundings): Pro
 		return {...first, message: [...refusals.map(one => one.message), ...choice.reasons].join('\n')};
 	}
 	const labels = {track: track.value.label, car: car.value.label};
+	const documents = {track: track.value.document, car: car.value.document};
 	const notes = [...new Set([...choice.notes, ...track.value.notes, ...car.value.notes])];
-	return found({track: track.value.value, car: car.value.value, labels, notes});
+	return found({track: track.value.value, car: car.value.value, documents, labels, notes});
 };
 
 type CarChoice = {car: string; notes: string[]; reasons: string[]};

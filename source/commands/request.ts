@@ -5,6 +5,8 @@ import type {UnitSystem} from './text/units.ts';
 export type Request = {
 	/** The one argument as it was written; undefined where none was given. */
 	argument: string | undefined;
+	/** The argument after it. */
+	second?: string;
 	car?: string;
 	situation?: string;
 	top?: number;
@@ -17,11 +19,15 @@ export type Request = {
 	replace?: boolean;
 	shipped?: boolean;
 	add?: boolean;
+	take?: boolean;
 	date?: string;
 	session?: string;
 	rpm?: number;
 	at?: string;
 	remark?: string;
+	short?: boolean;
+	qr?: boolean;
+	copy?: boolean;
 	json: boolean;
 	units: UnitSystem;
 	strict: boolean;
@@ -55,15 +61,20 @@ const switchesOf = (given: Given) => ({
 	...(given.replace && {replace: true}),
 	...(given.shipped && {shipped: true}),
 	...(given.add && {add: true}),
+	...(given.take && {take: true}),
+	...(given.short && {short: true}),
+	...(given.qr && {qr: true}),
+	...(given.copy && {copy: true}),
 });
 
 /** The request that the options make, or what is wrong with a value. */
-export const toRequest = (argument: string | undefined, given: Given): Request | string => {
+export const toRequest = (argument: string | undefined, given: Given, second?: string): Request | string => {
 	const request: Request = {
 		argument,
 		units: 'us',
 		...switchesOf(given),
 		...Object.fromEntries(texts.flatMap(name => (typeof given[name] === 'string' ? [[name, given[name]]] : []))),
+		...(second !== undefined && {second}),
 	};
 	if (given.units === 'metric') request.units = 'metric';
 	else if (given.units !== undefined && given.units !== 'us') return `--units is us or metric, found ${given.units}.`;
@@ -82,7 +93,10 @@ export const toRequest = (argument: string | undefined, given: Given): Request |
 	}
 	if (request.date !== undefined && !isDay(request.date))
 		return `--date is a day such as 2026-05-31, found ${request.date}.`;
-	if (argument === '-' && request.car === '-') return 'only one of TRACK and --car can be standard input.';
+	if ([argument, second, request.car].filter(word => word === '-').length > 1)
+		return second === undefined
+			? 'only one of TRACK and --car can be standard input.'
+			: 'only one document can be standard input.';
 	return request;
 };
 

@@ -20,11 +20,15 @@ export const save: CommandRun = async (request, around) => {
 	if (request.argument === undefined)
 		return replyRefused(badInput('droprack save: which DOCUMENT? A file, - for standard input, or a name.'));
 	const read = await readAny(request.argument, ['track', 'car'], around);
-	if (!read.ok) return replyRefused(read);
+	return read.ok ? keepDocument(read.value, request, around) : replyRefused(read);
+};
+
+/** Keeps a document with what the request says of it; one that is saved and differs gives way only to `--replace`. */
+export const keepDocument = (read: AnyDocument, request: Request, around: Surroundings): Reply => {
 	const home = homeDirectory(around.environment);
-	const {kind, document, notes} = read.value;
+	const {kind, document, notes} = read;
 	const present: Kept<Keepable> | undefined = keptNamed(home, kind === 'track' ? 'preset' : 'saved-car', document.name);
-	const made = toKeep(read.value, present?.document, request, around);
+	const made = toKeep(read, present?.document, request, around);
 	if (!made.ok) return replyRefused(made);
 	const refusal = present && differing(present, made.value, request);
 	if (refusal !== undefined) return replyRefused(badInput(refusal));
@@ -96,7 +100,7 @@ const differing = (present: Kept<Keepable>, made: Keepable, {replace}: Request):
 		.filter(field => canonical(before[field] ?? null) !== canonical(after[field] ?? null))
 		.join(', ');
 	const name = visible(present.name);
-	return `droprack save: ${name} is saved already and differs in: ${visible(fields)}.\n--replace takes the new one; the saved one stays as ${visible(present.file)}.bak.`;
+	return `droprack: ${name} is saved already and differs in: ${visible(fields)}.\n--replace takes the new one; the saved one stays as ${visible(present.file)}.bak.`;
 };
 
 const innerOf = (document: Keepable) => (document.kind === 'preset' ? document.track : document.car);

@@ -7,6 +7,8 @@ export type Surroundings = {
 	now: Date;
 	/** Width of the text output. */
 	columns: number;
+	/** Height of the terminal; undefined without one. */
+	rows?: number | undefined;
 	color: boolean;
 	standardInput: () => AsyncIterable<Uint8Array>;
 };
@@ -26,6 +28,7 @@ export const processSurroundings = (shipped: URL): Surroundings => ({
 	environment: process.env,
 	now: new Date(),
 	columns: process.stdout.columns || columnsThroughPipe,
+	rows: process.stdout.rows,
 	color: wantsColor(process.env, process.stdout.isTTY === true),
 	standardInput: () => process.stdin,
 });

@@ -1,6 +1,6 @@
 import type {Car, Engine, Margins, Rack, Rules, Tires, TrackType} from '../drivetrain/car.ts';
+import {mileM} from '../drivetrain/constants.ts';
 import type {CarDocument} from './car-fields.ts';
-import {mileM} from './units.ts';
 
 /** Half of the wheels are driven. */
 const undrivenShare = 0.5;

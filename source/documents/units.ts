@@ -3,6 +3,7 @@ import {
 	celsiusZeroK,
 	inchM as inch,
 	inchOfMercuryPa,
+	mileM,
 	standardGravityMps2 as standardGravity,
 } from '../drivetrain/constants.ts';
 
@@ -35,7 +36,7 @@ export type Unit = {
 // Exact: international yard and pound (1959), nautical mile (1929).
 const foot = 0.3048;
 const yard = 0.9144;
-export const mileM = 1609.344;
+
 const nauticalMile = 1852;
 const pound = 0.45359237;
 const hour = 3600;

@@ -12,7 +12,7 @@ export type AirState = {
 };
 
 /** SAE J1349's reference day, dry: what a missing field of the air is taken as. */
-const referenceDay = {temperatureC: 25, pressurePa: 99_000, humidity: 0};
+export const referenceDay = {temperatureC: 25, pressurePa: 99_000, humidity: 0};
 
 /** Specific gas constants of dry air and of water vapor, J/(kg K). */
 const dryAirGasConstant = 287.058;

@@ -5,10 +5,11 @@ import {cellOf} from './monotone-cubic.ts';
 import type {Vehicle} from './straight.ts';
 import {engineRpm, growthReferenceMps, speedAtRpmMps} from './tire.ts';
 
-/** No car on wheels is faster: where every gear ends that no limiter and no growing tire ends before. */
-const fastestMps = 500;
+/** No car on wheels is faster: where every gear ends. */
+export const fastestMps = 500;
 
-const none: readonly number[] = [];
+/** Above the curve's last point the torque is held; edges that far apart, each over the one below, keep the pieces short. */
+const stepAbove = 1.1;
 
 /** Kinks closer together than this are one. */
 const apartMps = 1e-9;
@@ -25,10 +26,10 @@ export type Mark = {
 };
 
 export class GearMotion {
-	/** Speed at the limiter: thrust ends above it. The fastest that there is where it is never reached. */
+	/** Speed at the limiter, where thrust ends; the other functions look past it. The fastest that there is where it is never reached. */
 	readonly limiterMps: number;
-	/** Rising from 0 to the limiter: the speeds at the curve's points, and where the air stands still. */
-	readonly images: readonly number[];
+	/** The last of the edges, from 0 on: 0 m/s, the speeds at the curve's points, steps above them, and the fastest that there is. */
+	readonly lastEdge: number;
 	readonly #vehicle: Vehicle;
 	readonly #forces: RoadForces;
 	readonly #overall: number;
@@ -37,10 +38,13 @@ export class GearMotion {
 	readonly #thrustFactor: number;
 	readonly #drivenKgM2: number;
 	#cell = 0;
+	/** How many of the curve's points lie below the fastest speed. */
+	readonly #points: number;
+	readonly #edges: number[] = [0];
 	#breaks: readonly number[] | undefined;
 
-	/** `overall` is R_k, `efficiency` η_k; `limiterRpm` Infinity looks past the limiter. */
-	constructor(vehicle: Vehicle, forces: RoadForces, overall: number, efficiency: number, limiterRpm: number) {
+	/** `overall` is R_k, `efficiency` η_k. */
+	constructor(vehicle: Vehicle, forces: RoadForces, overall: number, efficiency: number) {
 		this.#vehicle = vehicle;
 		this.#forces = forces;
 		this.#overall = overall;
@@ -48,30 +52,62 @@ export class GearMotion {
 		this.#rpmFactor = 60 * (1 + vehicle.slip) * overall;
 		this.#thrustFactor = 2 * Math.PI * efficiency * overall;
 		this.#drivenKgM2 = vehicle.wheelInertiaKgM2 + vehicle.engineInertiaKgM2 * overall * overall;
-		const limiterMps = limiterRpm === Number.POSITIVE_INFINITY ? limiterRpm : this.speedAt(limiterRpm);
-		this.limiterMps = Math.min(limiterMps, fastestMps);
-		this.images = apart(this.#curveImages());
+		this.limiterMps = Math.min(this.speedAt(vehicle.limiterRpm), fastestMps);
+		this.#points = this.#pointsBelowFastest();
+		const highestMps = this.#points === 0 ? fastestMps : this.edge(this.#points);
+		this.lastEdge = this.#points + Math.max(1, Math.ceil(Math.log(fastestMps / highestMps) / Math.log(stepAbove)));
+		this.#edges[this.lastEdge] = fastestMps;
 	}
 
-	/** Rising speeds from 0 to the limiter; between two neighbors the acceleration is smooth. */
+	/** Rising speeds from 0 on; between two neighbors the acceleration is smooth. */
 	get breaks(): readonly number[] {
-		this.#breaks ??= apart(
-			this.images.flatMap((image, i) => [...(i === 0 ? [] : this.gripCrossings(this.images[i - 1]!, image)), image]),
-		);
+		this.#breaks ??= Array.from({length: this.lastEdge + 1}, (_, i) => [
+			...(i === 0 ? [] : this.kinks(i - 1)),
+			this.edge(i),
+		]).flat();
 		return this.#breaks;
 	}
 
-	/** The speeds between two neighboring images at which grip takes over from the engine or lets go, rising. */
-	gripCrossings(lowMps: number, highMps: number): readonly number[] {
+	/** The speed at an edge, worked out when it is first asked for. */
+	edge(index: number): number {
+		this.#edges[index] ??=
+			index > this.#points
+				? this.edge(this.#points) * stepAbove ** (index - this.#points)
+				: this.speedAt(this.#vehicle.torqueNm.x[index - 1]!);
+		return this.#edges[index];
+	}
+
+	/** The edge at or below a speed, not the last. */
+	edgeBelow(speedMps: number): number {
+		const {x} = this.#vehicle.torqueNm;
+		const rpm = this.rpmAt(speedMps);
+		const point = rpm < x[0]! ? 0 : rpm >= x[x.length - 1]! ? x.length : cellOf(x, rpm) + 1;
+		let index = Math.min(point, this.lastEdge - 1);
+		while (index > 0 && this.edge(index) > speedMps) index--;
+		while (index < this.lastEdge - 1 && this.edge(index + 1) <= speedMps) index++;
+		return index;
+	}
+
+	/** Between an edge and the next, rising: where grip takes over from the engine or lets go, and where the air stands still. */
+	kinks(edge: number): readonly number[] {
+		const lowMps = this.edge(edge);
+		const highMps = this.edge(edge + 1);
 		const middleMps = (lowMps + highMps) / 2;
+		const still = -this.#forces.headwindMps;
 		const low = this.#surplus(lowMps) < 0;
 		const middle = this.#surplus(middleMps) < 0;
 		const high = this.#surplus(highMps) < 0;
-		if (low === middle && middle === high) return none;
-		const crossings: number[] = [];
-		if (low !== middle) this.#addCrossing(lowMps, middleMps, crossings);
-		if (middle !== high) this.#addCrossing(middleMps, highMps, crossings);
-		return crossings;
+		const kinks: number[] = [];
+		if (still - lowMps > apartMps && highMps - still > apartMps) kinks.push(still);
+		if (low !== middle) this.#addCrossing(lowMps, middleMps, kinks);
+		if (middle !== high) this.#addCrossing(middleMps, highMps, kinks);
+		return kinks.length < 2 ? kinks : apart(kinks.sort((a, b) => a - b));
+	}
+
+	/** Whether the air stands still at a speed between an edge and the next. */
+	stillBetween(edge: number): boolean {
+		const still = -this.#forces.headwindMps;
+		return still > this.edge(edge) && still < this.edge(edge + 1);
 	}
 
 	#addCrossing(lowMps: number, highMps: number, crossings: number[]): void {
@@ -147,22 +183,15 @@ export class GearMotion {
 		return c[i]! + u * (c[i + 1]! + u * (c[i + 2]! + u * c[i + 3]!));
 	}
 
-	/** 0, the speeds at the curve's points below the limiter, where the air stands still, and the limiter. */
-	#curveImages(): number[] {
-		const images = [0];
-		for (const rpm of this.#vehicle.torqueNm.x) {
-			const speed = this.speedAt(rpm);
-			if (speed < this.limiterMps) images.push(speed);
-		}
-		images.push(this.limiterMps);
-		const still = -this.#forces.headwindMps;
-		if (still > 0 && still < this.limiterMps) images.splice(cellOf(images, still) + 1, 0, still);
-		return images;
+	#pointsBelowFastest(): number {
+		const {x} = this.#vehicle.torqueNm;
+		let count = x.length;
+		while (count > 0 && !(this.speedAt(x[count - 1]!) < fastestMps)) count--;
+		return count;
 	}
 }
 
-/** Without the kinks that a neighbor above, or the start, stands for; both ends stay. */
+/** Rising kinks without those that a neighbor above stands for. */
 function apart(rising: readonly number[]): number[] {
-	const last = rising.length - 1;
-	return rising.filter((speed, i) => i === 0 || i === last || (speed > apartMps && rising[i + 1]! - speed > apartMps));
+	return rising.filter((speed, i) => i === rising.length - 1 || rising[i + 1]! - speed > apartMps);
 }

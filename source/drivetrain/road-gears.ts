@@ -35,13 +35,8 @@ export class RoadGears {
 	}
 
 	motion(gear: number): GearMotion {
-		this.#motions[gear] ??= this.#newMotion(gear, this.vehicle.limiterRpm);
+		this.#motions[gear] ??= this.#newMotion(gear);
 		return this.#motions[gear];
-	}
-
-	/** The same gear with an engine that no limiter cuts. */
-	unlimited(gear: number): GearMotion {
-		return this.#newMotion(gear, Number.POSITIVE_INFINITY);
 	}
 
 	/** The motion with its integrals kept. */
@@ -85,9 +80,9 @@ export class RoadGears {
 		return enteredMps <= planned.speedMps ? planned : this.#shiftAt(gear, enteredMps);
 	}
 
-	#newMotion(gear: number, limiterRpm: number): GearMotion {
+	#newMotion(gear: number): GearMotion {
 		const {overall, efficiency} = this.train;
-		return new GearMotion(this.vehicle, this.forces, overall[gear - 1]!, efficiency[gear - 1]!, limiterRpm);
+		return new GearMotion(this.vehicle, this.forces, overall[gear - 1]!, efficiency[gear - 1]!);
 	}
 
 	#speedAt(gear: number, rpm: number): number {

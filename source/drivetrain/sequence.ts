@@ -1,8 +1,9 @@
 /** One rising sequence of gears on a straight: carried through shift by shift, and told in full. */
 import {resistanceN} from './forces.ts';
+import {fastestMps} from './gear-motion.ts';
 import type {RoadGears} from './road-gears.ts';
 import type {Course, GearShift, SequenceRun} from './straight.ts';
-import {type Braking, brakingDistanceM, type Goal, type Travel, travel} from './travel.ts';
+import {type Braking, brakingDistanceM, type Goal, type Travel} from './travel.ts';
 
 /** Somewhere on a straight, since the exit. */
 export type Place = {readonly speedMps: number; readonly distanceM: number; readonly timeS: number};
@@ -132,9 +133,9 @@ function highest(course: Course, {firstGear, entered, fullThrottleEnd}: Finish) 
 
 /** The highest RPM in the gear had the limiter not cut, from where it was met. */
 function reachRpm(gears: RoadGears, course: Course, gear: number, heldFrom: Place): number {
-	const motion = gears.unlimited(gear);
-	const goal = {distanceM: course.lengthM - heldFrom.distanceM, toMps: motion.limiterMps, braking: brakingOf(course)};
-	return motion.rpmAt(Math.max(heldFrom.speedMps, travel(motion, heldFrom.speedMps, goal).speedMps));
+	const goal = {distanceM: course.lengthM - heldFrom.distanceM, toMps: fastestMps, braking: brakingOf(course)};
+	const {speedMps} = gears.table(gear).travel(heldFrom.speedMps, goal);
+	return gears.motion(gear).rpmAt(Math.max(heldFrom.speedMps, speedMps));
 }
 
 function shiftTold(

@@ -26,13 +26,22 @@ export function shiftSpeedMps(here: GearMotion, next: GearMotion, capMps: number
 
 /** Whether the lower gear is the better one again anywhere between the cap and its limiter. */
 function worseAbove(advantage: (speedMps: number) => number, here: GearMotion, capMps: number): boolean {
-	const places = [...here.images.filter(speed => speed > capMps), (capMps + here.limiterMps) / 2];
-	return here.limiterMps > capMps && places.some(speed => advantage(speed) < 0);
+	if (here.limiterMps <= capMps) return false;
+	if (advantage((capMps + here.limiterMps) / 2) < 0) return true;
+	for (let edge = here.edgeBelow(capMps) + 1; here.edge(edge) < here.limiterMps; edge++) {
+		if (advantage(here.edge(edge)) < 0) return true;
+	}
+	return advantage(here.limiterMps) < 0;
 }
 
-/** The next lower image of a point of the curve, in either gear. */
+/** The next lower edge of either gear. */
 function kinkBelow(here: GearMotion, next: GearMotion, speedMps: number): number | undefined {
-	const below = ({images}: GearMotion) => images.findLast(image => image < speedMps);
-	const [one, other] = [below(here), below(next)];
+	const [one, other] = [edgeUnder(here, speedMps), edgeUnder(next, speedMps)];
 	return one === undefined || (other !== undefined && other > one) ? other : one;
+}
+
+function edgeUnder(motion: GearMotion, speedMps: number): number | undefined {
+	if (speedMps <= 0) return undefined;
+	const below = motion.edgeBelow(speedMps);
+	return motion.edge(below) < speedMps ? motion.edge(below) : motion.edge(below - 1);
 }

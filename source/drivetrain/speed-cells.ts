@@ -1,20 +1,23 @@
 /**
  * The speeds of a gear, cut into cells over each of which one quadrature is exact enough. Cut where a run first comes by:
- * most runs see a small part of a gear's speeds.
+ * most runs see a small part of a gear's speeds, and few come near the speed at which the acceleration falls to 0.
  */
 import type {GearMotion, Mark} from './gear-motion.ts';
-import {cellOf} from './monotone-cubic.ts';
 import {balancedBefore, gentle, integrate, type Stretch, settled} from './travel.ts';
 
 export type Cell = {
 	readonly lowMps: number;
-	readonly highMps: number;
+	highMps: number;
 	/** The acceleration at both ends; it has one sign on the way between them. */
 	readonly lowMps2: number;
-	readonly highMps2: number;
-	/** The images of the motion between which it lies, and its place among the cells there. */
-	readonly between: number;
-	readonly place: number;
+	highMps2: number;
+	/** The edge of the motion above which it lies. */
+	readonly edge: number;
+	/** Whether it needs no more cutting; known once a run has come by. */
+	whole: boolean;
+	/** The neighbors up to the edges on both sides. */
+	above: Cell | undefined;
+	below: Cell | undefined;
 	/** From its low end to its high end, once it was asked for. */
 	stretch: Stretch | undefined;
 };
@@ -24,9 +27,13 @@ export function gains({lowMps2, highMps2}: Cell): boolean {
 	return lowMps2 + highMps2 > 0;
 }
 
+/** Below this speed nothing is cut any more. */
+const standstillMps = 1e-9;
+
 export class SpeedCells {
 	readonly #motion: GearMotion;
-	readonly #cells: (readonly Cell[])[] = [];
+	/** The lowest and the highest cell above each edge. */
+	readonly #ends: {lowest: Cell; highest: Cell}[] = [];
 	readonly #marks: Mark[] = [];
 
 	constructor(motion: GearMotion) {
@@ -36,28 +43,23 @@ export class SpeedCells {
 	/** The cell that a run at a speed goes on into: upward where the car gains speed there, else downward; undefined at the end of the speeds. */
 	from(speedMps: number): Cell | undefined {
 		const cell = this.#holding(speedMps);
-		if (cell === undefined || gains(cell) || speedMps > cell.lowMps) return cell;
-		return this.below(cell);
+		return gains(cell) || speedMps > cell.lowMps ? cell : this.below(cell);
 	}
 
 	/** The cell below a speed. */
 	under(speedMps: number): Cell | undefined {
 		const cell = this.#holding(speedMps);
-		return cell !== undefined && speedMps > cell.lowMps ? cell : cell && this.below(cell);
+		return speedMps > cell.lowMps ? cell : this.below(cell);
 	}
 
-	/** The cell with lowMps ≤ speedMps < highMps, or the last one at the top. */
-	#holding(speedMps: number): Cell | undefined {
-		const cells = this.#cellsBetween(cellOf(this.#motion.images, speedMps));
-		return cells.find(({highMps}) => speedMps < highMps) ?? cells.at(-1);
+	above(cell: Cell): Cell | undefined {
+		const next = cell.above ?? (cell.edge + 1 < this.#motion.lastEdge ? this.#over(cell.edge + 1).lowest : undefined);
+		return next && this.#holdingIn(next, next.lowMps);
 	}
 
-	above({between, place}: Cell): Cell | undefined {
-		return this.#cellsBetween(between)[place + 1] ?? this.#cellsBetween(between + 1)[0];
-	}
-
-	below({between, place}: Cell): Cell | undefined {
-		return this.#cellsBetween(between)[place - 1] ?? this.#cellsBetween(between - 1).at(-1);
+	below(cell: Cell): Cell | undefined {
+		const next = cell.below ?? (cell.edge > 0 ? this.#over(cell.edge - 1).highest : undefined);
+		return next && this.#holdingIn(next, next.highMps);
 	}
 
 	/** Distance and time through the whole cell, positive where the car gains speed. */
@@ -66,72 +68,88 @@ export class SpeedCells {
 		return cell.stretch;
 	}
 
-	#cellsBetween(between: number): readonly Cell[] {
-		const {images} = this.#motion;
-		if (between < 0 || between >= images.length - 1) return [];
-		this.#cells[between] ??= this.#cut(between);
-		return this.#cells[between];
+	/** The cell with lowMps ≤ speedMps < highMps, or the last one at the top. */
+	#holding(speedMps: number): Cell {
+		let cell = this.#over(this.#motion.edgeBelow(speedMps)).lowest;
+		while (speedMps >= cell.highMps && cell.above !== undefined) cell = cell.above;
+		return this.#holdingIn(cell, speedMps);
 	}
 
-	/** At the kinks first, and then until the acceleration changes little over each cell. */
-	#cut(between: number): readonly Cell[] {
-		const low = this.#markAt(between);
-		const high = this.#markAt(between + 1);
+	/** Of the cells that a cell is cut into, the one that holds a speed of it; its own top is in the highest. */
+	#holdingIn(whole: Cell, speedMps: number): Cell {
+		let cell = whole;
+		while (!cell.whole) {
+			const middle = this.#motion.mark((cell.lowMps + cell.highMps) / 2);
+			if (isTiny(cell) || gentle(cell.lowMps2, middle.mps2, cell.highMps2)) cell.whole = true;
+			else if (speedMps >= this.#split(cell, middle).lowMps) cell = cell.above!;
+		}
+		return cell;
+	}
+
+	/** The cells above an edge, cut at the kinks and where the acceleration is 0. */
+	#over(edge: number): {lowest: Cell; highest: Cell} {
+		this.#ends[edge] ??= this.#firstCut(edge);
+		return this.#ends[edge];
+	}
+
+	#firstCut(edge: number): {lowest: Cell; highest: Cell} {
+		const low = this.#markAt(edge);
+		const high = this.#markAt(edge + 1);
 		const middle = this.#motion.mark((low.speedMps + high.speedMps) / 2);
-		const kinked = low.gripHolds !== middle.gripHolds || middle.gripHolds !== high.gripHolds;
-		if (!kinked && gentle(low.mps2, middle.mps2, high.mps2)) return [cellBetween(low, high, between, 0)];
-		const marks = [low];
-		const kinks = kinked ? this.#motion.gripCrossings(low.speedMps, high.speedMps) : [];
-		for (const kink of kinks) cutSmooth(this.#motion, this.#motion.mark(kink), marks);
-		cutSmooth(this.#motion, high, marks);
-		return marks.slice(1).map((mark, place) => cellBetween(marks[place]!, mark, between, place));
+		const lowest = cellBetween(low, high, edge);
+		const ends = {lowest, highest: lowest};
+		this.#ends[edge] = ends;
+		const crossed = low.gripHolds !== middle.gripHolds || middle.gripHolds !== high.gripHolds;
+		const kinks = crossed || this.#motion.stillBetween(edge) ? this.#motion.kinks(edge) : [];
+		lowest.whole = kinks.length === 0 && gentle(low.mps2, middle.mps2, high.mps2);
+		if (lowest.whole) return ends;
+		for (const kink of kinks) this.#split(ends.highest, this.#motion.mark(kink));
+		for (let cell: Cell | undefined = lowest; cell !== undefined; cell = cell.above) this.#splitAtZero(cell);
+		return ends;
 	}
 
-	/** At an image, for the cells on both its sides. */
-	#markAt(image: number): Mark {
-		this.#marks[image] ??= this.#motion.mark(this.#motion.images[image]!);
-		return this.#marks[image];
+	#splitAtZero(cell: Cell): void {
+		const middle = this.#motion.acceleration((cell.lowMps + cell.highMps) / 2);
+		if (gentle(cell.lowMps2, middle, cell.highMps2)) return;
+		const zero = balancedBefore(this.#motion, cell.lowMps, cell.highMps);
+		if (zero === undefined || zero <= cell.lowMps || zero >= cell.highMps) return;
+		this.#split(cell, {speedMps: zero, mps2: 0});
+	}
+
+	/** Cuts a cell in two and gives the upper one. */
+	#split(cell: Cell, at: Pick<Mark, 'speedMps' | 'mps2'>): Cell {
+		const upper = cellBetween(at, {speedMps: cell.highMps, mps2: cell.highMps2}, cell.edge);
+		upper.above = cell.above;
+		upper.below = cell;
+		if (cell.above === undefined) this.#ends[cell.edge]!.highest = upper;
+		else cell.above.below = upper;
+		cell.above = upper;
+		cell.highMps = at.speedMps;
+		cell.highMps2 = at.mps2;
+		return upper;
+	}
+
+	/** At an edge, for the cells on both its sides. */
+	#markAt(edge: number): Mark {
+		this.#marks[edge] ??= this.#motion.mark(this.#motion.edge(edge));
+		return this.#marks[edge];
 	}
 }
 
-function cellBetween(low: Mark, high: Mark, between: number, place: number): Cell {
+function cellBetween(low: Pick<Mark, 'speedMps' | 'mps2'>, high: Pick<Mark, 'speedMps' | 'mps2'>, edge: number): Cell {
 	return {
 		lowMps: low.speedMps,
 		highMps: high.speedMps,
 		lowMps2: low.mps2,
 		highMps2: high.mps2,
-		between,
-		place,
+		edge,
+		whole: false,
+		above: undefined,
+		below: undefined,
 		stretch: undefined,
 	};
 }
 
-/** Below this speed nothing is cut any more. */
-const standstillMps = 1e-9;
-
-/** Adds the marks up to `high` of a piece without kinks; one with a zero of the acceleration in it is cut there first. */
-function cutSmooth(motion: GearMotion, high: Mark, marks: Mark[]): void {
-	const low = marks.at(-1)!;
-	const middle = motion.acceleration((low.speedMps + high.speedMps) / 2);
-	if (gentle(low.mps2, middle, high.mps2)) {
-		marks.push(high);
-		return;
-	}
-	const zero = balancedBefore(motion, low.speedMps, high.speedMps);
-	if (zero !== undefined && zero > low.speedMps && zero < high.speedMps) {
-		const balanced = {...low, speedMps: zero, mps2: 0};
-		halve(motion, low, balanced, marks);
-		halve(motion, balanced, high, marks);
-	} else halve(motion, low, high, marks);
-}
-
-function halve(motion: GearMotion, low: Mark, high: Mark, marks: Mark[]): void {
-	const middle = motion.mark((low.speedMps + high.speedMps) / 2);
-	const tiny = high.speedMps - low.speedMps <= settled * high.speedMps || high.speedMps <= standstillMps;
-	if (tiny || gentle(low.mps2, middle.mps2, high.mps2)) {
-		marks.push(high);
-		return;
-	}
-	halve(motion, low, middle, marks);
-	halve(motion, middle, high, marks);
+function isTiny({lowMps, highMps}: Cell): boolean {
+	return highMps - lowMps <= settled * highMps || highMps <= standstillMps;
 }

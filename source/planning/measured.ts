@@ -1,4 +1,5 @@
 /** What was measured at the track beside what the model says there: whether the track is anchored. */
+import {mphMps} from '../drivetrain/constants.ts';
 import {speedAtRpmMps} from '../drivetrain/tire.ts';
 import type {Straight} from '../drivetrain/track.ts';
 import {type Candidate, candidateOf, gearboxNamed, onRack} from './candidates.ts';
@@ -21,7 +22,7 @@ export type MeasuredPoint = {
 };
 
 /** How far measured and modeled speed may be apart for the track to count as anchored: 0.2 mph. */
-export const anchorToleranceMps = 0.2 * 0.44704;
+export const anchorToleranceMps = 0.2 * mphMps;
 
 /** Each straight with measured data, in the track's order. */
 export function measuredPoints(plan: Plan): MeasuredPoint[] {

@@ -52,6 +52,8 @@ const take = (home: string, lock: string, token: string, waitMs: number): StoreP
 		const until = performance.now() + waitMs;
 		while (!renamed(prepared, lock)) {
 			freeFromEnded(lock);
+			// However long this step took: of a holder that has ended it is free now.
+			if (renamed(prepared, lock)) return undefined;
 			if (performance.now() > until) {
 				remove(prepared);
 				return locked(lock);

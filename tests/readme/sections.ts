@@ -40,8 +40,8 @@ const everywhere = Object.keys(options).filter(name => commands.every(one => one
 const commandTable = (): string =>
 	tableOf(
 		['command', 'what it does', 'its own options'],
-		commands.map(({name, argument, summary, options: taken}) => [
-			code(['droprack', name, argument?.name].filter(Boolean).join(' ')),
+		commands.map(({name, argument, second, summary, options: taken}) => [
+			code(['droprack', name, argument?.name, second?.name].filter(Boolean).join(' ')),
 			summary,
 			taken
 				.filter(own => !everywhere.includes(own))

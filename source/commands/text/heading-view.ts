@@ -1,4 +1,5 @@
 /** The lines that every answer starts with: whose numbers these are, and for which day. */
+import {referenceDay} from '../../drivetrain/air.ts';
 import type {Air, Track} from '../../drivetrain/track.ts';
 import type {Setting} from '../../planning/results.ts';
 import {type Block, cell, line, text} from './blocks.ts';
@@ -26,15 +27,12 @@ const two = (value: number) => String(value).padStart(2, '0');
 /** The calendar's day where the person is, as in ISO 8601. */
 export const localDay = (now: Date): string => `${now.getFullYear()}-${two(now.getMonth() + 1)}-${two(now.getDate())}`;
 
-/** A track without air is a day at the reference of SAE J1349: 25 °C, 990 hPa, dry. */
-const reference = {temperatureC: 25, pressurePa: 99_000, humidity: 0};
-
 export const airWords = (air: Air | undefined, units: Units): string => {
-	const temperature = units.text('temperature', air?.temperatureC ?? reference.temperatureC);
-	const pressure = units.text('pressure', air?.pressurePa ?? reference.pressurePa);
+	const temperature = units.text('temperature', air?.temperatureC ?? referenceDay.temperatureC);
+	const pressure = units.text('pressure', air?.pressurePa ?? referenceDay.pressurePa);
 	const dampness =
 		air?.dewPointC === undefined
-			? `${fixed((air?.humidity ?? reference.humidity) * 100, 0)} % humidity`
+			? `${fixed((air?.humidity ?? referenceDay.humidity) * 100, 0)} % humidity`
 			: `dew point ${units.text('temperature', air.dewPointC)}`;
 	return `${temperature}, ${pressure}, ${dampness}`;
 };
