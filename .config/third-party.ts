@@ -10,19 +10,26 @@ function packageOf(id: string): string | undefined {
 	return /^\0?(.*\/node_modules\/(?:@[^/]+\/)?[^/]+)\//.exec(id)?.[1];
 }
 
-function licenseText(directory: string): string {
+function licenseText(directory: string, modules: readonly string[]): string {
 	const files = readdirSync(directory).filter(name => /^(licen[cs]e|copying|notice)/i.test(name));
 	if (files.length > 0) return files.map(name => readFileSync(join(directory, name), 'utf8').trim()).join('\n\n');
 	const readme = readdirSync(directory).find(name => /^readme/i.test(name));
 	const section = /^#+ *licen[cs]e\b.*$([\s\S]*)/im.exec(
 		readme === undefined ? '' : readFileSync(join(directory, readme), 'utf8'),
 	);
-	return section?.[1]?.trim() ?? '(The package comes without the text of its license.)';
+	return section?.[1]?.trim() ?? sourceNotice(modules) ?? '(The package comes without the text of its license.)';
 }
 
-function notice(directory: string): string {
+/** What the head of a source file says, where a package has nothing else. */
+function sourceNotice(modules: readonly string[]): string | undefined {
+	const heads = modules.map(id => /^\s*\/\*[\s\S]*?\*\//.exec(readFileSync(id.replace(/^\0/, ''), 'utf8'))?.[0]);
+	const head = heads.find(text => text !== undefined && /copyright/i.test(text));
+	return head?.replace(/^[ \t]*\/?\*+\/?[ \t]?/gm, '').trim();
+}
+
+function notice(directory: string, modules: readonly string[]): string {
 	const {name, version, license} = JSON.parse(readFileSync(join(directory, 'package.json'), 'utf8')) as Manifest;
-	return `${name} ${version}\nLicense: ${license ?? 'see below'}\n\n${licenseText(directory)}\n`;
+	return `${name} ${version}\nLicense: ${license ?? 'see below'}\n\n${licenseText(directory, modules)}\n`;
 }
 
 export function thirdParty(): Plugin {
@@ -31,7 +38,8 @@ export function thirdParty(): Plugin {
 		generateBundle(_, bundle) {
 			const modules = Object.values(bundle).flatMap(part => (part.type === 'chunk' ? part.moduleIds : []));
 			const packages = new Set(modules.map(packageOf).filter(directory => directory !== undefined));
-			const notices = [...packages].map(notice).sort();
+			const own = (directory: string) => modules.filter(id => packageOf(id) === directory && !id.includes('?'));
+			const notices = [...packages].map(directory => notice(directory, own(directory))).sort();
 			const head = 'Droprack holds code of these packages, each under the license given with it.\n';
 			this.emitFile({
 				type: 'asset',
