@@ -2,6 +2,7 @@
 import {finish, line, machine} from './harness.ts';
 import {benchOneStraight} from './one-straight.ts';
 import {benchProcesses} from './processes.ts';
+import {benchScreen} from './screen.ts';
 import {benchGrowth, benchWholeSolver} from './whole-solver.ts';
 
 const seed = Number(process.argv[2] ?? 20_260_731);
@@ -14,4 +15,6 @@ line();
 benchGrowth(seed);
 line();
 benchProcesses();
+line();
+await benchScreen(process.cwd());
 finish();

@@ -47,7 +47,8 @@ function checkWords(checks: readonly Check[]): Piece[][] {
 		.map(check => {
 			const tone: Meaning = check.verdict === 'pass' ? 'muted' : check.verdict;
 			const word = check.verdict === 'fail' ? 'FAIL' : check.verdict;
-			const at = check.verdict === 'pass' ? '' : placeWords(check);
+			// Where the highest RPM is turned is always told.
+			const at = check.verdict === 'pass' && check.check !== 'limit' ? '' : placeWords(check);
 			return [piece(`${names[check.check]} `), piece(word, tone), piece(`${marginWords(check)}${at}`)];
 		});
 }
