@@ -1,5 +1,6 @@
 import {defineConfig} from 'vitest/config';
 import {inkTable} from './ink-table.ts';
+import {keepPaint} from './keep-paint.ts';
 import {thirdParty} from './third-party.ts';
 
 const root = new URL('..', import.meta.url).pathname;
@@ -15,7 +16,7 @@ const hashBang = '#!/usr/bin/env node';
 
 export default defineConfig(({command}) => ({
 	root,
-	plugins: [inkTable(), thirdParty()],
+	plugins: [inkTable(), keepPaint(), thirdParty()],
 	// Only for the build: in tests it would send every library through the transformer.
 	...(command === 'build' && {
 		ssr: {noExternal: true as const},

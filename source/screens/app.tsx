@@ -20,6 +20,8 @@ const Lines = ({lines, theme}: {lines: readonly Pieces[]; theme: Theme}) => (
 	</Box>
 );
 
+const numbers = (count: number) => Array.from({length: count}, (_, row) => ({row}));
+
 /** Something of a size that may change, and tells. */
 export type Sized = {
 	readonly size: {readonly width: number; readonly height: number};
@@ -55,8 +57,9 @@ export function App({live, theme, screen}: {live: LiveSession; theme: Theme; scr
 			{frame.table && (
 				<Box>
 					<LineTable
-						data={frame.table.rows}
-						columns={frame.table.columns.map(({head}) => head)}
+						data={numbers(frame.table.rows.length)}
+						columns={[]}
+						rows={frame.table.rows}
 						layout={frame.table.columns}
 						selected={frame.table.selected}
 						theme={theme}

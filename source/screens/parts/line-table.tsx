@@ -7,25 +7,27 @@ import {type TableColumn, type TableRow, tableBar, tableHeading, tableLine} from
 import {painted, type Theme} from './theme.ts';
 
 type Props = {
-	data: Record<string, string>[];
-	columns: string[];
+	/** Numbers of the rows: ink-table hashes what it is given for every frame, so it is given little. */
+	data: {row: number}[];
+	columns: 'row'[];
+	rows: readonly TableRow[];
 	layout: readonly TableColumn[];
 	theme: Theme;
-	/** Of the rows here; -1: none. */
+	/** Of the rows; -1: none. */
 	selected: number;
 };
-type Part = Parameters<Table<Record<string, string>>['data']>[0];
+type Part = Parameters<Table<{row: number}>['data']>[0];
 
 const Line = memo(({text}: {text: string}) => <Text wrap="truncate">{text}</Text>);
 
 const nothing = null as unknown as ReactElement;
 
-export class LineTable extends Table<Record<string, string>> {
+export class LineTable extends Table<{row: number}> {
 	declare readonly props: Readonly<Props>;
 
-	/** Widths are given: ink-table would count code units. */
+	/** Widths and texts are ours: ink-table would count code units. */
 	override getColumns() {
-		return this.props.layout.map(({head, width}) => ({column: head, key: head, width}));
+		return [];
 	}
 
 	override header = () => nothing;
@@ -35,9 +37,9 @@ export class LineTable extends Table<Record<string, string>> {
 	override heading = () => this.#line(tableHeading(this.props.layout));
 
 	override data = ({data}: Part) => {
-		const {layout, selected} = this.props;
-		const isSelected = data === this.props.data[selected];
-		return this.#line(isSelected ? tableBar(data as TableRow, layout) : tableLine(data as TableRow, layout));
+		const {rows, layout, selected} = this.props;
+		const row = rows[data.row!]!;
+		return this.#line(data.row === selected ? tableBar(row, layout) : tableLine(row, layout));
 	};
 
 	#line(pieces: Pieces) {

@@ -11,7 +11,7 @@ import {readTrackOf} from './forms.ts';
 import {type Effect, intend, type Scene, scopesOf, takesText} from './intend.ts';
 import {type Clock, Ranker} from './ranker.ts';
 import {reduce} from './reduce.ts';
-import {type Placed, placedRows, shownRows} from './rows.ts';
+import {type Filter, type Order, type Placed, placedRows, shownRows} from './rows.ts';
 import type {Session} from './session.ts';
 
 /** What only the terminal can do. */
@@ -31,6 +31,9 @@ export class LiveSession {
 	readonly #outside: Outside;
 	readonly #listeners = new Set<() => void>();
 	#placed: {readonly ranked: Ranked; readonly rows: Placed[]} | undefined;
+	#shown:
+		| {readonly all: readonly Placed[]; readonly order: Order; readonly filter: Filter; readonly rows: Placed[]}
+		| undefined;
 
 	constructor(session: Session, catalog: readonly OpenDocument[], keeper: Keeper, outside: Outside, clock: Clock) {
 		this.#catalog = catalog;
@@ -154,12 +157,20 @@ export class LiveSession {
 		const scene: Scene = {
 			ranked,
 			all,
-			shown: shownRows(all, session.order, session.filter),
+			shown: this.#shownOf(all, session),
 			situations: track.ok ? track.value.situations.map(({name}) => name) : [],
 			choices: place.at === 'choose' ? choicesFor(this.#catalog, documents, place.kind, place.search.text) : [],
 			isWorking: answer.is === 'working',
 		};
 		return {session, answer, scene};
+	}
+
+	/** The same list as long as nothing about it has changed: what is made of it is kept with it. */
+	#shownOf(all: readonly Placed[], {order, filter}: Session): Placed[] {
+		const known = this.#shown;
+		if (known?.all === all && known.order === order && known.filter === filter) return known.rows;
+		this.#shown = {all, order, filter, rows: shownRows(all, order, filter)};
+		return this.#shown.rows;
 	}
 
 	#placedIn(ranked: Ranked): Placed[] {

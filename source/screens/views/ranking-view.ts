@@ -109,11 +109,9 @@ const marksWidth = 4;
 
 /** `height` counts the heading too; `previousStart` is where the window stood before. */
 export function rankingTable(given: Given, width: number, height: number, previousStart: number): RankingTable {
-	const {shown, cursor, session, compared} = given;
+	const {shown, cursor, session} = given;
 	const {start, end, pinned} = windowAndPinned(given, height - 1, previousStart);
-	const used = compared === undefined ? columns : [...columns.filter(({head}) => head !== 'gain s'), ...comparing];
-	const texts = shown.map(placed => used.map(column => column.text(placed, given)));
-	const natural = used.map(({head}, i) => Math.max(displayWidth(head), ...texts.map(row => displayWidth(row[i]!))));
+	const {used, texts, natural} = cellsOf(given);
 	const widths = fitColumns(used, natural, width - marksWidth - gap);
 	const rowAt = (index: number): Record<string, string> => ({
 		' ': marksOf(shown[index]!, session, index === cursor),
@@ -124,6 +122,29 @@ export function rankingTable(given: Given, width: number, height: number, previo
 		widths[i] === 0 ? [] : [{head, align, width: widths[i]!, ...(tone && {tone})}],
 	);
 	return {columns: [{head: ' ', align: 'left', width: marksWidth}, ...kept], rows, selected: cursor - start, start};
+}
+
+type Cells = {
+	readonly compared: Row | undefined;
+	readonly used: readonly Column[];
+	readonly texts: readonly (readonly string[])[];
+	/** How wide each column is with all its texts. */
+	readonly natural: readonly number[];
+};
+
+/** The texts of all rows, made once for each list of rows: moving the cursor changes none of them. */
+const made = new WeakMap<readonly Placed[], Cells>();
+
+function cellsOf(given: Given): Cells {
+	const {shown, compared} = given;
+	const known = made.get(shown);
+	if (known !== undefined && known.compared === compared) return known;
+	const used = compared === undefined ? columns : [...columns.filter(({head}) => head !== 'gain s'), ...comparing];
+	const texts = shown.map(placed => used.map(column => column.text(placed, given)));
+	const natural = used.map(({head}, i) => Math.max(displayWidth(head), ...texts.map(row => displayWidth(row[i]!))));
+	const cells = {compared, used, texts, natural};
+	made.set(shown, cells);
+	return cells;
 }
 
 /** What is in the car and what is compared with stay in view: below the others where the window is elsewhere. */
