@@ -9,6 +9,7 @@ import {reasonsOf} from './reasons.ts';
 import {remarksOn} from './remarks.ts';
 import type {Outcome, Ranking, Row} from './results.ts';
 import {rowOf} from './row.ts';
+import type {RunMemory} from './run-memory.ts';
 import {finish, type Progress, type RackRuns, rackSteps} from './run-rack.ts';
 import type {RowRun} from './run-row.ts';
 
@@ -29,13 +30,14 @@ export function rankRack(car: Car, track: Track, options: PlanOptions = {}): Out
 	return ranked.ok ? done(ranked.value.ranking) : ranked;
 }
 
-/** The same row by row, for a caller that has other things to do in between. */
+/** The same row by row, for a caller that has other things to do in between, and that may ask again with something changed. */
 export function* rankSteps(
 	car: Car,
 	track: Track,
 	options: PlanOptions = {},
+	memory?: RunMemory,
 ): Generator<Progress, Outcome<Ranked>, void> {
-	const rack = yield* rackSteps(car, track, options);
+	const rack = yield* rackSteps(car, track, options, memory);
 	if (!rack.ok) return rack;
 	const {ground, runs} = rack.value;
 	const judged: Judged[] = [];

@@ -1,11 +1,11 @@
 /** What was run before, so that a change of one straight runs only that straight again. */
 import type {Candidate} from './candidates.ts';
-import type {Condition, Place} from './conditions.ts';
+import type {Place} from './conditions.ts';
 import type {Plan} from './plan.ts';
 import type {PlaceRun} from './run-place.ts';
 
 /** A run, unless the very same has been run before. */
-export type Recall = (condition: Condition, place: Place, candidate: Candidate, run: () => PlaceRun) => PlaceRun;
+export type Recall = (place: Place, candidate: Candidate, run: () => PlaceRun) => PlaceRun;
 
 /** Numbers for texts: the same text has the same number. */
 class Numbers {
@@ -19,8 +19,8 @@ class Numbers {
 	}
 }
 
-/** Texts are let go together with the runs once there are so many of them. */
-const mostTexts = 10_000;
+/** After so many answers everything is let go, with the texts that grew meanwhile. */
+const mostAnswers = 1000;
 const mostPlaces = 2 ** 20;
 
 /**
@@ -30,7 +30,7 @@ const mostPlaces = 2 ** 20;
 export class RunMemory {
 	#places = new Numbers();
 	#trains = new Numbers();
-	#texts = 0;
+	#answers = 0;
 	/** In the order of their last use. */
 	#runs = new Map<number, PlaceRun>();
 	#used = 0;
@@ -44,7 +44,7 @@ export class RunMemory {
 			for (const place of places) numbers.set(place, this.#places.of(vehicle + placeText(place)));
 		}
 		const trains = new Map<Candidate, number>();
-		return (_, place, candidate, run) => {
+		return (place, candidate, run) => {
 			const train = trains.get(candidate) ?? this.#trains.of(JSON.stringify(candidate.train));
 			trains.set(candidate, train);
 			return this.#recalled(train * mostPlaces + numbers.get(place)!, run);
@@ -55,12 +55,11 @@ export class RunMemory {
 	forget(): void {
 		const spare = this.#runs.size - 2 * this.#used;
 		for (const key of [...this.#runs.keys()].slice(0, Math.max(0, spare))) this.#runs.delete(key);
-		this.#texts += 1;
-		if (this.#texts < mostTexts) return;
+		if (++this.#answers < mostAnswers) return;
 		this.#places = new Numbers();
 		this.#trains = new Numbers();
 		this.#runs = new Map();
-		this.#texts = 0;
+		this.#answers = 0;
 	}
 
 	#recalled(key: number, run: () => PlaceRun): PlaceRun {

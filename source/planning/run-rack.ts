@@ -8,6 +8,7 @@ import {isAnchored, measuredPoints} from './measured.ts';
 import {type Plan, type PlanOptions, planFor} from './plan.ts';
 import {rackFaults} from './rack-faults.ts';
 import type {Outcome} from './results.ts';
+import type {RunMemory} from './run-memory.ts';
 import {type RowRun, runRow} from './run-row.ts';
 
 export type RackRuns = {
@@ -24,15 +25,22 @@ export function runRack(car: Car, track: Track, options: PlanOptions): Outcome<R
 }
 
 /** The same row by row, for a caller that has other things to do in between. */
-export function* rackSteps(car: Car, track: Track, options: PlanOptions): Generator<Progress, Outcome<RackRuns>, void> {
+export function* rackSteps(
+	car: Car,
+	track: Track,
+	options: PlanOptions,
+	memory?: RunMemory,
+): Generator<Progress, Outcome<RackRuns>, void> {
 	const plan = planFor(car, track, options);
 	if (!plan.ok) return plan;
 	const candidates = candidatesOf(plan.value.car);
+	const recall = memory?.recallFor(plan.value);
 	const runs: RowRun[] = [];
 	for (const candidate of candidates) {
-		runs.push(runRow(plan.value, candidate));
+		runs.push(runRow(plan.value, candidate, recall));
 		yield {done: runs.length, total: candidates.length};
 	}
+	memory?.forget();
 	const faults = rackFaults(plan.value, runs);
 	return faults.length > 0 ? failed(faults) : done({ground: groundOf(plan.value), runs});
 }

@@ -1,5 +1,6 @@
 /** What a field of a document takes, from the JSON Schema that the documents themselves are read by. */
-import {type Dimension, quantityOf} from '../../documents/quantity.ts';
+import {quantityOf} from '../../documents/quantity.ts';
+import {type Dimension, dimensions} from '../../documents/units.ts';
 
 export type FieldKind =
 	/** Text with a unit. `change`: with a sign it changes what the track has. */
@@ -23,24 +24,6 @@ export type Schema = {
 	readonly examples?: readonly unknown[];
 	readonly pattern?: string;
 };
-
-const dimensions: readonly Dimension[] = [
-	'length',
-	'speed',
-	'mass',
-	'area',
-	'acceleration',
-	'angle',
-	'temperature',
-	'pressure',
-	'time',
-	'torque',
-	'force',
-	'inertia',
-	'power',
-	'share',
-	'number',
-];
 
 /** What the field takes; undefined for a group or a list of groups. */
 export function fieldKind(schema: Schema): FieldKind | undefined {

@@ -2,6 +2,7 @@
 import {type Ranked, rankSteps} from '../../planning/rank-rack.ts';
 import type {Outcome} from '../../planning/results.ts';
 import {runAlone} from '../../planning/run-alone.ts';
+import {RunMemory} from '../../planning/run-memory.ts';
 import type {Progress} from '../../planning/run-rack.ts';
 import {type Answer, type Inputs, rankedIn, readBoth, wrongFromFault} from './answer.ts';
 
@@ -12,8 +13,8 @@ export type Clock = {
 	later(act: () => void): () => void;
 };
 
-/** What is done within these is shown in the same frame as the key. */
-const firstSliceMs = 40;
+/** What is done within these is shown in the same frame as the key: as long as a person takes it to happen at once. */
+const firstSliceMs = 100;
 /** Short enough that no key waits noticeably. */
 const sliceMs = 12;
 /** A drawing costs as much as a slice: progress is told no more often than this. */
@@ -28,6 +29,7 @@ export class Ranker {
 	readonly #clock: Clock;
 	readonly #changed: () => void;
 	#cancel: (() => void) | undefined;
+	readonly #memory = new RunMemory();
 	#told = 0;
 	#inputs: Inputs | undefined;
 
@@ -74,7 +76,7 @@ export class Ranker {
 		const first = before === undefined ? runAlone(read.car, read.track, {}, inputs) : undefined;
 		this.#answer = {is: 'working', progress: noProgress, first: first?.ok ? first.value : undefined, before};
 		this.#told = this.#clock.now();
-		this.#work(rankSteps(read.car, read.track, {situation: inputs.situation}), budgetMs);
+		this.#work(rankSteps(read.car, read.track, {situation: inputs.situation}, this.#memory), budgetMs);
 	}
 
 	/** What was ranked of another track or car would only mislead. */
