@@ -7,20 +7,26 @@ import type {Surroundings} from './surroundings.ts';
 const waitMs = 5000;
 const always = '> FILE keeps it in a file.';
 
-/** The reply, with the text on its way to the clipboard. The bytes go to standard error, so that a pipe gets only the result. */
-export const withCopy = (reply: Reply, text: string, around: Surroundings): Reply => {
-	const way = toClipboard(text, around.environment);
+/** Sends the text on its way and says so; `write` gets the bytes that are for the terminal itself. */
+export const copyText = (text: string, environment: Surroundings['environment'], write: (bytes: string) => void) => {
+	const way = toClipboard(text, environment);
 	if (way.kind === 'write') {
-		const note = `droprack: sent to the terminal's clipboard; not every terminal takes it. ${always}\n`;
-		return {...reply, err: `${way.bytes}${reply.err}${note}`};
+		write(way.bytes);
+		return "sent to the terminal's clipboard; not every terminal takes it.";
 	}
 	try {
 		execFileSync(way.command, way.args, {input: way.input, timeout: waitMs, stdio: ['pipe', 'ignore', 'ignore']});
-		return {
-			...reply,
-			err: `${reply.err}droprack: in the buffer of tmux and sent to the terminal's clipboard. ${always}\n`,
-		};
+		return "in the buffer of tmux and sent to the terminal's clipboard.";
 	} catch {
-		return {...reply, err: `${reply.err}droprack: tmux did not take it for the clipboard. ${always}\n`};
+		return 'tmux did not take it for the clipboard.';
 	}
+};
+
+/** The reply, with the text copied. The bytes go to standard error, so that a pipe gets only the result. */
+export const withCopy = (reply: Reply, text: string, around: Surroundings): Reply => {
+	let bytes = '';
+	const words = copyText(text, around.environment, codes => {
+		bytes = codes;
+	});
+	return {...reply, err: `${bytes}${reply.err}droprack: ${words} ${always}\n`};
 };

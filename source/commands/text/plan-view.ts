@@ -1,15 +1,15 @@
 /** A plan that was read: what it says, which numbers agree, and what differs from the reader's own documents. */
 import type {Agreement} from '../../sharing/agreement.ts';
 import type {Difference} from '../../sharing/compare.ts';
+import type {Own} from '../../sharing/hold-against.ts';
 import type {PlanDocument} from '../../sharing/plan-document.ts';
 import type {ShortPlan} from '../../sharing/short-form.ts';
 import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
 import {caution} from './heading-view.ts';
 import {absent} from './units.ts';
 
-type Own = {track: Difference[] | undefined; car: Difference[] | undefined};
-
-export const planView = (plan: PlanDocument, compared: readonly Agreement[], own: Own, taken = false): Block[] => [
+/** `end` says what became of it. */
+export const planView = (plan: PlanDocument, compared: readonly Agreement[], own: Own, end: string): Block[] => [
 	text(`${plan.car.name} · engine ${plan.engine} · plan of ${plan.date}`, 'strong', 2),
 	text(`${plan.track.name} · pair ${plan.pair} · gearbox ${plan.gearbox}`, 'plain', 2),
 	...(plan.notes ? [text(`Notes: ${plan.notes}`, 'plain', 2)] : []),
@@ -20,7 +20,7 @@ export const planView = (plan: PlanDocument, compared: readonly Agreement[], own
 	...ownView('track', String(plan.track.name), own.track),
 	...ownView('car', String(plan.car.name), own.car),
 	gap,
-	text(taken ? 'The track is kept with this pair and set.' : 'Nothing was taken over.'),
+	text(end),
 	text(caution, 'muted'),
 ];
 
