@@ -6,6 +6,7 @@ import {homeDirectory} from '../store/home.ts';
 import {readPreferences} from '../store/preferences.ts';
 import {findDocument} from './find-document.ts';
 import type {Request} from './request.ts';
+import {screenErrands} from './screen-errands.ts';
 import {screenKeeper} from './screen-keeper.ts';
 import {demo, type Kind, type Shelved, shelf, shippedShelf} from './shelf.ts';
 import type {Surroundings} from './surroundings.ts';
@@ -22,7 +23,10 @@ export async function openAtTerminal({units, ascii, car}: Request, around: Surro
 		catalog,
 		units,
 		theme: {color: around.color, ascii},
-		keeper: screenKeeper(home),
+		keeper: screenKeeper(
+			home,
+			screenErrands(home, around.environment, bytes => process.stdout.write(bytes)),
+		),
 		// The name that Ink gave it.
 		reader: around.environment.INK_SCREEN_READER === 'true',
 		notice: [...tracks.notes, ...cars.notes][0],
@@ -31,10 +35,20 @@ export async function openAtTerminal({units, ascii, car}: Request, around: Surro
 
 function openDocuments(kind: Kind, entries: readonly Shelved[], around: Surroundings): OpenDocument[] {
 	const shipped = shippedShelf(kind, around.shipped);
-	return entries.map(({stem, from, document, plan}) => {
+	return entries.map(({stem, from, document, plan, notes}) => {
 		const json = document as JsonObject;
 		const original = from === 'shipped' ? json : shipped.find(one => one.stem === stem)?.document;
-		return {id: `${kind}:${stem}`, kind, from, json, saved: json, shipped: original as JsonObject | undefined, plan};
+		return {
+			id: `${kind}:${stem}`,
+			kind,
+			from,
+			json,
+			saved: json,
+			shipped: original as JsonObject | undefined,
+			plan,
+			notes,
+			savedNotes: notes,
+		};
 	});
 }
 

@@ -1,6 +1,7 @@
 /** Keeps for the screen what was changed there: the unsaved session after every change, documents when they are saved. */
 import {visible} from '../documents/visible.ts';
-import type {Chosen, Keeper, Saving} from '../screens/keeper.ts';
+import type {Saving} from '../screens/errands.ts';
+import type {Chosen, Keeper} from '../screens/keeper.ts';
 import type {Documents, OpenDocument} from '../screens/session/documents.ts';
 import {restored} from '../screens/session/restore.ts';
 import {problemText, type StoreProblem} from '../store/answer.ts';
@@ -9,8 +10,10 @@ import type {Named, Preset, SavedCar} from '../store/kept-documents.ts';
 import {keptNamed, listKept} from '../store/list-kept.ts';
 import {type SaveAnswer, saveKept} from '../store/save-kept.ts';
 import {dropSession, keepSession, sessionFolder, unsavedSessions} from '../store/session.ts';
+import {forgetSaved, type screenErrands} from './screen-errands.ts';
 
-export function screenKeeper(home: string): Keeper {
+/** `errands` are those that need no knowledge of what was read when. */
+export function screenKeeper(home: string, errands: ReturnType<typeof screenErrands>): Keeper {
 	const earlier = unsavedSessions(home)
 		.sessions.map(({file, document}) => ({file, documents: restored(document)}))
 		.find(({documents}) => documents !== undefined);
@@ -24,6 +27,14 @@ export function screenKeeper(home: string): Keeper {
 		earlier: earlier?.documents,
 		dropEarlier: () => earlier && dropSession(home, earlier.file),
 		save: (document, chosen) => save(home, bases, document, chosen),
+		errands: {
+			...errands,
+			forget: (kind, name) => {
+				const saving = forgetSaved(home, kind, name, bases.get(kind, name));
+				if (saving.ok) bases.forget(kind, name);
+				return saving;
+			},
+		},
 		where: () => (session.isKept ? sessionFolder(home) : undefined),
 	};
 }
@@ -70,12 +81,21 @@ class Bases {
 		return this.#revisions.get(`${kind} ${sameSpelling(name)}`);
 	}
 
+	forget(kind: string, name: string): void {
+		this.#revisions.delete(`${kind} ${sameSpelling(name)}`);
+	}
+
 	set(kind: string, name: string, revision: string): void {
 		this.#revisions.set(`${kind} ${sameSpelling(name)}`, revision);
 	}
 }
 
-function save(home: string, bases: Bases, {kind, json, shipped}: OpenDocument, {car, plan}: Chosen): Saving {
+function save(
+	home: string,
+	bases: Bases,
+	{kind, json, saved: before, shipped, notes}: OpenDocument,
+	{car, plan}: Chosen,
+): Saving {
 	const document = json as unknown as Named;
 	const {name} = document;
 	if (typeof name !== 'string' || name.trim() === '')
@@ -85,21 +105,17 @@ function save(home: string, bases: Bases, {kind, json, shipped}: OpenDocument, {
 	const base = bases.get(kind, name);
 	const answer: SaveAnswer<Preset> | SaveAnswer<SavedCar> =
 		kind === 'track'
-			? saveKept(home, presetOf(home, document, car, plan, saved, basedOn), base)
+			? saveKept(home, presetOf(home, document, {car, plan, notes, isNew: before === undefined, saved, basedOn}), base)
 			: saveKept(home, carOf(home, document, saved, basedOn), base);
 	if (answer.kind === 'saved') bases.set(kind, name, answer.kept.revision);
 	if (answer.kind === 'changed' && answer.theirs) bases.set(kind, name, answer.theirs.revision);
 	return savingOf(visible(name), answer);
 }
 
-function presetOf(
-	home: string,
-	track: Named,
-	car: string,
-	plan: string | undefined,
-	saved: string,
-	basedOn: string | undefined,
-): Preset {
+/** Of a document that is new here the notes of a saved one of its name stay, where it has none itself. */
+type Beside = Chosen & {notes: string | undefined; isNew: boolean; saved: string; basedOn: string | undefined};
+
+function presetOf(home: string, track: Named, {car, plan, notes, isNew, saved, basedOn}: Beside): Preset {
 	const before = keptNamed(home, 'preset', track.name)?.document;
 	// "33/38 Set A": the name of a set may hold blanks, a pair does not.
 	const [, pair, gearbox] = /^(\S+) (.*)$/.exec(plan ?? '') ?? [];
@@ -110,7 +126,7 @@ function presetOf(
 		car,
 		pair,
 		gearbox,
-		notes: before?.notes,
+		notes: notes ?? (isNew ? before?.notes : undefined),
 		basedOn: before?.basedOn ?? basedOn,
 		saved,
 	};

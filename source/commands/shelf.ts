@@ -25,6 +25,7 @@ export type Shelved = {
 	car?: string | undefined;
 	/** Pair and set that were saved with a track: "33/38 A". */
 	plan?: string | undefined;
+	notes?: string | undefined;
 };
 
 export type Shelf = {
@@ -71,10 +72,10 @@ export const shippedShelf = (kind: Kind, shipped: URL): Shelved[] => {
 };
 
 const savedShelf = (kind: Kind, home: string): Shelf => {
-	const entry = (file: string, document: Named, car?: string, plan?: string): Shelved => {
+	const entry = (file: string, document: Named, beside: Pick<Shelved, 'car' | 'plan' | 'notes'> = {}): Shelved => {
 		const {name} = document;
 		const stem = stemOf(basename(file));
-		return {kind, from: 'saved', name, stem, file, text: textOf(document), document, car, plan};
+		return {kind, from: 'saved', name, stem, file, text: textOf(document), document, ...beside};
 	};
 	const noted = <T>(
 		{kept, problems}: {kept: T[]; problems: Parameters<typeof problemText>[0][]},
@@ -84,8 +85,8 @@ const savedShelf = (kind: Kind, home: string): Shelf => {
 		notes: problems.map(problemText),
 	});
 	if (kind === 'car') return noted(listKept(home, 'saved-car'), ({file, document}) => entry(file, document.car));
-	return noted(listKept(home, 'preset'), ({file, document: {track, car, pair, gearbox}}) =>
-		entry(file, track, car, pair && gearbox && `${pair} ${gearbox}`),
+	return noted(listKept(home, 'preset'), ({file, document: {track, car, pair, gearbox, notes}}) =>
+		entry(file, track, {car, plan: pair && gearbox && `${pair} ${gearbox}`, notes}),
 	);
 };
 

@@ -1,8 +1,6 @@
 /** What the screen asks of whoever started it: to keep what was changed, beyond this process. */
+import type {Errands, Saving} from './errands.ts';
 import type {Documents, OpenDocument} from './session/documents.ts';
-
-/** `words` are for the person. */
-export type Saving = {readonly ok: boolean; readonly words: string};
 
 /** What is saved beside a track: the car it was ranked with, and the pair and set that were chosen. */
 export type Chosen = {readonly car: string; readonly plan: string | undefined};
@@ -20,4 +18,6 @@ export type Keeper = {
 	save(document: OpenDocument, chosen: Chosen): Saving;
 	/** Where the session is, for a person to read after a crash; undefined where nothing had to be kept. */
 	where(): string | undefined;
+	/** The rest of what reaches beyond this process. */
+	readonly errands: Errands;
 };

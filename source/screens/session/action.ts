@@ -1,9 +1,13 @@
 /** What may happen to a session, named by intention. */
 import type {UnitSystem} from '../../commands/text/units.ts';
+import type {HistoryEntry} from '../../store/kept-documents.ts';
 import type {KeyEvent} from '../terminal/key-event.ts';
 import type {Documents, Kind, OpenDocument} from './documents.ts';
+import type {Item} from './hand-over.ts';
 import type {Filter, Order} from './rows.ts';
 import type {Over, Place} from './session.ts';
+import type {Incoming} from './take-in.ts';
+import type {Draft, DraftField} from './track-history.ts';
 
 export type Action =
 	| {readonly do: 'go'; readonly place: Place}
@@ -39,4 +43,21 @@ export type Action =
 	| {readonly do: 'move entry'; readonly by: 1 | -1}
 	| {readonly do: 'paste curve'; readonly text: string}
 	| {readonly do: 'move choice'; readonly by: number}
-	| {readonly do: 'accept margin'};
+	| {readonly do: 'accept margin'}
+	| {readonly do: 'show item'; readonly item: Item}
+	| {readonly do: 'scroll'; readonly by: number}
+	| {readonly do: 'note'; readonly text: string}
+	/** What was typed into an entry field, or as the name of a plan's file, does not do. */
+	| {readonly do: 'refuse'; readonly wrong: string}
+	| {readonly do: 'show incoming'; readonly incoming: Incoming}
+	| {readonly do: 'read another'}
+	| {readonly do: 'take over'}
+	| {readonly do: 'show history'; readonly entries: readonly HistoryEntry[]}
+	/** On with the draft of this track, else with a new one. */
+	| {readonly do: 'draft'; readonly draft: Draft}
+	| {readonly do: 'move in draft'; readonly by: 1 | -1}
+	| {readonly do: 'leave draft'}
+	| {readonly do: 'refuse draft'; readonly field: DraftField; readonly wrong: string}
+	| {readonly do: 'whole to'; readonly which: 'saved' | 'shipped'}
+	/** A saved document is no more. */
+	| {readonly do: 'forgotten'; readonly document: OpenDocument};

@@ -16,6 +16,9 @@ export type OpenDocument = {
 	readonly shipped: JsonObject | undefined;
 	/** Of a track: pair and set that were saved with it, "33/38 A". */
 	readonly plan: string | undefined;
+	/** Of a track: what to remember, as it stands and as it was last read or saved. */
+	readonly notes?: string | undefined;
+	readonly savedNotes?: string | undefined;
 };
 
 export type Documents = {
@@ -34,6 +37,20 @@ export function withJson(documents: Documents, kind: Kind, json: JsonObject): Do
 	return {...documents, open: {...documents.open, [document.id]: {...document, json}}};
 }
 
+/** The track that is looked at, with other notes; none where nothing is written. */
+export function withNotes(documents: Documents, text: string): Documents {
+	const track = current(documents, 'track');
+	const notes = text.trim() === '' ? undefined : text.trim();
+	if (notes === track.notes) return documents;
+	return {...documents, open: {...documents.open, [track.id]: {...track, notes}}};
+}
+
+/** The document put in the place of the one of its id. */
+export const withDocument = (documents: Documents, document: OpenDocument): Documents => ({
+	...documents,
+	open: {...documents.open, [document.id]: document},
+});
+
 /** Looks at another document; one that is open already is taken as it stands, with its changes. */
 export function lookAt(documents: Documents, document: OpenDocument): Documents {
 	const {id, kind} = document;
@@ -41,7 +58,8 @@ export function lookAt(documents: Documents, document: OpenDocument): Documents 
 	return {...documents, open, [kind]: id};
 }
 
-export const isChanged = ({json, saved}: OpenDocument): boolean => json !== saved;
+export const isChanged = ({json, saved, notes, savedNotes}: OpenDocument): boolean =>
+	json !== saved || notes !== savedNotes;
 
 /** Documents with changes that are not saved. */
 export const unsaved = (documents: Documents): OpenDocument[] => Object.values(documents.open).filter(isChanged);
@@ -51,10 +69,15 @@ export const titleOf = ({json}: OpenDocument): string => (typeof json.name === '
 
 /** A document with nothing in it but what no document lacks: what is needed is listed on the screen. */
 export function newDocument(kind: Kind, open: Documents['open']): OpenDocument {
+	const json = kind === 'track' ? emptyTrack : emptyCar;
+	return {id: newId(kind, open), kind, from: 'new', json, saved: undefined, shipped: undefined, plan: undefined};
+}
+
+/** One that no open document has. */
+export function newId(kind: Kind, open: Documents['open']): string {
 	let number = 1;
 	while (`${kind}:new ${number}` in open) number++;
-	const json = kind === 'track' ? emptyTrack : emptyCar;
-	return {id: `${kind}:new ${number}`, kind, from: 'new', json, saved: undefined, shipped: undefined, plan: undefined};
+	return `${kind}:new ${number}`;
 }
 
 const emptyTrack: JsonObject = {

@@ -4,10 +4,25 @@ import type {ActionName, Scope} from '../key-table.ts';
 import {editLine} from '../parts/edit-line.ts';
 import type {Action} from './action.ts';
 import type {Choice} from './catalog.ts';
-import {unsaved} from './documents.ts';
+import {current, unsaved} from './documents.ts';
+import {fileNameFor, items} from './hand-over.ts';
 import {marginEntry} from './reduce.ts';
+import {takeInPlace} from './reduce-take-in.ts';
 import {cursorIn, orders, type Placed, stepped} from './rows.ts';
-import {type Place, pictures, type Session} from './session.ts';
+import {type Asked, type Place, pictures, type Session} from './session.ts';
+
+/** What is done for the session outside of it, and then told. */
+export type ErrandEffect =
+	| 'hand over'
+	| 'copy it'
+	| 'write it'
+	| 'write over'
+	| 'export'
+	| 'track history'
+	| 'add to history'
+	| 'keep entry'
+	| 'read file'
+	| 'forget saved';
 
 /** What reaches beyond the session. */
 export type Effect =
@@ -19,7 +34,8 @@ export type Effect =
 	| 'redraw'
 	| 'stop'
 	| 'take choice'
-	| 'forget recovery';
+	| 'forget recovery'
+	| ErrandEffect;
 
 /** What a key's meaning may depend on beside the session. */
 export type Scene = {
@@ -36,12 +52,18 @@ export type Scene = {
 export function scopesOf({place, over}: Session): Scope[] {
 	if (over) return [over.is];
 	if (place.at === 'edit' && place.editing) return ['field'];
-	return place.at === 'choose' ? ['choose'] : [place.at, 'everywhere'];
+	if (place.at === 'history' && place.adding) return ['draft'];
+	if (place.at === 'take in' && place.incoming) return ['incoming', 'everywhere'];
+	return place.at === 'choose' || place.at === 'take in' ? [place.at] : [place.at, 'everywhere'];
 }
 
 /** Whether what a person types is text here. */
-export const takesText = ({place, over}: Session): boolean =>
-	over ? over.is === 'margin' : place.at === 'choose' || (place.at === 'edit' && place.editing !== undefined);
+export function takesText({place, over}: Session): boolean {
+	if (over) return over.is === 'margin' || over.is === 'entry';
+	if (place.at === 'edit') return place.editing !== undefined;
+	if (place.at === 'history') return place.adding;
+	return place.at === 'choose' || (place.at === 'take in' && place.incoming === undefined);
+}
 
 const tenRows = 10;
 const scrollLines = 8;
@@ -106,9 +128,41 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 		case 'previous straight':
 			return straightBy(place, scene, -1);
 		case 'scroll up':
-			return scrollBy(session, -scrollLines);
+			return {do: 'scroll', by: -scrollLines};
 		case 'scroll down':
-			return scrollBy(session, scrollLines);
+			return {do: 'scroll', by: scrollLines};
+		case 'item up':
+			return itemBy(place, -1);
+		case 'item down':
+			return itemBy(place, 1);
+		case 'name file':
+			return place.at === 'hand over' ? entryFor('file', fileNameFor(session.history.present, place.item)) : undefined;
+		case 'write notes':
+			return entryFor('notes', current(session.history.present, 'track').notes ?? '');
+		case 'name directory':
+			return entryFor('directory', '');
+		case 'accept entry':
+			return accepted(over);
+		case 'other name':
+			return over?.is === 'overwriting' ? entryFor('file', over.file) : undefined;
+		case 'take in':
+			return {do: 'go', place: takeInPlace};
+		case 'draft up':
+			return {do: 'move in draft', by: -1};
+		case 'draft down':
+			return {do: 'move in draft', by: 1};
+		case 'differences':
+			return {do: 'go', place: {at: 'differences', kind: 'track', scroll: 0}};
+		case 'other document':
+			return place.at === 'differences'
+				? {do: 'go', place: {at: 'differences', kind: place.kind === 'track' ? 'car' : 'track', scroll: 0}}
+				: undefined;
+		case 'whole to shipped':
+			return {do: 'whole to', which: 'shipped'};
+		case 'whole to saved':
+			return {do: 'whole to', which: 'saved'};
+		case 'forget':
+			return forget(session);
 		case 'edit':
 			return {do: 'go', place: formOf('track')};
 		case 'other form':
@@ -173,6 +227,9 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 		case 'remove entry':
 		case 'undo':
 		case 'redo':
+		case 'read another':
+		case 'take over':
+		case 'leave draft':
 			return {do: name};
 		default:
 			return name;
@@ -223,7 +280,28 @@ function straightBy(place: Place, {all}: Scene, by: 1 | -1): Action | undefined 
 	return {do: 'go', place: {...place, straight: (place.straight + by + count) % count}};
 }
 
-function scrollBy({place, over}: Session, by: number): Action | undefined {
-	if (over?.is === 'help') return {do: 'cover', over: {...over, scroll: Math.max(0, over.scroll + by)}};
-	return place.at === 'why' ? {do: 'go', place: {...place, scroll: Math.max(0, place.scroll + by)}} : undefined;
+function itemBy(place: Place, by: 1 | -1): Action | undefined {
+	return place.at === 'hand over' ? {do: 'show item', item: next(items, place.item, by)} : undefined;
+}
+
+const entryFor = (asks: Asked, text: string): Action => ({
+	do: 'cover',
+	over: {is: 'entry', asks, line: editLine(text), wrong: undefined},
+});
+
+/** Nothing typed is no name; as notes it means none. */
+function accepted(over: Session['over']): Action | Effect | undefined {
+	if (over?.is !== 'entry') return undefined;
+	const text = over.line.text.trim();
+	if (over.asks === 'notes') return {do: 'note', text};
+	if (text === '') return {do: 'refuse', wrong: 'a name is needed; Esc goes back'};
+	return over.asks === 'file' ? 'write it' : 'export';
+}
+
+function forget({place, history}: Session): Action | undefined {
+	if (place.at !== 'differences') return undefined;
+	const {from, saved} = current(history.present, place.kind);
+	return from === 'saved' && saved !== undefined
+		? {do: 'cover', over: {is: 'forgetting'}}
+		: {do: 'tell', notice: `This ${place.kind} is not saved: there is nothing to forget.`};
 }

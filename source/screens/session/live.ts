@@ -7,12 +7,15 @@ import type {Action} from './action.ts';
 import {type Answer, rankedIn} from './answer.ts';
 import {choicesFor} from './catalog.ts';
 import {current, type Documents, isChanged, type OpenDocument, titleOf, unsaved} from './documents.ts';
+import {type Errandful, errandEffects, readPlan} from './errand-effects.ts';
 import {readTrackOf} from './forms.ts';
-import {type Effect, intend, type Scene, scopesOf, takesText} from './intend.ts';
+import {type Handed, rowToHandOver} from './hand-over.ts';
+import {type Effect, type ErrandEffect, intend, type Scene, scopesOf, takesText} from './intend.ts';
 import {type Clock, Ranker} from './ranker.ts';
 import {reduce} from './reduce.ts';
-import {type Filter, type Order, type Placed, placedRows, shownRows} from './rows.ts';
+import {cursorIn, type Filter, type Order, type Placed, placedRows, shownRows} from './rows.ts';
 import type {Session} from './session.ts';
+import {looksLikePlan} from './take-in.ts';
 
 /** What only the terminal can do. */
 export type Outside = {
@@ -21,7 +24,11 @@ export type Outside = {
 	redraw(): void;
 };
 
-export type State = {readonly session: Session; readonly answer: Answer; readonly scene: Scene};
+export type State = {
+	readonly session: Session;
+	readonly answer: Answer;
+	readonly scene: Scene & {readonly handed: Handed | undefined};
+};
 
 export class LiveSession {
 	#state: State;
@@ -30,6 +37,9 @@ export class LiveSession {
 	readonly #keeper: Keeper;
 	readonly #outside: Outside;
 	readonly #listeners = new Set<() => void>();
+	readonly #errandful: Errandful;
+	/** Comes when something is handed over for the first time. */
+	#handing: typeof import('./handing.ts') | undefined;
 	#placed: {readonly ranked: Ranked; readonly rows: Placed[]} | undefined;
 	#shown:
 		| {readonly all: readonly Placed[]; readonly order: Order; readonly filter: Filter; readonly rows: Placed[]}
@@ -42,6 +52,9 @@ export class LiveSession {
 		this.#ranker = new Ranker(clock, () => this.#settle(this.#state.session));
 		this.#ranker.start(inputsOf(session));
 		this.#state = this.#stateOf(session);
+		const {errands} = keeper;
+		this.#errandful = {state: this.state, dispatch: action => this.dispatch(action), catalog, errands};
+		this.#effects = {...this.#ownEffects, ...errandEffects(this.#errandful)};
 	}
 
 	readonly state = (): State => this.#state;
@@ -57,9 +70,16 @@ export class LiveSession {
 		const key = keyName(event);
 		const name = key === undefined ? undefined : actionFor(key, scopesOf(session));
 		if (name !== undefined) this.#perform(intend(name, session, scene));
+		else if (event.kind === 'paste' && this.#isPlan(event.text)) void readPlan('paste', event.text, this.#errandful);
 		else if (takesText(session)) this.dispatch({do: 'type', event});
 		else if (startsNumber(event) && session.place.at === 'edit') this.dispatch({do: 'open field', text: event.text});
 		else if (event.kind === 'paste') this.dispatch({do: 'paste curve', text: event.text});
+	}
+
+	/** Whether a paste is a plan to be taken in. */
+	#isPlan(text: string): boolean {
+		const {place, over} = this.#state.session;
+		return place.at === 'take in' && over === undefined && looksLikePlan(text);
 	}
 
 	/** As if its key had been pressed. */
@@ -86,7 +106,9 @@ export class LiveSession {
 		else this.#effects[intent]();
 	}
 
-	readonly #effects: Record<Effect, () => void> = {
+	readonly #effects: Record<Effect, () => void>;
+
+	readonly #ownEffects: Record<Exclude<Effect, ErrandEffect>, () => void> = {
 		leave: () => this.#outside.leave(),
 		'discard and leave': () => {
 			this.#keeper.drop();
@@ -162,7 +184,22 @@ export class LiveSession {
 			choices: place.at === 'choose' ? choicesFor(this.#catalog, documents, place.kind, place.search.text) : [],
 			isWorking: answer.is === 'working',
 		};
-		return {session, answer, scene};
+		const handed = answer.is === 'ready' ? this.#handed(session, scene, answer.ranked) : undefined;
+		return {session, answer, scene: {...scene, handed}};
+	}
+
+	/** Of an answer that is of a moment ago nothing is handed over. */
+	#handed(session: Session, {all, shown}: Pick<Scene, 'all' | 'shown'>, ranked: Ranked): Handed | undefined {
+		const {place} = session;
+		if (place.at !== 'hand over') return undefined;
+		if (this.#handing === undefined) {
+			void import('./handing.ts').then(handing => {
+				this.#handing = handing;
+				this.#settle(this.#state.session);
+			});
+		}
+		const row = rowToHandOver(session.plan, all, shown[cursorIn(shown, session.row)]);
+		return row && this.#handing?.handed(session, place, row.placed.name, ranked);
 	}
 
 	/** The same list as long as nothing about it has changed: what is made of it is kept with it. */

@@ -2,10 +2,13 @@
 import {quantityOf} from '../../documents/quantity.ts';
 import {edited, editLine} from '../parts/edit-line.ts';
 import type {Action} from './action.ts';
-import {current, type Documents, lookAt, newDocument, type OpenDocument, withJson} from './documents.ts';
+import {current, type Documents, lookAt, newDocument, type OpenDocument, withJson, withNotes} from './documents.ts';
 import {amended, type History, recorded, redone, undone} from './history.ts';
 import {withValue} from './json.ts';
 import {reduceForm} from './reduce-form.ts';
+import {reduceHistory, typedInDraft} from './reduce-history.ts';
+import {reduceTakeIn, typedInTakeIn} from './reduce-take-in.ts';
+import {reduceWhole} from './reduce-whole.ts';
 import type {Session} from './session.ts';
 
 export function reduce(before: Session, action: Action): Session {
@@ -54,9 +57,42 @@ export function reduce(before: Session, action: Action): Session {
 			return session.place.at === 'choose'
 				? {...session, place: {...session.place, cursor: Math.max(0, session.place.cursor + action.by)}}
 				: session;
+		case 'scroll':
+			return scrolledBy(session, action.by);
+		case 'show item':
+			return session.place.at === 'hand over'
+				? {...session, place: {...session.place, item: action.item, scroll: 0}}
+				: session;
+		case 'note':
+			return noted(session, action.text);
+		case 'whole to':
+		case 'forgotten':
+			return reduceWhole(session, action);
 		default:
-			return session.place.at === 'edit' ? reduceForm(session, session.place, action) : session;
+			return inPlace(session, action);
 	}
+}
+
+/** What only one place knows. */
+function inPlace(session: Session, action: Action): Session {
+	const {place, over} = session;
+	if (over?.is === 'entry' && action.do === 'refuse') return {...session, over: {...over, wrong: action.wrong}};
+	if (place.at === 'edit') return reduceForm(session, place, action);
+	if (place.at === 'take in') return reduceTakeIn(session, place, action);
+	return place.at === 'history' ? reduceHistory(session, place, action) : session;
+}
+
+function scrolledBy(session: Session, by: number): Session {
+	const {place, over} = session;
+	if (over) return over.is === 'help' ? {...session, over: {...over, scroll: Math.max(0, over.scroll + by)}} : session;
+	return 'scroll' in place ? {...session, place: {...place, scroll: Math.max(0, place.scroll + by)}} : session;
+}
+
+function noted(session: Session, text: string): Session {
+	const documents = withNotes(session.history.present, text);
+	const words = text === '' ? 'No notes any more.' : 'Noted.';
+	const notice = documents === session.history.present ? undefined : `${words} Ctrl+S saves them with the track.`;
+	return {...withDocuments(session, documents), over: undefined, notice};
 }
 
 const planWords = (row: string | undefined) =>
@@ -92,10 +128,12 @@ function startedNew(session: Session, kind: 'track' | 'car'): Session {
 }
 
 /** What was written is what a document is now compared with, in every state of the history. */
-function saved(session: Session, {id, json}: OpenDocument, plan: string | undefined): Session {
+function saved(session: Session, {id, json, notes}: OpenDocument, plan: string | undefined): Session {
 	const marked = (state: Documents): Documents => {
 		const one = state.open[id];
-		return one === undefined ? state : {...state, open: {...state.open, [id]: {...one, saved: json, plan}}};
+		return one === undefined
+			? state
+			: {...state, open: {...state.open, [id]: {...one, from: 'saved', saved: json, savedNotes: notes, plan}}};
 	};
 	return {...session, history: amended(session.history, marked)};
 }
@@ -109,7 +147,7 @@ function timeTravelled(session: Session, history: History<Documents> | undefined
 
 function typed(session: Session, {event}: Action & {do: 'type'}): Session {
 	const {place, over} = session;
-	if (over?.is === 'margin') {
+	if (over?.is === 'margin' || over?.is === 'entry') {
 		const line = edited(over.line, event);
 		return line === undefined ? session : {...session, over: {...over, line, wrong: undefined}};
 	}
@@ -117,6 +155,8 @@ function typed(session: Session, {event}: Action & {do: 'type'}): Session {
 		const search = edited(place.search, event);
 		return search === undefined ? session : {...session, place: {...place, search, cursor: 0}};
 	}
+	if (place.at === 'take in') return typedInTakeIn(session, place, event);
+	if (place.at === 'history') return typedInDraft(session, event);
 	if (place.at === 'edit' && place.editing) {
 		const line = edited(place.editing.line, event);
 		return line === undefined ? session : {...session, place: {...place, editing: {line, wrong: undefined}}};

@@ -14,10 +14,12 @@ export function restored(kept: unknown): Documents | undefined {
 	return {open: byId, track, car};
 }
 
+const textOrNone = (value: Json | undefined): string | undefined => (typeof value === 'string' ? value : undefined);
+
 /** What is the same content becomes the same object again: that is how changes are seen. */
 function openDocument(kept: Json): OpenDocument | undefined {
 	if (!isObject(kept)) return undefined;
-	const {id, kind, from, json, saved, shipped, plan} = kept;
+	const {id, kind, from, json, saved, shipped, plan, notes, savedNotes} = kept;
 	if (typeof id !== 'string' || (kind !== 'track' && kind !== 'car') || typeof from !== 'string') return undefined;
 	if (!isObject(json) || !describesKind(json, kind as Kind)) return undefined;
 	const same = (other: Json | undefined) =>
@@ -29,6 +31,8 @@ function openDocument(kept: Json): OpenDocument | undefined {
 		json,
 		saved: same(saved),
 		shipped: same(shipped),
-		plan: typeof plan === 'string' ? plan : undefined,
+		plan: textOrNone(plan),
+		notes: textOrNone(notes),
+		savedNotes: textOrNone(savedNotes),
 	};
 }

@@ -1,10 +1,14 @@
 /** The rows of the ranking that are looked at, in the order that was chosen. */
-import {rowName} from '../../planning/rank-rack.ts';
+import {type Ranked, rowName} from '../../planning/rank-rack.ts';
 import type {Row} from '../../planning/results.ts';
 import {limitMarginRpm, lowestExitRpm, shiftsPerLap} from './figures.ts';
 
 /** A row with its place in the ranking, counted from 1; undefined before there is one. */
 export type Placed = {readonly place: number | undefined; readonly name: string; readonly row: Row};
+
+/** The row of that name in an answer. */
+export const rowNamed = ({ranking}: Ranked, name: string): Row | undefined =>
+	ranking.rows.find(row => rowName(row) === name);
 
 export const orders = ['place', 'ratio', 'margin', 'exit rpm', 'shifts'] as const;
 export type Order = (typeof orders)[number];

@@ -1,9 +1,13 @@
 /** What a session at the screen holds: inputs only. What follows from them is in `answer.ts` and in the views. */
 import type {UnitSystem} from '../../commands/text/units.ts';
+import type {HistoryEntry} from '../../store/kept-documents.ts';
 import type {EditLine} from '../parts/edit-line.ts';
 import {current, type Documents, type Kind} from './documents.ts';
+import type {HandOver} from './hand-over.ts';
 import {type History, startHistory} from './history.ts';
 import {type Filter, noFilter, type Order} from './rows.ts';
+import type {Incoming} from './take-in.ts';
+import type {Draft} from './track-history.ts';
 
 export const pictures = ['rpm', 'thrust', 'speed'] as const;
 export type Picture = (typeof pictures)[number];
@@ -19,7 +23,19 @@ export type Place =
 	| {readonly at: 'why'; readonly scroll: number}
 	| {readonly at: 'pictures'; readonly picture: Picture; readonly straight: number}
 	| ({readonly at: 'edit'; readonly kind: Kind; readonly editing: Editing | undefined} & FieldPlace)
-	| {readonly at: 'choose'; readonly kind: Kind; readonly search: EditLine; readonly cursor: number};
+	| {readonly at: 'choose'; readonly kind: Kind; readonly search: EditLine; readonly cursor: number}
+	| ({readonly at: 'hand over'; readonly scroll: number} & HandOver)
+	/** `incoming` is the plan once it was read. */
+	| ({readonly at: 'take in'; readonly incoming: Incoming | undefined; readonly scroll: number} & Editing)
+	/** `adding`: the draft is typed into. */
+	| {
+			readonly at: 'history';
+			readonly entries: readonly HistoryEntry[];
+			readonly adding: boolean;
+			readonly scroll: number;
+	  }
+	/** From the saved and from the shipped document. */
+	| {readonly at: 'differences'; readonly kind: Kind; readonly scroll: number};
 export type PlaceName = Place['at'];
 
 /** What lies over the place until it is answered. */
@@ -28,7 +44,14 @@ export type Over =
 	| {readonly is: 'quitting'}
 	/** An earlier session that ended without being saved. */
 	| {readonly is: 'recovery'; readonly documents: Documents}
-	| ({readonly is: 'margin'} & Editing);
+	| ({readonly is: 'margin'} & Editing)
+	| ({readonly is: 'entry'; readonly asks: Asked} & Editing)
+	/** A file of that name is there already. */
+	| {readonly is: 'overwriting'; readonly file: string}
+	| {readonly is: 'forgetting'};
+
+/** What an entry field asks for. */
+export type Asked = 'file' | 'notes' | 'directory';
 
 export type Session = {
 	readonly history: History<Documents>;
@@ -44,6 +67,8 @@ export type Session = {
 	readonly filter: Filter;
 	/** Undefined: the worst over all. */
 	readonly situation: string | undefined;
+	/** An entry of the history that was begun. */
+	readonly draft: Draft | undefined;
 	readonly units: UnitSystem;
 	/** What the last key did, where the screen does not show it by itself. */
 	readonly notice: string | undefined;
@@ -59,6 +84,7 @@ export const startSession = (documents: Documents, units: UnitSystem): Session =
 	order: 'place',
 	filter: noFilter,
 	situation: undefined,
+	draft: undefined,
 	units,
 	notice: undefined,
 });

@@ -1,0 +1,31 @@
+/** What the screen asks of whoever started it beside saving: the clipboard, files, the history and all that is kept. */
+import type {HistoryEntry} from '../store/kept-documents.ts';
+
+/** `words` are for the person. */
+export type Saving = {readonly ok: boolean; readonly words: string};
+
+export type FileText =
+	| {readonly ok: true; readonly label: string; readonly text: string}
+	| {readonly ok: false; readonly words: string};
+
+/** `exists`: there is such a file, and nothing was written. */
+export type Writing = Saving | 'exists';
+
+export type Errands = {
+	/** ISO 8601. */
+	now(): string;
+	/** YYYY-MM-DD, where the person is. */
+	today(): string;
+	/** The words say how far it is sure to have come. */
+	copy(text: string): string;
+	/** An existing file gives way only where `replace` is set. */
+	write(file: string, text: string, replace: boolean): Writing;
+	read(file: string): Promise<FileText>;
+	/** What is kept of the track of that name, in the order in which it was added. */
+	history(track: string): readonly HistoryEntry[];
+	addToHistory(track: string, entry: HistoryEntry): Saving;
+	/** Takes the saved document of that name away; it stays beside its place as `.bak`. */
+	forget(kind: 'track' | 'car', name: string): Saving;
+	/** Writes all that is kept to a directory. */
+	exportTo(directory: string): Saving;
+};
