@@ -191,6 +191,7 @@ export const bindings = [
 		short: 'all that is kept',
 		rank: 3,
 	},
+	{scope: 'hand over', keys: ['escape'], does: 'ranking', words: 'back to the ranking', short: 'back', rank: 2},
 
 	{scope: 'take in', keys: ['enter'], does: 'read file', words: 'read the file of that name', short: 'read the file'},
 	{scope: 'take in', keys: ['escape'], does: 'ranking', words: 'back to the ranking', short: 'back'},
@@ -210,6 +211,7 @@ export const bindings = [
 	{scope: 'history', keys: ['enter', 'a'], does: 'add to history', words: 'add an entry', short: 'add', rank: 1},
 	{scope: 'history', keys: ['pageup', 'up', 'k'], does: 'scroll up', words: 'scroll up', short: 'scroll', rank: 1},
 	{scope: 'history', keys: ['pagedown', 'space', 'down', 'j'], does: 'scroll down', words: 'scroll down'},
+	{scope: 'history', keys: ['escape'], does: 'ranking', words: 'back to the ranking', short: 'back', rank: 2},
 
 	{scope: 'draft', keys: ['enter'], does: 'keep entry', words: 'add it to the history', short: 'add it'},
 	{scope: 'draft', keys: ['down', 'tab'], does: 'draft down', words: 'the field below', short: 'field'},
@@ -249,6 +251,7 @@ export const bindings = [
 		rank: 1,
 	},
 	{scope: 'differences', keys: ['f'], does: 'forget', words: 'forget what is saved of it', short: 'forget', rank: 2},
+	{scope: 'differences', keys: ['escape'], does: 'ranking', words: 'back to the ranking', short: 'back', rank: 2},
 
 	{scope: 'entry', keys: ['enter'], does: 'accept entry', words: 'take it', short: 'take it'},
 	{scope: 'entry', keys: ['escape'], does: 'uncover', words: 'leave it as it was', short: 'as it was'},

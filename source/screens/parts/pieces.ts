@@ -3,8 +3,8 @@ import type {Tone} from '../../commands/text/blocks.ts';
 import {cut, displayWidth, padTo} from '../../commands/text/width.ts';
 import {visible} from '../../documents/visible.ts';
 
-/** Beside the tones of the text answers: what is chosen, where the caret stands, a key, and the two runs of a picture. */
-export type Meaning = Tone | 'chosen' | 'caret' | 'key' | 'first' | 'second';
+/** Beside the tones of the text answers: what is chosen, where the caret stands, a key, the two runs of a picture, a QR code. */
+export type Meaning = Tone | 'chosen' | 'caret' | 'key' | 'first' | 'second' | 'code';
 export type Piece = {readonly text: string; readonly tone: Meaning};
 /** One line of the screen. */
 export type Pieces = readonly Piece[];

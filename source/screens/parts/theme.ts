@@ -39,6 +39,8 @@ const codes: Record<Meaning, {color: readonly [string, string]; plain: readonly 
 	key: {color: ['1', '22'], plain: ['1', '22']},
 	first: {color: ['', ''], plain: ['', '']},
 	second: {color: ['35', '39'], plain: ['', '']},
+	// Black on white of the 256 colors, which no theme changes, whatever is set: else no phone reads it.
+	code: {color: ['38;5;16;48;5;231', '39;49'], plain: ['38;5;16;48;5;231', '39;49']},
 };
 
 const sgr = (code: string) => (code === '' ? '' : `\x1B[${code}m`);
@@ -53,7 +55,7 @@ export function painted(pieces: Pieces, theme: Theme): string {
 		.map(({text, tone}) => {
 			const [on, off] = theme.color ? codes[tone].color : codes[tone].plain;
 			const content = shown(text, theme);
-			const bare = on === '' || (content.trim() === '' && tone !== 'caret' && tone !== 'chosen');
+			const bare = on === '' || (content.trim() === '' && tone !== 'caret' && tone !== 'chosen' && tone !== 'code');
 			return bare ? content : sgr(on) + content + sgr(off);
 		})
 		.join('');

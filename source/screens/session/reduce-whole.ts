@@ -12,7 +12,7 @@ export function reduceWhole(session: Session, action: Action & {do: 'whole to' |
 function wholeTo(session: Session, kind: 'track' | 'car', which: 'saved' | 'shipped'): Session {
 	const {present} = session.history;
 	const document = current(present, kind);
-	const json = document[which];
+	const json = which === 'saved' && document.from !== 'saved' ? undefined : document[which];
 	if (json === undefined) return {...session, notice: `There is no ${which} ${kind} of this name.`};
 	const documents = withJson(present, kind, json);
 	if (documents === present) return {...session, notice: `It is as the ${which} one already.`};

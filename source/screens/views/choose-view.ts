@@ -42,7 +42,7 @@ function choiceLine({document, title, isChanged, isCurrent}: Choice, isCursor: b
 		piece(isCursor ? '▸ ' : '  '),
 		padded(title, nameWidth, isCursor ? 'chosen' : 'plain'),
 		padded(` ${type}`, typeWidth),
-		piece(from, 'muted'),
+		piece(` ${from}`, 'muted'),
 	];
 	return pieces;
 }

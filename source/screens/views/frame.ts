@@ -5,19 +5,24 @@ import {visible} from '../../documents/visible.ts';
 import {beside, blank, clipped, line, type Pieces, piece, tall} from '../parts/pieces.ts';
 import {tableBar, tableHeading, tableLine, tableWidth} from '../parts/table-line.ts';
 import type {Wrong} from '../session/answer.ts';
-import {unsaved} from '../session/documents.ts';
+import {current, titleOf} from '../session/documents.ts';
 import {scopesOf} from '../session/intend.ts';
 import type {State} from '../session/live.ts';
 import {cursorIn, type Placed} from '../session/rows.ts';
-import {caretPieces} from './caret.ts';
+import {changesView} from './changes-view.ts';
 import {chooseView} from './choose-view.ts';
 import {editView} from './edit-view.ts';
+import {handOverView, qrLines} from './hand-over-view.ts';
 import {headerView, settingOf} from './header-view.ts';
 import {helpView} from './help-view.ts';
 import {keyLines} from './key-line.ts';
+import {noticeLine} from './notice-line.ts';
 import {pictureView} from './picture-view.ts';
 import {type RankingTable, rankingTable} from './ranking-view.ts';
 import {reasonView, sentenceView} from './reason-view.ts';
+import {scrolled} from './scrolled.ts';
+import {takeInView} from './take-in-view.ts';
+import {trackHistoryView} from './track-history-view.ts';
 import {whyHalves, whyView} from './why-view.ts';
 
 export type Size = {readonly width: number; readonly height: number; readonly ascii: boolean};
@@ -45,7 +50,8 @@ export function frameLines({top, table, beside: side, bottom}: Frame): Pieces[] 
 /** From this width on the reasons stand beside the ranking, or halves beside each other. */
 const wide = 120;
 /** The ranking beside its reasons takes no more than this. */
-const widestTable = 96;
+const widestTable = 104;
+const tableShare = 0.65;
 /** From this height on there are two lines of keys. */
 const roomy = 30;
 
@@ -57,8 +63,10 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 	const here = scene.shown[cursor];
 	const counts = {shown: scene.shown.length, all: scene.all.length};
 	const head = [...headerView(session, answer, counts, here, width), rule(width)];
-	const foot = [noticeLine(state, width), ...keyLines(scopesOf(session), width, height < roomy ? 1 : 2)];
+	const foot = [noticeLine(session, width), ...keyLines(scopesOf(session), width, height < roomy ? 1 : 2)];
 	const body = height - head.length - foot.length;
+	const qr = qrLines(state, size, keyLines(scopesOf(session), width, 1));
+	if (qr !== undefined) return {top: qr, table: undefined, beside: [], bottom: []};
 	const plain = (lines: readonly Pieces[]): Frame => ({
 		top: [...head, ...tall(lines, body).map(one => clipped(one, width))],
 		table: undefined,
@@ -78,8 +86,17 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 		return plain(chooseView(given, width, body));
 	}
 	if (session.place.at === 'edit') return plain(editView(session, session.place, width, body));
+	const documents = session.history.present;
+	if (session.place.at === 'take in') return plain(takeInView(session.place, width, body));
+	if (session.place.at === 'history') {
+		const given = {place: session.place, draft: session.draft, track: titleOf(current(documents, 'track'))};
+		return plain(trackHistoryView(given, width, body));
+	}
+	if (session.place.at === 'differences')
+		return plain(changesView(current(documents, session.place.kind), session.place.scroll, width, body));
 	if (answer.is === 'faulty') return plain(wrongView(answer.wrong, width));
 
+	if (session.place.at === 'hand over') return plain(handOverView(state, session.place, body, size));
 	if (here === undefined)
 		return plain([
 			line('No row passes the filter. h shows failing rows, b all sets, n with nothing typed any margin.', 'muted'),
@@ -109,7 +126,7 @@ function ranking(
 		const table = rankingTable(given, width, body - under.length, previousStart);
 		return {top: head, table: padTable(table, body - under.length), beside: [], bottom: [...under, ...foot]};
 	}
-	const table = rankingTable(given, Math.min(widestTable, Math.round(width * 0.6)), body, previousStart);
+	const table = rankingTable(given, Math.min(widestTable, Math.round(width * tableShare)), body, previousStart);
 	const side = width - tableWidth(table.columns) - 3;
 	const lines = scene.ranked === undefined ? reasonView(here.row, side) : whyView(whyOf(state, here), side);
 	const column = tall(lines, body).map((one): Pieces => [piece(' │ ', 'muted'), ...clipped(one, side)]);
@@ -167,14 +184,6 @@ function pictureLines(state: State, here: Placed, {width, ascii}: Size, body: nu
 	return [...pictureView(session.place.picture, given, {width, height: body - reason.length, ascii}), ...reason];
 }
 
-/** From a line on, and no further than to the last page. */
-function scrolled(lines: readonly Pieces[], from: number, height: number): Pieces[] {
-	const start = Math.min(from, Math.max(0, lines.length - height));
-	const rest = lines.slice(start);
-	if (rest.length <= height) return [...rest];
-	return [...rest.slice(0, height - 1), line(`… ${rest.length - height + 1} more lines, PgDn`, 'muted')];
-}
-
 const rule = (width: number): Pieces => line('─'.repeat(width), 'muted');
 
 function wrongView(wrong: readonly Wrong[], width: number): Pieces[] {
@@ -187,28 +196,6 @@ function wrongView(wrong: readonly Wrong[], width: number): Pieces[] {
 		]);
 	});
 	return [head, blank, ...told];
-}
-
-/** What was just done, or the question that lies over the place. */
-function noticeLine({session}: State, width: number): Pieces {
-	const {over, notice} = session;
-	if (over?.is === 'quitting') {
-		const names = unsaved(session.history.present)
-			.map(({json}) => visible(String(json.name)))
-			.join(', ');
-		return clipped([piece(` Not saved: ${names}. `, 'near'), piece(' Leave?')], width);
-	}
-	if (over?.is === 'recovery') {
-		const names = unsaved(over.documents)
-			.map(({json}) => visible(String(json.name)))
-			.join(', ');
-		return clipped([piece(' An earlier session ended with unsaved changes. ', 'near'), piece(` ${names}`)], width);
-	}
-	if (over?.is === 'margin') {
-		const wrong = over.wrong === undefined ? [] : [piece(` ${over.wrong}`, 'fail')];
-		return clipped([piece('Least margin to the limit, RPM: ', 'strong'), ...caretPieces(over.line), ...wrong], width);
-	}
-	return clipped(line(notice ?? '', 'strong'), width);
 }
 
 function tooSmall({width, height}: Size): Frame {

@@ -39,6 +39,13 @@ const joined = (bindings: readonly Binding[]): Piece[] =>
 
 /** Arrows that belong together are shown together. */
 function keyPieces({keys, does, short}: Binding): Piece[] {
-	const both: Record<string, string> = {'row up': '↑↓', 'field up': '↑↓', 'choice up': '↑↓', 'scroll up': 'PgUp PgDn'};
+	const both: Record<string, string> = {
+		'row up': '↑↓',
+		'field up': '↑↓',
+		'choice up': '↑↓',
+		'item up': '↑↓',
+		'draft down': '↑↓',
+		'scroll up': 'PgUp PgDn',
+	};
 	return [piece(both[does] ?? keyWords(keys[0]!), 'key'), piece(` ${short}`, 'muted')];
 }

@@ -112,7 +112,7 @@ export function rankingTable(given: Given, width: number, height: number, previo
 	const {shown, cursor, session} = given;
 	const {start, end, pinned} = windowAndPinned(given, height - 1, previousStart);
 	const {used, texts, natural} = cellsOf(given);
-	const widths = fitColumns(used, natural, width - marksWidth - gap);
+	const widths = widthsFor(used, natural, width - marksWidth - gap);
 	const rowAt = (index: number): Record<string, string> => ({
 		' ': marksOf(shown[index]!, session, index === cursor),
 		...Object.fromEntries(used.map(({head}, column) => [head, texts[index]![column]!])),
@@ -122,6 +122,14 @@ export function rankingTable(given: Given, width: number, height: number, previo
 		widths[i] === 0 ? [] : [{head, align, width: widths[i]!, ...(tone && {tone})}],
 	);
 	return {columns: [{head: ' ', align: 'left', width: marksWidth}, ...kept], rows, selected: cursor - start, start};
+}
+
+/** Where the highest RPM is stands whole if that costs only columns that are kept less; else it is cut. */
+function widthsFor(used: readonly Column[], natural: readonly number[], available: number): number[] {
+	const uncut = used.map(column => (column.head === 'where' ? {...column, shortest: Number.POSITIVE_INFINITY} : column));
+	const whole = fitColumns(uncut, natural, available);
+	const place = used.findIndex(({head}) => head === 'where');
+	return whole[place] === 0 ? fitColumns(used, natural, available) : whole;
 }
 
 type Cells = {

@@ -6,8 +6,10 @@ import {painted} from '../../../source/screens/parts/theme.ts';
 import type {Answer} from '../../../source/screens/session/answer.ts';
 import {readBoth, wrongFromFault} from '../../../source/screens/session/answer.ts';
 import {choicesFor} from '../../../source/screens/session/catalog.ts';
+import {rowToHandOver} from '../../../source/screens/session/hand-over.ts';
+import {handed} from '../../../source/screens/session/handing.ts';
 import type {State} from '../../../source/screens/session/live.ts';
-import {placedRows, shownRows} from '../../../source/screens/session/rows.ts';
+import {cursorIn, type Placed, placedRows, shownRows} from '../../../source/screens/session/rows.ts';
 import type {Session} from '../../../source/screens/session/session.ts';
 import {frameLines, frameOf, type Size} from '../../../source/screens/views/frame.ts';
 import {catalog} from '../session/documents.ts';
@@ -25,8 +27,15 @@ export function stateOf(session: Session): State {
 	return {
 		session,
 		answer,
-		scene: {ranked, all, shown: shownRows(all, session.order, session.filter), situations, choices, isWorking: false},
+		scene: {ranked, all, shown: shownRows(all, session.order, session.filter), situations, choices, isWorking: false, handed: handedIn(session, ranked, all)},
 	};
+}
+
+function handedIn(session: Session, ranked: Ranked | undefined, all: readonly Placed[]) {
+	const {place} = session;
+	const shown = shownRows([...all], session.order, session.filter);
+	const row = rowToHandOver(session.plan, all, shown[cursorIn(shown, session.row)]);
+	return place.at === 'hand over' && ranked && row ? handed(session, place, row.placed.name, ranked) : undefined;
 }
 
 function answerTo({history, situation}: Session): Answer {
