@@ -37,8 +37,10 @@ export function asShipped(json: JsonObject, shipped: JsonObject | undefined, fie
 
 /** What the document's reader says against the field itself; problems elsewhere are shown, and hinder no edit. */
 export function wrongAt(kind: Kind, json: JsonObject, field: Pick<Field, 'path'>): string | undefined {
+	const problems = problemsOf(kind, json);
+	if (problems.length === 0) return undefined;
 	const path = pathText(field.path);
-	const problem = problemsOf(kind, json).find(one => one.path === path || one.path.startsWith(`${path}[`));
+	const problem = problems.find(one => one.path === path || one.path.startsWith(`${path}[`));
 	return (
 		problem &&
 		`found ${problem.found}; allowed ${problem.allowed}${problem.hint === undefined ? '' : `. ${problem.hint}`}`

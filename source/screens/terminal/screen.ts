@@ -4,6 +4,7 @@
  */
 import {EventEmitter} from 'node:events';
 import type {WriteStream} from 'node:tty';
+import {scrollBetween, scrollCodes, scrolled} from './scroll.ts';
 
 const home = '\x1B[H';
 const clearScreen = '\x1B[2J';
@@ -88,11 +89,17 @@ export class Screen extends EventEmitter {
 
 	#paint(frame: string): void {
 		const next = frame.split('\n').slice(0, this.rows);
-		const codes = this.#shown === undefined ? home + clearScreen + linesFrom([], next) : linesFrom(this.#shown, next);
+		const codes = this.#shown === undefined ? home + clearScreen + linesFrom([], next) : changes(this.#shown, next);
 		this.#shown = next;
 		this.frames++;
 		this.#terminal.write(together(codes + hideCursor));
 	}
+}
+
+/** What moved as a block is moved by the terminal; then the lines that are still different. */
+function changes(shown: readonly string[], next: readonly string[]): string {
+	const scroll = scrollBetween(shown, next);
+	return scroll === undefined ? linesFrom(shown, next) : scrollCodes(scroll) + linesFrom(scrolled(shown, scroll), next);
 }
 
 function linesFrom(shown: readonly string[], next: readonly string[]): string {

@@ -86,6 +86,40 @@ test('once closed nothing is written', () => {
 	expect(terminal.written).toHaveLength(1);
 });
 
+test('a list that moves by a line is moved by the terminal', () => {
+	const {terminal, screen} = started();
+	terminal.rows = 12;
+	const list = (from: number) => ['head', ...Array.from({length: 10}, (_, i) => `row ${from + i}`), 'foot'].join('\n');
+	screen.write(list(0));
+	screen.write(list(1));
+	expect(terminal.written[1]).toBe('\x1B[?2026h\x1B[2;11r\x1B[1S\x1B[r\x1B[11;1Hrow 10\x1B[K\x1B[?25l\x1B[?2026l');
+	screen.write(list(0));
+	expect(terminal.written[2]).toBe('\x1B[?2026h\x1B[2;11r\x1B[1T\x1B[r\x1B[2;1Hrow 0\x1B[K\x1B[?25l\x1B[?2026l');
+});
+
+test('whatever lists are scrolled to, the terminal shows the last one', async () => {
+	const frame = fc.record({from: fc.nat(30), cursor: fc.nat(17), head: fc.boolean()});
+	await fc.assert(
+		fc.asyncProperty(fc.array(frame, {minLength: 2, maxLength: 8}), async frames => {
+			const {terminal, screen} = started();
+			terminal.rows = 20;
+			const emulator = new headless.Terminal({cols: 20, rows: 20, allowProposedApi: true});
+			const lines = ({from, cursor, head}: {from: number; cursor: number; head: boolean}) => [
+				head ? 'one' : 'two',
+				...Array.from({length: 18}, (_, i) => `${i === cursor ? '>' : ' '} row ${from + i}`),
+				'foot',
+			];
+			for (const one of frames) screen.write(lines(one).join('\n'));
+			await new Promise<void>(resolve => emulator.write(terminal.written.join(''), resolve));
+			const {active} = emulator.buffer;
+			const shown = Array.from({length: 20}, (_, y) => active.getLine(y)!.translateToString(true).trimEnd());
+			expect(shown).toEqual(lines(frames.at(-1)!).map(one => one.trimEnd()));
+			emulator.dispose();
+		}),
+		{numRuns: runs(60, 2000)},
+	);
+});
+
 test('whatever frames follow each other, the terminal shows the last one', async () => {
 	const line = fc.constantFrom('', 'a', 'bb', '\x1B[7mccc\x1B[27m', '漢字', 'a long line of it');
 	await fc.assert(

@@ -66,9 +66,9 @@ test('the ranking at 80 × 24', () => {
 		highest RPM 9100 at Front shift 2-3, 100 under the limit. Near: after a shift,
 		downshift.
 		after shift near -220 (Front shift 2-3, Base)
-		downshift near -1916 (Back entry 3-2, In the tow)  limit pass +100  limiter pass
-		band pass  settled pass +1.4 s  pit road pass +3125  restart pass  housing pass
-		stock pass
+		downshift near -1916 (Back entry 3-2, In the tow)
+		limit pass +100 (Front shift 2-3, Base)  limiter pass  band pass
+		settled pass +1.4 s  pit road pass +3125  restart pass  housing pass  stock pass
 
 		↑↓ row  Enter why  → shorter  ← taller  e edit  t track  ? help  q quit"
 	`);
