@@ -3,6 +3,7 @@ import {render} from 'ink-testing-library';
 import {afterEach, expect, test, vi} from 'vitest';
 import {App} from '../../source/screens/app.tsx';
 import {LiveSession} from '../../source/screens/session/live.ts';
+import {errandsInMemory} from './errands.ts';
 import {catalog, session} from './session/documents.ts';
 import {bare, widest} from './views/states.ts';
 
@@ -13,6 +14,7 @@ const keeper = {
 	dropEarlier() {},
 	save: () => ({ok: true, words: 'Saved.'}),
 	where: () => undefined,
+	errands: errandsInMemory().errands,
 };
 const outside = {leave() {}, suspend() {}, redraw() {}};
 const clock = {

@@ -126,7 +126,9 @@ export function rankingTable(given: Given, width: number, height: number, previo
 
 /** Where the highest RPM is stands whole if that costs only columns that are kept less; else it is cut. */
 function widthsFor(used: readonly Column[], natural: readonly number[], available: number): number[] {
-	const uncut = used.map(column => (column.head === 'where' ? {...column, shortest: Number.POSITIVE_INFINITY} : column));
+	const uncut = used.map(column =>
+		column.head === 'where' ? {...column, shortest: Number.POSITIVE_INFINITY} : column,
+	);
 	const whole = fitColumns(uncut, natural, available);
 	const place = used.findIndex(({head}) => head === 'where');
 	return whole[place] === 0 ? fitColumns(used, natural, available) : whole;

@@ -5,10 +5,12 @@ import {valueAt} from '../../../source/screens/session/json.ts';
 import {LiveSession} from '../../../source/screens/session/live.ts';
 import type {Session} from '../../../source/screens/session/session.ts';
 import {KeyDecoder} from '../../../source/screens/terminal/key-decoder.ts';
+import {errandsInMemory} from '../errands.ts';
 import {catalog, session} from './documents.ts';
 
 function started(start: Session = session()) {
 	const kept: {documents: Documents | undefined; saved: OpenDocument[]} = {documents: undefined, saved: []};
+	const {errands, done} = errandsInMemory();
 	const keeper: Keeper = {
 		keep: documents => {
 			kept.documents = documents;
@@ -23,6 +25,7 @@ function started(start: Session = session()) {
 			return {ok: true, words: 'Saved.'};
 		},
 		where: () => undefined,
+		errands,
 	};
 	const asked: string[] = [];
 	const outside = {
@@ -45,7 +48,7 @@ function started(start: Session = session()) {
 		for (const event of [...decoder.push(keys), ...decoder.flush()]) live.press(event);
 		return live.state();
 	};
-	return {live, press, kept, asked};
+	return {live, press, kept, asked, done};
 }
 const [down, up, right, left, esc] = ['\x1B[B', '\x1B[A', '\x1B[C', '\x1B[D', '\x1B'];
 const here = ({session: {row}}: {session: Session}) => row;

@@ -1,6 +1,6 @@
 /** States of a session on the fixtures, ranked, and their frames as text. */
 import {displayWidth} from '../../../source/commands/text/width.ts';
-import {rankSteps} from '../../../source/planning/rank-rack.ts';
+import {type Ranked, rankSteps} from '../../../source/planning/rank-rack.ts';
 import {finish} from '../../../source/planning/run-rack.ts';
 import {painted} from '../../../source/screens/parts/theme.ts';
 import type {Answer} from '../../../source/screens/session/answer.ts';
@@ -27,7 +27,15 @@ export function stateOf(session: Session): State {
 	return {
 		session,
 		answer,
-		scene: {ranked, all, shown: shownRows(all, session.order, session.filter), situations, choices, isWorking: false, handed: handedIn(session, ranked, all)},
+		scene: {
+			ranked,
+			all,
+			shown: shownRows(all, session.order, session.filter),
+			situations,
+			choices,
+			isWorking: false,
+			handed: handedIn(session, ranked, all),
+		},
 	};
 }
 
