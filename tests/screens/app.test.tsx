@@ -136,6 +136,38 @@ test('pictures, help and back', async () => {
 	await frame('Speed along Front');
 });
 
+test.each([
+	[80, 24],
+	[100, 30],
+	[140, 45],
+])('handing over, the history and the differences at %d × %d', async (width, height) => {
+	const {press, frame, lines} = opened(width, height);
+	await frame('10 rows');
+	const isWhole = () => {
+		expect(lines()).toHaveLength(height);
+		expect(widest(lines())).toBeLessThanOrEqual(width);
+	};
+	press('x');
+	await frame('DROPRACK PLAN 1: date 2026-05-31T18:05:00Z');
+	isWhole();
+	press('jjj');
+	await frame(/[█▀▄]{7}[\s\S]*▸ QR of line/);
+	isWhole();
+	press('j');
+	await frame('NEVER above');
+	isWhole();
+	press('y');
+	await frame('Fixture Oval: nothing is kept of it yet.');
+	press('a');
+	await frame(/▸ session/);
+	isWhole();
+	press(esc);
+	await frame('nothing is kept');
+	press('d');
+	await frame('It says the same as the shipped one.');
+	isWhole();
+});
+
 test('Ctrl with F1 and a pasted esc sequence do no harm', async () => {
 	const {press, frame} = opened(80, 24);
 	await frame('10 rows');

@@ -1,7 +1,8 @@
 /** The built program in a pseudo-terminal, its screen read back through a terminal emulator. */
-import {existsSync, readdirSync} from 'node:fs';
+import {existsSync, readdirSync, readFileSync, writeFileSync} from 'node:fs';
 import {join} from 'node:path';
 import {afterAll, afterEach, expect, test, vi} from 'vitest';
+import {demo} from '../../source/commands/shelf.ts';
 import {makeProgram} from '../commands/program.ts';
 import {Pty} from './pty.ts';
 
@@ -145,6 +146,54 @@ test('a plan that was chosen and saved is there at the next start', async () => 
 	await next.waitFor('plan 35/36 A');
 	await next.waitFor(/P +2 +35\/36/);
 });
+
+test('a driver card is written to a file; a plan is pasted, and another read from a file and taken over', async () => {
+	const environment = {DROPRACK_HOME: join(program.place, 'handing'), TMUX: ''};
+	const card = join(program.place, 'card.txt');
+	const plan = join(program.place, 'plan.txt');
+	const share = ['share', demo.track, '--pair', '35/36', '--gearbox', 'A', '--notes', 'loose'];
+	const {out} = await program.run(share, {environment});
+	writeFileSync(plan, out);
+	const pty = open({environment});
+	await pty.waitFor(ranked);
+	pty.press('x');
+	await pty.waitFor('DROPRACK PLAN 1');
+	pty.press('jjjj');
+	await pty.waitFor('NEVER above');
+	pty.press('c');
+	await pty.waitFor("Sent to the terminal's clipboard");
+	const [, copied] = /\]52;c;([A-Za-z0-9+/=]+)/.exec(pty.written)!;
+	pty.press(`f\x15${card}\r`);
+	await pty.waitFor('Written to');
+	expect(readFileSync(card, 'utf8')).toMatch(/^DRIVER CARD\nFixture Car at Fixture Oval\n/);
+	expect(Buffer.from(copied!, 'base64').toString()).toBe(readFileSync(card, 'utf8'));
+
+	pty.press('a');
+	await pty.waitFor('Paste the plan');
+	pty.press(`\x1B[200~Hello,\r\n${out.replaceAll('\n', '\r\n')}Bye\x1B[201~`);
+	await pty.waitFor(/Computed again: all \d+ numbers agree/);
+	pty.press(esc);
+	await pty.waitFor('Paste the plan');
+	pty.press(`${plan}\r`);
+	await pty.waitFor('Notes: loose');
+	pty.press('\r');
+	await pty.waitFor('Taken over: 35/36 A at Fixture Oval.');
+	pty.press('\x13');
+	await pty.waitFor('Fixture Oval is saved.');
+	pty.press('q');
+	expect(await pty.ended()).toMatchObject({exitCode: 0});
+	expect(presetIn(environment.DROPRACK_HOME)).toMatchObject({
+		pair: '35/36',
+		gearbox: 'A',
+		notes: 'loose',
+	});
+});
+
+/** The one track that is kept there. */
+const presetIn = (home: string): unknown => {
+	const [name] = readdirSync(join(home, 'tracks')).filter(name => name.endsWith('.json'));
+	return JSON.parse(readFileSync(join(home, 'tracks', name!), 'utf8'));
+};
 
 test('CI in the environment does not keep it from drawing', async () => {
 	const pty = open({environment: {CI: 'true'}});

@@ -49,8 +49,7 @@ function contentLines({text, draw}: Handed, width: number, window: Size): Pieces
 
 type Draw = NonNullable<Handed['draw']>;
 
-/** The line of keys stands below the code. */
-const roomFor = ({width, height}: Size) => ({columns: width, rows: height - 1});
+const roomFor = ({width, height}: Size) => ({columns: width, rows: height});
 
 /** Why a QR code is not drawn, and what to do; undefined where it is. */
 function cannotDraw(draw: Draw, window: Size): string[] | undefined {
@@ -60,26 +59,27 @@ function cannotDraw(draw: Draw, window: Size): string[] | undefined {
 	if (drawn.ok) return undefined;
 	const {columns, rows} = drawn.needs;
 	if (columns === 0) return ['The plan is too long for any QR code.', instead];
-	const needs = `This QR code needs a window of ${columns} × ${rows + 1}; this one has ${window.width} × ${window.height}.`;
+	const needs = `This QR code needs a window of ${columns} × ${rows}; this one has ${window.width} × ${window.height}.`;
 	return [`${needs} Make the window larger, or take the one line: "QR of line" is the smaller code.`, instead];
 }
 
-/** The QR code over the whole window, with the list beside it where there is room; undefined where none is drawn. */
-export function qrLines({session, scene}: State, window: Size, keys: readonly Pieces[]): Pieces[] | undefined {
-	const {place, over, notice} = session;
-	if (place.at !== 'hand over' || over !== undefined || window.ascii) return undefined;
+/** The QR code over the whole window, with the list beside it and the keys below it as far as there is room; undefined where none is drawn. */
+export function qrLines(state: State, window: Size, keys: readonly Pieces[]): Pieces[] | undefined {
+	const {session, scene} = state;
+	if (session.place.at !== 'hand over' || session.over !== undefined || window.ascii) return undefined;
 	const drawn = scene.handed?.draw?.(roomFor(window));
 	if (!drawn?.ok) return undefined;
 	const code = drawn.lines.map((text): Pieces => [{text, tone: 'code'}]);
 	const room = window.width - (drawn.lines[0]?.length ?? 0) - gap;
+	const side = room < listWidth ? [] : besideCode(state, session.place.item, room);
+	const lines = code.map((one, i): Pieces => [...one, piece(' '.repeat(gap)), ...(side[i] ?? blank)]);
+	const below = window.height - lines.length;
+	return below < keys.length ? lines : [...tall(lines, window.height - keys.length), ...keys];
+}
+
+function besideCode({session, scene}: State, item: Item, room: number): Pieces[] {
 	const row = rowToHandOver(session.plan, scene.all, scene.shown[cursorIn(scene.shown, session.row)]);
-	const words = [row?.words ?? '', notice ?? ''].filter(text => text !== '');
-	const side =
-		room < listWidth
-			? []
-			: [...listLines(place.item), blank, ...words.flatMap(text => wrap(text, room).map(part => line(part)))];
-	const lines = code.map(
-		(one, i): Pieces => [...one, piece(' '.repeat(gap)), ...clipped(side[i] ?? blank, Math.max(0, room))],
-	);
-	return [...tall(lines, window.height - 1), ...keys];
+	const words = [row?.words ?? '', session.notice ?? '', 'Esc goes back.'].filter(text => text !== '');
+	const told = words.flatMap(text => [...wrap(text, room).map(part => line(part)), blank]);
+	return [...listLines(item), blank, ...told].map(one => clipped(one, room));
 }

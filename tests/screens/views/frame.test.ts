@@ -1,9 +1,13 @@
 import {describe, expect, test} from 'vitest';
 import {editLine} from '../../../source/screens/parts/edit-line.ts';
+import {painted} from '../../../source/screens/parts/theme.ts';
 import {withJson} from '../../../source/screens/session/documents.ts';
 import {startHistory} from '../../../source/screens/session/history.ts';
 import {marginEntry} from '../../../source/screens/session/reduce.ts';
+import {takeInPlace} from '../../../source/screens/session/reduce-take-in.ts';
 import type {Place, Session} from '../../../source/screens/session/session.ts';
+import {startDraft} from '../../../source/screens/session/track-history.ts';
+import {frameLines, frameOf} from '../../../source/screens/views/frame.ts';
 import {after, car, documents, oval, session, typed} from '../session/documents.ts';
 import {linesOf, stateOf, widest} from './states.ts';
 
@@ -14,6 +18,13 @@ const sizes = [
 	[200, 60],
 ] as const;
 const edit: Place = {at: 'edit', kind: 'track', section: 1, row: 1, column: 0, editing: undefined};
+const handOver = {
+	at: 'hand over',
+	item: 'plan as text',
+	scroll: 0,
+	date: '2026-05-31T18:05:00Z',
+	day: '2026-05-31',
+} as const;
 const places: Record<string, Partial<Session>> = {
 	ranking: {},
 	comparing: {comparison: '36/36 A'},
@@ -29,6 +40,26 @@ const places: Record<string, Partial<Session>> = {
 	help: {over: {is: 'help', scroll: 0}},
 	'least margin': {over: marginEntry(session())},
 	quitting: {over: {is: 'quitting'}},
+	'handing over': {place: handOver},
+	'handing over a card': {place: {...handOver, item: 'swap sheet', scroll: 8}},
+	'handing over a QR code': {place: {...handOver, item: 'QR of plan'}},
+	'handing over the small QR code': {place: {...handOver, item: 'QR of line'}},
+	'typing a file name': {
+		place: handOver,
+		over: {is: 'entry', asks: 'file', line: editLine('a'.repeat(150)), wrong: undefined},
+	},
+	overwriting: {place: handOver, over: {is: 'overwriting', file: 'plan.txt'}},
+	'taking in': {place: {...takeInPlace, line: editLine('plan.txt'), wrong: 'plan.txt: there is no such file.'}},
+	history: {place: {at: 'history', entries: [{date: '2026-05-31', remark: 'loose'}], adding: false, scroll: 0}},
+	'adding to the history': {
+		place: {at: 'history', entries: [], adding: true, scroll: 0},
+		draft: startDraft('Fixture Oval', '2026-05-31', '36/36 A'),
+	},
+	differences: {
+		place: {at: 'differences', kind: 'track', scroll: 0},
+		history: startHistory(withJson(documents, 'track', {...oval.json, lap: '0.7 mi'})),
+	},
+	forgetting: {place: {at: 'differences', kind: 'car', scroll: 0}, over: {is: 'forgetting'}},
 	'no row left': {filter: {hideFailing: true, gearbox: 'C', leastMarginRpm: 5000}},
 };
 
@@ -43,6 +74,71 @@ describe.each(Object.entries(places))('%s', (_, change) => {
 	test('in ASCII there is nothing else', () => {
 		expect(linesOf(stateOf(session(change)), {width: 100, height: 30, ascii: true}).join('')).toMatch(/^[\x20-\x7e]*$/);
 	});
+});
+
+const smallCode = () => stateOf(session({place: {...handOver, item: 'QR of line'}}));
+
+test('the QR code of the one line fits 80 × 24, whole, and black on white whatever the theme', () => {
+	const frame = frameLines(frameOf(smallCode(), {width: 80, height: 24, ascii: false}, 0));
+	const code = frame.filter(pieces => pieces[0]?.tone === 'code');
+	expect(code.length).toBeGreaterThanOrEqual(21);
+	expect(new Set(code.map(pieces => pieces[0]!.text.length))).toEqual(new Set([code[0]![0]!.text.length]));
+	const theme = {color: false, ascii: false};
+	expect(painted(code[0]!, theme)).toMatch(/^.\[38;5;16;48;5;231m +.\[39;49m/);
+	const {draw} = smallCode().scene.handed!;
+	const drawn = draw!({columns: 80, rows: 24});
+	expect(drawn.ok && drawn.lines).toEqual(code.map(pieces => pieces[0]!.text));
+});
+
+test('a QR code that does not fit says which window it needs; in ASCII none is drawn', () => {
+	const large = stateOf(session({place: {...handOver, item: 'QR of plan'}}));
+	const told = linesOf(large, {width: 80, height: 24, ascii: false}).join('\n');
+	expect(told).toMatch(/needs a window of \d+ × \d+; this one has 80 × 24/);
+	expect(told).toContain('one line');
+	expect(linesOf(smallCode(), {width: 80, height: 24, ascii: true}).join('\n')).toContain('not with --ascii');
+});
+
+test('a card is whole: scrolled to its end, its caution is there', () => {
+	const card = stateOf(session({place: {...handOver, item: 'swap sheet', scroll: 999}}));
+	const text = linesOf(card, {width: 80, height: 24, ascii: false}).join('\n');
+	expect(text).toContain('A second person counts the teeth.');
+	expect(text).toContain('and a flipped pair');
+});
+
+test('the row that is handed over is named, and whether it is the plan', () => {
+	const words = (change: Partial<Session>) =>
+		linesOf(stateOf(session({place: handOver, ...change})), {width: 80, height: 24, ascii: false})[3];
+	expect(words({row: '35/36 A'})).toBe('35/36 A, the row under the cursor; p makes it the plan · no notes');
+	expect(words({row: '35/36 A', plan: '36/36 A'})).toBe('36/36 A, the plan · no notes');
+	expect(words({plan: '99/11 A'})).toContain('the plan 99/11 A is not on the rack');
+});
+
+test('what differs from the shipped one is shown, and nothing else', () => {
+	const lines = linesOf(stateOf(session(places.differences!)), {width: 80, height: 24, ascii: false});
+	expect(lines.slice(3, 9)).toEqual([
+		'The track Fixture Oval',
+		'',
+		'It differs from the shipped one:',
+		'       shipped  now',
+		expect.stringMatching(/^ {2}lap +\S+ \S+ +0\.7 mi$/),
+		'',
+	]);
+});
+
+test('where the room is, the place of the highest RPM is told whole', () => {
+	const text = linesOf(stateOf(session()), {width: 140, height: 45, ascii: false}).join('\n');
+	expect(text).toContain('restart shift');
+	expect(text).not.toMatch(/(Fron|resta|shi|Back)\S*… +\d/);
+});
+
+test('a type of track that fills its column does not touch what follows', () => {
+	const wide = {...oval, json: {...oval.json, type: 'superspeedway'}};
+	const history = startHistory({...documents, open: {...documents.open, [oval.id]: wide}});
+	const place: Place = {at: 'choose', kind: 'track', search: editLine(''), cursor: 0};
+	for (const width of [80, 140]) {
+		const text = linesOf(stateOf(session({place, history})), {width, height: 24, ascii: false}).join('\n');
+		expect(text).toContain('superspeedway shipped');
+	}
 });
 
 test('the ranking at 80 × 24', () => {
