@@ -214,6 +214,9 @@ test('thousands of keys in every place end in a session that still ranks', () =>
 		'p',
 		'n',
 		'l',
+		'd',
+		'f',
+		'y',
 	];
 	let state = 12345;
 	for (let i = 0; i < 2000; i++) {
