@@ -3,26 +3,39 @@ import {readdirSync, readFileSync} from 'node:fs';
 import {join} from 'node:path';
 import type {Plugin} from 'vite';
 
-type Manifest = {name: string; version: string; license?: string};
+type Manifest = {name: string; version: string; license?: string; author?: string | {name: string}};
 
 /** The directory of the package that a module belongs to; undefined for our own. */
 function packageOf(id: string): string | undefined {
 	return /^\0?(.*\/node_modules\/(?:@[^/]+\/)?[^/]+)\//.exec(id)?.[1];
 }
 
-function licenseText(directory: string): string {
+/** The words of the MIT license without the holder: as in our own. */
+const mitWords = readFileSync(new URL('../LICENSE', import.meta.url), 'utf8')
+	.split(/^Copyright.*$/m)[1]!
+	.trim();
+
+/** For a package that comes without the text: the holder it names, with the words of the license it names. */
+function standardText({license, author}: Manifest): string {
+	const holder = typeof author === 'object' ? author.name : author;
+	const words = license === 'MIT' ? mitWords : '(The package comes without the text of its license.)';
+	return `Copyright (c) ${holder ?? 'its authors'}\n\n${words}`;
+}
+
+function licenseText(directory: string, manifest: Manifest): string {
 	const files = readdirSync(directory).filter(name => /^(licen[cs]e|copying|notice)/i.test(name));
 	if (files.length > 0) return files.map(name => readFileSync(join(directory, name), 'utf8').trim()).join('\n\n');
 	const readme = readdirSync(directory).find(name => /^readme/i.test(name));
 	const section = /^#+ *licen[cs]e\b.*$([\s\S]*)/im.exec(
 		readme === undefined ? '' : readFileSync(join(directory, readme), 'utf8'),
 	);
-	return section?.[1]?.trim() ?? '(The package comes without the text of its license.)';
+	return section?.[1]?.trim() ?? standardText(manifest);
 }
 
 function notice(directory: string): string {
-	const {name, version, license} = JSON.parse(readFileSync(join(directory, 'package.json'), 'utf8')) as Manifest;
-	return `${name} ${version}\nLicense: ${license ?? 'see below'}\n\n${licenseText(directory)}\n`;
+	const manifest = JSON.parse(readFileSync(join(directory, 'package.json'), 'utf8')) as Manifest;
+	const {name, version, license} = manifest;
+	return `${name} ${version}\nLicense: ${license ?? 'see below'}\n\n${licenseText(directory, manifest)}\n`;
 }
 
 export function thirdParty(): Plugin {

@@ -1,5 +1,6 @@
 import * as nodeModule from 'node:module';
 import {answer, replyFault} from './commands/main.ts';
+import {screenRequest} from './commands/screen-request.ts';
 import {processSurroundings} from './commands/surroundings.ts';
 import {writeReply} from './commands/write-reply.ts';
 
@@ -13,5 +14,13 @@ process.on('uncaughtException', async error => {
 	process.exit(await writeReply(replyFault(error, surroundings), process.stdout, process.stderr));
 });
 
-const reply = await answer(process.argv.slice(2), surroundings);
+const words = process.argv.slice(2);
+const isTerminal = process.stdin.isTTY === true && process.stdout.isTTY === true;
+const request = isTerminal ? screenRequest(words) : undefined;
+if (request) {
+	const {openAtTerminal} = await import('./commands/at-terminal.ts');
+	await openAtTerminal(request, surroundings);
+	process.exit(process.exitCode);
+}
+const reply = await answer(words, surroundings);
 process.exitCode = await writeReply(reply, process.stdout, process.stderr);

@@ -23,6 +23,8 @@ export type Shelved = {
 	document: Record<string, unknown>;
 	/** Name of the car that was saved with a track. */
 	car?: string | undefined;
+	/** Pair and set that were saved with a track: "33/38 A". */
+	plan?: string | undefined;
 };
 
 export type Shelf = {
@@ -69,9 +71,10 @@ export const shippedShelf = (kind: Kind, shipped: URL): Shelved[] => {
 };
 
 const savedShelf = (kind: Kind, home: string): Shelf => {
-	const entry = (file: string, document: Named, car?: string): Shelved => {
+	const entry = (file: string, document: Named, car?: string, plan?: string): Shelved => {
 		const {name} = document;
-		return {kind, from: 'saved', name, stem: stemOf(basename(file)), file, text: textOf(document), document, car};
+		const stem = stemOf(basename(file));
+		return {kind, from: 'saved', name, stem, file, text: textOf(document), document, car, plan};
 	};
 	const noted = <T>(
 		{kept, problems}: {kept: T[]; problems: Parameters<typeof problemText>[0][]},
@@ -81,7 +84,9 @@ const savedShelf = (kind: Kind, home: string): Shelf => {
 		notes: problems.map(problemText),
 	});
 	if (kind === 'car') return noted(listKept(home, 'saved-car'), ({file, document}) => entry(file, document.car));
-	return noted(listKept(home, 'preset'), ({file, document}) => entry(file, document.track, document.car));
+	return noted(listKept(home, 'preset'), ({file, document: {track, car, pair, gearbox}}) =>
+		entry(file, track, car, pair && gearbox && `${pair} ${gearbox}`),
+	);
 };
 
 /** What tells the files of like names apart, see `fileNameOf`. */

@@ -28,6 +28,32 @@ export async function readCar(text: string): Promise<Reading<Car>> {
 	return readDocument(text, 'car', carFields(), carFrom);
 }
 
+/**
+ * As `readTrack`, of a document that is JSON already, and at once: the problems carry no line, and a unit that the table
+ * lacks is known only if `learnUnits` has looked it up before.
+ */
+export function checkTrack(document: Record<string, unknown>): Reading<Track> {
+	return checkDocument(document, 'track', trackFields(), trackFrom);
+}
+
+/** As `checkTrack`, of a car. */
+export function checkCar(document: Record<string, unknown>): Reading<Car> {
+	return checkDocument(document, 'car', carFields(), carFrom);
+}
+
+function checkDocument<S extends z.core.$ZodType, T>(
+	document: Record<string, unknown>,
+	kind: string,
+	fields: S,
+	build: (document: z.output<S>) => T,
+): Reading<T> {
+	const head = headProblem(document, kind);
+	if (head !== undefined) return {ok: false, problems: [head.problem]};
+	const checked = z.safeParse(fields, document);
+	if (checked.success) return {ok: true, value: build(checked.data), document};
+	return {ok: false, problems: problemsFrom(checked.error.issues, document).map(({problem}) => problem)};
+}
+
 async function readDocument<S extends z.core.$ZodType, T>(
 	text: string,
 	kind: string,

@@ -7,23 +7,25 @@ import {
 	standardGravityMps2 as standardGravity,
 } from '../drivetrain/constants.ts';
 
-export type Dimension =
-	| 'length'
-	| 'speed'
-	| 'mass'
-	| 'area'
-	| 'acceleration'
-	| 'angle'
-	| 'temperature'
-	| 'pressure'
-	| 'time'
-	| 'torque'
-	| 'force'
-	| 'inertia'
-	| 'power'
-	| 'share'
-	/** A plain number without unit. */
-	| 'number';
+/** What a quantity measures; `number` is what has no unit. */
+export const dimensions = [
+	'length',
+	'speed',
+	'mass',
+	'area',
+	'acceleration',
+	'angle',
+	'temperature',
+	'pressure',
+	'time',
+	'torque',
+	'force',
+	'inertia',
+	'power',
+	'share',
+	'number',
+] as const;
+export type Dimension = (typeof dimensions)[number];
 
 /** SI value = (number − zero) · factor. */
 export type Unit = {

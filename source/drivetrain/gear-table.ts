@@ -3,21 +3,17 @@
  * crosses it. Same answers, for a rack of runs at a fraction of the work.
  */
 import type {GearMotion} from './gear-motion.ts';
+import {endless, gentle, integrate, integrateSliver, type Stretch} from './quadrature.ts';
 import {type Cell, gains, SpeedCells} from './speed-cells.ts';
 import {
 	brakingDistanceM,
 	cruise,
 	earlierBy,
-	endless,
 	evenly,
 	type Goal,
-	gentle,
 	holds,
-	integrate,
-	integrateSliver,
 	newtonCap,
 	newtonEnd,
-	type Stretch,
 	type Travel,
 	travel,
 } from './travel.ts';

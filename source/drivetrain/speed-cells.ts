@@ -2,8 +2,11 @@
  * The speeds of a gear, cut into cells over each of which one quadrature is exact enough. Cut where a run first comes by:
  * most runs see a small part of a gear's speeds, and few come near the speed at which the acceleration falls to 0.
  */
+
+import {balancedBefore} from './balance.ts';
 import type {GearMotion, Mark} from './gear-motion.ts';
-import {balancedBefore, gentle, integrate, type Stretch, settled} from './travel.ts';
+import {gentle, integrate, type Stretch} from './quadrature.ts';
+import {settled} from './travel.ts';
 
 export type Cell = {
 	readonly lowMps: number;

@@ -1,17 +1,11 @@
 /**
- * Motion whose acceleration depends on speed alone: t = ∫ dV / a(V) and s = ∫ V dV / a(V), by Gauss-Legendre quadrature
- * between the kinks of a. Where a falls toward 0 the integral diverges, as it should; the pieces are halved toward that speed.
+ * Motion whose acceleration depends on speed alone, piece by piece between the kinks of a(V). Where a falls toward 0 the
+ * integrals diverge, as they should; the pieces are halved toward that speed.
  */
+import {balancedBefore} from './balance.ts';
 import {brentRoot} from './brent.ts';
-import {gaussLegendre} from './gauss-legendre.ts';
 import {cellOf} from './monotone-cubic.ts';
-
-export type Motion = {
-	/** Acceleration at a road speed from 0 up, m/s². */
-	acceleration(speedMps: number): number;
-	/** Rising speeds between which the acceleration is smooth. */
-	readonly breaks: readonly number[];
-};
+import {endless, gentle, integrate, integrateSliver, type Motion, type Stretch} from './quadrature.ts';
 
 export type Braking = {readonly entryMps: number; readonly brakingMps2: number};
 
@@ -24,8 +18,6 @@ export type Goal = {
 	readonly braking: Braking | undefined;
 };
 
-export type Stretch = {readonly distanceM: number; readonly timeS: number};
-
 export type Travel = {
 	readonly speedMps: number;
 	readonly distanceM: number;
@@ -35,24 +27,6 @@ export type Travel = {
 	/** With `end`, where it is known: a place on the way shortly before. */
 	readonly shortlyBefore?: {readonly speedMps: number; readonly distanceM: number};
 };
-
-const piece = gaussLegendre(6);
-/** For the last, short steps of a search, a small part of a piece. */
-const sliver = gaussLegendre(3);
-
-/**
- * The rule's error is about the square of its last Legendre coefficients over the mean, so where those are below this it is
- * below 1e-9, and in practice 1e-11: the coefficients fall on between the last and twice their number.
- */
-const smooth = 1e-4;
-/** Where it is not that smooth the piece is halved, so often at most: the rest of a kink is then below 1e-6 of the piece. */
-const mostHalvings = 10;
-
-/** A piece is halved until the acceleration at its end is within this factor of that at its start. */
-const steepest = 0.4;
-
-/** An acceleration that is nothing but rounding: in an hour it would change the speed by less than 1e-9 m/s. */
-const stillMps2 = 1e-13;
 
 /** This close to a speed at which the acceleration is 0, relatively, the car is taken to stay at it. */
 export const settled = 1e-13;
@@ -94,58 +68,6 @@ function nextPiece(motion: Motion, fromMps: number, boundMps: number): (Stretch 
 	return undefined;
 }
 
-/** What it takes to get past a speed at which the acceleration is 0. */
-export const endless: Stretch = {distanceM: Number.POSITIVE_INFINITY, timeS: Number.POSITIVE_INFINITY};
-
-/** Distance and time over which the acceleration, of one sign, takes the car from one speed to another inside a piece; `endless` where it is seen to change sign. */
-export function integrate(motion: Motion, fromMps: number, toMps: number, halvings = mostHalvings): Stretch {
-	const {nodes, weights, lastCoefficient, nextToLastCoefficient} = piece;
-	const middle = (fromMps + toMps) / 2;
-	const half = (toMps - fromMps) / 2;
-	let distanceM = 0;
-	let timeS = 0;
-	let last = 0;
-	let nextToLast = 0;
-	for (let i = 0; i < nodes.length; i++) {
-		const speed = middle + half * nodes[i]!;
-		const slowness = 1 / motion.acceleration(speed);
-		timeS += weights[i]! * slowness;
-		distanceM += weights[i]! * slowness * speed;
-		last += lastCoefficient[i]! * slowness;
-		nextToLast += nextToLastCoefficient[i]! * slowness;
-	}
-	if (halvings > 0 && Math.abs(last) + Math.abs(nextToLast) > (smooth / 2) * Math.abs(timeS)) {
-		if (changesSign(motion, middle, half)) return endless;
-		const one = integrate(motion, fromMps, middle, halvings - 1);
-		const other = integrate(motion, middle, toMps, halvings - 1);
-		if (one === endless || other === endless) return endless;
-		return {distanceM: one.distanceM + other.distanceM, timeS: one.timeS + other.timeS};
-	}
-	return {distanceM: distanceM * half, timeS: timeS * half};
-}
-
-/** Whether the acceleration differs in sign among the nodes of a piece. */
-function changesSign(motion: Motion, middleMps: number, halfMps: number): boolean {
-	const positive = motion.acceleration(middleMps) > 0;
-	return piece.nodes.some(node => motion.acceleration(middleMps + halfMps * node) > 0 !== positive);
-}
-
-/** The same over a small part of a piece. */
-export function integrateSliver(motion: Motion, fromMps: number, toMps: number): Stretch {
-	const {nodes, weights} = sliver;
-	const middle = (fromMps + toMps) / 2;
-	const half = (toMps - fromMps) / 2;
-	let distanceM = 0;
-	let timeS = 0;
-	for (let i = 0; i < nodes.length; i++) {
-		const speed = middle + half * nodes[i]!;
-		const weight = weights[i]! / motion.acceleration(speed);
-		timeS += weight;
-		distanceM += weight * speed;
-	}
-	return {distanceM: distanceM * half, timeS: timeS * half};
-}
-
 /** Distance under braking from a speed to the entry speed, V² − V_e² = 2·a_b·s; 0 from below it or without braking. */
 export function brakingDistanceM(speedMps: number, braking: Braking | undefined): number {
 	if (braking === undefined || speedMps <= braking.entryMps) return 0;
@@ -167,25 +89,6 @@ function pieceEnd(motion: Motion, speedMps: number, rising: boolean, goal: Goal)
 	return balancedBefore(motion, speedMps, next) ?? next;
 }
 
-/** In so many steps a piece is looked through for a speed at which the acceleration is 0. */
-const looks = 16;
-
-/** What the acceleration is at the very start does not count: the car may have settled there. Part of the piece. */
-const justAfter = 1e-6;
-
-/** The first speed on the way at which the acceleration is 0 or changes sign; undefined where it does neither. */
-export function balancedBefore(motion: Motion, fromMps: number, toMps: number): number | undefined {
-	const acceleration = (speedMps: number) => motion.acceleration(speedMps);
-	const at = (share: number) => fromMps + share * (toMps - fromMps);
-	const positive = acceleration(at(justAfter)) > 0;
-	for (let i = 1; i <= looks; i++) {
-		if (acceleration(at(i / looks)) > 0 === positive) continue;
-		const before = i === 1 ? at(justAfter) : at((i - 1) / looks);
-		return brentRoot(acceleration, before, at(i / looks)) ?? before;
-	}
-	return undefined;
-}
-
 /** The end of the piece, drawn nearer until the acceleration changes little over it. */
 function gentleEnd(motion: Motion, fromMps: number, boundMps: number): number {
 	const start = motion.acceleration(fromMps);
@@ -197,15 +100,6 @@ function gentleEnd(motion: Motion, fromMps: number, boundMps: number): number {
 		[end, atEnd] = [middle, atMiddle];
 	}
 	return end;
-}
-
-/**
- * Whether the accelerations at the start, the middle and the end of a piece are near enough for one quadrature: any pole of
- * 1/a then lies outside the piece by about its length. The middle tells a dip below 0 between two like ends.
- */
-export function gentle(start: number, middle: number, end: number): boolean {
-	const ratio = end / start;
-	return Math.abs(start) > stillMps2 && middle / start > 0 && ratio >= steepest && ratio <= 1 / steepest;
 }
 
 /** Whether the way to the next speed is no way at all and the acceleration falls to 0 on it; a kink or a goal so near is passed. */

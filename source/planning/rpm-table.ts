@@ -37,7 +37,8 @@ export function rpmTable(car: Car, track: Track, choice: Choice = {}): Outcome<R
 	});
 }
 
-function pointsOf(row: RowRun, ground: Ground): RpmPoint[] {
+/** The points of one row of a rack that has been run. */
+export function pointsOf(row: RowRun, ground: Ground): RpmPoint[] {
 	return [
 		...row.situations.flatMap(situation =>
 			situation.places.flatMap((run, i) => [

@@ -3,6 +3,7 @@ import {engineRpm} from '../drivetrain/tire.ts';
 import type {Candidate} from './candidates.ts';
 import type {Condition, Place} from './conditions.ts';
 import type {Plan} from './plan.ts';
+import type {Recall} from './run-memory.ts';
 import {type PlaceRun, runPlace} from './run-place.ts';
 
 export type SituationRun = {
@@ -28,9 +29,12 @@ export type RowRun = {
 	readonly pitRoad: PitRoadRun | undefined;
 };
 
-export function runRow(plan: Plan, candidate: Candidate): RowRun {
+const runAlways: Recall = (_, __, run) => run();
+
+export function runRow(plan: Plan, candidate: Candidate, recall = runAlways): RowRun {
 	const gearsOn = plan.roads.gearsFor(candidate.train);
-	const run = (condition: Condition, place: Place) => runPlace(condition, place, gearsOn(place.road));
+	const run = (condition: Condition, place: Place) =>
+		recall(place, candidate, () => runPlace(condition, place, gearsOn(place.road)));
 	return {
 		candidate,
 		situations: plan.conditions.map(condition => ({

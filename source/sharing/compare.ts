@@ -1,5 +1,6 @@
 /** Two documents side by side, differences only. */
-import {type Dimension, quantityOf} from '../documents/quantity.ts';
+import {quantityOf} from '../documents/quantity.ts';
+import {type Dimension, dimensions} from '../documents/units.ts';
 
 /** A value that is missing on one side is undefined there; what is shown is as it was written. */
 export type Difference = {path: string; a: string | undefined; b: string | undefined};
@@ -74,24 +75,6 @@ function isEmptyPair(a: unknown, b: unknown): boolean {
 	const isEmpty = (value: unknown) => branchesOf(value)?.size === 0;
 	return isEmpty(a) && isEmpty(b);
 }
-
-const dimensions: readonly Dimension[] = [
-	'length',
-	'speed',
-	'mass',
-	'area',
-	'acceleration',
-	'angle',
-	'temperature',
-	'pressure',
-	'time',
-	'torque',
-	'force',
-	'inertia',
-	'power',
-	'share',
-	'number',
-];
 
 /** Relative, in SI; temperatures from absolute zero. */
 const tolerance = 1e-12;

@@ -6,7 +6,7 @@ export type Budget = {
 	readonly what: string;
 	readonly kind: 'most' | 'least';
 	readonly bound: number;
-	readonly unit: '×' | 'MB';
+	readonly unit: '×' | 'MB' | 'bytes' | 'frames';
 };
 
 /** Growth in proportion is 10 × for 10 × as much; a tenth of it is left for what else the machine does. */
@@ -32,6 +32,15 @@ export const budgets = {
 	rankProcess: {what: '`droprack rank` as a process, against `node -e 1`', kind: 'most', bound: 3, unit: '×'},
 	tracksProcess: {what: '`droprack tracks` as a process, against `node -e 1`', kind: 'most', bound: 1.5, unit: '×'},
 	rankMemory: {what: 'Peak memory of `droprack rank`', kind: 'most', bound: 80, unit: 'MB'},
+	firstFrame: {what: 'The first frame of the screen, against `node -e 1`', kind: 'most', bound: 3, unit: '×'},
+	wholeRanking: {what: 'A whole ranking on the screen, against `node -e 1`', kind: 'most', bound: 5, unit: '×'},
+	firstFrameMemory: {what: 'Memory at the first frame', kind: 'most', bound: 95, unit: 'MB'},
+	key: {what: 'A key, against a plain Ink table', kind: 'most', bound: 1, unit: '×'},
+	keyBytes: {what: 'What a key sends to the terminal', kind: 'most', bound: 2000, unit: 'bytes'},
+	edit: {what: 'An accepted edit, ranked anew, against a key of a plain Ink table', kind: 'most', bound: 2, unit: '×'},
+	editBytes: {what: 'What an edit sends to the terminal', kind: 'most', bound: 6000, unit: 'bytes'},
+	heldKeys: {what: 'Frames for a key held down, 100 repeats', kind: 'least', bound: 100, unit: 'frames'},
+	manyKeysMemory: {what: 'Memory after 2000 keys', kind: 'most', bound: 140, unit: 'MB'},
 } as const satisfies Record<string, Budget>;
 
 export type BudgetName = keyof typeof budgets;

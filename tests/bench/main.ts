@@ -5,6 +5,7 @@ import {benchOneStraight} from './one-straight.ts';
 import {benchProcesses} from './processes.ts';
 import {benchGrowth, benchRack} from './rack.ts';
 import {writeReadme} from './readme-table.ts';
+import {benchScreen} from './screen.ts';
 
 const words = process.argv.slice(2);
 const seed = Number(words.find(word => /^\d+$/.test(word)) ?? 20_260_731);
@@ -18,6 +19,8 @@ line();
 await benchGrowth(figures, seed);
 line();
 benchProcesses(figures);
+line();
+await benchScreen(process.cwd(), figures);
 line();
 if (!figures.conclude()) process.exitCode = 1;
 if (words.includes('--write-readme')) writeReadme(figures.measured);

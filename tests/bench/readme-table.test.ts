@@ -7,7 +7,7 @@ const readme = readFileSync(new URL('../../README.md', import.meta.url), 'utf8')
 
 /** Times differ from run to run; what is measured, and against what, does not. */
 const shapeOf = (table: string) =>
-	table.replace(/\| [\d.]+ (×|MB) \| at/g, '| … $1 | at').replace(/^Measured on .+\.$/m, 'Measured on ….');
+	table.replace(/\| [\d.]+ (×|MB|bytes|frames) \| at/g, '| … $1 | at').replace(/^Measured on .+\.$/m, 'Measured on ….');
 
 test('the README has a figure for every budget; else: npm run bench -- --write-readme', () => {
 	const any = new Map((Object.keys(budgets) as BudgetName[]).map(name => [name, 1]));

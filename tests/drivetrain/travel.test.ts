@@ -1,6 +1,7 @@
 import {describe, expect, test} from 'vitest';
 import {mileM, mphMps} from '../../source/drivetrain/constants.ts';
-import {brakingDistanceM, type Goal, integrate, type Motion, travel} from '../../source/drivetrain/travel.ts';
+import {integrate, type Motion} from '../../source/drivetrain/quadrature.ts';
+import {brakingDistanceM, type Goal, travel} from '../../source/drivetrain/travel.ts';
 import {relativeError} from '../close.ts';
 
 // Recomputed closed forms for a mass m, drag k·V² and one simple force; each is worked out here in full and the printed

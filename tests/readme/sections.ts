@@ -2,8 +2,13 @@
 import {commands} from '../../source/commands/command-table.ts';
 import {answer} from '../../source/commands/main.ts';
 import {option, options} from '../../source/commands/options.ts';
-import {demo} from '../../source/commands/shelf.ts';
+import {demo, shelf} from '../../source/commands/shelf.ts';
 import type {Surroundings} from '../../source/commands/surroundings.ts';
+import {keyTableMarkdown} from '../../source/screens/key-table.ts';
+import type {OpenDocument} from '../../source/screens/session/documents.ts';
+import type {JsonObject} from '../../source/screens/session/json.ts';
+import {startSession} from '../../source/screens/session/session.ts';
+import {linesOf, stateOf} from '../screens/views/states.ts';
 import {errorOf, finestError, type OutsideCheck, worstCase} from './outside-check.ts';
 import {outsideChecks} from './outside-checks.ts';
 
@@ -79,10 +84,26 @@ const checkRow = (check: OutsideCheck): string[] => {
 const checkTable = (): string =>
 	tableOf(['what', 'source', 'outside', 'ours', 'relative error'], outsideChecks.map(checkRow));
 
+/** The ranking of the demo as the screen shows it at 80 × 24. */
+const screen = (): string => {
+	const read = (kind: 'track' | 'car', stem: string): OpenDocument => {
+		const {document} = shelf(kind, around).entries.find(entry => entry.stem === stem)!;
+		const json = document as JsonObject;
+		return {id: `${kind}:${stem}`, kind, from: 'shipped', json, saved: json, shipped: json, plan: undefined};
+	};
+	const [track, car] = [read('track', demo.track), read('car', demo.car)];
+	const documents = {open: {[track.id]: track, [car.id]: car}, track: track.id, car: car.id};
+	return ['```', ...linesOf(stateOf(startSession(documents, 'us')), {width: 80, height: 24, ascii: false}), '```'].join(
+		'\n',
+	);
+};
+
 const sections: Record<string, () => string | Promise<string>> = {
 	ranking,
 	commands: () => `${commandTable()}\n\n${optionTable()}`,
 	'outside checks': checkTable,
+	screen,
+	keys: keyTableMarkdown,
 };
 
 /** The text with every section written anew. */

@@ -1,6 +1,7 @@
 /** Runs whose answer has a closed form: 1500 kg, ½·ρ·C_dA = 0.539 kg/m where there is drag. */
 import {mphMps} from '../../../source/drivetrain/constants.ts';
-import {type Motion, type Travel, travel} from '../../../source/drivetrain/travel.ts';
+import type {Motion} from '../../../source/drivetrain/quadrature.ts';
+import {type Travel, travel} from '../../../source/drivetrain/travel.ts';
 import {type Case, casesOf, type OutsideCheck} from '../outside-check.ts';
 
 const massKg = 1500;

@@ -1,0 +1,56 @@
+/** The bare command in a terminal: the screen, on the documents that the ranking would be printed of. */
+import {openScreen} from '../screens/open.ts';
+import type {OpenDocument} from '../screens/session/documents.ts';
+import type {JsonObject} from '../screens/session/json.ts';
+import {homeDirectory} from '../store/home.ts';
+import {readPreferences} from '../store/preferences.ts';
+import {findDocument} from './find-document.ts';
+import type {Request} from './request.ts';
+import {screenKeeper} from './screen-keeper.ts';
+import {demo, type Kind, type Shelved, shelf, shippedShelf} from './shelf.ts';
+import type {Surroundings} from './surroundings.ts';
+
+export async function openAtTerminal({units, ascii, car}: Request, around: Surroundings): Promise<void> {
+	const home = homeDirectory(around.environment);
+	const [tracks, cars] = [shelf('track', around), shelf('car', around)];
+	const catalog = [...openDocuments('track', tracks.entries, around), ...openDocuments('car', cars.entries, around)];
+	const track = catalog.find(({kind, id}) => kind === 'track' && id === `track:${demo.track}`)!;
+	const savedWith = tracks.entries.find(({stem}) => stem === demo.track)?.car;
+	const chosen = chosenCar(car ?? savedWith, catalog, cars.entries, home);
+	await openScreen({
+		documents: {open: {[track.id]: track, [chosen.id]: chosen}, track: track.id, car: chosen.id},
+		catalog,
+		units,
+		theme: {color: around.color, ascii},
+		keeper: screenKeeper(home),
+		// The name that Ink gave it.
+		reader: around.environment.INK_SCREEN_READER === 'true',
+		notice: [...tracks.notes, ...cars.notes][0],
+	});
+}
+
+function openDocuments(kind: Kind, entries: readonly Shelved[], around: Surroundings): OpenDocument[] {
+	const shipped = shippedShelf(kind, around.shipped);
+	return entries.map(({stem, from, document, plan}) => {
+		const json = document as JsonObject;
+		const original = from === 'shipped' ? json : shipped.find(one => one.stem === stem)?.document;
+		return {id: `${kind}:${stem}`, kind, from, json, saved: json, shipped: original as JsonObject | undefined, plan};
+	});
+}
+
+/** The car asked for or saved with the track, else the preferred one, else the demo car. */
+function chosenCar(
+	asked: string | undefined,
+	catalog: readonly OpenDocument[],
+	entries: readonly Shelved[],
+	home: string,
+): OpenDocument {
+	const preferences = readPreferences(home);
+	const preferred = preferences.ok ? preferences.value.car : undefined;
+	const found = [asked, preferred, demo.car]
+		.filter(name => name !== undefined)
+		.map(name => findDocument(name, entries, 'car'))
+		.find(entry => entry.ok);
+	const stem = found?.ok ? found.value.stem : demo.car;
+	return catalog.find(({id}) => id === `car:${stem}`)!;
+}

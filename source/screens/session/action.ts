@@ -1,0 +1,42 @@
+/** What may happen to a session, named by intention. */
+import type {UnitSystem} from '../../commands/text/units.ts';
+import type {KeyEvent} from '../terminal/key-event.ts';
+import type {Documents, Kind, OpenDocument} from './documents.ts';
+import type {Filter, Order} from './rows.ts';
+import type {Over, Place} from './session.ts';
+
+export type Action =
+	| {readonly do: 'go'; readonly place: Place}
+	| {readonly do: 'cover'; readonly over: Over | undefined}
+	| {readonly do: 'tell'; readonly notice: string}
+	| {readonly do: 'selectRow'; readonly row: string}
+	| {readonly do: 'compareWith'; readonly row: string | undefined}
+	| {readonly do: 'plan'; readonly row: string | undefined}
+	| {readonly do: 'install'; readonly pair: string; readonly gearbox: string}
+	| {readonly do: 'order'; readonly order: Order}
+	| {readonly do: 'filter'; readonly filter: Filter}
+	| {readonly do: 'situate'; readonly situation: string | undefined}
+	| {readonly do: 'read in'; readonly units: UnitSystem}
+	| {readonly do: 'take'; readonly document: OpenDocument}
+	| {readonly do: 'start new'; readonly kind: Kind}
+	| {readonly do: 'recover'; readonly documents: Documents}
+	/** As it was written, and with which plan. */
+	| {readonly do: 'saved'; readonly document: OpenDocument; readonly plan: string | undefined}
+	| {readonly do: 'undo'}
+	| {readonly do: 'redo'}
+	/** Typed into whatever takes text: a field, the search, the least margin. */
+	| {readonly do: 'type'; readonly event: KeyEvent}
+	| {readonly do: 'move in form'; readonly sections: number; readonly rows: number; readonly columns: number}
+	/** With what stands there, or with what was typed in its place. */
+	| {readonly do: 'open field'; readonly text?: string}
+	/** And then on by so many rows or columns. */
+	| {readonly do: 'accept field'; readonly rows: number; readonly columns: number}
+	| {readonly do: 'put back'}
+	| {readonly do: 'clear field'}
+	| {readonly do: 'to shipped'}
+	| {readonly do: 'add entry'}
+	| {readonly do: 'remove entry'}
+	| {readonly do: 'move entry'; readonly by: 1 | -1}
+	| {readonly do: 'paste curve'; readonly text: string}
+	| {readonly do: 'move choice'; readonly by: number}
+	| {readonly do: 'accept margin'};

@@ -1,0 +1,229 @@
+/** From the name of what a key does to what happens to the session, or outside of it. */
+import type {Ranked} from '../../planning/rank-rack.ts';
+import type {ActionName, Scope} from '../key-table.ts';
+import {editLine} from '../parts/edit-line.ts';
+import type {Action} from './action.ts';
+import type {Choice} from './catalog.ts';
+import {unsaved} from './documents.ts';
+import {marginEntry} from './reduce.ts';
+import {cursorIn, orders, type Placed, stepped} from './rows.ts';
+import {type Place, pictures, type Session} from './session.ts';
+
+/** What reaches beyond the session. */
+export type Effect =
+	| 'leave'
+	| 'discard and leave'
+	| 'save'
+	| 'save and leave'
+	| 'suspend'
+	| 'redraw'
+	| 'stop'
+	| 'take choice'
+	| 'forget recovery';
+
+/** What a key's meaning may depend on beside the session. */
+export type Scene = {
+	readonly ranked: Ranked | undefined;
+	/** All rows, and those that are shown in their order. */
+	readonly all: readonly Placed[];
+	readonly shown: readonly Placed[];
+	readonly situations: readonly string[];
+	readonly choices: readonly Choice[];
+	readonly isWorking: boolean;
+};
+
+/** Which scopes of the key table hold, the first one first. */
+export function scopesOf({place, over}: Session): Scope[] {
+	if (over) return [over.is];
+	if (place.at === 'edit' && place.editing) return ['field'];
+	return place.at === 'choose' ? ['choose'] : [place.at, 'everywhere'];
+}
+
+/** Whether what a person types is text here. */
+export const takesText = ({place, over}: Session): boolean =>
+	over ? over.is === 'margin' : place.at === 'choose' || (place.at === 'edit' && place.editing !== undefined);
+
+const tenRows = 10;
+const scrollLines = 8;
+
+export function intend(name: ActionName, session: Session, scene: Scene): Action | Effect | undefined {
+	const {place, over} = session;
+	const here = scene.shown[cursorIn(scene.shown, session.row)];
+	switch (name) {
+		case 'row up':
+			return rowBy(session, scene, -1);
+		case 'row down':
+			return rowBy(session, scene, 1);
+		case 'page up':
+			return rowBy(session, scene, -tenRows);
+		case 'page down':
+			return rowBy(session, scene, tenRows);
+		case 'first row':
+			return rowBy(session, scene, Number.NEGATIVE_INFINITY);
+		case 'last row':
+			return rowBy(session, scene, Number.POSITIVE_INFINITY);
+		case 'shorter':
+			return stepTo(scene, here, 1);
+		case 'taller':
+			return stepTo(scene, here, -1);
+		case 'compare':
+			return here && {do: 'compareWith', row: session.comparison === here.name ? undefined : here.name};
+		case 'plan':
+			return here && {do: 'plan', row: session.plan === here.name ? undefined : here.name};
+		case 'install':
+			return here && {do: 'install', pair: here.row.pair, gearbox: here.row.gearbox};
+		case 'next order':
+			return {do: 'order', order: next(orders, session.order, 1)};
+		case 'hide failing':
+			return {do: 'filter', filter: {...session.filter, hideFailing: !session.filter.hideFailing}};
+		case 'next gearbox': {
+			const sets = [...new Set(scene.all.map(({row}) => row.gearbox))].sort();
+			return {
+				do: 'filter',
+				filter: {...session.filter, gearbox: next([undefined, ...sets], session.filter.gearbox, 1)},
+			};
+		}
+		case 'least margin':
+			return {do: 'cover', over: marginEntry(session)};
+		case 'accept margin':
+			return {do: 'accept margin'};
+		case 'next situation':
+			return {do: 'situate', situation: next([undefined, ...scene.situations], session.situation, 1)};
+		case 'previous situation':
+			return {do: 'situate', situation: next([undefined, ...scene.situations], session.situation, -1)};
+		case 'why':
+			return {do: 'go', place: {at: 'why', scroll: 0}};
+		case 'ranking':
+			return place.at === 'ranking' ? (scene.isWorking ? 'stop' : undefined) : {do: 'go', place: {at: 'ranking'}};
+		case 'pictures':
+			return {do: 'go', place: {at: 'pictures', picture: 'rpm', straight: 0}};
+		case 'next picture':
+			return pictureBy(place, 1);
+		case 'previous picture':
+			return pictureBy(place, -1);
+		case 'next straight':
+			return straightBy(place, scene, 1);
+		case 'previous straight':
+			return straightBy(place, scene, -1);
+		case 'scroll up':
+			return scrollBy(session, -scrollLines);
+		case 'scroll down':
+			return scrollBy(session, scrollLines);
+		case 'edit':
+			return {do: 'go', place: formOf('track')};
+		case 'other form':
+			return {do: 'go', place: formOf(place.at === 'edit' && place.kind === 'track' ? 'car' : 'track')};
+		case 'choose':
+			return {do: 'go', place: {at: 'choose', kind: 'track', search: editLine(''), cursor: 0}};
+		case 'other choice':
+			return place.at === 'choose'
+				? {do: 'go', place: {...place, kind: place.kind === 'track' ? 'car' : 'track', cursor: 0}}
+				: undefined;
+		case 'choice up':
+			return {do: 'move choice', by: -1};
+		case 'choice down':
+			return place.at === 'choose' && place.cursor + 1 < scene.choices.length ? {do: 'move choice', by: 1} : undefined;
+		case 'start new':
+			return place.at === 'choose' ? {do: 'start new', kind: place.kind} : undefined;
+		case 'field up':
+			return inForm(0, -1);
+		case 'field down':
+			return inForm(0, 1);
+		case 'fields up':
+			return inForm(0, -tenRows);
+		case 'fields down':
+			return inForm(0, tenRows);
+		case 'column left':
+			return inForm(0, 0, -1);
+		case 'column right':
+			return inForm(0, 0, 1);
+		case 'next section':
+			return inForm(1, 0);
+		case 'previous section':
+			return inForm(-1, 0);
+		case 'accept':
+			return {do: 'accept field', rows: 0, columns: 0};
+		case 'accept right':
+			return {do: 'accept field', rows: 0, columns: 1};
+		case 'accept left':
+			return {do: 'accept field', rows: 0, columns: -1};
+		case 'accept down':
+			return {do: 'accept field', rows: 1, columns: 0};
+		case 'accept up':
+			return {do: 'accept field', rows: -1, columns: 0};
+		case 'entry up':
+			return {do: 'move entry', by: -1};
+		case 'entry down':
+			return {do: 'move entry', by: 1};
+		case 'help':
+			return {do: 'cover', over: {is: 'help', scroll: 0}};
+		case 'uncover':
+			return {do: 'cover', over: undefined};
+		case 'recover':
+			return over?.is === 'recovery' ? {do: 'recover', documents: over.documents} : undefined;
+		case 'units':
+			return {do: 'read in', units: session.units === 'us' ? 'metric' : 'us'};
+		case 'quit':
+			return unsaved(session.history.present).length > 0 ? {do: 'cover', over: {is: 'quitting'}} : 'leave';
+		case 'open field':
+		case 'put back':
+		case 'clear field':
+		case 'to shipped':
+		case 'add entry':
+		case 'remove entry':
+		case 'undo':
+		case 'redo':
+			return {do: name};
+		default:
+			return name;
+	}
+}
+
+const inForm = (sections: number, rows: number, columns = 0): Action => ({do: 'move in form', sections, rows, columns});
+const formOf = (kind: 'track' | 'car'): Place => ({
+	at: 'edit',
+	kind,
+	section: 0,
+	row: 0,
+	column: 0,
+	editing: undefined,
+});
+
+/** The one so many after another in a circle; an unknown one counts as the first. */
+function next<T>(among: readonly T[], one: T, by: number): T {
+	const at = Math.max(0, among.indexOf(one));
+	return among[(at + by + among.length) % among.length]!;
+}
+
+function rowBy(session: Session, {shown}: Scene, by: number): Action | undefined {
+	const cursor = cursorIn(shown, session.row);
+	const target = Math.max(0, Math.min(shown.length - 1, cursor + by));
+	// At the end of the list nothing is chosen that was not chosen before.
+	return target === cursor ? undefined : {do: 'selectRow', row: shown[target]!.name};
+}
+
+function stepTo({all, shown}: Scene, here: Placed | undefined, by: 1 | -1): Action | undefined {
+	if (here === undefined) return undefined;
+	const row = stepped(all, here, by);
+	if (row === undefined)
+		return {do: 'tell', notice: `No ${by > 0 ? 'shorter' : 'taller'} pair on the rack for this set.`};
+	if (!shown.includes(row)) return {do: 'tell', notice: `${row.name} is next, but hidden by the filter.`};
+	return {do: 'selectRow', row: row.name};
+}
+
+function pictureBy(place: Place, by: 1 | -1): Action | undefined {
+	return place.at === 'pictures'
+		? {do: 'go', place: {...place, picture: next(pictures, place.picture, by)}}
+		: undefined;
+}
+
+function straightBy(place: Place, {all}: Scene, by: 1 | -1): Action | undefined {
+	const count = all[0]?.row.situations[0]?.straights.length ?? 0;
+	if (place.at !== 'pictures' || count === 0) return undefined;
+	return {do: 'go', place: {...place, straight: (place.straight + by + count) % count}};
+}
+
+function scrollBy({place, over}: Session, by: number): Action | undefined {
+	if (over?.is === 'help') return {do: 'cover', over: {...over, scroll: Math.max(0, over.scroll + by)}};
+	return place.at === 'why' ? {do: 'go', place: {...place, scroll: Math.max(0, place.scroll + by)}} : undefined;
+}

@@ -1,0 +1,198 @@
+/** A session that runs: its state, the answer that follows from it, and who is told when either changes. */
+import {type Ranked, rowName} from '../../planning/rank-rack.ts';
+import type {Keeper} from '../keeper.ts';
+import {type ActionName, actionFor} from '../key-table.ts';
+import {type KeyEvent, keyName} from '../terminal/key-event.ts';
+import type {Action} from './action.ts';
+import {type Answer, rankedIn} from './answer.ts';
+import {choicesFor} from './catalog.ts';
+import {current, type Documents, isChanged, type OpenDocument, titleOf, unsaved} from './documents.ts';
+import {readTrackOf} from './forms.ts';
+import {type Effect, intend, type Scene, scopesOf, takesText} from './intend.ts';
+import {type Clock, Ranker} from './ranker.ts';
+import {reduce} from './reduce.ts';
+import {type Filter, type Order, type Placed, placedRows, shownRows} from './rows.ts';
+import type {Session} from './session.ts';
+
+/** What only the terminal can do. */
+export type Outside = {
+	leave(): void;
+	suspend(): void;
+	redraw(): void;
+};
+
+export type State = {readonly session: Session; readonly answer: Answer; readonly scene: Scene};
+
+export class LiveSession {
+	#state: State;
+	readonly #ranker: Ranker;
+	readonly #catalog: readonly OpenDocument[];
+	readonly #keeper: Keeper;
+	readonly #outside: Outside;
+	readonly #listeners = new Set<() => void>();
+	#placed: {readonly ranked: Ranked; readonly rows: Placed[]} | undefined;
+	#shown:
+		| {readonly all: readonly Placed[]; readonly order: Order; readonly filter: Filter; readonly rows: Placed[]}
+		| undefined;
+
+	constructor(session: Session, catalog: readonly OpenDocument[], keeper: Keeper, outside: Outside, clock: Clock) {
+		this.#catalog = catalog;
+		this.#keeper = keeper;
+		this.#outside = outside;
+		this.#ranker = new Ranker(clock, () => this.#settle(this.#state.session));
+		this.#ranker.start(inputsOf(session));
+		this.#state = this.#stateOf(session);
+	}
+
+	readonly state = (): State => this.#state;
+
+	readonly subscribe = (listener: () => void): (() => void) => {
+		this.#listeners.add(listener);
+		return () => this.#listeners.delete(listener);
+	};
+
+	/** A key or a paste; what means nothing here is passed over. */
+	press(event: KeyEvent): void {
+		const {session, scene} = this.#state;
+		const key = keyName(event);
+		const name = key === undefined ? undefined : actionFor(key, scopesOf(session));
+		if (name !== undefined) this.#perform(intend(name, session, scene));
+		else if (takesText(session)) this.dispatch({do: 'type', event});
+		else if (startsNumber(event) && session.place.at === 'edit') this.dispatch({do: 'open field', text: event.text});
+		else if (event.kind === 'paste') this.dispatch({do: 'paste curve', text: event.text});
+	}
+
+	/** As if its key had been pressed. */
+	perform(name: ActionName): void {
+		this.#perform(intend(name, this.#state.session, this.#state.scene));
+	}
+
+	dispatch(action: Action): void {
+		const before = this.#state.session;
+		const session = reduce(before, action);
+		const documents = session.history.present;
+		const edited = documents !== before.history.present;
+		const isOther = session.situation !== before.situation || !sameContent(documents, before.history.present);
+		if (isOther) this.#ranker.rank(inputsOf(session));
+		// What 'saved' marks is no edit: `#save` keeps by itself.
+		if (edited && action.do !== 'saved') this.#keep(session);
+		if (action.do === 'recover') this.#keeper.dropEarlier();
+		this.#settle(session);
+	}
+
+	#perform(intent: Action | Effect | undefined): void {
+		if (intent === undefined) return;
+		if (typeof intent !== 'string') this.dispatch(intent);
+		else this.#effects[intent]();
+	}
+
+	readonly #effects: Record<Effect, () => void> = {
+		leave: () => this.#outside.leave(),
+		'discard and leave': () => {
+			this.#keeper.drop();
+			this.#outside.leave();
+		},
+		save: () => void this.#save(),
+		'save and leave': () => {
+			if (this.#save()) this.#outside.leave();
+		},
+		suspend: () => this.#outside.suspend(),
+		redraw: () => {
+			if (this.#state.answer.is === 'stopped') this.#ranker.rank(inputsOf(this.#state.session));
+			this.#settle(this.#state.session);
+			this.#outside.redraw();
+		},
+		stop: () => {
+			this.#ranker.stop();
+			this.#settle(this.#state.session);
+		},
+		'take choice': () => {
+			const {session, scene} = this.#state;
+			const choice = session.place.at === 'choose' ? scene.choices[session.place.cursor] : undefined;
+			if (choice) this.dispatch({do: 'take', document: choice.document});
+		},
+		'forget recovery': () => {
+			this.#keeper.dropEarlier();
+			this.dispatch({do: 'cover', over: undefined});
+		},
+	};
+
+	/** Everything that was changed, one document after the other; whether all of it was saved. */
+	#save(): boolean {
+		const {history, plan} = this.#state.session;
+		const track = current(history.present, 'track');
+		const changed = unsaved(history.present);
+		const documents = plan === track.plan || changed.includes(track) ? changed : [...changed, track];
+		const car = titleOf(current(history.present, 'car'));
+		const savings = documents.map(document => {
+			const chosen = document === track ? plan : document.plan;
+			const saving = this.#keeper.save(document, {car, plan: chosen});
+			if (saving.ok) this.dispatch({do: 'saved', document, plan: chosen});
+			return saving;
+		});
+		this.#keep(this.#state.session);
+		this.dispatch({do: 'cover', over: undefined});
+		const words = savings.length === 0 ? ['Nothing has changed since it was saved.'] : savings.map(({words}) => words);
+		this.dispatch({do: 'tell', notice: words.join(' ')});
+		return savings.every(({ok}) => ok);
+	}
+
+	#keep({history}: Session): void {
+		if (Object.values(history.present.open).some(isChanged)) this.#keeper.keep(history.present);
+		else this.#keeper.drop();
+	}
+
+	#settle(session: Session): void {
+		this.#state = this.#stateOf(session);
+		for (const listener of this.#listeners) listener();
+	}
+
+	#stateOf(session: Session): State {
+		const {answer} = this.#ranker;
+		const ranked = rankedIn(answer);
+		const all = ranked === undefined ? firstRow(answer) : this.#placedIn(ranked);
+		const documents = session.history.present;
+		const track = readTrackOf(documents.open[documents.track]!.json);
+		const {place} = session;
+		const scene: Scene = {
+			ranked,
+			all,
+			shown: this.#shownOf(all, session),
+			situations: track.ok ? track.value.situations.map(({name}) => name) : [],
+			choices: place.at === 'choose' ? choicesFor(this.#catalog, documents, place.kind, place.search.text) : [],
+			isWorking: answer.is === 'working',
+		};
+		return {session, answer, scene};
+	}
+
+	/** The same list as long as nothing about it has changed: what is made of it is kept with it. */
+	#shownOf(all: readonly Placed[], {order, filter}: Session): Placed[] {
+		const known = this.#shown;
+		if (known?.all === all && known.order === order && known.filter === filter) return known.rows;
+		this.#shown = {all, order, filter, rows: shownRows(all, order, filter)};
+		return this.#shown.rows;
+	}
+
+	#placedIn(ranked: Ranked): Placed[] {
+		if (this.#placed?.ranked !== ranked) this.#placed = {ranked, rows: placedRows(ranked.ranking.rows)};
+		return this.#placed.rows;
+	}
+}
+
+/** A number typed on a field takes the place of what stood there. */
+const startsNumber = (event: KeyEvent): event is KeyEvent & {kind: 'text'} =>
+	event.kind === 'text' && /^[\d.]$/.test(event.text);
+
+/** Before the rack has been ranked there is the pair in the car. */
+const firstRow = (answer: Answer): Placed[] =>
+	answer.is === 'working' && answer.first !== undefined
+		? [{place: undefined, name: rowName(answer.first.row), row: answer.first.row}]
+		: [];
+
+/** Whether there is nothing to rank anew. */
+const sameContent = (one: Documents, other: Documents): boolean =>
+	(['track', 'car'] as const).every(
+		kind => one[kind] === other[kind] && current(one, kind).json === current(other, kind).json,
+	);
+
+const inputsOf = ({history, situation}: Session) => ({documents: history.present, situation});

@@ -1,0 +1,64 @@
+/** What a session at the screen holds: inputs only. What follows from them is in `answer.ts` and in the views. */
+import type {UnitSystem} from '../../commands/text/units.ts';
+import type {EditLine} from '../parts/edit-line.ts';
+import {current, type Documents, type Kind} from './documents.ts';
+import {type History, startHistory} from './history.ts';
+import {type Filter, noFilter, type Order} from './rows.ts';
+
+export const pictures = ['rpm', 'thrust', 'speed'] as const;
+export type Picture = (typeof pictures)[number];
+
+/** A field being typed into. */
+export type Editing = {readonly line: EditLine /** Why it was not taken. */; readonly wrong: string | undefined};
+
+/** A field of a form by its place in it. */
+export type FieldPlace = {readonly section: number; readonly row: number; readonly column: number};
+
+export type Place =
+	| {readonly at: 'ranking'}
+	| {readonly at: 'why'; readonly scroll: number}
+	| {readonly at: 'pictures'; readonly picture: Picture; readonly straight: number}
+	| ({readonly at: 'edit'; readonly kind: Kind; readonly editing: Editing | undefined} & FieldPlace)
+	| {readonly at: 'choose'; readonly kind: Kind; readonly search: EditLine; readonly cursor: number};
+export type PlaceName = Place['at'];
+
+/** What lies over the place until it is answered. */
+export type Over =
+	| {readonly is: 'help'; readonly scroll: number}
+	| {readonly is: 'quitting'}
+	/** An earlier session that ended without being saved. */
+	| {readonly is: 'recovery'; readonly documents: Documents}
+	| ({readonly is: 'margin'} & Editing);
+
+export type Session = {
+	readonly history: History<Documents>;
+	readonly place: Place;
+	readonly over: Over | undefined;
+	/** The row under the cursor, by name; undefined: what is in the car. */
+	readonly row: string | undefined;
+	/** The row that the one under the cursor is compared with. */
+	readonly comparison: string | undefined;
+	/** The row that was chosen. */
+	readonly plan: string | undefined;
+	readonly order: Order;
+	readonly filter: Filter;
+	/** Undefined: the worst over all. */
+	readonly situation: string | undefined;
+	readonly units: UnitSystem;
+	/** What the last key did, where the screen does not show it by itself. */
+	readonly notice: string | undefined;
+};
+
+export const startSession = (documents: Documents, units: UnitSystem): Session => ({
+	history: startHistory(documents),
+	place: {at: 'ranking'},
+	over: undefined,
+	row: undefined,
+	comparison: undefined,
+	plan: current(documents, 'track').plan,
+	order: 'place',
+	filter: noFilter,
+	situation: undefined,
+	units,
+	notice: undefined,
+});

@@ -1,0 +1,173 @@
+import {describe, expect, test} from 'vitest';
+import {editLine} from '../../../source/screens/parts/edit-line.ts';
+import {withJson} from '../../../source/screens/session/documents.ts';
+import {startHistory} from '../../../source/screens/session/history.ts';
+import {marginEntry} from '../../../source/screens/session/reduce.ts';
+import type {Place, Session} from '../../../source/screens/session/session.ts';
+import {after, car, documents, oval, session, typed} from '../session/documents.ts';
+import {linesOf, stateOf, widest} from './states.ts';
+
+const sizes = [
+	[80, 24],
+	[100, 30],
+	[140, 45],
+	[200, 60],
+] as const;
+const edit: Place = {at: 'edit', kind: 'track', section: 1, row: 1, column: 0, editing: undefined};
+const places: Record<string, Partial<Session>> = {
+	ranking: {},
+	comparing: {comparison: '36/36 A'},
+	why: {place: {at: 'why', scroll: 0}},
+	'why, compared': {place: {at: 'why', scroll: 8}, comparison: '36/36 A'},
+	'picture of RPM': {place: {at: 'pictures', picture: 'rpm', straight: 0}},
+	'picture of thrust': {place: {at: 'pictures', picture: 'thrust', straight: 0}},
+	'picture of speed': {place: {at: 'pictures', picture: 'speed', straight: 1}, comparison: '34/37 A'},
+	form: {place: edit},
+	'form, typing': {place: {...edit, editing: {line: editLine('118 mhp'), wrong: undefined}}},
+	'form of the car, a table': {place: {at: 'edit', kind: 'car', section: 5, row: 2, column: 1, editing: undefined}},
+	choosing: {place: {at: 'choose', kind: 'track', search: editLine('ov'), cursor: 0}},
+	help: {over: {is: 'help', scroll: 0}},
+	'least margin': {over: marginEntry(session())},
+	quitting: {over: {is: 'quitting'}},
+	'no row left': {filter: {hideFailing: true, gearbox: 'C', leastMarginRpm: 5000}},
+};
+
+describe.each(Object.entries(places))('%s', (_, change) => {
+	test.each(sizes)('fills %d × %d exactly, and no more', (width, height) => {
+		for (const ascii of [false, true]) {
+			const lines = linesOf(stateOf(session(change)), {width, height, ascii});
+			expect(lines).toHaveLength(height);
+			expect(widest(lines)).toBeLessThanOrEqual(width);
+		}
+	});
+	test('in ASCII there is nothing else', () => {
+		expect(linesOf(stateOf(session(change)), {width: 100, height: 30, ascii: true}).join('')).toMatch(/^[\x20-\x7e]*$/);
+	});
+});
+
+test('the ranking at 80 × 24', () => {
+	expect(linesOf(stateOf(session()), {width: 80, height: 24, ascii: false}).join('\n')).toMatchInlineSnapshot(`
+		"Fixture Oval · short · limit 9200 · band 7254-9200 · 68°F, 28.94 in… Fixture Car
+		worst over all situations · 10 rows
+		────────────────────────────────────────────────────────────────────────────────
+		       #  pair   set  verdict  highest  margin  where       exit  shifts  gain s
+		▸      1  34/37  A    near        9100     100  Front shi…  6587       2  +0.051
+		       2  35/36  A    near        9100     100  Front shi…  6226       2  +0.020
+		       3  34/37  B    near        9100     100  Front shi…  6135       2  +0.011
+		 *     4  36/36  A    near        9100     100  restart s…  6053       2   0.000
+		       5  36/35  A    near        9157      43  restart e…  5885       2  -0.023
+		       6  37/34  B    near        9116      84  Back end    7362       2  -0.031
+		       7  35/36  B    near        9100     100  restart s…  5799       2  -0.036
+		       8  36/35  B    near        9100     100  Front shi…  5664       3  -0.050
+		       9  37/34  A    near        9100     100  Back shif…  5711       2  -0.055
+		      10  36/36  B    near        9108      92  Front end   5637       1  -0.056
+		────────────────────────────────────────────────────────────────────────────────
+		34/37 A near Fastest of 10 that fail no check: 0.031 s a lap ahead of 35/36 A;
+		highest RPM 9100 at Front shift 2-3, 100 under the limit. Near: after a shift,
+		downshift.
+		after shift near -220 (Front shift 2-3, Base)
+		downshift near -1916 (Back entry 3-2, In the tow)
+		limit pass +100 (Front shift 2-3, Base)  limiter pass  band pass
+		settled pass +1.4 s  pit road pass +3125  restart pass  housing pass  stock pass
+
+		↑↓ row  Enter why  → shorter  ← taller  e edit  t track  ? help  q quit"
+	`);
+});
+
+test('the reasons stand beside the ranking where there is room', () => {
+	const lines = linesOf(stateOf(session()), {width: 140, height: 45, ascii: false});
+	expect(lines.find(line => line.includes('▸'))).toMatch(/▸.*│/);
+	expect(lines.join('\n')).toContain('RPM limit');
+});
+
+test('below 80 × 24 it says what it needs, at any size', () => {
+	const state = stateOf(session());
+	expect(linesOf(state, {width: 60, height: 10, ascii: false})).toEqual([
+		'Droprack needs 80 columns and 24 lines.',
+		'This window has 60 and 10.',
+		'Nothing is lost: make it larger.',
+	]);
+	for (const [width, height] of [
+		[1, 1],
+		[2, 2],
+		[10, 3],
+		[79, 24],
+		[80, 23],
+	] as const) {
+		const lines = linesOf(state, {width, height, ascii: false});
+		expect(lines.length).toBeLessThanOrEqual(height);
+		expect(widest(lines)).toBeLessThanOrEqual(width);
+	}
+});
+
+test('the field being typed shows what was understood, or what is wrong', () => {
+	const typing = (text: string) =>
+		linesOf(stateOf(session({place: {...edit, editing: {line: editLine(text), wrong: undefined}}})), {
+			width: 100,
+			height: 30,
+			ascii: false,
+		}).join('\n');
+	expect(typing('190 km/h')).toContain('Understood 190 km/h = 118.06 mph');
+	expect(typing('118 mhp')).toContain('Did you mean "mph"?');
+	expect(typing('')).toContain('This field is needed.');
+});
+
+test('a field that is not as shipped is marked, and one that does not read', () => {
+	const json = {...oval.json, lap: '7'};
+	const changed = session({
+		history: startHistory(withJson(documents, 'track', json)),
+		place: {...edit, section: 0, row: 2},
+	});
+	const lines = linesOf(stateOf(changed), {width: 100, height: 30, ascii: false});
+	expect(lines.find(line => line.includes('lap'))).toMatch(/▸!lap +~7/);
+	expect(lines.join('\n')).toContain('Wrong found "7"');
+});
+
+test('documents that do not rank say what is wrong, with its place', () => {
+	const json = {...oval.json, type: 'superspeedway'};
+	const lines = linesOf(stateOf(session({history: startHistory(withJson(documents, 'track', json))})), {
+		width: 80,
+		height: 24,
+		ascii: false,
+	});
+	expect(lines.join('\n')).toContain('! car: engines: found no engine for the track type superspeedway');
+});
+
+test('long names, wide characters and what a terminal would act on break no column', () => {
+	const json = {...oval.json, name: `漢字トラック${'長い名前'.repeat(20)}\x1B[31m\u202E`};
+	const sets = [{name: 'ギア一式とても長い名前のセット', ratios: [2.9, 2.04, 1.58, 1.24, 1]}];
+	const strange = withJson(withJson(documents, 'track', json), 'car', {
+		...car.json,
+		gearboxes: sets,
+		installed: {pair: '36/36', gearbox: sets[0]!.name},
+	});
+	for (const [width, height] of sizes) {
+		const lines = linesOf(stateOf(session({history: startHistory(strange)})), {width, height, ascii: false});
+		expect(lines).toHaveLength(height);
+		expect(widest(lines)).toBeLessThanOrEqual(width);
+		expect(lines.join('')).not.toMatch(/[\p{Cc}\u202E]/u);
+	}
+});
+
+test('two hundred pairs fit, and the one in the car and the one compared with stay in view', () => {
+	const pairs = Array.from({length: 200}, (_, i) => ({driving: 60 + i, driven: 100}));
+	const many = withJson(documents, 'car', {...car.json, rack: {pairs}, installed: {pair: '259/100', gearbox: 'A'}});
+	const state = stateOf(session({history: startHistory(many), comparison: '60/100 B'}));
+	const text = linesOf(state, {width: 100, height: 30, ascii: false}).join('\n');
+	expect(text).toContain('259/100');
+	expect(text).toContain(' c ');
+	expect(text).toContain('400 rows');
+});
+
+test('the question about unsaved changes names them', () => {
+	const changed = after(session({place: edit}), {do: 'open field', text: ''}, ...typed('80 mph'), {
+		do: 'accept field',
+		rows: 0,
+		columns: 0,
+	});
+	const lines = linesOf(stateOf({...changed, over: {is: 'quitting'}}), {width: 80, height: 24, ascii: false});
+	expect(lines.slice(-2)).toEqual([
+		' Not saved: Fixture Oval.  Leave?',
+		's save, then leave  l leave, keep for next time  d discard  Esc stay',
+	]);
+});

@@ -1,0 +1,46 @@
+/** States of a session on the fixtures, ranked, and their frames as text. */
+import {displayWidth} from '../../../source/commands/text/width.ts';
+import {rankSteps} from '../../../source/planning/rank-rack.ts';
+import {finish} from '../../../source/planning/run-rack.ts';
+import {painted} from '../../../source/screens/parts/theme.ts';
+import type {Answer} from '../../../source/screens/session/answer.ts';
+import {readBoth, wrongFromFault} from '../../../source/screens/session/answer.ts';
+import {choicesFor} from '../../../source/screens/session/catalog.ts';
+import type {State} from '../../../source/screens/session/live.ts';
+import {placedRows, shownRows} from '../../../source/screens/session/rows.ts';
+import type {Session} from '../../../source/screens/session/session.ts';
+import {frameLines, frameOf, type Size} from '../../../source/screens/views/frame.ts';
+import {catalog} from '../session/documents.ts';
+
+const esc = '\x1B';
+
+export function stateOf(session: Session): State {
+	const answer = answerTo(session);
+	const ranked = answer.is === 'ready' ? answer.ranked : undefined;
+	const all = ranked === undefined ? [] : placedRows(ranked.ranking.rows);
+	const {place} = session;
+	const documents = session.history.present;
+	const choices = place.at === 'choose' ? choicesFor(catalog, documents, place.kind, place.search.text) : [];
+	const situations = ranked?.ground.plan.conditions.map(({name}) => name) ?? [];
+	return {
+		session,
+		answer,
+		scene: {ranked, all, shown: shownRows(all, session.order, session.filter), situations, choices, isWorking: false},
+	};
+}
+
+function answerTo({history, situation}: Session): Answer {
+	const read = readBoth(history.present);
+	if (!read.ok) return {is: 'faulty', wrong: read.wrong};
+	const ranked = finish(rankSteps(read.car, read.track, {situation}));
+	return ranked.ok ? {is: 'ready', ranked: ranked.value} : {is: 'faulty', wrong: ranked.faults.map(wrongFromFault)};
+}
+
+/** A frame as its lines of text, without color. */
+export const linesOf = (state: State, size: Size): string[] =>
+	frameLines(frameOf(state, size, 0)).map(pieces => bare(painted(pieces, {color: false, ascii: size.ascii})).trimEnd());
+
+/** Without what makes it bold or inverted. */
+export const bare = (text: string): string => text.replace(new RegExp(`${esc}\\[[\\d;]*m`, 'g'), '');
+
+export const widest = (lines: readonly string[]): number => Math.max(...lines.map(displayWidth));
