@@ -9,7 +9,7 @@ import {engineRpm, growthReferenceMps, speedAtRpmMps} from './tire.ts';
 export const fastestMps = 500;
 
 /** Above the curve's last point the torque is held; edges that far apart, each over the one below, keep the pieces short. */
-const stepAbove = 1.1;
+const stepAbove = 1.25;
 
 /** Kinks closer together than this are one. */
 const apartMps = 1e-9;
@@ -56,6 +56,7 @@ export class GearMotion {
 		this.#points = this.#pointsBelowFastest();
 		const highestMps = this.#points === 0 ? fastestMps : this.edge(this.#points);
 		this.lastEdge = this.#points + Math.max(1, Math.ceil(Math.log(fastestMps / highestMps) / Math.log(stepAbove)));
+		this.#edges.length = this.lastEdge + 1;
 		this.#edges[this.lastEdge] = fastestMps;
 	}
 

@@ -23,6 +23,8 @@ export type Plan = EngineInUse & {
 	readonly base: Condition;
 	/** What is run and checked: every situation, or the one that was asked for. */
 	readonly conditions: readonly Condition[];
+	/** The indices of the conditions, those of one vehicle together. */
+	readonly runOrder: readonly number[];
 };
 
 export type PlanOptions = {
@@ -54,7 +56,7 @@ export function planFor(carDocument: Car, track: Track, options: PlanOptions = {
 		...(situation === track.situations[0] ? base : conditionFor(car, track, situation, inUse, roads, base)),
 		weight: weightsOf(situations)[i]!,
 	}));
-	return done({...inUse, car, track, limit, band, roads, base, conditions});
+	return done({...inUse, car, track, limit, band, roads, base, conditions, runOrder: byVehicle(conditions)});
 }
 
 /** What every answer says of the engine in use and the day. */
@@ -87,4 +89,9 @@ function unknownSituation(name: string, track: Track) {
 		name,
 		track.situations.map(situation => situation.name),
 	);
+}
+
+function byVehicle(conditions: readonly Condition[]): number[] {
+	const vehicles = [...new Set(conditions.map(({vehicle}) => vehicle))];
+	return vehicles.flatMap(vehicle => conditions.flatMap((condition, i) => (condition.vehicle === vehicle ? [i] : [])));
 }

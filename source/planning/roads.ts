@@ -13,11 +13,17 @@ export class Roads {
 		return found >= 0 ? found : this.#known.push({vehicle, road}) - 1;
 	}
 
-	/** The gears of a train on each road, made when they are first asked for. */
+	/**
+	 * The gears of a train on each road, made when they are first asked for, and let go when a road of another vehicle is:
+	 * what a whole row would hold is dear to collect.
+	 */
 	gearsFor(train: GearTrain): (roadNumber: number) => RoadGears {
-		const made: RoadGears[] = [];
+		let made: RoadGears[] = [];
+		let current: Vehicle | undefined;
 		return number => {
 			const {vehicle, road} = this.#known[number]!;
+			if (vehicle !== current) made = [];
+			current = vehicle;
 			made[number] ??= new RoadGears(vehicle, train, road);
 			return made[number];
 		};

@@ -35,15 +35,16 @@ export function runRow(plan: Plan, candidate: Candidate, recall = runAlways): Ro
 	const gearsOn = plan.roads.gearsFor(candidate.train);
 	const run = (condition: Condition, place: Place) =>
 		recall(place, candidate, () => runPlace(condition, place, gearsOn(place.road)));
-	return {
-		candidate,
-		situations: plan.conditions.map(condition => ({
+	const situations: SituationRun[] = [];
+	for (const i of plan.runOrder) {
+		const condition = plan.conditions[i]!;
+		situations[i] = {
 			condition,
 			places: condition.places.map(place => run(condition, place)),
 			restart: condition.restart && run(condition, condition.restart),
-		})),
-		pitRoad: runPitRoad(plan, candidate),
-	};
+		};
+	}
+	return {candidate, situations, pitRoad: runPitRoad(plan, candidate)};
 }
 
 /** Straights and restart of a row, one after the other, with the situation that each belongs to. */

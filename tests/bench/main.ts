@@ -1,20 +1,26 @@
 /** All benchmarks: correctness first, then times; ends with 1 where a budget is missed. Another seed may be given. */
-import {finish, line, machine} from './harness.ts';
+import {Figures} from './budgets.ts';
+import {line, machine} from './harness.ts';
 import {benchOneStraight} from './one-straight.ts';
 import {benchProcesses} from './processes.ts';
+import {benchGrowth, benchRack} from './rack.ts';
+import {writeReadme} from './readme-table.ts';
 import {benchScreen} from './screen.ts';
-import {benchGrowth, benchWholeSolver} from './whole-solver.ts';
 
-const seed = Number(process.argv[2] ?? 20_260_731);
+const words = process.argv.slice(2);
+const seed = Number(words.find(word => /^\d+$/.test(word)) ?? 20_260_731);
+const figures = new Figures();
 line(`${machine()}, seed ${seed}`);
 line();
-benchWholeSolver(seed);
+await benchRack(figures, seed);
 line();
-benchOneStraight();
+benchOneStraight(figures);
 line();
-benchGrowth(seed);
+await benchGrowth(figures, seed);
 line();
-benchProcesses();
+benchProcesses(figures);
 line();
-await benchScreen(process.cwd());
-finish();
+await benchScreen(process.cwd(), figures);
+line();
+if (!figures.conclude()) process.exitCode = 1;
+if (words.includes('--write-readme')) writeReadme(figures.measured);

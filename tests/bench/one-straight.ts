@@ -1,120 +1,120 @@
-import {createRequire} from 'node:module';
-import * as mathjs from 'mathjs';
-import {gaussLegendre} from '../../source/drivetrain/gauss-legendre.ts';
+/** All sequences of gears on a straight: our solver, and general-purpose integrators that do the same at equal accuracy. */
 import {RoadGears} from '../../source/drivetrain/road-gears.ts';
-import {runStraight} from '../../source/drivetrain/run-straight.ts';
-import {sampleCourse, sampleTrain, sampleVehicle} from '../drivetrain/sample-car.ts';
-import {assertClose, budget, line, timed, told} from './harness.ts';
+import {runStraight, runStraightPlainly} from '../../source/drivetrain/run-straight.ts';
+import type {Finish} from '../../source/drivetrain/sequence.ts';
+import type {Course, GearTrain} from '../../source/drivetrain/straight.ts';
+import {sampleCourse, sampleTrain, sampleVehicle, trainOf} from '../drivetrain/sample-car.ts';
+import {type Integrator, referenceTime, sequencesOf, timeBy} from './all-sequences.ts';
+import type {Figures} from './budgets.ts';
+import {assertClose, line, type Timing, timedInTurns, told} from './harness.ts';
+import {byMathjs, byOdex, type Tuned, tuned} from './integrators.ts';
 
-type Slopes = (s: number, state: number[]) => number[];
+/** Nine digits are promised, and a tenth of the promise is asserted before anything is timed. */
+const promised = 1e-10;
 
-const {solveODE} = mathjs as unknown as {
-	solveODE(slopes: Slopes, span: number[], start: number[], options: object): {y: number[][]};
-};
-type Odex = {
-	absoluteTolerance: number;
-	relativeTolerance: number;
-	solve(slopes: Slopes, s: number, start: number[], end: number): {y: number[]};
-};
-const {Solver} = createRequire(import.meta.url)('odex') as {Solver: new (dimension: number) => Odex};
+/** The solver is better than this; the others need not be, so that they are not held to its last digits. */
+const leastError = 1e-12;
 
-/** One gear from 45 m/s over 400 m: no shift, so that general integrators can do it in one call, over the distance. */
-const course = sampleCourse({exitMps: 45, lengthM: 400, lowestGear: 4, highestGear: 4});
-const gears = new RoadGears(sampleVehicle(), sampleTrain, course);
-const motion = gears.motion(4);
-const slopes: Slopes = (_, [v]) => [motion.acceleration(v!) / v!, 1 / v!];
-const start = [course.exitMps, 0];
+/** One pass of the solver is too short to time. */
+const manyTimes = 250;
 
-const byOdex = (tolerance: number) => {
-	const solver = new Solver(2);
-	solver.absoluteTolerance = tolerance;
-	solver.relativeTolerance = tolerance;
-	return solver.solve(slopes, 0, start, course.lengthM).y[1]!;
-};
-const byMathjs = (tolerance: number) =>
-	solveODE(slopes, [0, course.lengthM], start, {tol: tolerance, maxIter: 1e7}).y.at(-1)![1]!;
-const bySolver = (at: RoadGears) => {
-	const run = runStraight(at, course);
-	if (run.kind !== 'ran') throw new Error(run.kind);
-	return run.fastest;
-};
-
-/** Time over the distance by quadrature on pieces so small that only rounding is left. */
-function reference(): number {
-	const {nodes, weights} = gaussLegendre(20);
-	const endMps = bySolver(gears).finalMps;
-	const edges = [course.exitMps, ...motion.breaks.filter(v => v > course.exitMps && v < endMps), endMps];
-	let [timeS, distanceM] = [0, 0];
-	for (let i = 1; i < edges.length; i++) {
-		for (let part = 0; part < 8; part++) {
-			const half = (edges[i]! - edges[i - 1]!) / 16;
-			const middle = edges[i - 1]! + (2 * part + 1) * half;
-			nodes.forEach((node, k) => {
-				const speed = middle + half * node;
-				timeS += (weights[k]! * half) / motion.acceleration(speed);
-				distanceM += (weights[k]! * half * speed) / motion.acceleration(speed);
-			});
-		}
-	}
-	// The end speed is the solver's own; what it misses of the length is made up at that speed.
-	return timeS + (course.lengthM - distanceM) / endMps;
+export function benchOneStraight(figures: Figures): void {
+	const short = compared('a short pair', trainOf([13, 9.1, 7.1, 5.6, 4.5]), 38);
+	figures.hold('odex', short.odexMs / short.keptMs);
+	figures.hold('mathjs', short.mathjsMs / short.keptMs);
+	line();
+	compared('a long pair, on which fewer sequences come to the end', sampleTrain, 45);
 }
 
-/** The loosest power of ten that reaches an error. */
-function tuned(by: (tolerance: number) => number, truth: number, error: number) {
-	for (let power = 3; power <= 14; power++) {
-		const reached = Math.abs(by(10 ** -power) / truth - 1);
-		if (reached <= error) return {tolerance: 10 ** -power, reached};
-	}
-	throw new Error(`no tolerance reaches ${error}`);
+/** A straight with its sequences, on one kind of road. */
+type Straight = {readonly gears: RoadGears; readonly course: Course; readonly sequences: readonly Finish[]};
+
+/** Straights that differ a little, run in turn, so that nothing but the gears is remembered from one to the next. */
+function alikeStraights(train: GearTrain, exitMps: number): Straight[] {
+	const courses = Array.from({length: 8}, (_, i) => sampleCourse({exitMps: exitMps + 0.1 * i, lengthM: 396 + i}));
+	const gears = new RoadGears(sampleVehicle(), train, courses[0]!);
+	return courses.map(course => ({gears, course, sequences: sequencesOf(gears, course)}));
 }
 
-export function benchOneStraight(): void {
-	const truth = reference();
-	const solverError = Math.abs(bySolver(gears).timeS / truth - 1);
-	assertClose('solver', bySolver(gears).timeS, truth, 1e-10);
-	// Rounding aside the solver is exact; the others are given a thousandth of what is promised.
-	const error = Math.max(solverError, 1e-12);
-	const odex = tuned(byOdex, truth, error);
-	const general = tuned(byMathjs, truth, error);
-	line('One straight of 400 m in one gear, and the same equations in general integrators');
-	line(
-		`  relative error in time: solver ${solverError.toExponential(1)}, odex ${odex.reached.toExponential(1)} at tolerance ${odex.tolerance}, mathjs solveODE ${general.reached.toExponential(1)} at ${general.tolerance}`,
+function compared(name: string, train: GearTrain, exitMps: number) {
+	const straights = alikeStraights(train, exitMps);
+	const {odex, mathjs, solverError} = equallyAccurate(straights);
+	line(`One straight of 400 m, exit in third, ${name}: ${sequencesTold(straights[0]!)}`);
+	line(`  relative error in the fastest time: solver ${solverError.toExponential(1)}, ${odex.told}, ${mathjs.told}`);
+	const all = (one: (straight: Straight) => number) => () =>
+		straights.reduce((sum, straight) => sum + one(straight), 0);
+	const timings = timedInTurns(
+		{
+			kept: often(all(solved)),
+			anew: often(
+				all(straight => solved({...straight, gears: new RoadGears(sampleVehicle(), train, straight.course)})),
+			),
+			odex: all(fastestBy(odex.integrate)),
+			mathjs: all(fastestBy(mathjs.integrate)),
+		},
+		7,
 	);
-	const many = 2000;
-	const repeated = (work: () => number, times: number) => () => {
-		let sum = 0;
-		for (let i = 0; i < times; i++) sum += work();
-		return sum;
-	};
-	const per = (timing: ReturnType<typeof timed>, times: number) => ({
-		minMs: timing.minMs / times,
-		meanMs: timing.meanMs / times,
-		sdMs: timing.sdMs / times,
+	const each = straights.length;
+	line(`  solver, gears at hand as in a rack: ${told(timings.kept, each * manyTimes)}`);
+	line(`  solver, gears made anew: ${told(timings.anew, each * manyTimes)}`);
+	line(`  odex: ${told(timings.odex, each)}`);
+	line(`  mathjs solveODE: ${told(timings.mathjs, each)}`);
+	const [keptMs, anewMs] = [timings.kept.minMs / manyTimes, timings.anew.minMs / manyTimes];
+	line(`  gears at hand: ${timesOver(timings, keptMs)}; gears made anew: ${timesOver(timings, anewMs)}`);
+	return {keptMs, odexMs: timings.odex.minMs, mathjsMs: timings.mathjs.minMs};
+}
+
+/** Holds every solver against the reference, and tunes the general ones until they are as good, or good enough. */
+function equallyAccurate(straights: readonly Straight[]): {odex: Tuned; mathjs: Tuned; solverError: number} {
+	const truth = straights.map(({gears, course, sequences}) =>
+		Math.min(...sequences.map(sequence => referenceTime(gears, course, sequence))),
+	);
+	straights.forEach((straight, i) => {
+		assertClose('solver', solved(straight), truth[i]!, promised);
+		assertClose('plain', solvedPlainly(straight), truth[i]!, promised);
 	});
-	const kept = per(
-		timed(
-			repeated(() => bySolver(gears).timeS, many),
-			10,
-		),
-		many,
-	);
-	const fresh = () => bySolver(new RoadGears(gears.vehicle, gears.train, course)).timeS;
-	const made = per(timed(repeated(fresh, many), 10), many);
-	const odexTiming = per(
-		timed(
-			repeated(() => byOdex(odex.tolerance), 50),
-			10,
-		),
-		50,
-	);
-	const generalTiming = timed(() => byMathjs(general.tolerance), 3, 1);
-	line(`  solver, gears at hand: ${told(kept)}`);
-	line(
-		`  solver, gears made anew: ${told(made)}: odex takes ${(odexTiming.minMs / made.minMs).toFixed(0)} ×, mathjs ${(generalTiming.minMs / made.minMs).toFixed(0)} ×`,
-	);
-	line(`  odex: ${told(odexTiming)}`);
-	line(`  mathjs solveODE: ${told(generalTiming)}`);
-	budget('odex ÷ solver with gears at hand', odexTiming.minMs / kept.minMs, 200, '×', 'least');
-	budget('mathjs ÷ solver with gears at hand', generalTiming.minMs / kept.minMs, 5000, '×', 'least');
+	const errorOf = (one: (straight: Straight) => number) =>
+		Math.max(...straights.map((straight, i) => Math.abs(one(straight) / truth[i]! - 1)));
+	const solverError = errorOf(solved);
+	const allowed = Math.max(solverError, leastError);
+	const errorWith = (integrate: Integrator) => errorOf(fastestBy(integrate));
+	return {
+		odex: tuned('odex', byOdex, errorWith, allowed),
+		mathjs: tuned('mathjs', byMathjs, errorWith, allowed),
+		solverError,
+	};
+}
+
+const timesOver = ({odex, mathjs}: Record<'odex' | 'mathjs', Timing>, solverMs: number) =>
+	`odex takes ${(odex.minMs / solverMs).toFixed(0)} ×, mathjs ${(mathjs.minMs / solverMs).toFixed(0)} ×`;
+
+const often = (work: () => number) => () => {
+	let sum = 0;
+	for (let i = 0; i < manyTimes; i++) sum += work();
+	return sum;
+};
+
+/** The least time over the sequences, each by itself. */
+const fastestBy =
+	(integrate: Integrator) =>
+	({gears, course, sequences}: Straight) =>
+		Math.min(...sequences.map(sequence => timeBy(integrate, gears, course, sequence)));
+
+function solved({gears, course}: Straight): number {
+	const run = runStraight(gears, course);
+	if (run.kind !== 'ran') throw new Error(run.kind);
+	return run.fastest.timeS;
+}
+
+function solvedPlainly({gears, course}: Straight): number {
+	const run = runStraightPlainly(gears.vehicle, gears.train, course);
+	if (run.kind !== 'ran') throw new Error(run.kind);
+	return run.fastest.timeS;
+}
+
+/** The gears of each sequence, such as "3-4-5". */
+function sequencesTold({sequences}: Straight): string {
+	const gearsOf = ({firstGear, entered}: Finish) =>
+		Array.from({length: entered.length + 1}, (_, i) => firstGear + i).join('-');
+	return `sequences ${sequences.map(gearsOf).join(', ')}`;
 }

@@ -1,25 +1,33 @@
-/** Bundles the benchmarks and runs them with plain Node, so that nothing but the code itself is timed. */
+/** Builds the program, bundles the benchmarks and runs them with plain Node, so that nothing but the code itself is timed. */
 import {spawnSync} from 'node:child_process';
+import {mkdirSync, mkdtempSync, rmSync} from 'node:fs';
+import {fileURLToPath} from 'node:url';
 import {build} from 'vite';
 
-const root = new URL('../..', import.meta.url).pathname;
-const outDir = `${root}node_modules/.cache/droprack-bench`;
+const root = fileURLToPath(new URL('../..', import.meta.url));
+const cache = `${root}node_modules/.cache`;
 
-await build({
-	root,
-	configFile: false,
-	logLevel: 'warn',
-	build: {
-		ssr: 'tests/bench/main.ts',
-		target: 'node20',
-		outDir,
-		emptyOutDir: true,
-		minify: false,
-		rollupOptions: {output: {entryFileNames: 'main.mjs'}},
-	},
-});
-const {status} = spawnSync(process.execPath, [`${outDir}/main.mjs`, ...process.argv.slice(2)], {
-	cwd: root,
-	stdio: 'inherit',
-});
-process.exitCode = status ?? 1;
+await build({configFile: `${root}.config/vite.config.ts`, mode: 'production', logLevel: 'warn'});
+mkdirSync(cache, {recursive: true});
+// Inside node_modules, so that the packages are found; a name of its own, so that two runs do not meet.
+const outDir = mkdtempSync(`${cache}/bench-`);
+try {
+	await build({
+		root,
+		configFile: false,
+		logLevel: 'warn',
+		build: {
+			ssr: 'tests/bench/main.ts',
+			target: 'node20',
+			outDir,
+			emptyOutDir: true,
+			minify: false,
+			rolldownOptions: {output: {entryFileNames: 'main.mjs'}},
+		},
+	});
+	const words = [`${outDir}/main.mjs`, ...process.argv.slice(2)];
+	const {status} = spawnSync(process.execPath, words, {cwd: root, stdio: 'inherit'});
+	process.exitCode = status ?? 1;
+} finally {
+	rmSync(outDir, {recursive: true});
+}

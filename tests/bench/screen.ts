@@ -3,7 +3,8 @@ import {cpSync, mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync} fro
 import {tmpdir} from 'node:os';
 import {join} from 'node:path';
 import {Pty} from '../screens/pty.ts';
-import {budget, line, median} from './harness.ts';
+import type {Figures} from './budgets.ts';
+import {line, median} from './harness.ts';
 
 const window = {columns: 100, rows: 35};
 const pairs = 76;
@@ -14,12 +15,12 @@ const heldKeys = 100;
 const manyKeys = 2000;
 const repeatMs = 33;
 
-export async function benchScreen(root: string): Promise<void> {
+export async function benchScreen(root: string, figures: Figures): Promise<void> {
 	line(`The screen at ${window.columns} × ${window.rows}, ${pairs} pairs × 1 set × 2 straights × 4 situations`);
 	const place = makePlace(root);
 	try {
-		await benchStart(place);
-		await benchKeys(root, place);
+		await benchStart(place, figures);
+		await benchKeys(root, place, figures);
 	} finally {
 		rmSync(place, {recursive: true});
 	}
@@ -60,7 +61,7 @@ async function since(start: number, pty: Pty, what: string | RegExp | (() => boo
 	return performance.now() - start;
 }
 
-async function benchStart(place: string): Promise<void> {
+async function benchStart(place: string, figures: Figures): Promise<void> {
 	const [bare, first, whole, memory]: [number[], number[], number[], number[]] = [[], [], [], []];
 	for (let i = 0; i < startRounds; i++) {
 		let start = performance.now();
@@ -78,9 +79,9 @@ async function benchStart(place: string): Promise<void> {
 	line(
 		`  bare node ${node.toFixed(0)} ms, first frame ${median(first).toFixed(0)} ms, whole ranking ${median(whole).toFixed(0)} ms`,
 	);
-	budget('first frame ÷ node', median(first) / node, 3, '×');
-	budget('whole ranking ÷ node', median(whole) / node, 5, '×');
-	budget('memory at the first frame', median(memory), 95, 'MB');
+	figures.hold('firstFrame', median(first) / node);
+	figures.hold('wholeRanking', median(whole) / node);
+	figures.hold('firstFrameMemory', median(memory));
 }
 
 type Pressed = {readonly ms: number; readonly bytes: number};
@@ -100,7 +101,7 @@ const pause = (ms: number) => new Promise(resolve => setTimeout(resolve, ms));
 /** Down and up again in turns over twenty rows, as a person looks through a list. */
 const direction = (i: number): string => (i % 40 < 20 ? 'j' : 'k');
 
-async function benchKeys(root: string, place: string): Promise<void> {
+async function benchKeys(root: string, place: string, figures: Figures): Promise<void> {
 	const plain = new Pty(process.execPath, [join(root, 'tests', 'bench', 'plain-ink-table.mjs')], {
 		...window,
 		environment: {NODE_ENV: 'production'},
@@ -120,18 +121,18 @@ async function benchKeys(root: string, place: string): Promise<void> {
 	line(
 		`  a key: plain Ink table ${bound.toFixed(1)} ms, ours ${p95(ours.map(({ms}) => ms)).toFixed(1)} ms (95th percentiles)`,
 	);
-	budget('a key ÷ plain Ink table', p95(ours.map(({ms}) => ms)) / bound, 1, '×');
-	budget('bytes of a key', p95(ours.map(({bytes}) => bytes)), 2000, 'bytes');
+	figures.hold('key', p95(ours.map(({ms}) => ms)) / bound);
+	figures.hold('keyBytes', p95(ours.map(({bytes}) => bytes)));
 
-	await benchEdits(pty, bound);
-	await benchHeld(pty);
+	await benchEdits(pty, bound, figures);
+	await benchHeld(pty, figures);
 	for (let i = 0; i < manyKeys; i++) pty.press(direction(i));
 	await pause(3000);
-	budget(`memory after ${manyKeys} keys`, residentMb(pty), 140, 'MB');
+	figures.hold('manyKeysMemory', residentMb(pty));
 	pty.close();
 }
 
-async function benchEdits(pty: Pty, bound: number): Promise<void> {
+async function benchEdits(pty: Pty, bound: number, figures: Figures): Promise<void> {
 	pty.press('e\t\x1B[B');
 	await pty.waitFor(/▸ +exit/);
 	const made: Pressed[] = [];
@@ -150,14 +151,14 @@ async function benchEdits(pty: Pty, bound: number): Promise<void> {
 	}
 	const ms = p95(made.slice(5).map(one => one.ms));
 	line(`  an accepted edit, ranked anew: ${ms.toFixed(1)} ms (95th percentile)`);
-	budget('an edit ÷ plain Ink table', ms / bound, 2, '×');
-	budget('bytes of an edit', p95(made.map(({bytes}) => bytes)), 6000, 'bytes');
+	figures.hold('edit', ms / bound);
+	figures.hold('editBytes', p95(made.map(({bytes}) => bytes)));
 	pty.press('r');
 	await pty.waitFor('76 rows');
 }
 
 /** Every key of a held one gets its frame. */
-async function benchHeld(pty: Pty): Promise<void> {
+async function benchHeld(pty: Pty, figures: Figures): Promise<void> {
 	let frames = 0;
 	const start = pty.written.length;
 	for (let i = 0; i < heldKeys; i++) {
@@ -166,7 +167,7 @@ async function benchHeld(pty: Pty): Promise<void> {
 	}
 	await pause(200);
 	frames = pty.written.slice(start).split('\x1B[?2026l').length - 1;
-	budget(`frames for ${heldKeys} keys, one every ${repeatMs} ms`, frames, heldKeys, 'frames', 'least');
+	figures.hold('heldKeys', frames);
 }
 
 const residentMb = ({pid}: Pty): number =>
