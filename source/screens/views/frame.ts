@@ -16,7 +16,7 @@ import {handOverView, qrLines} from './hand-over-view.ts';
 import {headerView, settingOf} from './header-view.ts';
 import {helpView} from './help-view.ts';
 import {keyLines} from './key-line.ts';
-import {noticeLine} from './notice-line.ts';
+import {noticeLines} from './notice-view.ts';
 import {pictureView} from './picture-view.ts';
 import {type RankingTable, rankingTable} from './ranking-view.ts';
 import {reasonView, sentenceView} from './reason-view.ts';
@@ -63,7 +63,7 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 	const here = scene.shown[cursor];
 	const counts = {shown: scene.shown.length, all: scene.all.length};
 	const head = [...headerView(session, answer, counts, here, width), rule(width)];
-	const foot = [noticeLine(session, width), ...keyLines(scopesOf(session), width, height < roomy ? 1 : 2)];
+	const foot = [...noticeLines(session, width), ...keyLines(scopesOf(session), width, height < roomy ? 1 : 2)];
 	const body = height - head.length - foot.length;
 	const qr = qrLines(state, size, keyLines(scopesOf(session), width, 1));
 	if (qr !== undefined) return {top: qr, table: undefined, beside: [], bottom: []};

@@ -98,6 +98,16 @@ test('a QR code that does not fit says which window it needs; in ASCII none is d
 	expect(linesOf(smallCode(), {width: 80, height: 24, ascii: true}).join('\n')).toContain('not with --ascii');
 });
 
+test('a long notice, and what is wrong with a name, are told whole', () => {
+	const words =
+		'The disk is full, and this is a long path to say where: /home/somebody/with/a/long/name/plans/plan.txt.';
+	const told = linesOf(stateOf(session({notice: words})), {width: 80, height: 24, ascii: false});
+	expect(told.slice(21, 23).join(' ')).toBe(words);
+	const over = {is: 'entry', asks: 'file', line: editLine('plan.txt'), wrong: words} as const;
+	const asked = linesOf(stateOf(session({place: handOver, over})), {width: 80, height: 24, ascii: false});
+	expect(asked.slice(20, 23).join(' ')).toBe(`Write it to the file: plan.txt ${words}`);
+});
+
 test('a card is whole: scrolled to its end, its caution is there', () => {
 	const card = stateOf(session({place: {...handOver, item: 'swap sheet', scroll: 999}}));
 	const text = linesOf(card, {width: 80, height: 24, ascii: false}).join('\n');
