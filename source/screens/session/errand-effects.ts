@@ -2,8 +2,9 @@
 import type {Errands, Writing} from '../errands.ts';
 import type {Action} from './action.ts';
 import {current, type OpenDocument, titleOf} from './documents.ts';
+import type {ErrandEffect} from './effect.ts';
 import {type Handed, items} from './hand-over.ts';
-import type {ErrandEffect, Scene} from './intend.ts';
+import type {Scene} from './intend.ts';
 import {isObject} from './json.ts';
 import {cursorIn} from './rows.ts';
 import type {Session} from './session.ts';

@@ -5,37 +5,12 @@ import {editLine} from '../parts/edit-line.ts';
 import type {Action} from './action.ts';
 import type {Choice} from './catalog.ts';
 import {current, unsaved} from './documents.ts';
+import type {Effect} from './effect.ts';
 import {fileNameFor, items} from './hand-over.ts';
 import {marginEntry} from './reduce.ts';
 import {takeInPlace} from './reduce-take-in.ts';
 import {cursorIn, orders, type Placed, stepped} from './rows.ts';
 import {type Asked, type Place, pictures, type Session} from './session.ts';
-
-/** What is done for the session outside of it, and then told. */
-export type ErrandEffect =
-	| 'hand over'
-	| 'copy it'
-	| 'write it'
-	| 'write over'
-	| 'export'
-	| 'track history'
-	| 'add to history'
-	| 'keep entry'
-	| 'read file'
-	| 'forget saved';
-
-/** What reaches beyond the session. */
-export type Effect =
-	| 'leave'
-	| 'discard and leave'
-	| 'save'
-	| 'save and leave'
-	| 'suspend'
-	| 'redraw'
-	| 'stop'
-	| 'take choice'
-	| 'forget recovery'
-	| ErrandEffect;
 
 /** What a key's meaning may depend on beside the session. */
 export type Scene = {

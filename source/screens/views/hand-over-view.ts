@@ -54,7 +54,8 @@ const roomFor = ({width, height}: Size) => ({columns: width, rows: height});
 /** Why a QR code is not drawn, and what to do; undefined where it is. */
 function cannotDraw(draw: Draw, window: Size): string[] | undefined {
 	const instead = '"one line" is what is needed to act on the plan; c copies what would be in the code, f writes it.';
-	if (window.ascii) return ['A QR code is drawn with block characters: not with --ascii.', instead];
+	if (window.ascii)
+		return ['A QR code is drawn with block characters: there is none with --ascii, or read aloud.', instead];
 	const drawn = draw(roomFor(window));
 	if (drawn.ok) return undefined;
 	const {columns, rows} = drawn.needs;

@@ -95,7 +95,7 @@ test('a QR code that does not fit says which window it needs; in ASCII none is d
 	const told = linesOf(large, {width: 80, height: 24, ascii: false}).join('\n');
 	expect(told).toMatch(/needs a window of \d+ × \d+; this one has 80 × 24/);
 	expect(told).toContain('one line');
-	expect(linesOf(smallCode(), {width: 80, height: 24, ascii: true}).join('\n')).toContain('not with --ascii');
+	expect(linesOf(smallCode(), {width: 80, height: 24, ascii: true}).join('\n')).toContain('--ascii, or read aloud.');
 });
 
 test('a long notice, and what is wrong with a name, are told whole', () => {
