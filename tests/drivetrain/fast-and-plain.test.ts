@@ -17,17 +17,17 @@ const sameSequence = (one: SequenceRun, other: SequenceRun) =>
 	one.firstGear === other.firstGear && one.lastGear === other.lastGear;
 
 /** The same sequence, or one that ties with it: gears that grip holds are exactly equal. */
-function expectSame(fast: StraightRun, plain: StraightRun) {
+function expectSame(fast: StraightRun, plain: StraightRun, within = 1e-9) {
 	expect(fast.kind).toBe(plain.kind);
 	if (fast.kind !== 'ran' || plain.kind !== 'ran') return;
 	for (const which of ['fastest', 'chosen'] as const) {
 		const [one, other] = [fast[which], plain[which]];
-		expect(relativeError(one.timeS, other.timeS)).toBeLessThan(1e-9);
+		expect(relativeError(one.timeS, other.timeS)).toBeLessThan(within);
 		if (!sameSequence(one, other)) continue;
-		expect(relativeError(one.topMps, other.topMps)).toBeLessThan(1e-9);
-		expect(relativeError(one.finalMps, other.finalMps)).toBeLessThan(1e-9);
+		expect(relativeError(one.topMps, other.topMps)).toBeLessThan(within);
+		expect(relativeError(one.finalMps, other.finalMps)).toBeLessThan(within);
 		expect(Math.abs(one.limiterM - other.limiterM)).toBeLessThan(1e-6 * (1 + other.limiterM));
-		expect(relativeError(one.reachRpm, other.reachRpm)).toBeLessThan(1e-9);
+		expect(relativeError(one.reachRpm, other.reachRpm)).toBeLessThan(within);
 		// A car that neither gains nor loses may end a rounding above its exit speed or below it.
 		const changes = relativeError(one.finalMps, one.topMps) > 1e-12;
 		expect([one.topGear, one.entryMissed, one.pushed]).toEqual([other.topGear, other.entryMissed, other.pushed]);
@@ -106,7 +106,8 @@ describe('fast and plain agree', () => {
 				const gears = new RoadGears(vehicle, train, level);
 				const surplusN = vehicle.massKg * gears.motion(1).acceleration(exitMps);
 				const straight = {vehicle, train, course: {...level, extraDragN: surplusN}};
-				expectSame(fastRun(straight), plainRun(straight));
+				// What is left of the acceleration is rounding, and the time hangs on it: fewer digits are sure.
+				expectSame(fastRun(straight), plainRun(straight), 1e-8);
 			}),
 			{numRuns: runs(100, 2000)},
 		);

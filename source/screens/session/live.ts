@@ -40,7 +40,9 @@ export class LiveSession {
 	readonly #listeners = new Set<() => void>();
 	readonly #errandful: Errandful;
 	/** Comes when something is handed over for the first time. */
+	/** Loaded once there is something to hand over: most sessions never have. */
 	#handing: typeof import('./handing.ts') | undefined;
+	#handingLoad: Promise<void> | undefined;
 	#placed: {readonly ranked: Ranked; readonly rows: Placed[]} | undefined;
 	#shown:
 		| {readonly all: readonly Placed[]; readonly order: Order; readonly filter: Filter; readonly rows: Placed[]}
@@ -193,12 +195,10 @@ export class LiveSession {
 	#handed(session: Session, {all, shown}: Pick<Scene, 'all' | 'shown'>, ranked: Ranked): Handed | undefined {
 		const {place} = session;
 		if (place.at !== 'hand over') return undefined;
-		if (this.#handing === undefined) {
-			void import('./handing.ts').then(handing => {
-				this.#handing = handing;
-				this.#settle(this.#state.session);
-			});
-		}
+		this.#handingLoad ??= import('./handing.ts').then(handing => {
+			this.#handing = handing;
+			this.#settle(this.#state.session);
+		});
 		const row = rowToHandOver(session.plan, all, shown[cursorIn(shown, session.row)]);
 		return row && this.#handing?.handed(session, place, row.placed.name, ranked);
 	}

@@ -7,6 +7,9 @@ import type {Session} from '../../../source/screens/session/session.ts';
 import {KeyDecoder} from '../../../source/screens/terminal/key-decoder.ts';
 import {errandsInMemory} from '../errands.ts';
 import {catalog, session} from './documents.ts';
+// What the session loads when it is first needed: loaded here, so that no load outlives a test.
+import '../../../source/screens/session/handing.ts';
+import '../../../source/screens/session/incoming.ts';
 
 function started(start: Session = session()) {
 	const kept: {documents: Documents | undefined; saved: OpenDocument[]} = {documents: undefined, saved: []};
