@@ -8,7 +8,7 @@ const root = new URL('..', import.meta.url).pathname;
 const groups = [
 	{
 		name: 'common',
-		test: /source\/store\/|source\/commands\/(text\/|print|reply|shelf|find-document)|source\/documents\/(visible|nearest)|picocolors|fast-string|fastest-lev/,
+		test: /source\/store\/|source\/text\/|source\/commands\/(print|reply|shelf|find-document)|source\/documents\/(visible|nearest)|picocolors|fast-string|fastest-lev/,
 	},
 	{name: 'plan', test: /source\/(planning|drivetrain)\/|source\/commands\/(load-documents|read-input|faults)/},
 ];

@@ -2,13 +2,13 @@
 import {driverCard} from '../sharing/cards/driver-card.ts';
 import {engineSheet} from '../sharing/cards/engine-sheet.ts';
 import {swapSheet} from '../sharing/cards/swap-sheet.ts';
+import {cell, line} from '../text/blocks.ts';
+import {headingOf} from '../text/heading-view.ts';
 import {chosenRow} from './chosen-row.ts';
 import type {CommandRun} from './command.ts';
 import {withCopy} from './copy.ts';
 import {printJson, printText} from './print.ts';
 import {badInput, replyDone, replyRefused} from './reply.ts';
-import {cell, line} from './text/blocks.ts';
-import {headingOf} from './text/heading-view.ts';
 
 const cards = new Map([
 	['driver', driverCard],

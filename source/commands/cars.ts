@@ -1,12 +1,12 @@
 /** `droprack cars`: the cars there are, and which one is taken where none is named. */
 import {homeDirectory} from '../store/home.ts';
 import {type PreferencesWritten, preferCar, readPreferences} from '../store/preferences.ts';
+import {carListView, type ListedCar} from '../text/list-view.ts';
 import type {CommandRun} from './command.ts';
 import {findDocument, isFileName} from './find-document.ts';
 import {printJson, printText} from './print.ts';
 import {badInput, type Reply, replyDone, replyRefused, unreachable} from './reply.ts';
 import {type Shelved, shelf} from './shelf.ts';
-import {carListView, type ListedCar} from './text/list-view.ts';
 
 const listOf = (value: unknown): unknown[] => (Array.isArray(value) ? value : []);
 

@@ -5,12 +5,12 @@ import {checkStore, type Finding} from '../store/check-store.ts';
 import {homeDirectory} from '../store/home.ts';
 import {textOf} from '../store/kept-documents.ts';
 import {listKept} from '../store/list-kept.ts';
+import {text} from '../text/blocks.ts';
 import type {CommandRun} from './command.ts';
 import {printJson, printText} from './print.ts';
 import {replyDone} from './reply.ts';
 import {shelf} from './shelf.ts';
 import type {Surroundings} from './surroundings.ts';
-import {text} from './text/blocks.ts';
 
 export const check: CommandRun = async (request, around) => {
 	const home = homeDirectory(around.environment);

@@ -3,14 +3,14 @@ import {describeProblems, maxDocumentBytes, type Problem, readCar, readTrack} fr
 import {visible} from '../documents/visible.ts';
 import {compare} from '../sharing/compare.ts';
 import {readShared} from '../sharing/read-shared.ts';
+import {text} from '../text/blocks.ts';
+import {differenceTable} from '../text/plan-view.ts';
 import type {CommandRun} from './command.ts';
 import {inputOf} from './document-input.ts';
 import {printJson, printText} from './print.ts';
 import {type Input, readFileText} from './read-input.ts';
 import {badInput, type Found, found, replyDone, replyRefused} from './reply.ts';
 import type {Surroundings} from './surroundings.ts';
-import {text} from './text/blocks.ts';
-import {differenceTable} from './text/plan-view.ts';
 
 type Json = Record<string, unknown>;
 type Document = {label: string; document: Json};

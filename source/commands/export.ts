@@ -4,11 +4,11 @@ import {visible} from '../documents/visible.ts';
 import {problemText} from '../store/answer.ts';
 import {exportStore} from '../store/export-store.ts';
 import {homeDirectory} from '../store/home.ts';
+import {text} from '../text/blocks.ts';
 import type {CommandRun} from './command.ts';
 import {printJson, printText} from './print.ts';
 import {badInput, replyDone, replyRefused, status} from './reply.ts';
 import {isOfTheDisk, replyProblem} from './store-reply.ts';
-import {text} from './text/blocks.ts';
 
 export const exportAll: CommandRun = async (request, around) => {
 	if (request.argument === undefined) return replyRefused(badInput('droprack export: to which DIR?'));

@@ -4,6 +4,8 @@ import {addToHistory} from '../store/history.ts';
 import {homeDirectory} from '../store/home.ts';
 import type {HistoryEntry, Written} from '../store/kept-documents.ts';
 import {keptNamed, listKept} from '../store/list-kept.ts';
+import {localDay} from '../text/heading-view.ts';
+import {historyView} from '../text/history-view.ts';
 import type {CommandRun} from './command.ts';
 import {findDocument, isFileName} from './find-document.ts';
 import {printJson, printText} from './print.ts';
@@ -13,8 +15,6 @@ import type {Request} from './request.ts';
 import {shelf} from './shelf.ts';
 import {replyProblem, replyWritten} from './store-reply.ts';
 import type {Surroundings} from './surroundings.ts';
-import {localDay} from './text/heading-view.ts';
-import {historyView} from './text/history-view.ts';
 
 export const history: CommandRun = async (request, around) => {
 	const fields = (['date', 'session', 'rpm', 'at', 'remark', 'pair', 'gearbox', 'situation'] as const).filter(

@@ -7,11 +7,11 @@ import {homeDirectory} from '../store/home.ts';
 import {type Imported, importStore} from '../store/import-store.ts';
 import {textOf} from '../store/kept-documents.ts';
 import type {ImportChoice} from '../store/read-for-import.ts';
+import {cell, type Making, tableOf} from '../text/blocks.ts';
 import type {CommandRun} from './command.ts';
 import {printJson, printText} from './print.ts';
 import {badInput, replyDone, replyRefused, status} from './reply.ts';
 import {isOfTheDisk, replyProblem} from './store-reply.ts';
-import {cell, type Making, tableOf} from './text/blocks.ts';
 
 const judge: ImportChoice['judge'] = async (kind, document) => {
 	const reading = await (kind === 'track' ? readTrack : readCar)(textOf(document));

@@ -1,9 +1,10 @@
 /** A result as text for a terminal or as JSON for programs. */
+
+import type {Block} from '../text/blocks.ts';
+import {layOut} from '../text/layout.ts';
+import {paint} from '../text/paint.ts';
 import type {Request} from './request.ts';
 import type {Surroundings} from './surroundings.ts';
-import type {Block} from './text/blocks.ts';
-import {layOut} from './text/layout.ts';
-import {paint} from './text/paint.ts';
 
 const narrowest = 40;
 const widest = 200;

@@ -1,13 +1,13 @@
 /** `droprack rank`: every pair and gearbox set, best first. */
 import {rankRack} from '../planning/rank-rack.ts';
+import {headingOf} from '../text/heading-view.ts';
+import {rankView} from '../text/rank-view.ts';
+import {unitsOf} from '../text/units.ts';
 import type {CommandRun} from './command.ts';
 import {refuseFaults} from './faults.ts';
 import {loadDocuments} from './load-documents.ts';
 import {printJson, printText} from './print.ts';
 import {replyDone, replyRefused} from './reply.ts';
-import {headingOf} from './text/heading-view.ts';
-import {rankView} from './text/rank-view.ts';
-import {unitsOf} from './text/units.ts';
 
 /** As many rows as a person compares. */
 const shownUnlessAsked = 8;

@@ -3,6 +3,7 @@ import {describeProblems, maxDocumentBytes} from '../documents/read.ts';
 import {parsePair} from '../drivetrain/gear-pair.ts';
 import {computeAgain, differencesFrom, type Own, type ReadPlan} from '../sharing/hold-against.ts';
 import {readShared} from '../sharing/read-shared.ts';
+import {planView, shortView} from '../text/plan-view.ts';
 import type {CommandRun} from './command.ts';
 import {refuseFaults} from './faults.ts';
 import {printJson, printText} from './print.ts';
@@ -13,7 +14,6 @@ import type {Request} from './request.ts';
 import {keepDocument} from './save.ts';
 import {type Kind, shelf} from './shelf.ts';
 import type {Surroundings} from './surroundings.ts';
-import {planView, shortView} from './text/plan-view.ts';
 
 export const read: CommandRun = async (request, around) => {
 	const {argument} = request;

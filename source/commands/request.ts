@@ -1,6 +1,7 @@
 /** What a command is asked: the options with their values read. */
+
+import type {UnitSystem} from '../text/units.ts';
 import type {OptionName} from './options.ts';
-import type {UnitSystem} from './text/units.ts';
 
 export type Request = {
 	/** The one argument as it was written; undefined where none was given. */

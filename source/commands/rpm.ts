@@ -1,13 +1,13 @@
 /** `droprack rpm`: RPM at every point in every gear. */
 import {rpmTable} from '../planning/rpm-table.ts';
+import {headingOf} from '../text/heading-view.ts';
+import {isAboveLimit, rpmView} from '../text/rpm-view.ts';
+import {unitsOf} from '../text/units.ts';
 import type {CommandRun} from './command.ts';
 import {refuseFaults} from './faults.ts';
 import {loadDocuments} from './load-documents.ts';
 import {printJson, printText} from './print.ts';
 import {replyDone, replyRefused} from './reply.ts';
-import {headingOf} from './text/heading-view.ts';
-import {isAboveLimit, rpmView} from './text/rpm-view.ts';
-import {unitsOf} from './text/units.ts';
 
 export const rpm: CommandRun = async (request, around) => {
 	const loaded = await loadDocuments(request, around);

@@ -1,13 +1,13 @@
 /** `droprack run`: each straight with one pair and set, and all checks. */
 import {runPair} from '../planning/run-pair.ts';
+import {headingOf} from '../text/heading-view.ts';
+import {runView} from '../text/run-view.ts';
+import {unitsOf} from '../text/units.ts';
 import type {CommandRun} from './command.ts';
 import {refuseFaults} from './faults.ts';
 import {loadDocuments} from './load-documents.ts';
 import {printJson, printText} from './print.ts';
 import {replyDone, replyRefused} from './reply.ts';
-import {headingOf} from './text/heading-view.ts';
-import {runView} from './text/run-view.ts';
-import {unitsOf} from './text/units.ts';
 
 export const run: CommandRun = async (request, around) => {
 	const loaded = await loadDocuments(request, around);

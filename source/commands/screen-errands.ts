@@ -11,10 +11,10 @@ import {exportStore} from '../store/export-store.ts';
 import {addToHistory} from '../store/history.ts';
 import {keptNamed} from '../store/list-kept.ts';
 import {forgetKept} from '../store/save-kept.ts';
+import {localDay} from '../text/heading-view.ts';
 import {copyText} from './copy.ts';
 import {readFileText} from './read-input.ts';
 import type {Surroundings} from './surroundings.ts';
-import {localDay} from './text/heading-view.ts';
 
 /** `write` gets bytes for the terminal that draw nothing and move no cursor. */
 export function screenErrands(

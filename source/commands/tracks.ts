@@ -1,9 +1,10 @@
 /** `droprack tracks`: what there is to rank. Loads no reader, so that it answers at once. */
+
+import {type ListedTrack, trackListView} from '../text/list-view.ts';
 import type {CommandRun} from './command.ts';
 import {printJson, printText} from './print.ts';
 import {replyDone} from './reply.ts';
 import {type Shelved, shelf} from './shelf.ts';
-import {type ListedTrack, trackListView} from './text/list-view.ts';
 
 const countOf = (list: unknown): number => (Array.isArray(list) ? list.length : 0);
 

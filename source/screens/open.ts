@@ -1,5 +1,5 @@
 /** Opens the screen, and ends when a person leaves it. */
-import type {UnitSystem} from '../commands/text/units.ts';
+import type {UnitSystem} from '../text/units.ts';
 import type {Keeper} from './keeper.ts';
 import {painted, type Theme} from './parts/theme.ts';
 import type {Documents, OpenDocument} from './session/documents.ts';

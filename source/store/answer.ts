@@ -9,7 +9,7 @@ export type StoreProblem = {
 	reason: 'broken' | 'newer' | 'inTheWay' | 'locked' | 'unreachable';
 	file: string;
 	found: string;
-	todo: string;
+	remedy: string;
 };
 
 export type Answer<T> = {ok: true; value: T} | {ok: false; problem: StoreProblem};
@@ -18,10 +18,10 @@ export const done = <T>(value: T): Answer<T> => ({ok: true, value});
 export const failed = (problem: StoreProblem): {ok: false; problem: StoreProblem} => ({ok: false, problem});
 
 /** The problem in one line, safe to show. */
-export const problemText = ({file, found, todo}: StoreProblem): string => visible(`${file}: ${found}. ${todo}`);
+export const problemText = ({file, found, remedy}: StoreProblem): string => visible(`${file}: ${found}. ${remedy}`);
 
 /** What the codes mean that a person can do something about. */
-const knownCodes: Readonly<Record<string, readonly [found: string, todo: string]>> = {
+const knownCodes: Readonly<Record<string, readonly [found: string, remedy: string]>> = {
 	ENOSPC: ['the disk is full', 'Make room and save again.'],
 	EDQUOT: ['the disk quota is used up', 'Make room and save again.'],
 	EFBIG: ['the file is larger than this account may write', 'Raise the file size limit and save again.'],
@@ -46,6 +46,6 @@ export const codeOf = (error: unknown): string | undefined => {
 export const unreachable = (file: string, error: unknown): StoreProblem => {
 	const code = codeOf(error);
 	if (code === undefined) throw error;
-	const [found, todo] = knownCodes[code] ?? ['cannot be used', otherwise];
-	return {reason: 'unreachable', file, found: `${found} (${code})`, todo};
+	const [found, remedy] = knownCodes[code] ?? ['cannot be used', otherwise];
+	return {reason: 'unreachable', file, found: `${found} (${code})`, remedy};
 };

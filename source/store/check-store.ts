@@ -46,15 +46,15 @@ const alike = (one: Kept<unknown>, other: Kept<unknown>): StoreProblem => {
 	const where = basename(other.file);
 	const isSame = sameSpelling(one.name) === sameSpelling(other.name);
 	const found = isSame ? `has the same name as ${where}` : `has the name of ${where} but for upper and lower case`;
-	const todo = isSame ? 'Only one of them is used: rename or remove one.' : 'Write the name exactly, or rename one.';
-	return {reason: 'inTheWay', file: one.file, found: `${JSON.stringify(one.name)} ${found}`, todo};
+	const remedy = isSame ? 'Only one of them is used: rename or remove one.' : 'Write the name exactly, or rename one.';
+	return {reason: 'inTheWay', file: one.file, found: `${JSON.stringify(one.name)} ${found}`, remedy};
 };
 
 const unsaved = ({file, saved}: UnsavedSession): StoreProblem => ({
 	reason: 'inTheWay',
 	file,
 	found: `unsaved work of ${saved}, of a screen that ended without saving`,
-	todo: 'Open the screen to take it up, or remove the file.',
+	remedy: 'Open the screen to take it up, or remove the file.',
 });
 
 /** What killed processes left. While a live one holds the lock, temporary files are its own. */
@@ -80,11 +80,11 @@ const leftovers = (home: string): StoreProblem[] => {
 /** What conf leaves of preferences that it was ended in writing, and never clears away. */
 const confTemporary = /^preferences\.json\.tmp-/;
 
-const leftByConf = (entry: Entry): StoreProblem => ({...left(entry), todo: 'Nothing is lost. Remove it.'});
+const leftByConf = (entry: Entry): StoreProblem => ({...left(entry), remedy: 'Nothing is lost. Remove it.'});
 
 const left = ({path}: Entry): StoreProblem => ({
 	reason: 'inTheWay',
 	file: path,
 	found: 'left by a process that was ended while it was saving',
-	todo: 'Nothing is lost. The next save clears it away.',
+	remedy: 'Nothing is lost. The next save clears it away.',
 });

@@ -70,7 +70,7 @@ const notOurs = (file: string, kind: KeptKind, name: string): StoreProblem | und
 	if (!answer.ok) return answer.problem;
 	if (sameSpelling(answer.value.name) === sameSpelling(name)) return undefined;
 	const found = `holds ${JSON.stringify(answer.value.name)}, not ${JSON.stringify(name)}`;
-	return {reason: 'inTheWay', file, found, todo: 'Move it away and export again.'};
+	return {reason: 'inTheWay', file, found, remedy: 'Move it away and export again.'};
 };
 
 /** Undefined where there is nothing; of what cannot be read, `notOurs` says why. */
@@ -95,12 +95,12 @@ export const isTheStore = (directory: string): StoreProblem => ({
 	reason: 'inTheWay',
 	file: directory,
 	found: 'this is the store itself',
-	todo: 'Name another directory.',
+	remedy: 'Name another directory.',
 });
 
 const twice = ({file, name}: Kept<unknown>): StoreProblem => ({
 	reason: 'inTheWay',
 	file,
 	found: `${JSON.stringify(name)} is the name of another file too (${fileNameOf(name)})`,
-	todo: 'Only the other one is used: rename or remove one.',
+	remedy: 'Only the other one is used: rename or remove one.',
 });

@@ -108,5 +108,5 @@ const twice = (file: string, name: string): StoreProblem => ({
 	reason: 'inTheWay',
 	file,
 	found: `${JSON.stringify(name)} is the name of another file of this directory too`,
-	todo: 'Only the other one was looked at: rename or remove one.',
+	remedy: 'Only the other one was looked at: rename or remove one.',
 });

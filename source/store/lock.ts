@@ -96,8 +96,8 @@ const sweepPrepared = (home: string): void => {
 const locked = (lock: string): StoreProblem => {
 	const pid = namesIn(lock).map(pidIn)[0];
 	const who = pid === undefined ? 'another copy of Droprack' : `another copy of Droprack (process ${pid})`;
-	const todo = 'Save again. If no other copy runs, remove this directory.';
-	return {reason: 'locked', file: lock, found: `${who} is saving`, todo};
+	const remedy = 'Save again. If no other copy runs, remove this directory.';
+	return {reason: 'locked', file: lock, found: `${who} is saving`, remedy};
 };
 
 const namesIn = (directory: string): string[] => {

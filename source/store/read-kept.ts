@@ -39,8 +39,8 @@ export const understood = (file: string, kind: KeptKind | 'session', value: Writ
 	if (migrated.ok) return done(migrated.content);
 	const found = `version is ${shown(value.version)}, expected 1 to ${migrated.newest}`;
 	if (migrated.reason === 'broken') return failed(broken(file, found));
-	const todo = 'Written by a later Droprack and left as it is: use that one.';
-	return failed({reason: 'newer', file, found, todo});
+	const remedy = 'Written by a later Droprack and left as it is: use that one.';
+	return failed({reason: 'newer', file, found, remedy});
 };
 
 export type Content = {value: Written; revision: string};
@@ -80,14 +80,14 @@ const parse = (bytes: Buffer): Written | string => {
 
 export const broken = (file: string, found: string): StoreProblem => {
 	const before = existsSync(backupOf(file)) ? ' The version before it is beside it, ending in .bak.' : '';
-	return {reason: 'broken', file, found, todo: `Left as it is: mend it or move it away.${before}`};
+	return {reason: 'broken', file, found, remedy: `Left as it is: mend it or move it away.${before}`};
 };
 
 export const notPlain = (file: string): StoreProblem => ({
 	reason: 'broken',
 	file,
 	found: 'not a plain file',
-	todo: 'Links and directories are not followed: put a file in its place or move it away.',
+	remedy: 'Links and directories are not followed: put a file in its place or move it away.',
 });
 
 const shown = (value: unknown): string => (JSON.stringify(value) ?? 'missing').slice(0, 40);

@@ -87,5 +87,5 @@ const inTheWay = (file: string, kind: KeptKind): StoreProblem | undefined => {
 	const answer = readKept(file, kind);
 	if (!answer.ok) return answer.problem;
 	const found = `holds ${JSON.stringify(answer.value.name)}, so it cannot take another name`;
-	return {reason: 'inTheWay', file, found, todo: 'Move it away and save again.'};
+	return {reason: 'inTheWay', file, found, remedy: 'Move it away and save again.'};
 };

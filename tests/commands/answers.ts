@@ -1,6 +1,5 @@
 /** Answers as planning gives them, written by hand for the tests of the text output; invented numbers. */
 
-import type {Heading} from '../../source/commands/text/heading-view.ts';
 import type {
 	Check,
 	Ranking,
@@ -10,6 +9,7 @@ import type {
 	SituationResult,
 	StraightResult,
 } from '../../source/planning/results.ts';
+import type {Heading} from '../../source/text/heading-view.ts';
 
 export const heading: Heading = {
 	car: 'Fixture Car',

@@ -11,8 +11,9 @@ const layers: Record<string, readonly string[]> = {
 	documents: ['drivetrain'],
 	store: ['drivetrain', 'documents'],
 	sharing: ['drivetrain', 'planning', 'documents'],
-	commands: ['drivetrain', 'planning', 'documents', 'store', 'sharing', 'screens'],
-	screens: ['drivetrain', 'planning', 'documents', 'store', 'sharing', 'commands/text'],
+	text: ['drivetrain', 'planning', 'documents', 'store', 'sharing'],
+	commands: ['drivetrain', 'planning', 'documents', 'store', 'sharing', 'text', 'screens'],
+	screens: ['drivetrain', 'planning', 'documents', 'store', 'sharing', 'text'],
 };
 
 /** Packages and built-in modules that only some layers may know. */

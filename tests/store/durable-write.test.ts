@@ -97,7 +97,7 @@ describe.runIf(isRoot)('as root', () => {
 			await expectNothingLost(place, () => children.run(['saveOnce', place, '2']), {
 				reason: 'unreachable',
 				found: 'the disk is full (ENOSPC)',
-				todo: 'Make room and save again.',
+				remedy: 'Make room and save again.',
 			});
 		} finally {
 			unmount();

@@ -48,7 +48,7 @@ test.each([
 			reason: 'locked',
 			file: join(home(), 'lock'),
 			found: `another copy of Droprack (process ${holder.pid}) is saving`,
-			todo: 'Save again. If no other copy runs, remove this directory.',
+			remedy: 'Save again. If no other copy runs, remove this directory.',
 		},
 	});
 	expect(readdirSync(home())).toEqual(['lock']);

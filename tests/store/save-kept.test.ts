@@ -118,7 +118,7 @@ test('of a file that broke the version before it is pointed at', () => {
 	const {file, revision} = save(preset('Oval'));
 	save(preset('Oval', {notes: 'second'}), revision);
 	writeFileSync(file, '{');
-	expect(listKept(home(), 'preset').problems[0]?.todo).toBe(
+	expect(listKept(home(), 'preset').problems[0]?.remedy).toBe(
 		'Left as it is: mend it or move it away. The version before it is beside it, ending in .bak.',
 	);
 });

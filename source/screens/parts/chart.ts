@@ -1,5 +1,5 @@
 /** A picture of lines over two labeled axes, as lines of text. What is not finite is a gap. */
-import {displayWidth} from '../../commands/text/width.ts';
+import {displayWidth} from '../../text/width.ts';
 import {Canvas} from './canvas.ts';
 import {line, type Meaning, type Piece, type Pieces, piece} from './pieces.ts';
 import {niceTicks, tickLabels} from './ticks.ts';

@@ -1,7 +1,8 @@
 /** What the views of the screen are made of: pieces of text whose meaning is named. The theme makes them bold or colored. */
-import type {Tone} from '../../commands/text/blocks.ts';
-import {cut, displayWidth, padTo} from '../../commands/text/width.ts';
+
 import {visible} from '../../documents/visible.ts';
+import type {Tone} from '../../text/blocks.ts';
+import {cut, displayWidth, padTo} from '../../text/width.ts';
 
 /** Beside the tones of the text answers: what is chosen, where the caret stands, a key, the two runs of a picture, a QR code. */
 export type Meaning = Tone | 'chosen' | 'caret' | 'key' | 'first' | 'second' | 'code';

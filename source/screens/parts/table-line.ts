@@ -1,5 +1,5 @@
 /** One line of a table: its cells in their columns, with their meaning. */
-import {displayWidth, padTo} from '../../commands/text/width.ts';
+import {displayWidth, padTo} from '../../text/width.ts';
 import {type Meaning, type Piece, type Pieces, piece} from './pieces.ts';
 
 /** A row by the heads of its columns. */

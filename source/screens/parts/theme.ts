@@ -1,5 +1,5 @@
 /** The last step: meaning to how a terminal shows it. Words and marks carry the meaning first; color is never alone. */
-import {toAscii} from '../../commands/text/paint.ts';
+import {toAscii} from '../../text/paint.ts';
 import type {Meaning, Pieces} from './pieces.ts';
 
 export type Theme = {readonly color: boolean; readonly ascii: boolean};

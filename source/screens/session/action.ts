@@ -1,6 +1,7 @@
 /** What may happen to a session, named by intention. */
-import type {UnitSystem} from '../../commands/text/units.ts';
+
 import type {HistoryEntry} from '../../store/kept-documents.ts';
+import type {UnitSystem} from '../../text/units.ts';
 import type {KeyEvent} from '../terminal/key-event.ts';
 import type {Documents, Kind, OpenDocument} from './documents.ts';
 import type {Item} from './hand-over.ts';

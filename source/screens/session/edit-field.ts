@@ -1,6 +1,7 @@
 /** Changes of one field: each gives the new content, or says why there is none. */
-import type {UnitSystem} from '../../commands/text/units.ts';
+
 import {pathText} from '../../documents/problem.ts';
+import type {UnitSystem} from '../../text/units.ts';
 import type {Kind} from './documents.ts';
 import type {Field} from './form.ts';
 import {problemsOf} from './forms.ts';

@@ -1,6 +1,7 @@
 /** What a session at the screen holds: inputs only. What follows from them is in `answer.ts` and in the views. */
-import type {UnitSystem} from '../../commands/text/units.ts';
+
 import type {HistoryEntry} from '../../store/kept-documents.ts';
+import type {UnitSystem} from '../../text/units.ts';
 import type {EditLine} from '../parts/edit-line.ts';
 import {current, type Documents, type Kind} from './documents.ts';
 import type {HandOver} from './hand-over.ts';

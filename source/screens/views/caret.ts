@@ -1,5 +1,5 @@
 /** A line being typed, with the place where the next character goes. */
-import {displayWidth} from '../../commands/text/width.ts';
+import {displayWidth} from '../../text/width.ts';
 import type {EditLine} from '../parts/edit-line.ts';
 import {after} from '../parts/graphemes.ts';
 import {type Pieces, piece} from '../parts/pieces.ts';

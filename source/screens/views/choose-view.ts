@@ -1,7 +1,8 @@
 /** Tracks or cars to choose from, found by typing part of a name; beside them what is known of the one under the cursor. */
-import {airWords} from '../../commands/text/heading-view.ts';
-import {rpm, type UnitSystem, unitsOf} from '../../commands/text/units.ts';
+
 import {planFor, settingOf} from '../../planning/plan.ts';
+import {airWords} from '../../text/heading-view.ts';
+import {rpm, type UnitSystem, unitsOf} from '../../text/units.ts';
 import {listWindow} from '../parts/list-window.ts';
 import {blank, line, type Piece, type Pieces, padded, piece} from '../parts/pieces.ts';
 import type {Choice} from '../session/catalog.ts';

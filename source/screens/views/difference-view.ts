@@ -1,7 +1,8 @@
 /** A row beside the one it is compared with. */
-import {type Block, cell, type Making, tableOf} from '../../commands/text/blocks.ts';
-import {fixed, rpm, rpmUp, seconds, signed} from '../../commands/text/units.ts';
+
 import type {Row} from '../../planning/results.ts';
+import {type Block, cell, type Making, tableOf} from '../../text/blocks.ts';
+import {fixed, rpm, rpmUp, seconds, signed} from '../../text/units.ts';
 import {highestRpm, limitMarginRpm, lowestExitRpm, shiftsPerLap} from '../session/figures.ts';
 
 type Figure = {

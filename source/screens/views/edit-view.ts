@@ -1,6 +1,6 @@
 /** The form: its sections on the left, the fields of one of them beside it, and below what the field takes and what was understood. */
-import type {UnitSystem} from '../../commands/text/units.ts';
-import {displayWidth, wrap} from '../../commands/text/width.ts';
+import type {UnitSystem} from '../../text/units.ts';
+import {displayWidth, wrap} from '../../text/width.ts';
 import {listWindow} from '../parts/list-window.ts';
 import {beside, blank, line, type Piece, type Pieces, padded, piece, tall} from '../parts/pieces.ts';
 import {current} from '../session/documents.ts';

@@ -1,7 +1,8 @@
 /** The whole screen as lines, for a size: what is drawn where. A pure function of the state, the size and where lists stood. */
-import {absent, unitsOf} from '../../commands/text/units.ts';
-import {wrap} from '../../commands/text/width.ts';
+
 import {visible} from '../../documents/visible.ts';
+import {absent, unitsOf} from '../../text/units.ts';
+import {wrap} from '../../text/width.ts';
 import {beside, blank, clipped, line, type Pieces, piece, tall} from '../parts/pieces.ts';
 import {tableBar, tableHeading, tableLine, tableWidth} from '../parts/table-line.ts';
 import type {Wrong} from '../session/answer.ts';

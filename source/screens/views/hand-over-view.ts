@@ -1,5 +1,5 @@
 /** What can be handed over of a row: the list of it, and what is selected. A QR code takes the whole window. */
-import {wrap} from '../../commands/text/width.ts';
+import {wrap} from '../../text/width.ts';
 import {beside, blank, clipped, line, type Pieces, padded, piece, tall} from '../parts/pieces.ts';
 import {type Handed, type Item, items, rowToHandOver} from '../session/hand-over.ts';
 import type {State} from '../session/live.ts';

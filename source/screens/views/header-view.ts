@@ -1,8 +1,9 @@
 /** The two lines at the top: whose numbers these are and for which day, and how they are looked at. */
-import {airWords} from '../../commands/text/heading-view.ts';
-import {rpm, rpmDown, seconds, unitsOf} from '../../commands/text/units.ts';
+
 import {visible} from '../../documents/visible.ts';
 import type {Setting} from '../../planning/results.ts';
+import {airWords} from '../../text/heading-view.ts';
+import {rpm, rpmDown, seconds, unitsOf} from '../../text/units.ts';
 import {type Piece, type Pieces, piece, spread} from '../parts/pieces.ts';
 import type {Answer} from '../session/answer.ts';
 import {current, isChanged, titleOf} from '../session/documents.ts';

@@ -1,6 +1,7 @@
 /** Above the keys: what was just done, or the question that lies over the place. One line unless there is more to tell. */
-import {wrap} from '../../commands/text/width.ts';
+
 import {visible} from '../../documents/visible.ts';
+import {wrap} from '../../text/width.ts';
 import {blank, clipped, line, type Pieces, piece, widthOf} from '../parts/pieces.ts';
 import {current, type Documents, titleOf, unsaved} from '../session/documents.ts';
 import type {Asked, Over, Session} from '../session/session.ts';

@@ -1,11 +1,12 @@
 /** The pictures, each for the question that it answers. */
-import {type Quantity, rpm, signed, type UnitSystem, unitsOf} from '../../commands/text/units.ts';
+
 import type {TracePoint} from '../../drivetrain/speed-trace.ts';
 import {type Curve, gearCurves, traceOf} from '../../planning/pictures.ts';
 import type {Ranked} from '../../planning/rank-rack.ts';
 import type {RpmPoint, StraightResult} from '../../planning/results.ts';
 import {pointsOf} from '../../planning/rpm-table.ts';
 import type {RowRun} from '../../planning/run-row.ts';
+import {type Quantity, rpm, signed, type UnitSystem, unitsOf} from '../../text/units.ts';
 import {type Chart, type ChartSize, drawChart, type Point, type Series, type Sign} from '../parts/chart.ts';
 import {line, type Pieces} from '../parts/pieces.ts';
 import type {Placed} from '../session/rows.ts';

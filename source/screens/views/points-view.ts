@@ -1,7 +1,8 @@
 /** RPM at every point of the track: in the gear that is used there, and in the gears below and above it. */
-import {type Block, cell, type Making, tableOf} from '../../commands/text/blocks.ts';
-import {absent, rpm, rpmUp, signed, type Units} from '../../commands/text/units.ts';
+
 import type {RpmPoint, Setting} from '../../planning/results.ts';
+import {type Block, cell, type Making, tableOf} from '../../text/blocks.ts';
+import {absent, rpm, rpmUp, signed, type Units} from '../../text/units.ts';
 
 type Compared = {readonly point: RpmPoint; readonly other: RpmPoint | undefined};
 

@@ -1,9 +1,10 @@
 /** The ranking as a table: which columns there are, which of them a width has room for, and the rows that a height has. */
-import {fitColumns} from '../../commands/text/layout.ts';
-import {absent, fixed, rpm, rpmDown, rpmUp, signed} from '../../commands/text/units.ts';
-import {displayWidth} from '../../commands/text/width.ts';
+
 import {visible} from '../../documents/visible.ts';
 import type {Row, Setting} from '../../planning/results.ts';
+import {fitColumns} from '../../text/layout.ts';
+import {absent, fixed, rpm, rpmDown, rpmUp, signed} from '../../text/units.ts';
+import {displayWidth} from '../../text/width.ts';
 import {listWindow} from '../parts/list-window.ts';
 import type {Meaning} from '../parts/pieces.ts';
 import type {TableColumn, TableRow} from '../parts/table-line.ts';

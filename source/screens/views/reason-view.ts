@@ -1,8 +1,9 @@
 /** Why a row stands where it stands, in a few lines: always in view beside or below the ranking. */
-import {rpmDown, rpmUp, seconds, signed} from '../../commands/text/units.ts';
-import {wrap} from '../../commands/text/width.ts';
+
 import {visible} from '../../documents/visible.ts';
 import type {Check, Row} from '../../planning/results.ts';
+import {rpmDown, rpmUp, seconds, signed} from '../../text/units.ts';
+import {wrap} from '../../text/width.ts';
 import {line, type Meaning, type Piece, type Pieces, piece, widthOf} from '../parts/pieces.ts';
 
 /** Name, verdict and the sentence; then each check with its margin, as many as fit a line. */

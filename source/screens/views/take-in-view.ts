@@ -1,8 +1,9 @@
 /** A plan that was sent: asked for, then shown with its numbers computed again and what differs from one's own. */
-import {layOut} from '../../commands/text/layout.ts';
-import {planView, shortView} from '../../commands/text/plan-view.ts';
-import {wrap} from '../../commands/text/width.ts';
+
 import {visible} from '../../documents/visible.ts';
+import {layOut} from '../../text/layout.ts';
+import {planView, shortView} from '../../text/plan-view.ts';
+import {wrap} from '../../text/width.ts';
 import {blank, line, type Pieces, piece} from '../parts/pieces.ts';
 import type {Place} from '../session/session.ts';
 import type {Incoming} from '../session/take-in.ts';

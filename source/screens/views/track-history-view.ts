@@ -1,6 +1,6 @@
 /** The history of a track, and the form of an entry for it. */
-import {historyView} from '../../commands/text/history-view.ts';
-import {layOut} from '../../commands/text/layout.ts';
+import {historyView} from '../../text/history-view.ts';
+import {layOut} from '../../text/layout.ts';
 import {blank, line, type Pieces, padded, piece} from '../parts/pieces.ts';
 import type {Place} from '../session/session.ts';
 import {type Draft, type DraftField, draftFields} from '../session/track-history.ts';

@@ -1,12 +1,13 @@
 /** Everything about one row: the reason, every check, each straight, RPM at every point; beside the compared row where there is one. */
-import {type Block, cell, gap, line, text} from '../../commands/text/blocks.ts';
-import {checkView} from '../../commands/text/check-view.ts';
-import {layOut} from '../../commands/text/layout.ts';
-import {situationView} from '../../commands/text/run-view.ts';
-import {fixed, rpmDown, type Units} from '../../commands/text/units.ts';
+
 import type {Ranked} from '../../planning/rank-rack.ts';
 import type {Row, RpmPoint} from '../../planning/results.ts';
 import {pointsOf} from '../../planning/rpm-table.ts';
+import {type Block, cell, gap, line, text} from '../../text/blocks.ts';
+import {checkView} from '../../text/check-view.ts';
+import {layOut} from '../../text/layout.ts';
+import {situationView} from '../../text/run-view.ts';
+import {fixed, rpmDown, type Units} from '../../text/units.ts';
 import type {Pieces} from '../parts/pieces.ts';
 import type {Placed} from '../session/rows.ts';
 import {differenceView} from './difference-view.ts';

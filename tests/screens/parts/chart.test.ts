@@ -1,9 +1,9 @@
 import fc from 'fast-check';
 import {describe, expect, test} from 'vitest';
-import {displayWidth} from '../../../source/commands/text/width.ts';
 import {type Chart, drawChart, type Point} from '../../../source/screens/parts/chart.ts';
 import {shown} from '../../../source/screens/parts/theme.ts';
 import {niceTicks, tickLabels} from '../../../source/screens/parts/ticks.ts';
+import {displayWidth} from '../../../source/text/width.ts';
 import {runs} from '../../runs.ts';
 
 const plain = (chart: Chart, width: number, height: number, ascii: boolean): string[] =>

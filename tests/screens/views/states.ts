@@ -1,5 +1,5 @@
 /** States of a session on the fixtures, ranked, and their frames as text. */
-import {displayWidth} from '../../../source/commands/text/width.ts';
+
 import {type Ranked, rankSteps} from '../../../source/planning/rank-rack.ts';
 import {finish} from '../../../source/planning/run-rack.ts';
 import {painted} from '../../../source/screens/parts/theme.ts';
@@ -12,6 +12,7 @@ import type {State} from '../../../source/screens/session/live.ts';
 import {cursorIn, type Placed, placedRows, shownRows} from '../../../source/screens/session/rows.ts';
 import type {Session} from '../../../source/screens/session/session.ts';
 import {frameLines, frameOf, type Size} from '../../../source/screens/views/frame.ts';
+import {displayWidth} from '../../../source/text/width.ts';
 import {catalog} from '../session/documents.ts';
 
 const esc = '\x1B';

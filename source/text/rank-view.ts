@@ -1,6 +1,6 @@
 /** The ranking as a person reads it: one line a row, the reasons, the remarks. */
-import {checkNames} from '../../planning/check-names.ts';
-import type {Check, Ranking, Row} from '../../planning/results.ts';
+import {checkNames} from '../planning/check-names.ts';
+import type {Check, Ranking, Row} from '../planning/results.ts';
 import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
 import {closingView, type Heading, headingView, verdictCell} from './heading-view.ts';
 import {absent, fixed, rpm, rpmDown, rpmUp, seconds, signed, type Units} from './units.ts';

@@ -1,12 +1,12 @@
 import {expect, test} from 'vitest';
-import type {Block} from '../../../source/commands/text/blocks.ts';
-import {layOut} from '../../../source/commands/text/layout.ts';
-import {rankView} from '../../../source/commands/text/rank-view.ts';
-import {rpmView} from '../../../source/commands/text/rpm-view.ts';
-import {runView} from '../../../source/commands/text/run-view.ts';
-import {unitsOf} from '../../../source/commands/text/units.ts';
-import {displayWidth} from '../../../source/commands/text/width.ts';
-import {front, heading, ranking, row, setting, table} from '../answers.ts';
+import type {Block} from '../../source/text/blocks.ts';
+import {layOut} from '../../source/text/layout.ts';
+import {rankView} from '../../source/text/rank-view.ts';
+import {rpmView} from '../../source/text/rpm-view.ts';
+import {runView} from '../../source/text/run-view.ts';
+import {unitsOf} from '../../source/text/units.ts';
+import {displayWidth} from '../../source/text/width.ts';
+import {front, heading, ranking, row, setting, table} from '../commands/answers.ts';
 
 const us = unitsOf('us');
 const lines = (blocks: Block[], width: number) =>

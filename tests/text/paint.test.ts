@@ -1,6 +1,6 @@
 import {expect, test} from 'vitest';
-import {cell} from '../../../source/commands/text/blocks.ts';
-import {paint, toAscii} from '../../../source/commands/text/paint.ts';
+import {cell} from '../../source/text/blocks.ts';
+import {paint, toAscii} from '../../source/text/paint.ts';
 
 test('without color the text is the text', () => {
 	expect(paint([[cell('FAIL', 'fail'), cell('  '), cell('pass', 'pass')]], {color: false, ascii: false})).toBe(

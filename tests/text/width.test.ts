@@ -1,5 +1,5 @@
 import {expect, test} from 'vitest';
-import {cut, displayWidth, padTo, wrap} from '../../../source/commands/text/width.ts';
+import {cut, displayWidth, padTo, wrap} from '../../source/text/width.ts';
 
 // East Asian wide characters take two columns (Unicode Standard Annex 11), combining marks none.
 test('width is what the text takes on the screen', () => {

@@ -1,5 +1,5 @@
 /** What a view gives: blocks of cells whose meaning is named. Layout takes the width, paint the color. */
-import {visible} from '../../documents/visible.ts';
+import {visible} from '../documents/visible.ts';
 
 export type Tone = 'plain' | 'strong' | 'muted' | 'pass' | 'near' | 'fail';
 export type Cell = {text: string; tone: Tone};

@@ -1,5 +1,5 @@
 /** One pair and set on every straight: gears, shifts, top speed, time; then all checks. */
-import type {Row, Shift, SingleRun, SituationResult, StraightResult} from '../../planning/results.ts';
+import type {Row, Shift, SingleRun, SituationResult, StraightResult} from '../planning/results.ts';
 import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
 import {checkView} from './check-view.ts';
 import {closingView, type Heading, headingView} from './heading-view.ts';

@@ -1,6 +1,6 @@
 import {expect, test} from 'vitest';
-import {type Column, cell, line, table, text} from '../../../source/commands/text/blocks.ts';
-import {fitColumns, layOut} from '../../../source/commands/text/layout.ts';
+import {type Column, cell, line, table, text} from '../../source/text/blocks.ts';
+import {fitColumns, layOut} from '../../source/text/layout.ts';
 
 const columns: Column[] = [
 	{head: 'name', align: 'left', keep: 0, shortest: 4},

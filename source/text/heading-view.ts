@@ -1,7 +1,7 @@
 /** The lines that every answer starts with: whose numbers these are, and for which day. */
-import {referenceDay} from '../../drivetrain/air.ts';
-import type {Air, Track} from '../../drivetrain/track.ts';
-import type {Setting} from '../../planning/results.ts';
+import {referenceDay} from '../drivetrain/air.ts';
+import type {Air, Track} from '../drivetrain/track.ts';
+import type {Setting} from '../planning/results.ts';
 import {type Block, cell, line, text} from './blocks.ts';
 import {fixed, rpm, type Units} from './units.ts';
 

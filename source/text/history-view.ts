@@ -1,5 +1,5 @@
 /** The history of a track: one line an entry, the latest first. */
-import type {HistoryEntry} from '../../store/kept-documents.ts';
+import type {HistoryEntry} from '../store/kept-documents.ts';
 import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
 
 /** Entries may have been written by hand. */

@@ -1,5 +1,5 @@
 import {expect, test} from 'vitest';
-import {fixed, rpmDown, rpmUp, signed, unitsOf} from '../../../source/commands/text/units.ts';
+import {fixed, rpmDown, rpmUp, signed, unitsOf} from '../../source/text/units.ts';
 
 const [us, metric] = [unitsOf('us'), unitsOf('metric')];
 

@@ -1,6 +1,6 @@
 /** The checks of a row: verdict, number, bound, margin, where. */
-import {checkNames} from '../../planning/check-names.ts';
-import type {Check, CheckName} from '../../planning/results.ts';
+import {checkNames} from '../planning/check-names.ts';
+import type {Check, CheckName} from '../planning/results.ts';
 import {type Block, cell, type Making, tableOf, text} from './blocks.ts';
 import {verdictCell} from './heading-view.ts';
 import {absent, fixed, rpm, rpmDown, rpmUp, type Units} from './units.ts';

@@ -1,9 +1,9 @@
 /** A plan that was read: what it says, which numbers agree, and what differs from the reader's own documents. */
-import type {Agreement} from '../../sharing/agreement.ts';
-import type {Difference} from '../../sharing/compare.ts';
-import type {Own} from '../../sharing/hold-against.ts';
-import type {PlanDocument} from '../../sharing/plan-document.ts';
-import type {ShortPlan} from '../../sharing/short-form.ts';
+import type {Agreement} from '../sharing/agreement.ts';
+import type {Difference} from '../sharing/compare.ts';
+import type {Own} from '../sharing/hold-against.ts';
+import type {PlanDocument} from '../sharing/plan-document.ts';
+import type {ShortPlan} from '../sharing/short-form.ts';
 import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
 import {caution} from './heading-view.ts';
 import {absent} from './units.ts';

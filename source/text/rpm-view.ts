@@ -1,5 +1,5 @@
 /** RPM at every point in every gear. */
-import type {RpmPoint, RpmTable} from '../../planning/results.ts';
+import type {RpmPoint, RpmTable} from '../planning/results.ts';
 import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
 import {closingView, type Heading, headingView} from './heading-view.ts';
 import {absent, fixed, rpm, rpmUp, type Units} from './units.ts';
