@@ -37,8 +37,12 @@ export function rowOf(run: RowRun, ground: Ground): Row {
 function situationOf({condition, places, restart}: SituationRun): SituationResult {
 	const timed = places.filter(({state}) => state !== 'held');
 	const runs = timed.length > 0 && places.every(({state}) => state === 'ran' || state === 'held');
-	let [timeS, fastestS] = [0, 0];
-	if (runs) for (const {result} of timed) [timeS, fastestS] = [timeS + result.timeS!, fastestS + result.fastestS!];
+	let timeS = 0;
+	let fastestS = 0;
+	for (const {result} of runs ? timed : []) {
+		timeS += result.timeS!;
+		fastestS += result.fastestS!;
+	}
 	return {
 		name: condition.name,
 		share: condition.share,

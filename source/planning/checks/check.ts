@@ -48,3 +48,11 @@ export function checkOf(check: CheckName, worst: Reading | undefined): Check | u
 	const entry: Check = {check, verdict, value, bound, margin, at: `${place} ${part}`.trim(), situation};
 	return remark === undefined ? entry : {...entry, remark};
 }
+
+const shiftParts: string[] = [];
+
+/** "shift 3-4", the same text for every row. */
+export function shiftPart(from: number): string {
+	shiftParts[from] ??= `shift ${from}-${from + 1}`;
+	return shiftParts[from];
+}

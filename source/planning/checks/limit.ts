@@ -5,7 +5,7 @@ import type {Verdict} from '../results.ts';
 import type {PlaceRun} from '../run-place.ts';
 import {eachRun, type RowRun} from '../run-row.ts';
 import {roundingRpm} from '../words.ts';
-import {checkOf, type Ground, type Reading, type RowCheck, worseOf} from './check.ts';
+import {checkOf, type Ground, type Reading, type RowCheck, shiftPart, worseOf} from './check.ts';
 
 export const limit: RowCheck = (row, ground) => {
 	let worst: Reading | undefined;
@@ -40,16 +40,26 @@ function highest({place, result, sequence}: PlaceRun, situation: string, ground:
 	let rpm = result.exitRpm;
 	let part = 'exit';
 	let remark: string | undefined;
-	const offer = (value: number, name: string, why?: string) => {
-		if (value <= rpm) return;
-		[rpm, part, remark] = [value, name, why];
-	};
-	offer(result.endRpm, 'end');
-	for (const shift of result.shifts) if (shift.rpm > rpm) offer(shift.rpm, `shift ${shift.from}-${shift.from + 1}`);
-	if (result.minimumRpm !== null) offer(result.minimumRpm, 'minimum');
+	if (result.endRpm > rpm) {
+		rpm = result.endRpm;
+		part = 'end';
+	}
+	for (const shift of result.shifts) {
+		if (shift.rpm <= rpm) continue;
+		rpm = shift.rpm;
+		part = shiftPart(shift.from);
+	}
+	if (result.minimumRpm !== null && result.minimumRpm > rpm) {
+		rpm = result.minimumRpm;
+		part = 'minimum';
+	}
 	// A restart may be shifted out of early; a straight is driven to its end.
 	const reachRpm = place.isRestart ? 0 : (sequence?.reachRpm ?? 0);
-	if (reachRpm > result.endRpm + roundingRpm) offer(reachRpm, 'end', 'without the limiter');
+	if (reachRpm > result.endRpm + roundingRpm && reachRpm > rpm) {
+		rpm = reachRpm;
+		part = 'end';
+		remark = 'without the limiter';
+	}
 	return reading(rpm, ground, place.name, part, situation, remark);
 }
 

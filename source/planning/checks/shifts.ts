@@ -1,6 +1,6 @@
 /** Whether each shift leaves the engine in its band, and whether the car is settled when it comes. */
 import {eachStraight} from '../run-row.ts';
-import {checkOf, type Reading, type RowCheck, worseOf} from './check.ts';
+import {checkOf, type Reading, type RowCheck, shiftPart, worseOf} from './check.ts';
 
 /** RPM after the interruption against the bottom of the band. */
 export const afterShift: RowCheck = (row, {plan}) => {
@@ -14,7 +14,7 @@ export const afterShift: RowCheck = (row, {plan}) => {
 				bound,
 				margin: rpmAfter - bound,
 				place: place.name,
-				part: `shift ${from}-${from + 1}`,
+				part: shiftPart(from),
 				situation: condition.name,
 			});
 		}
@@ -36,7 +36,7 @@ export const settle: RowCheck = (row, {plan}) => {
 				bound,
 				margin: value - bound,
 				place: place.name,
-				part: `shift ${from}-${from + 1}`,
+				part: shiftPart(from),
 				situation: condition.name,
 				remark: late ? 'before the end' : 'after the exit',
 			});
