@@ -9,13 +9,17 @@ import {type Field, type Form, formOf, type Section} from './form.ts';
 import type {JsonObject} from './json.ts';
 import type {FieldPlace} from './session.ts';
 
+/** What was made of the latest documents: the history holds every earlier state, and what is made of one is larger than it. */
+const keptResults = 4;
+
 const once = <T>(make: (json: JsonObject) => T) => {
-	const made = new WeakMap<JsonObject, T>();
+	const made: {readonly json: JsonObject; readonly result: T}[] = [];
 	return (json: JsonObject): T => {
-		const known = made.get(json);
-		if (known !== undefined) return known;
+		const known = made.find(one => one.json === json);
+		if (known !== undefined) return known.result;
 		const result = make(json);
-		made.set(json, result);
+		made.unshift({json, result});
+		made.length = Math.min(made.length, keptResults);
 		return result;
 	};
 };
