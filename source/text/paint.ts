@@ -21,6 +21,7 @@ const paints = (color: boolean): Record<Tone, Paint> => {
 /** Signs that have an ASCII stand-in of the same width. */
 const standIns: Readonly<Record<string, string>> = {
 	'·': '-',
+	'±': '+',
 	'…': '~',
 	'°': ' ',
 	'³': '3',
