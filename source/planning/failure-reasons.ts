@@ -1,6 +1,6 @@
 /** Why a row fails, in one sentence. */
 import type {Check, CheckName, Row} from './results.ts';
-import {feetText, grouped, highestText, milesText, placeText} from './words.ts';
+import {grouped, highestText, lengthText, longLengthText, placeText} from './words.ts';
 
 /** The first failed check in words, and how many more fail. */
 export function failureReason(row: Row): string {
@@ -18,14 +18,14 @@ const fallback = (check: Check) => `${where(check) || check.check}: ${check.rema
 const sentences: Partial<Record<CheckName, (check: Check) => string>> = {
 	limit: check =>
 		`Over the limit: ${highestText(check.value!)} at ${where(check)}, ${grouped(Math.ceil(-check.margin!))} above ${grouped(check.bound!)}`,
-	limiter: check => `On the limiter for ${feetText(check.value!)} at ${where(check)}`,
+	limiter: check => `On the limiter for ${lengthText(check.value!)} at ${where(check)}`,
 	permitted: check => `Not permitted: ${check.remark}`,
 	housing: check =>
 		check.bound === null
 			? `Does not fit the housing: it accepts no tooth sum`
 			: `Does not fit the housing: tooth sum ${check.value}, nearest accepted ${check.bound}`,
 	stock: () => 'No set on hand',
-	mileage: check => `Out of miles: ${milesText(check.value!)} of ${milesText(check.bound!)}`,
+	mileage: check => `Out of miles: ${longLengthText(check.value!)} of ${longLengthText(check.bound!)}`,
 };
 
 /** How a check that can fail is called in a sentence. */

@@ -6,7 +6,7 @@ import type {Plan} from './plan.ts';
 import type {Fault} from './results.ts';
 import type {PlaceRun} from './run-place.ts';
 import type {RowRun, SituationRun} from './run-row.ts';
-import {baseName, feetText, grouped, mphText} from './words.ts';
+import {baseName, grouped, lengthText, speedText} from './words.ts';
 
 /** An exit above every gear's limit or a stop in every row, and braking that the length does not allow; one a straight. */
 export function rackFaults(plan: Plan, rows: readonly RowRun[]): Fault[] {
@@ -58,8 +58,8 @@ function limitFault(
 	return fault(
 		'track',
 		pathOf(place),
-		`${mphText(place.straight.exitMps)}${during(condition.name)}: ${grouped(least)} rpm or more in every allowed gear of every row`,
-		`at most ${mphText(fastest)}, which is ${grouped(plan.engine.limiter === undefined ? plan.limit.rpm : topRpm)} rpm in the tallest row`,
+		`${speedText(place.straight.exitMps)}${during(condition.name)}: ${grouped(least)} rpm or more in every allowed gear of every row`,
+		`at most ${speedText(fastest)}, which is ${grouped(plan.engine.limiter === undefined ? plan.limit.rpm : topRpm)} rpm in the tallest row`,
 	);
 }
 
@@ -68,7 +68,7 @@ function stopFault({place}: PlaceRun, situation: string): Fault {
 	return fault(
 		'track',
 		place.isRestart ? 'restart.distance' : `straights.${place.name}.grade`,
-		`from ${mphText(exitMps)}${during(situation)} the car stops within ${feetText(lengthM)} at a grade of ${(100 * grade).toFixed(1)} % in every row`,
+		`from ${speedText(exitMps)}${during(situation)} the car stops within ${lengthText(lengthM)} at a grade of ${(100 * grade).toFixed(1)} % in every row`,
 		'a grade, wind and length that one pair and set at least can drive through',
 	);
 }
@@ -79,8 +79,8 @@ function brakingFault({place, course}: PlaceRun, situation: string): Fault {
 	return fault(
 		'track',
 		pathOf(place),
-		`${mphText(exitMps)}${during(situation)}, from which the car cannot brake to ${mphText(entryMps!)} in ${feetText(lengthM)}`,
-		`at most ${mphText(fastest)}`,
+		`${speedText(exitMps)}${during(situation)}, from which the car cannot brake to ${speedText(entryMps!)} in ${lengthText(lengthM)}`,
+		`at most ${speedText(fastest)}`,
 	);
 }
 

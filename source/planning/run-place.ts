@@ -6,7 +6,7 @@ import type {Course, SequenceRun, StraightRun, Vehicle} from '../drivetrain/stra
 import {engineRpm} from '../drivetrain/tire.ts';
 import type {Condition, Place} from './conditions.ts';
 import type {StraightResult} from './results.ts';
-import {feetText, mphText} from './words.ts';
+import {lengthText, speedText} from './words.ts';
 
 export type PlaceRun = {
 	readonly place: Place;
@@ -174,10 +174,10 @@ function spareGripN({place, gears}: Drive, gear: number) {
 function sequenceRemarks(sequence: SequenceRun, place: Place): string[] {
 	const remarks: string[] = [];
 	if (sequence.slows) {
-		remarks.push(`slows from ${mphText(place.straight.exitMps)}, to ${mphText(sequence.finalMps)} at the end`);
+		remarks.push(`slows from ${speedText(place.straight.exitMps)}, to ${speedText(sequence.finalMps)} at the end`);
 	}
 	if (sequence.entryMissed) remarks.push('never reaches its entry speed: no braking');
 	if (sequence.pushed) remarks.push('the grade pushes the car past the limiter: speed held there');
-	if (sequence.limiterM > 0) remarks.push(`on the limiter for ${feetText(sequence.limiterM)}`);
+	if (sequence.limiterM > 0) remarks.push(`on the limiter for ${lengthText(sequence.limiterM)}`);
 	return remarks;
 }

@@ -5,7 +5,7 @@ import {fault} from './faults.ts';
 import type {Fault} from './results.ts';
 import {carIn, straightIn} from './situations.ts';
 import {type EngineInUse, powerFactor} from './vehicle.ts';
-import {mphText} from './words.ts';
+import {speedText} from './words.ts';
 
 /** Every such fault, one a field of a situation; a straight's own speed is named with its straight. */
 export function situationFaults(car: Car, track: Track, inUse: EngineInUse): Fault[] {
@@ -56,7 +56,7 @@ function speedFaults(situation: Situation, track: Track): Fault[] {
 				fault(
 					'track',
 					`situations.${situation.name}.${field}`,
-					`${mphText(speed!)} on ${straight.name}`,
+					`${speedText(speed!)} on ${straight.name}`,
 					'a speed above 0',
 				),
 			);

@@ -1,4 +1,7 @@
-/** Numbers inside sentences: reasons, remarks and faults. Speeds in mph, lengths in ft, as they are read at the track. */
+/**
+ * Numbers inside sentences: reasons, remarks and faults. A sentence is the same in every answer, so it says speeds and lengths
+ * in the units of the track and in metric ones.
+ */
 import {footM, mileM, mphMps} from '../drivetrain/constants.ts';
 
 /** "8820", "12,400": no decimals; thousands are set apart from five digits on, as a tachometer has four. */
@@ -25,19 +28,22 @@ export function rpmText(rpm: number): string {
 	return `${grouped(rpm)} rpm`;
 }
 
-/** "116.0 mph" */
-export function mphText(speedMps: number): string {
-	return `${(speedMps / mphMps).toFixed(1)} mph`;
+const kilometerM = 1000;
+const hourS = 3600;
+
+/** "116.0 mph (186.7 km/h)" */
+export function speedText(speedMps: number): string {
+	return `${(speedMps / mphMps).toFixed(1)} mph (${((speedMps * hourS) / kilometerM).toFixed(1)} km/h)`;
 }
 
-/** "650 ft" */
-export function feetText(lengthM: number): string {
-	return `${grouped(lengthM / footM)} ft`;
+/** "650 ft (198 m)" */
+export function lengthText(lengthM: number): string {
+	return `${grouped(lengthM / footM)} ft (${grouped(lengthM)} m)`;
 }
 
-/** "1200 miles" */
-export function milesText(lengthM: number): string {
-	return `${grouped(lengthM / mileM)} miles`;
+/** "1200 miles (1931 km)" */
+export function longLengthText(lengthM: number): string {
+	return `${grouped(lengthM / mileM)} miles (${grouped(lengthM / kilometerM)} km)`;
 }
 
 /** "0.021 s" */

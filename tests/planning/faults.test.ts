@@ -71,8 +71,8 @@ describe('a fault', () => {
 		expect(faultsOf({}, {situations}).map(({path, found}) => [path, found])).toEqual([
 			['situations.Odd.mass', 'a change that leaves nothing'],
 			['situations.Odd.grip', 'a change that leaves nothing'],
-			['situations.Odd.exit', '-12.0 mph on Front'],
-			['situations.Odd.exit', '-8.0 mph on Back'],
+			['situations.Odd.exit', '-12.0 mph (-19.3 km/h) on Front'],
+			['situations.Odd.exit', '-8.0 mph (-12.9 km/h) on Back'],
 		]);
 	});
 
@@ -86,8 +86,12 @@ describe('what no row can run', () => {
 		const faults = faultsOf({}, {straights: [straight('Front', {exitMps: 250 * mph})]});
 		expect(faults).toHaveLength(1);
 		expect(faults[0]).toMatchObject({document: 'track', path: 'straights.Front.exit'});
-		expect(faults[0]!.found).toMatch(/^250\.0 mph: \d{4,5} rpm or more in every allowed gear of every row$/);
-		expect(faults[0]!.allowed).toMatch(/^at most \d{3}\.\d mph, which is 9200 rpm in the tallest row$/);
+		expect(faults[0]!.found).toMatch(
+			/^250\.0 mph \(402\.3 km\/h\): \d{4,5} rpm or more in every allowed gear of every row$/,
+		);
+		expect(faults[0]!.allowed).toMatch(
+			/^at most \d{3}\.\d mph \(\d{3}\.\d km\/h\), which is 9200 rpm in the tallest row$/,
+		);
 	});
 
 	test('is the same exit in a situation, which is named', () => {
@@ -101,7 +105,7 @@ describe('what no row can run', () => {
 			{
 				document: 'track',
 				path: 'straights.Hill.grade',
-				found: 'from 40.0 mph the car stops within 900 ft at a grade of 200.0 % in every row',
+				found: 'from 40.0 mph (64.4 km/h) the car stops within 900 ft (274 m) at a grade of 200.0 % in every row',
 				allowed: 'a grade, wind and length that one pair and set at least can drive through',
 			},
 		]);
@@ -114,8 +118,8 @@ describe('what no row can run', () => {
 			{
 				document: 'track',
 				path: 'straights.Short.exit',
-				found: '100.0 mph, from which the car cannot brake to 40.0 mph in 98 ft',
-				allowed: 'at most 65.6 mph',
+				found: '100.0 mph (160.9 km/h), from which the car cannot brake to 40.0 mph (64.4 km/h) in 98 ft (30 m)',
+				allowed: 'at most 65.6 mph (105.6 km/h)',
 			},
 		]);
 	});

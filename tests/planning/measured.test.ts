@@ -57,10 +57,10 @@ describe('the answer', () => {
 
 	test('says that it is anchored, or shows both speeds', () => {
 		expect(remarksAt({endMps: modelMps()})).toBe(
-			'Anchored: the model meets the speed measured on Front within 0.2 mph.',
+			'Anchored: the model meets the speed measured on Front within 0.2 mph (0.3 km/h).',
 		);
 		expect(remarksAt({endMps: 100 * mph, rpm: 8000})).toMatch(
-			/^Not anchored: Front measured 100\.0 mph, 8000 rpm; model 1\d\d\.\d mph, \d{4} rpm with 33\/38 A\.$/,
+			/^Not anchored: Front measured 100\.0 mph \(160\.9 km\/h\), 8000 rpm; model 1\d\d\.\d mph \(\d{3}\.\d km\/h\), \d{4} rpm with 33\/38 A\.$/,
 		);
 		expect(remarksAt({gear: 3})).toBe('Not anchored: Front has no measured speed or RPM that gives one.');
 	});

@@ -89,7 +89,7 @@ describe('a failure', () => {
 			'Over the limit: 9310 at Front end (In the tow), 110 above 9200.',
 		);
 		expect(fails({...tow, check: 'limiter', value: 36.576})).toBe(
-			'On the limiter for 120 ft at Front end (In the tow).',
+			'On the limiter for 120 ft (37 m) at Front end (In the tow).',
 		);
 		expect(fails({check: 'band', at: 'Back exit', situation: 'Base', remark: 'stops before the end'})).toBe(
 			'Back exit: stops before the end.',
@@ -99,7 +99,7 @@ describe('a failure', () => {
 		);
 		expect(fails({check: 'stock'})).toBe('No set on hand.');
 		expect(fails({check: 'mileage', value: 1250 * 1609.344, bound: 1200 * 1609.344})).toBe(
-			'Out of miles: 1250 miles of 1200 miles.',
+			'Out of miles: 1250 miles (2012 km) of 1200 miles (1931 km).',
 		);
 		expect(fails({check: 'permitted', remark: 'x'})).toBe('Not permitted: x.');
 	});
