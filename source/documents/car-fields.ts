@@ -2,7 +2,20 @@
 import * as z from 'zod/mini';
 import {type CorrectedTo, trackTypes} from '../drivetrain/car.ts';
 import {carRules, curveRules, efficiencyRules, engineRules, ratioRules} from './car-rules.ts';
-import {choice, flag, group, list, name, number, quantity, type Range, wholeNumber} from './fields.ts';
+import {
+	choice,
+	coefficient,
+	decided,
+	flag,
+	group,
+	list,
+	name,
+	number,
+	quantity,
+	type Range,
+	wholeNumber,
+} from './fields.ts';
+import {learned} from './learned.ts';
 import * as shared from './shared-fields.ts';
 
 const {ranges} = shared;
@@ -30,7 +43,7 @@ const most = {engines: 20, curve: 500, gearboxes: 200, toothSums: 200} as const;
 const leastCurvePoints = 3;
 
 const seconds = (unlessGiven: string, description: string) =>
-	z.prefault(quantity('time', bounds.marginS, description), unlessGiven);
+	z.prefault(decided('time', bounds.marginS, description), unlessGiven);
 const rpmMargin = (unlessGiven: number, description: string) =>
 	z.prefault(number(bounds.marginRpm, description), unlessGiven);
 
@@ -54,6 +67,7 @@ const engine = () =>
 			),
 			limiter: z.optional(shared.rpm('Where the ignition cuts; the limit in force unless given.')),
 			pullRpm: z.optional(shared.rpm('Lowest RPM from which it pulls cleanly; the first curve point unless given.')),
+			power: z.prefault(shared.power('Share of the dyno curve that the car has.'), '100 %'),
 			bandShare: z.prefault(number(bounds.share, 'Share of peak power that bounds the power band.'), 0.9),
 			curve: list(curvePoint(), [leastCurvePoints, most.curve], 'Full-throttle torque, rising in RPM.').check(
 				curveRules(),
@@ -161,12 +175,15 @@ function buildCarFields() {
 			version: shared.version(),
 			name: name('Name of the car.'),
 			mass: quantity('mass', ranges.massKg, 'As raced, driver and fuel in.'),
-			rearShare: number(bounds.share, 'Share of the weight on the rear axle.'),
+			rearShare: coefficient(bounds.share, 'Share of the weight on the rear axle.', 0.5),
 			dragArea: quantity('area', ranges.dragAreaM2, 'Drag area, C_d·A.'),
 			downforceArea: quantity('area', ranges.downforceAreaM2, 'Downforce area, C_l·A.'),
-			rearDownforceShare: z.prefault(number({from: 0, to: 1}, 'Share of the downforce on the rear axle.'), 0.5),
-			rolling: number(bounds.rolling, 'Coefficient of rolling resistance.'),
-			grip: number(ranges.grip, 'Coefficient of friction of the driven tires.'),
+			rearDownforceShare: z.prefault(
+				coefficient({from: 0, to: 1}, 'Share of the downforce on the rear axle.', 0.5),
+				0.5,
+			),
+			rolling: coefficient(bounds.rolling, 'Coefficient of rolling resistance.', 0.018),
+			grip: coefficient(ranges.grip, 'Coefficient of friction of the driven tires.', 1.25),
 			wheelInertia: quantity('inertia', bounds.wheelInertia, 'All four wheels with what turns with them.'),
 			undrivenInertia: z.optional(
 				quantity('inertia', bounds.wheelInertia, 'The undriven wheels; half of "wheelInertia" unless given.'),
@@ -180,7 +197,7 @@ function buildCarFields() {
 			engines: list(engine(), [1, most.engines], 'Engine builds.'),
 			gearboxes: list(gearbox(), [1, most.gearboxes], 'Gearbox sets.'),
 			finalDrive: number(bounds.ratio, 'Ring teeth ÷ pinion teeth.'),
-			efficiency: z.optional(number(bounds.share, 'From engine to wheels, in every gear.')),
+			efficiency: z.optional(coefficient(bounds.share, 'From engine to wheels, in every gear.', 0.92)),
 			efficiencies: z.optional(
 				list(
 					number(bounds.share, 'From engine to wheels in a gear.'),
@@ -193,6 +210,7 @@ function buildCarFields() {
 			margins: z.prefault(margins(), {}),
 			installed: z.optional(installed()),
 			rules: z.optional(rulesByType()),
+			learned: learned(),
 		},
 		'A car, with its engines, gearbox sets and rack.',
 	).check(efficiencyRules(), carRules());

@@ -4,6 +4,7 @@ import type {Change, PowerChange} from '../drivetrain/track.ts';
 import {isWithin, type Range, rangeText, reportQuantity} from './fields.ts';
 import {shortened} from './problem.ts';
 import {allowedText, type Dimension, exampleOf, type QuantityProblem, quantityOf} from './quantity.ts';
+import {uncertain} from './uncertainties.ts';
 
 type ChangeReading = {ok: true; value: Change} | ({ok: false} & QuantityProblem);
 
@@ -12,25 +13,27 @@ const factorRange: Range = {above: 0, to: 10};
 
 /** A change of a value of this dimension; `range` is that of the value itself. */
 export function change(dimension: Dimension, range: Range, description: string) {
-	return z.pipe(
+	const field = z.pipe(
 		changeText(dimension, description),
 		z.transform((text: string, context) => given(changeOf(text, dimension, range), text, context)),
 	);
+	return uncertain(field, [dimension, 'share']);
 }
 
 /** As `change`; a bare number replaces, for a coefficient has no unit. */
 export function coefficientChange(range: Range, description: string) {
 	const allowed = `${allowedText(['number'])}; or a change, like "-3 %" or "+0.05"`;
 	const examples = [1.2, '-3 %', '+0.05'];
-	return z.pipe(
+	const field = z.pipe(
 		z.union([z.number(), z.string()], {error: allowed}).check(z.meta({description, examples})),
 		z.transform((value: number | string, context) => given(changeOf(String(value), 'number', range), value, context)),
 	);
+	return uncertain(field, ['number', 'share']);
 }
 
 /** As `change`; a percentage without sign is a share of the rated power. */
 export function powerChange(range: Range, description: string) {
-	return z.pipe(
+	const field = z.pipe(
 		changeText('power', description),
 		z.transform((text: string, context): PowerChange => {
 			const reading = changeOf(text, 'power', range, true);
@@ -39,6 +42,7 @@ export function powerChange(range: Range, description: string) {
 			return value.kind === 'scale' ? value : {kind: value.kind, watts: value.value};
 		}),
 	);
+	return uncertain(field, ['power', 'share']);
 }
 
 function changeText(dimension: Dimension, description: string) {

@@ -9,6 +9,7 @@ import {
 	type QuantityReading,
 	quantityOf,
 } from './quantity.ts';
+import {uncertain} from './uncertainties.ts';
 import type {Unit} from './units.ts';
 
 /** Bounds in SI; `above` is left out of the range, `from` and `to` belong to it. */
@@ -30,13 +31,22 @@ export function reportQuantity(
 	report(context, input, allowed, {found, ...(hint !== undefined && {hint}), ...(unknownUnits && {unknownUnits})});
 }
 
-/** A text with a unit, read to SI and held to a range. */
+/** A text with a unit, read to SI and held to a range; it may state its uncertainty. */
 export function quantity(dimension: Dimension, range: Range, description: string) {
+	return uncertain(quantityField(dimension, range, description, true), [dimension]);
+}
+
+/** As `quantity`, of what somebody decides: there is nothing uncertain about it. */
+export function decided(dimension: Dimension, range: Range, description: string) {
+	return quantityField(dimension, range, description, false);
+}
+
+function quantityField(dimension: Dimension, range: Range, description: string, mayBeUncertain: boolean) {
 	return z.pipe(
 		quantityText([dimension], description),
 		z.transform((text: string, context): number => {
 			const reading = quantityOf(text, dimension);
-			const problem = reading.ok ? outOfRange(text, reading, range) : reading;
+			const problem = reading.ok ? problemOf(text, reading, range, mayBeUncertain) : reading;
 			if (problem !== undefined) reportQuantity(context, text, problem);
 			return reading.ok ? reading.value : z.NEVER;
 		}),
@@ -48,9 +58,15 @@ function quantityText(dimensions: readonly Dimension[], description: string, exa
 }
 
 /** What is wrong with a value outside the range, in the reader's own unit; undefined inside. */
-function outOfRange(text: string, reading: QuantityReading & {ok: true}, range: Range): QuantityProblem | undefined {
-	if (isWithin(reading.value, range)) return undefined;
-	return {found: shown(text), allowed: rangeText(range, reading.unit)};
+function problemOf(
+	text: string,
+	{value, unit, dimension, uncertainty}: QuantityReading & {ok: true},
+	range: Range,
+	mayBeUncertain: boolean,
+): QuantityProblem | undefined {
+	if (!isWithin(value, range)) return {found: shown(text), allowed: rangeText(range, unit)};
+	if (mayBeUncertain || uncertainty === undefined) return undefined;
+	return {found: `${shown(text)} (an uncertainty)`, allowed: allowedText([dimension])};
 }
 
 export function isWithin(value: number, {above = -Infinity, from = -Infinity, to}: Range): boolean {
@@ -72,6 +88,26 @@ export function number(range: Range, description: string) {
 	const error = `a number, ${rangeText(range)}`;
 	return z.number({error}).check(...rangeChecks(range, error), z.meta({description}));
 }
+
+/** A plain number, or text with its uncertainty: `"1.25 ± 0.05"`. */
+export function coefficient(range: Range, description: string, example: number) {
+	const stated = `${example} ± ${Number((example * exampleSpread).toPrecision(1))}`;
+	const allowed = `a number, ${rangeText(range)}; or one with its uncertainty, like "${stated}"`;
+	const field = z.pipe(
+		z.union([z.number(), z.string()], {error: allowed}).check(z.meta({description, examples: [example, stated]})),
+		z.transform((given: number | string, context): number => {
+			const reading = typeof given === 'number' ? undefined : quantityOf(given, 'number');
+			const value = typeof given === 'number' ? given : reading?.ok ? reading.value : Number.NaN;
+			const isStated = reading === undefined || (reading.ok && reading.uncertainty !== undefined);
+			if (reading?.ok === false) reportQuantity(context, given, {...reading, allowed});
+			else if (!isStated || !isWithin(value, range)) report(context, given, allowed);
+			return value;
+		}),
+	);
+	return uncertain(field, ['number']);
+}
+/** Of the example: a few per cent, as coefficients are known. */
+const exampleSpread = 0.04;
 
 export function wholeNumber(range: Range, description: string) {
 	const error = `a whole number, ${rangeText(range)}`;

@@ -23,11 +23,15 @@ export type Quantity = {
 	dimension: Dimension;
 	/** The last unit in the text; undefined for a plain number. */
 	unit: Unit | undefined;
+	/** One standard deviation in SI, at least 0, where the text states it: "88 mph ± 1.5 mph". */
+	uncertainty: number | undefined;
 };
 export type QuantityReading = ({ok: true} & Quantity) | ({ok: false} & QuantityProblem);
 
 /** Longer text is no quantity. */
 const maxQuantityLength = 200;
+/** Between a value and its uncertainty. */
+const plusMinus = /±|\+\/[-−]/;
 
 const examples: Record<Dimension, string> = {
 	length: '650 ft',
@@ -67,30 +71,71 @@ function article(noun: string): string {
 	return /^[aeiou]/.test(noun) ? 'an' : 'a';
 }
 
+type Refusal = {stop: Stop; unknownUnits?: readonly string[]};
+
 /**
  * The quantity that a text states, by the unit table and what `learnUnits` has added to it. Arithmetic as in `expression.ts`;
- * none on temperatures. Expected failure is a value that says what was found and what is allowed.
+ * none on temperatures. After "±" or "+/-" its uncertainty may follow, of the same dimension, as one standard deviation;
+ * the unit may stand at its end for both. Expected failure is a value that says what was found and what is allowed.
  */
 export function quantityOf(text: string, expected: Dimension | readonly Dimension[]): QuantityReading {
 	const dimensions = typeof expected === 'string' ? [expected] : expected;
-	const refused = (stop: Stop, unknownUnits?: readonly string[]): QuantityReading => {
-		const found = `"${shortened(text)}"${stop.found === '' ? '' : ` (${shortened(stop.found)})`}`;
-		const problem = {ok: false as const, found, allowed: allowedText(dimensions)};
-		return {...problem, ...(stop.hint && {hint: stop.hint}), ...(unknownUnits && {unknownUnits})};
-	};
+	const reading = readingOf(text, dimensions);
+	if (!('stop' in reading)) return {ok: true, ...reading};
+	const {stop, unknownUnits} = reading;
+	const found = `"${shortened(text)}"${stop.found === '' ? '' : ` (${shortened(stop.found)})`}`;
+	const problem = {ok: false as const, found, allowed: allowedText(dimensions)};
+	return {...problem, ...(stop.hint && {hint: stop.hint}), ...(unknownUnits && {unknownUnits})};
+}
+
+function readingOf(text: string, dimensions: readonly Dimension[]): Quantity | Refusal {
 	if (text.length > maxQuantityLength)
-		return refused({found: `${text.length} characters, at most ${maxQuantityLength}`});
-	const read = tokensOf(text);
-	if (!read.ok) return refused(read.stop);
-	const units = unitsOf(read.tokens, dimensions);
-	if ('stop' in units) return refused(units.stop, units.unknownUnits);
+		return {stop: {found: `${text.length} characters, at most ${maxQuantityLength}`}};
+	const parts = text.split(plusMinus);
+	if (parts.length > 2) return {stop: {found: 'a second ±'}};
+	const [written, spread] = parts.map(tokensOf);
+	if (!written!.ok) return {stop: written!.stop};
+	if (spread === undefined) return plainReading(written!.tokens, dimensions);
+	if (!spread.ok) return {stop: spread.stop};
+	return readingWithSpread(written!.tokens, spread.tokens, dimensions);
+}
+
+/** A value without unit takes the one at the end: "88 ± 1.5 mph". */
+function readingWithSpread(
+	written: readonly Token[],
+	spread: readonly Token[],
+	dimensions: readonly Dimension[],
+): Quantity | Refusal {
+	const last = lastUnit(spread);
+	const whole = last === undefined || lastUnit(written) !== undefined ? written : [...written, last];
+	const value = plainReading(whole, dimensions);
+	if ('stop' in value) return value;
+	const read = plainReading(spread, [value.dimension], true);
+	if ('stop' in read) return {...read, stop: {...read.stop, found: `after ±: ${read.stop.found}`}};
+	if (read.value < 0) return {stop: {found: 'an uncertainty below 0'}};
+	return {...value, uncertainty: read.value};
+}
+
+/** `difference`: a temperature is one between two temperatures, without the zero point of its scale. */
+function plainReading(
+	tokens: readonly Token[],
+	dimensions: readonly Dimension[],
+	difference = false,
+): Quantity | Refusal {
+	const units = unitsOf(tokens, dimensions);
+	if ('stop' in units) return units;
 	const {dimension, byName} = units;
-	if (dimension === 'temperature' && !isSingle(read.tokens)) return refused({found: 'arithmetic on temperatures'});
-	const result = evaluate(read.tokens, byName);
-	if (!result.ok) return refused(result.stop);
-	if (!result.hasUnit && dimension !== 'number') return refused({found: 'no unit'});
-	const last = read.tokens.findLast(token => token.kind === 'unit');
-	return {ok: true, value: result.value, signed: isSigned(read.tokens), dimension, unit: last && byName.get(last.name)};
+	if (dimension === 'temperature' && !isSingle(tokens)) return {stop: {found: 'arithmetic on temperatures'}};
+	const meant = difference ? new Map([...byName].map(([name, unit]) => [name, {...unit, zero: 0}])) : byName;
+	const result = evaluate(tokens, meant);
+	if (!result.ok) return {stop: result.stop};
+	if (!result.hasUnit && dimension !== 'number') return {stop: {found: 'no unit'}};
+	const unit = byName.get(lastUnit(tokens)?.name ?? '');
+	return {value: result.value, signed: isSigned(tokens), dimension, unit, uncertainty: undefined};
+}
+
+function lastUnit(tokens: readonly Token[]) {
+	return tokens.findLast(token => token.kind === 'unit');
 }
 
 /** As `quantityOf`; a unit that the table lacks (`furlong`, `stone`) is looked up first, which loads a library. */
@@ -101,7 +146,7 @@ export async function readQuantity(text: string, expected: Dimension | readonly 
 	return (await learnUnits(reading.unknownUnits)) ? quantityOf(text, expected) : reading;
 }
 
-type Units = {dimension: Dimension; byName: Map<string, Unit>} | {stop: Stop; unknownUnits?: readonly string[]};
+type Units = {dimension: Dimension; byName: Map<string, Unit>} | Refusal;
 
 /** What the unit names mean in the first of the expected dimensions that has them all. */
 function unitsOf(tokens: readonly Token[], dimensions: readonly Dimension[]): Units {

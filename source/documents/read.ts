@@ -2,6 +2,7 @@
 import * as z from 'zod/mini';
 import type {Car} from '../drivetrain/car.ts';
 import type {Track} from '../drivetrain/track.ts';
+import type {Uncertainties} from '../drivetrain/uncertainties.ts';
 import {carFields} from './car-fields.ts';
 import {carFrom} from './car-from-document.ts';
 import {type Problem, shown} from './problem.ts';
@@ -10,12 +11,20 @@ import {isPlaceable, readJson} from './read-json.ts';
 import {documentVersion} from './shared-fields.ts';
 import {trackFields} from './track-fields.ts';
 import {trackFrom} from './track-from-document.ts';
+import {uncertaintiesIn} from './uncertainties.ts';
 
 export {describeProblems, type Problem} from './problem.ts';
 export {maxDocumentBytes} from './read-json.ts';
 
 export type Reading<T> =
-	| {ok: true; value: T /** The JSON as written. */; document: Record<string, unknown>}
+	| {
+			ok: true;
+			value: T;
+			/** The JSON as written. */
+			document: Record<string, unknown>;
+			/** By the path of the field, where the document states it. */
+			uncertainties: Uncertainties;
+	  }
 	| {ok: false; problems: Problem[]};
 
 /** The track that a text describes, or all that is wrong with it, in the order of the text. */
@@ -50,7 +59,7 @@ function checkDocument<S extends z.core.$ZodType, T>(
 	const head = headProblem(document, kind);
 	if (head !== undefined) return {ok: false, problems: [head.problem]};
 	const checked = z.safeParse(fields, document);
-	if (checked.success) return {ok: true, value: build(checked.data), document};
+	if (checked.success) return accepted(fields, build(checked.data), document);
 	return {ok: false, problems: problemsFrom(checked.error.issues, document).map(({problem}) => problem)};
 }
 
@@ -66,10 +75,17 @@ async function readDocument<S extends z.core.$ZodType, T>(
 	const head = headProblem(document, kind);
 	if (head !== undefined) return {ok: false, problems: await placed(json.text, [head], json.problems)};
 	const checked = await check(fields, document);
-	if (checked.success && json.problems.length === 0) return {ok: true, value: build(checked.data), document};
+	if (checked.success && json.problems.length === 0) return accepted(fields, build(checked.data), document);
 	const problems = checked.success ? [] : problemsFrom(checked.error.issues, document);
 	return {ok: false, problems: await placed(json.text, problems, json.problems)};
 }
+
+const accepted = <T>(fields: z.core.$ZodType, value: T, document: Record<string, unknown>): Reading<T> => ({
+	ok: true,
+	value,
+	document,
+	uncertainties: uncertaintiesIn(fields, document),
+});
 
 /** Units that the table lacks are looked up once, and the document is read again. */
 async function check<S extends z.core.$ZodType>(fields: S, document: unknown) {

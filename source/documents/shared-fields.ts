@@ -18,6 +18,8 @@ export const ranges = {
 	diameterM: {from: 0.15, to: 1.6},
 	growth: {from: 0, to: 0.1},
 	slip: {from: 0, to: 0.3},
+	/** Share of the dyno curve that reaches the car. */
+	power: {above: 0, to: 2},
 	gear: {from: 1, to: 20},
 	teeth: {from: 1, to: 400},
 } as const satisfies Record<string, Range>;
@@ -60,6 +62,7 @@ export function tireFields() {
 export const rollout = (side: string) =>
 	quantity('length', ranges.rolloutM, `Rollout of the ${side} driven tire at race pressure.`);
 export const growth = () => quantity('share', ranges.growth, 'Growth of the rolling circumference at 100 mph.');
+export const power = (description: string) => quantity('share', ranges.power, description);
 export const slip = () => quantity('share', ranges.slip, 'Slip under full throttle.');
 export const steadySlip = () => quantity('share', ranges.slip, 'Slip at a steady or closed throttle.');
 
@@ -97,6 +100,15 @@ export function rules(description: string) {
 		description,
 	);
 }
+
+const datePattern =
+	/^\d{4}-(0[1-9]|1[0-2])-(0[1-9]|[12]\d|3[01])(T\d{2}:\d{2}(:\d{2}(\.\d{1,9})?)?(Z|[+-]\d{2}:\d{2})?)?$/;
+const dateError = 'a date like "2025-06-14" or "2025-06-14T18:05:00Z" (ISO 8601)';
+export const date = (description: string) =>
+	z.string({error: dateError}).check(
+		z.refine(text => datePattern.test(text) && !Number.isNaN(Date.parse(text)), {error: dateError}),
+		z.meta({description}),
+	);
 
 /** A `$schema` is for editors; the reading ignores it. */
 export const schemaLink = () => z.optional(z.string({error: 'the address of a JSON Schema, as text'}));

@@ -2,7 +2,8 @@
 import * as z from 'zod/mini';
 import {airFields, airRules, windFields} from './air-fields.ts';
 import {change, coefficientChange, powerChange} from './changes.ts';
-import {group, list, name, number, quantity, type Range} from './fields.ts';
+import {coefficient, decided, group, list, name, number, quantity, type Range} from './fields.ts';
+import {learned} from './learned.ts';
 import * as shared from './shared-fields.ts';
 import {gearListRules, situationRules, straightRules, trackRules} from './track-rules.ts';
 
@@ -33,7 +34,7 @@ const measured = () =>
 	group(
 		{
 			end: z.optional(speed('Highest speed seen.')),
-			rpm: z.optional(shared.rpm('Highest RPM seen.')),
+			rpm: z.optional(coefficient(ranges.rpm, 'Highest RPM seen.', 8420)),
 			pair: z.optional(shared.pair('Pair in the car then; the installed one unless given.')),
 			gearbox: z.optional(name('Gearbox set then; the installed one unless given.')),
 			gear: z.optional(shared.gear('Gear at the end.')),
@@ -61,7 +62,7 @@ const straight = () =>
 			),
 			grade: z.prefault(quantity('share', bounds.grade, 'Rise over run.'), '0 %'),
 			heading: z.optional(quantity('angle', bounds.headingRad, 'Direction of travel, clockwise from north.')),
-			load: z.prefault(number(bounds.load, 'Normal-load factor of a flat-out banked corner.'), 1),
+			load: z.prefault(coefficient(bounds.load, 'Normal-load factor of a flat-out banked corner.', 1.3), 1),
 			extraDrag: z.prefault(
 				quantity('force', bounds.extraDragN, 'Extra drag, as of scrub in a flat-out corner.'),
 				'0 N',
@@ -111,7 +112,8 @@ const carChange = () =>
 					'What differs of the tires.',
 				).check(shared.oneDiameter()),
 			),
-			grip: z.optional(number(ranges.grip, 'Grip here.')),
+			grip: z.optional(coefficient(ranges.grip, 'Grip here.', 1.25)),
+			power: z.optional(shared.power('Share of the dyno curve here.')),
 			mass: z.optional(quantity('mass', ranges.massKg, 'Mass here.')),
 			dragArea: z.optional(quantity('area', ranges.dragAreaM2, 'Drag area here.')),
 			downforceArea: z.optional(quantity('area', ranges.downforceAreaM2, 'Downforce area here.')),
@@ -122,8 +124,8 @@ const carChange = () =>
 const pitRoad = () =>
 	group(
 		{
-			limit: speed('Pit-road speed limit.'),
-			tolerance: z.prefault(quantity('speed', bounds.tolerance, 'What the officials allow above it.'), '0 mph'),
+			limit: decided('speed', ranges.speed, 'Pit-road speed limit.'),
+			tolerance: z.prefault(decided('speed', bounds.tolerance, 'What the officials allow above it.'), '0 mph'),
 			gear: z.optional(shared.gear('Gear on pit road; the lowest with RPM 1000 or more under the limit unless given.')),
 		},
 		'Pit road.',
@@ -160,6 +162,7 @@ function buildTrackFields() {
 			situations: z.optional(list(situation(), [0, shared.mostNames], 'How the car will run beside the base.')),
 			rules: z.optional(shared.rules('What the rule book allows at this track.')),
 			car: z.optional(carChange()),
+			learned: learned(),
 		},
 		'A track, its day and the situations to plan for.',
 	).check(trackRules());

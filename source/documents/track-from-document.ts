@@ -108,6 +108,7 @@ function gearRange(gears: readonly number[] | undefined): GearRange | undefined 
 function carChangeFrom({
 	tires = {},
 	grip,
+	power,
 	mass,
 	dragArea,
 	downforceArea,
@@ -123,6 +124,7 @@ function carChangeFrom({
 			...(size !== undefined && {diameterM: size}),
 		},
 		grip,
+		power,
 		massKg: mass,
 		dragAreaM2: dragArea,
 		downforceAreaM2: downforceArea,

@@ -18,6 +18,8 @@ export type Engine = {
 	/** Where the ignition cuts; undefined: at the limit in force. */
 	readonly limiter: number | undefined;
 	readonly pullRpm: number;
+	/** Share of the dyno curve that the car has: one factor on its torque. */
+	readonly power: number;
 	/** Share of peak power that bounds the power band. */
 	readonly bandShare: number;
 	/** At least three points, rising in rpm. */

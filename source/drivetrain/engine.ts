@@ -7,11 +7,14 @@ import {signChanges} from './polynomial.ts';
 export type PowerPeak = {readonly rpm: number; readonly powerW: number};
 export type PowerBand = {readonly lowRpm: number; readonly highRpm: number};
 
-/** Full-throttle torque at the day that the curve is corrected to, N m over rev/min; held outside the dyno points. */
+/**
+ * Full-throttle torque at the day that the curve is corrected to, N m over rev/min: the dyno points times the engine's
+ * `power`; held outside the points.
+ */
 export function ratedTorque(engine: Engine): MonotoneCubic {
 	return monotoneCubic(
 		engine.curve.map(point => point.rpm),
-		engine.curve.map(point => point.torqueNm),
+		engine.curve.map(point => point.torqueNm * engine.power),
 	);
 }
 

@@ -82,6 +82,8 @@ export type Situation = {
 export type CarChange = {
 	readonly tires: Partial<Tires>;
 	readonly grip: number | undefined;
+	/** Share of the dyno curve, in place of the engine's. */
+	readonly power: number | undefined;
 	readonly massKg: number | undefined;
 	readonly dragAreaM2: number | undefined;
 	readonly downforceAreaM2: number | undefined;

@@ -11,7 +11,7 @@ export function apply(change: Change | undefined, base: number): number {
 
 /** The car as it is at this track: the track's own numbers replace the car's. */
 export function carAt(track: Track, car: Car): Car {
-	const {tires, grip, massKg, dragAreaM2, downforceAreaM2} = track.car;
+	const {tires, grip, power, massKg, dragAreaM2, downforceAreaM2} = track.car;
 	return {
 		...car,
 		tires: {...car.tires, ...given(tires)},
@@ -19,6 +19,7 @@ export function carAt(track: Track, car: Car): Car {
 		massKg: massKg ?? car.massKg,
 		dragAreaM2: dragAreaM2 ?? car.dragAreaM2,
 		downforceAreaM2: downforceAreaM2 ?? car.downforceAreaM2,
+		engines: power === undefined ? car.engines : car.engines.map(engine => ({...engine, power})),
 	};
 }
 
@@ -75,6 +76,7 @@ export function replacedBy(change: CarChange): string[] {
 	const names: [string, unknown][] = [
 		['tires', Object.keys(given(change.tires)).length > 0 ? true : undefined],
 		['grip', change.grip],
+		['power', change.power],
 		['mass', change.massKg],
 		['drag area', change.dragAreaM2],
 		['downforce area', change.downforceAreaM2],

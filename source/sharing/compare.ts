@@ -51,15 +51,15 @@ function branchesOf(value: unknown): Map<string, unknown> | undefined {
 /** A name, a situation, a pair, or the RPM of a dyno point or the gear of a shift. */
 function nameOf(entry: unknown): string | undefined {
 	if (typeof entry !== 'object' || entry === null) return undefined;
-	const {name, situation, driving, driven, from, rpm} = entry as Json;
+	const {name, situation, field, driving, driven, from, rpm} = entry as Json;
 	if (driving !== undefined && driven !== undefined) return `${driving}/${driven}`;
-	for (const text of [name, situation]) if (typeof text === 'string') return text;
+	for (const text of [name, situation, field]) if (typeof text === 'string') return text;
 	for (const number of [from, rpm]) if (typeof number === 'number') return String(number);
 	return undefined;
 }
 
 /** Fields whose text is a name, not a quantity, whatever it looks like. */
-const nameFields = /(^|\.)(name|engine|gearbox|gearboxes|notes|at|date|type|situation|from)$/;
+const nameFields = /(^|\.)(name|engine|gearbox|gearboxes|notes|at|date|type|situation|field|from)$/;
 
 function sameValue(a: unknown, b: unknown, path: string): boolean {
 	if (typeof a === 'string' && typeof b === 'string') {
@@ -85,8 +85,12 @@ function sameQuantity(a: string, b: string): boolean {
 	return dimensions.some(dimension => {
 		const [one, other] = [quantityOf(a, dimension), quantityOf(b, dimension)];
 		if (!one.ok || !other.ok || one.signed !== other.signed) return false;
-		return close(one.value, other.value, dimension);
+		return close(one.value, other.value, dimension) && sameSpread(one.uncertainty, other.uncertainty);
 	});
+}
+
+function sameSpread(a: number | undefined, b: number | undefined): boolean {
+	return a === b || (a !== undefined && b !== undefined && close(a, b, 'number'));
 }
 
 function close(a: number, b: number, dimension: Dimension): boolean {

@@ -18,6 +18,8 @@ export type PlanSource = {
 
 /** The plan for a row. */
 export function makePlan({track, car, row, setting, table, date, notes}: PlanSource): PlanDocument {
+	// Where a value was learned from is not needed to compute with it.
+	const {learned: _learned, ...rest} = track;
 	const chosen = {pair: row.pair, gearbox: row.gearbox, engine: setting.engine};
 	return {
 		kind: 'plan',
@@ -26,7 +28,7 @@ export function makePlan({track, car, row, setting, table, date, notes}: PlanSou
 		...chosen,
 		results: statedResults(row, setting, restartOf(table)),
 		...(notes !== undefined && {notes}),
-		track,
+		track: rest,
 		car: reduceCar(car, track, chosen),
 	};
 }

@@ -2,7 +2,7 @@
 import * as z from 'zod/mini';
 import {carFields} from '../documents/car-fields.ts';
 import {group, list, name, type Range, rule, wholeNumber} from '../documents/fields.ts';
-import {gear, kind, mostNames, pair, ranges, version} from '../documents/shared-fields.ts';
+import {date, gear, kind, mostNames, pair, ranges, version} from '../documents/shared-fields.ts';
 import {trackFields} from '../documents/track-fields.ts';
 
 export type Stated = {
@@ -41,15 +41,6 @@ const shiftRpm: Range = {from: 0, to: ranges.rpm.to};
 const shiftedFrom: Range = {from: ranges.gear.from, to: ranges.gear.to - 1};
 const statedRpmOf = (what: string) => wholeNumber(statedRpm, what);
 const sources = ['engine', 'rules', 'track'] as const;
-
-const datePattern =
-	/^\d{4}-(0[1-9]|1[0-2])-(0[1-9]|[12]\d|3[01])(T\d{2}:\d{2}(:\d{2}(\.\d{1,9})?)?(Z|[+-]\d{2}:\d{2})?)?$/;
-const dateError = 'a date like "2025-06-14" or "2025-06-14T18:05:00Z" (ISO 8601)';
-const date = () =>
-	z.string({error: dateError}).check(
-		z.refine(text => datePattern.test(text) && !Number.isNaN(Date.parse(text)), {error: dateError}),
-		z.meta({description: 'When the plan was made.'}),
-	);
 
 const notesError = `a text of at most ${longestNotes} characters`;
 const notes = () => z.string({error: notesError}).check(z.maxLength(longestNotes, {error: notesError}));
@@ -104,7 +95,7 @@ function buildPlanFields() {
 		{
 			kind: kind('plan'),
 			version: version(),
-			date: date(),
+			date: date('When the plan was made.'),
 			pair: pair('The pair chosen.'),
 			gearbox: name('The gearbox set chosen.'),
 			engine: name('The engine build.'),

@@ -28,6 +28,7 @@ export const sections: readonly Section[] = [
 	{label: 'Situation', path: ['track', 'situations'], subject: 'name', many: true},
 	{label: 'Rules here', path: ['track', 'rules']},
 	{label: 'On the car here', path: ['track', 'car']},
+	{label: 'Learned here', path: ['track', 'learned'], many: true},
 	{label: 'Car', path: ['car'], subject: 'name'},
 	{label: 'Engine', path: ['car', 'engines'], subject: 'name', many: true},
 	{label: 'Gearbox', path: ['car', 'gearboxes'], subject: 'name', many: true},
@@ -37,6 +38,7 @@ export const sections: readonly Section[] = [
 	{label: 'Margins', path: ['car', 'margins']},
 	{label: 'Installed', path: ['car', 'installed']},
 	{label: 'Rules', path: ['car', 'rules']},
+	{label: 'Learned', path: ['car', 'learned'], many: true},
 ];
 
 /** Documents inside the plan, and what every one of them starts with. */

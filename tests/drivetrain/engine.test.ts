@@ -15,12 +15,19 @@ const lbfFt = lbf * 12 * inchM;
 const hp = 550 * lbfFt;
 const noLimit = Number.POSITIVE_INFINITY;
 
-const engineOf = (curve: Engine['curve']) => ({curve}) as Engine;
+const engineOf = (curve: Engine['curve']) => ({curve, power: 1}) as Engine;
 
 // Published: T. D. Gillespie, Fundamentals of Vehicle Dynamics (SAE, 1992), example problem 1, p. 32: rpm and lbf ft.
 const rpm = [800, 1200, 1600, 2000, 2400, 2800, 3200, 3600, 4000, 4400, 4800, 5200];
 const torque = [120, 132, 145, 160, 175, 181, 190, 198, 200, 201, 198, 180];
 const gillespie = ratedTorque(engineOf(rpm.map((value, i) => ({rpm: value, torqueNm: torque[i]! * lbfFt}))));
+
+test('an engine that has a share of its dyno curve has that share of every torque', () => {
+	const points = rpm.map((value, i) => ({rpm: value, torqueNm: torque[i]! * lbfFt}));
+	const weaker = ratedTorque({...engineOf(points), power: 0.98});
+	for (const speed of [500, 1000, 3333, 6000])
+		expect(relativeError(valueAt(weaker, speed), 0.98 * valueAt(gillespie, speed))).toBeLessThan(1e-12);
+});
 
 describe('power', () => {
 	// Recomputed, GNU units 2.22: K = 33000/(2π) = 5252.113122032546, 1 hp = 745.69987158227022 W.

@@ -28,6 +28,7 @@ export const engine = (change: Partial<Engine> = {}): Engine => ({
 	correctedTo: 'J1349',
 	limiter: undefined,
 	pullRpm: 4000,
+	power: 1,
 	bandShare: 0.9,
 	curve: [
 		{rpm: 4000, torqueNm: 550},
@@ -149,6 +150,13 @@ export const track = (change: Partial<Track> = {}): Track => ({
 		situation('Long run', {exit: add(-3 * mph), rollout: add(-0.3 * inch)}),
 	],
 	rules: {rpmLimit: undefined, gearboxes: undefined, pairs: undefined},
-	car: {tires: {}, grip: undefined, massKg: undefined, dragAreaM2: undefined, downforceAreaM2: undefined},
+	car: {
+		tires: {},
+		grip: undefined,
+		power: undefined,
+		massKg: undefined,
+		dragAreaM2: undefined,
+		downforceAreaM2: undefined,
+	},
 	...change,
 });

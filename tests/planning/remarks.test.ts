@@ -39,7 +39,14 @@ describe('remarks', () => {
 	});
 
 	test('say which of the car’s numbers the track replaces', () => {
-		const own = {tires: {}, grip: 1.2, massKg: 1600, dragAreaM2: undefined, downforceAreaM2: undefined};
+		const own = {
+			tires: {},
+			grip: 1.2,
+			power: undefined,
+			massKg: 1600,
+			dragAreaM2: undefined,
+			downforceAreaM2: undefined,
+		};
 		expect(remarksOf({}, {car: own})).toContain("This track's own numbers replace the car's: grip and mass.");
 	});
 

@@ -36,10 +36,18 @@ describe('the car in a situation', () => {
 	});
 
 	test('at a track has the track’s own numbers, where they are given', () => {
-		const own = {tires: {leftM: 2}, grip: 1.1, massKg: undefined, dragAreaM2: undefined, downforceAreaM2: 2};
+		const own = {
+			tires: {leftM: 2},
+			grip: 1.1,
+			power: 0.98,
+			massKg: undefined,
+			dragAreaM2: undefined,
+			downforceAreaM2: 2,
+		};
 		const changed = carAt(track({car: own}), car({massKg: 1600, tires: {...car().tires, rightM: 2.2}}));
 		expect([changed.tires.leftM, changed.tires.rightM, changed.grip, changed.massKg]).toEqual([2, 2.2, 1.1, 1600]);
-		expect(replacedBy(own)).toEqual(['tires', 'grip', 'downforce area']);
+		expect(changed.engines.map(({power}) => power)).toEqual([0.98]);
+		expect(replacedBy(own)).toEqual(['tires', 'grip', 'power', 'downforce area']);
 	});
 
 	test('is the base’s vehicle where only speeds and wind change', () => {

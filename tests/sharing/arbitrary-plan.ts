@@ -44,6 +44,24 @@ const quantity = (min: number, max: number, ...units: string[]) =>
 			fc.constantFrom('', '+0', '*1', '-0.0', '÷1', '−0'),
 		)
 		.map(([hundredths, unit, gap, more]) => `${hundredths / 100}${more}${gap}${unit}`);
+/** With or without its uncertainty. */
+const spread = (stated: fc.Arbitrary<string>, ...uncertainties: string[]) =>
+	fc.tuple(stated, fc.constantFrom('', ...uncertainties)).map(([value, more]) => value + more);
+const coefficient = (min: number, max: number) =>
+	fc.oneof(number(min, max), fc.constantFrom('1 ± 0.05', '0.9+/-.1', '0.75  ±  0'));
+const learned = fc.array(
+	fc.record(
+		{
+			field: fc.constantFrom('tires.left', 'straights[0].exit', 'grip'),
+			value: fc.oneof(fc.constantFrom('86.42 in ± 0.06 in', '5', '1.2 ± 0.1'), number(0, 9000)),
+			before: fc.oneof(fc.constant('86.4 in'), number(0, 5)),
+			from: fc.oneof(names, fc.constant('practice, 41 laps')),
+			date: fc.constantFrom('2025-06-14', '2025-06-14T18:05:00Z'),
+		},
+		{requiredKeys: ['field', 'value', 'from', 'date'], noNullPrototype: true},
+	),
+	{maxLength: 3},
+);
 const temperature = () =>
 	fc.integer({min: 40, max: 110}).chain(t => fc.constantFrom(`${t} degF`, `${t}°F`, `${t}  °F`));
 const change = (most: number, ...units: string[]) =>
@@ -57,7 +75,7 @@ const record = <T extends Record<string, fc.Arbitrary<unknown>>>(fields: T, requ
 const whole = <T extends Record<string, fc.Arbitrary<unknown>>>(fields: T) =>
 	fc.record(fields, {noNullPrototype: true});
 
-const speed = quantity(60, 90, 'mph', 'km/h');
+const speed = spread(quantity(60, 90, 'mph', 'km/h'), ' ± 1.5 mph', '+/-2 km/h', '±0mph');
 const gears = fc
 	.tuple(fc.integer({min: 1, max: 4}), fc.integer({min: 1, max: 5}))
 	.map(([a, n]) => Array.from({length: n}, (_, i) => a + i));
@@ -74,12 +92,12 @@ const straight = (name: string) =>
 				minimum: speed,
 				grade: change(5, '%'),
 				heading: quantity(0, 360, 'deg', '°'),
-				load: number(0.5, 3),
+				load: coefficient(0.5, 3),
 				extraDrag: quantity(0, 900, 'N', 'lbf'),
 				gears,
 				measured: record({
 					end: speed,
-					rpm: number(1, 9000),
+					rpm: fc.oneof(number(1, 9000), fc.constant('8420 ± 15')),
 					pair: pairText,
 					gearbox: names,
 					gear: fc.integer({min: 1, max: 20}),
@@ -102,7 +120,7 @@ const situation = (name: string) =>
 					name: fc.constant(name),
 					share: number(0.1, 10),
 					exit: change(5, 'mph'),
-					drag: change(9, '%'),
+					drag: spread(change(9, '%'), ' ± 3 %'),
 					grip: fc.oneof(number(0.5, 3), fc.constantFrom('1.2', '+0.05', '-3 %')),
 					power: change(9, 'hp'),
 					mass: fc.oneof(change(50, 'lb'), quantity(2000, 4000, 'lb')),
@@ -131,7 +149,10 @@ const track = fc.tuple(uniqueNames(1, 5), uniqueNames(0, 4)).chain(([straights, 
 			lap: quantity(1, 3, 'mi', 'km'),
 			air,
 			wind,
-			pitRoad: record({limit: speed, tolerance: quantity(0, 5, 'mph'), gear: fc.integer({min: 1, max: 5})}, ['limit']),
+			pitRoad: record(
+				{limit: quantity(30, 60, 'mph'), tolerance: quantity(0, 5, 'mph'), gear: fc.integer({min: 1, max: 5})},
+				['limit'],
+			),
 			restart: record({speed, distance: quantity(100, 900, 'ft'), gear: fc.integer({min: 1, max: 5})}, [
 				'speed',
 				'distance',
@@ -142,9 +163,11 @@ const track = fc.tuple(uniqueNames(1, 5), uniqueNames(0, 4)).chain(([straights, 
 			rules,
 			car: record({
 				tires: record({left: quantity(80, 90, 'in'), growth: quantity(0, 2, '%'), size: fc.constant('275/40R17')}),
-				grip: number(0, 5),
+				grip: coefficient(0, 5),
+				power: spread(quantity(80, 120, '%'), ' ± 0.5 %'),
 				mass: quantity(3000, 4000, 'lb'),
 			}),
+			learned,
 		},
 		['kind', 'version', 'name', 'type', 'straights'],
 	),
@@ -167,6 +190,7 @@ const engine = (name: string) =>
 			correctedTo: fc.constantFrom('J1349', 'J607', 'air'),
 			limiter: number(1, 30_000),
 			bandShare: number(0.1, 1),
+			power: spread(quantity(80, 120, '%'), ' ± 0.5 %'),
 			curve,
 		},
 		['name', 'for', 'rpmLimit', 'inertia', 'curve'],
@@ -202,7 +226,7 @@ const car = ({engines, sets, pairs: rack}: {engines: string[]; sets: string[]; p
 			dragArea: quantity(0, 2, 'm^2', 'm²', 'ft²'),
 			downforceArea: quantity(0, 3, 'm^2'),
 			rolling: number(0, 0.2),
-			grip: number(0, 5),
+			grip: coefficient(0, 5),
 			wheelInertia: quantity(0, 9, 'kg m^2'),
 			engines: fc.tuple(...engines.map(engine)),
 			gearboxes: fc.tuple(...sets.map(name => ratios.map(list => ({name, ratios: list})))),
@@ -220,6 +244,7 @@ const car = ({engines, sets, pairs: rack}: {engines: string[]; sets: string[]; p
 				},
 				['pairs'],
 			),
+			learned,
 			margins: record({limitRpm: number(0, 100), settleStart: quantity(0, 2, 's')}),
 			installed: fc.constant({pair: rack.at(-1)!.join('/'), gearbox: sets.at(-1)!}),
 			rules: record({

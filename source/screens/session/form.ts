@@ -28,7 +28,8 @@ export type Form = readonly Section[];
 
 /** A list whose entries have no more fields than this is a table. */
 const mostColumns = 5;
-const hidden = new Set(['$schema', 'kind', 'version']);
+/** What is not typed: what the file is, and the record of what was learned. */
+const hidden = new Set(['$schema', 'kind', 'version', 'learned']);
 
 export function formOf(schema: Schema, document: JsonObject, title: string): Form {
 	return sections(schema, document, [], title);
@@ -83,7 +84,7 @@ function fieldOf(
 
 function listSections(schema: Schema, document: JsonObject, path: Path, within: string, top: boolean): Section[] {
 	const entry = schema.type === 'array' && schema.items?.type === 'object' ? schema.items : undefined;
-	if (entry === undefined) return [];
+	if (entry === undefined || hidden.has(String(path.at(-1)))) return [];
 	const value = valueAt(document, path);
 	const entries = isList(value) ? value : [];
 	const name = words(String(path.at(-1)));

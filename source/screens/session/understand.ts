@@ -122,7 +122,7 @@ function quantity(
 	const borrowed = whole.ok ? undefined : withUnitOf(typed, before, dimensions, system);
 	const reading = borrowed?.reading ?? whole;
 	if (!reading.ok) return refused(reading);
-	const isPlain = reading.dimension === 'number' && !reading.signed;
+	const isPlain = reading.dimension === 'number' && !reading.signed && reading.uncertainty === undefined;
 	return {
 		ok: true,
 		value: isPlain ? reading.value : (borrowed?.text ?? typed),
@@ -147,13 +147,17 @@ const changeWords = ({signed, dimension, value}: Quantity): string => {
 };
 
 /** "118.0 mph = 189.9 km/h": in the units that are read, and as it was written where that is another. */
-export function quantityWords({value, dimension, unit}: Quantity, system: UnitSystem): string {
-	if (dimension === 'number') return String(Number(value.toPrecision(6)));
+export function quantityWords({value, dimension, unit, uncertainty}: Quantity, system: UnitSystem): string {
+	const spread = (factor: number) =>
+		uncertainty === undefined ? '' : ` ± ${Number((uncertainty / factor).toPrecision(3))}`;
+	if (dimension === 'number') return `${Number(value.toPrecision(6))}${spread(1)}`;
 	const short = dimension === 'length' && Math.abs(value) < shortLengthM;
 	const name = short ? shortLength[system] : told[system][dimension];
 	const shownIn = name === undefined ? undefined : findUnit(name, dimension);
 	const names = [unit, shownIn].filter(one => one !== undefined);
-	const texts = names.map(one => `${Number((value / one.factor + one.zero).toPrecision(5))} ${one.name}`);
+	const texts = names.map(
+		one => `${Number((value / one.factor + one.zero).toPrecision(5))}${spread(one.factor)} ${one.name}`,
+	);
 	return [...new Set(texts)].join(' = ');
 }
 

@@ -93,7 +93,7 @@ test('a list with nothing in it has a section in which one can be added', () => 
 });
 
 test('a place that the form does not have becomes the nearest one', () => {
-	expect(inside(track, {section: 99, row: 99, column: 9})).toEqual({section: 9, row: 10, column: 0});
+	expect(inside(track, {section: 99, row: 99, column: 9})).toEqual({section: 9, row: 11, column: 0});
 	expect(inside(track, {section: 1, row: -4, column: -1})).toEqual({section: 1, row: 0, column: 0});
 	expect(fieldAt(track, {section: 1, row: 1, column: 0})?.label).toBe('exit');
 	expect(valueAt(oval.json, fieldAt(track, {section: 1, row: 1, column: 0})!.path)).toBe('76 mph');
