@@ -1,0 +1,262 @@
+/** The odds of every pair and set, draw by draw, for a caller that has other things to do in between. */
+import type {Car} from '../drivetrain/car.ts';
+import {samePair} from '../drivetrain/gear-pair.ts';
+import type {Track} from '../drivetrain/track.ts';
+import {candidatesOf} from '../planning/candidates.ts';
+import {done} from '../planning/faults.ts';
+import {planFor} from '../planning/plan.ts';
+import type {Outcome} from '../planning/results.ts';
+import {finish, groundOf, type Progress} from '../planning/run-rack.ts';
+import {barredBy} from './barred.ts';
+import {type Day, dayOf} from './day.ts';
+import {decide, ordered, type Standing} from './decide.ts';
+import {worldOfDraw} from './draws/draw.ts';
+import {chanceOf, replicates, spreadOf} from './estimates.ts';
+import {inputsOf} from './inputs.ts';
+import type {Odds, OddsRow} from './results.ts';
+import {RowDraws} from './row-draw.ts';
+import {nothingStated, type Stated} from './stated.ts';
+import {type Best, bestOf, firstPart, lossOf, RowTally} from './tally.ts';
+import {shifted, noShift, worldOf} from './world.ts';
+
+export type OddsOptions = {
+	/** The chance of passing the RPM limit that is accepted, a share of 1. */
+	readonly risk?: number | undefined;
+	readonly seed?: number | undefined;
+	/** What the documents say of how well their numbers are known. */
+	readonly stated?: Stated | undefined;
+	/** Draws for every row that matters, and the most of all; powers of two. */
+	readonly draws?: number | undefined;
+	readonly mostDraws?: number | undefined;
+	/** Leaves nothing for later: every row goes through every draw. For tests. */
+	readonly inFull?: boolean | undefined;
+};
+
+export const seedUnlessGiven = 1;
+/** With these a chance near a half is known to a few percent. */
+export const drawsUnlessGiven = 512;
+/** More would not change what a person does. */
+export const mostDrawsUnlessGiven = 4096;
+
+/** The rows that a first answer is about, and the draws for it. */
+const firstRows = 8;
+const firstDraws = replicates;
+/** After so many draws it is seen which rows matter. */
+const pilotDraws = 2 * replicates;
+/** A row waits where it was never first and its mean is so many standard deviations of the difference behind. */
+const farBehind = 3;
+/** So many rows at a time: a few milliseconds on the longest tracks. */
+const rowsAtOnce = 12;
+
+export type OddsProgress = Progress & {
+	/** The answer so far, worked out when it is asked for; undefined before there is one. */
+	readonly answer: () => Odds | undefined;
+};
+
+/** All steps at once. */
+export function oddsOf(car: Car, track: Track, options: OddsOptions = {}): Outcome<Odds> {
+	return finish(oddsSteps(car, track, options));
+}
+
+/**
+ * Every row that can be mounted goes through the same draws. First a few draws of the rows that are best as the documents
+ * stand; then `pilotDraws` of all rows; then the rest for the rows that matter: those that were first in a draw, that passed
+ * the limit in some draws and not in others, or that are not far behind. The others are made up for after that, so in the
+ * end no row is left out: the answer is that of all rows in all draws, whatever was put off. Only two things are ever
+ * dropped, and neither can change it. A row that a rule, the case, the stock or its miles rule out is not allowed in any
+ * draw. And in a draw in which a row is over the limit at one place it is over and not allowed, whatever it does at the
+ * others; so once a row has been over in all of the pilot, that place is looked at first and the rest only if it is not.
+ * More draws follow, doubled each time up to `mostDraws`, for the rows that can be first or decide, until `decide` has no
+ * doubt. Bad input comes back as faults.
+ */
+export function* oddsSteps(car: Car, track: Track, options: OddsOptions = {}): Generator<OddsProgress, Outcome<Odds>, void> {
+	const plan = planFor(car, track);
+	if (!plan.ok) return plan;
+	const run = new OddsRun(car, track, plan.value, options);
+	for (const _ of run.steps()) yield {...run.progress, answer: () => run.answer(false)};
+	return done(run.answer(true)!);
+}
+
+type Plan = Parameters<typeof groundOf>[0];
+
+class OddsRun {
+	readonly #plan: Plan;
+	readonly #options: OddsOptions;
+	readonly #seed: number;
+	readonly #draws: number;
+	readonly #most: number;
+	readonly #world;
+	readonly #ground;
+	readonly #inputs;
+	readonly #rows: readonly RowTally[];
+	readonly #rowDraws: RowDraws;
+	#day: {readonly draw: number; readonly day: Day} | undefined;
+	#done = 0;
+
+	constructor(car: Car, track: Track, plan: Plan, options: OddsOptions) {
+		this.#plan = plan;
+		this.#options = options;
+		this.#seed = options.seed ?? seedUnlessGiven;
+		this.#draws = options.draws ?? drawsUnlessGiven;
+		this.#most = Math.max(this.#draws, options.mostDraws ?? mostDrawsUnlessGiven);
+		this.#world = worldOf(car, track);
+		this.#ground = groundOf(plan);
+		const stated = options.stated ?? nothingStated;
+		this.#inputs = inputsOf(plan.car, plan.track, plan.engine, this.#ground.anchored, stated);
+		this.#rows = candidatesOf(plan.car).map(
+			candidate => new RowTally(candidate, barredBy(candidate, this.#ground), this.#most),
+		);
+		this.#rowDraws = new RowDraws({plan, measured: this.#ground.measured});
+	}
+
+	/** Rows that are to go through all draws ÷ those that have. */
+	get progress(): Progress {
+		return {done: this.#done, total: this.#open.length * this.#draws};
+	}
+
+	get #open(): RowTally[] {
+		return this.#rows.filter(({barred}) => barred === null);
+	}
+
+	*steps(): Generator<void, void, void> {
+		const rows = this.#byNominalTime();
+		if (this.#options.inFull) {
+			yield* this.#advance(rows, this.#draws);
+			return;
+		}
+		yield;
+		yield* this.#advance(rows.slice(0, firstRows), Math.min(firstDraws, this.#draws));
+		yield* this.#advance(rows, Math.min(pilotDraws, this.#draws));
+		for (const row of rows) row.isBrief = row.overCount === row.draws;
+		const mm=this.#thatMatter(rows); (globalThis as any).STG?.(mm.length, rows.length);
+		yield* this.#advance(mm, this.#draws); (globalThis as any).STG?.('matter done');
+		yield* this.#advance(rows, this.#draws);
+		for (let draws = 2 * this.#draws; draws <= this.#most && !this.answer(false)!.decision.isDecided; draws *= 2)
+			yield* this.#advance(this.#thatDecide(rows), draws);
+	}
+
+	/** The rows in the order of the documents' own numbers: those within the limit first, by time. */
+	#byNominalTime(): RowTally[] {
+		const day = dayOf(this.#plan, shifted(this.#world, noShift(this.#world.track)));
+		const keyed = this.#open.map(row => ({row, nominal: this.#rowDraws.run(day, row.candidate)}));
+		return keyed
+			.sort(
+				({nominal: one}, {nominal: other}) =>
+					Number(one.isOver) - Number(other.isOver) || (one.timeS < other.timeS ? -1 : one.timeS > other.timeS ? 1 : 0),
+			)
+			.map(({row}) => row);
+	}
+
+	/** Takes the rows to so many draws, draw by draw. */
+	*#advance(rows: readonly RowTally[], draws: number): Generator<void, void, void> {
+		const from = Math.min(...rows.map(row => row.draws));
+		for (let draw = from; draw < draws; draw++) {
+			const behind = rows.filter(row => row.draws === draw);
+			for (let i = 0; i < behind.length; i += rowsAtOnce) {
+				for (const row of behind.slice(i, i + rowsAtOnce)) this.#draw(row, draw);
+				yield;
+			}
+		}
+	}
+
+	#draw(row: RowTally, draw: number): void {
+		const day = this.#dayOf(draw);
+		this.#done++;
+		if (row.isBrief && this.#rowDraws.isOverAt(day, row.candidate, row.spot))
+			row.add({timeS: Number.NaN, highestRpm: Number.NaN, isOver: true, isAllowed: false});
+		else row.add(this.#rowDraws.run(day, row.candidate, row.spot));
+	}
+
+	#dayOf(draw: number): Day {
+		if (this.#day?.draw !== draw)
+			this.#day = {draw, day: dayOf(this.#plan, worldOfDraw(this.#world, this.#inputs.inputs, draw, this.#seed))};
+		return this.#day.day;
+	}
+
+	#thatMatter(rows: readonly RowTally[]): RowTally[] {
+		const best = bestOf(rows, Math.min(...rows.map(({draws}) => draws)));
+		return rows.filter(row => {
+			const {overCount, draws} = row;
+			return (overCount > 0 && overCount < draws) || (overCount === 0 && isNear(row, best));
+		});
+	}
+
+	/** Rows that may be first, or whose chance may be on either side of the risk. */
+	#thatDecide(rows: readonly RowTally[]): RowTally[] {
+		const {risk} = this.#options;
+		const standings = this.#standings(rows);
+		const named = new Set<string | null>(
+			standings.filter(({first}) => first.value > 0).map(({row}) => row.name),
+		);
+		const {row, next} = decide(standings, risk ?? null);
+		named.add(row).add(next);
+		const nearRisk = ({over}: Standing) => risk !== undefined && Math.abs(over.value - risk) <= farBehind * over.error;
+		return standings.filter(one => named.has(one.row.name) || nearRisk(one)).map(one => one.row);
+	}
+
+	#standings(rows: readonly RowTally[], best = bestOf(rows, this.#drawn)): Standing[] {
+		return rows.map(row => ({
+			row,
+			over: chanceOf(row.draws, draw => row.isOver[draw]!),
+			first: chanceOf(row.draws, draw => firstPart(row, best, draw)),
+		}));
+	}
+
+	get #drawn(): number {
+		return Math.max(0, ...this.#rows.map(({draws}) => draws));
+	}
+
+	answer(isComplete: boolean): Odds | undefined {
+		const drawn = this.#drawn;
+		if (drawn === 0 && !isComplete) return undefined;
+		const risk = this.#options.risk ?? null;
+		const best = bestOf(this.#rows, drawn);
+		const standings = this.#standings(this.#rows, best);
+		const {inputs, notDrawn} = this.#inputs;
+		return {
+			seed: this.#seed,
+			risk,
+			rpmLimit: this.#plan.limitRpm,
+			anchored: this.#ground.anchored,
+			isComplete,
+			draws: drawn,
+			inputs: inputs.map(({move: _, ...told}) => told),
+			notDrawn,
+			rows: ordered(standings, risk).map(standing => this.#rowOf(standing, best)),
+			decision: decide(standings, risk),
+		};
+	}
+
+	#rowOf({row, over, first}: Standing, best: Best): OddsRow {
+		const {pair, pairName, gearbox} = row.candidate;
+		const {installed} = this.#plan.car;
+		return {
+			pair: pairName,
+			gearbox: gearbox.name,
+			installed: installed !== undefined && samePair(installed.pair, pair) && installed.gearbox === gearbox.name,
+			barred: row.barred,
+			draws: row.draws,
+			over,
+			first,
+			timeS: spreadOf(row.timeS, row.draws),
+			highestRpm: spreadOf(row.highestRpm, row.draws),
+			lossS: lossOf(row, best),
+		};
+	}
+}
+
+/** Whether it was first in a draw, or is not far behind the first on the mean. */
+function isNear(row: RowTally, best: Best): boolean {
+	let [count, sum, squares] = [0, 0, 0];
+	for (let draw = 0; draw < best.timeS.length; draw++) {
+		const behind = row.timeS[draw]! - best.timeS[draw]!;
+		if (!Number.isFinite(behind)) continue;
+		if (behind <= 0) return true;
+		count++;
+		sum += behind;
+		squares += behind * behind;
+	}
+	if (count === 0) return true;
+	const mean = sum / count;
+	return mean < farBehind * Math.sqrt(Math.max(0, squares / count - mean * mean));
+}
