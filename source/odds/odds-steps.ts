@@ -16,8 +16,8 @@ import {inputsOf} from './inputs.ts';
 import type {Odds, OddsRow} from './results.ts';
 import {RowDraws} from './row-draw.ts';
 import {nothingStated, type Stated} from './stated.ts';
-import {type Best, bestOf, firstPart, lossOf, RowTally} from './tally.ts';
-import {shifted, noShift, worldOf} from './world.ts';
+import {type Best, bestOf, firstPart, levelS, lossOf, RowTally} from './tally.ts';
+import {noShift, shifted, worldOf} from './world.ts';
 
 export type OddsOptions = {
 	/** The chance of passing the RPM limit that is accepted, a share of 1. */
@@ -43,8 +43,10 @@ const firstRows = 8;
 const firstDraws = replicates;
 /** After so many draws it is seen which rows matter. */
 const pilotDraws = 2 * replicates;
-/** A row waits where it was never first and its mean is so many standard deviations of the difference behind. */
+/** A row waits where it was never first or over the limit in the pilot and is so many standard deviations of the difference behind. */
 const farBehind = 3;
+/** So far behind it is dropped; see `oddsSteps`. */
+const hopeless = 10;
 /** So many rows at a time: a few milliseconds on the longest tracks. */
 const rowsAtOnce = 12;
 
@@ -60,14 +62,19 @@ export function oddsOf(car: Car, track: Track, options: OddsOptions = {}): Outco
 
 /**
  * Every row that can be mounted goes through the same draws. First a few draws of the rows that are best as the documents
- * stand; then `pilotDraws` of all rows; then the rest for the rows that matter: those that were first in a draw, that passed
- * the limit in some draws and not in others, or that are not far behind. The others are made up for after that, so in the
- * end no row is left out: the answer is that of all rows in all draws, whatever was put off. Only two things are ever
- * dropped, and neither can change it. A row that a rule, the case, the stock or its miles rule out is not allowed in any
- * draw. And in a draw in which a row is over the limit at one place it is over and not allowed, whatever it does at the
- * others; so once a row has been over in all of the pilot, that place is looked at first and the rest only if it is not.
- * More draws follow, doubled each time up to `mostDraws`, for the rows that can be first or decide, until `decide` has no
- * doubt. Bad input comes back as faults.
+ * stand; then a pilot of all rows; then the rest for the rows that matter: first in a draw, over the limit in some draws and
+ * not in others, or not far behind; then those that could wait. More draws follow, doubled each time up to `mostDraws`, for
+ * the rows that can be first or decide, until `decide` has no doubt. Bad input comes back as faults.
+ *
+ * What is dropped, and why it changes nothing:
+ * - A row that a rule, the case, the stock or its miles rule out is not allowed in any draw.
+ * - In a draw in which a row is over the limit at one place it is over and not allowed, whatever it does at the others. Once
+ *   it has been over in all of the pilot, that place is looked at first, and the rest only where it is not over there.
+ * - A row that was never over in the pilot and is `hopeless` standard deviations s of its own lag behind the best, on the
+ *   mean m of the lag. To be first its lag must be 0 or less, and by Cantelli's inequality no distribution with that m and s
+ *   gives this more than 1 chance in 1 + (m/s)²: less than one in a hundred, which is what the standard errors of the first
+ *   rows are; for a lag anywhere near normal it is below 1e-20. It keeps its pilot draws and their standard error.
+ *   `tests/odds/odds.test.ts` compares with all rows in all draws.
  */
 export function* oddsSteps(car: Car, track: Track, options: OddsOptions = {}): Generator<OddsProgress, Outcome<Odds>, void> {
 	const plan = planFor(car, track);
@@ -91,6 +98,7 @@ class OddsRun {
 	readonly #rows: readonly RowTally[];
 	readonly #rowDraws: RowDraws;
 	#day: {readonly draw: number; readonly day: Day} | undefined;
+	#pilotBest: Best | undefined;
 	#done = 0;
 
 	constructor(car: Car, track: Track, plan: Plan, options: OddsOptions) {
@@ -128,9 +136,8 @@ class OddsRun {
 		yield* this.#advance(rows.slice(0, firstRows), Math.min(firstDraws, this.#draws));
 		yield* this.#advance(rows, Math.min(pilotDraws, this.#draws));
 		for (const row of rows) row.isBrief = row.overCount === row.draws;
-		const mm=this.#thatMatter(rows); (globalThis as any).STG?.(mm.length, rows.length);
-		yield* this.#advance(mm, this.#draws); (globalThis as any).STG?.('matter done');
-		yield* this.#advance(rows, this.#draws);
+		yield* this.#advance(rows.filter(row => this.#standing(row, rows) === 'matters'), this.#draws);
+		yield* this.#advance(rows.filter(row => this.#standing(row, rows) !== 'dropped'), this.#draws);
 		for (let draws = 2 * this.#draws; draws <= this.#most && !this.answer(false)!.decision.isDecided; draws *= 2)
 			yield* this.#advance(this.#thatDecide(rows), draws);
 	}
@@ -138,7 +145,10 @@ class OddsRun {
 	/** The rows in the order of the documents' own numbers: those within the limit first, by time. */
 	#byNominalTime(): RowTally[] {
 		const day = dayOf(this.#plan, shifted(this.#world, noShift(this.#world.track)));
-		const keyed = this.#open.map(row => ({row, nominal: this.#rowDraws.run(day, row.candidate)}));
+		const keyed = this.#open.map(row => {
+			row.worthwhile = this.#rowDraws.worthwhile(day, row.candidate);
+			return {row, nominal: this.#rowDraws.run(day, row)};
+		});
 		return keyed
 			.sort(
 				({nominal: one}, {nominal: other}) =>
@@ -162,9 +172,9 @@ class OddsRun {
 	#draw(row: RowTally, draw: number): void {
 		const day = this.#dayOf(draw);
 		this.#done++;
-		if (row.isBrief && this.#rowDraws.isOverAt(day, row.candidate, row.spot))
+		if (row.isBrief && this.#rowDraws.isOverAt(day, row, row.spot))
 			row.add({timeS: Number.NaN, highestRpm: Number.NaN, isOver: true, isAllowed: false});
-		else row.add(this.#rowDraws.run(day, row.candidate, row.spot));
+		else row.add(this.#rowDraws.run(day, row, row.spot));
 	}
 
 	#dayOf(draw: number): Day {
@@ -173,12 +183,13 @@ class OddsRun {
 		return this.#day.day;
 	}
 
-	#thatMatter(rows: readonly RowTally[]): RowTally[] {
-		const best = bestOf(rows, Math.min(...rows.map(({draws}) => draws)));
-		return rows.filter(row => {
-			const {overCount, draws} = row;
-			return (overCount > 0 && overCount < draws) || (overCount === 0 && isNear(row, best));
-		});
+	/** After the pilot: what a row is worth. */
+	#standing(row: RowTally, rows: readonly RowTally[]): 'matters' | 'can wait' | 'dropped' {
+		const {overCount, draws} = row;
+		if (overCount > 0) return overCount < draws ? 'matters' : 'can wait';
+		this.#pilotBest ??= bestOf(rows, Math.min(...rows.map(one => one.draws)));
+		const deviations = deviationsBehind(row, this.#pilotBest);
+		return deviations > hopeless ? 'dropped' : deviations > farBehind ? 'can wait' : 'matters';
 	}
 
 	/** Rows that may be first, or whose chance may be on either side of the risk. */
@@ -245,18 +256,18 @@ class OddsRun {
 	}
 }
 
-/** Whether it was first in a draw, or is not far behind the first on the mean. */
-function isNear(row: RowTally, best: Best): boolean {
+/** How far behind the best it is on the mean, in standard deviations of that; 0 where it was first in a draw or has no time. */
+function deviationsBehind(row: RowTally, best: Best): number {
 	let [count, sum, squares] = [0, 0, 0];
 	for (let draw = 0; draw < best.timeS.length; draw++) {
 		const behind = row.timeS[draw]! - best.timeS[draw]!;
 		if (!Number.isFinite(behind)) continue;
-		if (behind <= 0) return true;
+		if (behind <= levelS) return 0;
 		count++;
 		sum += behind;
 		squares += behind * behind;
 	}
-	if (count === 0) return true;
+	if (count < 2) return 0;
 	const mean = sum / count;
-	return mean < farBehind * Math.sqrt(Math.max(0, squares / count - mean * mean));
+	return mean / Math.sqrt(Math.max(Number.MIN_VALUE, (squares - count * mean * mean) / (count - 1)));
 }

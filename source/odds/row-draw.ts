@@ -1,5 +1,6 @@
 /** One pair and set in one draw: its time, the highest RPM over all situations, and whether it is allowed. */
 import {RoadGears} from '../drivetrain/road-gears.ts';
+import {outcomeOf} from '../drivetrain/run-straight.ts';
 import {speedAtRpmMps} from '../drivetrain/tire.ts';
 import type {Candidate} from '../planning/candidates.ts';
 import type {Condition, Place} from '../planning/conditions.ts';
@@ -12,6 +13,7 @@ import {QuickGears} from './quick/quick-gears.ts';
 import {type QuickRun, quickPlace} from './quick/quick-place.ts';
 import type {RoadTable} from './quick/road-table.ts';
 import {ThrustTables} from './quick/vehicle-table.ts';
+import {type Worthwhile, worthwhileOn} from './quick/worthwhile.ts';
 
 /** What does not change from draw to draw. */
 export type Setup = {readonly plan: Plan; readonly measured: readonly MeasuredPoint[]};
@@ -27,6 +29,12 @@ export type RowDraw = {
 	readonly isAllowed: boolean;
 };
 
+/** A row that is drawn; without `worthwhile` every sequence is tried. */
+export type Drawn = {
+	readonly candidate: Candidate;
+	readonly worthwhile?: readonly (readonly (Worthwhile | undefined)[])[] | undefined;
+};
+
 /** Where a row passed the limit last: it is looked at first the next time. */
 export type Spot = {condition: number; place: number};
 
@@ -38,8 +46,27 @@ export class RowDraws {
 		this.#setup = setup;
 	}
 
+	/** Of each situation and straight, the sequences worth trying; undefined where the solver of the ranking runs it. */
+	worthwhile(day: Day, {train}: Candidate): (Worthwhile | undefined)[][] {
+		return day.conditions.map(({condition, table, roads}) => {
+			this.#tables.take(table, train);
+			return condition.places.map((place, p) => {
+				const course = place.courses.get(train.overall.length);
+				const road = roads[p];
+				if (road === undefined || course === undefined) return undefined;
+				const gears = new QuickGears(this.#tables, road);
+				let found: Worthwhile | undefined;
+				outcomeOf(gears, course, startGears => {
+					found = worthwhileOn(gears, course, startGears);
+					return [];
+				});
+				return found;
+			});
+		});
+	}
+
 	/** The row in full. */
-	run(day: Day, candidate: Candidate, spot?: Spot): RowDraw {
+	run(day: Day, {candidate, worthwhile}: Drawn, spot?: Spot): RowDraw {
 		const {limitRpm} = this.#setup.plan;
 		let timeS = 0;
 		let timed = false;
@@ -54,7 +81,7 @@ export class RowDraws {
 			this.#tables.take(dayCondition.table, candidate.train);
 			let conditionS = 0;
 			condition.places.forEach((place, p) => {
-				const run = this.#place(condition, place, candidate, roads[p]);
+				const run = this.#place(condition, place, candidate, roads[p], worthwhile?.[c]?.[p]);
 				if (run.overLimit || (run.runs && run.highestRpm - limitRpm > roundingRpm)) {
 					isOver = true;
 					if (spot !== undefined) [spot.condition, spot.place] = [c, p];
@@ -74,18 +101,24 @@ export class RowDraws {
 		return {timeS: timed ? timeS : Number.NaN, highestRpm, isOver, isAllowed: isAllowed && !isOver};
 	}
 
-	/** Whether it passes the limit at one place, which is enough to rule it out; undefined where that place does not tell. */
-	isOverAt(day: Day, candidate: Candidate, {condition: c, place: p}: Spot): boolean {
+	/** Whether it passes the limit at one place, which is enough to rule it out. */
+	isOverAt(day: Day, {candidate, worthwhile}: Drawn, {condition: c, place: p}: Spot): boolean {
 		const {condition, table, roads} = day.conditions[c]!;
 		this.#tables.take(table, candidate.train);
-		const run = this.#place(condition, condition.places[p]!, candidate, roads[p]);
+		const run = this.#place(condition, condition.places[p]!, candidate, roads[p], worthwhile?.[c]?.[p]);
 		return run.overLimit || (run.runs && run.highestRpm - this.#setup.plan.limitRpm > roundingRpm);
 	}
 
-	#place(condition: Condition, place: Place, candidate: Candidate, road: RoadTable | undefined): QuickRun {
+	#place(
+		condition: Condition,
+		place: Place,
+		candidate: Candidate,
+		road: RoadTable | undefined,
+		worthwhile: Worthwhile | undefined,
+	): QuickRun {
 		const course = place.courses.get(candidate.train.overall.length);
 		if (road === undefined || course === undefined) return exactly(condition, place, candidate);
-		return quickPlace(condition, place, course, new QuickGears(this.#tables, road));
+		return quickPlace(condition, place, course, new QuickGears(this.#tables, road), worthwhile);
 	}
 
 	/** The measured points of a straight in this row's own gear; NaN where there is none. */

@@ -1,6 +1,6 @@
 /** What every row did in every draw, and what follows from it. */
 import type {Candidate} from '../planning/candidates.ts';
-import type {RowDraw, Spot} from './row-draw.ts';
+import type {Drawn, RowDraw, Spot} from './row-draw.ts';
 
 /** Two rows this close are as fast as each other: the same ratios in another set. */
 export const levelS = 1e-9;
@@ -16,6 +16,7 @@ export class RowTally {
 	readonly isOver: Uint8Array;
 	readonly isAllowed: Uint8Array;
 	readonly spot: Spot = {condition: 0, place: 0};
+	worthwhile: Drawn['worthwhile'];
 	/** Once it has been over the limit in every one of many draws, one place is looked at first. */
 	isBrief = false;
 

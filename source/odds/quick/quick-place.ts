@@ -7,6 +7,7 @@ import type {Condition, Place} from '../../planning/conditions.ts';
 import {rpmAt} from '../../planning/run-place.ts';
 import {roundingRpm} from '../../planning/words.ts';
 import type {QuickGears} from './quick-gears.ts';
+import {finishesWorthwhile, type Worthwhile} from './worthwhile.ts';
 
 export type QuickRun = {
 	/** In the fastest gears; NaN where nothing runs. */
@@ -32,9 +33,19 @@ const notRun: QuickRun = {
 	overLimit: false,
 };
 
-/** As `runPlace` and the limit check would have it, of a straight with length. */
-export function quickPlace(condition: Condition, place: Place, course: Course, gears: QuickGears): QuickRun {
-	const outcome = outcomeOf(gears, course, startGears => finishesTogether(gears, course, startGears));
+/** As `runPlace` and the limit check would have it, of a straight with length; without `worthwhile` of all sequences. */
+export function quickPlace(
+	condition: Condition,
+	place: Place,
+	course: Course,
+	gears: QuickGears,
+	worthwhile?: Worthwhile,
+): QuickRun {
+	const outcome = outcomeOf(gears, course, startGears =>
+		worthwhile === undefined
+			? finishesTogether(gears, course, startGears)
+			: finishesWorthwhile(gears, course, startGears, worthwhile),
+	);
 	if (outcome.kind === 'overLimit') return {...notRun, overLimit: true};
 	if (outcome.kind !== 'ran') return notRun;
 	const {chosen, fastest} = outcome;
