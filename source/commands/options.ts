@@ -32,6 +32,12 @@ export const options = {
 	qr: {summary: 'draw it as a QR code; with --short the one line'},
 	take: {summary: "keep the plan's track, with its pair, set and notes, once it is compared"},
 	copy: {summary: "send it to the terminal's clipboard too"},
+	against: {
+		value: 'PAIR',
+		summary: 'the pair to compare with, in the same set; unless given the installed one, or the best',
+	},
+	above: {value: 'RPM', summary: 'tell the time above this RPM; 500 under the limit unless given'},
+	laps: {value: 'N', summary: 'the laps of the race; those of the track unless given'},
 	json: {summary: 'print the result for programs: JSON, SI units, not rounded'},
 	units: {value: 'us|metric', summary: 'units of the text output; us unless given'},
 	strict: {summary: 'end with status 1 if the plan fails a check, or something is wrong'},

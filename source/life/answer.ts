@@ -3,10 +3,11 @@ import type {Car} from '../drivetrain/car.ts';
 import type {Track} from '../drivetrain/track.ts';
 import {done, failed, fault} from '../planning/faults.ts';
 import {type Ranked, rankSteps, rowName} from '../planning/rank-rack.ts';
+import {remarksOn} from '../planning/remarks.ts';
 import type {Outcome, Row} from '../planning/results.ts';
 import {finish} from '../planning/run-rack.ts';
-import {consumptionRemarks, fuelAssumptions, lapAssumptions} from './assumptions.ts';
-import {type Comparison, comparedRows} from './compared-rows.ts';
+import {consumptionRemarks, fuelAssumptions, lapAssumptions, lifeAssumptions} from './assumptions.ts';
+import {type Compared, type Comparison, comparedRows} from './compared-rows.ts';
 import {engineLifeOf} from './engine-life.ts';
 import {type FuelUse, fuelOf} from './fuel.ts';
 import {lapParts} from './lap-parts.ts';
@@ -39,70 +40,53 @@ function ofRanked<T>(
 	car: Car,
 	track: Track,
 	options: LifeOptions,
-	answer: (ranked: Ranked, rows: readonly Row[], options: LifeOptions) => Outcome<T>,
+	answer: (ranked: Ranked, compared: Compared, options: LifeOptions) => T,
 ): Outcome<T> {
+	if (track.straights.every(({lengthM}) => lengthM === undefined))
+		return failed([fault('track', 'straights', 'no straight with a length', '"length" on one straight at least')]);
 	const ranked = finish(rankSteps(car, track, {situation: options.situation}));
 	if (!ranked.ok) return ranked;
-	const rows = comparedRows(ranked.value, options);
-	return rows.ok ? answer(ranked.value, rows.value, options) : rows;
+	const compared = comparedRows(ranked.value, options);
+	return compared.ok ? done(answer(ranked.value, compared.value, options)) : compared;
 }
 
-/** The rows are of the ranking. A row that does not run is a fault where it is the first, and is else left out with a remark. */
-export function lifeOfRows(ranked: Ranked, rows: readonly Row[], options: LifeOptions): Outcome<LifeAnswer> {
+/** Of rows of the ranking that run. */
+export function lifeOfRows(ranked: Ranked, compared: Compared, options: LifeOptions): LifeAnswer {
 	const aboveRpm = options.aboveRpm ?? ranked.ground.plan.limit.rpm - belowLimitRpm;
-	const laps = toldLaps(ranked, rows, options, aboveRpm);
-	if (!laps.ok) return laps;
-	const {about, tallies} = laps.value;
-	const pairs = tallies.map(([row, tally]) => engineLifeOf(row, tally, about.laps));
-	return done({...about, aboveRpm, stepRpm, pairs});
+	const about = aboutLap(ranked, compared, options);
+	const pairs = compared.rows.map(row => engineLifeOf(row, meanLapOf(ranked, row, aboveRpm), about.laps));
+	return {...about, assumptions: [...about.assumptions, ...lifeAssumptions], aboveRpm, stepRpm, pairs};
 }
 
 /** As `lifeOfRows`. */
-export function fuelOfRows(ranked: Ranked, rows: readonly Row[], options: LifeOptions): Outcome<FuelAnswer> {
+export function fuelOfRows(ranked: Ranked, compared: Compared, options: LifeOptions): FuelAnswer {
 	const {car, engine, limit} = ranked.ground.plan;
-	const laps = toldLaps(ranked, rows, options, limit.rpm);
-	if (!laps.ok) return laps;
-	const {about, tallies} = laps.value;
+	const about = aboutLap(ranked, compared, options);
 	const use: FuelUse = {
 		consumptionKgPerJ: engine.fuelConsumptionKgPerJ,
 		densityKgM3: car.fuelDensityKgM3,
 		tankM3: car.tankM3 ?? null,
 	};
-	return done({
+	return {
 		...about,
 		assumptions: [...about.assumptions, ...fuelAssumptions],
 		remarks: [...tankRemarks(use, about), ...consumptionRemarks(use.consumptionKgPerJ), ...about.remarks],
 		fuelConsumptionKgPerJ: use.consumptionKgPerJ,
 		fuelDensityKgM3: use.densityKgM3,
 		tankM3: use.tankM3,
-		pairs: tallies.map(([row, tally]) => fuelOf(row, tally, use, about.lapM, about.laps)),
-	});
+		pairs: compared.rows.map(row => fuelOf(row, meanLapOf(ranked, row, limit.rpm), use, about.lapM, about.laps)),
+	};
 }
 
-type ToldLaps = {about: About; tallies: (readonly [Row, Tally])[]};
+function meanLapOf({ground, runs}: Ranked, row: Row, aboveRpm: number): Tally {
+	return meanLap(runs.get(rowName(row))!, ground.plan, lapParts(ground.plan.track), aboveRpm);
+}
 
-function toldLaps(
-	{ranking, ground, runs}: Ranked,
-	rows: readonly Row[],
-	options: LifeOptions,
-	aboveRpm: number,
-): Outcome<ToldLaps> {
+function aboutLap({ranking, ground, runs}: Ranked, {rows, remarks}: Compared, options: LifeOptions): About {
 	const {plan} = ground;
 	const parts = lapParts(plan.track);
-	if (plan.track.straights.every(({lengthM}) => lengthM === undefined))
-		return failed([fault('track', 'straights', 'no straight with a length', '"length" on one straight at least')]);
-	const tallies: (readonly [Row, Tally])[] = [];
-	const remarks: string[] = [];
-	for (const row of rows) {
-		const tally = meanLap(runs.get(rowName(row))!, plan, parts, aboveRpm);
-		if (tally !== undefined) tallies.push([row, tally]);
-		else if (row === rows[0])
-			return failed([fault('command', 'pair', `${rowName(row)} does not run here`, 'a pair and set that runs')]);
-		else remarks.push(`${rowName(row)} does not run here.`);
-	}
 	const laps = options.laps ?? plan.track.laps ?? null;
-	if (laps === null) remarks.push('No race length: the track has no "laps".');
-	const about: About = {
+	return {
 		setting: ranking.setting,
 		situation: options.situation ?? null,
 		situations: plan.conditions.filter(({weight}) => weight > 0).length,
@@ -110,9 +94,16 @@ function toldLaps(
 		lapM: parts.lapM ?? null,
 		cornerM: parts.cornerM ?? null,
 		assumptions: lapAssumptions(parts),
-		remarks: [...remarks, ...ranking.remarks],
+		remarks: [
+			...remarks,
+			...rows.filter(({verdict}) => verdict === 'fail').map(row => `${rowName(row)} fails a check. ${row.reason}`),
+			...(laps === null ? ['No race length: the track has no "laps".'] : []),
+			...remarksOn(
+				ground,
+				rows.map(row => runs.get(rowName(row))!),
+			),
+		],
 	};
-	return done({about, tallies});
 }
 
 function tankRemarks({tankM3}: FuelUse, {lapM}: About): string[] {

@@ -10,10 +10,15 @@ export function lapAssumptions({cornerM, leftOut}: LapParts): string[] {
 	];
 }
 
+const notCounted = 'Pace laps, restarts and pit road are not counted';
+
+/** Of engine life alone. */
+export const lifeAssumptions: readonly string[] = [`${notCounted}, nor a missed shift.`];
+
 /** Of fuel alone. */
 export const fuelAssumptions: readonly string[] = [
 	'Full throttle burns what power and grip take; in corners the throttle gives what drag, rolling and gain of speed need. Tire scrub in corners is not known and left out.',
-	'Shifting, braking and a closed throttle burn nothing; pace laps, restarts and pit road are not counted.',
+	`Shifting, braking and a closed throttle burn nothing. ${notCounted}.`,
 ];
 
 /** Textbooks and handbooks: 0.26 to 0.30 at full load (Heywood, Internal Combustion Engine Fundamentals), racing engines up to 0.34. */

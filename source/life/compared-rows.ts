@@ -3,7 +3,7 @@ import type {Pair} from '../drivetrain/car.ts';
 import {pairName} from '../drivetrain/gear-pair.ts';
 import {chosenFrom} from '../planning/choice.ts';
 import {pairFaults} from '../planning/document-faults.ts';
-import {done, failed} from '../planning/faults.ts';
+import {done, failed, fault} from '../planning/faults.ts';
 import {type Ranked, rowName} from '../planning/rank-rack.ts';
 import type {Outcome, Row} from '../planning/results.ts';
 
@@ -15,21 +15,48 @@ export type Comparison = {
 	readonly against?: Pair | undefined;
 };
 
-/** One row, or two where there is another; a pair or set that the car has not is a fault. */
-export function comparedRows({ranking, ground}: Ranked, comparison: Comparison): Outcome<Row[]> {
+export type Compared = {
+	/** The one that is asked about, then the other where there is one. All of them run. */
+	readonly rows: readonly Row[];
+	readonly remarks: readonly string[];
+};
+
+/**
+ * The rows of a comparison. A pair or set that the car has not, or one asked for that does not run, is a fault; in place of
+ * an installed one that does not run the first of the ranking is taken.
+ */
+export function comparedRows({ranking, ground}: Ranked, comparison: Comparison): Outcome<Compared> {
 	const {car} = ground.plan;
 	const chosen = chosenFrom(car, comparison);
 	const faults = [...(chosen.ok ? [] : chosen.faults), ...pairFaults('command', 'against', car, comparison.against)];
 	if (!chosen.ok || faults.length > 0) return failed(faults);
 	const {pair, gearbox} = chosen.value;
 	const named = (wanted: Pair) => ranking.rows.find(row => rowName(row) === `${pairName(wanted)} ${gearbox}`)!;
-	const subject = named(pair);
-	const other = comparison.against === undefined ? heldAgainst(subject, ranking.rows) : named(comparison.against);
-	return done(other === undefined || other === subject ? [subject] : [subject, other]);
+	const asked = named(pair);
+	const isGiven = comparison.pair !== undefined || comparison.gearbox !== undefined;
+	const subject = isGiven || runs(asked) ? asked : ranking.rows.find(runs);
+	const against = comparison.against && named(comparison.against);
+	if (subject === undefined || !runs(subject)) return failed([notRunning(asked, 'pair')]);
+	if (against !== undefined && !runs(against)) return failed([notRunning(against, 'against')]);
+	const other = against ?? heldAgainst(subject, ranking.rows);
+	const remarks =
+		subject === asked ? [] : [`${rowName(asked)} does not run here: the first of the ranking is told of.`];
+	return done({rows: other === undefined || other === subject ? [subject] : [subject, other], remarks});
 }
 
-/** What a row is held against unless a pair is named: the installed one, or for that itself the first other one of the ranking. */
+/** What a row is held against unless a pair is named: the installed one, or for that itself the first other one of the ranking. Undefined where no other runs. */
 export function heldAgainst(subject: Row, rows: readonly Row[]): Row | undefined {
-	const installed = rows.find(row => row.installed);
-	return installed !== undefined && installed !== subject ? installed : rows.find(row => row !== subject);
+	const others = rows.filter(row => row !== subject && runs(row));
+	return others.find(row => row.installed) ?? others[0];
+}
+
+/** Whether the car gets to the end of every straight, in every situation. */
+export function runs({timeS}: Row): boolean {
+	return timeS !== null;
+}
+
+function notRunning(row: Row, option: string) {
+	const [why] = row.remarks;
+	const found = `${rowName(row)}, which does not run here${why === undefined ? '' : ` (${why})`}`;
+	return fault('command', option, found, 'a pair and set that runs');
 }

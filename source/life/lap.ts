@@ -14,16 +14,9 @@ export type Lap = {
 	readonly timeS: number;
 };
 
-/** The lap; undefined where a straight does not run. Slices are cut at `askedRpm`; their times add up to the lap's. */
-export function lapOf(
-	row: RowRun,
-	within: SituationRun,
-	plan: Plan,
-	parts: LapParts,
-	askedRpm: number,
-): Lap | undefined {
+/** The lap of a row that runs. Slices are cut at `askedRpm`; their times add up to the lap's. */
+export function lapOf(row: RowRun, within: SituationRun, plan: Plan, parts: LapParts, askedRpm: number): Lap {
 	const {condition, places} = within;
-	if (places.some(({state}) => state !== 'ran' && state !== 'held')) return undefined;
 	const {train} = row.candidate;
 	const gearsOn = plan.roads.gearsFor(train);
 	const ran = places.filter(({state}) => state === 'ran');

@@ -5,14 +5,13 @@ import {lapOf} from './lap.ts';
 import type {LapParts} from './lap-parts.ts';
 import {addSlices, emptyTally, type Tally} from './tally.ts';
 
-/** Undefined where a straight does not run in a situation that counts. */
-export function meanLap(row: RowRun, plan: Plan, parts: LapParts, aboveRpm: number): Tally | undefined {
+/** Of a row that runs. */
+export function meanLap(row: RowRun, plan: Plan, parts: LapParts, aboveRpm: number): Tally {
 	const tally = emptyTally();
 	for (const [i, within] of row.situations.entries()) {
 		const {weight} = plan.conditions[i]!;
 		if (weight === 0) continue;
 		const lap = lapOf(row, within, plan, parts, aboveRpm);
-		if (lap === undefined) return undefined;
 		addSlices(tally, lap.slices, weight, aboveRpm);
 	}
 	return tally;
