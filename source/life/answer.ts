@@ -10,7 +10,7 @@ import {consumptionRemarks, fuelAssumptions, lapAssumptions, lifeAssumptions} fr
 import {type Compared, type Comparison, comparedRows} from './compared-rows.ts';
 import {engineLifeOf} from './engine-life.ts';
 import {type FuelUse, fuelOf} from './fuel.ts';
-import {lapParts} from './lap-parts.ts';
+import {type LapParts, lapParts} from './lap-parts.ts';
 import {meanLap} from './mean-lap.ts';
 import type {About, FuelAnswer, LifeAnswer} from './results.ts';
 import {stepRpm} from './slice.ts';
@@ -54,7 +54,7 @@ function ofRanked<T>(
 export function lifeOfRows(ranked: Ranked, compared: Compared, options: LifeOptions): LifeAnswer {
 	const aboveRpm = options.aboveRpm ?? ranked.ground.plan.limit.rpm - belowLimitRpm;
 	const about = aboutLap(ranked, compared, options);
-	const pairs = compared.rows.map(row => engineLifeOf(row, meanLapOf(ranked, row, aboveRpm), about.laps));
+	const pairs = compared.rows.map(row => engineLifeOf(row, meanLapOf(ranked, row, aboveRpm), wholeLaps(about)));
 	return {...about, assumptions: [...about.assumptions, ...lifeAssumptions], aboveRpm, stepRpm, pairs};
 }
 
@@ -70,7 +70,7 @@ export function fuelOfRows(ranked: Ranked, compared: Compared, options: LifeOpti
 	return {
 		...about,
 		assumptions: [...about.assumptions, ...fuelAssumptions],
-		remarks: [...tankRemarks(use, about), ...consumptionRemarks(use.consumptionKgPerJ), ...about.remarks],
+		remarks: [...tankRemarks(use), ...consumptionRemarks(use.consumptionKgPerJ), ...about.remarks],
 		fuelConsumptionKgPerJ: use.consumptionKgPerJ,
 		fuelDensityKgM3: use.densityKgM3,
 		tankM3: use.tankM3,
@@ -97,7 +97,7 @@ function aboutLap({ranking, ground, runs}: Ranked, {rows, remarks}: Compared, op
 		remarks: [
 			...remarks,
 			...rows.filter(({verdict}) => verdict === 'fail').map(row => `${rowName(row)} fails a check. ${row.reason}`),
-			...(laps === null ? ['No race length: the track has no "laps".'] : []),
+			...raceRemarks(laps, parts),
 			...remarksOn(
 				ground,
 				rows.map(row => runs.get(rowName(row))!),
@@ -106,9 +106,16 @@ function aboutLap({ranking, ground, runs}: Ranked, {rows, remarks}: Compared, op
 	};
 }
 
-function tankRemarks({tankM3}: FuelUse, {lapM}: About): string[] {
-	return [
-		...(lapM === null ? ['Parts of the lap are left out: its fuel is not known.'] : []),
-		...(tankM3 === null ? ['The car has no "tank".'] : []),
-	];
+/** Laps of the race that can be told of: none where parts of the lap are left out. */
+function wholeLaps({laps, lapM}: About): number | null {
+	return lapM === null ? null : laps;
+}
+
+function raceRemarks(laps: number | null, {lapM}: LapParts): string[] {
+	if (lapM === undefined) return ['Parts of the lap are left out: nothing is told of fuel or of a whole race.'];
+	return laps === null ? ['No race length: the track has no "laps".'] : [];
+}
+
+function tankRemarks({tankM3}: FuelUse): string[] {
+	return tankM3 === null ? ['The car has no "tank".'] : [];
 }

@@ -27,8 +27,17 @@ export function fullThrottleSlices(gears: RoadGears, run: FullThrottle, askedRpm
 	const cuts = cutsBetween(motion.rpmAt(fromMps), motion.rpmAt(toMps), askedRpm).map(rpm => motion.speedAt(rpm));
 	const speeds = [fromMps, ...cuts, toMps];
 	const slices = speeds.slice(1).map((speed, i) => between(gears, gear, speeds[i]!, speed));
-	const heldS = timeS - slices.reduce((sum, slice) => sum + slice.timeS, 0);
-	return heldS > heldShare * timeS ? [...slices, held(gears, gear, toMps, heldS)] : slices;
+	const leftS = timeS - slices.reduce((sum, slice) => sum + slice.timeS, 0);
+	if (leftS > heldShare * timeS) return [...slices, held(gears, gear, toMps, leftS)];
+	const last = slices.at(-1)!;
+	return [...slices.slice(0, -1), lasting(last, last.timeS + leftS)];
+}
+
+/** Near the speed that the resistances hold, neighboring doubles of speed lie far apart in time: the end is set by the time. */
+function lasting(slice: Slice, timeS: number): Slice {
+	if (slice.timeS <= 0) return {...slice, timeS: Math.max(0, timeS)};
+	const share = timeS / slice.timeS;
+	return {...slice, timeS, turns: share * slice.turns, energyJ: share * slice.energyJ};
 }
 
 function between(gears: RoadGears, gear: number, fromMps: number, toMps: number): Slice {

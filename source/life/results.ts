@@ -4,7 +4,7 @@ import type {Setting, Verdict} from '../planning/results.ts';
 /** Time in one gear above `fromRpm` and up to `toRpm`. */
 export type Dwell = {gear: number; fromRpm: number; toRpm: number; lapS: number; raceS: number | null};
 
-/** One pair and set; what counts for a race is null without its laps. */
+/** One pair and set; what counts for a race is null without its laps, or where parts of the lap are left out. */
 export type EngineLife = {
 	pair: string;
 	gearbox: string;

@@ -11,19 +11,20 @@ const minuteS = 60;
 
 const figuresOf = ({aboveRpm, lapM}: LifeAnswer): Figure<EngineLife>[] => {
 	const above = `above ${rpm(aboveRpm)} rpm`;
+	const lap = lapM === null ? 'in the known part' : 'a lap';
 	const turns = (value: number) => grouped(value);
 	const seconds = (value: number) => fixed(value, 2);
 	const minutes = (value: number) => fixed(value / minuteS, 1);
 	const percent = (value: number) => `${fixed(100 * value, 1)} %`;
 	return [
 		{name: 'engine turns a race', value: each => each.turnsPerRace, write: turns},
-		{name: 'engine turns a lap', value: each => each.turnsPerLap, write: turns, inPercent: true},
+		{name: `engine turns ${lap}`, value: each => each.turnsPerLap, write: turns, inPercent: true},
 		{name: `${above}, min a race`, value: each => each.aboveRaceS, write: minutes},
-		{name: `${above}, s a lap`, value: each => each.aboveLapS, write: seconds},
+		{name: `${above}, s ${lap}`, value: each => each.aboveLapS, write: seconds},
 		{name: 'highest rpm', value: each => each.highestRpm, write: rpmUp},
 		{name: 'mean rpm', value: each => each.meanRpm, write: rpm},
 		{name: 'at full throttle', value: each => each.fullThrottleS / each.lapS, write: percent},
-		{name: lapM === null ? 'told part of the lap, s' : 'lap, s', value: each => each.lapS, write: seconds},
+		{name: lapM === null ? 'the known part, s' : 'lap, s', value: each => each.lapS, write: seconds},
 	];
 };
 
