@@ -1,7 +1,7 @@
 /** What `life` and `fuel` have in common: one pair beside another at a track. */
 import type {Car} from '../drivetrain/car.ts';
 import type {Track} from '../drivetrain/track.ts';
-import type {LifeOptions} from '../life/answer.ts';
+import type {LifeOptions} from '../life/options.ts';
 import type {About} from '../life/results.ts';
 import type {Outcome, Verdict} from '../planning/results.ts';
 import type {Block} from '../text/blocks.ts';

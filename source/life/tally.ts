@@ -1,4 +1,5 @@
 /** Slices added up: time by gear and step of RPM, turns, work, and what is above an RPM. */
+import type {Lap} from './lap.ts';
 import {isAbove, type Slice, stepOf, stepRpm, type Throttle} from './slice.ts';
 
 export type DwellCell = {readonly gear: number; readonly fromRpm: number; readonly toRpm: number; timeS: number};
@@ -26,11 +27,11 @@ export function emptyTally(): Tally {
 	};
 }
 
-/** Adds `weight` laps' worth of slices. */
-export function addSlices(tally: Tally, slices: readonly Slice[], weight: number, aboveRpm: number): void {
+/** Adds `weight` laps' worth; the slices of a lap are its whole time. */
+export function addLap(tally: Tally, {slices, timeS: lapS}: Lap, weight: number, aboveRpm: number): void {
+	tally.timeS += weight * lapS;
 	for (const slice of slices) {
 		const timeS = weight * slice.timeS;
-		tally.timeS += timeS;
 		tally.turns += weight * slice.turns;
 		tally.energyJ += weight * slice.energyJ;
 		tally.throttleS[slice.throttle] += timeS;

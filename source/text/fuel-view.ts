@@ -35,25 +35,25 @@ const figuresOf = (units: Units): Figure<PairFuel>[] => {
 const hourS = 3600;
 
 /** The consumption, the density and the tank that an answer stands on. */
-const assumedWords = ({fuelConsumptionKgPerJ, fuelDensityKgM3, tankM3}: FuelAnswer, units: Units): string => {
+export const assumedWords = ({fuelConsumptionKgPerJ, fuelDensityKgM3, tankM3}: FuelAnswer, units: Units): string => {
 	const metric = fixed(fuelConsumptionKgPerJ * 1000 * hourS, 3);
 	const us = fixed((fuelConsumptionKgPerJ * horsepowerW * hourS) / poundKg, 3);
 	const density = fixed(fuelDensityKgM3 * literM3, 3);
 	const tank = tankM3 === null ? [] : [`a tank of ${units.text('fuel', tankM3)}`];
-	return [`Assumed: ${metric} kg/kWh (${us} lb/(hp h)) at every load`, `fuel of ${density} kg/L`, ...tank].join(', ');
+	return [`Assumed: ${metric} kg/kWh (${us} lb/(hp h)) at every load`, `fuel of ${density} kg/L`, ...tank]
+		.join(', ')
+		.concat('.');
 };
 
-export const fuelBlocks = (answer: FuelAnswer, units: Units): Block[] => [
-	comparisonView(answer.pairs, figuresOf(units)),
-	gap,
-	text(`- ${assumedWords(answer, units)}.`, 'plain', 2),
-];
+export const fuelFigures = (answer: FuelAnswer, units: Units): Block => comparisonView(answer.pairs, figuresOf(units));
 
 export const fuelView = (heading: Heading, answer: FuelAnswer, units: Units): Block[] => [
 	...headingView(heading, `fuel, ${againstWords(answer.pairs)} · ${aboutWords(answer)}`, answer.setting, units),
 	gap,
-	...fuelBlocks(answer, units),
-	...answer.assumptions.map(each => text(`- ${each}`, 'plain', 2)),
+	fuelFigures(answer, units),
+	gap,
 	...installedView(answer.pairs),
+	text(`- ${assumedWords(answer, units)}`, 'plain', 2),
+	...answer.assumptions.map(each => text(`- ${each}`, 'plain', 2)),
 	...closingView(answer.remarks),
 ];

@@ -43,17 +43,14 @@ export const aboutWords = ({
 export const againstWords = (pairs: readonly {pair: string; gearbox: string; installed: boolean}[]): string =>
 	pairs.map(pairWords).join(' against ');
 
-/** The figures, then where the time is spent. */
-export const lifeBlocks = (answer: LifeAnswer): Block[] => [
-	comparisonView(answer.pairs, figuresOf(answer)),
-	gap,
-	...dwellView(answer.pairs),
-];
+export const lifeFigures = (answer: LifeAnswer): Block => comparisonView(answer.pairs, figuresOf(answer));
 
 export const lifeView = (heading: Heading, answer: LifeAnswer, units: Units): Block[] => [
 	...headingView(heading, `engine life, ${againstWords(answer.pairs)} · ${aboutWords(answer)}`, answer.setting, units),
 	gap,
-	...lifeBlocks(answer),
+	lifeFigures(answer),
+	gap,
+	...dwellView(answer.pairs),
 	gap,
 	...installedView(answer.pairs),
 	...answer.assumptions.map(each => text(`- ${each}`, 'plain', 2)),

@@ -4,7 +4,7 @@ import {RoadGears} from '../../source/drivetrain/road-gears.ts';
 import {runStraight} from '../../source/drivetrain/run-straight.ts';
 import {fuelOf} from '../../source/life/fuel.ts';
 import {straightSlices} from '../../source/life/straight-slices.ts';
-import {addSlices, emptyTally} from '../../source/life/tally.ts';
+import {addLap, emptyTally} from '../../source/life/tally.ts';
 import type {Row} from '../../source/planning/results.ts';
 import {sampleCourse, sampleVehicle, trainOf} from '../drivetrain/sample-car.ts';
 
@@ -102,7 +102,8 @@ describe('constant power', () => {
 		const run = runStraight(gears, course);
 		if (run.kind !== 'ran') throw new Error(run.kind);
 		const tally = emptyTally();
-		addSlices(tally, straightSlices(gears, course, run.chosen, 0, 8000), 1, 8000);
+		const slices = straightSlices(gears, course, run.chosen, 0, 8000);
+		addLap(tally, {slices, timeS: run.chosen.timeS}, 1, 8000);
 		expect(tally.timeS).toBeCloseTo(timeS, 6);
 		expect(Math.abs(tally.energyJ / (300_000 * timeS) - 1)).toBeLessThan(1e-6);
 		// 0.3 kg/kWh.

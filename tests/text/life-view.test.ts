@@ -1,6 +1,7 @@
 import {expect, test} from 'vitest';
 import type {Track} from '../../source/drivetrain/track.ts';
-import {fuelAnswer, type LifeOptions, lifeAnswer} from '../../source/life/answer.ts';
+import {fuelAnswer, lifeAnswer} from '../../source/life/answer.ts';
+import type {LifeOptions} from '../../source/life/options.ts';
 import type {Block} from '../../source/text/blocks.ts';
 import {gearBar} from '../../source/text/dwell-view.ts';
 import {fuelView} from '../../source/text/fuel-view.ts';
