@@ -52,7 +52,7 @@ export const dwellView = (pairs: readonly EngineLife[]): Block[] => {
 		cell: ({dwell: [one, other]}) => cell(signed(lapS(one!) - lapS(other!), 2)),
 	};
 	if (pairs.length > 1) columns.push(difference);
-	const note = `Seconds a lap in each step of RPM. In a bar each character is ${fixed(characterS, 2)} s, in the gear that it names.`;
+	const note = `Seconds in each step of RPM. In a bar each character is ${fixed(characterS, 2)} s, in the gear that it names.`;
 	return [tableOf(columns, steps), text(note, 'muted')];
 };
 

@@ -144,7 +144,8 @@ describe('a whole straight', () => {
 				const found = told({vehicle: {...vehicle, growth: 0}, train, course: only});
 				if (found === undefined) return true;
 				const turns = (course.lengthM / vehicle.rolloutM) * train.overall[gear - 1]! * (1 + vehicle.slip);
-				return relative(sum(found.slices, 'turns'), turns) < 1e-9;
+				// Near the speed that the resistances hold, neighboring doubles of speed are meters apart.
+				return relative(sum(found.slices, 'turns'), turns) < 1e-7;
 			}),
 			{numRuns: runs(300, 20_000)},
 		);
