@@ -1,5 +1,7 @@
 /** Every command once: parsing, help and the messages about unknown ones are made from this table. */
 import type {Command} from './command.ts';
+import {lifeCommands} from './life-commands.ts';
+import {oddsCommands} from './odds-commands.ts';
 import {sharingCommands} from './sharing-commands.ts';
 import {storeCommands} from './store-commands.ts';
 
@@ -14,7 +16,7 @@ export const commands: readonly Command[] = [
 		name: 'rank',
 		summary: 'rank every pair and gearbox set, best first, with checks and reasons',
 		argument: track,
-		options: ['car', 'situation', 'top', ...everywhere],
+		options: ['car', 'situation', 'top', 'risk', 'seed', ...everywhere],
 		examples: [
 			{line: 'droprack rank friday.json --car ours.json', gives: 'your car at your track'},
 			{line: 'droprack rank friday.json --situation "In the tow" --top 5', gives: 'the five best in the tow'},
@@ -85,6 +87,8 @@ export const commands: readonly Command[] = [
 		],
 		load: async () => (await import('./schema.ts')).schema,
 	},
+	...lifeCommands,
+	...oddsCommands,
 	...storeCommands,
 	...sharingCommands,
 ];

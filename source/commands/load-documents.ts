@@ -2,6 +2,7 @@
 import {readCar, readTrack} from '../documents/read.ts';
 import type {Car} from '../drivetrain/car.ts';
 import type {Track} from '../drivetrain/track.ts';
+import type {Uncertainties} from '../drivetrain/uncertainties.ts';
 import {homeDirectory} from '../store/home.ts';
 import {readPreferences} from '../store/preferences.ts';
 import {inputOf, load} from './document-input.ts';
@@ -15,6 +16,8 @@ export type Loaded = {
 	car: Car;
 	/** As they were written. */
 	documents: {track: Record<string, unknown>; car: Record<string, unknown>};
+	/** How well the numbers are known, as far as the documents say it. */
+	uncertainties: {track: Uncertainties; car: Uncertainties};
 	/** What messages call the documents that the two came from. */
 	labels: {track: string; car: string};
 	/** What is worth knowing beside the result. */
@@ -34,8 +37,9 @@ export const loadDocuments = async (request: Request, around: Surroundings): Pro
 	}
 	const labels = {track: track.value.label, car: car.value.label};
 	const documents = {track: track.value.document, car: car.value.document};
+	const uncertainties = {track: track.value.uncertainties, car: car.value.uncertainties};
 	const notes = [...new Set([...choice.notes, ...track.value.notes, ...car.value.notes])];
-	return found({track: track.value.value, car: car.value.value, documents, labels, notes});
+	return found({track: track.value.value, car: car.value.value, documents, uncertainties, labels, notes});
 };
 
 type CarChoice = {car: string; notes: string[]; reasons: string[]};

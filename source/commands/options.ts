@@ -9,13 +9,15 @@ export type Option = {
 
 export const options = {
 	car: {value: 'CAR', summary: 'the car: a file, or the name of a saved or shipped one'},
+	risk: {value: 'PERCENT', summary: 'the chance of passing the RPM limit that you accept, such as 5%'},
+	seed: {value: 'N', summary: 'seed of the draws; the same seed gives the same answer'},
 	situation: {value: 'NAME', summary: 'the situation: rank by it alone, or what the entry was seen in'},
 	top: {value: 'N', summary: 'show the first N rows'},
 	pair: {
 		value: 'PAIR',
-		summary: 'driving/driven teeth, such as 33/38; rpm and run take the installed pair unless given',
+		summary: 'driving/driven teeth, such as 33/38; rpm, run, life and fuel take the installed pair unless given',
 	},
-	gearbox: {value: 'SET', summary: 'the gearbox set; rpm and run take the installed one unless given'},
+	gearbox: {value: 'SET', summary: 'the gearbox set; rpm, run, life and fuel take the installed one unless given'},
 	prefer: {value: 'NAME', summary: 'take this car where none is named; "none" clears it'},
 	name: {value: 'NAME', summary: 'the name of the new document'},
 	from: {value: 'DOCUMENT', summary: 'begin with a copy of this: a file, or the name of a saved or shipped one'},
@@ -32,6 +34,12 @@ export const options = {
 	qr: {summary: 'draw it as a QR code; with --short the one line'},
 	take: {summary: "keep the plan's track, with its pair, set and notes, once it is compared"},
 	copy: {summary: "send it to the terminal's clipboard too"},
+	against: {
+		value: 'PAIR',
+		summary: 'the pair to compare with, in the same set; unless given the installed one, or the best',
+	},
+	above: {value: 'RPM', summary: 'tell the time above this RPM; 500 under the limit unless given'},
+	laps: {value: 'N', summary: 'the laps of the race; those of the track unless given'},
 	json: {summary: 'print the result for programs: JSON, SI units, not rounded'},
 	units: {value: 'us|metric', summary: 'units of the text output; us unless given'},
 	strict: {summary: 'end with status 1 if the plan fails a check, or something is wrong'},

@@ -13,6 +13,9 @@ export type Request = {
 	top?: number;
 	pair?: {driving: number; driven: number};
 	gearbox?: string;
+	/** A share of 1. */
+	risk?: number;
+	seed?: number;
 	prefer?: string;
 	name?: string;
 	from?: string;
@@ -29,6 +32,9 @@ export type Request = {
 	short?: boolean;
 	qr?: boolean;
 	copy?: boolean;
+	against?: {driving: number; driven: number};
+	above?: number;
+	laps?: number;
 	json: boolean;
 	units: UnitSystem;
 	strict: boolean;
@@ -39,6 +45,8 @@ export type Request = {
 export type Given = Partial<Record<OptionName, string | true>>;
 
 const pairPattern = /^\s*(\d{1,4})\s*\/\s*(\d{1,4})\s*$/;
+
+const riskPattern = /^\s*(\d+(?:\.\d+)?)\s*(%)\s*$/;
 
 /** Options that are taken as they were written. */
 const texts = [
@@ -83,14 +91,34 @@ export const toRequest = (argument: string | undefined, given: Given, second?: s
 		if (!/^[1-9]\d{0,5}$/.test(given.top)) return `--top is a whole number from 1, found ${given.top}.`;
 		request.top = Number(given.top);
 	}
-	if (typeof given.pair === 'string') {
-		const [, driving, driven] = pairPattern.exec(given.pair) ?? [];
-		if (!Number(driving) || !Number(driven)) return `--pair is driving/driven, such as 33/38, found ${given.pair}.`;
-		request.pair = {driving: Number(driving), driven: Number(driven)};
+	for (const name of ['pair', 'against'] as const) {
+		const text = given[name];
+		if (typeof text !== 'string') continue;
+		const [, driving, driven] = pairPattern.exec(text) ?? [];
+		if (!Number(driving) || !Number(driven)) return `--${name} is driving/driven, such as 33/38, found ${text}.`;
+		request[name] = {driving: Number(driving), driven: Number(driven)};
 	}
-	if (typeof given.rpm === 'string') {
-		if (!/^[1-9]\d{2,4}$/.test(given.rpm)) return `--rpm is a whole number from 100 to 99999, found ${given.rpm}.`;
-		request.rpm = Number(given.rpm);
+	for (const name of ['rpm', 'above'] as const) {
+		const text = given[name];
+		if (typeof text !== 'string') continue;
+		if (!/^[1-9]\d{2,4}$/.test(text)) return `--${name} is a whole number from 100 to 99999, found ${text}.`;
+		request[name] = Number(text);
+	}
+	if (typeof given.laps === 'string') {
+		if (!/^([1-9]\d{0,3}|10000)$/.test(given.laps))
+			return `--laps is a whole number from 1 to 10000, found ${given.laps}.`;
+		request.laps = Number(given.laps);
+	}
+	if (typeof given.risk === 'string') {
+		const [, number, sign] = riskPattern.exec(given.risk) ?? [];
+		const share = Number(number) / 100;
+		if (sign === undefined || !(share >= 0 && share < 1))
+			return `--risk is a percentage from 0% to below 100%, such as 5%, found ${given.risk}.`;
+		request.risk = share;
+	}
+	if (typeof given.seed === 'string') {
+		if (!/^\d{1,9}$/.test(given.seed)) return `--seed is a whole number from 0 to 999999999, found ${given.seed}.`;
+		request.seed = Number(given.seed);
 	}
 	if (request.date !== undefined && !isDay(request.date))
 		return `--date is a day such as 2026-05-31, found ${request.date}.`;

@@ -51,7 +51,10 @@ function tabulated(place: Place, table: VehicleTable): RoadTable | undefined {
 	const course = anyCourse(place);
 	if (course === undefined || place.straight.lengthM === undefined) return undefined;
 	// A car that slows below its exit is the exact solver's.
-	const fromNode = Math.max(0, Math.floor(Math.min(course.exitMps, place.straight.exitMps) / nodeMps) - slower / nodeMps);
+	const fromNode = Math.max(
+		0,
+		Math.floor(Math.min(course.exitMps, place.straight.exitMps) / nodeMps) - slower / nodeMps,
+	);
 	return roadTable(table.vehicle, course, table.perHeldKg, fromNode);
 }
 

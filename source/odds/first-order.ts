@@ -8,10 +8,11 @@ export type Outcomes = (point: readonly number[]) => readonly number[];
 
 /**
  * First-order shares S_i = Var(E(Y | x_i)) / Var(Y) of each outcome (outer) and each of `dimensions` independent inputs
- * (inner), with standard errors from the independent sets of points. Pick and freeze: Y at a point, and Y′ at another that
- * shares its i-th coordinate alone; S = (mean(Y·Y′) − m²) / (mean((Y² + Y′²)/2) − m²), m the mean of (Y + Y′)/2, the estimator
- * T_N of A. Janon, T. Klein, A. Lagnoux, M. Nodet and C. Prieur, ESAIM: Probability and Statistics 18 (2014), eq. 6, which
- * no other beats in the limit. Takes `points`·(1 + dimensions) outcomes and yields after each point. 0 where nothing varies.
+ * (inner), with standard errors from the independent sets of points. With points A and B, and A_i the point A with the i-th
+ * coordinate of B: V_i = mean(Y(B)·(Y(A_i) − Y(A))), eq. (b) of table 2 in A. Saltelli, P. Annoni, I. Azzini, F. Campolongo,
+ * M. Ratto and S. Tarantola, Comput. Phys. Commun. 181 (2010), 259-270; Y is counted from its mean, which leaves the
+ * expectation and takes most of the scatter. An input that does little scatters little. Takes `points`·(2 + dimensions)
+ * outcomes and yields after each. 0 where nothing varies.
  */
 export function* firstOrderSteps(
 	dimensions: number,
@@ -19,58 +20,52 @@ export function* firstOrderSteps(
 	points: number,
 	seed: number,
 ): Generator<void, Estimate[][], void> {
-	const sums: Moments[][][] = [];
-	const origins: number[] = [];
+	const pairs: Pair[] = [];
 	for (let draw = 0; draw < points; draw++) {
-		const replicate = replicateOf(draw);
-		const at = (dimension: number) => coordinate(indexOf(draw), dimension, replicate, seed);
-		const one = Array.from({length: dimensions}, (_, i) => at(i));
-		const other = Array.from({length: dimensions}, (_, i) => at(dimensions + i));
-		const outcomes = outcomesAt(one);
+		const at = (dimension: number) => coordinate(indexOf(draw), dimension, replicateOf(draw), seed);
+		const a = Array.from({length: dimensions}, (_, i) => at(i));
+		const b = Array.from({length: dimensions}, (_, i) => at(dimensions + i));
+		const [one, other] = [outcomesAt(a), outcomesAt(b)];
 		yield;
+		const mixed: (readonly number[])[] = [];
 		for (let i = 0; i < dimensions; i++) {
-			const frozen = outcomesAt(other.map((value, k) => (k === i ? one[i]! : value)));
-			for (const [k, value] of outcomes.entries()) {
-				if (Number.isNaN(value) || Number.isNaN(frozen[k]!)) continue;
-				// Counted from the first value, so that a large mean costs no digits.
-				origins[k] ??= value;
-				sums[k] ??= Array.from({length: dimensions}, () => Array.from({length: replicates}, newMoments));
-				add(sums[k][i]![replicate]!, value - origins[k], frozen[k]! - origins[k]);
-			}
+			mixed.push(outcomesAt(a.map((value, k) => (k === i ? b[i]! : value))));
 			yield;
 		}
+		pairs.push({replicate: replicateOf(draw), a: one, b: other, mixed});
 	}
-	return sums.map(byInput => byInput.map(shareOf));
+	const outcomes = pairs[0]?.a.length ?? 0;
+	return Array.from({length: outcomes}, (_, k) => sharesOf(dimensions, pairs, k));
 }
 
-type Moments = {count: number; sum: number; product: number; square: number};
+type Pair = {
+	readonly replicate: number;
+	readonly a: readonly number[];
+	readonly b: readonly number[];
+	readonly mixed: readonly (readonly number[])[];
+};
 
-const newMoments = (): Moments => ({count: 0, sum: 0, product: 0, square: 0});
-
-function add(moments: Moments, y: number, frozen: number): void {
-	moments.count++;
-	moments.sum += (y + frozen) / 2;
-	moments.product += y * frozen;
-	moments.square += (y * y + frozen * frozen) / 2;
+function sharesOf(dimensions: number, pairs: readonly Pair[], outcome: number): Estimate[] {
+	const known = pairs.filter(({a, b, mixed}) => [a, b, ...mixed].every(values => Number.isFinite(values[outcome])));
+	const values = known.flatMap(({a, b}) => [a[outcome]!, b[outcome]!]);
+	const mean = values.reduce((sum, value) => sum + value, 0) / values.length;
+	const variance = values.reduce((sum, value) => sum + (value - mean) ** 2, 0) / values.length;
+	return Array.from({length: dimensions}, (_, i) => {
+		if (!(variance > 0)) return {value: 0, error: 0};
+		const parts = known.map(({replicate, a, b, mixed}) => ({
+			replicate,
+			part: ((b[outcome]! - mean) * (mixed[i]![outcome]! - a[outcome]!)) / variance,
+		}));
+		return meanOfSets(parts);
+	});
 }
 
-/** The standard error is the jackknife's: from the values that leave one set out each. */
-function shareOf(sets: readonly Moments[]): Estimate {
-	const value = ratioOf(sets);
-	const without = sets.map((_, left) => ratioOf(sets.filter((_, i) => i !== left)));
-	const mean = without.reduce((sum, one) => sum + one, 0) / sets.length;
-	const squares = without.reduce((sum, one) => sum + (one - mean) ** 2, 0);
-	return {value, error: Math.sqrt((squares * (sets.length - 1)) / sets.length)};
-}
-
-function ratioOf(sets: readonly Moments[]): number {
-	let [count, sum, product, square] = [0, 0, 0, 0];
-	for (const set of sets) {
-		count += set.count;
-		sum += set.sum;
-		product += set.product;
-		square += set.square;
-	}
-	const variance = square / count - (sum / count) ** 2;
-	return variance > 0 ? (product / count - (sum / count) ** 2) / variance : 0;
+/** The mean, with the standard error from the means of the sets. */
+function meanOfSets(parts: readonly {readonly replicate: number; readonly part: number}[]): Estimate {
+	const value = parts.reduce((sum, {part}) => sum + part, 0) / parts.length;
+	const means = Array.from({length: replicates}, (_, set) => parts.filter(({replicate}) => replicate === set))
+		.filter(set => set.length > 0)
+		.map(set => set.reduce((sum, {part}) => sum + part, 0) / set.length);
+	const squares = means.reduce((sum, mean) => sum + (mean - value) ** 2, 0);
+	return {value, error: Math.sqrt(squares / Math.max(1, means.length - 1) / means.length)};
 }

@@ -19,7 +19,18 @@ export type InputKind =
 	| 'other';
 
 /** What its standard deviation is in: SI, or a share of the number. */
-export type InputUnit = 'share' | 'points' | 'speed' | 'temperature' | 'pressure' | 'angle' | 'mass' | 'area' | 'length' | 'number' | 'power';
+export type InputUnit =
+	| 'share'
+	| 'points'
+	| 'speed'
+	| 'temperature'
+	| 'pressure'
+	| 'angle'
+	| 'mass'
+	| 'area'
+	| 'length'
+	| 'number'
+	| 'power';
 
 export type Input = {
 	/** "rollout", "exit of Front", "drag in In the tow". */

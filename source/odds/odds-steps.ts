@@ -76,7 +76,11 @@ export function oddsOf(car: Car, track: Track, options: OddsOptions = {}): Outco
  *   rows are; for a lag anywhere near normal it is below 1e-20. It keeps its pilot draws and their standard error.
  *   `tests/odds/odds.test.ts` compares with all rows in all draws.
  */
-export function* oddsSteps(car: Car, track: Track, options: OddsOptions = {}): Generator<OddsProgress, Outcome<Odds>, void> {
+export function* oddsSteps(
+	car: Car,
+	track: Track,
+	options: OddsOptions = {},
+): Generator<OddsProgress, Outcome<Odds>, void> {
 	const plan = planFor(car, track);
 	if (!plan.ok) return plan;
 	const run = new OddsRun(car, track, plan.value, options);
@@ -136,8 +140,14 @@ class OddsRun {
 		yield* this.#advance(rows.slice(0, firstRows), Math.min(firstDraws, this.#draws));
 		yield* this.#advance(rows, Math.min(pilotDraws, this.#draws));
 		for (const row of rows) row.isBrief = row.overCount === row.draws;
-		yield* this.#advance(rows.filter(row => this.#standing(row, rows) === 'matters'), this.#draws);
-		yield* this.#advance(rows.filter(row => this.#standing(row, rows) !== 'dropped'), this.#draws);
+		yield* this.#advance(
+			rows.filter(row => this.#standing(row, rows) === 'matters'),
+			this.#draws,
+		);
+		yield* this.#advance(
+			rows.filter(row => this.#standing(row, rows) !== 'dropped'),
+			this.#draws,
+		);
 		for (let draws = 2 * this.#draws; draws <= this.#most && !this.answer(false)!.decision.isDecided; draws *= 2)
 			yield* this.#advance(this.#thatDecide(rows), draws);
 	}
@@ -196,9 +206,7 @@ class OddsRun {
 	#thatDecide(rows: readonly RowTally[]): RowTally[] {
 		const {risk} = this.#options;
 		const standings = this.#standings(rows);
-		const named = new Set<string | null>(
-			standings.filter(({first}) => first.value > 0).map(({row}) => row.name),
-		);
+		const named = new Set<string | null>(standings.filter(({first}) => first.value > 0).map(({row}) => row.name));
 		const {row, next} = decide(standings, risk ?? null);
 		named.add(row).add(next);
 		const nearRisk = ({over}: Standing) => risk !== undefined && Math.abs(over.value - risk) <= farBehind * over.error;

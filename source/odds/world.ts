@@ -6,7 +6,14 @@ import {carAt} from '../planning/situations.ts';
 export type World = {readonly car: Car; readonly track: Track};
 
 /** Of one situation. `drag` is in the unit of its change: m² added or set, or a share. */
-export type SituationShift = {exitMps: number; drag: number; grip: number; power: number; mass: number; rollout: number};
+export type SituationShift = {
+	exitMps: number;
+	drag: number;
+	grip: number;
+	power: number;
+	mass: number;
+	rollout: number;
+};
 export type StraightShift = {exitMps: number; endMps: number; entryMps: number; lengthM: number};
 
 /** By how much each number is off; shares are of the number itself, and 0 everywhere is the world as the documents have it. */

@@ -87,7 +87,7 @@ export class QuickGears implements Gears {
 		if (goal.distanceM - brakingDistanceM(speedMps, braking) <= 0) return {speedMps, distanceM, timeS, why: 'end'};
 		for (let cell = Math.floor(speedMps / cellMps); cell < lastCell; ) {
 			const top = (cell + 1) * cellMps;
-			let far = toMps < top ? toMps : top;
+			let far = Math.min(toMps, top);
 			if (braking !== undefined && braking.entryMps > speedMps && braking.entryMps < far) far = braking.entryMps;
 			if (far === top && speedMps === cell * cellMps) {
 				if (cells.stamp[cell] !== this.#stamp) this.#keepCell(gear, cells, cell);
@@ -124,8 +124,7 @@ export class QuickGears implements Gears {
 		const guessMps2 = this.#mps2(gear, guess);
 		this.#integrate(gear, here.speedMps, hereMps2, guess, guessMps2);
 		const brakes = braking !== undefined && guess > braking.entryMps ? braking.brakingMps2 : Infinity;
-		const step =
-			(leftM - this.#distanceM - brakingDistanceM(guess, braking)) / (guess / guessMps2 + guess / brakes);
+		const step = (leftM - this.#distanceM - brakingDistanceM(guess, braking)) / (guess / guessMps2 + guess / brakes);
 		const speed = Math.min(farMps, Math.max(here.speedMps, guess + step));
 		// So near to the guess the acceleration is even.
 		const gainS = (speed - guess) / guessMps2;
@@ -163,7 +162,7 @@ export class QuickGears implements Gears {
 		const powered = this.#tables.poweredAtNode(gear, node, this.#road.resistanceN[node]!);
 		const held = this.#road.heldMps2[node]!;
 		this.#surplus = powered - held;
-		return powered < held ? powered : held;
+		return Math.min(powered, held);
 	}
 
 	#mps2(gear: number, speedMps: number): number {
@@ -175,7 +174,7 @@ export class QuickGears implements Gears {
 		const powered = this.#tables.poweredAt(gear, speedMps, turns, perInertia, resistance);
 		const held =
 			(gripLimitN(forces, speedMps) - resistance) / (vehicle.massKg + perInertia * vehicle.undrivenInertiaKgM2);
-		return powered < held ? powered : held;
+		return Math.min(powered, held);
 	}
 
 	#keepCell(gear: number, cells: CellTable, cell: number): void {

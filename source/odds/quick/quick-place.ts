@@ -1,7 +1,8 @@
 /** One straight in one situation with one pair and set, as far as odds need it: the time, and the highest RPM. */
-import {finishesTogether} from '../../drivetrain/shared-sequences.ts';
+
 import {outcomeOf} from '../../drivetrain/run-straight.ts';
 import {type Finish, highest, reachMps} from '../../drivetrain/sequence.ts';
+import {finishesTogether} from '../../drivetrain/shared-sequences.ts';
 import type {Course} from '../../drivetrain/straight.ts';
 import type {Condition, Place} from '../../planning/conditions.ts';
 import {rpmAt} from '../../planning/run-place.ts';

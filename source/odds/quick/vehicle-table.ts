@@ -93,7 +93,8 @@ export class ThrustTables {
 	take(table: VehicleTable, train: GearTrain): void {
 		this.#table = table;
 		this.#train = train;
-		const {rolloutM, growth, slip, limiterRpm, topRpm, shiftCapRpm, wheelInertiaKgM2, engineInertiaKgM2} = table.vehicle;
+		const {rolloutM, growth, slip, limiterRpm, topRpm, shiftCapRpm, wheelInertiaKgM2, engineInertiaKgM2} =
+			table.vehicle;
 		train.overall.forEach((overall, i) => {
 			this.#gears[i] ??= new GearTable();
 			const gear = this.#gears[i];
