@@ -42,11 +42,12 @@ export const mostDrawsUnlessGiven = 4096;
 const firstRows = 8;
 const firstDraws = replicates;
 /** After so many draws it is seen which rows matter. */
-const pilotDraws = 2 * replicates;
+const pilotDraws = 4 * replicates;
 /** A row waits where it was never first or over the limit in the pilot and is so many standard deviations of the difference behind. */
 const farBehind = 3;
 /** So far behind it is dropped; see `oddsSteps`. */
 const hopeless = 10;
+const safe = 5;
 /** So many rows at a time: a few milliseconds on the longest tracks. */
 const rowsAtOnce = 12;
 
@@ -70,11 +71,12 @@ export function oddsOf(car: Car, track: Track, options: OddsOptions = {}): Outco
  * - A row that a rule, the case, the stock or its miles rule out is not allowed in any draw.
  * - In a draw in which a row is over the limit at one place it is over and not allowed, whatever it does at the others. Once
  *   it has been over in all of the pilot, that place is looked at first, and the rest only where it is not over there.
- * - A row that was never over in the pilot and is `hopeless` standard deviations s of its own lag behind the best, on the
- *   mean m of the lag. To be first its lag must be 0 or less, and by Cantelli's inequality no distribution with that m and s
- *   gives this more than 1 chance in 1 + (m/s)²: less than one in a hundred, which is what the standard errors of the first
- *   rows are; for a lag anywhere near normal it is below 1e-20. It keeps its pilot draws and their standard error.
- *   `tests/odds/odds.test.ts` compares with all rows in all draws.
+ * - A safe row that on the mean is `hopeless` standard deviations of its own lag behind the best safe row of each draw. Safe:
+ *   never over in the pilot, and the highest RPM `safe` standard deviations below the limit on the mean. To
+ *   be first in a draw, either the safe rows are over in it, or the lag is 0 or less. Whatever the distributions, Cantelli's
+ *   inequality bounds the chance of what lies k standard deviations off the mean by 1/(1 + k²): together below 5 %; for
+ *   distributions anywhere near normal, as sums of many small effects are, below 1e-6. The row keeps its pilot draws and the
+ *   standard error that they have. `tests/odds/odds.test.ts` compares with all rows in all draws.
  */
 export function* oddsSteps(
 	car: Car,
@@ -193,13 +195,18 @@ class OddsRun {
 		return this.#day.day;
 	}
 
+	#isSafe({overCount, highestRpm, draws}: RowTally): boolean {
+		const rpm = spreadOf(highestRpm, Math.min(draws, pilotDraws));
+		return overCount === 0 && rpm !== null && this.#plan.limitRpm - rpm.mean > safe * rpm.sd;
+	}
+
 	/** After the pilot: what a row is worth. */
 	#standing(row: RowTally, rows: readonly RowTally[]): 'matters' | 'can wait' | 'dropped' {
 		const {overCount, draws} = row;
 		if (overCount > 0) return overCount < draws ? 'matters' : 'can wait';
-		this.#pilotBest ??= bestOf(rows, Math.min(...rows.map(one => one.draws)));
+		this.#pilotBest ??= bestOf(rows.filter(one => this.#isSafe(one)), pilotDraws);
 		const deviations = deviationsBehind(row, this.#pilotBest);
-		return deviations > hopeless ? 'dropped' : deviations > farBehind ? 'can wait' : 'matters';
+		return deviations > hopeless && this.#isSafe(row) ? 'dropped' : deviations > farBehind ? 'can wait' : 'matters';
 	}
 
 	/** Rows that may be first, or whose chance may be on either side of the risk. */
@@ -264,7 +271,7 @@ class OddsRun {
 	}
 }
 
-/** How far behind the best it is on the mean, in standard deviations of that; 0 where it was first in a draw or has no time. */
+/** How far behind the best it is on the mean, in standard deviations of that; 0 where it was no slower in a draw or has no time. */
 function deviationsBehind(row: RowTally, best: Best): number {
 	let [count, sum, squares] = [0, 0, 0];
 	for (let draw = 0; draw < best.timeS.length; draw++) {
