@@ -31,7 +31,7 @@ export function* mattersSteps(
 	odds: Pick<Odds, 'decision'>,
 	options: MattersOptions = {},
 ): Generator<void, Matters | undefined, void> {
-	const planned = planFor(car, track);
+	const planned = planFor(car, track, {situation: options.situation});
 	const {row, next} = odds.decision;
 	if (!planned.ok || row === null) return undefined;
 	const plan = planned.value;

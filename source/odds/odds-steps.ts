@@ -14,7 +14,7 @@ import {worldOfDraw} from './draws/draw.ts';
 import {chanceOf, replicates, spreadOf} from './estimates.ts';
 import {inputsOf} from './inputs.ts';
 import type {Odds, OddsRow} from './results.ts';
-import {RowDraws} from './row-draw.ts';
+import {type RowDraw, RowDraws} from './row-draw.ts';
 import {nothingStated, type Stated} from './stated.ts';
 import {type Best, bestOf, firstPart, levelS, lossOf, RowTally} from './tally.ts';
 import {noShift, shifted, worldOf} from './world.ts';
@@ -23,11 +23,15 @@ export type OddsOptions = {
 	/** The chance of passing the RPM limit that is accepted, a share of 1. */
 	readonly risk?: number | undefined;
 	readonly seed?: number | undefined;
+	/** The only situation; all of them unless given. */
+	readonly situation?: string | undefined;
 	/** What the documents say of how well their numbers are known. */
 	readonly stated?: Stated | undefined;
 	/** Draws for every row that matters, and the most of all; powers of two. */
 	readonly draws?: number | undefined;
 	readonly mostDraws?: number | undefined;
+	/** Names of rows in the order of a ranking that is known, so that the first answer is about the best of them at once. */
+	readonly order?: readonly string[] | undefined;
 	/** Leaves nothing for later: every row goes through every draw. For tests. */
 	readonly inFull?: boolean | undefined;
 };
@@ -83,7 +87,7 @@ export function* oddsSteps(
 	track: Track,
 	options: OddsOptions = {},
 ): Generator<OddsProgress, Outcome<Odds>, void> {
-	const plan = planFor(car, track);
+	const plan = planFor(car, track, {situation: options.situation});
 	if (!plan.ok) return plan;
 	const run = new OddsRun(car, track, plan.value, options);
 	for (const _ of run.steps()) yield {...run.progress, answer: () => run.answer(false)};
@@ -103,6 +107,7 @@ class OddsRun {
 	readonly #inputs;
 	readonly #rows: readonly RowTally[];
 	readonly #rowDraws: RowDraws;
+	readonly #asItStands: Day;
 	#day: {readonly draw: number; readonly day: Day} | undefined;
 	#pilotBest: Best | undefined;
 	#done = 0;
@@ -121,6 +126,7 @@ class OddsRun {
 			candidate => new RowTally(candidate, barredBy(candidate, this.#ground), this.#most),
 		);
 		this.#rowDraws = new RowDraws({plan, measured: this.#ground.measured});
+		this.#asItStands = dayOf(plan, shifted(this.#world, noShift(this.#world.track)));
 	}
 
 	/** Rows that are to go through all draws ÷ those that have. */
@@ -133,7 +139,7 @@ class OddsRun {
 	}
 
 	*steps(): Generator<void, void, void> {
-		const rows = this.#byNominalTime();
+		const rows = this.#inKnownOrder() ?? (yield* this.#byNominalTime());
 		if (this.#options.inFull) {
 			yield* this.#advance(rows, this.#draws);
 			return;
@@ -154,13 +160,22 @@ class OddsRun {
 			yield* this.#advance(this.#thatDecide(rows), draws);
 	}
 
+	#inKnownOrder(): RowTally[] | undefined {
+		const {order} = this.#options;
+		if (order === undefined) return undefined;
+		const places = new Map(order.map((name, place) => [name, place]));
+		const placeOf = ({name}: RowTally) => places.get(name) ?? Number.POSITIVE_INFINITY;
+		return this.#open.sort((one, other) => placeOf(one) - placeOf(other) || 0);
+	}
+
 	/** The rows in the order of the documents' own numbers: those within the limit first, by time. */
-	#byNominalTime(): RowTally[] {
-		const day = dayOf(this.#plan, shifted(this.#world, noShift(this.#world.track)));
-		const keyed = this.#open.map(row => {
-			row.worthwhile = this.#rowDraws.worthwhile(day, row.candidate);
-			return {row, nominal: this.#rowDraws.run(day, row)};
-		});
+	*#byNominalTime(): Generator<void, RowTally[], void> {
+		const keyed: {row: RowTally; nominal: RowDraw}[] = [];
+		for (const row of this.#open) {
+			row.worthwhile = this.#rowDraws.worthwhile(this.#asItStands, row.candidate);
+			keyed.push({row, nominal: this.#rowDraws.run(this.#asItStands, row)});
+			if (keyed.length % rowsAtOnce === 0) yield;
+		}
 		return keyed
 			.sort(
 				({nominal: one}, {nominal: other}) =>
@@ -182,6 +197,7 @@ class OddsRun {
 	}
 
 	#draw(row: RowTally, draw: number): void {
+		row.worthwhile ??= this.#rowDraws.worthwhile(this.#asItStands, row.candidate);
 		const day = this.#dayOf(draw);
 		this.#done++;
 		if (row.isBrief && this.#rowDraws.isOverAt(day, row, row.spot))
@@ -204,7 +220,10 @@ class OddsRun {
 	#standing(row: RowTally, rows: readonly RowTally[]): 'matters' | 'can wait' | 'dropped' {
 		const {overCount, draws} = row;
 		if (overCount > 0) return overCount < draws ? 'matters' : 'can wait';
-		this.#pilotBest ??= bestOf(rows.filter(one => this.#isSafe(one)), pilotDraws);
+		this.#pilotBest ??= bestOf(
+			rows.filter(one => this.#isSafe(one)),
+			pilotDraws,
+		);
 		const deviations = deviationsBehind(row, this.#pilotBest);
 		return deviations > hopeless && this.#isSafe(row) ? 'dropped' : deviations > farBehind ? 'can wait' : 'matters';
 	}

@@ -1,5 +1,8 @@
 /** Chances, spreads and their sentences, the same in text and on the screen. */
 import type {Estimate, Matters, Odds, OddsInput, Share} from '../odds/results.ts';
+import type {RiskRow} from '../odds/risk-order.ts';
+import {rowName} from '../planning/rank-rack.ts';
+import type {Row} from '../planning/results.ts';
 import {fixed, type UnitSystem, unitsOf} from './units.ts';
 
 /** "3.1 %": enough digits for what is known. */
@@ -130,3 +133,18 @@ const namesText = (names: readonly string[]): string =>
 	names.length <= mostNames
 		? names.join(', ')
 		: `${names.slice(0, mostNames - 1).join(', ')} and ${names.length - mostNames + 1} more`;
+
+/** The ranking by risk: its rows with the reason for their place, and the chance of each. */
+export const riskView = (rows: readonly RiskRow[], {risk}: Odds) => {
+	const chances = new Map(rows.map(({row, odds}) => [rowName(row), odds === null ? '-' : chanceText(odds.over)]));
+	return {rows: rows.map(one => ({...one.row, reason: riskReason(one, risk ?? 0)})), chances};
+};
+
+function riskReason({row, odds, isWithin}: RiskRow, risk: number): Row['reason'] {
+	if (odds === null) return row.reason;
+	const chance = `Chance of passing the limit ${chanceText(odds.over)}`;
+	const mean = odds.timeS === null ? '' : `, ${fixed(odds.timeS.mean, 3)} s on the mean`;
+	if (isWithin)
+		return `${chance}, within the risk of ${percent(risk)}${mean}; the fastest allowed in ${chanceText(odds.first)}.`;
+	return odds.over.value > risk ? `${chance}, above the risk of ${percent(risk)}. ${row.reason}` : row.reason;
+}
