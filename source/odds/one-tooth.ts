@@ -9,7 +9,7 @@ import {limitMargin} from '../planning/order.ts';
 import {type Plan, planFor} from '../planning/plan.ts';
 import type {Row} from '../planning/results.ts';
 import {rowOf} from '../planning/row.ts';
-import {groundOf} from '../planning/run-rack.ts';
+import {finish, groundOf} from '../planning/run-rack.ts';
 import {runRow} from '../planning/run-row.ts';
 import {barredBy} from './barred.ts';
 import {noShift, type Shift, shifted, type World, worldOf} from './world.ts';
@@ -45,8 +45,13 @@ const reach = {exitMps: 8 * mphMps, towShare: 0.2} as const;
 const tolerance = {exitMps: 0.01 * mphMps, towShare: 1e-4} as const;
 const looks = 8;
 
-/** The row beside its neighbors with the same set that can be mounted; undefined for a row that is not there, or bad input. */
+/** All steps at once. */
 export function oneTooth(car: Car, track: Track, name: string): OneTooth | undefined {
+	return finish(oneToothSteps(car, track, name));
+}
+
+/** The row beside its neighbors with the same set that can be mounted; undefined for a row that is not there, or bad input. */
+export function* oneToothSteps(car: Car, track: Track, name: string): Generator<void, OneTooth | undefined, void> {
 	const planned = planFor(car, track);
 	if (!planned.ok) return undefined;
 	const plan = planned.value;
@@ -61,18 +66,19 @@ export function oneTooth(car: Car, track: Track, name: string): OneTooth | undef
 	const ratio = pairRatio(candidate.pair);
 	const shorter = others.find(one => pairRatio(one.pair) > ratio);
 	const taller = others.findLast(one => pairRatio(one.pair) < ratio);
-	const neighbor = (direction: Neighbor['direction'], other: Candidate | undefined): Neighbor[] =>
-		other === undefined
-			? []
-			: [
-					{
-						direction,
-						...toothRow(plan, other),
-						sameTime: breakEven(world, shift => timeLead(world, shift, candidate, other)),
-						atLimit: breakEven(world, shift => marginOf(world, shift, direction === 'shorter' ? other : candidate)),
-					},
-				];
-	return {of: toothRow(plan, candidate), neighbors: [...neighbor('shorter', shorter), ...neighbor('taller', taller)]};
+	const neighbors: Neighbor[] = [];
+	for (const [direction, other] of [
+		['shorter', shorter],
+		['taller', taller],
+	] as const) {
+		if (other === undefined) continue;
+		const told = toothRow(plan, other);
+		const sameTime = yield* breakEvenSteps(world, shift => timeLead(world, shift, candidate, other));
+		const shorterOne = direction === 'shorter' ? other : candidate;
+		const atLimit = yield* breakEvenSteps(world, shift => marginOf(world, shift, shorterOne));
+		neighbors.push({direction, ...told, sameTime, atLimit});
+	}
+	return {of: toothRow(plan, candidate), neighbors};
 }
 
 const nameOf = ({pairName, gearbox}: Candidate) => `${pairName} ${gearbox.name}`;
@@ -95,7 +101,7 @@ function toothRow(plan: Plan, candidate: Candidate): ToothRow {
 	};
 }
 
-function breakEven(world: World, value: (shift: Shift) => number): BreakEven {
+function* breakEvenSteps(world: World, value: (shift: Shift) => number): Generator<void, BreakEven, void> {
 	const hasTow = world.track.situations.some(({drag}) => drag?.kind === 'scale');
 	const alongExit = (mps: number) => {
 		const shift = noShift(world.track);
@@ -110,23 +116,29 @@ function breakEven(world: World, value: (shift: Shift) => number): BreakEven {
 		return value(shift);
 	};
 	return {
-		exitMps: nearestRoot(alongExit, reach.exitMps, tolerance.exitMps),
-		towShare: hasTow ? nearestRoot(alongTow, reach.towShare, tolerance.towShare) : null,
+		exitMps: yield* nearestRootSteps(alongExit, reach.exitMps, tolerance.exitMps),
+		towShare: hasTow ? yield* nearestRootSteps(alongTow, reach.towShare, tolerance.towShare) : null,
 	};
 }
 
 /** The root nearest to 0 within reach, looked for in steps on both sides and then solved by Brent's method. */
-function nearestRoot(f: (x: number) => number, far: number, near: number): number | null {
-	const roots = [far, -far].flatMap(end => {
-		let [from, before] = [0, f(0)];
+function* nearestRootSteps(f: (x: number) => number, far: number, near: number): Generator<void, number | null, void> {
+	const atZero = f(0);
+	const roots: number[] = [];
+	for (const end of [far, -far]) {
+		let [from, before] = [0, atZero];
 		for (let i = 1; i <= looks; i++) {
 			const to = (end * i) / looks;
 			const after = f(to);
-			if (before > 0 !== after > 0) return brentRoot(f, Math.min(from, to), Math.max(from, to), near) ?? [];
+			yield;
+			const crosses = before > 0 !== after > 0 && !Number.isNaN(before) && !Number.isNaN(after);
+			const root = crosses ? brentRoot(f, Math.min(from, to), Math.max(from, to), near) : undefined;
+			if (root !== undefined) roots.push(root);
+			if (crosses) break;
 			[from, before] = [to, after];
 		}
-		return [];
-	});
+	}
+	yield;
 	return roots.length === 0 ? null : roots.reduce((best, root) => (Math.abs(root) < Math.abs(best) ? root : best));
 }
 

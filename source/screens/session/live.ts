@@ -12,6 +12,7 @@ import {type Errandful, errandEffects, readPlan} from './errand-effects.ts';
 import {readTrackOf} from './forms.ts';
 import {type Handed, rowToHandOver} from './hand-over.ts';
 import {intend, type Scene, scopesOf, takesText} from './intend.ts';
+import {Odder, type OddsShown} from './odder.ts';
 import {type Clock, Ranker} from './ranker.ts';
 import {reduce} from './reduce.ts';
 import {cursorIn, type Filter, type Order, type Placed, placedRows, shownRows} from './rows.ts';
@@ -28,12 +29,13 @@ export type Outside = {
 export type State = {
 	readonly session: Session;
 	readonly answer: Answer;
-	readonly scene: Scene & {readonly handed: Handed | undefined};
+	readonly scene: Scene & {readonly handed: Handed | undefined; readonly odds: OddsShown | undefined};
 };
 
 export class LiveSession {
 	#state: State;
 	readonly #ranker: Ranker;
+	readonly #odder: Odder;
 	readonly #catalog: readonly OpenDocument[];
 	readonly #keeper: Keeper;
 	readonly #outside: Outside;
@@ -43,7 +45,7 @@ export class LiveSession {
 	/** Loaded once there is something to hand over: most sessions never have. */
 	#handing: typeof import('./handing.ts') | undefined;
 	#handingLoad: Promise<void> | undefined;
-	#placed: {readonly ranked: Ranked; readonly rows: Placed[]} | undefined;
+	#placed: {readonly ranked: Ranked; readonly odds: OddsShown['odds']; readonly rows: Placed[]} | undefined;
 	#shown:
 		| {readonly all: readonly Placed[]; readonly order: Order; readonly filter: Filter; readonly rows: Placed[]}
 		| undefined;
@@ -53,6 +55,7 @@ export class LiveSession {
 		this.#keeper = keeper;
 		this.#outside = outside;
 		this.#ranker = new Ranker(clock, () => this.#settle(this.#state.session));
+		this.#odder = new Odder(clock, () => this.#settle(this.#state.session));
 		this.#ranker.start(inputsOf(session));
 		this.#state = this.#stateOf(session);
 		const {errands} = keeper;
@@ -175,7 +178,8 @@ export class LiveSession {
 	#stateOf(session: Session): State {
 		const {answer} = this.#ranker;
 		const ranked = rankedIn(answer);
-		const all = ranked === undefined ? firstRow(answer) : this.#placedIn(ranked);
+		const odds = answer.is === 'ready' ? this.#oddsOf(session, answer.ranked) : undefined;
+		const all = ranked === undefined ? firstRow(answer) : this.#placedIn(ranked, session.risk, odds);
 		const documents = session.history.present;
 		const track = readTrackOf(documents.open[documents.track]!.json);
 		const {place} = session;
@@ -188,7 +192,7 @@ export class LiveSession {
 			isWorking: answer.is === 'working',
 		};
 		const handed = answer.is === 'ready' ? this.#handed(session, scene, answer.ranked) : undefined;
-		return {session, answer, scene: {...scene, handed}};
+		return {session, answer, scene: {...scene, handed, odds}};
 	}
 
 	/** Of an answer that is of a moment ago nothing is handed over. */
@@ -211,9 +215,22 @@ export class LiveSession {
 		return this.#shown.rows;
 	}
 
-	#placedIn(ranked: Ranked): Placed[] {
-		if (this.#placed?.ranked !== ranked) this.#placed = {ranked, rows: placedRows(ranked.ranking.rows)};
+	/** In the order of the risk once its odds are complete: rows do not move while they are refined. */
+	#placedIn(ranked: Ranked, risk: number | undefined, shown: OddsShown | undefined): Placed[] {
+		const odds = risk !== undefined && shown?.odds?.isComplete === true ? shown.odds : undefined;
+		if (this.#placed?.ranked !== ranked || this.#placed.odds !== odds) {
+			const byRisk = odds && this.#odder.work?.placedByRisk(ranked, odds, risk!);
+			this.#placed = {ranked, odds, rows: byRisk ?? placedRows(ranked.ranking.rows)};
+		}
 		return this.#placed.rows;
+	}
+
+	/** Where they are looked at, or order the ranking. */
+	#oddsOf({history, situation, risk, place, row}: Session, ranked: Ranked): OddsShown | undefined {
+		if (place.at !== 'odds' && risk === undefined) return undefined;
+		const first = ranked.ranking.rows[0];
+		const tooth = place.at === 'odds' ? (row ?? (first && rowName(first))) : undefined;
+		return this.#odder.shown({documents: history.present, situation, risk, ranked}, tooth);
 	}
 }
 

@@ -7,6 +7,7 @@ import {amended, type History, recorded, redone, undone} from './history.ts';
 import {withValue} from './json.ts';
 import {reduceForm} from './reduce-form.ts';
 import {reduceHistory, typedInDraft} from './reduce-history.ts';
+import {acceptedRisk} from './reduce-risk.ts';
 import {reduceTakeIn, typedInTakeIn} from './reduce-take-in.ts';
 import {reduceWhole} from './reduce-whole.ts';
 import type {Session} from './session.ts';
@@ -51,6 +52,8 @@ export function reduce(before: Session, action: Action): Session {
 			return timeTravelled(session, redone(session.history), 'Nothing to redo.');
 		case 'type':
 			return typed(session, action);
+		case 'accept risk':
+			return acceptedRisk(session);
 		case 'accept margin':
 			return acceptedMargin(session);
 		case 'move choice':
@@ -147,7 +150,7 @@ function timeTravelled(session: Session, history: History<Documents> | undefined
 
 function typed(session: Session, {event}: Action & {do: 'type'}): Session {
 	const {place, over} = session;
-	if (over?.is === 'margin' || over?.is === 'entry') {
+	if (over?.is === 'margin' || over?.is === 'risk' || over?.is === 'entry') {
 		const line = edited(over.line, event);
 		return line === undefined ? session : {...session, over: {...over, line, wrong: undefined}};
 	}

@@ -7,7 +7,8 @@ import {current, type Documents, titleOf, unsaved} from '../session/documents.ts
 import type {Asked, Over, Session} from '../session/session.ts';
 import {caretPieces} from './caret.ts';
 
-const questions: Record<Asked | 'margin', string> = {
+const questions: Record<Asked | 'margin' | 'risk', string> = {
+	risk: 'Accepted chance of passing the RPM limit: ',
 	margin: 'Least margin to the limit, RPM: ',
 	file: 'Write it to the file: ',
 	notes: 'Notes for the plan: ',
@@ -20,6 +21,7 @@ const mostLines = 4;
 export function noticeLines(session: Session, width: number): Pieces[] {
 	const {over, notice} = session;
 	if (over?.is === 'margin') return entryLines(questions.margin, over.line, over.wrong, width);
+	if (over?.is === 'risk') return entryLines(questions.risk, over.line, over.wrong, width);
 	if (over?.is === 'entry') return entryLines(questions[over.asks], over.line, over.wrong, width);
 	if (over !== undefined) return [clipped(questionPieces(over, session), width)];
 	return notice === undefined ? [blank] : told(notice, width).map(text => line(text, 'strong'));

@@ -36,6 +36,7 @@ export function stateOf(session: Session): State {
 			choices,
 			isWorking: false,
 			handed: handedIn(session, ranked, all),
+			odds: undefined,
 		},
 	};
 }
