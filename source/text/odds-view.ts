@@ -4,7 +4,7 @@ import type {Matters, Odds, OddsRow} from '../odds/results.ts';
 import type {Setting} from '../planning/results.ts';
 import {type Block, type Cell, cell, gap, type Making, tableOf, text} from './blocks.ts';
 import {caution, type Heading, headingView} from './heading-view.ts';
-import {chanceText, decisionSentences, inputLines, mattersSentences, percent, rowText} from './odds-words.ts';
+import {chanceText, decisionSentences, inputLines, mattersSentences, percent} from './odds-words.ts';
 import {absent, fixed, rpmDown, rpmUp, signed, type UnitSystem, type Units} from './units.ts';
 
 export type OddsAnswer = {
@@ -111,24 +111,29 @@ export const toothView = ({of, neighbors}: OneTooth, limitRpm: number, units: Un
 	const shorter = neighbors.find(({direction}) => direction === 'shorter');
 	const rows = [taller, of, shorter];
 	const lines: Line[] = [
+		{name: '', rows: [taller, undefined, shorter], told: row => (row === taller ? 'taller' : 'shorter')},
 		{name: 'time s', rows, told: ({timeS}) => (timeS === null ? absent : fixed(timeS, 3))},
 		{name: 'highest rpm', rows, told: ({highestRpm}) => rpmUp(highestRpm)},
 		{name: 'below the limit', rows, told: ({marginRpm}) => rpmDown(marginRpm)},
 		...of.ends.map(({straight}, i) => ({
 			name: `${straight} end`,
 			rows,
-			told: ({ends}: ToothRow) => `${fixed(ends[i]!.rpm, 0)}, at most ${rpmUp(ends[i]!.mostRpm)}`,
+			told: ({ends}: ToothRow) => `${fixed(ends[i]!.rpm, 0)}, ${rpmUp(ends[i]!.mostRpm)}`,
 		})),
 	];
 	const column = (head: string, at: number): Making<Line> => ({
 		head,
 		align: 'right',
 		keep: 0,
-		cell: line => cell(line.rows[at] === undefined ? absent : line.told(line.rows[at])),
+		cell: line => cell(line.rows[at] === undefined ? (line.name === '' ? '' : absent) : line.told(line.rows[at])),
 	});
-	const name = (row: ToothRow | undefined, kind: string) => (row === undefined ? `no ${kind}` : `${kind} ${row.row}`);
+	const name = (row: ToothRow | undefined, kind: string) => row?.row ?? `no ${kind}`;
 	return [
-		text(`One tooth: ${of.row} beside the next on the rack with the same set`, 'strong'),
+		text(
+			`One tooth: ${of.row} beside the next on the rack with the same set; at the ends RPM as the track stands, and the most over the situations`,
+			'strong',
+			2,
+		),
 		tableOf(
 			[
 				{head: '', align: 'left', keep: 0, cell: line => cell(line.name, 'muted')},
@@ -174,5 +179,3 @@ function changesText({exitMps, towShare}: BreakEven, units: Units): string | und
 	const changes = [...exits, ...tows];
 	return changes.length === 0 ? undefined : changes.join(', or with ');
 }
-
-export {rowText};

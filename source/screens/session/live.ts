@@ -1,4 +1,5 @@
 /** A session that runs: its state, the answer that follows from it, and who is told when either changes. */
+import type {OneTooth} from '../../odds/one-tooth.ts';
 import {type Ranked, rowName} from '../../planning/rank-rack.ts';
 import type {Keeper} from '../keeper.ts';
 import {type ActionName, actionFor} from '../keys/key-table.ts';
@@ -12,7 +13,7 @@ import {type Errandful, errandEffects, readPlan} from './errand-effects.ts';
 import {readTrackOf} from './forms.ts';
 import {type Handed, rowToHandOver} from './hand-over.ts';
 import {intend, type Scene, scopesOf, takesText} from './intend.ts';
-import {Odder, type OddsShown} from './odder.ts';
+import {Odder, type OddsShown, type OddsSoFar} from './odder.ts';
 import {type Clock, Ranker} from './ranker.ts';
 import {reduce} from './reduce.ts';
 import {cursorIn, type Filter, type Order, type Placed, placedRows, shownRows} from './rows.ts';
@@ -192,7 +193,11 @@ export class LiveSession {
 			isWorking: answer.is === 'working',
 		};
 		const handed = answer.is === 'ready' ? this.#handed(session, scene, answer.ranked) : undefined;
-		return {session, answer, scene: {...scene, handed, odds}};
+		return {
+			session,
+			answer,
+			scene: {...scene, handed, odds: odds && {...odds, tooth: this.#toothOf(scene.shown, session)}},
+		};
 	}
 
 	/** Of an answer that is of a moment ago nothing is handed over. */
@@ -216,7 +221,7 @@ export class LiveSession {
 	}
 
 	/** In the order of the risk once its odds are complete: rows do not move while they are refined. */
-	#placedIn(ranked: Ranked, risk: number | undefined, shown: OddsShown | undefined): Placed[] {
+	#placedIn(ranked: Ranked, risk: number | undefined, shown: OddsSoFar | undefined): Placed[] {
 		const odds = risk !== undefined && shown?.odds?.isComplete === true ? shown.odds : undefined;
 		if (this.#placed?.ranked !== ranked || this.#placed.odds !== odds) {
 			const byRisk = odds && this.#odder.work?.placedByRisk(ranked, odds, risk!);
@@ -226,11 +231,15 @@ export class LiveSession {
 	}
 
 	/** Where they are looked at, or order the ranking. */
-	#oddsOf({history, situation, risk, place, row}: Session, ranked: Ranked): OddsShown | undefined {
+	#oddsOf({history, situation, risk, place}: Session, ranked: Ranked): OddsSoFar | undefined {
 		if (place.at !== 'odds' && risk === undefined) return undefined;
-		const first = ranked.ranking.rows[0];
-		const tooth = place.at === 'odds' ? (row ?? (first && rowName(first))) : undefined;
-		return this.#odder.shown({documents: history.present, situation, risk, ranked}, tooth);
+		return this.#odder.soFar({documents: history.present, situation, risk, ranked});
+	}
+
+	/** Of the row under the cursor, where it is looked at. */
+	#toothOf(shown: readonly Placed[], {place, row}: Session): OneTooth | undefined {
+		const here = shown[cursorIn(shown, row)];
+		return place.at === 'odds' && here !== undefined ? this.#odder.tooth(here.name) : undefined;
 	}
 }
 

@@ -57,18 +57,24 @@ export class Odder {
 		return this.#work;
 	}
 
-	/** What is known of what is asked; what was asked before is left if it is another. `row`: whose tooth is told. */
-	shown(asked: OddsAsked, row: string | undefined): OddsShown {
+	/** What is known of what is asked; what was asked before is left if it is another. */
+	soFar(asked: OddsAsked): OddsSoFar {
 		const before = this.#asked;
 		if (before?.ranked !== asked.ranked || before.risk !== asked.risk || before.documents !== asked.documents)
 			this.#begin(asked);
+		this.#later();
+		return this.#soFar;
+	}
+
+	/** What one tooth of a row is worth, once it is known; worked out after the rest. */
+	tooth(row: string): OneTooth | undefined {
 		if (this.#toothRow !== row) {
 			this.#toothRow = row;
 			this.#toothSteps = undefined;
 			this.#tooth = undefined;
 		}
 		this.#later();
-		return {...this.#soFar, tooth: this.#tooth};
+		return this.#tooth;
 	}
 
 	#begin(asked: OddsAsked): void {
