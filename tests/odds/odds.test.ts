@@ -71,7 +71,9 @@ describe('a straight without length, whose RPM is all but linear in what is draw
 			const {over, highestRpm} = rowOf(odds, name);
 			expect(Math.abs(over.value - expected)).toBeLessThan(0.004);
 			expect(Math.abs(over.value - expected)).toBeLessThan(4 * over.error);
-			expect(highestRpm!.mean).toBeCloseTo(rpm, -1);
+			// A row that is always over is looked at no further.
+			if (expected > 0.99) return;
+			expect(Math.abs(highestRpm!.mean - rpm)).toBeLessThan(1);
 			expect(Math.abs(highestRpm!.sd / sd - 1)).toBeLessThan(0.01);
 		},
 	);
@@ -89,7 +91,7 @@ test('the same seed gives the same answer, another a like one', () => {
 	expect(one).not.toEqual(other);
 });
 
-test('the first answer of the demo is the same on every machine', async () => {
+test('the answer of the demo is the same on every machine', async () => {
 	const odds = answer(await shippedCar('demo.json'), await shippedTrack('tarrowdale.json'), {mostDraws: 512});
 	// Recomputed: our own answer with seed 1 when this was written; it must not depend on the machine.
 	expect(odds.decision).toEqual({row: '34/35 C', next: '35/33 B', isDecided: true, open: []});

@@ -27,12 +27,21 @@ describe.each(trackFiles)('at %s', file => {
 			if (row.fastestS === null) return [];
 			const quick = draws.run(day, {candidate});
 			const limit = row.checks.find(({check}) => check === 'limit')!;
-			return [{s: Math.abs(quick.timeS - row.fastestS), rpm: Math.abs(quick.highestRpm - limit.value!)}];
+			return [
+				{
+					s: Math.abs(quick.timeS - row.fastestS),
+					rpm: Math.abs(quick.highestRpm - limit.value!),
+					same: quick.isOver === (limit.verdict === 'fail'),
+				},
+			];
 		});
 		expect(errors.length).toBeGreaterThan(10);
-		for (const {s} of errors) expect(s).toBeLessThan(1e-3);
-		// Where two sequences are as good to a hair, another one may be taken, and its RPM is another.
-		expect(errors.filter(({rpm}) => rpm > 3).length / errors.length).toBeLessThan(0.03);
+		for (const {s, same} of errors) {
+			expect(s).toBeLessThan(1e-3);
+			expect(same).toBe(true);
+		}
+		// Where grip holds two gears at an exit they are equal, and either may be taken: the RPM at the exit is another then.
+		expect(errors.filter(({rpm}) => rpm > 3).length / errors.length).toBeLessThan(0.2);
 	});
 
 	test('in draws of all numbers a row passes the limit where the ranking of those numbers says so', async () => {
