@@ -1,27 +1,9 @@
 /** Works out odds in slices, after everything else has had its turn. */
 
 import type {OneTooth} from '../../odds/one-tooth.ts';
-import type {Matters, Odds} from '../../odds/results.ts';
-import type {Ranked} from '../../planning/rank-rack.ts';
-import type {Documents} from './documents.ts';
+import type {OddsAsked, OddsSoFar} from './odds-asked.ts';
 import type {OddsSteps} from './odds-work.ts';
 import type {Clock} from './ranker.ts';
-
-export type OddsSoFar = {
-	readonly odds: Odds | undefined;
-	readonly matters: Matters | undefined;
-	readonly isDone: boolean;
-};
-
-/** What the place of odds shows: of the same ranking as the rows. */
-export type OddsShown = OddsSoFar & {readonly tooth: OneTooth | undefined};
-
-export type OddsAsked = {
-	readonly documents: Documents;
-	readonly situation: string | undefined;
-	readonly risk: number | undefined;
-	readonly ranked: Ranked;
-};
 
 /** Short enough that no key waits noticeably. */
 const sliceMs = 10;

@@ -8,7 +8,7 @@ import {type Ranked, rowName} from '../../planning/rank-rack.ts';
 import {riskView} from '../../text/odds-words.ts';
 import {current} from './documents.ts';
 import {readCarOf, readTrackOf} from './forms.ts';
-import type {OddsAsked, OddsSoFar} from './odder.ts';
+import type {OddsAsked, OddsSoFar} from './odds-asked.ts';
 import {type Placed, placedRows} from './rows.ts';
 
 export type OddsSteps = Generator<() => OddsSoFar, OddsSoFar, void>;

@@ -9,7 +9,7 @@ import {decisionSentences, inputLines, mattersSentences, rowText} from '../../te
 import {type UnitSystem, unitsOf} from '../../text/units.ts';
 import {listWindow} from '../parts/list-window.ts';
 import {line, type Pieces} from '../parts/pieces.ts';
-import type {OddsShown} from '../session/odder.ts';
+import type {OddsShown} from '../session/odds-asked.ts';
 import type {Placed} from '../session/rows.ts';
 import {marks} from './marks.ts';
 
