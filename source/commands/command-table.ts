@@ -1,5 +1,6 @@
 /** Every command once: parsing, help and the messages about unknown ones are made from this table. */
 import type {Command} from './command.ts';
+import {loadingCommands} from './loading-commands.ts';
 import {sharingCommands} from './sharing-commands.ts';
 import {storeCommands} from './store-commands.ts';
 
@@ -87,6 +88,7 @@ export const commands: readonly Command[] = [
 	},
 	...storeCommands,
 	...sharingCommands,
+	...loadingCommands,
 ];
 
 /** The command of that name. */

@@ -1,0 +1,108 @@
+/** What is short for the tracks of a list: on the rack, on hand, in miles. */
+import type {Car} from '../drivetrain/car.ts';
+import {pairName} from '../drivetrain/gear-pair.ts';
+import {mountable} from '../planning/candidates.ts';
+import type {Row} from '../planning/results.ts';
+import {counted, listed, longLengthText, secondsText} from '../planning/words.ts';
+import type {RankedTrack, ServedNeed} from './load-needs.ts';
+import type {LoadOptions, Role} from './load-results.ts';
+import {stepsFrom} from './steps.ts';
+import {isUsable, lacksSupply, wouldPass} from './usable.ts';
+
+type PairRole = Role & {readonly pair: string};
+
+export function shortages(
+	car: Car,
+	tracks: readonly RankedTrack[],
+	needs: readonly ServedNeed[],
+	roles: readonly PairRole[],
+	options: LoadOptions,
+): string[] {
+	return [
+		...new Set([
+			...tracks.flatMap(track => unservedTrack(track, needs)),
+			...needs.flatMap(need => failingBest(need)),
+			...needs.flatMap(need => fasterWithSupply(need)),
+			...needs.flatMap(need => missingSteps(need, options)),
+			...shortPairs(car, roles),
+		]),
+	];
+}
+
+function unservedTrack({name}: RankedTrack, needs: readonly ServedNeed[]): string[] {
+	const isServed = needs.some(({track}) => track.name === name);
+	return isServed ? [] : [`${name}: no pair and set that fits the housing, is permitted, on hand and has miles left.`];
+}
+
+function failingBest({track, best}: ServedNeed): string[] {
+	if (best.verdict !== 'fail') return [];
+	return [`${track.name}: every pair fails a check there; ${best.pair} ${best.gearbox} comes nearest. ${best.reason}`];
+}
+
+const supplyOf = (row: Row): string =>
+	row.checks.find(({check}) => check === 'stock')?.verdict === 'fail' ? 'no set is on hand' : 'its miles are used up';
+
+/** A row that would be the best with a new set. */
+function fasterWithSupply({track, best, usable}: ServedNeed): string[] {
+	const sets = new Set(usable.map(({gearbox}) => gearbox));
+	const row = track.ranking.rows
+		.filter(one => sets.has(one.gearbox) && lacksSupply(one) && wouldPass(one) && one.fastestS !== null)
+		.reduce<Row | undefined>(
+			(first, one) => (first === undefined || one.fastestS! < first.fastestS! ? one : first),
+			undefined,
+		);
+	if (row === undefined || best.fastestS === null || best.verdict === 'fail') return [];
+	const gainS = best.fastestS - row.fastestS!;
+	if (gainS <= 0) return [];
+	return [
+		`${track.name}: ${row.pair} ${row.gearbox} would be ${secondsText(gainS)} a lap faster than ${best.pair} ${best.gearbox}, but ${supplyOf(row)}.`,
+	];
+}
+
+/** Steps that the rack does not have, and steps that a pair out of supply would be nearer for. */
+function missingSteps({track, way}: ServedNeed, options: LoadOptions): string[] {
+	const {row} = way;
+	return (['shorter', 'taller'] as const).flatMap(name => {
+		const found = way[name].length;
+		const ended =
+			found < options[name]
+				? [
+						`${track.name}: ${found === 0 ? 'no step' : `only ${counted(found, 'step')}`} ${name} than ${row.pair} ${row.gearbox} on the rack.`,
+					]
+				: [];
+		const [nearest] = stepsFrom(
+			track.ranking.rows.filter(one => one.gearbox === row.gearbox && (isUsable(one) || lacksSupply(one))),
+			row.pairRatio,
+			name,
+			options.stepRatio,
+			options[name] > 0 ? 1 : 0,
+		);
+		const lacking = nearest?.every(lacksSupply) ? nearest[0] : undefined;
+		return lacking === undefined
+			? ended
+			: [
+					...ended,
+					`${track.name}: ${lacking.pair} would be the nearest step ${name} than ${row.pair}, but ${supplyOf(lacking)}.`,
+				];
+	});
+}
+
+/** From this share of its allowed miles on a pair is worth a word. */
+const worn = 0.9;
+
+/** Pairs that stand for the best at several tracks with one set, or whose miles run out. */
+function shortPairs(car: Car, roles: readonly PairRole[]): string[] {
+	return mountable(car).flatMap(pair => {
+		const name = pairName(pair);
+		const tracks = [
+			...new Set(roles.filter(role => role.pair === name && role.role === 'best').map(({track}) => track)),
+		];
+		if (tracks.length === 0) return [];
+		const leftM = pair.maxMilesM === undefined ? undefined : pair.maxMilesM - pair.milesM;
+		const isWorn = leftM !== undefined && pair.milesM > worn * pair.maxMilesM!;
+		return [
+			...(isWorn ? [`${name}: ${longLengthText(leftM)} left, and it is the best at ${listed(tracks)}.`] : []),
+			...(pair.sets === 1 && tracks.length > 1 ? [`${name}: one set for ${listed(tracks)}.`] : []),
+		];
+	});
+}
