@@ -4,7 +4,7 @@
 export type Way = {
 	/** What it costs to serve the need this way; 0 is best. */
 	readonly loss: number;
-	/** At most `mostDemands`, none empty. */
+	/** At most `mostDemands`, none empty, no two with a thing in common: each takes a thing of its own. */
 	readonly demands: readonly (readonly number[])[];
 };
 

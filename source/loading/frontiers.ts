@@ -8,7 +8,13 @@ const dead = 0xffff;
 const unserved = 0;
 
 type OpenWay = {readonly way: Way; readonly place: number; readonly number: number};
-type OpenNeed = {readonly place: number; readonly ways: readonly OpenWay[]; readonly closes: boolean};
+type OpenNeed = {
+	readonly place: number;
+	readonly ways: readonly OpenWay[];
+	readonly closes: boolean;
+	/** Things that needs beyond its reach want at least. */
+	readonly wantedBeyond: number;
+};
 
 /** The needs that a thing or things on both sides of it serve: those before are settled, those after untouched. */
 export class Frontiers {
@@ -16,6 +22,7 @@ export class Frontiers {
 	readonly #spans: readonly (readonly [number, number])[];
 	readonly #bits: readonly (readonly Bits[])[];
 	#places = new Map<number, number>();
+	readonly #wantedAhead: readonly number[];
 
 	constructor(needs: readonly Need[], thingCount: number) {
 		this.#needs = needs.map(need => [...need].sort((one, other) => one.loss - other.loss));
@@ -24,6 +31,12 @@ export class Frontiers {
 			return [Math.min(...things, thingCount), Math.max(...things, -1)] as const;
 		});
 		this.#bits = this.#needs.map(need => need.map(bitsOf));
+		this.#wantedAhead = wantedAhead(this.#needs, this.#spans, thingCount);
+	}
+
+	/** Things that the needs want at least of which nothing is decided yet after a thing. */
+	wantedAhead(thing: number): number {
+		return this.#wantedAhead[thing + 1]!;
 	}
 
 	/** The layer of the next thing; to be asked for in order. */
@@ -41,11 +54,29 @@ export class Frontiers {
 			const ways = this.#needs[index]!.map((way, k) => ({way, place: place + 1 + k, number: k + 1}));
 			for (let k = 0; k <= ways.length; k++) from.push(known === undefined ? -1 : known + k);
 			bits.push(...this.#bits[index]!);
-			open.push({place, ways, closes: last === thing});
+			open.push({place, ways, closes: last === thing, wantedBeyond: this.wantedAhead(last)});
 		}
-		return new Layer(thing, from, open, bits);
+		return new Layer(thing, from, open, bits, this.wantedAhead(thing));
 	}
 }
+
+/** Needs that reach over no common thing take things of their own: the most that some of them want together, from each thing on. */
+function wantedAhead(
+	needs: readonly Need[],
+	spans: readonly (readonly [number, number])[],
+	thingCount: number,
+): number[] {
+	const wanted = Array.from({length: thingCount + 1}, () => 0);
+	for (let thing = thingCount - 1; thing >= 0; thing--) {
+		wanted[thing] = wanted[thing + 1]!;
+		for (const [i, [first, last]] of spans.entries()) {
+			if (first === thing) wanted[thing] = Math.max(wanted[thing]!, leastWanted(needs[i]!) + wanted[last + 1]!);
+		}
+	}
+	return wanted;
+}
+
+const leastWanted = (need: Need): number => Math.min(...need.map(({demands}) => demands.length));
 
 /** Of a way: which demands a thing meets, and which are lost after it. */
 type Bits = {
@@ -72,13 +103,21 @@ export class Layer {
 	readonly #meets: Uint16Array;
 	readonly #ends: Uint16Array;
 	readonly #all: Uint16Array;
+	readonly #wantedAhead: number;
 
-	constructor(thing: number, from: readonly number[], open: readonly OpenNeed[], bits: readonly Bits[]) {
+	constructor(
+		thing: number,
+		from: readonly number[],
+		open: readonly OpenNeed[],
+		bits: readonly Bits[],
+		wantedAhead: number,
+	) {
 		this.#from = Int32Array.from(from);
 		this.#open = open;
 		this.#meets = Uint16Array.from(bits, ({meets}) => meets.get(thing) ?? 0);
 		this.#ends = Uint16Array.from(bits, ({ends}) => ends.get(thing) ?? 0);
 		this.#all = Uint16Array.from(bits, ({all}) => all);
+		this.#wantedAhead = wantedAhead;
 	}
 
 	/** The codes of the layer before, at their places in this one; needs that open here are untouched. */
@@ -89,33 +128,43 @@ export class Layer {
 	}
 
 	/**
-	 * Changes the codes by taking the thing or leaving it; the change of the loss, or undefined where a need can no longer be
-	 * served. A need that closes here, or that nothing later can serve better, keeps no codes that tell states apart.
+	 * Changes the codes by taking the thing or leaving it. Gives the change of the loss, and how many more things the needs want
+	 * at least: infinitely many where it can no longer be served. A need that closes here, or that nothing later can serve
+	 * better, keeps no codes that tell states apart.
 	 */
-	decide(codes: Uint16Array, isTaken: boolean): number | undefined {
-		let gained = 0;
+	decide(codes: Uint16Array, isTaken: boolean): {loss: number; wanted: number} {
+		let loss = 0;
+		let wanted = this.#wantedAhead;
 		let row = 0;
 		for (const need of this.#open) {
 			const lossBefore = lossAt(need, codes[need.place]!);
-			let isOpen = false;
+			let least = Number.POSITIVE_INFINITY;
 			for (const {place, number} of need.ways) {
 				const index = row++;
 				if (codes[place] === dead) continue;
+				const all = this.#all[index]!;
 				const served = codes[need.place]!;
 				const met = isTaken ? codes[place]! | this.#meets[index]! : codes[place]!;
-				const lost = (this.#ends[index]! & ~met) !== 0 || (served !== unserved && served < number);
-				codes[place] = lost || met === this.#all[index] ? dead : met;
-				if (!lost && met === this.#all[index]) codes[need.place] = number;
-				isOpen ||= codes[place] !== dead;
+				const isLost = (this.#ends[index]! & ~met) !== 0 || (served !== unserved && served < number);
+				codes[place] = isLost || met === all ? dead : met;
+				if (!isLost && met === all) codes[need.place] = number;
+				if (codes[place] !== dead) least = Math.min(least, bitCount(all & ~met));
 			}
 			const served = codes[need.place]!;
-			if (!isOpen && served === unserved) return undefined;
-			gained += lossAt(need, served) - lossBefore;
-			if (isOpen && !need.closes) continue;
-			codes.fill(dead, need.place, need.place + 1 + need.ways.length);
+			if (served === unserved) wanted = Math.max(wanted, least + need.wantedBeyond);
+			if (wanted === Number.POSITIVE_INFINITY) break;
+			loss += lossAt(need, served) - lossBefore;
+			if (least === Number.POSITIVE_INFINITY || need.closes)
+				codes.fill(dead, need.place, need.place + 1 + need.ways.length);
 		}
-		return gained;
+		return {loss, wanted};
 	}
+}
+
+function bitCount(bits: number): number {
+	let count = 0;
+	for (let left = bits; left !== 0; left &= left - 1) count++;
+	return count;
 }
 
 /** Once closed a need has nothing more to give. */

@@ -27,7 +27,7 @@ export function loadList(car: Car, tracks: readonly RankedTrack[], options: Load
 	const served = needs.map(need => ({...need, way: servingWay(need, carried)}));
 	const roles = served.map(need => rolesOf(need, carried));
 	return {
-		pairs: cover.things.map(thing => loadedPair(pairs[thing]!, carried, served, roles.flat())),
+		pairs: cover.things.map(thing => loadedPair(pairs[thing]!, carried, served, roles.flat(), withinS)),
 		tracks: served.map((need, i) => loadedTrack(need, roles[i]!)),
 		short: shortages(car, tracks, served, roles.flat(), options),
 		shorter: options.shorter,
@@ -80,6 +80,7 @@ function loadedPair(
 	carried: readonly string[],
 	needs: readonly ServedNeed[],
 	allRoles: readonly (Role & {pair: string})[],
+	withinS: number,
 ): LoadedPair {
 	const name = pairName(pair);
 	const roles = allRoles.filter(role => role.pair === name).map(({pair: _, ...role}) => role);
@@ -91,7 +92,7 @@ function loadedPair(
 		maxMilesM: pair.maxMilesM ?? null,
 		roles,
 		reason: loadReason(roles),
-		without: withoutPair(name, carried, needs, roles),
+		without: withoutPair(name, carried, needs, roles, withinS),
 	};
 }
 

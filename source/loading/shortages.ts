@@ -42,6 +42,9 @@ function failingBest({track, best}: ServedNeed): string[] {
 const supplyOf = (row: Row): string =>
 	row.checks.find(({check}) => check === 'stock')?.verdict === 'fail' ? 'no set is on hand' : 'its miles are used up';
 
+/** What is below it rounds to 0.000 s. */
+const shownFromS = 0.0005;
+
 /** A row that would be the best with a new set. */
 function fasterWithSupply({track, best, usable}: ServedNeed): string[] {
 	const sets = new Set(usable.map(({gearbox}) => gearbox));
@@ -53,7 +56,7 @@ function fasterWithSupply({track, best, usable}: ServedNeed): string[] {
 		);
 	if (row === undefined || best.fastestS === null || best.verdict === 'fail') return [];
 	const gainS = best.fastestS - row.fastestS!;
-	if (gainS <= 0) return [];
+	if (gainS < shownFromS) return [];
 	return [
 		`${track.name}: ${row.pair} ${row.gearbox} would be ${secondsText(gainS)} a lap faster than ${best.pair} ${best.gearbox}, but ${supplyOf(row)}.`,
 	];
@@ -102,7 +105,7 @@ function shortPairs(car: Car, roles: readonly PairRole[]): string[] {
 		const isWorn = leftM !== undefined && pair.milesM > worn * pair.maxMilesM!;
 		return [
 			...(isWorn ? [`${name}: ${longLengthText(leftM)} left, and it is the best at ${listed(tracks)}.`] : []),
-			...(pair.sets === 1 && tracks.length > 1 ? [`${name}: one set for ${listed(tracks)}.`] : []),
+			...(pair.sets === 1 && tracks.length > 1 ? [`${name}: one set for ${listed(tracks)}, no spare.`] : []),
 		];
 	});
 }

@@ -4,14 +4,16 @@ import type {ServedNeed} from './load-needs.ts';
 import type {Role, Without} from './load-results.ts';
 
 /**
- * The worst over the tracks that the pair is for. A track without any pair that passes comes before one that is slower, the
- * slowest first; then a track without a step before one whose next step is further away, the furthest first.
+ * The worst over the tracks that the pair is for. A track without any pair that passes comes before one that is slower by
+ * more than `withinS`, the slowest first; then a track without a step, one whose next step is further away, the furthest first,
+ * and one that hardly gets slower.
  */
 export function withoutPair(
 	pair: string,
 	carried: readonly string[],
 	needs: readonly ServedNeed[],
 	roles: readonly Role[],
+	withinS: number,
 ): Without | null {
 	const left = carried.filter(other => other !== pair);
 	const losses = roles.flatMap(role => {
@@ -19,13 +21,19 @@ export function withoutPair(
 		if (need === undefined) return [];
 		return role.role === 'best' ? bestLoss(need, left) : [stepLoss(need, role.role, pair, left)];
 	});
-	return losses.reduce<Without | null>((worst, loss) => (worst === null || isWorse(loss, worst) ? loss : worst), null);
+	return losses.reduce<Without | null>(
+		(worst, loss) => (worst === null || isWorse(loss, worst, withinS) ? loss : worst),
+		null,
+	);
 }
 
-const severity: Record<Without['kind'], number> = {nothing: 3, slower: 2, noStep: 1, further: 0};
+const severity: Record<Without['kind'], number> = {nothing: 4, slower: 3, noStep: 2, further: 1};
 
-function isWorse(one: Without, other: Without): boolean {
-	const by = severity[one.kind] - severity[other.kind];
+const severityOf = (loss: Without, withinS: number): number =>
+	loss.kind === 'slower' && loss.lossS <= withinS ? 0 : severity[loss.kind];
+
+function isWorse(one: Without, other: Without, withinS: number): boolean {
+	const by = severityOf(one, withinS) - severityOf(other, withinS);
 	if (by !== 0) return by > 0;
 	if (one.kind === 'slower' && other.kind === 'slower') return one.lossS > other.lossS;
 	return one.kind === 'further' && other.kind === 'further' && one.rpm > other.rpm;
