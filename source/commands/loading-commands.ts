@@ -20,4 +20,19 @@ export const loadingCommands: readonly Command[] = [
 		],
 		load: async () => (await import('./load.ts')).load,
 	},
+	{
+		name: 'gearbox',
+		summary: 'the best gears to build into the box, from single gears: for each track, or one set for all',
+		argument: tracks,
+		many: true,
+		options: ['car', 'pair', 'together', 'top', ...everywhere],
+		examples: [
+			{line: 'droprack gearbox friday.json', gives: 'the best set and pair, the next best, every check'},
+			{
+				line: 'droprack gearbox friday.json saturday.json --together',
+				gives: 'one set for both, and what it costs at each',
+			},
+		],
+		load: async () => (await import('./gearbox.ts')).gearbox,
+	},
 ];
