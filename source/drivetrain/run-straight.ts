@@ -30,47 +30,21 @@ function run(
 	course: Course,
 	finishesOf: (startGears: number[]) => (Finish | undefined)[],
 ): StraightRun {
-	const finishes = finishesFrom(gears, course, finishesOf);
-	if (typeof finishes === 'string') return {kind: finishes};
+	if (brakingDistanceM(course.exitMps, brakingOf(course)) > course.lengthM) return {kind: 'cannotBrake'};
+	const startGears = gearsFrom(course.lowestGear, course.highestGear).filter(gear => mayStart(gears, course, gear));
+	if (startGears.length === 0) return {kind: 'overLimit'};
+	const finishes = finishesOf(startGears).filter(finish => finish !== undefined);
+	if (finishes.length === 0) return {kind: 'stops'};
 	const [chosen, fastest] = [chosenOf(finishes, gears.vehicle.sameTimeS), fastestOf(finishes)];
 	const told = described(gears, course, chosen);
 	return {kind: 'ran', chosen: told, fastest: fastest === chosen ? told : described(gears, course, fastest)};
-}
-
-/** What of a run decides between gear trains. */
-export type StraightTime = {
-	readonly fastestS: number;
-	/** Whether the sequence of the tie-break comes to the limiter or above the limit. */
-	readonly pastTop: boolean;
-};
-
-/** The same run as `runStraight`, without its story; undefined where nothing runs. */
-export function straightTime(gears: RoadGears, course: Course): StraightTime | undefined {
-	const finishes = finishesFrom(gears, course, startGears => finishesTogether(gears, course, startGears));
-	if (typeof finishes === 'string') return undefined;
-	return {
-		fastestS: fastestOf(finishes).timeS,
-		pastTop: chosenOf(finishes, gears.vehicle.sameTimeS).pastTop,
-	};
-}
-
-function finishesFrom(
-	gears: RoadGears,
-	course: Course,
-	finishesOf: (startGears: number[]) => (Finish | undefined)[],
-): Finish[] | Exclude<StraightRun['kind'], 'ran'> {
-	if (brakingDistanceM(course.exitMps, brakingOf(course)) > course.lengthM) return 'cannotBrake';
-	const startGears = gearsFrom(course.lowestGear, course.highestGear).filter(gear => mayStart(gears, course, gear));
-	if (startGears.length === 0) return 'overLimit';
-	const finishes = finishesOf(startGears).filter(finish => finish !== undefined);
-	return finishes.length === 0 ? 'stops' : finishes;
 }
 
 const gearsFrom = (lowest: number, highest: number) =>
 	Array.from({length: Math.max(0, highest - lowest + 1)}, (_, i) => lowest + i);
 
 /** No one starts above the limit, nor in a gear whose shift speed is already behind; a start gear that is given only heeds the limit. */
-function mayStart(gears: RoadGears, course: Course, gear: number): boolean {
+export function mayStart(gears: RoadGears, course: Course, gear: number): boolean {
 	if (course.startGear !== undefined) return gear === course.startGear && course.exitMps <= gears.topMps(gear);
 	if (gear === course.highestGear) return course.exitMps <= gears.topMps(gear);
 	return course.exitMps <= gears.capMps(gear) && course.exitMps <= gears.shift(gear).speedMps;

@@ -1,12 +1,12 @@
 /** Lap times of many gearbox sets with one pair, each straight run once for all the sets that are alike in its gears. */
 import type {Gearbox, RackPair} from '../drivetrain/car.ts';
 import type {RoadGears} from '../drivetrain/road-gears.ts';
-import {type StraightTime, straightTime} from '../drivetrain/run-straight.ts';
 import type {Course, GearTrain, Vehicle} from '../drivetrain/straight.ts';
 import {speedAtRpmMps} from '../drivetrain/tire.ts';
 import {candidateOf} from '../planning/candidates.ts';
 import type {Place} from '../planning/conditions.ts';
 import type {Plan} from '../planning/plan.ts';
+import {SharedChains, type StraightTime} from './shared-chains.ts';
 
 /** By the number of the set. */
 export type SetTimes = {
@@ -18,18 +18,21 @@ export type SetTimes = {
 
 /**
  * The sets' lap times with a pair. What a straight takes depends only on the gears from the lowest that may start on it to the
- * highest that is allowed there: sets alike in these share its run, and all sets share what is worked out for a gear and for
- * a shift from one gear to another. So nothing is left out and nothing is estimated.
+ * highest that is allowed there: sets alike in these share its time, and sets that begin alike share the way so far. So nothing is left out and nothing is estimated.
  */
 export class SetTimer {
 	readonly #plan: Plan;
 	readonly #sets: readonly Gearbox[];
+	/** Of every set, for each gear, the number of its ratio among those of the gear. */
+	readonly #options: readonly (readonly number[])[];
 	readonly #groups = new Map<string, Groups>();
 
 	/** All sets have the same number of gears. */
 	constructor(plan: Plan, sets: readonly Gearbox[]) {
 		this.#plan = plan;
 		this.#sets = sets;
+		const ratios = sets[0]?.ratios.map((_, place) => [...new Set(sets.map(set => set.ratios[place]!))]) ?? [];
+		this.#options = sets.map(set => set.ratios.map((ratio, place) => ratios[place]!.indexOf(ratio)));
 	}
 
 	times(pair: RackPair): SetTimes {
@@ -59,7 +62,8 @@ export class SetTimer {
 			return;
 		}
 		const {groupOf, firsts} = this.#grouped(lowestStart(course, vehicle, trains), course.highestGear);
-		const runs = firsts.map(set => straightTime(gearsOf(trains[set]!, place.road), course));
+		const chains = new SharedChains(course, vehicle.sameTimeS);
+		const runs = firsts.map(set => chains.time(this.#options[set]!, () => gearsOf(trains[set]!, place.road)));
 		for (let set = 0; set < groupOf.length; set++) addRun(runs[groupOf[set]!], weight, set, lapS, fails);
 	}
 
