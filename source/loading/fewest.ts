@@ -28,6 +28,7 @@ const start: State = {codes: new Uint16Array(0), count: 0, loss: 0, unease: 0, t
  */
 export function fewest({needs, unease}: CoverProblem): Cover | undefined {
 	for (const way of needs.flat()) assertSound(way);
+	if (needs.some(need => need.length === 0)) return undefined;
 	for (let most = 0; most <= unease.length; most++) {
 		const state = cheapest(needs, unease, most);
 		if (state !== undefined) return coverOf(state, needs);
