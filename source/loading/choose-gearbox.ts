@@ -55,18 +55,16 @@ export function* gearboxSteps(
 	if (built.length === 0) return failed([nothingBuilt]);
 	const changesOf = changesFrom(car, built);
 	const entries: Entry[] = [];
+	const told: {entry: Entry; best: readonly Built[]; gears: TrackGears}[] = [];
 	for (const {name, track} of tracks) {
 		const entry = entryOf(car, name, track, built, options);
 		if (!entry.ok) return entry;
 		entries.push(entry.value);
-		let pairs = 0;
-		for (const _ of entry.value.sets.timeSteps())
-			yield (entries.length - 1 + ++pairs / entry.value.sets.pairs.length) / tracks.length;
+		for (const part of entry.value.sets.timeSteps()) yield (entries.length - 1 + part) / tracks.length;
+		const best = bestSets(entry.value.sets, changesOf, options.count);
+		told.push({entry: entry.value, best, gears: trackGears(car, entry.value, best, changesOf)});
+		yield entries.length / tracks.length;
 	}
-	const told = entries.map(entry => {
-		const best = bestSets(entry.sets, changesOf, options.count);
-		return {entry, best, gears: trackGears(car, entry, best, changesOf)};
-	});
 	const common = options.together
 		? commonSets(
 				entries.map(({sets}) => sets),

@@ -35,15 +35,18 @@ export class SetTimer {
 		this.#options = sets.map(set => set.ratios.map((ratio, place) => ratios[place]!.indexOf(ratio)));
 	}
 
-	times(pair: RackPair): SetTimes {
+	/** Place by place, for a caller that has other things to do in between. */
+	*times(pair: RackPair): Generator<void, SetTimes, void> {
 		const trains = this.#sets.map(set => candidateOf(this.#plan.car, pair, set).train);
 		const gearsOf = this.#plan.roads.gearsInCommon();
 		const lapS = new Float64Array(this.#sets.length);
 		const fails = new Uint8Array(this.#sets.length);
 		for (const i of this.#plan.runOrder) {
 			const {places, vehicle, weight} = this.#plan.conditions[i]!;
-			for (const place of places.filter(({straight}) => straight.lengthM !== undefined))
+			for (const place of places.filter(({straight}) => straight.lengthM !== undefined)) {
 				this.#add(place, vehicle, weight, trains, gearsOf, {lapS, fails});
+				yield;
+			}
 		}
 		return {lapS, fails};
 	}

@@ -113,8 +113,8 @@ const commonView = (common: readonly CommonSet[]): Block[] => {
 	];
 };
 
-export const gearboxView = (heading: {car: string; day: string}, answer: GearboxAnswer, units: Units): Block[] => [
-	text(`${heading.car} · ${heading.day} · gears to build`, 'strong', 2),
+/** All but heading and caution. */
+export const gearboxBlocks = (answer: GearboxAnswer, units: Units): Block[] => [
 	text(`${counted(answer.sets, 'set')} of the inventory go together; every one with every pair was run.`, 'plain', 2),
 	text(
 		'Sets that differ only in gears that nothing is gained with are told once; change: gears to change in the installed set.',
@@ -125,5 +125,10 @@ export const gearboxView = (heading: {car: string; day: string}, answer: Gearbox
 	...commonView(answer.common),
 	...answer.tracks.flatMap(track => trackView(track, units)),
 	...answer.remarks.map(remark => text(`- ${remark}`, 'plain', 2)),
+];
+
+export const gearboxView = (heading: {car: string; day: string}, answer: GearboxAnswer, units: Units): Block[] => [
+	text(`${heading.car} · ${heading.day} · gears to build`, 'strong', 2),
+	...gearboxBlocks(answer, units),
 	text(caution, 'muted'),
 ];

@@ -74,8 +74,8 @@ export const loadMeaning = ({withinS, stepRatio}: LoadList): string =>
 		'no shorter list does all of this.',
 	].join('; ');
 
-export const loadView = (heading: LoadHeading, list: LoadList, units: Units): Block[] => [
-	text(`${heading.car} · ${heading.day} · load list`, 'strong', 2),
+/** All but heading and caution. */
+export const loadBlocks = (list: LoadList, units: Units): Block[] => [
 	text(loadSummary(list), 'plain', 2),
 	text(loadMeaning(list), 'muted', 2),
 	gap,
@@ -88,5 +88,10 @@ export const loadView = (heading: LoadHeading, list: LoadList, units: Units): Bl
 	...(list.short.length === 0
 		? []
 		: [text('Short', 'near'), ...list.short.map(one => text(`- ${one}`, 'plain', 2)), gap]),
+];
+
+export const loadView = (heading: LoadHeading, list: LoadList, units: Units): Block[] => [
+	text(`${heading.car} · ${heading.day} · load list`, 'strong', 2),
+	...loadBlocks(list, units),
 	text(caution, 'muted'),
 ];

@@ -94,7 +94,8 @@ test('for one track the common set is the best set there', () => {
 	expect(common[0]!.tracks[0]!.costS).toBeCloseTo(0, 9);
 });
 
-const ratio = (low: number, high: number) => fc.integer({min: Math.round(low * 100), max: Math.round(high * 100)}).map(value => value / 100);
+const ratio = (low: number, high: number) =>
+	fc.integer({min: Math.round(low * 100), max: Math.round(high * 100)}).map(value => value / 100);
 const options = (low: number, high: number) => fc.uniqueArray(ratio(low, high), {minLength: 1, maxLength: 2});
 
 const anyGears = fc

@@ -35,6 +35,7 @@ export function stateOf(session: Session): State {
 			situations,
 			choices,
 			isWorking: false,
+			ahead: undefined,
 			handed: handedIn(session, ranked, all),
 		},
 	};
