@@ -15,43 +15,44 @@ export type Common = {
 const failS = 1e6;
 
 /**
- * The first `count` sets by their least laps with the pairs that fail no check, added up over the tracks. A set's sum without
- * looking at the checks is a bound below: sets are looked at in the order of their bounds, each gets its true sum, and the
- * first is settled when no bound is below it. So the order is exact, though few sets are checked in full.
+ * The first `count` sets by their least laps with the pairs that fail no check, added up over the tracks. Of sets with the same
+ * sum, which differ in gears that nothing is gained or lost with, the one with the fewest gears to change is told. A set's sum
+ * without looking at the checks is a bound below: sets are looked at in the order of their bounds, each gets its true sum,
+ * until no bound is below the last one to be told. So the order is exact, though few sets are checked in full.
  */
 export function commonSets(tracks: readonly TrackSets[], changesOf: (set: number) => number, count: number): Common[] {
 	const [first] = tracks;
 	if (first === undefined) return [];
-	const bounds = first.sets.map((_, set) => tracks.reduce((sum, track) => sum + boundS(track, set), 0));
-	const open = bounds
-		.map((boundS, set) => ({boundS, set}))
+	const open = first.sets
+		.map((_, set) => ({set, boundS: tracks.reduce((sum, track) => sum + boundS(track, set), 0)}))
 		.filter(({boundS}) => Number.isFinite(boundS))
 		.sort((one, other) => one.boundS - other.boundS || changesOf(one.set) - changesOf(other.set));
-	const checked: Common[] = [];
+	let best: readonly Common[] = [];
 	for (const {boundS, set} of open) {
-		if (settled(checked, boundS, changesOf, count)) break;
-		const built = tracks.flatMap(track => bestPair(track, set) ?? []);
-		const laps = built.map(({row}) => row.fastestS ?? Number.POSITIVE_INFINITY);
-		const totalS = laps.reduce((sum, lapS) => sum + lapS, 0);
-		const fails = built.filter(({row}) => row.verdict === 'fail').length;
-		checked.push({set, totalS, costS: totalS + fails * failS, built});
+		const last = best[count - 1];
+		if (last !== undefined && last.costS * (1 + sameSum) < boundS) break;
+		best = withSet(best, commonOf(tracks, set), changesOf).slice(0, count);
 	}
-	return ordered(checked, changesOf).slice(0, count);
+	return [...best];
 }
 
-function ordered(checked: readonly Common[], changesOf: (set: number) => number): Common[] {
-	return checked.toSorted((one, other) => one.costS - other.costS || changesOf(one.set) - changesOf(other.set));
+/** Sums of the same laps differ only by the order of adding. */
+const sameSum = 1e-9;
+const isSame = (one: Common, other: Common): boolean => Math.abs(one.costS - other.costS) <= sameSum * one.costS;
+
+function commonOf(tracks: readonly TrackSets[], set: number): Common {
+	const built = tracks.flatMap(track => bestPair(track, set) ?? []);
+	const laps = built.map(({row}) => row.fastestS ?? Number.POSITIVE_INFINITY);
+	const totalS = laps.reduce((sum, lapS) => sum + lapS, 0);
+	const fails = built.filter(({row}) => row.verdict === 'fail').length;
+	return {set, totalS, costS: totalS + fails * failS, built};
 }
 
-/** Whether nothing from a bound on can come among the first. */
-function settled(
-	checked: readonly Common[],
-	boundS: number,
-	changesOf: (set: number) => number,
-	count: number,
-): boolean {
-	const last = ordered(checked, changesOf)[count - 1];
-	return last !== undefined && last.costS < boundS;
+/** The list in order, with a set where it belongs, and one set for each sum. */
+function withSet(list: readonly Common[], one: Common, changesOf: (set: number) => number): Common[] {
+	const same = list.find(other => isSame(one, other));
+	if (same !== undefined && changesOf(same.set) <= changesOf(one.set)) return [...list];
+	return [...list.filter(other => other !== same), one].sort((a, b) => a.costS - b.costS);
 }
 
 /** The least lap of a set that is not known to fail; with a fine where every pair is, and infinite where no pair comes round. */

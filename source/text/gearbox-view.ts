@@ -59,18 +59,21 @@ export const ownWords = ({rows, own}: TrackGears): string => {
 	return gainS < 0.0005 ? `No faster than ${name}.` : `${secondsText(gainS)} a lap faster than ${name}.`;
 };
 
+const settingWords = ({setting}: TrackGears): string =>
+	`  limit ${rpm(setting.rpmLimit)} rpm (${setting.limitFrom}), band ${rpm(setting.bandLowRpm)}-${rpm(setting.bandHighRpm)}, engine ${setting.engine}`;
+
+const overlapWords =
+	'highest planned shifts, and what the next gear turns above the low end of the band; driven: on the straights or the restart.';
+
 const trackView = (track: TrackGears, units: Units): Block[] => {
 	const [best] = track.rows;
 	if (best === undefined) return [text(`${track.track} · nothing to build`, 'strong', 2), gap];
 	return [
 		text(`${track.track} · ${counted(track.sets, 'set')} · ${ownWords(track)}`, 'strong', 2),
+		text(settingWords(track), 'muted', 4),
 		tableOf(rowColumns, track.rows, 2),
 		gap,
-		text(
-			'Overlap of the best set: highest planned shifts, and what the next gear turns above the low end of the band.',
-			'muted',
-			2,
-		),
+		text(`Overlap of the best set: ${overlapWords}`, 'muted', 2),
 		tableOf(stepColumns, best.steps, 2),
 		gap,
 		...checkView(best.checks, units),
@@ -108,6 +111,7 @@ const commonView = (common: readonly CommonSet[]): Block[] => {
 		gap,
 		tableOf(commonTrackColumns, best.tracks, 2),
 		gap,
+		text(`Overlap at ${best.tracks[0]!.track}: ${overlapWords}`, 'muted', 2),
 		tableOf(stepColumns, best.tracks[0]!.row.steps, 2),
 		gap,
 	];
