@@ -25,6 +25,7 @@ export type LoadSteps = {readonly shorter: number; readonly taller: number; read
 export type Place =
 	| {readonly at: 'ranking'}
 	| {readonly at: 'why'; readonly scroll: number}
+	| {readonly at: 'life'; readonly scroll: number}
 	| {readonly at: 'pictures'; readonly picture: Picture; readonly straight: number}
 	| ({readonly at: 'edit'; readonly kind: Kind; readonly editing: Editing | undefined} & FieldPlace)
 	| {readonly at: 'choose'; readonly kind: Kind; readonly search: EditLine; readonly cursor: number}
