@@ -1,7 +1,7 @@
 /** `droprack load`: the fewest pairs to carry for the tracks ahead. */
 
 import {loadList} from '../loading/load-list.ts';
-import type {RankedTrack} from '../loading/load-needs.ts';
+import {type RankedTrack, rankedTrack} from '../loading/load-needs.ts';
 import {defaultStepRatio, defaultSteps} from '../loading/load-results.ts';
 import {gearboxFaults} from '../planning/document-faults.ts';
 import {rankRack} from '../planning/rank-rack.ts';
@@ -24,7 +24,7 @@ export const load: CommandRun = async (request, around) => {
 	const refusals: string[] = [];
 	for (const {name, track, label} of tracks) {
 		const ranking = rankRack(car, track);
-		if (ranking.ok) ranked.push({name, ranking: ranking.value});
+		if (ranking.ok) ranked.push(rankedTrack(name, track, ranking.value));
 		else refusals.push(refuseFaults(ranking.faults, {track: label, car: carLabel}).message);
 	}
 	if (refusals.length > 0) return replyRefused(badInput([...new Set(refusals)].join('\n')));

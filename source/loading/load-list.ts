@@ -8,6 +8,7 @@ import {fewest} from './fewest.ts';
 import {needsOf, type PairWay, type RankedTrack, type ServedNeed, type TrackNeed} from './load-needs.ts';
 import {loadReason} from './load-reasons.ts';
 import type {LoadedPair, LoadedTrack, LoadList, LoadOptions, Role} from './load-results.ts';
+import {raceM} from './race-miles.ts';
 import {shortages} from './shortages.ts';
 import {withoutPair} from './without-pair.ts';
 
@@ -29,7 +30,7 @@ export function loadList(car: Car, tracks: readonly RankedTrack[], options: Load
 	return {
 		pairs: cover.things.map(thing => loadedPair(pairs[thing]!, carried, served, roles.flat(), withinS)),
 		tracks: served.map((need, i) => loadedTrack(need, roles[i]!)),
-		short: shortages(car, tracks, served, roles.flat(), options),
+		short: shortages(car, tracks, served, options),
 		shorter: options.shorter,
 		taller: options.taller,
 		withinS,
@@ -90,6 +91,7 @@ function loadedPair(
 		sets: pair.sets,
 		milesM: pair.milesM,
 		maxMilesM: pair.maxMilesM ?? null,
+		raceM: raceM(needs, name) ?? null,
 		roles,
 		reason: loadReason(roles),
 		without: withoutPair(name, carried, needs, roles, withinS),

@@ -1,10 +1,20 @@
 /** From the rankings of the tracks to what the truck needs: for each track the ways in which pairs can serve it. */
+import type {Track} from '../drivetrain/track.ts';
 import type {Ranking, Row} from '../planning/results.ts';
 import type {LoadOptions} from './load-results.ts';
 import {stepsFrom} from './steps.ts';
 import {isUsable} from './usable.ts';
 
-export type RankedTrack = {readonly name: string; readonly ranking: Ranking};
+export type RankedTrack = {
+	readonly name: string;
+	readonly ranking: Ranking;
+	/** The race's length; undefined where the track does not say lap and laps. */
+	readonly raceM: number | undefined;
+};
+
+export function rankedTrack(name: string, {lapM, laps}: Track, ranking: Ranking): RankedTrack {
+	return {name, ranking, raceM: lapM === undefined || laps === undefined ? undefined : lapM * laps};
+}
 
 /** A pair that stands for the best of a track, with its steps: of each step one pair must be there. */
 export type PairWay = {

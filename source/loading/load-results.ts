@@ -42,8 +42,8 @@ export type Without =
 	| {kind: 'nothing'; track: string}
 	/** The next pair that way turns the engine so much further from the best pair's RPM than this one. */
 	| {kind: 'further'; track: string; role: RoleName; pair: string; rpm: number}
-	/** There is no pair left that way. */
-	| {kind: 'noStep'; track: string; role: RoleName};
+	/** There is no pair left further that way than this one. */
+	| {kind: 'noStep'; track: string; role: RoleName; than: string};
 
 export type LoadedPair = {
 	pair: string;
@@ -51,6 +51,8 @@ export type LoadedPair = {
 	sets: number;
 	milesM: number;
 	maxMilesM: number | null;
+	/** Of the races at the tracks that it is the best for, as far as their length is known; null where none is. */
+	raceM: number | null;
 	roles: Role[];
 	reason: string;
 	without: Without | null;

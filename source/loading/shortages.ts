@@ -1,21 +1,19 @@
 /** What is short for the tracks of a list: on the rack, on hand, in miles. */
-import type {Car} from '../drivetrain/car.ts';
+import type {Car, RackPair} from '../drivetrain/car.ts';
 import {pairName} from '../drivetrain/gear-pair.ts';
 import {mountable} from '../planning/candidates.ts';
 import type {Row} from '../planning/results.ts';
 import {counted, listed, longLengthText, secondsText} from '../planning/words.ts';
 import type {RankedTrack, ServedNeed} from './load-needs.ts';
-import type {LoadOptions, Role} from './load-results.ts';
+import type {LoadOptions} from './load-results.ts';
+import {raceM, tracksOf} from './race-miles.ts';
 import {stepsFrom} from './steps.ts';
 import {isUsable, lacksSupply, wouldPass} from './usable.ts';
-
-type PairRole = Role & {readonly pair: string};
 
 export function shortages(
 	car: Car,
 	tracks: readonly RankedTrack[],
 	needs: readonly ServedNeed[],
-	roles: readonly PairRole[],
 	options: LoadOptions,
 ): string[] {
 	return [
@@ -24,7 +22,7 @@ export function shortages(
 			...needs.flatMap(need => failingBest(need)),
 			...needs.flatMap(need => fasterWithSupply(need)),
 			...needs.flatMap(need => missingSteps(need, options)),
-			...shortPairs(car, roles),
+			...shortPairs(car, needs),
 		]),
 	];
 }
@@ -93,19 +91,29 @@ function missingSteps({track, way}: ServedNeed, options: LoadOptions): string[] 
 /** From this share of its allowed miles on a pair is worth a word. */
 const worn = 0.9;
 
-/** Pairs that stand for the best at several tracks with one set, or whose miles run out. */
-function shortPairs(car: Car, roles: readonly PairRole[]): string[] {
+/** Pairs whose miles do not last for their races, or are nearly used up, or that stand for the best at several tracks with one set. */
+function shortPairs(car: Car, needs: readonly ServedNeed[]): string[] {
 	return mountable(car).flatMap(pair => {
 		const name = pairName(pair);
-		const tracks = [
-			...new Set(roles.filter(role => role.pair === name && role.role === 'best').map(({track}) => track)),
-		];
+		const tracks = tracksOf(needs, name).map(track => track.name);
 		if (tracks.length === 0) return [];
-		const leftM = pair.maxMilesM === undefined ? undefined : pair.maxMilesM - pair.milesM;
-		const isWorn = leftM !== undefined && pair.milesM > worn * pair.maxMilesM!;
 		return [
-			...(isWorn ? [`${name}: ${longLengthText(leftM)} left, and it is the best at ${listed(tracks)}.`] : []),
+			...milesShort(pair, raceM(needs, name), tracks).map(words => `${name}: ${words}`),
 			...(pair.sets === 1 && tracks.length > 1 ? [`${name}: one set for ${listed(tracks)}, no spare.`] : []),
 		];
 	});
+}
+
+/** A further set is taken to be new. */
+function milesShort(
+	{sets, milesM, maxMilesM}: RackPair,
+	racesM: number | undefined,
+	tracks: readonly string[],
+): string[] {
+	if (maxMilesM === undefined) return [];
+	const leftM = maxMilesM * sets - milesM;
+	if (racesM !== undefined && racesM > leftM)
+		return [`${longLengthText(racesM)} of racing at ${listed(tracks)}, and ${longLengthText(leftM)} are left.`];
+	const isWorn = sets === 1 && milesM > worn * maxMilesM;
+	return isWorn ? [`${longLengthText(leftM)} left, and it is the best at ${listed(tracks)}.`] : [];
 }

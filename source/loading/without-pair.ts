@@ -57,7 +57,14 @@ function stepLoss(
 	const sameSet = usable.filter(({gearbox}) => gearbox === way.row.gearbox);
 	const own = sameSet.find(row => row.pair === pair)!;
 	const beyond = sameSet.filter(row => left.includes(row.pair) && side * (row.pairRatio - own.pairRatio) >= 0);
-	if (beyond.length === 0) return {kind: 'noStep', track: track.name, role};
+	if (beyond.length === 0) {
+		const short = sameSet.filter(row => left.includes(row.pair) && side * (row.pairRatio - own.pairRatio) < 0);
+		const last = short.reduce(
+			(furthest, row) => (side * (row.pairRatio - furthest.pairRatio) > 0 ? row : furthest),
+			way.row,
+		);
+		return {kind: 'noStep', track: track.name, role, than: last.pair};
+	}
 	const next = beyond.reduce((nearest, row) => (side * (row.pairRatio - nearest.pairRatio) < 0 ? row : nearest));
 	const rpm = (highestRpm(way.row) * Math.abs(next.pairRatio - own.pairRatio)) / way.row.pairRatio;
 	return {kind: 'further', track: track.name, role, pair: next.pair, rpm};

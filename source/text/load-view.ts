@@ -22,6 +22,12 @@ export const pairColumns = (units: Units): Making<LoadedPair>[] => [
 	{head: 'ratio', align: 'right', keep: 2, cell: pair => cell(fixed(pair.pairRatio, 4))},
 	{head: 'sets', align: 'right', keep: 1, cell: pair => cell(String(pair.sets))},
 	{head: `${units.label('longDistance')} left`, align: 'right', keep: 1, cell: pair => cell(milesLeft(pair, units))},
+	{
+		head: `races ${units.label('longDistance')}`,
+		align: 'right',
+		keep: 4,
+		cell: ({raceM}) => cell(units.number('longDistance', raceM)),
+	},
 	{head: 'best at', align: 'right', keep: 3, cell: pair => cell(count(pair, true))},
 	{head: 'step at', align: 'right', keep: 3, cell: pair => cell(count(pair, false))},
 ];
@@ -50,7 +56,7 @@ export const withoutWords = (without: Without | null): string => {
 	if (without.kind === 'nothing') return `Without it ${track} has no pair that passes.`;
 	if (without.kind === 'slower')
 		return `Without it ${track} is ${secondsText(without.lossS)} a lap slower, with ${without.pair} ${without.gearbox}.`;
-	if (without.kind === 'noStep') return `Without it ${track} has nothing ${without.role}.`;
+	if (without.kind === 'noStep') return `Without it ${track} has nothing ${without.role} than ${without.than}.`;
 	return `Without it the step ${without.role} at ${track} is ${without.pair}, ${highestText(without.rpm)} rpm further.`;
 };
 

@@ -3,7 +3,7 @@ import {readCar, readTrack} from '../../source/documents/read.ts';
 import type {Car} from '../../source/drivetrain/car.ts';
 import type {Track} from '../../source/drivetrain/track.ts';
 import {loadList} from '../../source/loading/load-list.ts';
-import type {RankedTrack} from '../../source/loading/load-needs.ts';
+import {type RankedTrack, rankedTrack} from '../../source/loading/load-needs.ts';
 import {defaultStepRatio, type LoadList, type LoadOptions} from '../../source/loading/load-results.ts';
 import {rankRack} from '../../source/planning/rank-rack.ts';
 import type {Figures} from './budgets.ts';
@@ -87,6 +87,6 @@ function rankAll(car: Car, tracks: readonly Track[]): RankedTrack[] {
 	return tracks.map(track => {
 		const ranking = rankRack(car, track);
 		if (!ranking.ok) throw new Error(JSON.stringify(ranking.faults));
-		return {name: track.name, ranking: ranking.value};
+		return rankedTrack(track.name, track, ranking.value);
 	});
 }

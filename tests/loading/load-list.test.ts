@@ -60,7 +60,7 @@ function ranked(name: string, laps: readonly (number | 'limit' | 'stock' | 'hous
 		});
 	});
 	const order = ({verdict, fastestS}: Row) => (verdict === 'fail' ? 1000 : 0) + fastestS!;
-	return {name, ranking: {setting, rows: rows.toSorted((a, b) => order(a) - order(b)), remarks: []}};
+	return {name, ranking: {setting, rows: rows.toSorted((a, b) => order(a) - order(b)), remarks: []}, raceM: undefined};
 }
 
 const pairsOf = (list: {pairs: readonly {pair: string}[]}) => list.pairs.map(({pair}) => pair);
@@ -106,7 +106,7 @@ test('the reason names the tracks, and what is missed first says where and how m
 		gearbox: 'A',
 		lossS: expect.closeTo(0.1, 9),
 	});
-	expect(pairs[0]!.without).toEqual({kind: 'noStep', track: 'One', role: 'taller'});
+	expect(pairs[0]!.without).toEqual({kind: 'noStep', track: 'One', role: 'taller', than: '35/34'});
 });
 
 test('a step may fail a check of the engine, but not the housing, and what is out of stock is passed over and told', () => {
@@ -143,6 +143,17 @@ test('a pair with few miles left and one set for several tracks is told', () => 
 	expect(short).toContain('35/34: one set for One and Two, no spare.');
 });
 
+test('a pair whose miles do not last for the races of its tracks is told', () => {
+	const mileM = 1609.344;
+	const used = carWith(teeth, {milesM: 1000 * mileM, maxMilesM: 1500 * mileM});
+	const laps = [10.3, 10.2, 10.1, 10, 10.1, 10.2, 10.3];
+	const races = (name: string, miles: number) => ({...ranked(name, laps), raceM: miles * mileM});
+	const {short, pairs} = loadList(used, [races('One', 300), races('Two', 225)], options);
+	expect(short).toContain('35/34: 525 miles (845 km) of racing at One and Two, and 500 miles (805 km) are left.');
+	expect(pairs.find(({pair}) => pair === '35/34')!.raceM).toBeCloseTo(525 * mileM, 6);
+	expect(loadList(used, [races('One', 300), races('Two', 200)], options).short.join()).not.toContain('racing');
+});
+
 test('every set needs its pairs where that is asked for', () => {
 	const laps = [10.3, 10.2, 10.1, 10, 10.1, 10.2, 10.3];
 	const inA = ranked('Oval', laps, 'A').ranking;
@@ -153,6 +164,7 @@ test('every set needs its pairs where that is asked for', () => {
 	).ranking;
 	const both = {
 		name: 'Oval',
+		raceM: undefined,
 		ranking: {...inA, rows: [...inA.rows, ...inB.rows].sort((a, b) => a.fastestS! - b.fastestS!)},
 	};
 	expect(loadList(rack, [both], options).tracks.map(({served}) => served.gearbox)).toEqual(['B']);

@@ -5,7 +5,7 @@ import type {Track} from '../../drivetrain/track.ts';
 import {gearboxSteps} from '../../loading/choose-gearbox.ts';
 import type {GearboxAnswer} from '../../loading/gearbox-results.ts';
 import {loadList} from '../../loading/load-list.ts';
-import type {RankedTrack} from '../../loading/load-needs.ts';
+import {type RankedTrack, rankedTrack} from '../../loading/load-needs.ts';
 import {defaultStepRatio, type LoadList} from '../../loading/load-results.ts';
 import {rankSteps} from '../../planning/rank-rack.ts';
 import type {Fault, Ranking} from '../../planning/results.ts';
@@ -122,7 +122,7 @@ export class Ahead {
 				if (!ranking.ok) return faulty(name, ranking.faults);
 				this.#rankings.set(json, ranking.value);
 			}
-			ranked.push({name, ranking: this.#rankings.get(json)!});
+			ranked.push(rankedTrack(name, track, this.#rankings.get(json)!));
 		}
 		const options = {shorter, taller, eachSet, withinS: undefined, stepRatio: defaultStepRatio, gearbox: undefined};
 		return {is: 'load', list: loadList(car, ranked, options)};
