@@ -1,6 +1,7 @@
 import {describe, expect, test} from 'vitest';
 import {editLine} from '../../../source/screens/parts/edit-line.ts';
 import {painted} from '../../../source/screens/parts/theme.ts';
+import {gearsPlace, loadPlace} from '../../../source/screens/session/ahead-place.ts';
 import {withJson} from '../../../source/screens/session/documents.ts';
 import {startHistory} from '../../../source/screens/session/history.ts';
 import {marginEntry} from '../../../source/screens/session/reduce.ts';
@@ -57,6 +58,9 @@ const places: Record<string, Partial<Session>> = {
 		place: {at: 'history', entries: [], adding: true, scroll: 0},
 		draft: startDraft('Fixture Oval', '2026-05-31', '36/36 A'),
 	},
+	'load list': {place: loadPlace},
+	'load list, nothing ahead': {place: loadPlace, ahead: []},
+	'gears to build': {place: gearsPlace},
 	differences: {
 		place: {at: 'differences', kind: 'track', scroll: 0},
 		history: startHistory(withJson(documents, 'track', {...oval.json, lap: '0.7 mi'})),
