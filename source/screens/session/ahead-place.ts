@@ -3,7 +3,7 @@ import {defaultSteps, mostSteps} from '../../loading/load-results.ts';
 import type {Action} from './action.ts';
 import type {Place, Session} from './session.ts';
 
-export const loadPlace: Place = {
+export const loadPlace: Place & {at: 'load'} = {
 	at: 'load',
 	cursor: 0,
 	scroll: 0,
@@ -11,7 +11,7 @@ export const loadPlace: Place = {
 	taller: defaultSteps,
 	eachSet: false,
 };
-export const gearsPlace: Place = {at: 'gears', cursor: 0, scroll: 0, together: false};
+export const gearsPlace: Place & {at: 'gears'} = {at: 'gears', cursor: 0, scroll: 0, together: false};
 
 export type AheadPlace = Place & {at: 'load' | 'gears'};
 
