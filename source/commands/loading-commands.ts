@@ -10,19 +10,19 @@ const tracks = {
 export const loadingCommands: readonly Command[] = [
 	{
 		name: 'load',
-		summary: 'the fewest pairs to carry: for every track its best, and steps shorter and taller',
+		summary: 'the fewest pairs to carry: each track its best, and steps beside it',
 		argument: tracks,
 		many: true,
 		options: ['car', 'shorter', 'taller', 'within', 'step', 'gearbox', 'each-set', ...everywhere],
 		examples: [
 			{line: 'droprack load friday.json saturday.json', gives: 'what goes on the truck, and why'},
-			{line: 'droprack load friday.json saturday.json --shorter 2 --taller 0', gives: 'with other steps'},
+			{line: 'droprack load friday.json saturday.json --shorter 2', gives: 'with two steps shorter and one taller'},
 		],
 		load: async () => (await import('./load.ts')).load,
 	},
 	{
 		name: 'gearbox',
-		summary: 'the best gears to build into the box, from single gears: for each track, or one set for all',
+		summary: 'the best gears to build into the box: for each track, or one for all',
 		argument: tracks,
 		many: true,
 		options: ['car', 'pair', 'together', 'top', ...everywhere],
@@ -30,7 +30,7 @@ export const loadingCommands: readonly Command[] = [
 			{line: 'droprack gearbox friday.json', gives: 'the best set and pair, the next best, every check'},
 			{
 				line: 'droprack gearbox friday.json saturday.json --together',
-				gives: 'one set for both, and what it costs at each',
+				gives: 'one set for both, and its cost',
 			},
 		],
 		load: async () => (await import('./gearbox.ts')).gearbox,

@@ -15,7 +15,10 @@ export const options = {
 		value: 'PAIR',
 		summary: 'driving/driven teeth, such as 33/38; rpm, run, life and fuel take the installed pair unless given',
 	},
-	gearbox: {value: 'SET', summary: 'the gearbox set; rpm, run, life and fuel take the installed one unless given'},
+	gearbox: {
+		value: 'SET',
+		summary: 'the gearbox set; rpm, run, life and fuel take the installed one unless given, load any',
+	},
 	prefer: {value: 'NAME', summary: 'take this car where none is named; "none" clears it'},
 	name: {value: 'NAME', summary: 'the name of the new document'},
 	from: {value: 'DOCUMENT', summary: 'begin with a copy of this: a file, or the name of a saved or shipped one'},
