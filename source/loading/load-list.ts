@@ -28,7 +28,9 @@ export function loadList(car: Car, tracks: readonly RankedTrack[], options: Load
 	const served = needs.map(need => ({...need, way: servingWay(need, carried)}));
 	const roles = served.map(need => rolesOf(need, carried));
 	return {
-		pairs: cover.things.map(thing => loadedPair(pairs[thing]!, carried, served, roles.flat(), withinS)),
+		pairs: cover.things.map(thing =>
+			loadedPair(pairs[thing]!, carried, served, roles.flat(), withinS, options.eachSet),
+		),
 		tracks: served.map((need, i) => loadedTrack(need, roles[i]!)),
 		short: shortages(car, tracks, served, options),
 		shorter: options.shorter,
@@ -82,6 +84,7 @@ function loadedPair(
 	needs: readonly ServedNeed[],
 	allRoles: readonly (Role & {pair: string})[],
 	withinS: number,
+	eachSet: boolean,
 ): LoadedPair {
 	const name = pairName(pair);
 	const roles = allRoles.filter(role => role.pair === name).map(({pair: _, ...role}) => role);
@@ -93,7 +96,7 @@ function loadedPair(
 		maxMilesM: pair.maxMilesM ?? null,
 		raceM: raceM(needs, name) ?? null,
 		roles,
-		reason: loadReason(roles),
+		reason: loadReason(roles, eachSet),
 		without: withoutPair(name, carried, needs, roles, withinS),
 	};
 }

@@ -2,14 +2,14 @@
 import {listed, secondsText} from '../planning/words.ts';
 import type {Role, RoleName} from './load-results.ts';
 
-/** "Best at Quillmere; shorter step at Tarrowdale and Cullamere." */
-export function loadReason(roles: readonly Role[]): string {
+/** "Best at Quillmere; shorter step at Tarrowdale and Cullamere."; with the sets where every set counts. */
+export function loadReason(roles: readonly Role[], eachSet: boolean): string {
 	const kinds = (['best', 'shorter', 'taller'] as const).flatMap(name => {
 		const steps = [...new Set(roles.filter(({role}) => role === name).map(({step}) => step))];
 		return steps.toSorted((one, other) => one - other).map(step => ({name, step}));
 	});
 	const parts = kinds.map(({name, step}) => {
-		const places = roles.filter(role => role.role === name && role.step === step).map(placeOf);
+		const places = roles.filter(role => role.role === name && role.step === step).map(role => placeOf(role, eachSet));
 		return `${roleText(name, step)} at ${listed([...new Set(places)])}`;
 	});
 	const text = parts.join('; ');
@@ -19,10 +19,11 @@ export function loadReason(roles: readonly Role[]): string {
 /** What is below it rounds to 0.000 s. */
 const shownFromS = 0.0005;
 
-function placeOf({track, role, lossS}: Role): string {
+function placeOf({track, gearbox, role, lossS}: Role, eachSet: boolean): string {
+	const place = eachSet ? `${track} with ${gearbox}` : track;
 	return role === 'best' && lossS !== null && lossS >= shownFromS
-		? `${track} (${secondsText(lossS)} a lap off its very best)`
-		: track;
+		? `${place} (${secondsText(lossS)} a lap off its very best)`
+		: place;
 }
 
 /** "best", "shorter step", "second taller step". */

@@ -21,7 +21,7 @@ export function shortages(
 			...tracks.flatMap(track => unservedTrack(track, needs)),
 			...needs.flatMap(need => failingBest(need)),
 			...needs.flatMap(need => fasterWithSupply(need)),
-			...needs.flatMap(need => missingSteps(need, options)),
+			...missingSteps(needs, options),
 			...shortPairs(car, needs),
 		]),
 	];
@@ -60,31 +60,28 @@ function fasterWithSupply({track, best, usable}: ServedNeed): string[] {
 	];
 }
 
-/** Steps that the rack does not have, and steps that a pair out of supply would be nearer for. */
-function missingSteps({track, way}: ServedNeed, options: LoadOptions): string[] {
+/** Steps that the rack does not have, and steps that a pair out of supply would be nearer for; tracks that miss the same together. */
+function missingSteps(needs: readonly ServedNeed[], options: LoadOptions): string[] {
+	const tracks = new Map<string, string[]>();
+	for (const need of needs) {
+		for (const words of missingAt(need, options)) tracks.set(words, [...(tracks.get(words) ?? []), need.track.name]);
+	}
+	return [...tracks].map(([words, names]) => `${listed([...new Set(names)])}: ${words}`);
+}
+
+function missingAt({track, way}: ServedNeed, options: LoadOptions): string[] {
 	const {row} = way;
 	return (['shorter', 'taller'] as const).flatMap(name => {
 		const found = way[name].length;
-		const ended =
-			found < options[name]
-				? [
-						`${track.name}: ${found === 0 ? 'no step' : `only ${counted(found, 'step')}`} ${name} than ${row.pair} ${row.gearbox} on the rack.`,
-					]
-				: [];
-		const [nearest] = stepsFrom(
-			track.ranking.rows.filter(one => one.gearbox === row.gearbox && (isUsable(one) || lacksSupply(one))),
-			row.pairRatio,
-			name,
-			options.stepRatio,
-			options[name] > 0 ? 1 : 0,
+		const count = found === 0 ? 'no step' : `only ${counted(found, 'step')}`;
+		const ended = found < options[name] ? [`${count} ${name} than ${row.pair} ${row.gearbox} on the rack.`] : [];
+		const withSupply = track.ranking.rows.filter(
+			one => one.gearbox === row.gearbox && (isUsable(one) || lacksSupply(one)),
 		);
+		const [nearest] = stepsFrom(withSupply, row.pairRatio, name, options.stepRatio, Math.min(1, options[name]));
 		const lacking = nearest?.every(lacksSupply) ? nearest[0] : undefined;
-		return lacking === undefined
-			? ended
-			: [
-					...ended,
-					`${track.name}: ${lacking.pair} would be the nearest step ${name} than ${row.pair}, but ${supplyOf(lacking)}.`,
-				];
+		if (lacking === undefined) return ended;
+		return [...ended, `${lacking.pair} would be the nearest step ${name} than ${row.pair}, but ${supplyOf(lacking)}.`];
 	});
 }
 

@@ -86,10 +86,12 @@ export const loadBlocks = (list: LoadList, units: Units): Block[] => [
 	text(loadMeaning(list), 'muted', 2),
 	gap,
 	tableOf(pairColumns(units), list.pairs),
+	text('races: of the tracks that it is the best for; step at: tracks that it is a step for', 'muted', 2),
 	gap,
 	...list.pairs.map(pair => text(`${pair.pair}  ${pair.reason} ${withoutWords(pair.without)}`.trimEnd(), 'plain', 7)),
 	gap,
 	tableOf(trackColumns, list.tracks),
+	text('off best s: a lap more than the very best of the rack; choices: pairs that would do as the best', 'muted', 2),
 	gap,
 	...(list.short.length === 0
 		? []
