@@ -188,6 +188,8 @@ function remarksOn(entries: readonly Entry[], {together}: GearboxOptions, common
 					: []),
 			];
 		}),
-		...(together && common.length === 0 ? ['No set may be used at all of the tracks.'] : []),
+		...(together && common.length === 0
+			? ['There is no set that may be used, and has a lap time, at all of the tracks.']
+			: []),
 	];
 }

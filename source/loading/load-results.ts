@@ -38,6 +38,8 @@ export type Role = {
 export type Without =
 	/** A lap is slower by this with the best pair that is left. */
 	| {kind: 'slower'; track: string; pair: string; gearbox: string; lossS: number}
+	/** Where there are no times: the nearest pair turns the engine so much more or less. */
+	| {kind: 'nearest'; track: string; pair: string; rpm: number}
 	/** Nothing that is left fails no check. */
 	| {kind: 'nothing'; track: string}
 	/** The next pair that way turns the engine so much further from the best pair's RPM than this one. */

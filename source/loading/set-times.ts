@@ -10,7 +10,7 @@ import {SharedChains, type StraightTime} from './shared-chains.ts';
 
 /** By the number of the set. */
 export type SetTimes = {
-	/** A lap, as a row's `fastestS`; infinite where the car does not come round. */
+	/** A lap, as a row's `fastestS`; infinite where the car does not come round, or no straight has a length. */
 	readonly lapS: Float64Array;
 	/** 1 where a straight passes the limit or comes to the limiter, which fails the row whatever else is checked. */
 	readonly fails: Uint8Array;
@@ -39,7 +39,8 @@ export class SetTimer {
 	*times(pair: RackPair): Generator<void, SetTimes, void> {
 		const trains = this.#sets.map(set => candidateOf(this.#plan.car, pair, set).train);
 		const gearsOf = this.#plan.roads.gearsInCommon();
-		const lapS = new Float64Array(this.#sets.length);
+		const isTimed = this.#plan.track.straights.some(({lengthM}) => lengthM !== undefined);
+		const lapS = new Float64Array(this.#sets.length).fill(isTimed ? 0 : Number.POSITIVE_INFINITY);
 		const fails = new Uint8Array(this.#sets.length);
 		for (const i of this.#plan.runOrder) {
 			const {places, vehicle, weight} = this.#plan.conditions[i]!;

@@ -27,7 +27,7 @@ export function withoutPair(
 	);
 }
 
-const severity: Record<Without['kind'], number> = {nothing: 4, slower: 3, noStep: 2, further: 1};
+const severity: Record<Without['kind'], number> = {nothing: 4, slower: 3, nearest: 3, noStep: 2, further: 1};
 
 const severityOf = (loss: Without, withinS: number): number =>
 	loss.kind === 'slower' && loss.lossS <= withinS ? 0 : severity[loss.kind];
@@ -42,9 +42,17 @@ function isWorse(one: Without, other: Without, withinS: number): boolean {
 function bestLoss({track, usable, way}: ServedNeed, left: readonly string[]): Without[] {
 	const next = usable.find(row => left.includes(row.pair) && (way.row.verdict === 'fail' || row.verdict !== 'fail'));
 	if (next === undefined) return [{kind: 'nothing', track: track.name}];
-	if (next.fastestS === null || way.row.fastestS === null) return [];
+	if (next.fastestS === null || way.row.fastestS === null) return [nearestTo(way.row, track.name, usable, left)];
 	const lossS = Math.max(0, next.fastestS - way.row.fastestS);
 	return [{kind: 'slower', track: track.name, pair: next.pair, gearbox: next.gearbox, lossS}];
+}
+
+function nearestTo(own: Row, track: string, usable: readonly Row[], left: readonly string[]): Without {
+	const away = (row: Row) => Math.abs(row.pairRatio - own.pairRatio);
+	const others = usable.filter(row => row.gearbox === own.gearbox && left.includes(row.pair));
+	if (others.length === 0) return {kind: 'nothing', track};
+	const nearest = others.reduce((best, row) => (away(row) < away(best) ? row : best));
+	return {kind: 'nearest', track, pair: nearest.pair, rpm: (highestRpm(own) * away(nearest)) / own.pairRatio};
 }
 
 function stepLoss(

@@ -53,7 +53,8 @@ export const ownWords = ({rows, own}: TrackGears): string => {
 	const [best] = rows;
 	if (best === undefined || own === null) return '';
 	const name = `${own.pair} ${own.gearbox}, the best of the sets that are built`;
-	if (own.verdict === 'fail' && best.verdict !== 'fail') return `Every set that is built fails a check here.`;
+	if (best.verdict === 'fail') return 'Every set fails a check here; this is the fastest.';
+	if (own.verdict === 'fail') return `Every set that is built fails a check here.`;
 	if (own.fastestS === null || best.fastestS === null) return '';
 	const gainS = own.fastestS - best.fastestS;
 	return gainS < 0.0005 ? `No faster than ${name}.` : `${secondsText(gainS)} a lap faster than ${name}.`;

@@ -56,6 +56,8 @@ export const withoutWords = (without: Without | null): string => {
 	if (without.kind === 'nothing') return `Without it ${track} has no pair that passes.`;
 	if (without.kind === 'slower')
 		return `Without it ${track} is ${secondsText(without.lossS)} a lap slower, with ${without.pair} ${without.gearbox}.`;
+	if (without.kind === 'nearest')
+		return `Without it the nearest at ${track} is ${without.pair}, ${highestText(without.rpm)} rpm away.`;
 	if (without.kind === 'noStep') return `Without it ${track} has nothing ${without.role} than ${without.than}.`;
 	return `Without it the step ${without.role} at ${track} is ${without.pair}, ${highestText(without.rpm)} rpm further.`;
 };
