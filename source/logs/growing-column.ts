@@ -1,34 +1,34 @@
-/** A column whose length is known only at the end: blocks, so that nothing is copied while it grows. */
+/** A column whose length is known only at the end. */
 
 type Numbers = Float32Array | Float64Array;
 
 export class GrowingColumn<T extends Numbers> {
-	readonly #blocks: T[] = [];
 	readonly #make: (length: number) => T;
+	#numbers: T;
 	#length = 0;
 
-	constructor(make: (length: number) => T) {
+	/** With room for so many: a system gives the memory only where numbers are written, so that plenty costs nothing. */
+	constructor(make: (length: number) => T, room: number) {
 		this.#make = make;
+		this.#numbers = make(room);
 	}
 
 	/** Takes every `stride`th of the numbers, `count` of them, from `offset` on. */
 	append(numbers: Float64Array, offset: number, stride: number, count: number): void {
-		const block = this.#make(count);
-		for (let i = 0, at = offset; i < count; i++, at += stride) block[i] = numbers[at]!;
-		this.#blocks.push(block);
-		this.#length += count;
+		const length = this.#length + count;
+		if (length > this.#numbers.length) this.#grow(2 * length);
+		const own = this.#numbers;
+		for (let i = this.#length, at = offset; i < length; i++, at += stride) own[i] = numbers[at]!;
+		this.#length = length;
 	}
 
-	/** All in one; the column is empty afterwards, so that the blocks can be let go. */
-	take(): T {
-		const whole = this.#make(this.#length);
-		let at = 0;
-		for (const block of this.#blocks) {
-			whole.set(block, at);
-			at += block.length;
-		}
-		this.#blocks.length = 0;
-		this.#length = 0;
-		return whole;
+	#grow(room: number): void {
+		const larger = this.#make(room);
+		larger.set(this.#numbers.subarray(0, this.#length));
+		this.#numbers = larger;
+	}
+
+	get numbers(): T {
+		return this.#numbers.subarray(0, this.#length) as T;
 	}
 }

@@ -26,6 +26,8 @@ type Given = {
 	readonly columns: AskedColumns;
 	readonly remembered: RememberedColumns | undefined;
 	readonly encoding: string | undefined;
+	/** Of the whole file, where that is known. */
+	readonly sizeBytes: number | undefined;
 };
 
 const refused = (...problems: LogRefused['problems']): LogRefused => ({ok: false, problems});
@@ -52,13 +54,19 @@ export function openLog(head: Head, given: Given): OpenLog | LogRefused {
 	const remarks = [...fileRemarks(head, table, given), ...choiceRemarks(choice), ...leftOut];
 	return {
 		ok: true,
-		plan: planOf(head, table, units.columns, seen),
+		plan: planOf(head, table, units.columns, seen, given),
 		start: table.start,
 		finish: rows => finished(rows, table, units.columns, choice.none, remarks),
 	};
 }
 
-function planOf(head: Head, table: Table, columns: readonly UsedColumn[], {mark}: RowPlan['decimals']): RowPlan {
+function planOf(
+	head: Head,
+	table: Table,
+	columns: readonly UsedColumn[],
+	{mark}: RowPlan['decimals'],
+	{sizeBytes}: Given,
+): RowPlan {
 	return {
 		dialect: {separator: table.separator, lineEnd: head.lineEnd},
 		width: table.headers.length,
@@ -66,7 +74,18 @@ function planOf(head: Head, table: Table, columns: readonly UsedColumn[], {mark}
 		decimals: {mark},
 		decode: head.decode,
 		firstLine: table.linesBefore + 1,
+		expectedRows: expectedRows(head, table, sizeBytes),
 	};
+}
+
+/** More than the rows are likely to be: rows of the head may be longer than later ones. */
+const spare = 1.3;
+
+function expectedRows({lines}: Head, {linesBefore, start}: Table, sizeBytes: number | undefined): number {
+	const rows = lines.length - linesBefore;
+	const bytes = (lines.at(-1)?.end ?? 0) - start;
+	const inAll = sizeBytes === undefined || bytes <= 0 ? rows : (rows * sizeBytes) / bytes;
+	return Math.ceil(spare * inAll);
 }
 
 function fileRemarks(head: Head, {linesBefore, units}: Table, {encoding}: Given): RemarkData[] {

@@ -1,10 +1,7 @@
 /** Samples along an axis that never falls: the clock of the log or, where it has none, its distance. */
-import type {Numbers} from './samples.ts';
+import type {Numbers, Samples} from './samples.ts';
 
 export type Order = {
-	/** Indices of the samples to keep; the first `length` count. */
-	readonly indices: Uint32Array;
-	readonly length: number;
 	/** Samples without a place on the axis. */
 	readonly unplaced: number;
 	/** Single samples that leap back or ahead and are followed by others in order. */
@@ -14,11 +11,11 @@ export type Order = {
 };
 
 /**
- * Rewrites the axis from 0 on, in place, and says which samples stay. A single sample out of order is left out. Where the
- * axis falls and goes on from there, a new part begins: it is joined to the part before by a step as long as the last one.
+ * Rewrites the axis from 0 on and leaves out what has no place on it, in place. A single sample out of order is left out. Where
+ * the axis falls and goes on from there, a new part begins: it is joined to the part before by a step as long as the last one.
  */
-export function putInOrder(axis: Numbers): Order {
-	const indices = new Uint32Array(axis.length);
+export function putInOrder(samples: Samples, axisName: 'time' | 'distance'): Order {
+	const axis = samples.get(axisName)!;
 	const restarts: number[] = [];
 	let [length, unplaced, outOfOrder] = [0, 0, 0];
 	// The last sample kept and the one before it in the same part, as the log has them; and what is added to this part.
@@ -47,10 +44,11 @@ export function putInOrder(axis: Numbers): Order {
 		if (length === 0) added = -raw;
 		if (raw > last) step = raw - last;
 		[before, last] = [last, raw];
-		axis[i] = raw + added;
-		indices[length++] = i;
+		if (length < i) samples.move(i, length);
+		axis[length++] = raw + added;
 	}
-	return {indices, length, unplaced, outOfOrder, restarts};
+	samples.cut(length);
+	return {unplaced, outOfOrder, restarts};
 }
 
 /** The next value that is there; NaN at the end. */

@@ -16,6 +16,8 @@ export type ReadLogOptions = {
 	/** Asked for: before what is remembered, and before what the names say. */
 	readonly columns?: AskedColumns;
 	readonly remembered?: RememberedColumns | undefined;
+	/** Of all bytes, where that is known: so much room is made at once. */
+	readonly sizeBytes?: number | undefined;
 	/** Called with the bytes read so far, once for each piece. */
 	readonly onProgress?: (bytes: number) => void;
 };
@@ -26,7 +28,7 @@ export type ReadLogOptions = {
  */
 export async function readLog(
 	chunks: AsyncIterable<Uint8Array>,
-	{columns = {}, remembered, onProgress}: ReadLogOptions = {},
+	{columns = {}, remembered, sizeBytes, onProgress}: ReadLogOptions = {},
 ): Promise<LogReading> {
 	const decoder = new Utf8Decoder();
 	const head = new Uint8Array(headBytes);
@@ -35,7 +37,7 @@ export async function readLog(
 	let log: {open: OpenLog; reader: RowReader} | undefined;
 	const begin = (isWhole: boolean): LogRefused | undefined => {
 		const bytes = head.subarray(0, headLength);
-		const open = openLog(headOf(bytes, isWhole), {bytes, columns, remembered, encoding: decoder.encoding});
+		const open = openLog(headOf(bytes, isWhole), {bytes, columns, remembered, sizeBytes, encoding: decoder.encoding});
 		if (!open.ok) return open;
 		log = {open, reader: new RowReader(open.plan)};
 		log.reader.push(bytes.subarray(open.start));

@@ -17,6 +17,8 @@ export type RowPlan = {
 	readonly decode: (bytes: Uint8Array) => string;
 	/** Number of the first line. */
 	readonly firstLine: number;
+	/** How many rows to expect, where that can be told. */
+	readonly expectedRows: number;
 };
 
 export type RowColumn = {
@@ -90,8 +92,10 @@ export class RowReader {
 		this.#block = new Float64Array(this.#stride * rowsPerBlock);
 		this.#columns = plan.columns.map(
 			({channel}) =>
-				new GrowingColumn<Float32Array | Float64Array>(length =>
-					channel === 'time' || channel === 'distance' ? new Float64Array(length) : new Float32Array(length),
+				new GrowingColumn<Float32Array | Float64Array>(
+					length =>
+						channel === 'time' || channel === 'distance' ? new Float64Array(length) : new Float32Array(length),
+					plan.expectedRows,
 				),
 		);
 		this.#cells = plan.columns.map(() => ({empty: 0, text: {...never(), first: ''}, units: new Set()}));
@@ -283,7 +287,7 @@ export class RowReader {
 		this.#flush();
 		return {
 			samples: this.#samples,
-			values: this.#columns.map(column => column.take()),
+			values: this.#columns.map(({numbers}) => numbers),
 			cells: this.#cells,
 			wrongCells: this.#wrongCells,
 			longLines: this.#longLines,

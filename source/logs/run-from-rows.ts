@@ -9,7 +9,7 @@ import {type Numbers, Samples} from './samples.ts';
 import {samplingRemarks} from './sampling.ts';
 import {brakeShare, highestOf, throttleShare} from './shares.ts';
 import {forgetStuck} from './stuck-sensors.ts';
-import {distanceFromSpeed, everywhere, joinedDistance, timeFromSpeed} from './travelled.ts';
+import {distanceFromSpeed, everywhere, joinDistance, lengthFromSpeed, timeFromSpeed} from './travelled.ts';
 
 export type RunFromRows = {readonly run: LoggedRun; readonly remarks: readonly RemarkData[]};
 
@@ -43,9 +43,8 @@ export function runFromRows(rows: Rows, columns: readonly UsedColumn[]): RunFrom
 }
 
 function ordered(samples: Samples, axis: 'time' | 'distance'): RemarkData[] {
-	const {indices, length, unplaced, outOfOrder, restarts} = putInOrder(samples.get(axis)!);
+	const {unplaced, outOfOrder, restarts} = putInOrder(samples, axis);
 	const remarks: RemarkData[] = [];
-	if (length < samples.length) samples.keep(indices, length);
 	if (unplaced > 0) remarks.push({kind: 'unplaced', rows: unplaced});
 	if (outOfOrder > 0) remarks.push({kind: 'outOfOrder', channel: axis, rows: outOfOrder});
 	// Where the axis is a distance, there is no time yet to say where.
@@ -57,28 +56,23 @@ type Placed = Pick<LoggedRun, 'timeS' | 'distanceM'> & {readonly remarks: readon
 
 function placed(samples: Samples, axis: 'time' | 'distance'): Placed {
 	const along = samples.get(axis) as Float64Array;
-	const speedMps = everywhere(samples.get('speed')!, along);
+	const speedMps = everywhere(samples.get('speed') as Float32Array, along);
 	if (axis === 'distance') {
 		const timeS = timeFromSpeed(along, speedMps);
 		return {timeS, distanceM: along, remarks: [{kind: 'workedOut', channel: 'time'}]};
 	}
-	const bySpeedM = distanceFromSpeed(along, speedMps);
-	const logged = samples.get('distance');
-	const workedOut = {timeS: along, distanceM: bySpeedM, remarks: [{kind: 'workedOut', channel: 'distance'}] as const};
-	if (logged === undefined || Number.isNaN(highestKnown(logged))) return workedOut;
-	const {distanceM, restartsS} = joinedDistance(logged, along, speedMps);
+	const logged = samples.get('distance') as Float64Array | undefined;
+	if (logged === undefined || logged.every(Number.isNaN)) {
+		const distanceM = distanceFromSpeed(along, speedMps);
+		return {timeS: along, distanceM, remarks: [{kind: 'workedOut', channel: 'distance'}]};
+	}
+	const restartsS = joinDistance(logged, along, speedMps);
 	const remarks: RemarkData[] = [];
 	if (restartsS.length > 0) remarks.push({kind: 'restart', channel: 'distance', atS: restartsS});
-	const [total, bySpeed] = [distanceM.at(-1) ?? 0, bySpeedM.at(-1) ?? 0];
-	if (bySpeed > 0 && Math.abs(total / bySpeed - 1) > agreement)
-		remarks.push({kind: 'disagree', loggedM: total, bySpeedM: bySpeed});
-	return {timeS: along, distanceM, remarks};
+	const [loggedM, bySpeedM] = [logged.at(-1) ?? 0, lengthFromSpeed(along, speedMps)];
+	if (bySpeedM > 0 && Math.abs(loggedM / bySpeedM - 1) > agreement) remarks.push({kind: 'disagree', loggedM, bySpeedM});
+	return {timeS: along, distanceM: logged, remarks};
 }
-
-const highestKnown = (values: Numbers): number => {
-	const highest = highestOf(values);
-	return Number.isFinite(highest) ? highest : Number.NaN;
-};
 
 function implausible(speedMps: Numbers, rpm: Numbers): RemarkData[] {
 	const [speed, engine] = [highestOf(speedMps), highestOf(rpm)];

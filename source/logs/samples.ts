@@ -25,15 +25,13 @@ export class Samples {
 		this.#columns.delete(channel);
 	}
 
-	set(channel: ChannelName, numbers: Numbers): void {
-		this.#columns.set(channel, numbers);
+	/** Puts a sample in the place of an earlier one. */
+	move(from: number, to: number): void {
+		for (const numbers of this.#columns.values()) numbers[to] = numbers[from]!;
 	}
 
-	/** Leaves only the samples with these indices, which rise, the first `length` of them. */
-	keep(indices: Uint32Array, length: number): void {
-		for (const numbers of this.#columns.values()) {
-			for (let to = 0; to < length; to++) numbers[to] = numbers[indices[to]!]!;
-		}
+	/** Leaves the first ones. */
+	cut(length: number): void {
 		this.#length = length;
 	}
 }

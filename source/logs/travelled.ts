@@ -6,7 +6,8 @@ import type {Numbers} from './samples.ts';
 const slowestMps = 0.1;
 
 /** The speed at every sample: between known ones in proportion to the axis, before the first and after the last as they are. 0 where none is known. */
-export function everywhere(speedMps: Numbers, axis: Numbers): Float32Array {
+export function everywhere(speedMps: Float32Array, axis: Numbers): Float32Array {
+	if (!speedMps.some(Number.isNaN)) return speedMps;
 	const filled = Float32Array.from(speedMps);
 	let known = -1;
 	for (let i = 0; i < filled.length; i++) {
@@ -42,20 +43,26 @@ export function timeFromSpeed(distanceM: Float64Array, speedMps: Float32Array): 
 const stepM = (timeS: Float64Array, speedMps: Float32Array, i: number): number =>
 	Math.max(0, ((speedMps[i - 1]! + speedMps[i]!) / 2) * (timeS[i]! - timeS[i - 1]!));
 
-export type LoggedDistance = {readonly distanceM: Float64Array; readonly restartsS: readonly number[]};
+/** What the speed makes of the whole. */
+export function lengthFromSpeed(timeS: Float64Array, speedMps: Float32Array): number {
+	let lengthM = 0;
+	for (let i = 1; i < timeS.length; i++) lengthM += stepM(timeS, speedMps, i);
+	return lengthM;
+}
 
 /**
- * The distance of the log beside its clock, from 0 on. Where it is not known or leaps for one sample, the speed carries it on; where it falls, as
- * a distance counted anew each lap does, it goes on from where it was.
+ * The distance of the log beside its clock, rewritten from 0 on, in place. Where it is not known or leaps for one sample, the
+ * speed carries it on; where it falls, as a distance counted anew each lap does, it goes on from where it was. Gives the times
+ * at which it fell.
  */
-export function joinedDistance(logged: Numbers, timeS: Float64Array, speedMps: Float32Array): LoggedDistance {
-	const distanceM = new Float64Array(logged.length);
+export function joinDistance(distanceM: Float64Array, timeS: Float64Array, speedMps: Float32Array): number[] {
 	const restartsS: number[] = [];
+	// As the log has it, and what is added since it last fell.
 	let [last, added] = [Number.NaN, Number.NaN];
-	for (let i = 0; i < logged.length; i++) {
+	for (let i = 0; i < distanceM.length; i++) {
 		const carried = i === 0 ? 0 : distanceM[i - 1]! + stepM(timeS, speedMps, i);
-		const raw = logged[i]!;
-		if (Number.isNaN(raw) || leaps(raw, last, nextKnown(logged, i))) {
+		const raw = distanceM[i]!;
+		if (Number.isNaN(raw) || leaps(raw, last, nextKnown(distanceM, i))) {
 			distanceM[i] = carried;
 			continue;
 		}
@@ -67,7 +74,7 @@ export function joinedDistance(logged: Numbers, timeS: Float64Array, speedMps: F
 		last = raw;
 		distanceM[i] = i === 0 ? 0 : Math.max(distanceM[i - 1]!, raw + added);
 	}
-	return {distanceM, restartsS};
+	return restartsS;
 }
 
 /** For one sample below both neighbors or above both, which are in order themselves. */
