@@ -107,3 +107,14 @@ export function noNumbers({samples, cells}: Rows, columns: readonly UsedColumn[]
 	}
 	return undefined;
 }
+
+export function deadSensor(channel: 'speed' | 'rpm', columns: readonly UsedColumn[]): LogProblem {
+	const {header} = columns.find(column => column.channel === channel)!;
+	return {
+		kind: 'noNumbers',
+		where: `the column of ${channel}, "${shortened(header.written)}" (#${header.column})`,
+		found: 'the same value throughout, while the other of speed and rpm moves',
+		allowed: 'what a working sensor gives',
+		do: `Take another column: --column ${channel}=HEADER.`,
+	};
+}
