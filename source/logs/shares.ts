@@ -6,6 +6,9 @@ import type {Numbers} from './samples.ts';
 /** A little over full is a sensor's calibration. */
 const overFull = 1.1;
 
+/** Numbers without a unit that stay below are hardly percent: volts, or something else. */
+const leastPercent = 50;
+
 /** In place, from what the unit (if any) makes of the numbers; undefined where they are no share. */
 export function throttleShare(values: Numbers, {header, unit}: UsedColumn): RemarkData[] | undefined {
 	const highest = highestOf(values);
@@ -17,7 +20,7 @@ export function throttleShare(values: Numbers, {header, unit}: UsedColumn): Rema
 		scale = 100;
 		remarks = [{kind: 'unitFromNumbers', channel: 'throttle', header: header.written, unit: 'shares of 1'}];
 	} else if (!isPercent) {
-		if (highest > 100 * overFull) return undefined;
+		if (highest > overFull && (highest < leastPercent || highest > 100 * overFull)) return undefined;
 		scale = highest > overFull ? 1 / 100 : 1;
 		remarks = [
 			{kind: 'unitFromNumbers', channel: 'throttle', header: header.written, unit: scale === 1 ? 'shares of 1' : '%'},
