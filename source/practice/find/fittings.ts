@@ -12,8 +12,8 @@ export type Installed = {readonly pair: Pair; readonly gearbox: string};
 
 /** A candidate laid on the humps. */
 export type Laid = Fitting & {
-	/** Of each hump, counted from 1. */
-	readonly gears: readonly number[];
+	/** Of each hump, counted from 1; undefined: none. */
+	readonly gears: readonly (number | undefined)[];
 	/** Twice the logarithm of how much less likely than a perfect fit of what is installed: the lower the better. */
 	readonly penalty: number;
 };
@@ -23,7 +23,9 @@ const rolloutSd = 0.01;
 const growthSd = 0.003;
 /** Standard deviation of a hump about its ratio: ratios are stated rounded, growth differs a little between gears. */
 const humpSd = 0.003;
-/** Humps that lie further off than this, root mean square, are not explained. */
+/** A hump further off than this belongs to no gear: wheelspin and shifts make small ones. It counts as this far off. */
+const strayFrom = 4 * humpSd;
+/** Humps that lie further off than this, root mean square by their samples, are not explained. */
 export const farthestResidual = 2 * humpSd;
 
 /** Twice the logarithm of the odds, before the log is seen, against what the documents call installed. */
@@ -76,7 +78,8 @@ function oddsOf({pair, gearbox}: Candidate, isFlipped: boolean, installed: Insta
 	return notOnHand + otherSet + oddsAgainst.otherPair * (own ? 0.5 : 1) + turned;
 }
 
-function gearOdds(used: readonly number[], allowed: GearRange | undefined): number {
+function gearOdds(gears: Laid['gears'], allowed: GearRange | undefined): number {
+	const used = gears.filter(gear => gear !== undefined);
 	if (allowed === undefined) return 0;
 	const outside = used.filter(gear => gear < allowed.lowest || gear > allowed.highest).length;
 	return (oddsAgainst.gearNotAllowed * outside) / Math.max(1, used.length);
@@ -88,32 +91,39 @@ const costOf = ({residual, circumferenceFactor}: Lay, humps: number, span: numbe
 type Lay = Pick<Laid, 'gears' | 'circumferenceFactor' | 'residual'>;
 
 /**
- * The gears that the humps belong to, the factor of the circumference that brings them nearest, and what is left. Every hump
- * is tried on every gear; among equally good ones the factor nearest to 1.
+ * The gears that the humps belong to, the factor of the circumference that brings them nearest, and what is left. The
+ * largest hump is tried on every gear; among equally good ones the factor nearest to 1.
  */
 function layOn(overall: readonly number[], humps: readonly Hump[], span: number): Lay {
 	const logs = overall.map(Math.log);
 	let best: Lay & {cost: number} = {gears: [], circumferenceFactor: 1, residual: 0, cost: Number.POSITIVE_INFINITY};
-	for (const hump of humps.slice(0, 1)) {
-		for (const gear of logs) {
-			const lay = settledFrom(logs, humps, gear - Math.log(hump.overall));
-			const cost = costOf(lay, humps.length, span);
-			if (cost < best.cost) best = {...lay, cost};
-		}
+	for (const gear of logs) {
+		const lay = settledFrom(logs, humps, gear - Math.log(humps[0]!.overall));
+		const cost = costOf(lay, humps.length, span);
+		if (cost < best.cost) best = {...lay, cost};
 	}
 	return best;
 }
 
-/** Humps count by the root of their samples: a gear used for a moment tells less, but tells. */
-function settledFrom(logs: readonly number[], humps: readonly Hump[], shift: number): Lay {
-	const weights = humps.map(({samples}) => Math.sqrt(samples));
-	const total = weights.reduce((sum, weight) => sum + weight, 0);
+/** The largest hump decides to begin with; humps that then lie far off are strays, and do not move the rest. */
+function settledFrom(logs: readonly number[], humps: readonly Hump[], start: number): Lay {
+	const total = humps.reduce((sum, {samples}) => sum + samples, 0);
 	const at = humps.map(({overall}) => Math.log(overall));
-	const gears = at.map(x => nearest(logs, x + shift));
+	const gears = at.map(x => nearest(logs, x + start));
 	const off = at.map((x, i) => logs[gears[i]! - 1]! - x);
-	const mean = off.reduce((sum, x, i) => sum + weights[i]! * x, 0) / total;
-	const square = off.reduce((sum, x, i) => sum + weights[i]! * (x - mean) ** 2, 0) / total;
-	return {gears, circumferenceFactor: Math.exp(mean), residual: Math.sqrt(square)};
+	const near = (shift: number) => off.map(x => Math.abs(x - shift) <= strayFrom);
+	const shiftOf = (kept: readonly boolean[]) => {
+		const all = off.map((x, i) => ({x, weight: kept[i] ? humps[i]!.samples : 0}));
+		return all.reduce((sum, {x, weight}) => sum + weight * x, 0) / all.reduce((sum, {weight}) => sum + weight, 0);
+	};
+	const shift = shiftOf(near(start));
+	const kept = near(shift);
+	const square = off.reduce((sum, x, i) => sum + humps[i]!.samples * Math.min(strayFrom, Math.abs(x - shift)) ** 2, 0);
+	return {
+		gears: gears.map((gear, i) => (kept[i] ? gear : undefined)),
+		circumferenceFactor: Math.exp(shift),
+		residual: Math.sqrt(square / total),
+	};
 }
 
 function nearest(values: readonly number[], x: number): number {
