@@ -20,7 +20,7 @@ export type Laid = Fitting & {
 
 /** Standard deviations of a rollout as the documents have it, and of growth at 100 mph; both as fractions. */
 const rolloutSd = 0.01;
-const growthSd = 0.003;
+export const growthSd = 0.003;
 /** Standard deviation of a hump about its ratio: ratios are stated rounded, growth differs a little between gears. */
 const humpSd = 0.003;
 /** A hump further off than this belongs to no gear: wheelspin and shifts make small ones. It counts as this far off. */
@@ -29,7 +29,15 @@ const strayFrom = 4 * humpSd;
 export const farthestResidual = 2 * humpSd;
 
 /** Twice the logarithm of the odds, before the log is seen, against what the documents call installed. */
-const oddsAgainst = {otherPair: 6, otherSet: 4, notOnHand: 3, turned: 1, otherTurned: 6, gearNotAllowed: 2};
+const oddsAgainst = {
+	otherPair: 6,
+	otherSet: 4,
+	notOnHand: 3,
+	ownTurned: 3,
+	otherTurned: 6,
+	gearNotAllowed: 2,
+	gearColumn: 8,
+};
 
 /** Every pair and set, both ways round, best first. `gears`: what the track allows; `span`: `plausibleSpan`. */
 export function fittingsOf(
@@ -41,7 +49,7 @@ export function fittingsOf(
 ): Laid[] {
 	const laid = mountings(car).map(({candidate, isFlipped}) => {
 		const fit = layOn(candidate.train.overall, humps, span);
-		const against = oddsOf(candidate, isFlipped, installed) + gearOdds(fit.gears, gears);
+		const against = oddsOf(candidate, isFlipped, installed) + gearOdds(fit.gears, gears) + columnOdds(fit.gears, humps);
 		return {candidate, flipped: isFlipped, ...fit, penalty: costOf(fit, humps.length, span) + against};
 	});
 	return laid.sort((one, other) => one.penalty - other.penalty);
@@ -73,9 +81,8 @@ function oddsOf({pair, gearbox}: Candidate, isFlipped: boolean, installed: Insta
 	if (installed === undefined) return notOnHand + (isFlipped ? oddsAgainst.otherTurned : 0);
 	const otherSet = gearbox.name === installed.gearbox ? 0 : oddsAgainst.otherSet;
 	if (samePair(pair, installed.pair)) return otherSet;
-	const own = samePair(flipped(pair), installed.pair);
-	const turned = own ? oddsAgainst.turned : isFlipped ? oddsAgainst.otherTurned : 0;
-	return notOnHand + otherSet + oddsAgainst.otherPair * (own ? 0.5 : 1) + turned;
+	if (samePair(flipped(pair), installed.pair)) return oddsAgainst.ownTurned + otherSet;
+	return oddsAgainst.otherPair + otherSet + notOnHand + (isFlipped ? oddsAgainst.otherTurned : 0);
 }
 
 function gearOdds(gears: Laid['gears'], allowed: GearRange | undefined): number {
@@ -87,6 +94,17 @@ function gearOdds(gears: Laid['gears'], allowed: GearRange | undefined): number 
 
 const costOf = ({residual, circumferenceFactor}: Lay, humps: number, span: number) =>
 	humps * (residual / humpSd) ** 2 + (Math.log(circumferenceFactor) / (span / 2)) ** 2;
+
+/** The gear column counts by the samples in which it says another gear. */
+function columnOdds(gears: Laid['gears'], humps: readonly Hump[]): number {
+	let [against, all] = [0, 0];
+	for (const [i, {samples, logged}] of humps.entries()) {
+		if (gears[i] === undefined || logged === undefined) continue;
+		all += samples;
+		if (logged !== gears[i]) against += samples;
+	}
+	return all === 0 ? 0 : (oddsAgainst.gearColumn * against) / all;
+}
 
 type Lay = Pick<Laid, 'gears' | 'circumferenceFactor' | 'residual'>;
 
@@ -105,6 +123,12 @@ function layOn(overall: readonly number[], humps: readonly Hump[], span: number)
 	return best;
 }
 
+/** Whether the ratios explain the humps once the circumference is so many times the documents', to within the span. */
+export function fitsAt(overall: readonly number[], humps: readonly Hump[], times: number, span: number): boolean {
+	const lay = settledFrom(overall.map(Math.log), humps, Math.log(times));
+	return lay.residual <= farthestResidual && Math.abs(Math.log(lay.circumferenceFactor / times)) <= span;
+}
+
 /** The largest hump decides to begin with; humps that then lie far off are strays, and do not move the rest. */
 function settledFrom(logs: readonly number[], humps: readonly Hump[], start: number): Lay {
 	const total = humps.reduce((sum, {samples}) => sum + samples, 0);
@@ -116,7 +140,8 @@ function settledFrom(logs: readonly number[], humps: readonly Hump[], start: num
 		const all = off.map((x, i) => ({x, weight: kept[i] ? humps[i]!.samples : 0}));
 		return all.reduce((sum, {x, weight}) => sum + weight * x, 0) / all.reduce((sum, {weight}) => sum + weight, 0);
 	};
-	const shift = shiftOf(near(start));
+	// From the largest hump's own place, so that a start that is off by the rollout does not make strays.
+	const shift = shiftOf(near(off[0]!));
 	const kept = near(shift);
 	const square = off.reduce((sum, x, i) => sum + humps[i]!.samples * Math.min(strayFrom, Math.abs(x - shift)) ** 2, 0);
 	return {
