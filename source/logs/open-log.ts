@@ -9,8 +9,9 @@ import {findTable, type Table, wantedHeaders} from './find-table.ts';
 import type {Head} from './head.ts';
 import type {ColumnUse, LogReading, LogRefused, RemarkData} from './reading.ts';
 import {sentenceOf} from './remark-text.ts';
-import type {RowPlan, Rows} from './row-reader.ts';
+import type {Rows} from './row-reader.ts';
 import {rowRemarks} from './row-remarks.ts';
+import type {RowPlan} from './row-table.ts';
 import {runFromRows} from './run-from-rows.ts';
 
 export type OpenLog = {
