@@ -11,7 +11,6 @@ import type {LogProblem} from './reading.ts';
 
 export type ColumnProblem = LogProblem & {readonly channel: ChannelName};
 
-/** As many headers as a message lists. */
 const mostListed = 24;
 
 const required = 'speed, rpm, and one of time and distance';
@@ -44,9 +43,9 @@ export function ambiguous(
 		kind: 'ambiguous',
 		channel,
 		where: `the column of ${channel}`,
-		found: `${candidates.length} columns that it may be: ${candidates.map(named).join(', ')}`,
+		found: `${candidates.length} columns that it may be: ${firstOf(candidates.map(named))}`,
 		allowed: 'one of them',
-		do: `Say which: ${options.join(', or ')}${isRequired ? '' : `; without it: ${columnOption(channel, 'none')}`}.`,
+		do: `Say which: ${firstOf(options, ', or ')}${isRequired ? '' : `; without it: ${columnOption(channel, 'none')}`}.`,
 		choice: {channel, values: isRequired ? values : [...values, 'none']},
 	};
 }
@@ -143,10 +142,12 @@ const optionFor = (channel: ChannelName, header: Header, headers: readonly Heade
 const named = ({written, column}: Header): string =>
 	written === '' ? `#${column} without a header` : `"${shortened(written)}" (#${column})`;
 
-function listed(headers: readonly Header[]): string {
-	const shown = headers.slice(0, mostListed).map(({written}) => `"${shortened(written)}"`);
-	const left = headers.length - shown.length;
-	return `${shown.join(', ')}${left > 0 ? ` and ${left} more` : ''}`;
+const listed = (headers: readonly Header[]): string => firstOf(headers.map(({written}) => `"${shortened(written)}"`));
+
+/** As many as a message lists. */
+function firstOf(texts: readonly string[], between = ', '): string {
+	const left = texts.length - mostListed;
+	return `${texts.slice(0, mostListed).join(between)}${left > 0 ? ` and ${left} more` : ''}`;
 }
 
 /** The header that is spelled most like a usual one. */

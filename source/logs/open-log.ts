@@ -4,7 +4,16 @@ import type {AskedColumns, ChannelName, RememberedColumns} from './channels.ts';
 import {type Choice, chooseColumns} from './choose-columns.ts';
 import {decideUnits, type UsedColumn} from './decide-units.ts';
 import {decimalsIn} from './decimals.ts';
-import {deadSensor, mixedDecimals, noHeader, noNumbers, noRows, notText, tooLongLine} from './file-problems.ts';
+import {
+	deadSensor,
+	mixedDecimals,
+	noHeader,
+	noNumbers,
+	noRows,
+	notText,
+	runsBackward,
+	tooLongLine,
+} from './file-problems.ts';
 import {findTable, type Table, wantedHeaders} from './find-table.ts';
 import type {Head} from './head.ts';
 import type {ColumnUse, LogReading, LogRefused, RemarkData} from './reading.ts';
@@ -121,6 +130,7 @@ function finished(
 	const empty = noNumbers(rows, columns);
 	if (empty) return refused(empty);
 	const made = runFromRows(rows, columns);
+	if ('backward' in made) return refused(runsBackward(made.backward, made.rows, rows.samples));
 	if ('dead' in made) return refused(deadSensor(made.dead, columns));
 	const {run, remarks} = made;
 	const used = columns.filter(({channel}) => channel !== 'throttle' || run.throttle);

@@ -43,7 +43,8 @@ export type LogProblem = {
 		| 'decimals'
 		| 'asked'
 		| 'noNumbers'
-		| 'misshapen';
+		| 'misshapen'
+		| 'backward';
 	/** Like `line 3` or `the column of speed`. */
 	readonly where: string;
 	readonly found: string;
