@@ -5,6 +5,7 @@ import type {ChannelName} from './channels.ts';
 import {columnOption} from './column-option.ts';
 import type {FoundAsked} from './find-asked.ts';
 import {usualNames} from './header-names.ts';
+import {nameFor, valueFor} from './header-values.ts';
 import type {Header} from './headers.ts';
 import {unitChoices} from './log-units.ts';
 import type {LogProblem} from './reading.ts';
@@ -117,23 +118,6 @@ export function unknownUnit(
 		found: `the unit "${shortened(unit)}"`,
 		do: `If the numbers are in another unit than the log says: ${example}, with the unit in the brackets.`,
 	};
-}
-
-/** What one types to take this column: its header, or its number where others have the same. */
-function valueFor(header: Header, headers: readonly Header[]): string {
-	return isClear(header.written, headers) ? header.written : `#${header.column}`;
-}
-
-/** The same without the unit in the header. */
-function nameFor(header: Header, headers: readonly Header[]): string {
-	return isClear(header.name, headers) ? header.name : `#${header.column}`;
-}
-
-const plainText = /^[\p{L}\p{N}\p{P}\p{S} ]{1,60}$/u;
-
-function isClear(text: string, headers: readonly Header[]): boolean {
-	if (!plainText.test(text) || text.toLowerCase() === 'none') return false;
-	return headers.filter(({written, name}) => written === text || name === text).length === 1;
 }
 
 const optionFor = (channel: ChannelName, header: Header, headers: readonly Header[]): string =>

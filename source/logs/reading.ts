@@ -9,7 +9,7 @@ export type LogRead = {
 	readonly run: LoggedRun;
 	/** Of each channel that is used. */
 	readonly columns: Partial<Record<ChannelName, ColumnUse>>;
-	/** To be handed in as `remembered` with the next log of the same car. */
+	/** What the names of the columns alone did not tell: to be handed in as `remembered` with the next log of the same car. */
 	readonly remember: RememberedColumns;
 	readonly remarks: readonly LogRemark[];
 };

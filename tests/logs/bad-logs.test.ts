@@ -292,6 +292,6 @@ describe('nothing in a file reaches the terminal as it is', () => {
 	test('headers that are names of an object', async () => {
 		const log = await read(table('Time [s],__proto__,Speed [m/s],constructor,RPM', 20, i => `${i / 10},1,50,2,5000`));
 		expect(numbers(log.run.rpm, 2)).toEqual([5000, 5000]);
-		expect(Object.keys(log.remember)).toEqual(['time', 'speed', 'rpm']);
+		expect(Object.keys(log.columns)).toEqual(['time', 'speed', 'rpm']);
 	});
 });
