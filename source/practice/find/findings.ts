@@ -253,9 +253,7 @@ export type NoteCode =
 	| 'slipHeld'
 	| 'noCircumference'
 	| 'farCircumference'
-	| 'wheelspin'
-	| 'deadChannel'
-	| 'tooShort';
+	| 'wheelspin';
 
 /** Something to know beside the numbers, as a sentence. */
 export type Note = {readonly code: NoteCode; readonly text: string};
