@@ -43,7 +43,7 @@ type Cut = {
 
 function cutAndMatch({run, rateHz}: Channels, {track}: Plan, runs: readonly Measured[]): Cut {
 	const byColumn = lapsByColumn(run);
-	const all: LapCut[] = [{number: 1, from: 0, to: run.samples}];
+	const all: LapCut[] = run.samples === 0 ? [] : [{number: 1, from: 0, to: run.samples}];
 	if (runs.length === 0) {
 		return {cuts: byColumn ?? all, lapsFrom: byColumn ? 'column' : 'none', where: undefined, match: undefined};
 	}
