@@ -1,6 +1,7 @@
 /** From the name of what a key does to what happens to the session, or outside of it. */
 import type {Ranked} from '../../planning/rank-rack.ts';
-import type {ActionName, Scope} from '../key-table.ts';
+import type {ActionName} from '../keys/key-table.ts';
+import type {Scope} from '../keys/scopes.ts';
 import {editLine} from '../parts/edit-line.ts';
 import type {Action} from './action.ts';
 import type {Choice} from './catalog.ts';
@@ -90,6 +91,8 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 			return {do: 'situate', situation: next([undefined, ...scene.situations], session.situation, -1)};
 		case 'why':
 			return {do: 'go', place: {at: 'why', scroll: 0}};
+		case 'life':
+			return {do: 'go', place: {at: 'life', scroll: 0}};
 		case 'ranking':
 			return place.at === 'ranking' ? (scene.isWorking ? 'stop' : undefined) : {do: 'go', place: {at: 'ranking'}};
 		case 'pictures':
