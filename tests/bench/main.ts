@@ -2,6 +2,7 @@
 import {Figures} from './budgets.ts';
 import {line, machine} from './harness.ts';
 import {benchLoad} from './load.ts';
+import {benchLogs} from './logs.ts';
 import {benchOneStraight} from './one-straight.ts';
 import {benchProcesses} from './processes.ts';
 import {benchGrowth, benchRack} from './rack.ts';
@@ -24,6 +25,8 @@ line();
 benchProcesses(figures);
 line();
 await benchScreen(process.cwd(), figures);
+line();
+benchLogs(figures, seed);
 line();
 if (!figures.conclude()) process.exitCode = 1;
 if (words.includes('--write-readme')) writeReadme(figures.measured);
