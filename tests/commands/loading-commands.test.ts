@@ -63,6 +63,25 @@ describe('droprack load', () => {
 		]);
 	});
 
+	test('tracks that were saved with different cars need one to be named', async () => {
+		const track = JSON.parse(readFileSync(new URL('../../tracks/tarrowdale.json', import.meta.url), 'utf8'));
+		const saved = async (name: string, car: string) => {
+			const file = join(place, `${name}.json`);
+			writeFileSync(file, JSON.stringify({...track, name}));
+			expect((await ask(['save', file, '--car', car])).status).toBe(0);
+		};
+		const other = join(place, 'other-car.json');
+		const demo = readFileSync(new URL('../../tracks/cars/demo.json', import.meta.url), 'utf8');
+		writeFileSync(other, JSON.stringify({...JSON.parse(demo), name: 'Other'}));
+		await ask(['save', other]);
+		await saved('Alpha', 'demo');
+		await saved('Beta', 'Other');
+		const {status, err} = await ask(['load', 'Alpha', 'Beta']);
+		expect(status).toBe(2);
+		expect(err).toMatch(/saved with different cars: .*Other.*--car says which/);
+		expect((await ask(['load', 'Alpha', 'Beta', '--car', 'demo'])).status).toBe(0);
+	});
+
 	test('everything that is wrong with any track is told', async () => {
 		const {status, err} = await ask(['load', 'nowhere', 'tarrowdal', '-'], '{"kind": "car"}');
 		expect(status).toBe(2);
