@@ -1,6 +1,7 @@
 /** Every command once: parsing, help and the messages about unknown ones are made from this table. */
 import type {Command} from './command.ts';
 import {lifeCommands} from './life-commands.ts';
+import {loadingCommands} from './loading-commands.ts';
 import {oddsCommands} from './odds-commands.ts';
 import {sharingCommands} from './sharing-commands.ts';
 import {storeCommands} from './store-commands.ts';
@@ -91,6 +92,7 @@ export const commands: readonly Command[] = [
 	...oddsCommands,
 	...storeCommands,
 	...sharingCommands,
+	...loadingCommands,
 ];
 
 /** The command of that name. */

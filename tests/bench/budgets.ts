@@ -29,6 +29,12 @@ export const budgets = {
 	pairs: {what: 'Ranking 10 × as many pairs', kind: 'most', bound: linear, unit: '×'},
 	straights: {what: 'Ranking 10 × as many straights', kind: 'most', bound: linear, unit: '×'},
 	situations: {what: 'Ranking 10 × as many situations', kind: 'most', bound: linear, unit: '×'},
+	load: {
+		what: 'A load list of 20 tracks and 80 pairs, against ranking the same tracks',
+		kind: 'most',
+		bound: 1.5,
+		unit: '×',
+	},
 	rankProcess: {what: '`droprack rank` as a process, against `node -e 1`', kind: 'most', bound: 3, unit: '×'},
 	tracksProcess: {what: '`droprack tracks` as a process, against `node -e 1`', kind: 'most', bound: 1.5, unit: '×'},
 	rankMemory: {what: 'Peak memory of `droprack rank`', kind: 'most', bound: 80, unit: 'MB'},
@@ -41,6 +47,13 @@ export const budgets = {
 	editBytes: {what: 'What an edit sends to the terminal', kind: 'most', bound: 6000, unit: 'bytes'},
 	heldKeys: {what: 'Frames for a key held down, 100 repeats', kind: 'least', bound: 100, unit: 'frames'},
 	manyKeysMemory: {what: 'Memory after 2000 keys', kind: 'most', bound: 140, unit: 'MB'},
+	logSpeed: {
+		what: 'Speed of reading a log of 1.4 million rows and 20 columns, against udsv alone on the same file',
+		kind: 'least',
+		bound: 1 / 3,
+		unit: '×',
+	},
+	logMemory: {what: 'Peak memory of reading it', kind: 'most', bound: 200, unit: 'MB'},
 } as const satisfies Record<string, Budget>;
 
 export type BudgetName = keyof typeof budgets;

@@ -13,6 +13,8 @@ export const scopes = {
 	history: 'In the history of the track',
 	draft: 'Adding to the history',
 	differences: 'In the differences',
+	load: 'In the load list',
+	gears: 'Among gears to build',
 	field: 'Typing into a field',
 	margin: 'Typing the least margin',
 	risk: 'Typing the risk',
