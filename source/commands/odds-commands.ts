@@ -10,12 +10,12 @@ const track = {
 export const oddsCommands: readonly Command[] = [
 	{
 		name: 'odds',
-		summary: 'chance of passing the RPM limit and of being the fastest, for every pair and set; what to measure next',
+		summary: 'how sure the choice is: chances of every row, what to measure',
 		argument: track,
 		options: ['car', 'risk', 'seed', 'pair', 'gearbox', 'top', ...everywhere],
 		examples: [
-			{line: 'droprack odds friday.json', gives: 'how sure the choice is, and what would make it surer'},
-			{line: 'droprack odds friday.json --risk 5% --pair 33/38', gives: 'within a risk, and what one tooth is worth'},
+			{line: 'droprack odds friday.json', gives: 'how sure it is, and what would make it surer'},
+			{line: 'droprack odds friday.json --risk 5% --pair 33/38', gives: 'within a risk; one tooth'},
 		],
 		load: async () => (await import('./odds.ts')).odds,
 	},
