@@ -58,6 +58,8 @@ const rowsAtOnce = 12;
 export type OddsProgress = Progress & {
 	/** The answer so far, worked out when it is asked for; undefined before there is one. */
 	readonly answer: () => Odds | undefined;
+	/** Whether every row that matters has been through the draws; what follows makes up for the others. */
+	readonly isSettled: boolean;
 };
 
 /** All steps at once. */
@@ -90,7 +92,7 @@ export function* oddsSteps(
 	const plan = planFor(car, track, {situation: options.situation});
 	if (!plan.ok) return plan;
 	const run = new OddsRun(car, track, plan.value, options);
-	for (const _ of run.steps()) yield {...run.progress, answer: () => run.answer(false)};
+	for (const _ of run.steps()) yield {...run.progress, answer: () => run.answer(false), isSettled: run.isSettled};
 	return done(run.answer(true)!);
 }
 
@@ -111,6 +113,7 @@ class OddsRun {
 	#day: {readonly draw: number; readonly day: Day} | undefined;
 	#pilotBest: Best | undefined;
 	#done = 0;
+	isSettled = false;
 
 	constructor(car: Car, track: Track, plan: Plan, options: OddsOptions) {
 		this.#plan = plan;
@@ -152,6 +155,8 @@ class OddsRun {
 			rows.filter(row => this.#standing(row, rows) === 'matters'),
 			this.#draws,
 		);
+		this.isSettled = true;
+		yield;
 		yield* this.#advance(
 			rows.filter(row => this.#standing(row, rows) !== 'dropped'),
 			this.#draws,
