@@ -20,16 +20,12 @@ export function runStraightPlainly(vehicle: Vehicle, train: GearTrain, course: C
 	return run(gears, course, startGears => {
 		const carry: Carry = (gear, fromMps, goal) => travel(gears.motion(gear), fromMps, goal);
 		return startGears.flatMap(first =>
-			gearsFrom(first, course.highestGear).map(last => sequence(gears, course, first, last, carry)),
+			gearsFrom(first, course.highestGear).flatMap(last => sequence(gears, course, first, last, carry) ?? []),
 		);
 	});
 }
 
-function run(
-	gears: RoadGears,
-	course: Course,
-	finishesOf: (startGears: number[]) => (Finish | undefined)[],
-): StraightRun {
+function run(gears: RoadGears, course: Course, finishesOf: (startGears: number[]) => Finish[]): StraightRun {
 	const outcome = outcomeOf(gears, course, finishesOf);
 	if (outcome.kind !== 'ran') return outcome;
 	const {chosen, fastest} = outcome;
@@ -43,15 +39,13 @@ export type RunOutcome =
 	| {readonly kind: Exclude<StraightRun['kind'], 'ran'>};
 
 /** How a straight is run with any kind of gears, by the sequences that `finishesOf` gives for the start gears. */
-export function outcomeOf(
-	gears: Gears,
-	course: Course,
-	finishesOf: (startGears: number[]) => (Finish | undefined)[],
-): RunOutcome {
+export function outcomeOf(gears: Gears, course: Course, finishesOf: (startGears: number[]) => Finish[]): RunOutcome {
 	if (brakingDistanceM(course.exitMps, brakingOf(course)) > course.lengthM) return {kind: 'cannotBrake'};
-	const startGears = gearsFrom(course.lowestGear, course.highestGear).filter(gear => mayStart(gears, course, gear));
+	const startGears: number[] = [];
+	for (let gear = course.lowestGear; gear <= course.highestGear; gear++)
+		if (mayStart(gears, course, gear)) startGears.push(gear);
 	if (startGears.length === 0) return {kind: 'overLimit'};
-	const finishes = finishesOf(startGears).filter(finish => finish !== undefined);
+	const finishes = finishesOf(startGears);
 	if (finishes.length === 0) return {kind: 'stops'};
 	return {kind: 'ran', chosen: chosenOf(finishes, gears.vehicle.sameTimeS), fastest: fastestOf(finishes)};
 }

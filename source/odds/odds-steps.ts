@@ -46,12 +46,12 @@ export const mostDrawsUnlessGiven = 4096;
 const firstRows = 8;
 const firstDraws = replicates;
 /** After so many draws it is seen which rows matter. */
-const pilotDraws = 4 * replicates;
+const pilotDraws = 3 * replicates;
 /** A row waits where it was never first or over the limit in the pilot and is so many standard deviations of the difference behind. */
-const farBehind = 3;
+const farBehind = 1.5;
 /** So far behind it is dropped; see `oddsSteps`. */
 const hopeless = 10;
-const safe = 5;
+const safeMargin = 5;
 /** So many rows at a time: a few milliseconds on the longest tracks. */
 const rowsAtOnce = 12;
 
@@ -78,7 +78,7 @@ export function oddsOf(car: Car, track: Track, options: OddsOptions = {}): Outco
  * - In a draw in which a row is over the limit at one place it is over and not allowed, whatever it does at the others. Once
  *   it has been over in all of the pilot, that place is looked at first, and the rest only where it is not over there.
  * - A safe row that on the mean is `hopeless` standard deviations of its own lag behind the best safe row of each draw. Safe:
- *   never over in the pilot, and the highest RPM `safe` standard deviations below the limit on the mean. To
+ *   never over in the pilot, and the highest RPM `safeMargin` standard deviations below the limit on the mean. To
  *   be first in a draw, either the safe rows are over in it, or the lag is 0 or less. Whatever the distributions, Cantelli's
  *   inequality bounds the chance of what lies k standard deviations off the mean by 1/(1 + k²): together below 5 %; for
  *   distributions anywhere near normal, as sums of many small effects are, below 1e-6. The row keeps its pilot draws and the
@@ -111,7 +111,7 @@ class OddsRun {
 	readonly #rowDraws: RowDraws;
 	readonly #asItStands: Day;
 	#day: {readonly draw: number; readonly day: Day} | undefined;
-	#pilotBest: Best | undefined;
+	#pilotBest: {readonly neverOver: Best; readonly safe: Best} | undefined;
 	#done = 0;
 	isSettled = false;
 
@@ -218,19 +218,26 @@ class OddsRun {
 
 	#isSafe({overCount, highestRpm, draws}: RowTally): boolean {
 		const rpm = spreadOf(highestRpm, Math.min(draws, pilotDraws));
-		return overCount === 0 && rpm !== null && this.#plan.limitRpm - rpm.mean > safe * rpm.sd;
+		return overCount === 0 && rpm !== null && this.#plan.limitRpm - rpm.mean > safeMargin * rpm.sd;
 	}
 
 	/** After the pilot: what a row is worth. */
 	#standing(row: RowTally, rows: readonly RowTally[]): 'matters' | 'can wait' | 'dropped' {
 		const {overCount, draws} = row;
 		if (overCount > 0) return overCount < draws ? 'matters' : 'can wait';
-		this.#pilotBest ??= bestOf(
-			rows.filter(one => this.#isSafe(one)),
-			pilotDraws,
-		);
-		const deviations = deviationsBehind(row, this.#pilotBest);
-		return deviations > hopeless && this.#isSafe(row) ? 'dropped' : deviations > farBehind ? 'can wait' : 'matters';
+		this.#pilotBest ??= {
+			neverOver: bestOf(
+				rows.filter(one => one.overCount === 0),
+				pilotDraws,
+			),
+			safe: bestOf(
+				rows.filter(one => this.#isSafe(one)),
+				pilotDraws,
+			),
+		};
+		const {neverOver, safe} = this.#pilotBest;
+		if (this.#isSafe(row) && deviationsBehind(row, safe) > hopeless) return 'dropped';
+		return deviationsBehind(row, neverOver) > farBehind ? 'can wait' : 'matters';
 	}
 
 	/** Rows that may be first, or whose chance may be on either side of the risk. */

@@ -34,7 +34,9 @@ export async function benchOdds(figures: Figures): Promise<void> {
 	const {odds, rows} = settled(car, track, order);
 	if (rows.length < leastRows) throw new Error(`only ${rows.length} rows that can be first or are open`);
 	const worlds = worldsOf(car, track);
-	line(`Odds at ${largest}: ${rows.length} rows that can be first or are open × ${draws} draws × all situations`);
+	line(
+		`Odds at ${largest}: ${rows.length} rows that were first, open or near in the first draws × ${draws} draws × all situations`,
+	);
 	line(`  ${agreeing(car, track, worlds, rows)}`);
 	const timings = timedInTurns(
 		{
@@ -56,6 +58,7 @@ export async function benchOdds(figures: Figures): Promise<void> {
 	const slice = Math.min(longestSliceMs(car, track, order), longestSliceMs(car, track, order));
 	line(`  longest slice ${slice.toFixed(1)} ms; ${odds.rows.length} rows in all`);
 	figures.hold('odds', timings.odds.minMs / plainMs);
+	figures.hold('oddsTime', timings.odds.minMs / timings.node.minMs);
 	figures.hold('oddsFirst', timings.first.minMs / timings.node.minMs);
 	figures.hold('oddsSlice', slice / timings.node.minMs);
 }

@@ -7,14 +7,14 @@
  */
 import {brentRoot} from '../../drivetrain/brent.ts';
 import {coast} from '../../drivetrain/coast.ts';
-import {gripLimitN, resistanceN} from '../../drivetrain/forces.ts';
+import type {RoadForces} from '../../drivetrain/forces.ts';
 import {mostMps2} from '../../drivetrain/least-time.ts';
 import {type Gears, RoadGears} from '../../drivetrain/road-gears.ts';
 import type {Vehicle} from '../../drivetrain/straight.ts';
 import {brakingDistanceM, type Goal, type Travel} from '../../drivetrain/travel.ts';
 import type {RoadTable} from './road-table.ts';
 import {cellMps, lastCell, nodeMps} from './speed-grid.ts';
-import type {CellTable, ThrustTables} from './vehicle-table.ts';
+import {type CellTable, inertiaFactor, type ThrustTables, torqueAt} from './vehicle-table.ts';
 
 /** Over a cell the acceleration may change by this share of itself; more is the exact solver's. */
 const steepest = 0.2;
@@ -27,12 +27,14 @@ export class QuickGears implements Gears {
 	readonly vehicle: Vehicle;
 	readonly #tables: ThrustTables;
 	readonly #road: RoadTable;
+	readonly #forces: RoadForces;
 	readonly #shifts: Shift[] = [];
 	#exact: RoadGears | undefined;
 	/** What the cells in the tables must carry to be of this road. */
 	readonly #stamp: number;
 	/** At the node asked for last: by how much what the engine gives is above what grip holds, m/s². */
 	#surplus = 0;
+	readonly #travel = {speedMps: 0, distanceM: 0, timeS: 0, why: 'end' as Travel['why']};
 	/** Of the stretch integrated last. */
 	#distanceM = 0;
 	#timeS = 0;
@@ -41,6 +43,7 @@ export class QuickGears implements Gears {
 		this.vehicle = tables.table.vehicle;
 		this.#tables = tables;
 		this.#road = road;
+		this.#forces = road.forces;
 		this.#stamp = tables.nextStamp();
 	}
 
@@ -77,18 +80,20 @@ export class QuickGears implements Gears {
 		return enteredMps <= planned.speedMps ? planned : this.#shiftAt(enteredMps);
 	}
 
+	/** What it returns is good until the next call. */
 	carry(gear: number, fromMps: number, goal: Goal): Travel {
 		const {braking, toMps} = goal;
+		const entryMps = braking === undefined ? Number.POSITIVE_INFINITY : braking.entryMps;
 		const cells = this.#tables.gear(gear);
 		let speedMps = fromMps;
 		let distanceM = 0;
 		let timeS = 0;
-		if (speedMps >= toMps && this.#mps2(gear, speedMps) >= 0) return {speedMps, distanceM, timeS, why: 'speed'};
-		if (goal.distanceM - brakingDistanceM(speedMps, braking) <= 0) return {speedMps, distanceM, timeS, why: 'end'};
+		if (speedMps >= toMps && this.#mps2(gear, speedMps) >= 0) return this.#told(speedMps, distanceM, timeS, 'speed');
+		if (goal.distanceM - brakingDistanceM(speedMps, braking) <= 0) return this.#told(speedMps, distanceM, timeS, 'end');
 		for (let cell = Math.floor(speedMps / cellMps); cell < lastCell; ) {
 			const top = (cell + 1) * cellMps;
 			let far = Math.min(toMps, top);
-			if (braking !== undefined && braking.entryMps > speedMps && braking.entryMps < far) far = braking.entryMps;
+			if (entryMps > speedMps && entryMps < far) far = entryMps;
 			if (far === top && speedMps === cell * cellMps) {
 				if (cells.stamp[cell] !== this.#stamp) this.#keepCell(gear, cells, cell);
 				this.#distanceM = cells.distanceM[cell]!;
@@ -96,12 +101,13 @@ export class QuickGears implements Gears {
 			} else if (far === top) this.#startCell(gear, cells, speedMps, cell);
 			else this.#integrate(gear, speedMps, this.#mps2(gear, speedMps), far, this.#mps2(gear, far));
 			if (Number.isNaN(this.#timeS)) break;
-			if (distanceM + this.#distanceM + brakingDistanceM(far, braking) > goal.distanceM)
-				return this.#meet(gear, {speedMps, distanceM, timeS, why: 'end'}, far, goal);
+			const brakesM = far > entryMps ? brakingDistanceM(far, braking) : 0;
+			if (distanceM + this.#distanceM + brakesM > goal.distanceM)
+				return this.#meet(gear, speedMps, distanceM, timeS, far, goal);
 			distanceM += this.#distanceM;
 			timeS += this.#timeS;
 			speedMps = far;
-			if (speedMps >= toMps) return {speedMps, distanceM, timeS, why: 'speed'};
+			if (speedMps >= toMps) return this.#told(speedMps, distanceM, timeS, 'speed');
 			if (far === top) cell++;
 		}
 		return this.#onExactly(gear, {speedMps, distanceM, timeS, why: 'end'}, goal);
@@ -114,28 +120,30 @@ export class QuickGears implements Gears {
 	}
 
 	/** Where inside a stretch the distance ends or the brakes go on: one step of Newton's method; what it leaves is driven evenly. */
-	#meet(gear: number, here: Travel, farMps: number, goal: Goal): Travel {
+	#meet(gear: number, fromMps: number, goneM: number, goneS: number, farMps: number, goal: Goal): Travel {
 		const {braking} = goal;
-		const leftM = goal.distanceM - here.distanceM;
-		const room = leftM - brakingDistanceM(here.speedMps, braking);
+		const leftM = goal.distanceM - goneM;
+		const room = leftM - brakingDistanceM(fromMps, braking);
 		const over = this.#distanceM + brakingDistanceM(farMps, braking) - leftM;
-		const guess = here.speedMps + ((farMps - here.speedMps) * room) / (room + over);
-		const hereMps2 = this.#mps2(gear, here.speedMps);
+		const guess = fromMps + ((farMps - fromMps) * room) / (room + over);
 		const guessMps2 = this.#mps2(gear, guess);
-		this.#integrate(gear, here.speedMps, hereMps2, guess, guessMps2);
+		this.#integrate(gear, fromMps, this.#mps2(gear, fromMps), guess, guessMps2);
 		const brakes = braking !== undefined && guess > braking.entryMps ? braking.brakingMps2 : Infinity;
 		const step = (leftM - this.#distanceM - brakingDistanceM(guess, braking)) / (guess / guessMps2 + guess / brakes);
-		const speed = Math.min(farMps, Math.max(here.speedMps, guess + step));
+		const speed = Math.min(farMps, Math.max(fromMps, guess + step));
 		// So near to the guess the acceleration is even.
 		const gainS = (speed - guess) / guessMps2;
-		const [distanceM, timeS] = [this.#distanceM + (gainS * (speed + guess)) / 2, this.#timeS + gainS];
-		const leftoverM = leftM - distanceM - brakingDistanceM(speed, braking);
-		return {
-			speedMps: speed,
-			distanceM: here.distanceM + distanceM + leftoverM,
-			timeS: here.timeS + timeS + leftoverM / speed,
-			why: 'end',
-		};
+		const furtherM = this.#distanceM + (gainS * (speed + guess)) / 2;
+		const leftoverM = leftM - furtherM - brakingDistanceM(speed, braking);
+		return this.#told(speed, goneM + furtherM + leftoverM, goneS + this.#timeS + gainS + leftoverM / speed, 'end');
+	}
+
+	#told(speedMps: number, distanceM: number, timeS: number, why: Travel['why']): Travel {
+		this.#travel.speedMps = speedMps;
+		this.#travel.distanceM = distanceM;
+		this.#travel.timeS = timeS;
+		this.#travel.why = why;
+		return this.#travel;
 	}
 
 	#shiftAt(speedMps: number): Shift {
@@ -165,15 +173,19 @@ export class QuickGears implements Gears {
 		return Math.min(powered, held);
 	}
 
+	/** The acceleration at any speed. All in one place, since nothing is asked for as often. */
 	#mps2(gear: number, speedMps: number): number {
-		const {forces} = this.#road;
-		const {vehicle} = this;
-		const turns = this.#tables.table.turnsAt(speedMps);
-		const perInertia = 4 * Math.PI * Math.PI * turns * turns;
-		const resistance = resistanceN(forces, speedMps);
-		const powered = this.#tables.poweredAt(gear, speedMps, turns, perInertia, resistance);
-		const held =
-			(gripLimitN(forces, speedMps) - resistance) / (vehicle.massKg + perInertia * vehicle.undrivenInertiaKgM2);
+		const {headwindMps, fixedN, dragKgPerM, rollingKgPerM, gripN, gripKgPerM} = this.#forces;
+		const table = this.#tables.table;
+		const turns = 1 / (table.rolloutM * (1 + table.growth * speedMps * speedMps));
+		const perInertia = inertiaFactor * turns * turns;
+		const air = speedMps + headwindMps;
+		const square = air * air;
+		const resistance = fixedN + (air < 0 ? -dragKgPerM : dragKgPerM) * square + rollingKgPerM * square;
+		const here = this.#tables.gear(gear);
+		const thrust = here.thrustFactor * torqueAt(table.torqueNm, here.rpmFactor * speedMps * turns, here) * turns;
+		const powered = (thrust - resistance) / (table.massKg + perInertia * here.drivenKgM2);
+		const held = (gripN + gripKgPerM * square - resistance) / (table.massKg + perInertia * table.undrivenKgM2);
 		return Math.min(powered, held);
 	}
 

@@ -6,6 +6,9 @@ import type {GearTrain, Vehicle} from '../../drivetrain/straight.ts';
 import {growthReferenceMps, speedAtRpmMps} from '../../drivetrain/tire.ts';
 import {lastCell, nodeSpeeds, nodes} from './speed-grid.ts';
 
+/** (2π)²: what an inertia counts as mass, in turns per meter squared. */
+export const inertiaFactor = 4 * Math.PI * Math.PI;
+
 /** What of a vehicle no pair and set changes. */
 export class VehicleTable {
 	readonly vehicle: Vehicle;
@@ -16,14 +19,22 @@ export class VehicleTable {
 	/** 1/m_g, the mass that grip moves: the car and its undriven wheels. */
 	readonly perHeldKg = new Float64Array(nodes);
 	readonly peakTorqueNm: number;
+	readonly rolloutM: number;
+	readonly massKg: number;
+	readonly undrivenKgM2: number;
+	readonly torqueNm: MonotoneCubic;
 
 	constructor(vehicle: Vehicle) {
 		this.vehicle = vehicle;
+		this.rolloutM = vehicle.rolloutM;
+		this.massKg = vehicle.massKg;
+		this.undrivenKgM2 = vehicle.undrivenInertiaKgM2;
+		this.torqueNm = vehicle.torqueNm;
 		this.growth = vehicle.growth / (growthReferenceMps * growthReferenceMps);
 		this.peakTorqueNm = peakTorqueNm(vehicle);
 		for (let node = 0; node < nodes; node++) {
 			const turns = this.turnsAt(nodeSpeeds[node]!);
-			const perInertia = 4 * Math.PI * Math.PI * turns * turns;
+			const perInertia = inertiaFactor * turns * turns;
 			this.turnsPerM[node] = turns;
 			this.perInertia[node] = perInertia;
 			this.perHeldKg[node] = 1 / (vehicle.massKg + perInertia * vehicle.undrivenInertiaKgM2);
@@ -120,16 +131,6 @@ export class ThrustTables {
 		return (gearTable.thrustN[node]! - resistanceN) * gearTable.perKg[node]!;
 	}
 
-	/** The same at any speed, with 1/C and (2π/C)² there. */
-	poweredAt(gear: number, speedMps: number, turns: number, perInertia: number, resistanceN: number): number {
-		const {vehicle} = this.table;
-		const gearTable = this.#gears[gear - 1]!;
-		const torque = torqueAt(vehicle.torqueNm, gearTable.rpmFactor * speedMps * turns, gearTable);
-		return (
-			(gearTable.thrustFactor * torque * turns - resistanceN) / (vehicle.massKg + perInertia * gearTable.drivenKgM2)
-		);
-	}
-
 	#fill(gear: GearTable, node: number): void {
 		const {vehicle, turnsPerM, perInertia} = this.table;
 		const turns = turnsPerM[node]!;
@@ -140,7 +141,7 @@ export class ThrustTables {
 }
 
 /** As `valueAt` of the curve, remembering the cell in the gear: neighbors are asked for in a row. */
-function torqueAt({x, coefficients: c, last}: MonotoneCubic, rpm: number, gear: {cell: number}): number {
+export function torqueAt({x, coefficients: c, last}: MonotoneCubic, rpm: number, gear: {cell: number}): number {
 	if (rpm <= x[0]!) return c[0]!;
 	if (rpm >= x[x.length - 1]!) return last;
 	if (rpm < x[gear.cell]! || rpm >= x[gear.cell + 1]!) gear.cell = cellOf(x, rpm);
