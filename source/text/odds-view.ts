@@ -3,8 +3,8 @@ import type {BreakEven, Neighbor, OneTooth, ToothRow} from '../odds/one-tooth.ts
 import type {Matters, Odds, OddsRow} from '../odds/results.ts';
 import type {Setting} from '../planning/results.ts';
 import {type Block, type Cell, cell, gap, type Making, tableOf, text} from './blocks.ts';
+import {chanceText, decisionSentences, inputLines, mattersSentences, percent} from './chances-view.ts';
 import {caution, type Heading, headingView} from './heading-view.ts';
-import {chanceText, decisionSentences, inputLines, mattersSentences, percent} from './odds-words.ts';
 import {absent, fixed, rpmDown, rpmUp, signed, type UnitSystem, type Units} from './units.ts';
 
 export type OddsAnswer = {

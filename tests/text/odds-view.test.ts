@@ -1,6 +1,6 @@
 import {describe, expect, test} from 'vitest';
 import type {Matters, Odds, OddsRow} from '../../source/odds/results.ts';
-import {decisionSentences, inputLines, mattersSentences, sdText} from '../../source/text/odds-words.ts';
+import {decisionSentences, inputLines, mattersSentences, sdText} from '../../source/text/chances-view.ts';
 
 const row = (pair: string, over: number, first: number): OddsRow => ({
 	pair,

@@ -5,7 +5,7 @@ import {oneToothSteps} from '../../odds/one-tooth.ts';
 import {type RiskRow, riskOrder} from '../../odds/risk-order.ts';
 import type {Stated} from '../../odds/stated.ts';
 import {type Ranked, rowName} from '../../planning/rank-rack.ts';
-import {riskView} from '../../text/odds-words.ts';
+import {riskView} from '../../text/chances-view.ts';
 import {current} from './documents.ts';
 import {readCarOf, readTrackOf} from './forms.ts';
 import type {OddsAsked, OddsSoFar} from './odds-asked.ts';

@@ -2,8 +2,8 @@
 
 import {visible} from '../../documents/visible.ts';
 import type {Setting} from '../../planning/results.ts';
+import {percent} from '../../text/chances-view.ts';
 import {airWords} from '../../text/heading-view.ts';
-import {percent} from '../../text/odds-words.ts';
 import {rpm, rpmDown, seconds, unitsOf} from '../../text/units.ts';
 import {type Piece, type Pieces, piece, spread} from '../parts/pieces.ts';
 import type {Answer} from '../session/answer.ts';

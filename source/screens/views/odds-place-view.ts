@@ -3,9 +3,9 @@
 import type {OddsRow} from '../../odds/results.ts';
 import {rowName} from '../../planning/rank-rack.ts';
 import {type Block, cell, gap, tableOf, text} from '../../text/blocks.ts';
+import {decisionSentences, inputLines, mattersSentences, rowText} from '../../text/chances-view.ts';
 import {layOut} from '../../text/layout.ts';
 import {oddsColumns, toothView} from '../../text/odds-view.ts';
-import {decisionSentences, inputLines, mattersSentences, rowText} from '../../text/odds-words.ts';
 import {type UnitSystem, unitsOf} from '../../text/units.ts';
 import {listWindow} from '../parts/list-window.ts';
 import {line, type Pieces} from '../parts/pieces.ts';

@@ -56,9 +56,17 @@ export const mattersSentences = ({rows, margin, difference}: Matters): string[] 
 	return sentences.length > 0 ? sentences : ['No number by itself moves the margin or the choice much.'];
 };
 
+/** What is not decided, as a sentence; nothing where all is. */
+export const doubtsOf = ({decision: {isDecided, open}, isComplete}: Odds): string[] => {
+	if (isDecided) return [];
+	const advice = isComplete ? ' More draws would not be worth it; better numbers would.' : '';
+	return [`${isComplete ? 'Not decided' : 'Not decided yet'}: ${open.join('; ')}.${advice}`];
+};
+
 /** What the answer comes to, and what is open. */
-export const decisionSentences = ({decision, risk, rows, isComplete}: Odds): string[] => {
-	const {row, next, isDecided, open} = decision;
+export const decisionSentences = (odds: Odds): string[] => {
+	const {decision, risk, rows} = odds;
+	const {row, next} = decision;
 	if (row === null)
 		return [
 			risk === null
@@ -76,12 +84,7 @@ export const decisionSentences = ({decision, risk, rows, isComplete}: Odds): str
 		other === undefined
 			? []
 			: [`Next is ${next}: fastest in ${chanceText(other.first)}, over the limit in ${chanceText(other.over)}.`];
-	const doubt = isDecided
-		? []
-		: [
-				`${isComplete ? 'Not decided' : 'Not decided yet'}: ${open.join('; ')}. More draws would not be worth it; better numbers would.`,
-			];
-	return [head, ...after, ...(isComplete ? doubt : doubt.map(text => text.replace(/ More draws.*$/, '')))];
+	return [head, ...after, ...doubtsOf(odds)];
 };
 
 const poundKg = 0.45359237;
