@@ -4,7 +4,7 @@ import {answer} from '../../source/commands/main.ts';
 import {option, options} from '../../source/commands/options.ts';
 import {demo, shelf} from '../../source/commands/shelf.ts';
 import type {Surroundings} from '../../source/commands/surroundings.ts';
-import {keyTableMarkdown} from '../../source/screens/key-table.ts';
+import {keyTableMarkdown} from '../../source/screens/keys/key-table-markdown.ts';
 import type {OpenDocument} from '../../source/screens/session/documents.ts';
 import type {JsonObject} from '../../source/screens/session/json.ts';
 import {startSession} from '../../source/screens/session/session.ts';

@@ -1,6 +1,7 @@
 /** From the name of what a key does to what happens to the session, or outside of it. */
 import type {Ranked} from '../../planning/rank-rack.ts';
-import type {ActionName, Scope} from '../key-table.ts';
+import type {ActionName} from '../keys/key-table.ts';
+import type {Scope} from '../keys/scopes.ts';
 import {editLine} from '../parts/edit-line.ts';
 import type {Action} from './action.ts';
 import type {Choice} from './catalog.ts';

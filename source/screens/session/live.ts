@@ -1,7 +1,7 @@
 /** A session that runs: its state, the answer that follows from it, and who is told when either changes. */
 import {type Ranked, rowName} from '../../planning/rank-rack.ts';
 import type {Keeper} from '../keeper.ts';
-import {type ActionName, actionFor} from '../key-table.ts';
+import {type ActionName, actionFor} from '../keys/key-table.ts';
 import {type KeyEvent, keyName} from '../terminal/key-event.ts';
 import type {Action} from './action.ts';
 import {type Answer, rankedIn} from './answer.ts';

@@ -1,5 +1,7 @@
 /** Every key, those of the place first. */
-import {bindingsOf, keyWords, type Scope, scopes, workingIn} from '../key-table.ts';
+import {bindingsOf, workingIn} from '../keys/key-table.ts';
+import {keyWords} from '../keys/key-words.ts';
+import {type Scope, scopes} from '../keys/scopes.ts';
 import {blank, line, type Pieces, padded, piece} from '../parts/pieces.ts';
 import {marks} from './marks.ts';
 

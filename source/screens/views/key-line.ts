@@ -1,5 +1,7 @@
 /** The keys of the place: as many as fit, the rest is in the help. */
-import {type Binding, keyWords, type Scope, workingIn} from '../key-table.ts';
+import {type Binding, workingIn} from '../keys/key-table.ts';
+import {keyWords} from '../keys/key-words.ts';
+import type {Scope} from '../keys/scopes.ts';
 import {clipped, type Piece, type Pieces, piece, widthOf} from '../parts/pieces.ts';
 
 const between = '  ';

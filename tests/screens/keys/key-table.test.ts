@@ -1,15 +1,8 @@
 import {expect, test} from 'vitest';
-import {
-	actionFor,
-	type Binding,
-	bindings,
-	bindingsOf,
-	keyTableMarkdown,
-	keyWords,
-	type Scope,
-	scopes,
-	workingIn,
-} from '../../source/screens/key-table.ts';
+import {actionFor, type Binding, bindings, bindingsOf, workingIn} from '../../../source/screens/keys/key-table.ts';
+import {keyTableMarkdown} from '../../../source/screens/keys/key-table-markdown.ts';
+import {keyWords} from '../../../source/screens/keys/key-words.ts';
+import {type Scope, scopes} from '../../../source/screens/keys/scopes.ts';
 
 const table: readonly Binding[] = bindings;
 
