@@ -1,8 +1,10 @@
 /** What a view gives: blocks of cells whose meaning is named. Layout takes the width, paint the color. */
 import {visible} from '../documents/visible.ts';
+import {type Cell, cell, type Tone} from './cell.ts';
+import type {Chart} from './chart.ts';
 
-export type Tone = 'plain' | 'strong' | 'muted' | 'pass' | 'near' | 'fail';
-export type Cell = {text: string; tone: Tone};
+export type {Cell, Tone} from './cell.ts';
+export {cell} from './cell.ts';
 
 export type Column = {
 	head: string;
@@ -20,10 +22,9 @@ export type Block =
 	/** One line, cut to the width. */
 	| {kind: 'line'; cells: readonly Cell[]}
 	| {kind: 'gap'}
+	/** As wide as there is room, in so many lines. */
+	| {kind: 'chart'; chart: Chart; height: number}
 	| Table;
-
-/** A cell; what a stranger's text could do to a terminal becomes visible here. */
-export const cell = (text: string, tone: Tone = 'plain'): Cell => ({text: visible(text), tone});
 
 export const gap: Block = {kind: 'gap'};
 export const text = (content: string, tone: Tone = 'plain', hang = 0): Block => ({
@@ -32,6 +33,7 @@ export const text = (content: string, tone: Tone = 'plain', hang = 0): Block => 
 	tone,
 	hang,
 });
+export const picture = (chart: Chart, height: number): Block => ({kind: 'chart', chart, height});
 export const line = (...cells: Cell[]): Block => ({kind: 'line', cells});
 export const table = (columns: readonly Column[], rows: readonly (readonly Cell[])[], indent = 0): Block => ({
 	kind: 'table',
