@@ -56,7 +56,7 @@ export type LogProblem = {
 export type LogRemark = RemarkData & {readonly text: string};
 
 export type RemarkData =
-	/** Lines before the header that are no part of the table. */
+	/** Lines before the header, and under it, that are no part of the table. */
 	| {readonly kind: 'preamble'; readonly lines: number}
 	/** The text is not UTF-8. */
 	| {readonly kind: 'encoding'; readonly encoding: string}
@@ -65,7 +65,13 @@ export type RemarkData =
 	/** The unit was told from the numbers. */
 	| {readonly kind: 'unitFromNumbers'; readonly channel: ChannelName; readonly unit: string}
 	/** A column that is there is not used. */
-	| {readonly kind: 'leftOut'; readonly channel: ChannelName; readonly headers: readonly string[]}
+	| {
+			readonly kind: 'leftOut';
+			readonly channel: ChannelName;
+			readonly headers: readonly string[];
+			/** Several that it may be, a unit that is not known, or numbers that are no share. */
+			readonly why: 'several' | 'unit' | 'numbers';
+	  }
 	/** The log lacks it; it was worked out from the speed. */
 	| {readonly kind: 'workedOut'; readonly channel: 'time' | 'distance'}
 	/** Cells that are no numbers, or have no unit where they need one: read as not known. */
@@ -104,5 +110,7 @@ export type RemarkData =
 	| {readonly kind: 'slowSampling'; readonly samplesPerS: number}
 	/** Neighboring samples with the same time, more often than not. */
 	| {readonly kind: 'coarseClock'; readonly share: number}
+	/** Distance as logged, and as time and speed make it. */
+	| {readonly kind: 'disagree'; readonly loggedM: number; readonly bySpeedM: number}
 	/** A highest value that no car has: the unit may be wrong. */
 	| {readonly kind: 'implausible'; readonly channel: 'speed' | 'rpm'; readonly highest: number};
