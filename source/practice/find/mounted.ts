@@ -1,0 +1,64 @@
+/** What was mounted: what is installed by the documents, unless the log speaks clearly against it. */
+import {flipped, samePair} from '../../drivetrain/gear-pair.ts';
+import type {Plan} from '../../planning/plan.ts';
+import type {Hump} from './clusters.ts';
+import type {Fitting, Mounted, MountedVerdict} from './findings.ts';
+import {explains, fittingsOf, type Installed, isInstalled, type Laid} from './fittings.ts';
+import {whyMounted} from './mounted-words.ts';
+
+/** Penalties closer than this are not told apart: three standard deviations, squared. */
+const sameFit = 9;
+const mostAlso = 8;
+
+/**
+ * The rule: a pair and set explain the log if a rollout within 2 % of the documents' brings their ratios to within 0.6 % of
+ * the humps. What is installed is kept if it explains the log, unless another explains it better by three standard
+ * deviations. Else the likeliest of those that do is named, where a mistake in mounting (the installed pair turned, another
+ * pair, another set, a pair that is not on hand) counts as the less likely the more of it there must be.
+ */
+export function mountedBy(
+	plan: Plan,
+	humps: readonly Hump[],
+	installed: Installed | undefined,
+): Omit<Mounted, 'gearColumnAgrees'> {
+	const fits = humps.length === 0 ? [] : fittingsOf(plan.car, humps, installed, plan.track.gears);
+	const documented = fits.find(fit => isInstalled(fit, installed));
+	const explaining = fits.filter(explains);
+	const first = explaining[0];
+	const kept = documented !== undefined && explains(documented) && documented.penalty - first!.penalty <= sameFit;
+	const best = kept ? documented : first;
+	const verdict = verdictOf(humps, best, documented, installed);
+	const alsoFit = explaining
+		.filter(fit => best !== undefined && fit !== best && fit.penalty - best.penalty <= sameFit)
+		.slice(0, mostAlso);
+	const mounted = {
+		verdict,
+		best: best && plain(best),
+		installed: documented && plain(documented),
+		alsoFit: alsoFit.map(plain),
+		nearest: best === undefined && fits[0] !== undefined ? plain(fits[0]) : undefined,
+		clusters: humps.map((hump, i) => ({...hump, gear: best?.gears[i]})),
+	};
+	return {...mounted, why: whyMounted(mounted, plan)};
+}
+
+function verdictOf(
+	humps: readonly Hump[],
+	best: Laid | undefined,
+	documented: Laid | undefined,
+	installed: Installed | undefined,
+): MountedVerdict {
+	if (humps.length === 0) return 'unknown';
+	if (best === undefined) return 'nothingFits';
+	if (best === documented) return 'asInstalled';
+	if (best.flipped || (installed !== undefined && samePair(flipped(best.candidate.pair), installed.pair)))
+		return 'flippedFits';
+	return installed === undefined ? 'noInstalled' : 'otherFits';
+}
+
+const plain = ({candidate, flipped: turned, circumferenceFactor, residual}: Laid): Fitting => ({
+	candidate,
+	flipped: turned,
+	circumferenceFactor,
+	residual,
+});
