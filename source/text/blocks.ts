@@ -1,6 +1,6 @@
 /** What a view gives: blocks of cells whose meaning is named. Layout takes the width, paint the color. */
 import {visible} from '../documents/visible.ts';
-import {type Cell, cell, type Tone} from './cell.ts';
+import type {Cell, Tone} from './cell.ts';
 import type {Chart} from './chart.ts';
 
 export type {Cell, Tone} from './cell.ts';

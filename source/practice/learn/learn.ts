@@ -67,7 +67,8 @@ export function learnFromFindings(subject: Subject, findings: Findings): Outcome
 	return withPlan(subject, plan => {
 		const candidate = findings.mounted.best?.candidate;
 		const circumference = circumferenceFromFindings(plan, findings);
-		const readings = candidate === undefined ? [] : readingsFrom(findings, candidate);
+		const readings =
+			candidate === undefined ? [] : readingsFrom(findings, candidate, modelOf(subject.car, subject.track));
 		const laps = findings.laps.filter(({kind}) => kind === 'good').length;
 		return learned(subject, {
 			source: 'log',

@@ -6,7 +6,7 @@ import {carAt} from '../../planning/situations.ts';
 import type {Findings, Spread} from '../find/findings.ts';
 import type {Compared} from './compared.ts';
 import type {Learning, Subject} from './learn.ts';
-import {type Known, known} from './reading.ts';
+import {type Known, known, type Reading} from './reading.ts';
 import {heldSpeedSe} from './seen.ts';
 import {type Readers, writtenNumber, writtenQuantity} from './written.ts';
 
@@ -156,14 +156,17 @@ function forceProposals({car, track}: Subject, {anchor}: Learning, make: Maker):
 	return proposals;
 }
 
-/** Exit and minimum as a lap has them: with the spread from lap to lap, which is what a race brings, not that of the median. */
+/**
+ * Exit and minimum as a lap has them: with the spread from lap to lap, which is what a race brings, not that of the median. A
+ * minimum only where the track has one.
+ */
 function straightProposals({readings}: Learning, findings: Findings | undefined, make: Maker): Proposal[] {
 	const found = findings?.straights.filter(({index}) => readings.some(reading => reading.index === index)) ?? [];
 	return found.flatMap(({index, name, exitMps, minimumMps}) => {
 		const speed = (field: 'exit' | 'minimum', spread: Spread | undefined): Proposal[] => {
-			if (spread === undefined) return [];
-			const value = known(spread.median, spread.sd ?? 0);
 			const path: Path = ['straights', index, field];
+			if (spread === undefined || !make.has('track', path)) return [];
+			const value = known(spread.median, spread.sd ?? 0);
 			return [row(`${field}:${name}`, make.quantity(`${field} ${name}`, 'track', path, value, 'speed'))];
 		};
 		return [...speed('exit', exitMps), ...speed('minimum', minimumMps)];
@@ -175,12 +178,14 @@ function straightProposals({readings}: Learning, findings: Findings | undefined,
  * the RPM says is written where one stood; else the RPM alone, which then follows a later circumference.
  */
 function measuredProposal({reading, after}: Compared, make: Maker): Proposal[] {
-	const {index, name, endRpm, candidate, gear = after?.endGear} = reading;
+	const {index, name, candidate, gear = after?.endGear} = reading;
+	// What is measured is the highest: of a car that slows the exit, whose RPM the end does not tell.
+	const endRpm = slows(reading) ? undefined : reading.endRpm;
 	const at = (field: string): Path => ['straights', index, 'measured', field];
 	const label = (what: string) => `${what} ${name}`;
 	const modeled = after && known(after.endMps, heldSpeedSe);
 	const endMps = reading.speedSeen
-		? reading.endMps
+		? highestOf(reading)
 		: make.has('track', at('end'))
 			? (reading.endMps ?? modeled)
 			: undefined;
@@ -197,3 +202,9 @@ function measuredProposal({reading, after}: Compared, make: Maker): Proposal[] {
 		},
 	];
 }
+
+const slows = ({exitMps, endMps}: Reading): boolean =>
+	exitMps !== undefined && endMps !== undefined && exitMps.value > endMps.value;
+
+const highestOf = (reading: Reading): Known | undefined =>
+	slows(reading) ? known(reading.exitMps!.value, reading.endMps!.se) : reading.endMps;
