@@ -101,7 +101,12 @@ test('drag is within 2 % and its standard error honest over many logs', () => {
 
 test('a log of another car teaches nothing and says so', () => {
 	const log = logged({seed: 3});
-	const rack = {pairs: [{driving: 34, driven: 35}]};
+	const rack = {
+		pairs: [
+			{driving: 34, driven: 35},
+			{driving: 34, driven: 34},
+		],
+	};
 	const gearboxes = [{name: 'C', ratios: [2.94, 2.07, 1.57, 1.2, 0.94]}];
 	const {rules: _, ...alone} = car as {rules?: unknown} & typeof car;
 	const other = subjectOf({...written, car: {...alone, rack, gearboxes, finalDrive: 5.6}});
