@@ -6,7 +6,7 @@ import {
 	type RememberedColumn,
 	type RememberedColumns,
 } from './channels.ts';
-import {ambiguous, type ColumnProblem, missing, wrongAsked} from './column-problems.ts';
+import {ambiguous, type ColumnProblem, missing, takenTwice, wrongAsked} from './column-problems.ts';
 import {findAsked} from './find-asked.ts';
 import {nameKey} from './header-names.ts';
 import type {Header} from './headers.ts';
@@ -60,11 +60,21 @@ export function chooseColumns(
 			else if (candidates.length > 1) problems.push(ambiguous(channel, candidates, headers));
 		}
 	}
+	problems.push(...usedTwice(columns, headers));
 	const isChosen = (channel: ChannelName) =>
 		columns.some(column => column.channel === channel) || problems.some(problem => problem.channel === channel);
 	for (const channel of ['speed', 'rpm'] as const) if (!isChosen(channel)) problems.push(missing(channel, headers));
 	if (!isChosen('time') && !isChosen('distance')) problems.push(missing('time', headers));
 	return {columns, none, leftOut, problems, notThere: memory.fits ? [] : memory.notThere};
+}
+
+function usedTwice(columns: readonly ChosenColumn[], headers: readonly Header[]): ColumnProblem[] {
+	const first = new Map<number, ChannelName>();
+	return columns.flatMap(({channel, header}) => {
+		const other = first.get(header.column);
+		first.set(header.column, other ?? channel);
+		return other === undefined ? [] : [takenTwice(channel, other, header, headers)];
+	});
 }
 
 /** The columns whose names mean the channel, of the first rank that has any. */

@@ -74,6 +74,23 @@ export function wrongAsked(
 	};
 }
 
+export function takenTwice(
+	channel: ChannelName,
+	other: ChannelName,
+	header: Header,
+	headers: readonly Header[],
+): ColumnProblem {
+	return {
+		kind: 'asked',
+		channel,
+		where: `the column of ${channel}`,
+		found: `${named(header)}, which is ${other} already`,
+		allowed: 'a column of its own for each',
+		do: `Name another one for ${channel} or for ${other}, or leave one out: ${columnOption(channel, 'none')}.`,
+		choice: {channel, values: headers.filter(one => one !== header).map(one => valueFor(one, headers))},
+	};
+}
+
 /** A column of numbers that say nothing without their unit. */
 export function withoutUnit(channel: ChannelName, header: Header, headers: readonly Header[]): ColumnProblem {
 	const values = unitChoices(channel).map(unit => `${valueFor(header, headers)} [${unit}]`);

@@ -47,6 +47,14 @@ export const tooLongLine = (): LogProblem => ({
 	do: exportAgain,
 });
 
+export const tooLarge = (mostBytes: number): LogProblem => ({
+	kind: 'tooLarge',
+	where: 'the file',
+	found: `more than ${mostBytes / 1e9} GB`,
+	allowed: 'a log of a few hours',
+	do: 'Export a part of the run.',
+});
+
 export const noHeader = (first: string): LogProblem => ({
 	kind: 'noHeader',
 	where: 'the file',

@@ -1,5 +1,6 @@
 /** A log, as bytes in pieces of any size, to one table in SI. */
 import type {AskedColumns, RememberedColumns} from './channels.ts';
+import {tooLarge} from './file-problems.ts';
 import {headBytes, headOf} from './head.ts';
 import {type OpenLog, openLog} from './open-log.ts';
 import type {LogReading, LogRefused} from './reading.ts';
@@ -21,6 +22,9 @@ export type ReadLogOptions = {
 	/** Called with the bytes read so far, once for each piece. */
 	readonly onProgress?: (bytes: number) => void;
 };
+
+/** Days of running; what is kept of it still fits a small computer. */
+const mostBytes = 2_000_000_000;
 
 /**
  * Reads a logged run. Memory is that of the columns that are used, however long the file. Whatever the bytes are, the answer is a value;
@@ -45,6 +49,7 @@ export async function readLog(
 	};
 	for await (const chunk of chunks) {
 		bytesRead += chunk.length;
+		if (bytesRead > mostBytes) return {ok: false, problems: [tooLarge(mostBytes)]};
 		let bytes = decoder.decode(chunk);
 		if (log === undefined) {
 			const taken = Math.min(bytes.length, headBytes - headLength);

@@ -36,6 +36,7 @@ export type LogProblem = {
 		| 'noHeader'
 		| 'noRows'
 		| 'longLine'
+		| 'tooLarge'
 		| 'missing'
 		| 'ambiguous'
 		| 'unit'
