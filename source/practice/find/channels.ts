@@ -1,4 +1,5 @@
 /** What every finding looks at: the channels made ready once, in passes over the log of one sample each. */
+import type {Vehicle} from '../../drivetrain/straight.ts';
 import {circumferenceM} from '../../drivetrain/tire.ts';
 import type {LoggedRun} from '../../logs/logged-run.ts';
 import type {Plan} from '../../planning/plan.ts';
@@ -24,7 +25,7 @@ const smoothS = 0.25;
 export function channelsOf(run: LoggedRun, plan: Plan): Channels {
 	const rateHz = sampleRateHz(run.timeS);
 	const smoothMps = movingMean(bridged(middleOfThree(run.speedMps)), Math.round(smoothS * rateHz));
-	return {run, rateHz, smoothMps, middleRpm: middleOfThree(run.rpm), overall: overallOf(run, plan)};
+	return {run, rateHz, smoothMps, middleRpm: middleOfThree(run.rpm), overall: overallBy(run, plan.base.vehicle)};
 }
 
 /** NaN with fewer than two samples. */
@@ -33,8 +34,11 @@ function sampleRateHz(timeS: Float64Array): number {
 	return 1 / roughQuantile(steps, 0.5);
 }
 
-function overallOf({samples, speedMps, rpm}: LoggedRun, {base}: Plan): Float32Array {
-	const {rolloutM, growth, slip} = base.vehicle;
+/** n·C/(60·V·(1 + slip)) at each sample; NaN where speed or RPM are missing or near nothing. */
+export function overallBy(
+	{samples, speedMps, rpm}: LoggedRun,
+	{rolloutM, growth, slip}: Pick<Vehicle, 'rolloutM' | 'growth' | 'slip'>,
+): Float32Array {
 	const overall = new Float32Array(samples);
 	for (let i = 0; i < samples; i++) {
 		const [v, n] = [speedMps[i]!, rpm[i]!];

@@ -17,20 +17,30 @@ const apart = 0.04;
 const leastShare = 0.01;
 const leastSamples = 5;
 
-/** By falling number of samples. */
-export function humpsOf({overall}: Channels, stretches: readonly Stretch[]): Hump[] {
+export type Humps = {
+	/** By falling number of samples. */
+	readonly humps: readonly Hump[];
+	/** Root mean square of the speeds at full throttle. */
+	readonly speedMps: number;
+};
+
+export function humpsOf({overall, smoothMps}: Channels, stretches: readonly Stretch[]): Humps {
 	const counts = new Float64Array(bins);
-	let total = 0;
+	let [total, squares] = [0, 0];
 	for (const {from, to} of stretches) {
 		for (let i = from; i <= to; i++) {
 			const bin = Math.floor(Math.log(overall[i]!) / binWidth);
 			if (!(bin >= 0 && bin < bins)) continue;
 			counts[bin]! += 1;
 			total++;
+			squares += smoothMps[i]! ** 2;
 		}
 	}
 	const centers = centersOf(counts, Math.max(leastSamples, leastShare * total));
-	return centers.map(center => humpAt(overall, stretches, center)).filter(({samples}) => samples >= leastSamples);
+	const humps = centers
+		.map(center => humpAt(overall, stretches, center))
+		.filter(({samples}) => samples >= leastSamples);
+	return {humps, speedMps: total === 0 ? 0 : Math.sqrt(squares / total)};
 }
 
 /** The fullest window, then the fullest of what is left further off, and so on; as logarithms. */

@@ -1,30 +1,18 @@
 /** From a logged run to what it shows. */
 import type {LoggedRun} from '../../logs/logged-run.ts';
 import type {Plan} from '../../planning/plan.ts';
-import {median} from '../fit/robust.ts';
-import {type Channels, channelsOf} from './channels.ts';
+import {type Channels, channelsOf, overallBy} from './channels.ts';
 import {fitCircumference} from './circumference.ts';
 import {humpsOf} from './clusters.ts';
-import {
-	type Findings,
-	type Lap,
-	type LimiterFinding,
-	type Mounted,
-	type Pass,
-	type Peak,
-	sampleState,
-	type Wheelspin,
-} from './findings.ts';
+import type {CircumferenceFit, Findings, Lap, LimiterFinding, Mounted, Pass, Peak, Wheelspin} from './findings.ts';
+import {sampleState} from './findings.ts';
 import type {Installed} from './fittings.ts';
-import {fullThrottle} from './full-throttle.ts';
-import {gearPlaces, gearsOf} from './gears.ts';
-import {type LapCut, lapsByColumn, lapsByLength, lapsByPasses, rhythmOf} from './lap-cuts.ts';
-import {lapsOf} from './lap-kinds.ts';
-import {type Match, matchStraights} from './match-straights.ts';
+import {fullThrottle, type Stretch} from './full-throttle.ts';
+import {type GearPlaces, gearPlaces, gearsOf} from './gears.ts';
+import {type LaidOut, layOut} from './lay-out.ts';
 import {mountedBy} from './mounted.ts';
 import {notesOn} from './notes.ts';
-import {type Measured, measured} from './passes.ts';
-import {type Places, placesByLaps, placesByRhythm} from './places.ts';
+import {measured} from './passes.ts';
 import {type Power, powerOf} from './power.ts';
 import {revEvents, shiftFindings} from './shift-findings.ts';
 import {straightFindings} from './straight-findings.ts';
@@ -35,30 +23,10 @@ import {straightFindings} from './straight-findings.ts';
  */
 export function findInLog(run: LoggedRun, plan: Plan, installed: Installed | undefined = plan.car.installed): Findings {
 	const channels = channelsOf(run, plan);
-	const {track} = plan;
-	const power = fullThrottle(channels, track.lapM);
-	const {stretches} = power;
+	const {stretches, by} = fullThrottle(channels, plan.track.lapM);
+	const laid = layOut(channels, plan, measured(channels, undefined, stretches, []));
 	const fit = mountedBy(plan, humpsOf(channels, stretches), installed);
-	const places = gearPlaces(fit, plan.base.vehicle.slip);
-	const gears = places === undefined ? new Uint8Array(run.samples) : gearsOf(channels, places);
-	const mounted: Mounted = {...fit, gearColumnAgrees: columnAgrees(run, gears, stretches)};
-	const under: Power =
-		places === undefined
-			? {state: new Uint8Array(run.samples), inGear: [], shifts: []}
-			: powerOf(channels, gears, places, stretches, plan.car.shiftTimeS, plan.base.vehicle.limiterRpm);
-
-	const runs = measured(channels, under.state, stretches, under.inGear);
-	const {cuts, lapsFrom, where, match} = lapsAndPlaces(run, plan, runs);
-	const lapOf = runs.map(pass => cuts.findLastIndex(cut => cut.from <= pass.from));
-	const laps = lapsOf(
-		channels,
-		track,
-		cuts.map((cut, i) => ({...cut, runs: lapOf.filter(lap => lap === i).length})),
-	);
-	const straightOf = runs.map((_, i) => match?.straightAt[where?.of[i] ?? -1]);
-	const passes = judged(runs, lapOf, straightOf, laps, run.samples);
-
-	const overall = mounted.best?.candidate.train.overall;
+	const {gears, power, circumference, passes} = inGears({channels, plan, stretches, laid}, fit);
 	const findings = {
 		log: {
 			samples: run.samples,
@@ -69,97 +37,75 @@ export function findInLog(run: LoggedRun, plan: Plan, installed: Installed | und
 			gear: run.gear !== null,
 			lap: run.lap !== null,
 		},
-		laps,
-		lapsFrom,
-		mounted,
-		matching: {
-			matched: match?.matched ?? false,
-			runsPerLap: where?.at.length,
-			lapM: where?.lapM,
-			why: match?.why ?? 'The full-throttle runs of the log do not repeat, so they are not laid on straights.',
-		},
-		straights: straightFindings(track, passes),
+		laps: laid.laps,
+		lapsFrom: laid.lapsFrom,
+		mounted: {...fit, gearColumnAgrees: columnAgrees(run, gears, stretches)},
+		matching: laid.matching,
+		straights: straightFindings(plan.track, passes),
 		passes,
-		shifts: shiftFindings(channels, passes, under.shifts),
-		events: revEvents(channels, gears, laps, stretches, under.shifts, plan.limit.rpm),
-		wheelspin: wheelspinOf(under.state, passes),
-		limiter: limiterOf(run, under.state, passes, plan.base.vehicle.limiterRpm),
-		highestRpm: peak(run, laps, channels.middleRpm),
-		highestMps: peak(run, laps, channels.smoothMps),
-		circumference: overall && fitCircumference(channels, gears, under.state, passes, overall, plan.base.vehicle),
-		samples: {gear: gears, state: under.state, overall: channels.overall},
+		shifts: shiftFindings(channels, passes, power.shifts),
+		events: revEvents(channels, gears, laid.laps, stretches, power.shifts, plan.limit.rpm),
+		wheelspin: wheelspinOf(power.state, passes),
+		limiter: limiterOf(run, power.state, passes, plan.base.vehicle.limiterRpm),
+		highestRpm: peak(run, laid.laps, channels.middleRpm),
+		highestMps: peak(run, laid.laps, channels.smoothMps),
+		circumference,
+		samples: {gear: gears, state: power.state, overall: channels.overall},
 	};
-	return {...findings, notes: notesOn(findings, plan, power.by)};
+	return {...findings, notes: notesOn(findings, plan, by)};
 }
 
-type Laid = {
-	readonly cuts: readonly LapCut[];
-	readonly lapsFrom: Findings['lapsFrom'];
-	readonly where: Places | undefined;
-	readonly match: Match | undefined;
+type Ground = {
+	readonly channels: Channels;
+	readonly plan: Plan;
+	readonly stretches: readonly Stretch[];
+	readonly laid: LaidOut;
 };
 
-function lapsAndPlaces(run: LoggedRun, {track}: Plan, runs: readonly Measured[]): Laid {
-	const all: LapCut[] = [{number: 1, from: 0, to: run.samples}];
-	if (runs.length === 0)
-		return {
-			cuts: lapsByColumn(run) ?? all,
-			lapsFrom: run.lap === null ? 'none' : 'column',
-			where: undefined,
-			match: undefined,
-		};
-	const byColumn = lapsByColumn(run);
-	const rhythm = byColumn === undefined ? rhythmOf(runs, track.lapM) : undefined;
-	const where = byColumn
-		? placesByLaps(runs, byColumn, run.distanceM)
-		: ((rhythm && placesByRhythm(runs, rhythm)) ?? inOrder(run, runs));
-	const match = where && matchStraights(track, where, runs);
-	if (byColumn !== undefined) return {cuts: byColumn, lapsFrom: 'column', where, match};
-	if (rhythm === undefined || where === undefined) return {cuts: all, lapsFrom: 'none', where, match};
-	const first = firstPlace(match);
-	const starts = runs.filter((_, i) => where.of[i] === first);
-	if (starts.length > 1) return {cuts: lapsByPasses(starts, run.samples), lapsFrom: 'straights', where, match};
-	if (track.lapM === undefined) return {cuts: all, lapsFrom: 'none', where, match};
-	return {cuts: lapsByLength(run, runs[0]!.startM, track.lapM), lapsFrom: 'length', where, match};
-}
+type Geared = {
+	readonly gears: Uint8Array;
+	readonly power: Power;
+	readonly passes: Pass[];
+	readonly circumference: CircumferenceFit | undefined;
+};
 
-/** A log of one lap or less: its runs as they come. */
-function inOrder(run: LoggedRun, runs: readonly Measured[]): Places {
-	const lapM = run.distanceM.at(-1)!;
-	return {lapM, at: runs.map(pass => pass.startM / lapM), of: runs.map((_, i) => i), fromLine: false};
-}
-
-/** The place of the first straight that was found. */
-function firstPlace(match: Match | undefined): number {
-	const found = (match?.straightAt ?? []).filter(straight => straight !== undefined);
-	return found.length === 0 ? 0 : match!.straightAt.indexOf(Math.min(...found));
-}
-
-/** A run whose length is off by more than this from the others on its straight was cut short, or into. */
-const lengthShare = 0.12;
-
-function judged(
-	runs: readonly Measured[],
-	lapOf: readonly number[],
-	straightOf: readonly (number | undefined)[],
-	laps: readonly Lap[],
-	samples: number,
-): Pass[] {
-	const onGood = runs.map((pass, i) => laps[lapOf[i]!]?.kind === 'good' && pass.from > 0 && pass.to < samples - 1);
-	const usualM = new Map<number, number>();
-	for (const straight of new Set(straightOf)) {
-		if (straight === undefined) continue;
-		usualM.set(
-			straight,
-			median(runs.filter((_, i) => onGood[i] && straightOf[i] === straight).map(pass => pass.lengthM)),
-		);
+/**
+ * Gears twice: by the documents' circumference, moved as a whole to where the humps lie, then by the one that these gears
+ * give, whose growth is the log's own. Without a pair that fits there are no gears.
+ */
+function inGears(ground: Ground, fit: Omit<Mounted, 'gearColumnAgrees'>): Geared {
+	const {channels, plan} = ground;
+	const {vehicle} = plan.base;
+	const places = gearPlaces(fit, vehicle.slip);
+	if (places === undefined) {
+		const gears = new Uint8Array(channels.run.samples);
+		const power = {state: gears, inGear: [], shifts: []};
+		return {gears, power, passes: passesOf(ground, channels, power), circumference: undefined};
 	}
-	return runs.map((pass, i) => {
-		const straight = straightOf[i];
-		const usual = straight === undefined ? Number.NaN : usualM.get(straight)!;
-		const good = onGood[i]! && Math.abs(pass.lengthM / usual - 1) <= lengthShare;
-		return {...pass, lap: lapOf[i]!, straight, good};
-	});
+	const rough = inPlaces(ground, channels, places);
+	if (rough.circumference === undefined) return rough;
+	const tire = {
+		rolloutM: rough.circumference.rolloutM.value,
+		growth: rough.circumference.growth.value,
+		slip: vehicle.slip,
+	};
+	const own = {...channels, overall: overallBy(channels.run, tire)};
+	return inPlaces(ground, own, {...places, at: places.overall.map(Math.log)});
+}
+
+function inPlaces(ground: Ground, channels: Channels, places: GearPlaces): Geared {
+	const {plan, stretches} = ground;
+	const {vehicle} = plan.base;
+	const gears = gearsOf(channels, places);
+	const power = powerOf(channels, gears, places, stretches, plan.car.shiftTimeS, vehicle.limiterRpm);
+	const passes = passesOf(ground, channels, power);
+	const circumference = fitCircumference(channels, gears, power.state, passes, places.overall, vehicle);
+	return {gears, power, passes, circumference};
+}
+
+function passesOf({laid, stretches}: Ground, channels: Channels, power: Power): Pass[] {
+	const runs = measured(channels, power.state, stretches, power.inGear);
+	return runs.map((one, i) => ({...one, ...laid.runs[i]!}));
 }
 
 /** Of the samples in gear at full throttle: how often the column says the same; undefined without a column. */

@@ -1,6 +1,7 @@
 /** How well each pair and set explains the humps of the overall ratio. */
 import type {Car, Pair} from '../../drivetrain/car.ts';
 import {flipped, samePair} from '../../drivetrain/gear-pair.ts';
+import {growthReferenceMps} from '../../drivetrain/tire.ts';
 import type {GearRange} from '../../drivetrain/track.ts';
 import {type Candidate, candidateOf, mountable} from '../../planning/candidates.ts';
 import type {Hump} from './clusters.ts';
@@ -17,9 +18,9 @@ export type Laid = Fitting & {
 	readonly penalty: number;
 };
 
-/** Standard deviation of a rollout as the documents have it; twice that is the plausible span. */
-export const rolloutSd = 0.01;
-export const plausibleSpan = 2 * rolloutSd;
+/** Standard deviations of a rollout as the documents have it, and of growth at 100 mph; both as fractions. */
+const rolloutSd = 0.01;
+const growthSd = 0.003;
 /** Standard deviation of a hump about its ratio: ratios are stated rounded, growth differs a little between gears. */
 const humpSd = 0.003;
 /** Humps that lie further off than this, root mean square, are not explained. */
@@ -28,24 +29,29 @@ export const farthestResidual = 2 * humpSd;
 /** Twice the logarithm of the odds, before the log is seen, against what the documents call installed. */
 const oddsAgainst = {otherPair: 6, otherSet: 4, notOnHand: 3, turned: 1, otherTurned: 6, gearNotAllowed: 2};
 
-/** Every pair and set, both ways round, best first. `gears`: what the track allows. */
+/** Every pair and set, both ways round, best first. `gears`: what the track allows; `span`: `plausibleSpan`. */
 export function fittingsOf(
 	car: Car,
 	humps: readonly Hump[],
 	installed: Installed | undefined,
 	gears: GearRange | undefined,
+	span: number,
 ): Laid[] {
 	const laid = mountings(car).map(({candidate, isFlipped}) => {
-		const fit = layOn(candidate.train.overall, humps);
+		const fit = layOn(candidate.train.overall, humps, span);
 		const against = oddsOf(candidate, isFlipped, installed) + gearOdds(fit.gears, gears);
-		const penalty = humps.length * (fit.residual / humpSd) ** 2 + (Math.log(fit.circumferenceFactor) / rolloutSd) ** 2;
-		return {candidate, flipped: isFlipped, ...fit, penalty: penalty + against};
+		return {candidate, flipped: isFlipped, ...fit, penalty: costOf(fit, humps.length, span) + against};
 	});
 	return laid.sort((one, other) => one.penalty - other.penalty);
 }
 
-export const explains = (fit: Fitting) =>
-	Math.abs(Math.log(fit.circumferenceFactor)) <= plausibleSpan && fit.residual <= farthestResidual;
+/** How far the documents' circumference may plausibly be off at a speed, as a fraction: two standard deviations. */
+export function plausibleSpan(speedMps: number): number {
+	return 2 * Math.hypot(rolloutSd, growthSd * (speedMps / growthReferenceMps) ** 2);
+}
+
+export const explains = (fit: Fitting, span: number) =>
+	Math.abs(Math.log(fit.circumferenceFactor)) <= span && fit.residual <= farthestResidual;
 
 export const isInstalled = ({candidate}: Fitting, installed: Installed | undefined) =>
 	installed !== undefined && samePair(candidate.pair, installed.pair) && candidate.gearbox.name === installed.gearbox;
@@ -76,19 +82,22 @@ function gearOdds(used: readonly number[], allowed: GearRange | undefined): numb
 	return (oddsAgainst.gearNotAllowed * outside) / Math.max(1, used.length);
 }
 
+const costOf = ({residual, circumferenceFactor}: Lay, humps: number, span: number) =>
+	humps * (residual / humpSd) ** 2 + (Math.log(circumferenceFactor) / (span / 2)) ** 2;
+
 type Lay = Pick<Laid, 'gears' | 'circumferenceFactor' | 'residual'>;
 
 /**
  * The gears that the humps belong to, the factor of the circumference that brings them nearest, and what is left. Every hump
  * is tried on every gear; among equally good ones the factor nearest to 1.
  */
-function layOn(overall: readonly number[], humps: readonly Hump[]): Lay {
+function layOn(overall: readonly number[], humps: readonly Hump[], span: number): Lay {
 	const logs = overall.map(Math.log);
 	let best: Lay & {cost: number} = {gears: [], circumferenceFactor: 1, residual: 0, cost: Number.POSITIVE_INFINITY};
 	for (const hump of humps.slice(0, 1)) {
 		for (const gear of logs) {
 			const lay = settledFrom(logs, humps, gear - Math.log(hump.overall));
-			const cost = humps.length * (lay.residual / humpSd) ** 2 + (Math.log(lay.circumferenceFactor) / rolloutSd) ** 2;
+			const cost = costOf(lay, humps.length, span);
 			if (cost < best.cost) best = {...lay, cost};
 		}
 	}

@@ -6,6 +6,8 @@ import type {Mounted} from './findings.ts';
 /** Where each gear lies, by the documents' circumference: logarithms, gear 1 first. */
 export type GearPlaces = {
 	readonly at: readonly number[];
+	/** Overall ratios of the gears. */
+	readonly overall: readonly number[];
 	/** How far from it counts as in gear. */
 	readonly within: number;
 	/** Below it, with a closed throttle: the tire does not slip then. */
@@ -24,7 +26,8 @@ const shortestS = 0.06;
 export function gearPlaces({best, clusters}: Pick<Mounted, 'best' | 'clusters'>, slip: number): GearPlaces | undefined {
 	if (best === undefined) return undefined;
 	const shift = Math.log(best.circumferenceFactor);
-	const at = best.candidate.train.overall.map(overall => Math.log(overall) - shift);
+	const {overall} = best.candidate.train;
+	const at = overall.map(ratio => Math.log(ratio) - shift);
 	const gap = Math.min(
 		...at
 			.slice(1)
@@ -33,7 +36,7 @@ export function gearPlaces({best, clusters}: Pick<Mounted, 'best' | 'clusters'>,
 	);
 	const spread = Math.max(0, ...clusters.map(cluster => cluster.spread));
 	const within = Math.min(gapShare * gap, Math.max(leastWithin, Math.min(mostWithin, spreads * spread)));
-	return {at, within, below: Math.min(gapShare * gap, within + Math.log(1 + slip))};
+	return {at, overall, within, below: Math.min(gapShare * gap, within + Math.log(1 + slip))};
 }
 
 /** Counted from 1; 0 where no gear fits. */

@@ -21,15 +21,21 @@ const lengthScale = 0.2;
 /** A place, or a straight, that stays alone costs this; a pair that costs more is no match. */
 const alone = 2;
 const mostCost = 4;
-/** Two ways round that differ by less than this, a straight, look alike. */
-const lookAlike = 0.35;
+/** Two ways round that differ by less than this look alike. */
+const lookAlike = 0.8;
 
-export function matchStraights(track: Track, places: Places, passes: readonly Measured[]): Match {
-	const seen = places.at.map((_, place) => typical(passes.filter((__, i) => places.of[i] === place)));
+/** `rateHz`: of the samples; a run from its first to its last sample is one step shorter than it was, on average. */
+export function matchStraights(track: Track, places: Places, passes: readonly Measured[], rateHz: number): Match {
+	const seen = places.at.map((_, place) =>
+		typical(
+			passes.filter((__, i) => places.of[i] === place),
+			1 / rateHz,
+		),
+	);
 	const {straights} = track;
 	const ways = seen.map((_, turn) => layFrom(turn, seen, straights));
 	const best = ways.reduce((least, way) => (way.cost < least.cost ? way : least));
-	const close = ways.filter(way => way.cost - best.cost < lookAlike * straights.length);
+	const close = different(ways.filter(way => way.cost - best.cost < lookAlike));
 	const chosen = close.length > 1 && places.fromLine ? fromTheLine(close, places, seen) : best;
 	const names = straights.filter((_, i) => !chosen.straightAt.includes(i)).map(({name}) => name);
 	const spare = chosen.straightAt.filter(straight => straight === undefined).length;
@@ -54,18 +60,23 @@ function words(alike: boolean, places: Places, missing: readonly string[], spare
 	return told.join(' ');
 }
 
-function typical(passes: readonly Measured[]): Place {
+function typical(passes: readonly Measured[], stepS: number): Place {
 	const fast = median(passes.map(({highestMps}) => highestMps));
 	const half = passes.filter(({highestMps}) => highestMps >= fast);
 	const middle = (of: (pass: Measured) => number) => median(half.map(of));
 	return {
 		exitMps: middle(pass => pass.exitMps),
 		endMps: middle(pass => pass.endMps),
-		lengthM: middle(pass => pass.lengthM),
+		lengthM: middle(pass => pass.lengthM + stepS * (pass.lengthM / pass.timeS)),
 	};
 }
 
 type Way = {readonly straightAt: (number | undefined)[]; readonly cost: number};
+
+function different(ways: readonly Way[]): Way[] {
+	const same = (one: Way, other: Way) => one.straightAt.every((straight, i) => straight === other.straightAt[i]);
+	return ways.filter((way, i) => ways.findIndex(other => same(way, other)) === i);
+}
 
 /** The cheapest way to lay the places, from `turn` on in order, on the straights in order, leaving out what must be. */
 function layFrom(turn: number, seen: readonly Place[], straights: readonly Straight[]): Way {

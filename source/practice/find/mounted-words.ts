@@ -3,7 +3,6 @@ import {flipped, pairName} from '../../drivetrain/gear-pair.ts';
 import type {Plan} from '../../planning/plan.ts';
 import {listed} from '../../planning/words.ts';
 import type {Fitting, Mounted} from './findings.ts';
-import {plausibleSpan} from './fittings.ts';
 
 type Told = Omit<Mounted, 'gearColumnAgrees' | 'why'>;
 
@@ -18,11 +17,11 @@ function circumferenceText({circumferenceFactor}: Fitting): string {
 	return `a rolling circumference ${percent(Math.abs(off))} ${off < 0 ? 'below' : 'above'} the documents'`;
 }
 
-export function whyMounted(told: Told, plan: Plan): string {
-	return [verdictText(told), alsoText(told), apartText(told, plan)].filter(text => text !== '').join(' ');
+export function whyMounted(told: Told, plan: Plan, span: number): string {
+	return [verdictText(told, span), alsoText(told), apartText(told, plan)].filter(text => text !== '').join(' ');
 }
 
-function verdictText({verdict, best, installed, nearest}: Told): string {
+function verdictText({verdict, best, installed, nearest}: Told, span: number): string {
 	switch (verdict) {
 		case 'asInstalled':
 			return `The log fits ${fittingName(best!)}, as installed, with ${circumferenceText(best!)}.`;
@@ -33,7 +32,7 @@ function verdictText({verdict, best, installed, nearest}: Told): string {
 		case 'flippedFits':
 			return `The log fits ${fittingName(best!)}, that is ${pairName(flipped(best!.candidate.pair))} with its gears on the wrong shafts, with ${circumferenceText(best!)}; not ${insteadText(installed)}. Check the pair by hand before the car runs again.`;
 		case 'nothingFits':
-			return `No pair and set on the rack fits the log within ${percent(plausibleSpan, 0)} of the documents' circumference: the nearest, ${fittingName(nearest!)}, needs ${circumferenceText(nearest!)} and leaves its ratios ${percent(nearest!.residual)} off. Wrong car, wrong units, or a rollout that is far off.`;
+			return `No pair and set on the rack fits the log within ${percent(span)} of the documents' circumference: the nearest, ${fittingName(nearest!)}, needs ${circumferenceText(nearest!)} and leaves its ratios ${percent(nearest!.residual)} off. Wrong car, wrong units, or a rollout that is far off.`;
 		case 'unknown':
 			return 'Too few samples at full throttle to tell the gears.';
 	}

@@ -1,9 +1,9 @@
 /** What was mounted: what is installed by the documents, unless the log speaks clearly against it. */
 import {flipped, samePair} from '../../drivetrain/gear-pair.ts';
 import type {Plan} from '../../planning/plan.ts';
-import type {Hump} from './clusters.ts';
+import type {Hump, Humps} from './clusters.ts';
 import type {Fitting, Mounted, MountedVerdict} from './findings.ts';
-import {explains, fittingsOf, type Installed, isInstalled, type Laid} from './fittings.ts';
+import {explains, fittingsOf, type Installed, isInstalled, type Laid, plausibleSpan} from './fittings.ts';
 import {whyMounted} from './mounted-words.ts';
 
 /** Penalties closer than this are not told apart: three standard deviations, squared. */
@@ -11,21 +11,22 @@ const sameFit = 9;
 const mostAlso = 8;
 
 /**
- * The rule: a pair and set explain the log if a rollout within 2 % of the documents' brings their ratios to within 0.6 % of
- * the humps. What is installed is kept if it explains the log, unless another explains it better by three standard
+ * The rule: a pair and set explain the log if a circumference within the plausible span of the documents' (2 % at low speed,
+ * more where growth counts) brings their ratios to within 0.6 % of the humps. What is installed is kept if it explains the log, unless another explains it better by three standard
  * deviations. Else the likeliest of those that do is named, where a mistake in mounting (the installed pair turned, another
  * pair, another set, a pair that is not on hand) counts as the less likely the more of it there must be.
  */
 export function mountedBy(
 	plan: Plan,
-	humps: readonly Hump[],
+	{humps, speedMps}: Humps,
 	installed: Installed | undefined,
 ): Omit<Mounted, 'gearColumnAgrees'> {
-	const fits = humps.length === 0 ? [] : fittingsOf(plan.car, humps, installed, plan.track.gears);
+	const span = plausibleSpan(speedMps);
+	const fits = humps.length === 0 ? [] : fittingsOf(plan.car, humps, installed, plan.track.gears, span);
 	const documented = fits.find(fit => isInstalled(fit, installed));
-	const explaining = fits.filter(explains);
+	const explaining = fits.filter(fit => explains(fit, span));
 	const first = explaining[0];
-	const kept = documented !== undefined && explains(documented) && documented.penalty - first!.penalty <= sameFit;
+	const kept = documented !== undefined && explains(documented, span) && documented.penalty - first!.penalty <= sameFit;
 	const best = kept ? documented : first;
 	const verdict = verdictOf(humps, best, documented, installed);
 	const alsoFit = explaining
@@ -39,7 +40,7 @@ export function mountedBy(
 		nearest: best === undefined && fits[0] !== undefined ? plain(fits[0]) : undefined,
 		clusters: humps.map((hump, i) => ({...hump, gear: best?.gears[i]})),
 	};
-	return {...mounted, why: whyMounted(mounted, plan)};
+	return {...mounted, why: whyMounted(mounted, plan, span)};
 }
 
 function verdictOf(

@@ -118,7 +118,7 @@ function circumference({circumference: fit, mounted: {verdict}}: Seen, {base}: P
 	}
 	const documented = base.vehicle.rolloutM * (1 + base.vehicle.growth * (fit.atMps / growthReferenceMps) ** 2);
 	const off = fit.circumferenceM.value / documented - 1;
-	if (Math.abs(off) > plausibleSpan) {
+	if (Math.abs(off) > plausibleSpan(fit.atMps)) {
 		notes.push({
 			code: 'farCircumference',
 			text: `The circumference is ${(100 * Math.abs(off)).toFixed(1)} % ${off < 0 ? 'below' : 'above'} the documents': more than a rollout is usually off.`,
