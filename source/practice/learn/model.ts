@@ -1,9 +1,11 @@
 /** The plan's own model, asked for the run of one straight as practice had it. */
 import type {Car} from '../../drivetrain/car.ts';
+import type {RoadGears} from '../../drivetrain/road-gears.ts';
+import {speedTrace, type TracePoint} from '../../drivetrain/speed-trace.ts';
 import {speedAtRpmMps} from '../../drivetrain/tire.ts';
 import type {Straight, Track} from '../../drivetrain/track.ts';
-import {planFor} from '../../planning/plan.ts';
-import {rpmAt, runPlace} from '../../planning/run-place.ts';
+import {type Plan, planFor} from '../../planning/plan.ts';
+import {type PlaceRun, rpmAt, runPlace} from '../../planning/run-place.ts';
 import type {Reading} from './reading.ts';
 import {type Trim, trimmed} from './trim.ts';
 
@@ -27,12 +29,44 @@ export type Nudge = {readonly exitMps?: number; readonly lengthM?: number};
 /** Asks the model for the run of a reading; undefined where the car does not run there. */
 export type AskModel = (reading: Reading, trim: Trim, nudge?: Nudge) => ModelRun | undefined;
 
+/** The run told along the way; undefined where the car does not run there. */
+export type TraceModel = (reading: Reading, trim: Trim, nudge?: Nudge) => readonly TracePoint[] | undefined;
+
 /** The model of a car at a track in the situation `Base`. Both must be such that a plan can be made of them. */
 export function modelOf(car: Car, track: Track): AskModel {
+	const run = runnerOf(car, track);
+	return (reading, trim, nudge) => {
+		const drive = run(reading, trim, nudge);
+		return drive && described(drive, reading);
+	};
+}
+
+/** The same model, told along the way. */
+export function tracesOf(car: Car, track: Track): TraceModel {
+	const run = runnerOf(car, track);
+	return (reading, trim, nudge) => {
+		const drive = run(reading, trim, nudge);
+		if (drive?.run.sequence === undefined || drive.run.course === undefined) return undefined;
+		return speedTrace(drive.gears, drive.run.course, drive.run.sequence, tracePoints);
+	};
+}
+/** Points along a straight: more than a terminal has dots across. */
+const tracePoints = 120;
+
+type Drive = {readonly plan: Plan; readonly gears: RoadGears; readonly run: PlaceRun};
+
+function runnerOf(car: Car, track: Track) {
 	const alone = {...track, situations: track.situations.slice(0, 1), pitRoad: undefined, restart: undefined};
-	return (reading, trim, {exitMps = reading.exitMps?.value, lengthM = reading.lengthM} = {}) => {
+	return (reading: Reading, trim: Trim, nudge: Nudge = {}): Drive | undefined => {
+		const {exitMps = reading.exitMps?.value, lengthM = reading.lengthM} = nudge;
 		const straight = straightOf(track, {...reading, lengthM}, exitMps);
-		return runOf(car, trimmed(car, {...alone, straights: [straight]}, trim), reading) ?? undefined;
+		const plan = planFor(car, trimmed(car, {...alone, straights: [straight]}, trim));
+		if (!plan.ok) return undefined;
+		const {base, roads} = plan.value;
+		const place = base.places[0]!;
+		const gears = roads.gearsFor(reading.candidate.train)(place.road);
+		const run = runPlace(base, place, gears);
+		return run.state === 'ran' ? {plan: plan.value, gears, run} : undefined;
 	};
 }
 
@@ -50,13 +84,8 @@ function straightOf(track: Track, reading: Reading, exitMps: number | undefined)
 	};
 }
 
-function runOf(car: Car, track: Track, {candidate, lengthM}: Reading): ModelRun | undefined {
-	const plan = planFor(car, track);
-	if (!plan.ok) return undefined;
-	const {base, roads} = plan.value;
-	const place = base.places[0]!;
-	const {state, result, lastGear} = runPlace(base, place, roads.gearsFor(candidate.train)(place.road));
-	if (state !== 'ran') return undefined;
+function described({plan: {base}, run}: Drive, {candidate, lengthM}: Reading): ModelRun {
+	const {result, lastGear} = run;
 	const {endSpeedMps, endRpm, endGear, finalSpeedMps, timeS, limiterM, reachRpm} = result;
 	const overall = (gear: number) => candidate.train.overall[gear - 1]!;
 	if (limiterM > 0 && reachRpm !== null) {
