@@ -1,11 +1,10 @@
 /** Accepting and taking back: edits of the documents, each with the record of where its value came from. */
-import {type Json, type JsonObject, type Path, valueAt, without, withValue} from '../../documents/json.ts';
+import type {Edit} from '../../documents/edit-text.ts';
+import {type Json, type JsonObject, type Path, valueAt} from '../../documents/json.ts';
 import {type Learned, learnedIn} from '../../documents/learned.ts';
 import {pathText} from '../../documents/problem.ts';
 import type {DocumentName, Proposal, Write} from './proposals.ts';
 
-/** One change of a document's JSON; an undefined value takes the field out. */
-export type Edit = {readonly path: Path; readonly value: Json | undefined};
 export type Edits = Readonly<Record<DocumentName, readonly Edit[]>>;
 
 export type Origin = {
@@ -79,14 +78,6 @@ export function takeBackEdits(taken: readonly Takeable[], documents: Documents):
 			return [name, own.length === 0 ? [] : [...values, recordEdit(kept)]];
 		}),
 	) as Record<DocumentName, Edit[]>;
-}
-
-/** The JSON with the edits made. A group that an edit leaves empty goes as well. */
-export function edited(document: JsonObject, edits: readonly Edit[]): JsonObject {
-	return edits.reduce(
-		(json, {path, value}) => (value === undefined ? without(json, path) : withValue(json, path, value)),
-		document,
-	);
 }
 
 /** `straights[1].measured.end` as the path that it is; the inverse of `pathText` for the names of our fields. */

@@ -1,10 +1,11 @@
 import {describe, expect, test} from 'vitest';
+import {withEdits} from '../../../source/documents/edit-text.ts';
 import {type JsonObject, valueAt, withValue} from '../../../source/documents/json.ts';
 import {learnedIn} from '../../../source/documents/learned.ts';
 import {mphMps} from '../../../source/drivetrain/constants.ts';
 import {rankRack} from '../../../source/planning/rank-rack.ts';
 import type {Ranking} from '../../../source/planning/results.ts';
-import {acceptEdits, edited, pathOf, takeablesIn, takeBackEdits} from '../../../source/practice/learn/accept.ts';
+import {acceptEdits, pathOf, takeablesIn, takeBackEdits} from '../../../source/practice/learn/accept.ts';
 import {effectOf} from '../../../source/practice/learn/effect.ts';
 import {candidateFor, learnFromSeen} from '../../../source/practice/learn/learn.ts';
 import {type DocumentsAsWritten, type Proposal, proposalsOf} from '../../../source/practice/learn/proposals.ts';
@@ -28,14 +29,14 @@ function proposed(seen: readonly Seen[], held: Held, of: DocumentsAsWritten = do
 const origin = {from: '1 number seen by hand', date: '2026-05-02'};
 const accept = (proposals: readonly Proposal[], of: DocumentsAsWritten): DocumentsAsWritten => {
 	const edits = acceptEdits(proposals, of, origin);
-	return {track: edited(of.track, edits.track), car: edited(of.car, edits.car)};
+	return {track: withEdits(of.track, edits.track), car: withEdits(of.car, edits.car)};
 };
 const takeBack = (of: DocumentsAsWritten, name?: string): DocumentsAsWritten => {
 	const edits = takeBackEdits(
 		takeablesIn(of).filter(one => name === undefined || one.name === name),
 		of,
 	);
-	return {track: edited(of.track, edits.track), car: edited(of.car, edits.car)};
+	return {track: withEdits(of.track, edits.track), car: withEdits(of.car, edits.car)};
 };
 const at = (document: JsonObject, path: string) => valueAt(document, pathOf(path));
 

@@ -1,9 +1,10 @@
 import {describe, expect, test} from 'vitest';
+import {withEdits} from '../../../source/documents/edit-text.ts';
 import {harmonicRolloutM} from '../../../source/drivetrain/tire.ts';
 import {planFor} from '../../../source/planning/plan.ts';
 import {carAt} from '../../../source/planning/situations.ts';
 import {findInLog} from '../../../source/practice/find/find-in-log.ts';
-import {acceptEdits, edited} from '../../../source/practice/learn/accept.ts';
+import {acceptEdits} from '../../../source/practice/learn/accept.ts';
 import {candidateFor, type Learning, learnFromFindings, type Subject} from '../../../source/practice/learn/learn.ts';
 import {proposalsOf} from '../../../source/practice/learn/proposals.ts';
 import {runs} from '../../runs.ts';
@@ -78,7 +79,7 @@ describe('a logged run of a car with 6 % more drag, 0.6 % more rollout and more 
 	test('once accepted, has the documents say what the car is', () => {
 		const proposals = proposalsOf(demo, written, learning, findingsOf(log), 'us');
 		const edits = acceptEdits(proposals, written, {from: learning.from, date: '2026-05-02'});
-		const after = subjectOf({track: edited(written.track, edits.track), car: edited(written.car, edits.car)});
+		const after = subjectOf({track: withEdits(written.track, edits.track), car: withEdits(written.car, edits.car)});
 		const {tires, dragAreaM2} = carAt(after.track, after.car);
 		expect(harmonicRolloutM(tires.leftM, tires.rightM) / log.vehicle.rolloutM).toBeCloseTo(1, 2);
 		expect(dragAreaM2 / log.vehicle.dragAreaM2).toBeCloseTo(1, 2);

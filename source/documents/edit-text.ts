@@ -1,0 +1,43 @@
+/** Edits of a document's text that leave all the rest as it was written: order, indents, line breaks. */
+import {applyEdits, type FormattingOptions, modify} from 'jsonc-parser';
+import {type Json, type JsonObject, type Path, valueAt, without, withValue} from './json.ts';
+
+/** One change of a document; an undefined value takes the field out, and a group that is empty then as well. */
+export type Edit = {readonly path: Path; readonly value: Json | undefined};
+
+/** The JSON with the edits made. */
+export function withEdits(document: JsonObject, edits: readonly Edit[]): JsonObject {
+	return edits.reduce(
+		(json, {path, value}) => (value === undefined ? without(json, path) : withValue(json, path, value)),
+		document,
+	);
+}
+
+/** The text of a document, which must be JSON, with the same edits made. */
+export function editText(text: string, edits: readonly Edit[]): string {
+	const mark = text.startsWith('\uFEFF') ? '\uFEFF' : '';
+	let [edited, json] = [text.slice(mark.length), JSON.parse(text.slice(mark.length)) as JsonObject];
+	const formattingOptions = formatOf(edited);
+	for (const edit of edits) {
+		const next = withEdits(json, [edit]);
+		const path = edit.value === undefined ? emptiedBy(edit.path, next) : edit.path;
+		if (edit.value !== undefined || valueAt(json, path) !== undefined)
+			edited = applyEdits(edited, modify(edited, [...path], edit.value, {formattingOptions}));
+		json = next;
+	}
+	return mark + edited;
+}
+
+/** The outermost group that is gone with the field. */
+function emptiedBy(path: Path, after: JsonObject): Path {
+	let gone = path;
+	while (gone.length > 1 && valueAt(after, gone.slice(0, -1)) === undefined) gone = gone.slice(0, -1);
+	return gone;
+}
+
+/** As the text is indented. */
+function formatOf(text: string): FormattingOptions {
+	const indent = /\n([ \t]+)"/.exec(text)?.[1] ?? '\t';
+	const insertSpaces = !indent.startsWith('\t');
+	return {insertSpaces, tabSize: insertSpaces ? indent.length : 1, eol: text.includes('\r\n') ? '\r\n' : '\n'};
+}
