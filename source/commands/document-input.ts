@@ -2,6 +2,7 @@
 import {sep} from 'node:path';
 import {describeProblems, maxDocumentBytes, type Reading} from '../documents/read.ts';
 import {visible} from '../documents/visible.ts';
+import type {Uncertainties} from '../drivetrain/uncertainties.ts';
 import {findDocument, isFileName} from './find-document.ts';
 import {type Input, readFileText, readStandardInput} from './read-input.ts';
 import {badInput, type Found, found} from './reply.ts';
@@ -45,7 +46,13 @@ const unnamed = (input: Found<Input>): Found<DocumentInput> =>
 const labelOf = ({from, kind, name, file}: Shelved): string =>
 	from === 'saved' ? `the saved ${kind} ${visible(name)}` : file;
 
-type Read<T> = {label: string; value: T; document: Record<string, unknown>; notes: string[]};
+type Read<T> = {
+	label: string;
+	value: T;
+	document: Record<string, unknown>;
+	uncertainties: Uncertainties;
+	notes: string[];
+};
 
 /** The document in a text that was found. */
 export const load = async <T>(
@@ -56,5 +63,5 @@ export const load = async <T>(
 	const {label, text, notes} = input.value;
 	const reading = await read(text);
 	if (!reading.ok) return badInput(describeProblems(label, reading.problems));
-	return found({label, value: reading.value, document: reading.document, notes});
+	return found({label, value: reading.value, document: reading.document, uncertainties: reading.uncertainties, notes});
 };

@@ -1,5 +1,5 @@
 /** Edits of a document's text that leave all the rest as it was written: order, indents, line breaks. */
-import {applyEdits, type FormattingOptions, modify} from 'jsonc-parser';
+import {applyEdits, type FormattingOptions, findNodeAtLocation, modify, parseTree} from 'jsonc-parser';
 import {type Json, type JsonObject, type Path, valueAt, without, withValue} from './json.ts';
 
 /** One change of a document; an undefined value takes the field out, and a group that is empty then as well. */
@@ -22,10 +22,24 @@ export function editText(text: string, edits: readonly Edit[]): string {
 		const next = withEdits(json, [edit]);
 		const path = edit.value === undefined ? emptiedBy(edit.path, next) : edit.path;
 		if (edit.value !== undefined || valueAt(json, path) !== undefined)
-			edited = applyEdits(edited, modify(edited, [...path], edit.value, {formattingOptions}));
+			edited =
+				onOneLine(edited, path, edit.value) ??
+				applyEdits(edited, modify(edited, [...path], edit.value, {formattingOptions}));
 		json = next;
 	}
 	return mark + edited;
+}
+
+/** A group that is written on one line stays on one line; undefined where the field does not stand in one. */
+function onOneLine(text: string, path: Path, value: Json | undefined): string | undefined {
+	const group = findNodeAtLocation(parseTree(text)!, [...path.slice(0, -1)]);
+	if (group?.type !== 'object' || !group.children || group.children.length === 0) return undefined;
+	if (text.slice(group.offset, group.offset + group.length).includes('\n')) return undefined;
+	const isThere = findNodeAtLocation(group, [path.at(-1)!]) !== undefined;
+	if (isThere || value === undefined) return applyEdits(text, modify(text, [...path], value, {}));
+	const last = group.children.at(-1)!;
+	const end = last.offset + last.length;
+	return `${text.slice(0, end)}, ${JSON.stringify(path.at(-1))}: ${JSON.stringify(value)}${text.slice(end)}`;
 }
 
 /** The outermost group that is gone with the field. */

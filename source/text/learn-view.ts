@@ -1,11 +1,18 @@
 /** What practice teaches, as a person reads it: what was fitted, the model against practice, what would change. */
+import type {Setting} from '../planning/results.ts';
 import {speedText} from '../planning/words.ts';
+import type {Findings, NoteCode} from '../practice/find/findings.ts';
 import type {Anchor, StraightAnchor} from '../practice/learn/anchor.ts';
 import type {CircumferenceLearned} from '../practice/learn/circumference.ts';
 import type {Compared} from '../practice/learn/compared.ts';
+import type {Effect} from '../practice/learn/effect.ts';
 import type {Learning} from '../practice/learn/learn.ts';
+import type {LapPicture, RatioPicture} from '../practice/learn/pictures.ts';
 import type {Proposal, ProposalRow} from '../practice/learn/proposals.ts';
-import {type Block, cell, type Making, tableOf, text} from './blocks.ts';
+import {type Block, cell, gap, type Making, picture, tableOf, text} from './blocks.ts';
+import {foundView} from './found-view.ts';
+import {closingView, type Heading, headingView} from './heading-view.ts';
+import {lapChart, lapLegend, lapTitle, ratioChart, ratioTitle} from './practice-pictures.ts';
 import {absent, fixed, rpm, signed, type Units} from './units.ts';
 
 const inchM = 0.0254;
@@ -54,8 +61,10 @@ function circumferenceWords({rolloutM, factor, growth, slipHeld, growthHeld}: Ci
 function anchorWords(anchor: Anchor | undefined, limited: readonly string[]): string[] {
 	const onLimiter = limited.map(name => `${name} ends on the limiter: it says nothing about drag and power.`);
 	if (anchor === undefined) return onLimiter;
-	const factor = (name: string, what: Anchor['drag']) =>
-		what === undefined ? [] : [`${name} ${signed(100 * (what.value - 1), 1)} %, known to ${percent(what.se, 1)}.`];
+	const factor = (name: string, what: Anchor['drag'], held: string) =>
+		what === undefined
+			? []
+			: [`${name} ${signed(100 * (what.value - 1), 1)} %, known to ${percent(what.se, 1)}; ${held}.`];
 	const lost = anchor.straights
 		.filter(({alone}) => alone === undefined)
 		.map(
@@ -68,79 +77,86 @@ function anchorWords(anchor: Anchor | undefined, limited: readonly string[]): st
 					`The straights disagree by ${fixed(anchor.misfit, 1)} times what their numbers are known to: something else differs between them, such as wind or length.`,
 				]
 			: [];
-	return [...factor('Drag area', anchor.drag), ...factor('Power', anchor.power), ...scattered, ...lost, ...onLimiter];
+	return [
+		...factor('Drag area', anchor.drag, anchor.power ? 'the long straights tell it' : powerHeld),
+		...factor('Power', anchor.power, anchor.drag ? 'the short straights tell it' : dragHeld),
+		...aloneWords(anchor.straights),
+		...scattered,
+		...lost,
+		...onLimiter,
+	];
 }
+const powerHeld = 'power was held, since a straight cannot tell it from drag';
+const dragHeld = 'drag was held, since 1 % of it moves the end of these straights by less than 0.2 mph (0.3 km/h)';
+
+/** "Each straight by itself: Front drag +5.6 % (to 0.2 %), Back drag +5.9 % (to 0.2 %)." */
+function aloneWords(straights: readonly StraightAnchor[]): string[] {
+	const asked = straights.flatMap(({reading, tells, alone}) =>
+		alone === undefined
+			? []
+			: [`${reading.name} ${tells} ${signed(100 * (alone.value - 1), 1)} % (to ${percent(alone.se, 1)})`],
+	);
+	return asked.length < 2 ? [] : [`Each straight by itself: ${asked.join(', ')}.`];
+}
+
 /** Of two straights one in twenty misfits is above 2. */
 const scattersFrom = 2;
 
-type Line = {readonly compared: Compared; readonly anchored: StraightAnchor | undefined};
-
 /** Practice beside the model: `was` and `is` are the model less practice, before and after. */
-export function comparedView({compared, anchor}: Pick<Learning, 'compared' | 'anchor'>, units: Units): Block[] {
+export function comparedView(compared: readonly Compared[], units: Units): Block[] {
 	if (compared.length === 0) return [];
-	const lines = compared.map((one): Line => {
-		const anchored = anchor?.straights.find(({reading}) => reading.index === one.reading.index);
-		return {compared: one, anchored};
-	});
 	return [
 		text('Model against practice', 'strong'),
-		tableOf(comparedColumns(units, lines), lines, 2),
-		text(legendFor(lines), 'muted', 2),
+		tableOf(comparedColumns(units, compared), compared, 2),
+		text('was, is: the model less practice, before and after', 'muted', 2),
 	];
 }
 
-const legendFor = (lines: readonly Line[]): string =>
-	[
-		'was, is: the model less practice, before and after',
-		...(lines.some(({anchored}) => anchored) ? ['alone: what this straight by itself asks for'] : []),
-	].join('; ');
-
-function comparedColumns(units: Units, lines: readonly Line[]): Making<Line>[] {
-	const isTimed = lines.some(({compared}) => compared.reading.timeS !== undefined);
-	const isAnchored = lines.some(({anchored}) => anchored);
-	const some = (wanted: boolean, ...makings: Making<Line>[]) => (wanted ? makings : []);
+function comparedColumns(units: Units, compared: readonly Compared[]): Making<Compared>[] {
+	const isTimed = compared.some(({reading}) => reading.timeS !== undefined);
+	const some = (wanted: boolean, ...makings: Making<Compared>[]) => (wanted ? makings : []);
 	const speed = (value: number | undefined, seen: number | undefined) =>
 		value === undefined || seen === undefined ? absent : signedSpeed(units, value - seen);
 	const difference = (value: number | null | undefined, seen: number | undefined, digits: number) =>
 		value === undefined || value === null || seen === undefined ? absent : signed(value - seen, digits);
 	return [
-		{head: 'straight', align: 'left', keep: 0, shortest: 8, cell: ({compared}) => cell(compared.reading.name)},
+		{head: 'straight', align: 'left', keep: 0, shortest: 8, cell: ({reading}) => cell(reading.name)},
 		{
 			head: `end ${units.label('speed')}`,
 			align: 'right',
 			keep: 1,
-			cell: ({compared: {reading}}) =>
+			cell: ({reading}) =>
 				cell(units.number('speed', reading.endMps?.value ?? null), reading.speedSeen ? 'strong' : 'plain'),
 		},
 		{
 			head: 'was',
 			align: 'right',
 			keep: 3,
-			cell: ({compared: {reading, before}}) => cell(speed(before?.endMps, reading.endMps?.value)),
+			cell: ({reading, before}) => cell(speed(before?.endMps, reading.endMps?.value)),
 		},
 		{
 			head: 'is',
 			align: 'right',
 			keep: 2,
-			cell: ({compared: {reading, after}}) => cell(speed(after?.endMps, reading.endMps?.value), 'strong'),
+			cell: ({reading, after}) => cell(speed(after?.endMps, reading.endMps?.value), 'strong'),
 		},
 		{
 			head: 'rpm',
 			align: 'right',
 			keep: 0,
-			cell: ({compared: {reading}}) => cell(rpm(reading.endRpm?.value ?? null), 'strong'),
+			cell: ({reading}) => cell(rpm(reading.endRpm?.value ?? null), 'strong'),
 		},
 		{
 			head: 'was',
 			align: 'right',
 			keep: 1,
-			cell: ({compared: {reading, before}}) => cell(difference(before?.endRpm, reading.endRpm?.value, 0)),
+			cell: ({reading, before}) => cell(difference(before?.endRpm, reading.endRpm?.value, 0)),
 		},
 		{
 			head: 'is',
 			align: 'right',
 			keep: 0,
-			cell: ({compared: {reading, after}}) => cell(difference(after?.endRpm, reading.endRpm?.value, 0), 'strong'),
+			cell: ({reading, after}) => cell(difference(after?.endRpm, reading.endRpm?.value, 0), 'strong'),
 		},
 		...some(
 			isTimed,
@@ -148,27 +164,21 @@ function comparedColumns(units: Units, lines: readonly Line[]): Making<Line>[] {
 				head: 'time s',
 				align: 'right',
 				keep: 4,
-				cell: ({compared: {reading}}) => cell(reading.timeS ? fixed(reading.timeS.value, 3) : absent),
+				cell: ({reading}) => cell(reading.timeS ? fixed(reading.timeS.value, 3) : absent),
 			},
 			{
 				head: 'was',
 				align: 'right',
 				keep: 6,
-				cell: ({compared: {reading, before}}) => cell(difference(before?.timeS, reading.timeS?.value, 3)),
+				cell: ({reading, before}) => cell(difference(before?.timeS, reading.timeS?.value, 3)),
 			},
 			{
 				head: 'is',
 				align: 'right',
 				keep: 5,
-				cell: ({compared: {reading, after}}) => cell(difference(after?.timeS, reading.timeS?.value, 3)),
+				cell: ({reading, after}) => cell(difference(after?.timeS, reading.timeS?.value, 3)),
 			},
 		),
-		...some(isAnchored, {
-			head: 'alone',
-			align: 'left',
-			keep: 7,
-			cell: ({anchored}) => cell(aloneText(anchored), 'muted'),
-		}),
 	];
 }
 
@@ -177,31 +187,27 @@ const signedSpeed = (units: Units, differenceMps: number): string => {
 	return text.startsWith('-') || Number(text) === 0 ? text : `+${text}`;
 };
 
-/** "drag +5.7 %", with how well this straight knows it. */
-function aloneText(anchored: StraightAnchor | undefined): string {
-	if (anchored === undefined) return absent;
-	const {tells, alone} = anchored;
-	return alone === undefined
-		? `no ${tells} does`
-		: `${tells} ${signed(100 * (alone.value - 1), 1)} % to ${percent(alone.se, 1)}`;
-}
-
-/** What would be written, and what stands there now. */
+/** What would be written, and what stands there now; of what was accepted, what was written, and what was left. */
 export function proposalsView(proposals: readonly Proposal[], accepted: readonly string[]): Block[] {
 	if (proposals.length === 0) return [text('Nothing would change in the documents.', 'plain')];
-	const lines = proposals.flatMap(({name, rows}) =>
-		rows.map((row, i) => ({name: i === 0 ? name : '', row, taken: accepted.includes(name)})),
-	);
+	const taken = proposals.filter(({name}) => accepted.includes(name));
+	const left = proposals.filter(({name}) => !accepted.includes(name));
 	return [
-		text(accepted.length > 0 ? 'What was accepted' : 'What would change, once accepted', 'strong'),
-		tableOf(proposalColumns, lines, 2),
+		...tableWith('Accepted', taken),
+		...tableWith(taken.length > 0 ? 'Not accepted' : 'What would change, once accepted', left),
 	];
 }
 
-type ProposalLine = {readonly name: string; readonly row: ProposalRow; readonly taken: boolean};
+function tableWith(title: string, proposals: readonly Proposal[]): Block[] {
+	if (proposals.length === 0) return [];
+	const lines = proposals.flatMap(({name, rows}) => rows.map((row, i) => ({name: i === 0 ? name : '', row})));
+	return [text(title, 'strong'), tableOf(proposalColumns, lines, 2)];
+}
+
+type ProposalLine = {readonly name: string; readonly row: ProposalRow};
 
 const proposalColumns: readonly Making<ProposalLine>[] = [
-	{head: 'accept', align: 'left', keep: 0, shortest: 10, cell: ({name, taken}) => cell(name, taken ? 'pass' : 'plain')},
+	{head: 'accept', align: 'left', keep: 0, shortest: 10, cell: ({name}) => cell(name)},
 	{head: 'what', align: 'left', keep: 1, shortest: 12, cell: ({row}) => cell(row.label)},
 	{
 		head: 'now',
@@ -215,3 +221,71 @@ const proposalColumns: readonly Making<ProposalLine>[] = [
 
 /** The sign has no stand-in that says the same in ASCII. */
 const writtenText = (value: string | number): string => String(value).replace(' ± ', ' +/- ');
+
+export type LearnAnswer = {
+	readonly heading: Heading;
+	readonly setting: Setting;
+	readonly learning: Learning;
+	readonly findings: Findings | undefined;
+	readonly proposals: readonly Proposal[];
+	/** Names of those that were written. */
+	readonly accepted: readonly string[];
+	readonly effect: Effect | undefined;
+	/** What reading the log had to say. */
+	readonly remarks: readonly string[];
+	readonly pictures: {readonly ratio: RatioPicture; readonly lap: LapPicture | undefined} | undefined;
+};
+
+const pictureLines = 14;
+
+/** What the view says elsewhere. */
+const toldAbove: readonly NoteCode[] = ['pair', 'wrongCar', 'slipHeld', 'wheelspin'];
+export const notesOn = (findings: Findings): string[] =>
+	findings.notes.filter(({code}) => !toldAbove.includes(code)).map(note => note.text);
+const isUnclear = (findings: Findings | undefined): boolean =>
+	findings?.mounted.verdict === 'otherFits' || findings?.mounted.verdict === 'flippedFits';
+
+/** The whole answer. */
+export function learnView(answer: LearnAnswer, units: Units): Block[] {
+	const {heading, setting, learning, findings, proposals, accepted, effect, remarks} = answer;
+	const {candidate, from} = learning;
+	const withPair = candidate === undefined ? '' : `, with ${candidate.pairName} ${candidate.gearbox.name}`;
+	const notes = [...remarks, ...(findings ? notesOn(findings) : [])];
+	return [
+		...headingView(heading, `learned from ${from}${withPair}`, setting, units),
+		gap,
+		...(findings === undefined ? [] : [...foundView(findings, units), gap]),
+		...fittedView(learning),
+		gap,
+		...comparedView(learning.compared, units),
+		...(learning.compared.length > 0 ? [gap] : []),
+		...(effect === undefined ? [] : [text(effect.words, 'strong'), gap]),
+		...proposalsView(proposals, accepted),
+		...(proposals.length > 0 && accepted.length === 0
+			? [text(isUnclear(findings) ? unclearWords : acceptWords, isUnclear(findings) ? 'near' : 'muted', 2)]
+			: []),
+		gap,
+		...picturesView(answer, units),
+		...closingView(notes),
+	];
+}
+
+const acceptWords = 'Nothing is written yet: --accept all, or --accept NAME for one of them.';
+const unclearWords = 'Before any of it is accepted, say what was in the car: --pair and --gearbox.';
+
+function picturesView({pictures, learning}: LearnAnswer, units: Units): Block[] {
+	if (pictures === undefined || pictures.ratio.points.length === 0) return [];
+	const {ratio, lap} = pictures;
+	return [
+		text(
+			ratioTitle(learning.candidate && `${learning.candidate.pairName} ${learning.candidate.gearbox.name}`),
+			'strong',
+			2,
+		),
+		picture(ratioChart(ratio), pictureLines),
+		gap,
+		...(lap === undefined
+			? []
+			: [text(lapTitle(lap), 'strong'), picture(lapChart(lap, units), pictureLines), text(lapLegend, 'muted', 2), gap]),
+	];
+}

@@ -41,3 +41,5 @@ export const lapTitle = ({lap}: LapPicture): string => `Speed along lap ${lap}`;
 function inUnits(units: Units, quantity: 'distance' | 'speed', value: number): number {
 	return value * units.perSi(quantity);
 }
+
+export const lapLegend = 'dim: the log; solid over it: the model with what was learned; dotted: the model as it was.';

@@ -22,6 +22,13 @@ test('a new group comes in with the indents of the text, and goes without a trac
 	expect(editText(edited, [{path: ['car', 'tires', 'left'], value: undefined}])).toBe(text);
 });
 
+test('a group on one line stays on it', () => {
+	const value = '29.1 inHg';
+	const edited = editText(text, [{path: ['air', 'pressure'], value}]);
+	expect(edited).toContain(`"air": { "temperature": "75 degF", "pressure": "${value}" },`);
+	expect(editText(edited, [{path: ['air', 'pressure'], value: undefined}])).toBe(text);
+});
+
 test('a list is written and taken out again', () => {
 	const edits = [{path: ['learned'], value: [{field: 'car.grip', value: 1.2}]}];
 	const edited = editText(text, edits);

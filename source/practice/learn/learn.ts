@@ -91,7 +91,7 @@ export function learnFromMeasured(subject: Subject): Outcome<Learning> {
 			from,
 			candidate: readings[0]?.candidate,
 			circumference: undefined,
-			held: 'circumference',
+			held: readings.some(({speedSeen}) => !speedSeen) ? 'circumference' : undefined,
 			readings,
 		});
 	});

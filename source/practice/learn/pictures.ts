@@ -64,12 +64,18 @@ export function lapPicture(
 	const startM = run.distanceM[from]!;
 	const logged: [number, number][] = [];
 	const step = Math.max(1, Math.floor((to - from) / pointsOfLap));
-	for (let i = from; i < to; i += step) logged.push([run.distanceM[i]! - startM, run.speedMps[i]!]);
+	for (let i = from; i < to; i += step) logged.push([run.distanceM[i]! - startM, middleOf(run.speedMps, i)]);
 	const passes = findings.passes.filter(pass => pass.lap === middle.index && pass.good);
 	const trace = (learned: boolean) => passes.flatMap(pass => modelAlong(subject, learning, pass, startM, learned));
 	return {lap: number, logged, before: trace(false), after: trace(true)};
 }
 const pointsOfLap = 600;
+
+/** The middle of five samples: one that is far off would take the whole height of the picture. */
+function middleOf(values: Float32Array, at: number): number {
+	const around = [...values.slice(Math.max(0, at - 2), at + 3)].filter(Number.isFinite).sort((a, b) => a - b);
+	return around[Math.floor(around.length / 2)] ?? Number.NaN;
+}
 
 function modelAlong(
 	{car, track}: Subject,
