@@ -72,6 +72,9 @@ export type DrivenPass = {
 };
 
 export const stepS = 0.01;
+/** A missed shift takes so long, with the engine free so far above. */
+const missedS = 0.7;
+const flareRpm = 700;
 const brakingMps2 = 7;
 const pickUpMps2 = 1.6;
 
@@ -127,25 +130,31 @@ export class Drive {
 		const begun = {lap: this.#lap, kind, straight: index, startS: this.#timeS, exitMps: this.#speedMps};
 		const startM = this.#distanceM;
 		const finish = this.#finishLine(startM + driving.finishShare * course.lengthM, index === 0);
-		let [shiftAt, outS, flareRpm, missedShift] = [this.#shiftRpm(), 0, 0, false];
+		let [shiftAt, outS, missing, missedShift] = [this.#shiftRpm(), 0, false, false];
 		while (this.#distanceM - startM < lengthM && !this.#mustBrake(course, startM + lengthM)) {
 			const sinceS = this.#timeS - begun.startS;
 			const spinning = spins && sinceS < spin.forS ? spin.most * (1 - sinceS / spin.forS) : 0;
 			const rpm = this.#rpm(this.#gear, slip) * (1 + spinning);
 			if (outS <= 0 && rpm > shiftAt && this.#gear < driving.highestGear) {
-				const misses = chance.share() < driving.missed;
-				missedShift ||= misses;
-				[outS, flareRpm] = misses ? [0.7, 700] : [driving.vehicle.shiftTimeS, -0.05 * rpm];
+				missing = chance.share() < driving.missed;
+				missedShift ||= missing;
+				outS = missing ? missedS : driving.vehicle.shiftTimeS;
 				this.#gear++;
 				shiftAt = this.#shiftRpm();
 			}
 			if (outS > 0) {
-				this.#note(this.#rpm(this.#gear - 1, slip) + flareRpm, 1, 0);
+				const goneShare = 1 - outS / driving.vehicle.shiftTimeS;
+				const [left, entered] = [this.#rpm(this.#gear - 1, slip), this.#rpm(this.#gear, slip)];
+				this.#note(missing ? left + flareRpm : left + goneShare * (entered - left), 1, 0);
 				this.#step(v => accelerationOut(driving.vehicle, course, v));
 				outS -= stepS;
 			} else {
 				this.#note(rpm, 1, this.#gear, spinning > 0 ? 'spin' : 'steady');
-				this.#step(v => accelerationIn(driving.vehicle, driving.train, course, this.#gear, v));
+				const cut = rpm >= driving.vehicle.limiterRpm;
+				this.#step(v => {
+					const acceleration = accelerationIn(driving.vehicle, driving.train, course, this.#gear, v);
+					return cut ? Math.min(0, acceleration) : acceleration;
+				});
 			}
 			finish.pass();
 		}

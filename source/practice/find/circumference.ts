@@ -8,6 +8,7 @@ import {median, quantile, sorted} from '../fit/robust.ts';
 import {fewGroupsFactor} from '../fit/student.ts';
 import type {Channels} from './channels.ts';
 import {type CircumferenceFit, type Estimate, type Pass, sampleState} from './findings.ts';
+import {growthSd} from './fittings.ts';
 
 /** One block of steady samples in one gear of one pass. */
 type Readings = {
@@ -22,8 +23,8 @@ const blockS = 0.5;
 /** A block with less of its samples than this is left out. */
 const leastFilled = 0.5;
 const fewestReadings = 4;
-/** Growth less sure than this, as a fraction at 100 mph, is held: half of what rollouts usually grow. */
-const leastSureGrowth = 0.004;
+/** Growth less sure than this, as a fraction at 100 mph, is held: the documents' is about as good. */
+const leastSureGrowth = 0.002;
 
 /**
  * Huber's fit of C = β0 + β1·(V/V_ref)² to blocks of steady full-throttle samples, C = 60·V·(1 + κ)·R/n: C0 = β0, γ = β1/β0.
@@ -84,23 +85,36 @@ function fitted({circumferenceM, square, pass}: Readings, held: number | undefin
 	const slope = held === undefined ? fit.coefficients[1]! : (held * level) / (1 + held * middle);
 	const rollout = level - slope * middle;
 	const growth = slope / rollout;
-	// By the first derivatives (delta method): C0 = level − slope·m, γ = slope/C0.
-	const share = held === undefined ? 1 : rollout / level;
-	const vRollout = held === undefined ? vLevel - 2 * middle * vBoth + middle ** 2 * vSlope : vLevel * share ** 2;
-	const [byLevel, bySlope] = [-growth / rollout, (1 + growth * middle) / rollout];
-	const vGrowth =
-		held === undefined ? byLevel ** 2 * vLevel + 2 * byLevel * bySlope * vBoth + bySlope ** 2 * vSlope : 0;
-	const together = byLevel * vLevel + (bySlope - middle * byLevel) * vBoth - middle * bySlope * vSlope;
+	// By the first derivatives (delta method): C0 = level − slope·m, γ = slope/C0; held: C0 = level/(1 + γ·m).
+	const grows = 1 + growth * middle;
+	const [c, g] =
+		held === undefined
+			? [
+					{level: 1, other: -middle},
+					{level: -growth / rollout, other: grows / rollout},
+				]
+			: [
+					{level: 1 / grows, other: (-rollout * middle) / grows},
+					{level: 0, other: 1},
+				];
+	const vOther = held === undefined ? vSlope : growthSd ** 2;
+	const covary = (one: Slopes, two: Slopes) =>
+		one.level * two.level * vLevel +
+		(one.level * two.other + one.other * two.level) * vBoth +
+		one.other * two.other * vOther;
 	return {
-		rolloutM: estimate(rollout, vRollout),
-		growth: estimate(growth, vGrowth),
+		rolloutM: estimate(rollout, covary(c, c)),
+		growth: estimate(growth, covary(g, g)),
 		atMps: growthReferenceMps * Math.sqrt(middle),
 		circumferenceM: estimate(level, vLevel),
-		correlation: vGrowth > 0 && vRollout > 0 ? together / Math.sqrt(vGrowth * vRollout) : 0,
+		correlation: covary(c, g) / Math.sqrt(covary(c, c) * covary(g, g)),
 		scatterM: fit.scale,
 		downweighted: fit.weights.filter(weight => weight < 1).length / fit.weights.length,
 	};
 }
+
+/** Derivatives by the level in the middle, and by the slope (by growth itself, where held). */
+type Slopes = {readonly level: number; readonly other: number};
 
 /** With fewer passes than this the sandwich over passes says too little: readings count as independent. */
 const fewestGroups = 4;

@@ -4,7 +4,13 @@ import type {Channels} from './channels.ts';
 import type {Stretch} from './full-throttle.ts';
 
 /** A hump: middle, robust standard deviation of the logarithm, samples within. */
-export type Hump = {readonly overall: number; readonly spread: number; readonly samples: number};
+export type Hump = {
+	readonly overall: number;
+	readonly spread: number;
+	readonly samples: number;
+	/** What the gear column says in most of its samples; undefined without one. */
+	readonly logged: number | undefined;
+};
 
 /** Bins of the logarithm of the ratio: 0.2 % each, from 1 to 40. */
 const binWidth = 0.002;
@@ -24,7 +30,7 @@ export type Humps = {
 	readonly speedMps: number;
 };
 
-export function humpsOf({overall, smoothMps}: Channels, stretches: readonly Stretch[]): Humps {
+export function humpsOf({overall, smoothMps, run}: Channels, stretches: readonly Stretch[]): Humps {
 	const counts = new Float64Array(bins);
 	let [total, squares] = [0, 0];
 	for (const {from, to} of stretches) {
@@ -38,7 +44,7 @@ export function humpsOf({overall, smoothMps}: Channels, stretches: readonly Stre
 	}
 	const centers = centersOf(counts, Math.max(leastSamples, leastShare * total));
 	const humps = centers
-		.map(center => humpAt(overall, stretches, center))
+		.map(center => humpAt(overall, run.gear, stretches, center))
 		.filter(({samples}) => samples >= leastSamples);
 	return {humps, speedMps: total === 0 ? 0 : Math.sqrt(squares / total)};
 }
@@ -71,14 +77,24 @@ function standsOut(counts: Float64Array, bin: number): boolean {
 	return inside >= 2 * beside;
 }
 
-function humpAt(overall: Float32Array, stretches: readonly Stretch[], center: number): Hump {
+function humpAt(
+	overall: Float32Array,
+	column: Float32Array | null,
+	stretches: readonly Stretch[],
+	center: number,
+): Hump {
 	const inside: number[] = [];
+	const counts = new Map<number, number>();
 	for (const {from, to} of stretches) {
 		for (let i = from; i <= to; i++) {
 			const logarithm = Math.log(overall[i]!);
-			if (Math.abs(logarithm - center) <= reach) inside.push(logarithm);
+			if (!(Math.abs(logarithm - center) <= reach)) continue;
+			inside.push(logarithm);
+			if (column !== null) counts.set(column[i]!, (counts.get(column[i]!) ?? 0) + 1);
 		}
 	}
 	const middle = median(inside);
-	return {overall: Math.exp(middle), spread: robustSd(inside, middle), samples: inside.length};
+	const [most] = [...counts].sort(([, many], [, few]) => few - many);
+	const logged = most !== undefined && most[0] >= 1 && 2 * most[1] > inside.length ? most[0] : undefined;
+	return {overall: Math.exp(middle), spread: robustSd(inside, middle), samples: inside.length, logged};
 }

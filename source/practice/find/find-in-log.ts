@@ -96,7 +96,7 @@ function inGears(ground: Ground, fit: Omit<Mounted, 'gearColumnAgrees'>): Geared
 function inPlaces(ground: Ground, channels: Channels, places: GearPlaces): Geared {
 	const {plan, stretches} = ground;
 	const {vehicle} = plan.base;
-	const gears = gearsOf(channels, places);
+	const gears = gearsOf(channels, places, stretches);
 	const power = powerOf(channels, gears, places, stretches, plan.car.shiftTimeS, vehicle.limiterRpm);
 	const passes = passesOf(ground, channels, power);
 	const circumference = fitCircumference(channels, gears, power.state, passes, places.overall, vehicle);

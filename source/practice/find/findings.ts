@@ -65,7 +65,7 @@ export type Pass = {
 	readonly minimumMps: number | undefined;
 	readonly highestMps: number;
 	readonly highestRpm: number;
-	/** Engine speed at the end, from `endMps` in the gear there where it is known, else as logged. */
+	/** Engine speed at the last sample, by a line like the speeds, through samples in the gear there. */
 	readonly endRpm: number;
 	/** Counted from 1; undefined where no gear fits. */
 	readonly exitGear: number | undefined;
@@ -134,6 +134,8 @@ export type Mounted = {
 	/** What the gears below are counted by; undefined for `nothingFits` and `unknown`. */
 	readonly best: Fitting | undefined;
 	readonly installed: Fitting | undefined;
+	/** What the fits may stand on: what is installed explains the log, or nothing but `best` does. */
+	readonly certain: boolean;
 	/** Others that the log cannot tell from `best`, the likeliest first. */
 	readonly alsoFit: readonly Fitting[];
 	/** The nearest, where nothing fits, and how far off its ratios are, as a fraction. */
@@ -211,9 +213,9 @@ export type Estimate = {readonly value: number; readonly se: number};
  * cannot tell it from the circumference.
  */
 export type CircumferenceFit = {
-	/** C0, at standstill, in m. */
+	/** C0, at standstill, in m. Where growth is held, its error counts the 0.3 points that growth may be off. */
 	readonly rolloutM: Estimate;
-	/** γ, a fraction; its `se` is 0 where held. */
+	/** γ, a fraction. */
 	readonly growth: Estimate;
 	/** The speeds are too close together to tell growth: γ is held at the documents' figure. */
 	readonly growthHeld: boolean;
@@ -221,7 +223,7 @@ export type CircumferenceFit = {
 	/** The circumference in the middle of the speeds that it was seen at: what the log knows best. */
 	readonly atMps: number;
 	readonly circumferenceM: Estimate;
-	/** Of C0 and γ; 0 where γ is held. */
+	/** Of the errors of C0 and γ. */
 	readonly correlation: number;
 	/** Robust standard deviation of one reading (a block of samples), in m. */
 	readonly scatterM: number;

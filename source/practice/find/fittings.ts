@@ -12,22 +12,32 @@ export type Installed = {readonly pair: Pair; readonly gearbox: string};
 
 /** A candidate laid on the humps. */
 export type Laid = Fitting & {
-	/** Of each hump, counted from 1. */
-	readonly gears: readonly number[];
+	/** Of each hump, counted from 1; undefined: none. */
+	readonly gears: readonly (number | undefined)[];
 	/** Twice the logarithm of how much less likely than a perfect fit of what is installed: the lower the better. */
 	readonly penalty: number;
 };
 
 /** Standard deviations of a rollout as the documents have it, and of growth at 100 mph; both as fractions. */
 const rolloutSd = 0.01;
-const growthSd = 0.003;
+export const growthSd = 0.003;
 /** Standard deviation of a hump about its ratio: ratios are stated rounded, growth differs a little between gears. */
 const humpSd = 0.003;
-/** Humps that lie further off than this, root mean square, are not explained. */
+/** A hump further off than this belongs to no gear: wheelspin and shifts make small ones. It counts as this far off. */
+const strayFrom = 4 * humpSd;
+/** Humps that lie further off than this, root mean square by their samples, are not explained. */
 export const farthestResidual = 2 * humpSd;
 
 /** Twice the logarithm of the odds, before the log is seen, against what the documents call installed. */
-const oddsAgainst = {otherPair: 6, otherSet: 4, notOnHand: 3, turned: 1, otherTurned: 6, gearNotAllowed: 2};
+const oddsAgainst = {
+	otherPair: 6,
+	otherSet: 4,
+	notOnHand: 3,
+	ownTurned: 3,
+	otherTurned: 6,
+	gearNotAllowed: 2,
+	gearColumn: 8,
+};
 
 /** Every pair and set, both ways round, best first. `gears`: what the track allows; `span`: `plausibleSpan`. */
 export function fittingsOf(
@@ -39,7 +49,7 @@ export function fittingsOf(
 ): Laid[] {
 	const laid = mountings(car).map(({candidate, isFlipped}) => {
 		const fit = layOn(candidate.train.overall, humps, span);
-		const against = oddsOf(candidate, isFlipped, installed) + gearOdds(fit.gears, gears);
+		const against = oddsOf(candidate, isFlipped, installed) + gearOdds(fit.gears, gears) + columnOdds(fit.gears, humps);
 		return {candidate, flipped: isFlipped, ...fit, penalty: costOf(fit, humps.length, span) + against};
 	});
 	return laid.sort((one, other) => one.penalty - other.penalty);
@@ -71,12 +81,12 @@ function oddsOf({pair, gearbox}: Candidate, isFlipped: boolean, installed: Insta
 	if (installed === undefined) return notOnHand + (isFlipped ? oddsAgainst.otherTurned : 0);
 	const otherSet = gearbox.name === installed.gearbox ? 0 : oddsAgainst.otherSet;
 	if (samePair(pair, installed.pair)) return otherSet;
-	const own = samePair(flipped(pair), installed.pair);
-	const turned = own ? oddsAgainst.turned : isFlipped ? oddsAgainst.otherTurned : 0;
-	return notOnHand + otherSet + oddsAgainst.otherPair * (own ? 0.5 : 1) + turned;
+	if (samePair(flipped(pair), installed.pair)) return oddsAgainst.ownTurned + otherSet;
+	return oddsAgainst.otherPair + otherSet + notOnHand + (isFlipped ? oddsAgainst.otherTurned : 0);
 }
 
-function gearOdds(used: readonly number[], allowed: GearRange | undefined): number {
+function gearOdds(gears: Laid['gears'], allowed: GearRange | undefined): number {
+	const used = gears.filter(gear => gear !== undefined);
 	if (allowed === undefined) return 0;
 	const outside = used.filter(gear => gear < allowed.lowest || gear > allowed.highest).length;
 	return (oddsAgainst.gearNotAllowed * outside) / Math.max(1, used.length);
@@ -85,35 +95,60 @@ function gearOdds(used: readonly number[], allowed: GearRange | undefined): numb
 const costOf = ({residual, circumferenceFactor}: Lay, humps: number, span: number) =>
 	humps * (residual / humpSd) ** 2 + (Math.log(circumferenceFactor) / (span / 2)) ** 2;
 
+/** The gear column counts by the samples in which it says another gear. */
+function columnOdds(gears: Laid['gears'], humps: readonly Hump[]): number {
+	let [against, all] = [0, 0];
+	for (const [i, {samples, logged}] of humps.entries()) {
+		if (gears[i] === undefined || logged === undefined) continue;
+		all += samples;
+		if (logged !== gears[i]) against += samples;
+	}
+	return all === 0 ? 0 : (oddsAgainst.gearColumn * against) / all;
+}
+
 type Lay = Pick<Laid, 'gears' | 'circumferenceFactor' | 'residual'>;
 
 /**
- * The gears that the humps belong to, the factor of the circumference that brings them nearest, and what is left. Every hump
- * is tried on every gear; among equally good ones the factor nearest to 1.
+ * The gears that the humps belong to, the factor of the circumference that brings them nearest, and what is left. The
+ * largest hump is tried on every gear; among equally good ones the factor nearest to 1.
  */
 function layOn(overall: readonly number[], humps: readonly Hump[], span: number): Lay {
 	const logs = overall.map(Math.log);
 	let best: Lay & {cost: number} = {gears: [], circumferenceFactor: 1, residual: 0, cost: Number.POSITIVE_INFINITY};
-	for (const hump of humps.slice(0, 1)) {
-		for (const gear of logs) {
-			const lay = settledFrom(logs, humps, gear - Math.log(hump.overall));
-			const cost = costOf(lay, humps.length, span);
-			if (cost < best.cost) best = {...lay, cost};
-		}
+	for (const gear of logs) {
+		const lay = settledFrom(logs, humps, gear - Math.log(humps[0]!.overall));
+		const cost = costOf(lay, humps.length, span);
+		if (cost < best.cost) best = {...lay, cost};
 	}
 	return best;
 }
 
-/** Humps count by the root of their samples: a gear used for a moment tells less, but tells. */
-function settledFrom(logs: readonly number[], humps: readonly Hump[], shift: number): Lay {
-	const weights = humps.map(({samples}) => Math.sqrt(samples));
-	const total = weights.reduce((sum, weight) => sum + weight, 0);
+/** Whether the ratios explain the humps once the circumference is so many times the documents', to within the span. */
+export function fitsAt(overall: readonly number[], humps: readonly Hump[], times: number, span: number): boolean {
+	const lay = settledFrom(overall.map(Math.log), humps, Math.log(times));
+	return lay.residual <= farthestResidual && Math.abs(Math.log(lay.circumferenceFactor / times)) <= span;
+}
+
+/** The largest hump decides to begin with; humps that then lie far off are strays, and do not move the rest. */
+function settledFrom(logs: readonly number[], humps: readonly Hump[], start: number): Lay {
+	const total = humps.reduce((sum, {samples}) => sum + samples, 0);
 	const at = humps.map(({overall}) => Math.log(overall));
-	const gears = at.map(x => nearest(logs, x + shift));
+	const gears = at.map(x => nearest(logs, x + start));
 	const off = at.map((x, i) => logs[gears[i]! - 1]! - x);
-	const mean = off.reduce((sum, x, i) => sum + weights[i]! * x, 0) / total;
-	const square = off.reduce((sum, x, i) => sum + weights[i]! * (x - mean) ** 2, 0) / total;
-	return {gears, circumferenceFactor: Math.exp(mean), residual: Math.sqrt(square)};
+	const near = (shift: number) => off.map(x => Math.abs(x - shift) <= strayFrom);
+	const shiftOf = (kept: readonly boolean[]) => {
+		const all = off.map((x, i) => ({x, weight: kept[i] ? humps[i]!.samples : 0}));
+		return all.reduce((sum, {x, weight}) => sum + weight * x, 0) / all.reduce((sum, {weight}) => sum + weight, 0);
+	};
+	// From the largest hump's own place, so that a start that is off by the rollout does not make strays.
+	const shift = shiftOf(near(off[0]!));
+	const kept = near(shift);
+	const square = off.reduce((sum, x, i) => sum + humps[i]!.samples * Math.min(strayFrom, Math.abs(x - shift)) ** 2, 0);
+	return {
+		gears: gears.map((gear, i) => (kept[i] ? gear : undefined)),
+		circumferenceFactor: Math.exp(shift),
+		residual: Math.sqrt(square / total),
+	};
 }
 
 function nearest(values: readonly number[], x: number): number {

@@ -2,6 +2,7 @@
 import type {Channels} from './channels.ts';
 import {samplesIn} from './channels.ts';
 import type {Mounted} from './findings.ts';
+import type {Stretch} from './full-throttle.ts';
 
 /** Where each gear lies, by the documents' circumference: logarithms, gear 1 first. */
 export type GearPlaces = {
@@ -39,15 +40,18 @@ export function gearPlaces({best, clusters}: Pick<Mounted, 'best' | 'clusters'>,
 	return {at, overall, within, below: Math.min(gapShare * gap, within + Math.log(1 + slip))};
 }
 
-/** Counted from 1; 0 where no gear fits. */
-export function gearsOf({overall, rateHz}: Channels, places: GearPlaces): Uint8Array {
+/** Counted from 1; 0 where no gear fits. `stretches`: at full throttle, where no tire slips less than it should. */
+export function gearsOf({overall, rateHz}: Channels, places: GearPlaces, stretches: readonly Stretch[]): Uint8Array {
 	const {at, within, below} = places;
 	const gears = new Uint8Array(overall.length);
+	let next = 0;
 	for (let i = 0; i < overall.length; i++) {
+		while (next < stretches.length && stretches[next]!.to < i) next++;
+		const low = next < stretches.length && stretches[next]!.from <= i ? within : below;
 		const x = Math.log(overall[i]!);
 		for (let gear = 0; gear < at.length; gear++) {
 			const off = x - at[gear]!;
-			if (off <= within && off >= -below) {
+			if (off <= within && off >= -low) {
 				gears[i] = gear + 1;
 				break;
 			}

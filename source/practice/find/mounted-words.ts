@@ -17,8 +17,10 @@ function circumferenceText({circumferenceFactor}: Fitting): string {
 	return `a rolling circumference ${percent(Math.abs(off))} ${off < 0 ? 'below' : 'above'} the documents'`;
 }
 
-export function whyMounted(told: Told, plan: Plan, span: number): string {
-	return [verdictText(told, span), alsoText(told), apartText(told, plan)].filter(text => text !== '').join(' ');
+export function whyMounted(told: Told, plan: Plan, span: number, unitSlip: string | undefined): string {
+	return [verdictText(told, span), slipText(unitSlip), alsoText(told), apartText(told, plan)]
+		.filter(text => text !== '')
+		.join(' ');
 }
 
 function verdictText({verdict, best, installed, nearest}: Told, span: number): string {
@@ -36,6 +38,12 @@ function verdictText({verdict, best, installed, nearest}: Told, span: number): s
 		case 'unknown':
 			return 'Too few samples at full throttle to tell the gears.';
 	}
+}
+
+function slipText(unitSlip: string | undefined): string {
+	return unitSlip === undefined
+		? ''
+		: `What is installed would fit if the speed were ${unitSlip}: look at the column and its unit.`;
 }
 
 function insteadText(installed: Fitting | undefined): string {

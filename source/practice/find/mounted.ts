@@ -1,9 +1,10 @@
 /** What was mounted: what is installed by the documents, unless the log speaks clearly against it. */
+import {mileM, mphMps} from '../../drivetrain/constants.ts';
 import {flipped, samePair} from '../../drivetrain/gear-pair.ts';
 import type {Plan} from '../../planning/plan.ts';
 import type {Hump, Humps} from './clusters.ts';
 import type {Fitting, Mounted, MountedVerdict} from './findings.ts';
-import {explains, fittingsOf, type Installed, isInstalled, type Laid, plausibleSpan} from './fittings.ts';
+import {explains, fitsAt, fittingsOf, type Installed, isInstalled, type Laid, plausibleSpan} from './fittings.ts';
 import {whyMounted} from './mounted-words.ts';
 
 /** Penalties closer than this are not told apart: three standard deviations, squared. */
@@ -32,15 +33,35 @@ export function mountedBy(
 	const alsoFit = explaining
 		.filter(fit => best !== undefined && fit !== best && fit.penalty - best.penalty <= sameFit)
 		.slice(0, mostAlso);
+	const slip = humps.length === 0 || best === documented ? undefined : unitSlip(documented, humps, span);
 	const mounted = {
 		verdict,
 		best: best && plain(best),
 		installed: documented && plain(documented),
 		alsoFit: alsoFit.map(plain),
 		nearest: best === undefined && fits[0] !== undefined ? plain(fits[0]) : undefined,
-		clusters: humps.map((hump, i) => ({...hump, gear: best?.gears[i]})),
+		certain: best !== undefined && slip === undefined && (kept || alsoFit.length === 0),
+		clusters: humps.map(({overall, spread, samples}, i) => ({overall, spread, samples, gear: best?.gears[i]})),
 	};
-	return {...mounted, why: whyMounted(mounted, plan, span)};
+	return {...mounted, why: whyMounted(mounted, plan, span, slip)};
+}
+
+const kilometerM = 1000;
+/** Speeds read in one unit that were logged in another: how many times too high they then are. */
+const unitSlips: readonly (readonly [number, string])[] = [
+	[mileM / kilometerM, 'km/h read as mph'],
+	[kilometerM / mileM, 'mph read as km/h'],
+	[3.6, 'km/h read as m/s'],
+	[1 / mphMps, 'mph read as m/s'],
+	[mphMps, 'm/s read as mph'],
+	[1 / 3.6, 'm/s read as km/h'],
+];
+
+/** The unit that would make what is installed fit after all. */
+function unitSlip(documented: Laid | undefined, humps: readonly Hump[], span: number): string | undefined {
+	if (documented === undefined) return undefined;
+	const {overall} = documented.candidate.train;
+	return unitSlips.find(([times]) => fitsAt(overall, humps, times, span))?.[1];
 }
 
 function verdictOf(

@@ -53,15 +53,36 @@ export function placesByRhythm(passes: readonly Measured[], {runs, lapM}: Rhythm
 	const at = passes.slice(start, start + runs).map(pass => (pass.startM - passes[start]!.startM) / lapM);
 	const of = new Array<number>(passes.length).fill(-1);
 	for (const way of [1, -1]) {
-		let [share, fromM] = [0, passes[start]!.startM];
-		for (let i = start; i >= 0 && i < passes.length; i += way) {
-			share += (passes[i]!.startM - fromM) / lapM;
-			fromM = passes[i]!.startM;
-			of[i] = placeOf(at, share);
-			if (of[i]! >= 0) share = at[of[i]!]!;
-		}
+		const onward = way === 1 ? passes.slice(start) : passes.slice(0, start + 1).reverse();
+		const shares = onward.map(pass => (pass.startM - passes[start]!.startM) / lapM);
+		for (const [i, place] of follow(at, shares, runs).entries()) of[start + way * i] = place;
 	}
 	return {lapM, at, of, fromLine: false};
+}
+
+/**
+ * The place of each run in turn. What the distance has gone wrong by is taken up at each place, so that it does not add up.
+ * A run that finds no place, as after laps in the pits, starts afresh from the nearest from which the next ones find theirs.
+ */
+function follow(at: readonly number[], shares: readonly number[], runs: number): number[] {
+	let wrong = 0;
+	const offBy = (i: number, place: number) => shares[i]! - at[place]! - Math.round(shares[i]! - at[place]! - wrong);
+	const fits = (i: number, shift: number) => placeOf(at, shares[i]! - shift) >= 0;
+	return shares.map((share, i) => {
+		const place = placeOf(at, share - wrong);
+		if (place >= 0) {
+			wrong = offBy(i, place);
+			return place;
+		}
+		const next = shares.slice(i, i + runs + 1).map((_, j) => i + j);
+		const fresh = at
+			.map((_, j) => ({place: j, off: offBy(i, j)}))
+			.filter(({off}) => next.length > runs && next.every(j => fits(j, off)))
+			.sort((one, other) => Math.abs(one.off - wrong) - Math.abs(other.off - wrong))[0];
+		if (fresh === undefined) return -1;
+		wrong = fresh.off;
+		return fresh.place;
+	});
 }
 
 function placeOf(at: readonly number[], share: number): number {

@@ -7,7 +7,8 @@ import {type Between, between, type InGear, inGear} from './in-gear.ts';
 
 export type ShiftSeen = {
 	readonly from: number;
-	readonly into: number;
+	/** Undefined: full throttle ended first. */
+	readonly into: number | undefined;
 	/** Last sample in the one gear, first in the other. */
 	readonly leftAt: number;
 	readonly enteredAt: number;
@@ -123,9 +124,14 @@ function meanOf(values: Float32Array, from: number, to: number): number {
 
 function shiftIn({run, rateHz, middleRpm}: Channels, gap: Between, shiftTimeS: number): ShiftSeen[] {
 	const {before, after} = gap;
-	if (before === undefined || after === undefined || after.gear < before.gear) return [];
-	const tookS = run.timeS[after.from]! - run.timeS[before.to]! - 1 / rateHz;
+	if (before === undefined) return [];
 	const flare = highestIn(gap, i => middleRpm[i]!) / run.rpm[before.to]! - 1;
+	if (after === undefined) {
+		const ran = flare > flareShare && run.timeS[gap.to]! - run.timeS[gap.from]! > shiftTimeS;
+		return ran ? [{from: before.gear, into: undefined, leftAt: before.to, enteredAt: gap.to, missed: true}] : [];
+	}
+	if (after.gear < before.gear) return [];
+	const tookS = run.timeS[after.from]! - run.timeS[before.to]! - 1 / rateHz;
 	const late = tookS > shiftTimeS + lateS + 1 / rateHz;
 	if (after.gear === before.gear) {
 		// The same gear again: only an engine that ran free makes it a shift that was tried.

@@ -6,12 +6,16 @@ import {highestIn} from './passes.ts';
 import type {ShiftSeen} from './power.ts';
 import {spreadOf} from './straight-findings.ts';
 
+/** The engine is fastest within so much before the gear is left. */
+const lastS = 0.06;
+
 /** By the gear left. `shifts`: of each pass. */
 export function shiftFindings(
-	{run, rateHz}: Channels,
+	{run, rateHz, middleRpm}: Channels,
 	passes: readonly Pass[],
 	shifts: readonly (readonly ShiftSeen[])[],
 ): ShiftFinding[] {
+	const back = Math.floor(lastS * rateHz);
 	const clean = passes.flatMap((pass, i) =>
 		pass.good ? (shifts[i] ?? []).filter(shift => !shift.missed && shift.into === shift.from + 1) : [],
 	);
@@ -20,7 +24,7 @@ export function shiftFindings(
 		const of = clean.filter(shift => shift.from === from);
 		return {
 			from,
-			rpm: spreadOf(of.map(shift => run.rpm[shift.leftAt]!))!,
+			rpm: spreadOf(of.map(({leftAt}) => highestIn(middleRpm, Math.max(0, leftAt - back), leftAt)))!,
 			timeS: spreadOf(of.map(shift => run.timeS[shift.enteredAt]! - run.timeS[shift.leftAt]! - 1 / rateHz))!,
 		};
 	});
