@@ -93,7 +93,7 @@ export function takenTwice(
 
 /** A column of numbers that say nothing without their unit. */
 export function withoutUnit(channel: ChannelName, header: Header, headers: readonly Header[]): ColumnProblem {
-	const values = unitChoices(channel).map(unit => `${valueFor(header, headers)} [${unit}]`);
+	const values = unitChoices(channel).map(unit => `${nameFor(header, headers)} [${unit}]`);
 	return {
 		kind: 'unit',
 		channel,
@@ -112,7 +112,7 @@ export function unknownUnit(
 	headers: readonly Header[],
 ): ColumnProblem {
 	const choices = unitChoices(channel);
-	const example = columnOption(channel, `${valueFor(header, headers)} [${choices[0] ?? 'unit'}]`);
+	const example = columnOption(channel, `${nameFor(header, headers)} [${choices[0] ?? 'unit'}]`);
 	return {
 		...withoutUnit(channel, header, headers),
 		found: `the unit "${shortened(unit)}"`,
@@ -122,11 +122,19 @@ export function unknownUnit(
 
 /** What one types to take this column: its header, or its number where others have the same. */
 function valueFor(header: Header, headers: readonly Header[]): string {
-	const {written, column} = header;
-	const isPlain =
-		/^[\p{L}\p{N}\p{P}\p{S} ]+$/u.test(written) && written.length <= 60 && written.toLowerCase() !== 'none';
-	const isOnly = headers.filter(other => other.written === written || other.name === written).length === 1;
-	return isPlain && isOnly ? written : `#${column}`;
+	return isClear(header.written, headers) ? header.written : `#${header.column}`;
+}
+
+/** The same without the unit in the header. */
+function nameFor(header: Header, headers: readonly Header[]): string {
+	return isClear(header.name, headers) ? header.name : `#${header.column}`;
+}
+
+const plainText = /^[\p{L}\p{N}\p{P}\p{S} ]{1,60}$/u;
+
+function isClear(text: string, headers: readonly Header[]): boolean {
+	if (!plainText.test(text) || text.toLowerCase() === 'none') return false;
+	return headers.filter(({written, name}) => written === text || name === text).length === 1;
 }
 
 const optionFor = (channel: ChannelName, header: Header, headers: readonly Header[]): string =>

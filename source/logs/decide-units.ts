@@ -34,13 +34,17 @@ export function decideUnits(chosen: readonly ChosenColumn[], table: Table, decim
 			const canDoWithout = channel === 'throttle' || (channel === 'distance' && hasTime && column.by !== 'asked');
 			if (canDoWithout) leftOut.push(column);
 			else if (decided === 'none') problems.push(withoutUnit(channel, header, table.headers));
-			else problems.push(unknownUnit(channel, header, statedUnit(column, table) ?? '', table.headers));
+			else problems.push(unknownUnit(channel, header, saidUnit(column, table), table.headers));
 		} else {
 			columns.push({...column, ...decided});
 		}
 	}
 	return {columns, leftOut, problems};
 }
+
+/** The unit that `decide` did not know. */
+const saidUnit = (column: ChosenColumn, table: Table): string =>
+	(column.by === 'asked' ? column.unitText : undefined) ?? statedUnit(column, table) ?? column.unitText ?? '';
 
 type Decided = Pick<UsedColumn, 'unit' | 'unitBy' | 'factor'>;
 

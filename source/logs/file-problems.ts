@@ -16,6 +16,9 @@ const packed: readonly {readonly what: string; readonly bytes: readonly number[]
 	{what: 'a gzip file', bytes: [0x1f, 0x8b]},
 ];
 
+/** In so many bytes zeros are looked for, unless the line ends before. */
+const longestFirstLine = 4096;
+
 /** For an empty file, and for one that is no text. */
 export function notText(bytes: Uint8Array): LogProblem | undefined {
 	const isEmpty = !bytes.some(byte => byte > 32 && byte !== 0xef && byte !== 0xbb && byte !== 0xbf);
@@ -24,10 +27,11 @@ export function notText(bytes: Uint8Array): LogProblem | undefined {
 	const known = packed.find(one => one.bytes.every((byte, i) => bytes[i] === byte));
 	if (known)
 		return {kind: 'binary', where: 'the file', found: known.what, allowed: table, do: `Unpack it, or: ${exportAgain}`};
-	// A file that was cut off by a loss of power may end in zeros, but it does not begin with them.
-	const zeros = bytes.subarray(0, 4096).filter(byte => byte === 0).length;
-	if (zeros === 0) return undefined;
-	const isWide = zeros * 3 > Math.min(bytes.length, 4096) && bytes[0] !== 0;
+	// What a loss of power leaves ends in zeros; it does not begin with them.
+	const end = bytes.findIndex((byte, i) => byte === 10 || i === longestFirstLine);
+	const first = bytes.subarray(0, end === -1 ? undefined : end);
+	if (!first.includes(0)) return undefined;
+	const isWide = first.filter(byte => byte === 0).length * 3 > first.length && bytes[0] !== 0;
 	return {
 		kind: 'binary',
 		where: 'the file',
@@ -106,4 +110,15 @@ export function noNumbers({samples, cells}: Rows, columns: readonly UsedColumn[]
 		};
 	}
 	return undefined;
+}
+
+export function deadSensor(channel: 'speed' | 'rpm', columns: readonly UsedColumn[]): LogProblem {
+	const {header} = columns.find(column => column.channel === channel)!;
+	return {
+		kind: 'noNumbers',
+		where: `the column of ${channel}, "${shortened(header.written)}" (#${header.column})`,
+		found: 'the same value throughout, while the other of speed and rpm moves',
+		allowed: 'what a working sensor gives',
+		do: `Take another column: --column ${channel}=HEADER.`,
+	};
 }

@@ -10,7 +10,7 @@ export type Header = {
 	readonly written: string;
 	/** Without the unit. */
 	readonly name: string;
-	/** What stands in brackets or after the last blank, where that may be a unit. */
+	/** What stands in brackets after a name we know, or after the last blank where that is a unit. */
 	readonly unitText: string | undefined;
 	/** What the name means; undefined where we do not know. */
 	readonly channel: ChannelName | undefined;
@@ -34,7 +34,7 @@ export function headerOf(text: string, column: number): Header {
 		if (meant && logUnit(parts.unitText, meant.channel)) return {...whole, ...parts, ...meant};
 	}
 	const inside = bracketed && meaningOf(bracketed.name);
-	return inside ? {...whole, name: bracketed.name, ...inside} : whole;
+	return inside ? {...whole, ...bracketed, ...inside} : whole;
 }
 
 type Parts = {readonly name: string; readonly unitText: string};

@@ -4,7 +4,7 @@ import type {AskedColumns, ChannelName, RememberedColumns} from './channels.ts';
 import {type Choice, chooseColumns} from './choose-columns.ts';
 import {decideUnits, type UsedColumn} from './decide-units.ts';
 import {decimalsIn} from './decimals.ts';
-import {mixedDecimals, noHeader, noNumbers, noRows, notText, tooLongLine} from './file-problems.ts';
+import {deadSensor, mixedDecimals, noHeader, noNumbers, noRows, notText, tooLongLine} from './file-problems.ts';
 import {findTable, type Table, wantedHeaders} from './find-table.ts';
 import type {Head} from './head.ts';
 import type {ColumnUse, LogReading, LogRefused, RemarkData} from './reading.ts';
@@ -119,7 +119,9 @@ function finished(
 	if (rows.samples <= rows.wrongCells.count) return refused(noRows(rows, table));
 	const empty = noNumbers(rows, columns);
 	if (empty) return refused(empty);
-	const {run, remarks} = runFromRows(rows, columns);
+	const made = runFromRows(rows, columns);
+	if ('dead' in made) return refused(deadSensor(made.dead, columns));
+	const {run, remarks} = made;
 	const used = columns.filter(({channel}) => channel !== 'throttle' || run.throttle);
 	const all = [...before, ...used.flatMap(fromNumbers), ...rowRemarks(rows, columns), ...remarks];
 	return {
@@ -134,8 +136,8 @@ function finished(
 	};
 }
 
-const fromNumbers = ({channel, unit, unitBy}: UsedColumn): RemarkData[] =>
-	unitBy === 'numbers' && unit ? [{kind: 'unitFromNumbers', channel, unit: unit.name}] : [];
+const fromNumbers = ({channel, header, unit, unitBy}: UsedColumn): RemarkData[] =>
+	unitBy === 'numbers' && unit ? [{kind: 'unitFromNumbers', channel, header: header.written, unit: unit.name}] : [];
 
 const useOf = ({header, unit, by, unitBy}: UsedColumn): ColumnUse => ({
 	column: header.column,

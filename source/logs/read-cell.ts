@@ -19,6 +19,8 @@ export type Decimals = {mark: '.' | ',' | undefined};
 
 const number = /^[+-]?(?:\d+(?:[.,]\d*)?|[.,]\d+)(?:[eE][+-]?\d+)?/;
 const nothing = /^(?:|-+|\?+|nan|null|nil|none|n\/a|na|#n\/a)$/i;
+/** Beyond this nothing is measured, and sums would lose their digits. */
+const largest = 1e15;
 /** Longer is no number, and no time. */
 const longestCell = 60;
 
@@ -42,7 +44,7 @@ export function readCell(cell: string, {channel, factor}: CellRule, decimals: De
 }
 
 function valueOr(value: number, unit?: string): Cell {
-	return Number.isFinite(value) ? {kind: 'value', value, ...(unit !== undefined && {unit})} : text;
+	return Math.abs(value) <= largest ? {kind: 'value', value, ...(unit !== undefined && {unit})} : text;
 }
 
 /** NaN where the number has the other mark than those before it. */

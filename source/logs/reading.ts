@@ -64,7 +64,12 @@ export type RemarkData =
 	/** The remembered columns are not those of this log. */
 	| {readonly kind: 'notRemembered'; readonly headers: readonly string[]}
 	/** The unit was told from the numbers. */
-	| {readonly kind: 'unitFromNumbers'; readonly channel: ChannelName; readonly unit: string}
+	| {
+			readonly kind: 'unitFromNumbers';
+			readonly channel: ChannelName;
+			readonly header: string;
+			readonly unit: string;
+	  }
 	/** A column that is there is not used. */
 	| {
 			readonly kind: 'leftOut';

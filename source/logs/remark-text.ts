@@ -18,8 +18,8 @@ const sentences: {[Kind in RemarkData['kind']]: (data: Data<Kind>) => string} = 
 	encoding: ({encoding}) => `The text is ${encoding}, not UTF-8; it was read as that.`,
 	notRemembered: ({headers}) =>
 		`The columns remembered from an earlier log were not used: ${quoted(headers)} ${headers.length === 1 ? 'is' : 'are'} not in this one, or more than once.`,
-	unitFromNumbers: ({channel, unit}) =>
-		`The log does not say the unit of ${channel}; by its numbers it is ${unit}. If not: ${columnOption(channel, 'HEADER [unit]')}.`,
+	unitFromNumbers: ({channel, header, unit}) =>
+		`The log does not say the unit of ${channel} ("${shortened(header)}"); by its numbers it is ${unit}${channel === 'time' ? `. If not: ${columnOption('time', 'HEADER [unit]')}` : ''}.`,
 	leftOut: ({channel, headers, why}) => leftOut(channel, headers, why),
 	workedOut: ({channel}) =>
 		channel === 'time'
@@ -29,7 +29,7 @@ const sentences: {[Kind in RemarkData['kind']]: (data: Data<Kind>) => string} = 
 		`${count(cells, 'cell')} of ${channel} ${cells === 1 ? 'is' : 'are'} no number${cells === 1 ? '' : 's'} with a known unit and ${cells === 1 ? 'was' : 'were'} left out, the first on line ${firstLine}: "${shortened(first)}".`,
 	cellUnits: ({channel, units}) =>
 		`Cells of ${channel} state their own units (${units.map(shortened).join(', ')}); each was read in its own.`,
-	sparse: ({channel, share}) => `${channel} is empty in ${Math.round(100 * share)} % of the rows.`,
+	sparse: ({channel, share}) => `The column of ${channel} is empty in ${Math.round(100 * share)} % of the rows.`,
 	wrongCells: ({rows, firstLine}) =>
 		`${count(rows, 'row')} with more or fewer cells than headers ${rows === 1 ? 'was' : 'were'} left out, the first on line ${firstLine}.`,
 	longLines: ({lines, firstLine}) =>
@@ -43,7 +43,7 @@ const sentences: {[Kind in RemarkData['kind']]: (data: Data<Kind>) => string} = 
 	gap: ({gaps, longestS, atS}) =>
 		`${count(gaps, 'gap')} in the samples, the longest ${seconds(longestS)} from ${seconds(atS)} on; nothing is known of what happened in ${gaps === 1 ? 'it' : 'them'}.`,
 	stuck: ({channel, times, totalS, atS}) =>
-		`${channel} stands still while the other of speed and rpm moves, ${count(times, 'time')}, ${seconds(totalS)} in all, first at ${seconds(atS)}: a stuck sensor; left out there.`,
+		`The ${channel} stands still while the other of speed and rpm moves, ${count(times, 'time')}, ${seconds(totalS)} in all, first at ${seconds(atS)}: a stuck sensor; left out there.`,
 	slowSampling: ({samplesPerS}) =>
 		`About ${samplesPerS.toFixed(1)} samples a second: exits, lift points and shifts fall between samples, and so may the highest RPM and speed.`,
 	coarseClock: ({share}) =>

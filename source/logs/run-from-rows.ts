@@ -20,26 +20,33 @@ const lowestPeakRpm = 1000;
 /** By how much the distance of a log may differ from what its speed makes. */
 const agreement = 0.05;
 
-export function runFromRows(rows: Rows, columns: readonly UsedColumn[]): RunFromRows {
+/** Where a sensor hung all the time, speed or engine speed is known nowhere, and there is no run. */
+export function runFromRows(
+	rows: Rows,
+	columns: readonly UsedColumn[],
+): RunFromRows | {readonly dead: 'speed' | 'rpm'} {
 	const byChannel = new Map<ChannelName, Numbers>(columns.map(({channel}, slot) => [channel, rows.values[slot]!]));
 	const samples = new Samples(byChannel, rows.samples);
-	const remarks: RemarkData[] = [];
 	const axis = byChannel.has('time') ? 'time' : 'distance';
-	remarks.push(...ordered(samples, axis));
-	const place = placed(samples, axis);
-	remarks.push(...place.remarks);
-	const {timeS, distanceM} = place;
+	const inOrder = ordered(samples, axis);
 	const [speedMps, rpm] = [samples.get('speed') as Float32Array, samples.get('rpm') as Float32Array];
-	remarks.push(...samplingRemarks(timeS), ...forgetStuck(timeS, speedMps, rpm), ...implausible(speedMps, rpm));
-	remarks.push(...shares(samples, columns));
+	const along = samples.get(axis) as Float64Array;
+	const timeS = axis === 'time' ? along : timeFromSpeed(along, everywhere(speedMps, along));
+	const stuck = forgetStuck(timeS, speedMps, rpm);
+	for (const dead of ['speed', 'rpm'] as const) if (samples.get(dead)!.every(Number.isNaN)) return {dead};
+	const place = axis === 'time' ? distanceBeside(timeS, samples, speedMps) : timeWorkedOut(along);
+	const sound = [...samplingRemarks(timeS), ...stuck, ...implausible(speedMps, rpm), ...shares(samples, columns)];
 	const channel = (name: ChannelName) => (samples.get(name) as Float32Array | undefined) ?? null;
 	const gear = channel('gear');
 	// Reverse, and what a logger writes where it does not know.
 	gear?.forEach((value, i) => {
 		if (value < 0) gear[i] = Number.NaN;
 	});
-	const run = {samples: samples.length, timeS, distanceM, speedMps, rpm, throttle: channel('throttle'), gear};
-	return {run: {...run, lap: channel('lap'), brake: channel('brake'), steering: channel('steering')}, remarks};
+	const {distanceM} = place;
+	const needed = {samples: samples.length, timeS, distanceM, speedMps, rpm};
+	const more = {throttle: channel('throttle'), gear, lap: channel('lap'), brake: channel('brake')};
+	const run = {...needed, ...more, steering: channel('steering')};
+	return {run, remarks: [...inOrder, ...place.remarks, ...sound]};
 }
 
 function ordered(samples: Samples, axis: 'time' | 'distance'): RemarkData[] {
@@ -52,26 +59,24 @@ function ordered(samples: Samples, axis: 'time' | 'distance'): RemarkData[] {
 	return remarks;
 }
 
-type Placed = Pick<LoggedRun, 'timeS' | 'distanceM'> & {readonly remarks: readonly RemarkData[]};
+type Placed = Pick<LoggedRun, 'distanceM'> & {readonly remarks: readonly RemarkData[]};
 
-function placed(samples: Samples, axis: 'time' | 'distance'): Placed {
-	const along = samples.get(axis) as Float64Array;
-	const speedMps = everywhere(samples.get('speed') as Float32Array, along);
-	if (axis === 'distance') {
-		const timeS = timeFromSpeed(along, speedMps);
-		return {timeS, distanceM: along, remarks: [{kind: 'workedOut', channel: 'time'}]};
-	}
+const timeWorkedOut = (distanceM: Float64Array): Placed => ({
+	distanceM,
+	remarks: [{kind: 'workedOut', channel: 'time'}],
+});
+
+function distanceBeside(timeS: Float64Array, samples: Samples, speedMps: Float32Array): Placed {
+	const known = everywhere(speedMps, timeS);
 	const logged = samples.get('distance') as Float64Array | undefined;
-	if (logged === undefined || logged.every(Number.isNaN)) {
-		const distanceM = distanceFromSpeed(along, speedMps);
-		return {timeS: along, distanceM, remarks: [{kind: 'workedOut', channel: 'distance'}]};
-	}
-	const restartsS = joinDistance(logged, along, speedMps);
+	if (logged === undefined || logged.every(Number.isNaN))
+		return {distanceM: distanceFromSpeed(timeS, known), remarks: [{kind: 'workedOut', channel: 'distance'}]};
+	const restartsS = joinDistance(logged, timeS, known);
 	const remarks: RemarkData[] = [];
 	if (restartsS.length > 0) remarks.push({kind: 'restart', channel: 'distance', atS: restartsS});
-	const [loggedM, bySpeedM] = [logged.at(-1) ?? 0, lengthFromSpeed(along, speedMps)];
+	const [loggedM, bySpeedM] = [logged.at(-1) ?? 0, lengthFromSpeed(timeS, known)];
 	if (bySpeedM > 0 && Math.abs(loggedM / bySpeedM - 1) > agreement) remarks.push({kind: 'disagree', loggedM, bySpeedM});
-	return {timeS: along, distanceM: logged, remarks};
+	return {distanceM: logged, remarks};
 }
 
 function implausible(speedMps: Numbers, rpm: Numbers): RemarkData[] {
@@ -92,7 +97,7 @@ function shares(samples: Samples, columns: readonly UsedColumn[]): RemarkData[] 
 		remarks.push({kind: 'leftOut', channel, headers: [named(channel).header.written], why: 'numbers'});
 	};
 	if (throttle) {
-		const told = throttleShare(throttle, named('throttle').unit?.name);
+		const told = throttleShare(throttle, named('throttle'));
 		if (told === undefined) leaveOut('throttle');
 		else remarks.push(...told);
 	}
