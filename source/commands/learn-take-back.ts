@@ -3,8 +3,9 @@
 import {visible} from '../documents/visible.ts';
 import {type Takeable, takeablesIn, takeBackEdits} from '../practice/learn/accept.ts';
 import {asWritten} from '../practice/learn/lesson.ts';
+import {localDay} from '../text/heading-view.ts';
+import {takenBackEntry, takenBackWords} from '../text/learned-entry.ts';
 import {keepLearned, unwritable} from './keep-learned.ts';
-import {takenBackEntry} from './learned-entry.ts';
 import type {Loaded} from './load-documents.ts';
 import {printJson} from './print.ts';
 import {badInput, type Reply, replyDone, replyRefused} from './reply.ts';
@@ -30,7 +31,13 @@ export const takeBack = (loaded: Loaded, names: readonly string[], request: Requ
 			),
 		);
 	const taken = takeables.filter(one => names.some(name => name === 'all' || isCalled(one, name)));
-	const kept = keepLearned(loaded, takeBackEdits(taken, documents), takenBackEntry(taken, around), request, around);
+	const kept = keepLearned(
+		loaded,
+		takeBackEdits(taken, documents),
+		takenBackEntry(taken, localDay(around.now)),
+		request,
+		around,
+	);
 	if (!kept.ok) return replyRefused(kept);
 	const told = taken.map(({document, entry, name, untouched}) => ({
 		name,
@@ -43,12 +50,7 @@ export const takeBack = (loaded: Loaded, names: readonly string[], request: Requ
 	}));
 	if (request.json)
 		return replyDone(printJson({track: loaded.track.name, car: loaded.car.name, takenBack: told}, request), kept.value);
-	const lines = told.map(({field, learned, now, changedSince}) =>
-		changedSince
-			? `${field}: was changed since and stays; its record is gone`
-			: `${field}: ${learned} is ${now ?? 'not given'} again`,
-	);
-	return replyDone(`${lines.map(visible).join('\n')}\n`, kept.value);
+	return replyDone(`${taken.map(one => visible(takenBackWords(one))).join('\n')}\n`, kept.value);
 };
 
 const isCalled = ({name, entry}: Takeable, asked: string): boolean =>

@@ -26,18 +26,23 @@ export function circumferenceText(value: number, se?: number): string {
 
 const percent = (share: number, digits: number) => `${fixed(100 * share, digits)} %`;
 
-export function fittedView({circumference, held, anchor, readings}: Learning): Block[] {
-	const lines = [
+export function fittedView(learning: Learning): Block[] {
+	const lines = fittedLines(learning);
+	return [
+		text('What it teaches', 'strong'),
+		...(lines.length === 0 ? [text('Nothing that can be told.', 'near')] : lines.map(one => text(one, 'plain', 2))),
+	];
+}
+
+/** In sentences; what is held is said with how to hold the other. */
+export function fittedLines({circumference, held, anchor, readings}: Learning): string[] {
+	return [
 		...(circumference === undefined ? [] : circumferenceWords(circumference)),
 		...(held === undefined ? [] : [heldWords[held]]),
 		...anchorWords(
 			anchor,
 			readings.filter(({limited}) => limited).map(({name}) => name),
 		),
-	];
-	return [
-		text('What it teaches', 'strong'),
-		...(lines.length === 0 ? [text('Nothing that can be told.', 'near')] : lines.map(one => text(one, 'plain', 2))),
 	];
 }
 
@@ -102,17 +107,20 @@ function aloneWords(straights: readonly StraightAnchor[]): string[] {
 /** Of two straights one in twenty misfits is above 2. */
 const scattersFrom = 2;
 
+export const comparedLegend = 'was, is: the model less practice, before and after';
+
 /** Practice beside the model: `was` and `is` are the model less practice, before and after. */
 export function comparedView(compared: readonly Compared[], units: Units): Block[] {
 	if (compared.length === 0) return [];
 	return [
 		text('Model against practice', 'strong'),
 		tableOf(comparedColumns(units, compared), compared, 2),
-		text('was, is: the model less practice, before and after', 'muted', 2),
+		text(comparedLegend, 'muted', 2),
 	];
 }
 
-function comparedColumns(units: Units, compared: readonly Compared[]): Making<Compared>[] {
+/** The straight's name first. */
+export function comparedColumns(units: Units, compared: readonly Compared[]): Making<Compared>[] {
 	const isTimed = compared.some(({reading}) => reading.timeS !== undefined);
 	const some = (wanted: boolean, ...makings: Making<Compared>[]) => (wanted ? makings : []);
 	const speed = (value: number | undefined, seen: number | undefined) =>

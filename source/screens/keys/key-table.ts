@@ -5,6 +5,7 @@ import {everywhereKeys} from './everywhere-keys.ts';
 import {formKeys} from './form-keys.ts';
 import {keepingKeys} from './keeping-keys.ts';
 import {lookingKeys} from './looking-keys.ts';
+import {practiceKeys} from './practice-keys.ts';
 import type {Scope} from './scopes.ts';
 import {sessionKeys} from './session-keys.ts';
 import {sharingKeys} from './sharing-keys.ts';
@@ -14,6 +15,7 @@ export const bindings = [
 	...formKeys,
 	...sharingKeys,
 	...keepingKeys,
+	...practiceKeys,
 	...sessionKeys,
 	...everywhereKeys,
 ] as const;

@@ -8,7 +8,9 @@ import type {Choice} from './catalog.ts';
 import {current, unsaved} from './documents.ts';
 import type {Effect} from './effect.ts';
 import {fileNameFor, items} from './hand-over.ts';
+import {panesOf, practiceOf, straightNames} from './practice.ts';
 import {marginEntry} from './reduce.ts';
+import {practicePlace} from './reduce-practice.ts';
 import {takeInPlace} from './reduce-take-in.ts';
 import {cursorIn, orders, type Placed, stepped} from './rows.ts';
 import {type Asked, type Place, pictures, type Session} from './session.ts';
@@ -22,6 +24,8 @@ export type Scene = {
 	readonly situations: readonly string[];
 	readonly choices: readonly Choice[];
 	readonly isWorking: boolean;
+	/** Lines that the cursor of the practice moves over. */
+	readonly practiceLines: number;
 };
 
 /** Which scopes of the key table hold, the first one first. */
@@ -127,6 +131,24 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 			return {do: 'move in draft', by: -1};
 		case 'draft down':
 			return {do: 'move in draft', by: 1};
+		case 'practice':
+			return {do: 'go', place: practicePlace};
+		case 'practice up':
+			return {do: 'move in practice', by: -1, count: scene.practiceLines};
+		case 'practice down':
+			return {do: 'move in practice', by: 1, count: scene.practiceLines};
+		case 'next pane':
+			return paneBy(session, 1);
+		case 'previous pane':
+			return paneBy(session, -1);
+		case 'practice enter':
+			return place.at !== 'practice' ? undefined : place.pane === 'changes' ? 'accept this' : seenEntry(session);
+		case 'name log':
+			return entryFor('log', '');
+		case 'hold other':
+			return {do: 'hold', held: practiceOf(session).held === 'speed' ? 'circumference' : 'speed'};
+		case 'clear number':
+			return cleared(session);
 		case 'differences':
 			return {do: 'go', place: {at: 'differences', kind: 'track', scroll: 0}};
 		case 'other document':
@@ -270,8 +292,36 @@ function accepted(over: Session['over']): Action | Effect | undefined {
 	if (over?.is !== 'entry') return undefined;
 	const text = over.line.text.trim();
 	if (over.asks === 'notes') return {do: 'note', text};
+	if (over.asks === 'seen') return text === '' ? {do: 'cover', over: undefined} : 'see it';
 	if (text === '') return {do: 'refuse', wrong: 'a name is needed; Esc goes back'};
+	if (over.asks === 'log') return 'read log';
 	return over.asks === 'file' ? 'write it' : 'export';
+}
+
+/** Of a straight, with what was typed before or with what begins now. */
+export function seenEntry(session: Session, begun?: string): Action {
+	const {place} = session;
+	const practice = practiceOf(session);
+	if (practice.log)
+		return {do: 'tell', notice: `${practice.log.label} is shown; Del puts it away for numbers by hand.`};
+	const straight = straightNames(session)[place.at === 'practice' ? place.cursor : 0];
+	const before = practice.seen.find(one => one.straight === straight)?.text ?? '';
+	return entryFor('seen', begun ?? before);
+}
+
+function paneBy(session: Session, by: 1 | -1): Action | undefined {
+	const {place} = session;
+	return place.at === 'practice'
+		? {do: 'show pane', pane: next(panesOf(practiceOf(session)), place.pane, by)}
+		: undefined;
+}
+
+function cleared(session: Session): Action | undefined {
+	const {place} = session;
+	if (place.at !== 'practice') return undefined;
+	if (practiceOf(session).log) return {do: 'show log', log: undefined};
+	const straight = straightNames(session)[place.cursor];
+	return place.pane !== 'numbers' || straight === undefined ? undefined : {do: 'see', straight, text: undefined};
 }
 
 function forget({place, history}: Session): Action | undefined {

@@ -11,7 +11,9 @@ import type {Effect, ErrandEffect} from './effect.ts';
 import {type Errandful, errandEffects, readPlan} from './errand-effects.ts';
 import {readTrackOf} from './forms.ts';
 import {type Handed, rowToHandOver} from './hand-over.ts';
-import {intend, type Scene, scopesOf, takesText} from './intend.ts';
+import {intend, type Scene, scopesOf, seenEntry, takesText} from './intend.ts';
+import {LivePractice, type PracticeScene} from './live-practice.ts';
+import {practiceEffects} from './practice-effects.ts';
 import {type Clock, Ranker} from './ranker.ts';
 import {reduce} from './reduce.ts';
 import {cursorIn, type Filter, type Order, type Placed, placedRows, shownRows} from './rows.ts';
@@ -28,7 +30,7 @@ export type Outside = {
 export type State = {
 	readonly session: Session;
 	readonly answer: Answer;
-	readonly scene: Scene & {readonly handed: Handed | undefined};
+	readonly scene: Scene & {readonly handed: Handed | undefined; readonly practice: PracticeScene | undefined};
 };
 
 export class LiveSession {
@@ -43,6 +45,7 @@ export class LiveSession {
 	/** Loaded once there is something to hand over: most sessions never have. */
 	#handing: typeof import('./handing.ts') | undefined;
 	#handingLoad: Promise<void> | undefined;
+	readonly #practice: LivePractice;
 	#placed: {readonly ranked: Ranked; readonly rows: Placed[]} | undefined;
 	#shown:
 		| {readonly all: readonly Placed[]; readonly order: Order; readonly filter: Filter; readonly rows: Placed[]}
@@ -53,11 +56,16 @@ export class LiveSession {
 		this.#keeper = keeper;
 		this.#outside = outside;
 		this.#ranker = new Ranker(clock, () => this.#settle(this.#state.session));
+		this.#practice = new LivePractice(clock, () => this.#settle(this.#state.session));
 		this.#ranker.start(inputsOf(session));
 		this.#state = this.#stateOf(session);
 		const {errands} = keeper;
 		this.#errandful = {state: this.state, dispatch: action => this.dispatch(action), catalog, errands};
-		this.#effects = {...this.#ownEffects, ...errandEffects(this.#errandful)};
+		this.#effects = {
+			...this.#ownEffects,
+			...errandEffects(this.#errandful),
+			...practiceEffects(this.#errandful, () => this.#practice.teaching),
+		};
 	}
 
 	readonly state = (): State => this.#state;
@@ -76,6 +84,7 @@ export class LiveSession {
 		else if (event.kind === 'paste' && this.#isPlan(event.text)) void readPlan('paste', event.text, this.#errandful);
 		else if (takesText(session)) this.dispatch({do: 'type', event});
 		else if (startsNumber(event) && session.place.at === 'edit') this.dispatch({do: 'open field', text: event.text});
+		else if (startsNumber(event) && isAtNumbers(session)) this.dispatch(seenEntry(session, event.text));
 		else if (event.kind === 'paste') this.dispatch({do: 'paste curve', text: event.text});
 	}
 
@@ -186,9 +195,11 @@ export class LiveSession {
 			situations: track.ok ? track.value.situations.map(({name}) => name) : [],
 			choices: place.at === 'choose' ? choicesFor(this.#catalog, documents, place.kind, place.search.text) : [],
 			isWorking: answer.is === 'working',
+			practiceLines: 0,
 		};
+		const practice = this.#practice.scene(session, rankedIn(answer), answer.is === 'ready');
 		const handed = answer.is === 'ready' ? this.#handed(session, scene, answer.ranked) : undefined;
-		return {session, answer, scene: {...scene, handed}};
+		return {session, answer, scene: {...scene, practiceLines: practice?.lines ?? 0, handed, practice}};
 	}
 
 	/** Of an answer that is of a moment ago nothing is handed over. */
@@ -220,6 +231,9 @@ export class LiveSession {
 /** A number typed on a field takes the place of what stood there. */
 const startsNumber = (event: KeyEvent): event is KeyEvent & {kind: 'text'} =>
 	event.kind === 'text' && /^[\d.]$/.test(event.text);
+
+const isAtNumbers = ({place, over}: Session): boolean =>
+	place.at === 'practice' && place.pane === 'numbers' && over === undefined;
 
 /** Before the rack has been ranked there is the pair in the car. */
 const firstRow = (answer: Answer): Placed[] =>

@@ -19,6 +19,7 @@ import {helpView} from './help-view.ts';
 import {keyLines} from './key-line.ts';
 import {noticeLines} from './notice-view.ts';
 import {pictureView} from './picture-view.ts';
+import {practiceView} from './practice-view.ts';
 import {type RankingTable, rankingTable} from './ranking-view.ts';
 import {reasonView, sentenceView} from './reason-view.ts';
 import {scrolled} from './scrolled.ts';
@@ -97,6 +98,10 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 		return plain(changesView(current(documents, session.place.kind), session.place.scroll, width, body));
 	if (answer.is === 'faulty') return plain(wrongView(answer.wrong, width));
 
+	if (session.place.at === 'practice') {
+		const given = {session, place: session.place, scene: scene.practice, width, height: body, ascii: size.ascii};
+		return plain(practiceView(given));
+	}
 	if (session.place.at === 'hand over') return plain(handOverView(state, session.place, body, size));
 	if (here === undefined)
 		return plain([
