@@ -1,6 +1,6 @@
 /** What practice teaches, as a person reads it: what was fitted, the model against practice, what would change. */
 import type {Setting} from '../planning/results.ts';
-import {speedText} from '../planning/words.ts';
+import {listed, speedText} from '../planning/words.ts';
 import type {Findings, NoteCode} from '../practice/find/findings.ts';
 import type {Anchor, StraightAnchor} from '../practice/learn/anchor.ts';
 import type {CircumferenceLearned} from '../practice/learn/circumference.ts';
@@ -43,6 +43,21 @@ export function fittedLines({circumference, held, anchor, readings}: Learning): 
 			anchor,
 			readings.filter(({limited}) => limited).map(({name}) => name),
 		),
+		...implausibleWords(circumference, anchor),
+	];
+}
+
+/** What practice corrects is small: beyond these something else is wrong. */
+const plausible = {circumference: 0.03, drag: 0.2, power: 0.1} as const;
+
+function implausibleWords(circumference: CircumferenceLearned | undefined, anchor: Anchor | undefined): string[] {
+	const factors = {circumference: circumference?.factor, drag: anchor?.drag?.value, power: anchor?.power?.value};
+	const wild = (Object.keys(plausible) as (keyof typeof plausible)[]).filter(
+		name => Math.abs((factors[name] ?? 1) - 1) > plausible[name],
+	);
+	if (wild.length === 0) return [];
+	return [
+		`So much of a difference in ${listed(wild)} is not likely: check the pair, the gear and the straight before accepting it.`,
 	];
 }
 

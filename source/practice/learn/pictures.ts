@@ -5,7 +5,7 @@ import type {Learning, Subject} from './learn.ts';
 import {tracesOf} from './model.ts';
 import {untrimmed} from './trim.ts';
 
-/** One hump a gear: the ratio n·C/(60·V·(1 + slip)) by the documents, and how many samples were there. */
+/** One hump a gear: the ratio n·C/(60·V·(1 + slip)) by the circumference that explains the log, and how many samples were there. */
 export type RatioPicture = {
 	readonly points: readonly (readonly [ratio: number, samples: number])[];
 	/** Overall ratios of the pair and set that explain the log. */
@@ -17,8 +17,10 @@ const bins = 240;
 const roomAround = 1.12;
 
 export function ratioPicture({samples, mounted}: Findings): RatioPicture {
+	const factor = mounted.best?.circumferenceFactor ?? 1;
 	const held = Float32Array.from(
 		samples.overall.filter((ratio, i) => Number.isFinite(ratio) && isUnderPower(samples.state[i]!)),
+		ratio => ratio * factor,
 	).sort();
 	const gears = (mounted.best?.candidate.train.overall ?? []).map((ratio, i) => ({gear: i + 1, ratio}));
 	if (held.length === 0) return {points: [], gears};

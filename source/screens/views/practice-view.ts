@@ -1,4 +1,5 @@
 /** The practice: numbers with the model beside them, what would change, and what a log shows. */
+import type {Findings, MountedVerdict} from '../../practice/find/findings.ts';
 import type {Compared} from '../../practice/learn/compared.ts';
 import {type Block, cell, gap, type Making, tableOf, text} from '../../text/blocks.ts';
 import {drawChart} from '../../text/chart.ts';
@@ -149,8 +150,21 @@ function toldBlocks({lesson, wrong}: Taught): Block[] {
 	if (wrong !== undefined) return [text(wrong, 'fail')];
 	if (lesson === undefined) return [text(nothingYet, 'muted')];
 	const {findings, learning} = lesson;
-	const mounted = findings && findings.mounted.verdict !== 'asInstalled' ? [text(findings.mounted.why, 'near', 2)] : [];
+	const mounted = findings && findings.mounted.verdict !== 'asInstalled' ? [text(mountedWords(findings), 'near', 2)] : [];
 	return [...mounted, ...fittedLines(learning).map(words => text(words, 'plain', 2))];
+}
+
+/** In one line; the whole of it is told where the log is. */
+function mountedWords({mounted: {verdict, best}}: Findings): string {
+	const fits = best === undefined ? '' : `: the log fits ${best.candidate.pairName} ${best.candidate.gearbox.name}`;
+	const words: Record<Exclude<MountedVerdict, 'asInstalled'>, string> = {
+		otherFits: `The log does not fit the pair in the car${fits}`,
+		flippedFits: `The gears seem to be on the wrong shafts${fits}`,
+		nothingFits: 'The log fits no pair of this car: is it another car, or another unit',
+		noInstalled: `The car does not say which pair is in it${fits}`,
+		unknown: 'There is too little at full throttle to tell the pair',
+	};
+	return `${words[verdict as keyof typeof words]}. Tab shows why, under log.`;
 }
 
 /** What accepting all of it does. */
@@ -205,7 +219,7 @@ function changeRows(one: Line, isHere: boolean): ChangeRow[] {
 const changeColumns: readonly Making<ChangeRow>[] = [
 	{head: '', align: 'left', keep: 0, cell: ({isHere}) => cell(isHere ? '▸' : ' ', 'strong')},
 	{
-		head: 'Enter accepts',
+		head: 'change',
 		align: 'left',
 		keep: 0,
 		shortest: 10,
