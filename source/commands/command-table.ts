@@ -1,6 +1,7 @@
 /** Every command once: parsing, help and the messages about unknown ones are made from this table. */
 import type {Command} from './command.ts';
 import {learnCommands} from './learn-commands.ts';
+import {lifeCommands} from './life-commands.ts';
 import {sharingCommands} from './sharing-commands.ts';
 import {storeCommands} from './store-commands.ts';
 
@@ -87,6 +88,7 @@ export const commands: readonly Command[] = [
 		load: async () => (await import('./schema.ts')).schema,
 	},
 	...learnCommands,
+	...lifeCommands,
 	...storeCommands,
 	...sharingCommands,
 ];

@@ -8,7 +8,6 @@ import {
 } from './channels.ts';
 import {ambiguous, type ColumnProblem, missing, takenTwice, wrongAsked} from './column-problems.ts';
 import {findAsked} from './find-asked.ts';
-import {nameKey} from './header-names.ts';
 import type {Header} from './headers.ts';
 import type {ColumnUse} from './reading.ts';
 
@@ -96,12 +95,12 @@ export function mappingFor(headers: readonly Header[], remembered: RememberedCol
 	for (const channel of channelNames) {
 		const kept: RememberedColumn | undefined = remembered[channel];
 		if (kept === undefined) continue;
-		const same = headers.filter(({name}) => kept.header !== null && nameKey(name) === nameKey(kept.header));
-		const exact = same.filter(({name}) => name === kept.header);
-		const [header, other] = exact.length > 0 ? exact : same;
 		if (kept.header === null) columns.set(channel, {header: null, unit: undefined});
-		else if (header === undefined || other !== undefined) notThere.push(kept.header);
-		else columns.set(channel, {header, unit: kept.unit});
+		else {
+			const found = findAsked(kept.header, headers);
+			if (found.kind === 'one') columns.set(channel, {header: found.header, unit: kept.unit});
+			else notThere.push(kept.header);
+		}
 	}
 	return notThere.length > 0 ? {fits: false, notThere} : {fits: true, columns};
 }

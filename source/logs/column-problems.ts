@@ -5,13 +5,13 @@ import type {ChannelName} from './channels.ts';
 import {columnOption} from './column-option.ts';
 import type {FoundAsked} from './find-asked.ts';
 import {usualNames} from './header-names.ts';
+import {nameFor, valueFor} from './header-values.ts';
 import type {Header} from './headers.ts';
 import {unitChoices} from './log-units.ts';
 import type {LogProblem} from './reading.ts';
 
 export type ColumnProblem = LogProblem & {readonly channel: ChannelName};
 
-/** As many headers as a message lists. */
 const mostListed = 24;
 
 const required = 'speed, rpm, and one of time and distance';
@@ -44,9 +44,9 @@ export function ambiguous(
 		kind: 'ambiguous',
 		channel,
 		where: `the column of ${channel}`,
-		found: `${candidates.length} columns that it may be: ${candidates.map(named).join(', ')}`,
+		found: `${candidates.length} columns that it may be: ${firstOf(candidates.map(named))}`,
 		allowed: 'one of them',
-		do: `Say which: ${options.join(', or ')}${isRequired ? '' : `; without it: ${columnOption(channel, 'none')}`}.`,
+		do: `Say which: ${firstOf(options, ', or ')}${isRequired ? '' : `; without it: ${columnOption(channel, 'none')}`}.`,
 		choice: {channel, values: isRequired ? values : [...values, 'none']},
 	};
 }
@@ -120,33 +120,18 @@ export function unknownUnit(
 	};
 }
 
-/** What one types to take this column: its header, or its number where others have the same. */
-function valueFor(header: Header, headers: readonly Header[]): string {
-	return isClear(header.written, headers) ? header.written : `#${header.column}`;
-}
-
-/** The same without the unit in the header. */
-function nameFor(header: Header, headers: readonly Header[]): string {
-	return isClear(header.name, headers) ? header.name : `#${header.column}`;
-}
-
-const plainText = /^[\p{L}\p{N}\p{P}\p{S} ]{1,60}$/u;
-
-function isClear(text: string, headers: readonly Header[]): boolean {
-	if (!plainText.test(text) || text.toLowerCase() === 'none') return false;
-	return headers.filter(({written, name}) => written === text || name === text).length === 1;
-}
-
 const optionFor = (channel: ChannelName, header: Header, headers: readonly Header[]): string =>
 	columnOption(channel, valueFor(header, headers));
 
 const named = ({written, column}: Header): string =>
 	written === '' ? `#${column} without a header` : `"${shortened(written)}" (#${column})`;
 
-function listed(headers: readonly Header[]): string {
-	const shown = headers.slice(0, mostListed).map(({written}) => `"${shortened(written)}"`);
-	const left = headers.length - shown.length;
-	return `${shown.join(', ')}${left > 0 ? ` and ${left} more` : ''}`;
+const listed = (headers: readonly Header[]): string => firstOf(headers.map(({written}) => `"${shortened(written)}"`));
+
+/** As many as a message lists. */
+function firstOf(texts: readonly string[], between = ', '): string {
+	const left = texts.length - mostListed;
+	return `${texts.slice(0, mostListed).join(between)}${left > 0 ? ` and ${left} more` : ''}`;
 }
 
 /** The header that is spelled most like a usual one. */

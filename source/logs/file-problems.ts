@@ -112,6 +112,14 @@ export function noNumbers({samples, cells}: Rows, columns: readonly UsedColumn[]
 	return undefined;
 }
 
+export const runsBackward = (axis: 'time' | 'distance', back: number, all: number): LogProblem => ({
+	kind: 'backward',
+	where: `the column of ${axis}`,
+	found: `a ${axis} that goes back in ${back} of ${all} rows`,
+	allowed: 'rows in the order in which they were recorded; a few may be out of it',
+	do: `Sort the rows, or take another column: --column ${axis}=HEADER.`,
+});
+
 export function deadSensor(channel: 'speed' | 'rpm', columns: readonly UsedColumn[]): LogProblem {
 	const {header} = columns.find(column => column.channel === channel)!;
 	return {

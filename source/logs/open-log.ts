@@ -1,16 +1,28 @@
 /** What the first part of a log says about the rest of it: how to read its rows, and what to make of them. */
 import {shortened} from '../documents/problem.ts';
-import type {AskedColumns, ChannelName, RememberedColumns} from './channels.ts';
+import type {AskedColumns, RememberedColumns} from './channels.ts';
 import {type Choice, chooseColumns} from './choose-columns.ts';
 import {decideUnits, type UsedColumn} from './decide-units.ts';
 import {decimalsIn} from './decimals.ts';
-import {deadSensor, mixedDecimals, noHeader, noNumbers, noRows, notText, tooLongLine} from './file-problems.ts';
+import {
+	deadSensor,
+	mixedDecimals,
+	noHeader,
+	noNumbers,
+	noRows,
+	notText,
+	runsBackward,
+	tooLongLine,
+} from './file-problems.ts';
 import {findTable, type Table, wantedHeaders} from './find-table.ts';
 import type {Head} from './head.ts';
+import {lastingName} from './header-values.ts';
+import type {Header} from './headers.ts';
 import type {ColumnUse, LogReading, LogRefused, RemarkData} from './reading.ts';
 import {sentenceOf} from './remark-text.ts';
-import type {RowPlan, Rows} from './row-reader.ts';
+import type {Rows} from './row-reader.ts';
 import {rowRemarks} from './row-remarks.ts';
+import type {RowPlan} from './row-table.ts';
 import {runFromRows} from './run-from-rows.ts';
 
 export type OpenLog = {
@@ -56,7 +68,7 @@ export function openLog(head: Head, given: Given): OpenLog | LogRefused {
 		ok: true,
 		plan: planOf(head, table, units.columns, seen, given),
 		start: table.start,
-		finish: rows => finished(rows, table, units.columns, choice.none, remarks),
+		finish: rows => finished(rows, table, units.columns, choice, remarks, given),
 	};
 }
 
@@ -113,13 +125,15 @@ function finished(
 	rows: Rows,
 	table: Table,
 	columns: readonly UsedColumn[],
-	none: readonly ChannelName[],
+	choice: Choice,
 	before: readonly RemarkData[],
+	given: Given,
 ): LogReading {
 	if (rows.samples <= rows.wrongCells.count) return refused(noRows(rows, table));
 	const empty = noNumbers(rows, columns);
 	if (empty) return refused(empty);
 	const made = runFromRows(rows, columns);
+	if ('backward' in made) return refused(runsBackward(made.backward, made.rows, rows.samples));
 	if ('dead' in made) return refused(deadSensor(made.dead, columns));
 	const {run, remarks} = made;
 	const used = columns.filter(({channel}) => channel !== 'throttle' || run.throttle);
@@ -128,10 +142,7 @@ function finished(
 		ok: true,
 		run,
 		columns: Object.fromEntries(used.map(column => [column.channel, useOf(column)])),
-		remember: {
-			...Object.fromEntries(columns.map(column => [column.channel, remembered(column)])),
-			...Object.fromEntries(none.map(channel => [channel, {header: null}])),
-		},
+		remember: remember(columns, table.headers, choice, given),
 		remarks: all.map(data => ({...data, text: sentenceOf(data)})),
 	};
 }
@@ -147,8 +158,24 @@ const useOf = ({header, unit, by, unitBy}: UsedColumn): ColumnUse => ({
 	unitBy,
 });
 
-/** A unit that the log states is read again from the next one. */
-const remembered = ({header, unit, unitBy}: UsedColumn) => ({
-	header: header.name,
-	...(unit && (unitBy === 'asked' || unitBy === 'remembered') && {unit: unit.name}),
-});
+/**
+ * What the names alone do not tell: what was asked for, and what was remembered before. A log of other columns, read without a
+ * question, leaves the memory as it is.
+ */
+function remember(
+	columns: readonly UsedColumn[],
+	headers: readonly Header[],
+	{none, notThere}: Choice,
+	given: Given,
+): RememberedColumns {
+	const isAsked = Object.keys(given.columns).length > 0;
+	if (notThere.length > 0 && !isAsked) return given.remembered ?? {};
+	const told = columns.flatMap(({channel, header, by, unit, unitBy}) => {
+		const name = lastingName(header, headers);
+		if (by === 'name' || name === undefined) return [];
+		// A unit that the log states is read again from the next one.
+		const isOurs = unitBy === 'asked' || unitBy === 'remembered';
+		return [[channel, {header: name, ...(unit && isOurs && {unit: unit.name})}] as const];
+	});
+	return Object.fromEntries([...told, ...none.map(channel => [channel, {header: null}] as const)]);
+}

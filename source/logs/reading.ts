@@ -9,7 +9,7 @@ export type LogRead = {
 	readonly run: LoggedRun;
 	/** Of each channel that is used. */
 	readonly columns: Partial<Record<ChannelName, ColumnUse>>;
-	/** To be handed in as `remembered` with the next log of the same car. */
+	/** What the names of the columns alone did not tell: to be handed in as `remembered` with the next log of the same car. */
 	readonly remember: RememberedColumns;
 	readonly remarks: readonly LogRemark[];
 };
@@ -43,7 +43,8 @@ export type LogProblem = {
 		| 'decimals'
 		| 'asked'
 		| 'noNumbers'
-		| 'misshapen';
+		| 'misshapen'
+		| 'backward';
 	/** Like `line 3` or `the column of speed`. */
 	readonly where: string;
 	readonly found: string;

@@ -1,7 +1,8 @@
 /** What is to be said of the cells and rows as they stood in the file. */
 import type {UsedColumn} from './decide-units.ts';
 import type {RemarkData} from './reading.ts';
-import type {CellCounts, Rows} from './row-reader.ts';
+import type {Rows} from './row-reader.ts';
+import type {CellCounts} from './row-table.ts';
 
 const sparseShare = 0.5;
 

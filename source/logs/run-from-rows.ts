@@ -20,15 +20,17 @@ const lowestPeakRpm = 1000;
 /** By how much the distance of a log may differ from what its speed makes. */
 const agreement = 0.05;
 
-/** Where a sensor hung all the time, speed or engine speed is known nowhere, and there is no run. */
-export function runFromRows(
-	rows: Rows,
-	columns: readonly UsedColumn[],
-): RunFromRows | {readonly dead: 'speed' | 'rpm'} {
+/** A sensor hung all the time: speed or engine speed is known nowhere. */
+type Dead = {readonly dead: 'speed' | 'rpm'};
+/** More rows go back than ahead. */
+type Backward = {readonly backward: 'time' | 'distance'; readonly rows: number};
+
+export function runFromRows(rows: Rows, columns: readonly UsedColumn[]): RunFromRows | Dead | Backward {
 	const byChannel = new Map<ChannelName, Numbers>(columns.map(({channel}, slot) => [channel, rows.values[slot]!]));
 	const samples = new Samples(byChannel, rows.samples);
 	const axis = byChannel.has('time') ? 'time' : 'distance';
 	const inOrder = ordered(samples, axis);
+	if ('backward' in inOrder) return inOrder;
 	const [speedMps, rpm] = [samples.get('speed') as Float32Array, samples.get('rpm') as Float32Array];
 	const along = samples.get(axis) as Float64Array;
 	const timeS = axis === 'time' ? along : timeFromSpeed(along, everywhere(speedMps, along));
@@ -46,17 +48,20 @@ export function runFromRows(
 	const needed = {samples: samples.length, timeS, distanceM, speedMps, rpm};
 	const more = {throttle: channel('throttle'), gear, lap: channel('lap'), brake: channel('brake')};
 	const run = {...needed, ...more, steering: channel('steering')};
-	return {run, remarks: [...inOrder, ...place.remarks, ...sound]};
+	return {run, remarks: [...inOrder.remarks, ...place.remarks, ...sound]};
 }
 
-function ordered(samples: Samples, axis: 'time' | 'distance'): RemarkData[] {
+function ordered(samples: Samples, axis: 'time' | 'distance'): {readonly remarks: RemarkData[]} | Backward {
+	const all = samples.length;
 	const {unplaced, outOfOrder, restarts} = putInOrder(samples, axis);
+	const back = outOfOrder + restarts.length;
+	if (2 * back > all) return {backward: axis, rows: back};
 	const remarks: RemarkData[] = [];
 	if (unplaced > 0) remarks.push({kind: 'unplaced', rows: unplaced});
 	if (outOfOrder > 0) remarks.push({kind: 'outOfOrder', channel: axis, rows: outOfOrder});
 	// Where the axis is a distance, there is no time yet to say where.
 	if (restarts.length > 0) remarks.push({kind: 'restart', channel: axis, atS: axis === 'time' ? restarts : []});
-	return remarks;
+	return {remarks};
 }
 
 type Placed = Pick<LoggedRun, 'distanceM'> & {readonly remarks: readonly RemarkData[]};

@@ -77,6 +77,12 @@ describe('columns that do not fit are refused with what to type', () => {
 		);
 	});
 
+	test('so many that only the first are listed', async () => {
+		const message = await refusal(table(`Time [s],RPM,${'Speed [mph],'.repeat(30)}X`, 9, i => `${i},`.repeat(32) + i));
+		expect(message).toContain('found 30 columns that it may be: "Speed [mph]" (#3), ');
+		expect(message).toMatch(/"Speed \[mph\]" \(#26\) and 6 more; .*--column speed="#26" and 6 more\.$/);
+	});
+
 	test('two with the same header', async () => {
 		expect(await refusal(table('Time [s],Speed [mph],RPM,RPM', 9, plainRow))).toContain(
 			'found 2 columns that it may be: "RPM" (#3), "RPM" (#4); allowed one of them. Say which: --column rpm="#3", or --column rpm="#4".',
@@ -139,6 +145,13 @@ describe('numbers that say two things are refused', () => {
 		expect(await refusal(table(headers, 9, i => `${i / 10},50,`))).toContain(
 			'the column of rpm, "RPM" (#3): found only empty cells;',
 		);
+	});
+
+	test('a time that runs backward', async () => {
+		const message = (back: number) =>
+			`run.csv: the column of time: found a time that goes back in ${back} of 20 rows; allowed rows in the order in which they were recorded; a few may be out of it. Sort the rows, or take another column: --column time=HEADER.`;
+		expect(await refusal(table(headers, 20, i => `${20 - i},50,${5000 + i}`))).toBe(message(19));
+		expect(await refusal(table(headers, 20, i => `${i === 0 ? 0 : 20 - i},50,${5000 + i}`))).toBe(message(18));
 	});
 
 	test('a sensor that hangs all the time', async () => {
@@ -279,6 +292,6 @@ describe('nothing in a file reaches the terminal as it is', () => {
 	test('headers that are names of an object', async () => {
 		const log = await read(table('Time [s],__proto__,Speed [m/s],constructor,RPM', 20, i => `${i / 10},1,50,2,5000`));
 		expect(numbers(log.run.rpm, 2)).toEqual([5000, 5000]);
-		expect(Object.keys(log.remember)).toEqual(['time', 'speed', 'rpm']);
+		expect(Object.keys(log.columns)).toEqual(['time', 'speed', 'rpm']);
 	});
 });

@@ -124,7 +124,6 @@ describe('what is remembered', () => {
 		expect(first.remember).toEqual({
 			time: {header: 'Time', unit: 'ms'},
 			speed: {header: 'Wheel Speed', unit: 'mph'},
-			rpm: {header: 'RPM'},
 			throttle: {header: null},
 		});
 		const kept = JSON.parse(JSON.stringify(first.remember));
@@ -144,9 +143,22 @@ describe('what is remembered', () => {
 		expect(asked.columns.speed).toMatchObject({column: 3, by: 'asked'});
 	});
 
+	test('tells two columns apart that differ only in their unit, and no two that do not', async () => {
+		const two = table('Time [s],Speed [mph],Speed [km/h],RPM,RPM', 9, i => `${i / 10},50,80,5000,5000`);
+		const {remember} = await read(two, {columns: {speed: 'Speed [km/h]', rpm: '#5'}});
+		expect(remember).toEqual({speed: {header: 'Speed [km/h]'}});
+		expect((await read(two, {remembered: remember, columns: {rpm: '#4'}})).columns.speed?.column).toBe(3);
+	});
+
+	test('is nothing where the names told all', async () => {
+		expect((await read(plainLog)).remember).toEqual({});
+	});
+
 	test('of other columns is not used, and it is said', async () => {
 		const other = await read(plainLog, {remembered: {speed: {header: 'Wheel Speed'}, rpm: {header: 'RPM'}}});
 		expect(other.columns.rpm?.by).toBe('name');
+		// It may still be of use with the next log.
+		expect(other.remember).toEqual({speed: {header: 'Wheel Speed'}, rpm: {header: 'RPM'}});
 		expect(texts(other)).toContain(
 			'The columns remembered from an earlier log were not used: "Wheel Speed" is not in this one, or more than once.',
 		);

@@ -40,7 +40,7 @@ const roadDialect: Dialect = {
 /** Eight laps of a short track. */
 export async function quillmereLog(): Promise<ExampleLog> {
 	const plan = await samplePlan('quillmere');
-	const wish = {seed, plan, mounted: mount(plan, 33, 35, 'A'), sensors: {rateHz: 20}, driving: {laps: 8}};
+	const wish = {seed, plan, mounted: mount(plan, '33/35 A'), sensors: {rateHz: 20}, driving: {laps: 8}};
 	const log = generateLog(wish);
 	return {...log, csv: `${shortTrackPreamble.join('\n')}\n${logAsCsv(log.run, shortTrackDialect)}`};
 }
@@ -49,6 +49,6 @@ export async function quillmereLog(): Promise<ExampleLog> {
 export async function hesperRidgeLog(): Promise<ExampleLog> {
 	const plan = await samplePlan('hesper-ridge');
 	const sensors = {rateHz: 10, gear: true};
-	const log = generateLog({seed, plan, mounted: mount(plan, 33, 35, 'A'), sensors, driving: {laps: 2}});
+	const log = generateLog({seed, plan, mounted: mount(plan, '33/35 A'), sensors, driving: {laps: 2}});
 	return {...log, csv: logAsCsv(log.run, roadDialect)};
 }

@@ -7,7 +7,7 @@ import {bridged, middleOfThree, movingMean, roughQuantile} from './smooth.ts';
 
 export type Channels = {
 	readonly run: LoggedRun;
-	/** Samples a second, by the median step in time. */
+	/** Samples a second, by the median step in time; 0 where time does not pass. */
 	readonly rateHz: number;
 	/** Speed without gaps, strays and noise. */
 	readonly smoothMps: Float32Array;
@@ -28,10 +28,11 @@ export function channelsOf(run: LoggedRun, plan: Plan): Channels {
 	return {run, rateHz, smoothMps, middleRpm: middleOfThree(run.rpm), overall: overallBy(run, plan.base.vehicle)};
 }
 
-/** NaN with fewer than two samples. */
+/** 0 where time does not pass. */
 function sampleRateHz(timeS: Float64Array): number {
 	const steps = timeS.subarray(1).map((time, i) => time - timeS[i]!);
-	return 1 / roughQuantile(steps, 0.5);
+	const stepS = roughQuantile(steps, 0.5);
+	return stepS > 0 ? 1 / stepS : 0;
 }
 
 /** n·C/(60·V·(1 + slip)) at each sample; NaN where speed or RPM are missing or near nothing. */

@@ -14,7 +14,7 @@ export type Spread = {
 
 export type LogFacts = {
 	readonly samples: number;
-	/** Samples a second, by the median step in time. */
+	/** Samples a second, by the median step in time; 0 where time does not pass. */
 	readonly rateHz: number;
 	readonly timeS: number;
 	readonly distanceM: number;
@@ -64,9 +64,10 @@ export type Pass = {
 	/** Lowest speed of the corner before. */
 	readonly minimumMps: number | undefined;
 	readonly highestMps: number;
-	readonly highestRpm: number;
-	/** Engine speed at the last sample, by a line like the speeds, through samples in the gear there. */
-	readonly endRpm: number;
+	/** Undefined where no engine speed was read. */
+	readonly highestRpm: number | undefined;
+	/** At the last sample, by a line like the speeds, through samples in the gear there; undefined where none was read. */
+	readonly endRpm: number | undefined;
 	/** Counted from 1; undefined where no gear fits. */
 	readonly exitGear: number | undefined;
 	readonly endGear: number | undefined;
@@ -253,9 +254,7 @@ export type NoteCode =
 	| 'slipHeld'
 	| 'noCircumference'
 	| 'farCircumference'
-	| 'wheelspin'
-	| 'deadChannel'
-	| 'tooShort';
+	| 'wheelspin';
 
 /** Something to know beside the numbers, as a sentence. */
 export type Note = {readonly code: NoteCode; readonly text: string};

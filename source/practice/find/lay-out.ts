@@ -31,7 +31,7 @@ export function layOut(channels: Channels, plan: Plan, runs: readonly Measured[]
 		lapM: where?.lapM,
 		why: match?.why ?? 'The full-throttle runs of the log do not repeat, so they are not laid on straights.',
 	};
-	return {laps, lapsFrom, matching, runs: judged(runs, lapOf, straightOf, laps, channels.run.samples)};
+	return {laps, lapsFrom, matching, runs: judged(channels, runs, lapOf, straightOf, laps)};
 }
 
 type Cut = {
@@ -43,7 +43,7 @@ type Cut = {
 
 function cutAndMatch({run, rateHz}: Channels, {track}: Plan, runs: readonly Measured[]): Cut {
 	const byColumn = lapsByColumn(run);
-	const all: LapCut[] = [{number: 1, from: 0, to: run.samples}];
+	const all: LapCut[] = run.samples === 0 ? [] : [{number: 1, from: 0, to: run.samples}];
 	if (runs.length === 0) {
 		return {cuts: byColumn ?? all, lapsFrom: byColumn ? 'column' : 'none', where: undefined, match: undefined};
 	}
@@ -71,15 +71,18 @@ function firstPlace({straightAt}: Match): number {
 	return found.length === 0 ? 0 : straightAt.indexOf(Math.min(...found));
 }
 
-/** A run whose length is off by more than this from the others on its straight was cut short, or into. */
+/**
+ * A run whose length is off by more than this from the others on its straight, and by more than a sample at each end, was cut
+ * short, or into.
+ */
 const lengthShare = 0.12;
 
 function judged(
+	{run: {samples}, rateHz}: Channels,
 	runs: readonly Measured[],
 	lapOf: readonly number[],
 	straightOf: readonly (number | undefined)[],
 	laps: readonly Lap[],
-	samples: number,
 ): LaidOut['runs'] {
 	const onGood = runs.map((pass, i) => laps[lapOf[i]!]?.kind === 'good' && pass.from > 0 && pass.to < samples - 1);
 	const usualM = new Map<number, number>();
@@ -93,7 +96,8 @@ function judged(
 	return runs.map((pass, i) => {
 		const straight = straightOf[i];
 		const usual = straight === undefined ? Number.NaN : usualM.get(straight)!;
-		const good = onGood[i]! && Math.abs(pass.lengthM / usual - 1) <= lengthShare;
+		const sampleM = pass.lengthM / pass.timeS / rateHz;
+		const good = onGood[i]! && Math.abs(pass.lengthM - usual) <= lengthShare * usual + sampleM;
 		return {lap: lapOf[i]!, straight, good};
 	});
 }

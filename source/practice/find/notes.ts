@@ -26,7 +26,7 @@ export function notesOn(seen: Seen, plan: Plan, by: FullThrottle['by']): Note[] 
 }
 
 function sampling({log}: Seen): Note[] {
-	if (log.rateHz >= shiftsFromHz) return [];
+	if (log.rateHz >= shiftsFromHz || log.rateHz === 0) return [];
 	const rate = `The log has ${log.rateHz.toFixed(log.rateHz < 2 ? 1 : 0)} samples a second: shift RPM and missed shifts cannot be told from it`;
 	const edges = `; exits and ends of straights are the first and last full-throttle samples, up to ${(1 / log.rateHz).toFixed(1)} s off. Pair, gears and circumference are found all the same`;
 	return [{code: 'slowSampling', text: `${rate}${log.rateHz < edgesFromHz ? edges : ''}.`}];

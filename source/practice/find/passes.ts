@@ -44,8 +44,8 @@ function measure(
 		endMps,
 		minimumMps: endBefore === undefined ? undefined : lowestIn(smoothMps, endBefore, from),
 		highestMps: Math.max(endMps, highestIn(smoothMps, from, to)),
-		highestRpm: highestIn(middleRpm, from, to),
-		endRpm: edge(channels, run.rpm, to, inLast, -1) ?? Number.NaN,
+		highestRpm: known(highestIn(middleRpm, from, to)),
+		endRpm: edge(channels, run.rpm, to, inLast, -1),
 		exitGear: gears[0]?.gear,
 		endGear: last?.gear,
 		timeS: run.timeS[to]! - run.timeS[from]!,
@@ -92,6 +92,8 @@ function lowestIn(values: Float32Array, from: number, to: number): number {
 	for (let i = from; i <= to; i++) if (values[i]! < lowest) lowest = values[i]!;
 	return lowest;
 }
+
+const known = (value: number) => (Number.isNaN(value) ? undefined : value);
 
 /** NaN where nothing was read. */
 export function highestIn(values: Float32Array, from: number, to: number): number {

@@ -37,8 +37,8 @@ export function straightFindings(track: Track, passes: readonly Pass[]): Straigh
 	});
 }
 
-function highest(values: readonly number[]): number | undefined {
-	const read = values.filter(Number.isFinite);
+function highest(values: readonly (number | undefined)[]): number | undefined {
+	const read = values.filter(value => value !== undefined);
 	return read.length === 0 ? undefined : Math.max(...read);
 }
 

@@ -150,7 +150,8 @@ function toldBlocks({lesson, wrong}: Taught): Block[] {
 	if (wrong !== undefined) return [text(wrong, 'fail')];
 	if (lesson === undefined) return [text(nothingYet, 'muted')];
 	const {findings, learning} = lesson;
-	const mounted = findings && findings.mounted.verdict !== 'asInstalled' ? [text(mountedWords(findings), 'near', 2)] : [];
+	const mounted =
+		findings && findings.mounted.verdict !== 'asInstalled' ? [text(mountedWords(findings), 'near', 2)] : [];
 	return [...mounted, ...fittedLines(learning).map(words => text(words, 'plain', 2))];
 }
 

@@ -1,19 +1,19 @@
 import {describe, expect, test} from 'vitest';
 import {sampleState} from '../../../source/practice/find/findings.ts';
-import {found, hesperRidge, quillmere, tarrowdale} from '../sample.ts';
+import {found, hesperRidge, quillmere, type Sample, tarrowdale} from '../sample.ts';
 
 const near = (read: number, truth: number) => Math.abs(read / truth - 1) < 0.02;
 
 describe('gears are right in 99.5 % of the steady samples', () => {
 	test.each([
-		['a short track', quillmere, 100],
-		['a short track', quillmere, 10],
-		['an intermediate track', tarrowdale, 50],
-		['an intermediate track', tarrowdale, 1],
-		['a road course', hesperRidge, 100],
-		['a road course', hesperRidge, 20],
-		['a road course', hesperRidge, 1],
-	])('%s %o at %d samples a second', async (_, sample, rateHz) => {
+		['a short track', 100, quillmere],
+		['a short track', 10, quillmere],
+		['an intermediate track', 50, tarrowdale],
+		['an intermediate track', 1, tarrowdale],
+		['a road course', 100, hesperRidge],
+		['a road course', 20, hesperRidge],
+		['a road course', 1, hesperRidge],
+	] as [string, number, Sample][])('%s at %d samples a second', async (_, rateHz, sample) => {
 		const {log, findings} = await found({...sample, sensors: {rateHz}, driving: {laps: 10, missed: 0.02, paceLaps: 1}});
 		let [right, all] = [0, 0];
 		for (const [i, moment] of log.moments.entries()) {
