@@ -51,10 +51,10 @@ export const tooLongLine = (): LogProblem => ({
 	do: exportAgain,
 });
 
-export const tooLarge = (mostBytes: number): LogProblem => ({
+export const tooLarge = (most: string): LogProblem => ({
 	kind: 'tooLarge',
 	where: 'the file',
-	found: `more than ${mostBytes / 1e9} GB`,
+	found: `more than ${most}`,
 	allowed: 'a log of a few hours',
 	do: 'Export a part of the run.',
 });

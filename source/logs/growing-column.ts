@@ -28,6 +28,10 @@ export class GrowingColumn<T extends Numbers> {
 		this.#numbers = larger;
 	}
 
+	get length(): number {
+		return this.#length;
+	}
+
 	get numbers(): T {
 		return this.#numbers.subarray(0, this.#length) as T;
 	}

@@ -21,6 +21,28 @@ export type Head = {
 	readonly encoding: string | undefined;
 };
 
+/** The first bytes of a log, as they come. */
+export class HeadBytes {
+	readonly #bytes = new Uint8Array(headBytes);
+	#length = 0;
+
+	/** Takes what there is room for, and gives the rest. */
+	take(bytes: Uint8Array): Uint8Array {
+		const taken = bytes.subarray(0, headBytes - this.#length);
+		this.#bytes.set(taken, this.#length);
+		this.#length += taken.length;
+		return bytes.subarray(taken.length);
+	}
+
+	get isFull(): boolean {
+		return this.#length === headBytes;
+	}
+
+	get bytes(): Uint8Array {
+		return this.#bytes.subarray(0, this.#length);
+	}
+}
+
 const lineFeed = 10;
 const carriageReturn = 13;
 const byteOrderMark = [0xef, 0xbb, 0xbf];

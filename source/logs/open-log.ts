@@ -92,12 +92,14 @@ function planOf(
 
 /** More than the rows are likely to be: rows of the head may be longer than later ones. */
 const spare = 1.3;
+/** Half a day at a hundred samples a second. Columns of more rows grow as they are read. */
+const mostExpected = 4_000_000;
 
 function expectedRows({lines}: Head, {linesBefore, start}: Table, sizeBytes: number | undefined): number {
 	const rows = lines.length - linesBefore;
 	const bytes = (lines.at(-1)?.end ?? 0) - start;
 	const inAll = sizeBytes === undefined || bytes <= 0 ? rows : (rows * sizeBytes) / bytes;
-	return Math.ceil(spare * inAll);
+	return Math.min(mostExpected, Math.ceil(spare * inAll));
 }
 
 function fileRemarks(head: Head, {linesBefore, units}: Table, {encoding}: Given): RemarkData[] {

@@ -74,6 +74,11 @@ export class RowReader {
 		this.#restLength = 0;
 	}
 
+	/** Rows so far. */
+	get samples(): number {
+		return this.#table.samples;
+	}
+
 	/** What was read. A last line without its end counts as a row if it has all cells. */
 	end(): Rows {
 		const {wrongCells} = this.#table;
@@ -86,7 +91,7 @@ export class RowReader {
 		wrongCells.count = count;
 		const {values, cells, line} = this.#table;
 		return {
-			samples: values[0]?.length ?? 0,
+			samples: this.#table.samples,
 			values,
 			cells,
 			wrongCells,

@@ -190,6 +190,11 @@ export class RowTable {
 		this.#rowsInBlock = 0;
 	}
 
+	/** Rows so far. */
+	get samples(): number {
+		return this.#columns[0]!.length + this.#rowsInBlock;
+	}
+
 	/** In the order of the plan's columns; time and distance with all their digits. */
 	get values(): Numbers[] {
 		this.#flush();
