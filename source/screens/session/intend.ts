@@ -8,7 +8,7 @@ import type {Choice} from './catalog.ts';
 import {current, unsaved} from './documents.ts';
 import type {Effect} from './effect.ts';
 import {fileNameFor, items} from './hand-over.ts';
-import {panesOf, practiceOf, straightNames} from './practice.ts';
+import {panesOf, practiceOf, straightNames} from './practice-of.ts';
 import {marginEntry} from './reduce.ts';
 import {practicePlace} from './reduce-practice.ts';
 import {takeInPlace} from './reduce-take-in.ts';

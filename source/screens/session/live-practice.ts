@@ -2,7 +2,7 @@
 import type {Ranked} from '../../planning/rank-rack.ts';
 import {type Effect, effectOf} from '../../practice/learn/effect.ts';
 import type {Documents} from './documents.ts';
-import {straightNames} from './practice.ts';
+import {straightNames} from './practice-of.ts';
 import {type Clock, Ranker} from './ranker.ts';
 import type {Session} from './session.ts';
 import type {Taught} from './teaching.ts';

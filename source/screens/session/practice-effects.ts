@@ -5,7 +5,7 @@ import {current, titleOf} from './documents.ts';
 import type {ErrandEffect} from './effect.ts';
 import type {Errandful} from './errand-effects.ts';
 import {isObject} from './json.ts';
-import {straightNames} from './practice.ts';
+import {straightNames} from './practice-of.ts';
 import type {Line} from './teaching.ts';
 
 type Teaching = typeof import('./teaching.ts');

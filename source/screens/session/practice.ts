@@ -2,9 +2,6 @@
 import type {LoggedRun} from '../../logs/logged-run.ts';
 import type {Findings} from '../../practice/find/findings.ts';
 import type {Held} from '../../practice/learn/seen.ts';
-import {current} from './documents.ts';
-import {readTrackOf} from './forms.ts';
-import type {Session} from './session.ts';
 
 export type PracticeLog = {
 	/** What messages call the file. */
@@ -28,19 +25,3 @@ export type Practice = {
 /** What is looked at: the numbers with the model beside them, what would change, what the log shows, its two pictures. */
 export const panes = ['numbers', 'changes', 'log', 'gears', 'lap'] as const;
 export type Pane = (typeof panes)[number];
-
-/** Without a log there is nothing of it to look at. */
-export const panesOf = (practice: Practice): readonly Pane[] =>
-	practice.log === undefined ? ['numbers', 'changes'] : panes;
-
-/** Of the track that is looked at; a new one where nothing was seen of it. */
-export function practiceOf({practice, history}: Session): Practice {
-	const {track} = history.present;
-	return practice?.track === track ? practice : {track, seen: [], held: 'circumference', log: undefined};
-}
-
-/** The names of the straights; none of a track that cannot be read. */
-export function straightNames({history}: Session): readonly string[] {
-	const reading = readTrackOf(current(history.present, 'track').json);
-	return reading.ok ? reading.value.straights.map(({name}) => name) : [];
-}

@@ -3,7 +3,7 @@ import {withEdits} from '../../documents/edit-text.ts';
 import type {Action} from './action.ts';
 import {current, type Kind, withJson} from './documents.ts';
 import {recorded} from './history.ts';
-import {practiceOf} from './practice.ts';
+import {practiceOf} from './practice-of.ts';
 import type {Place, Session} from './session.ts';
 
 export const practicePlace: Place = {at: 'practice', pane: 'numbers', cursor: 0, scroll: 0};

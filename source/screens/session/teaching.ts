@@ -15,7 +15,8 @@ import {readSeen, type SeenReading} from '../../practice/learn/seen-text.ts';
 import {current, type Documents, withJson} from './documents.ts';
 import {readCarOf, readTrackOf} from './forms.ts';
 import type {JsonObject} from './json.ts';
-import {type Practice, type PracticeLog, practiceOf} from './practice.ts';
+import type {Practice, PracticeLog} from './practice.ts';
+import {practiceOf} from './practice-of.ts';
 import type {Session} from './session.ts';
 
 export type Taught = {

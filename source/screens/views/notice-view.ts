@@ -4,7 +4,7 @@ import {visible} from '../../documents/visible.ts';
 import {wrap} from '../../text/width.ts';
 import {blank, clipped, line, type Pieces, piece, widthOf} from '../parts/pieces.ts';
 import {current, type Documents, titleOf, unsaved} from '../session/documents.ts';
-import {straightNames} from '../session/practice.ts';
+import {straightNames} from '../session/practice-of.ts';
 import type {Asked, Over, Session} from '../session/session.ts';
 import {caretPieces} from './caret.ts';
 

@@ -10,7 +10,8 @@ import {lapChart, lapLegend, lapTitle, ratioChart, ratioTitle} from '../../text/
 import {absent, type Units, unitsOf} from '../../text/units.ts';
 import {beside, blank, clipped, line, type Pieces, piece, tall} from '../parts/pieces.ts';
 import type {PracticeScene} from '../session/live-practice.ts';
-import {type Pane, type Practice, panesOf, practiceOf, straightNames} from '../session/practice.ts';
+import type {Pane, Practice} from '../session/practice.ts';
+import {panesOf, practiceOf, straightNames} from '../session/practice-of.ts';
 import type {Place, Session} from '../session/session.ts';
 import {type Line, linesOf, type Taught} from '../session/teaching.ts';
 import {scrolled} from './scrolled.ts';
