@@ -3,6 +3,7 @@ import {editLine} from '../../../source/screens/parts/edit-line.ts';
 import {painted} from '../../../source/screens/parts/theme.ts';
 import {withJson} from '../../../source/screens/session/documents.ts';
 import {startHistory} from '../../../source/screens/session/history.ts';
+import type {Practice} from '../../../source/screens/session/practice.ts';
 import {marginEntry} from '../../../source/screens/session/reduce.ts';
 import {takeInPlace} from '../../../source/screens/session/reduce-take-in.ts';
 import type {Place, Session} from '../../../source/screens/session/session.ts';
@@ -25,6 +26,13 @@ const handOver = {
 	date: '2026-05-31T18:05:00Z',
 	day: '2026-05-31',
 } as const;
+const practicePlace = {at: 'practice', pane: 'numbers', cursor: 1, scroll: 0} as const;
+const seenPractice: Practice = {
+	track: oval.id,
+	seen: [{straight: 'Back', text: '8420 gear 4'}],
+	held: 'circumference',
+	log: undefined,
+};
 const places: Record<string, Partial<Session>> = {
 	ranking: {},
 	comparing: {comparison: '36/36 A'},
@@ -62,6 +70,13 @@ const places: Record<string, Partial<Session>> = {
 		history: startHistory(withJson(documents, 'track', {...oval.json, lap: '0.7 mi'})),
 	},
 	forgetting: {place: {at: 'differences', kind: 'car', scroll: 0}, over: {is: 'forgetting'}},
+	practice: {place: practicePlace},
+	'practice, a number': {place: practicePlace, practice: seenPractice},
+	'practice, what would change': {place: {...practicePlace, pane: 'changes'}, practice: seenPractice},
+	'practice, typing': {
+		place: practicePlace,
+		over: {is: 'entry', asks: 'seen', line: editLine('8420 gear 4 118 mph'), wrong: 'x'.repeat(90)},
+	},
 	'no row left': {filter: {hideFailing: true, gearbox: 'C', leastMarginRpm: 5000}},
 };
 
