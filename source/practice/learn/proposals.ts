@@ -1,5 +1,6 @@
 /** What practice would change in the documents, field by field. Nothing of it is done before somebody accepts it. */
 import {type Json, type JsonObject, type Path, valueAt} from '../../documents/json.ts';
+import {quantityOf} from '../../documents/quantity.ts';
 import type {Dimension} from '../../documents/units.ts';
 import {harmonicRolloutM} from '../../drivetrain/tire.ts';
 import {carAt} from '../../planning/situations.ts';
@@ -78,8 +79,17 @@ class Maker {
 	): ProposalRow {
 		const before = this.#at(document, path);
 		const now = before ?? (elsewhere && (this.#at(elsewhere.document, elsewhere.path) ?? elsewhere.unlessGiven));
-		const written = writtenQuantity(value, dimension, now, this.#readers);
+		const written =
+			this.#saysTheSame(before, value, dimension) ?? writtenQuantity(value, dimension, now, this.#readers);
 		return {label, document, path, before, now: now === undefined ? '' : String(now), value: written};
+	}
+
+	/** What stands there, where it was learned before and the new number is within half its uncertainty: no news. */
+	#saysTheSame(before: Written | undefined, {value, se}: Known, dimension: Dimension): Written | undefined {
+		const reading = typeof before === 'string' ? quantityOf(before, dimension) : undefined;
+		if (!reading?.ok || reading.uncertainty === undefined) return undefined;
+		const isAsSure = reading.uncertainty > 0 && Math.abs(Math.log(se / reading.uncertainty)) <= Math.log(2);
+		return isAsSure && Math.abs(value - reading.value) <= se / 2 ? before : undefined;
 	}
 
 	plain(label: string, path: Path, value: Written): ProposalRow {

@@ -96,7 +96,7 @@ export function practiceEffects(
 				const {run, remarks} = answer.reading;
 				const shown = teaching()!.logShown(
 					session,
-					answer.label,
+					fileName(answer.label),
 					run,
 					remarks.map(({text}) => text),
 				);
@@ -121,6 +121,8 @@ export function practiceEffects(
 			),
 	};
 }
+
+const fileName = (label: string): string => label.slice(Math.max(label.lastIndexOf('/'), label.lastIndexOf('\\')) + 1);
 
 /** "run.csv; speed=GPS Speed; rpm=Engine": the file, then columns where it does not say which they are. */
 function askedIn(text: string): {file: string; columns: AskedColumns} | string {

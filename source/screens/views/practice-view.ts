@@ -106,10 +106,10 @@ function numberLines(
 	const blocks: Block[] = [
 		tableOf(numberColumns(units, practice, rows), rows),
 		...(lesson === undefined ? [] : [text(comparedLegend, 'muted')]),
-		gap,
-		...toldBlocks(taught),
 	];
-	return [...layOut(blocks, width), ...effectLines(scene, width)];
+	const told = layOut([gap, ...toldBlocks(taught)], width);
+	// What comes of it stands first: on a small screen the rest is scrolled to.
+	return [...layOut(blocks, width), ...effectLines(scene, width), ...told];
 }
 
 function numberColumns(units: Units, practice: Practice, rows: readonly NumberRow[]): Making<NumberRow>[] {
@@ -210,8 +210,8 @@ function changeRows(one: Line, isHere: boolean): ChangeRow[] {
 		}));
 	return one.taken.map(({entry, untouched}, i) => ({
 		isHere: isHere && i === 0,
-		name: i === 0 ? one.name : '',
-		what: `${entry.field}, from ${entry.from}`,
+		name: i === 0 ? `back: ${one.name}` : '',
+		what: entry.field.replace(/^(car|straights\[\d+\])\./, ''),
 		now: String(entry.value),
 		becomes: untouched ? `back to ${entry.before ?? 'not given'}` : 'changed since: stays',
 		isLearned: true,

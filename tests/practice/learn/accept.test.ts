@@ -109,12 +109,8 @@ describe('accepting', () => {
 
 	test('what practice then says again is no change', () => {
 		const after = accept(proposed([known], 'speed'), documents);
-		// The written numbers are rounded, so the last digit of the drag may move; the rest stands.
-		expect(
-			proposed([known], 'speed', after)
-				.map(({name}) => name)
-				.filter(name => name !== 'drag'),
-		).toEqual([]);
+		expect(proposed([known], 'speed', after)).toEqual([]);
+		expect(proposed([{...known, rpm: 8500}], 'speed', after).map(({name}) => name)).toContain('rollout');
 	});
 });
 
