@@ -30,6 +30,14 @@ const ranking = async (): Promise<string> => {
 	return ['```', `$ droprack ${words.join(' ')}`, `${out}\`\`\``].join('\n');
 };
 
+/** The example log, without the pictures. */
+const learning = async (): Promise<string> => {
+	const words = ['learn', 'tracks/logs/quillmere.csv', 'quillmere'];
+	const {out} = await answer(words, around);
+	const told = out.slice(0, out.indexOf('Engine speed over road speed')).trimEnd();
+	return ['```', `$ droprack ${words.join(' ')}`, told, '```'].join('\n');
+};
+
 const cell = (text: string): string => text.replaceAll('|', '\\|');
 
 const tableOf = (heads: readonly string[], rows: readonly (readonly string[])[]): string => {
@@ -100,6 +108,7 @@ const screen = (): string => {
 
 const sections: Record<string, () => string | Promise<string>> = {
 	ranking,
+	learning,
 	commands: () => `${commandTable()}\n\n${optionTable()}`,
 	'outside checks': checkTable,
 	screen,
