@@ -1,5 +1,6 @@
 /** What was learned written where the documents came from: into the file, or into the saved copy of a track or a car. */
-import {type Edit, editText, withEdits} from '../documents/edit-text.ts';
+import {editText} from '../documents/edit-text.ts';
+import {type Edit, withEdits} from '../documents/edits.ts';
 import type {JsonObject} from '../documents/json.ts';
 import {visible} from '../documents/visible.ts';
 import type {DocumentName} from '../practice/learn/proposals.ts';

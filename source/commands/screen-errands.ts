@@ -16,7 +16,6 @@ import {forgetKept} from '../store/save-kept.ts';
 import {localDay} from '../text/heading-view.ts';
 import {copyText} from './copy.ts';
 import {readFileText} from './read-input.ts';
-import {readLogFile} from './read-log-file.ts';
 import type {Surroundings} from './surroundings.ts';
 
 /** `write` gets bytes for the terminal that draw nothing and move no cursor. */
@@ -35,6 +34,8 @@ export function screenErrands(
 			return input.ok ? {ok: true, ...input.value} : {ok: false, words: input.message};
 		},
 		readLog: async (file, columns, car, onProgress) => {
+			// The reader of logs is not needed before there is one.
+			const {readLogFile} = await import('./read-log-file.ts');
 			const preferences = readPreferences(home);
 			const remembered = preferences.ok
 				? (preferences.value.logColumns?.[car] as RememberedColumns | undefined)

@@ -1,17 +1,7 @@
 /** Edits of a document's text that leave all the rest as it was written: order, indents, line breaks. */
 import {applyEdits, type FormattingOptions, findNodeAtLocation, modify, parseTree} from 'jsonc-parser';
-import {type Json, type JsonObject, type Path, valueAt, without, withValue} from './json.ts';
-
-/** One change of a document; an undefined value takes the field out, and a group that is empty then as well. */
-export type Edit = {readonly path: Path; readonly value: Json | undefined};
-
-/** The JSON with the edits made. */
-export function withEdits(document: JsonObject, edits: readonly Edit[]): JsonObject {
-	return edits.reduce(
-		(json, {path, value}) => (value === undefined ? without(json, path) : withValue(json, path, value)),
-		document,
-	);
-}
+import {type Edit, withEdits} from './edits.ts';
+import {type Json, type JsonObject, type Path, valueAt} from './json.ts';
 
 /** The text of a document, which must be JSON, with the same edits made. */
 export function editText(text: string, edits: readonly Edit[]): string {

@@ -1,5 +1,6 @@
 import {expect, test} from 'vitest';
-import {editText, withEdits} from '../../source/documents/edit-text.ts';
+import {editText} from '../../source/documents/edit-text.ts';
+import {withEdits} from '../../source/documents/edits.ts';
 
 const text = `{
   "kind": "track",   "version": 1,

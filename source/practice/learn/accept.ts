@@ -1,5 +1,5 @@
 /** Accepting and taking back: edits of the documents, each with the record of where its value came from. */
-import type {Edit} from '../../documents/edit-text.ts';
+import type {Edit} from '../../documents/edits.ts';
 import {type Json, type JsonObject, type Path, valueAt} from '../../documents/json.ts';
 import {type Learned, learnedIn} from '../../documents/learned.ts';
 import {pathText} from '../../documents/problem.ts';

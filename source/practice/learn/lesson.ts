@@ -1,6 +1,6 @@
 /** A learning with what would come of it: the fields that would change, and the ranking before and after. */
 
-import {withEdits} from '../../documents/edit-text.ts';
+import {withEdits} from '../../documents/edits.ts';
 import type {JsonObject} from '../../documents/json.ts';
 import {checkCar, checkTrack} from '../../documents/read.ts';
 import type {Car, Pair} from '../../drivetrain/car.ts';

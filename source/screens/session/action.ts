@@ -1,6 +1,6 @@
 /** What may happen to a session, named by intention. */
 
-import type {Edit} from '../../documents/edit-text.ts';
+import type {Edit} from '../../documents/edits.ts';
 import type {Held} from '../../practice/learn/seen.ts';
 import type {HistoryEntry} from '../../store/kept-documents.ts';
 import type {UnitSystem} from '../../text/units.ts';

@@ -5,7 +5,7 @@ import type {Documents} from './documents.ts';
 import {straightNames} from './practice-of.ts';
 import {type Clock, Ranker} from './ranker.ts';
 import type {Session} from './session.ts';
-import type {Taught} from './teaching.ts';
+import {linesOf, type Taught} from './taught.ts';
 
 type Teaching = typeof import('./teaching.ts');
 
@@ -46,7 +46,7 @@ export class LivePractice {
 		});
 		const taught = this.#loaded?.taughtIn(session);
 		const straights = straightNames(session).length;
-		const lines = place.pane === 'changes' && taught ? this.#loaded!.linesOf(taught).length : straights;
+		const lines = place.pane === 'changes' && taught ? linesOf(taught).length : straights;
 		if (taught?.after === undefined) return {taught, effect: undefined, lines};
 		this.#rank(taught.after, session.situation);
 		const answer = this.#ranker!.answer;

@@ -1,12 +1,12 @@
 /** What the practice has done for it outside: a log read, the history written. */
-import {type AskedColumns, channelNames} from '../../logs/read-log.ts';
+import {type AskedColumns, channelNames} from '../../logs/channels.ts';
 import {learnedEntry, takenBackEntry} from '../../text/learned-entry.ts';
 import {current, titleOf} from './documents.ts';
 import type {ErrandEffect} from './effect.ts';
 import type {Errandful} from './errand-effects.ts';
 import {isObject} from './json.ts';
 import {straightNames} from './practice-of.ts';
-import type {Line} from './teaching.ts';
+import {type Line, linesOf} from './taught.ts';
 
 type Teaching = typeof import('./teaching.ts');
 type PracticeEffect = Extract<ErrandEffect, 'see it' | 'read log' | 'accept this' | 'accept all' | 'take all back'>;
@@ -28,7 +28,7 @@ export function practiceEffects(
 		errands.addToHistory(titleOf(current(state().session.history.present, 'track')), entry);
 	const lines = (): readonly Line[] => {
 		const taught = state().scene.practice?.taught;
-		return taught === undefined ? [] : (teaching()?.linesOf(taught) ?? []);
+		return taught === undefined ? [] : linesOf(taught);
 	};
 
 	const change = (chosen: readonly Line[], isAll: boolean) => {

@@ -1,5 +1,5 @@
 /** What may happen at the practice of a track. */
-import {withEdits} from '../../documents/edit-text.ts';
+import {withEdits} from '../../documents/edits.ts';
 import type {Action} from './action.ts';
 import {current, type Kind, withJson} from './documents.ts';
 import {recorded} from './history.ts';

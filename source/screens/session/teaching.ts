@@ -1,15 +1,14 @@
 /** What practice teaches about what is looked at. Loaded when the place is first looked at: a start does not need it. */
 
-import {withEdits} from '../../documents/edit-text.ts';
+import {withEdits} from '../../documents/edits.ts';
 import type {Car} from '../../drivetrain/car.ts';
 import type {Track} from '../../drivetrain/track.ts';
 import type {LoggedRun} from '../../logs/logged-run.ts';
 import type {Findings} from '../../practice/find/findings.ts';
-import {acceptEdits, type Takeable, takeablesIn, takeBackEdits} from '../../practice/learn/accept.ts';
+import {acceptEdits, takeablesIn, takeBackEdits} from '../../practice/learn/accept.ts';
 import {learnFromFindings, learnFromSeen, type Subject} from '../../practice/learn/learn.ts';
-import {findingsFor, type Lesson, lessonFrom} from '../../practice/learn/lesson.ts';
-import {type LapPicture, lapPicture, type RatioPicture, ratioPicture} from '../../practice/learn/pictures.ts';
-import type {Proposal} from '../../practice/learn/proposals.ts';
+import {findingsFor, lessonFrom} from '../../practice/learn/lesson.ts';
+import {lapPicture, ratioPicture} from '../../practice/learn/pictures.ts';
 import type {Seen} from '../../practice/learn/seen.ts';
 import {readSeen, type SeenReading} from '../../practice/learn/seen-text.ts';
 import {current, type Documents, withJson} from './documents.ts';
@@ -18,18 +17,7 @@ import type {JsonObject} from './json.ts';
 import type {Practice, PracticeLog} from './practice.ts';
 import {practiceOf} from './practice-of.ts';
 import type {Session} from './session.ts';
-
-export type Taught = {
-	/** Undefined where nothing was seen yet. */
-	readonly lesson: Lesson | undefined;
-	readonly takeables: readonly Takeable[];
-	/** The documents with all that is proposed in them; undefined where nothing is. */
-	readonly after: Documents | undefined;
-	readonly pictures: {readonly ratio: RatioPicture; readonly lap: LapPicture | undefined} | undefined;
-	/** "33/38 A": what is in the car, where that is known. */
-	readonly inCar: string | undefined;
-	readonly wrong: string | undefined;
-};
+import type {Taught} from './taught.ts';
 
 type Made = {
 	readonly track: JsonObject;
@@ -142,19 +130,6 @@ export function logShown(
 	const findings = findingsFor(subject.car, subject.track, run, undefined);
 	if (!findings.ok) return findings.faults.map(({path, found}) => `${path}: found ${found}`).join('. ');
 	return {label, run, findings: findings.value, remarks};
-}
-
-/** One of the lines of what would change: a proposal, or what can be taken back. */
-export type Line =
-	| {readonly is: 'proposal'; readonly proposal: Proposal}
-	| {readonly is: 'learned'; readonly name: string; readonly taken: readonly Takeable[]};
-
-export function linesOf({lesson, takeables}: Taught): Line[] {
-	const names = [...new Set(takeables.map(({name}) => name))];
-	return [
-		...(lesson?.proposals ?? []).map((proposal): Line => ({is: 'proposal', proposal})),
-		...names.map((name): Line => ({is: 'learned', name, taken: takeables.filter(one => one.name === name)})),
-	];
 }
 
 export const isUnclear = (findings: Findings | undefined): boolean =>

@@ -13,7 +13,7 @@ import type {PracticeScene} from '../session/live-practice.ts';
 import type {Pane, Practice} from '../session/practice.ts';
 import {panesOf, practiceOf, straightNames} from '../session/practice-of.ts';
 import type {Place, Session} from '../session/session.ts';
-import {type Line, linesOf, type Taught} from '../session/teaching.ts';
+import {type Line, linesOf, type Taught} from '../session/taught.ts';
 import {scrolled} from './scrolled.ts';
 
 type Given = {

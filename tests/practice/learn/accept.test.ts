@@ -1,5 +1,5 @@
 import {describe, expect, test} from 'vitest';
-import {withEdits} from '../../../source/documents/edit-text.ts';
+import {withEdits} from '../../../source/documents/edits.ts';
 import {type JsonObject, valueAt, withValue} from '../../../source/documents/json.ts';
 import {learnedIn} from '../../../source/documents/learned.ts';
 import {mphMps} from '../../../source/drivetrain/constants.ts';

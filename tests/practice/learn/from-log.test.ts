@@ -1,5 +1,5 @@
 import {describe, expect, test} from 'vitest';
-import {withEdits} from '../../../source/documents/edit-text.ts';
+import {withEdits} from '../../../source/documents/edits.ts';
 import {harmonicRolloutM} from '../../../source/drivetrain/tire.ts';
 import {planFor} from '../../../source/planning/plan.ts';
 import {carAt} from '../../../source/planning/situations.ts';
