@@ -1,5 +1,6 @@
 /** Units of the channels of a log: those of the documents, and what only loggers write. */
 import {type Dimension, findUnit, unitName, unitNames} from '../documents/units.ts';
+import {footM} from '../drivetrain/constants.ts';
 import type {ChannelName} from './channels.ts';
 
 export type LogUnit = {
@@ -16,12 +17,13 @@ type Rule = {
 	readonly needed?: boolean;
 };
 
+const [minuteS, hourS] = [60, 3600];
 const microsecond = {name: 'µs', factor: 1e-6};
 const millisecond = {name: 'ms', factor: 1e-3};
 const second = {name: 's', factor: 1};
 const perMinute = {name: 'rpm', factor: 1};
 const thousandPerMinute = {name: '1000 rpm', factor: 1000};
-const kilometerPerHour = {name: 'km/h', factor: 1000 / 3600};
+const kilometerPerHour = {name: 'km/h', factor: 1000 / hourS};
 
 const rules: Record<ChannelName, Rule> = {
 	time: {
@@ -50,7 +52,7 @@ const rules: Record<ChannelName, Rule> = {
 			kmhr: kilometerPerHour,
 			'm/sec': {name: 'm/s', factor: 1},
 			mps: {name: 'm/s', factor: 1},
-			'ft/sec': {name: 'ft/s', factor: 0.3048},
+			'ft/sec': {name: 'ft/s', factor: footM},
 		},
 	},
 	rpm: {
@@ -70,9 +72,9 @@ const rules: Record<ChannelName, Rule> = {
 			'rpm x 1000': thousandPerMinute,
 			'rpm x1000': thousandPerMinute,
 			'x1000 rpm': thousandPerMinute,
-			'rev/s': {name: 'rev/s', factor: 60},
-			hz: {name: 'Hz', factor: 60},
-			'rad/s': {name: 'rad/s', factor: 30 / Math.PI},
+			'rev/s': {name: 'rev/s', factor: minuteS},
+			hz: {name: 'Hz', factor: minuteS},
+			'rad/s': {name: 'rad/s', factor: minuteS / (2 * Math.PI)},
 		},
 	},
 	throttle: {dimensions: ['share'], more: {pct: {name: '%', factor: 0.01}}},

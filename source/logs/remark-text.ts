@@ -1,13 +1,20 @@
 /** The sentence of each remark. */
 import {shortened} from '../documents/problem.ts';
+import {footM, mphMps} from '../drivetrain/constants.ts';
 import {columnOption} from './column-option.ts';
 import type {RemarkData} from './reading.ts';
+
+const kmhPerMps = 3.6;
 
 type Data<Kind extends RemarkData['kind']> = Extract<RemarkData, {kind: Kind}>;
 
 const count = (number: number, one: string, several = `${one}s`): string =>
 	`${number.toLocaleString('en-US')} ${number === 1 ? one : several}`;
 const seconds = (value: number): string => `${value.toFixed(value < 100 ? 2 : 0)} s`;
+const whole = (value: number): string => Math.round(value).toLocaleString('en-US');
+/** In both kinds of units, since a sentence does not know which its reader takes. */
+const speed = (mps: number): string => `${whole(mps / mphMps)} mph, ${whole(mps * kmhPerMps)} km/h`;
+const length = (m: number): string => `${whole(m / footM)} ft, ${whole(m)} m`;
 const quoted = (texts: readonly string[]): string => texts.map(text => `"${shortened(text)}"`).join(', ');
 /** As many moments as a sentence lists. */
 const mostListed = 5;
@@ -50,10 +57,10 @@ const sentences: {[Kind in RemarkData['kind']]: (data: Data<Kind>) => string} = 
 		`${Math.round(100 * share)} % of the samples have the same time as the one before: the clock is too coarse for exits and shifts.`,
 	implausible: ({channel, highest}) =>
 		channel === 'speed'
-			? `The highest speed would be ${Math.round(highest)} m/s: its unit may be wrong. If so: ${columnOption(channel, 'HEADER [unit]')}.`
-			: `The highest rpm would be ${Math.round(highest).toLocaleString('en-US')}: the column or its unit may be wrong.`,
+			? `The highest speed would be ${speed(highest)}: its unit may be wrong. If so: ${columnOption(channel, 'HEADER [unit]')}.`
+			: `The highest rpm would be ${whole(highest)}: the column or its unit may be wrong.`,
 	disagree: ({loggedM, bySpeedM}) =>
-		`The distance of the log (${Math.round(loggedM)} m) is ${(loggedM / bySpeedM).toFixed(2)} × what its speed and time make: the unit of one of them may be wrong.`,
+		`The distance of the log (${length(loggedM)}) is ${(loggedM / bySpeedM).toFixed(2)} × what its speed and time make: the unit of one of them may be wrong.`,
 };
 
 function leftOut(channel: string, headers: readonly string[], why: Data<'leftOut'>['why']): string {

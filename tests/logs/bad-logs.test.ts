@@ -265,7 +265,7 @@ describe('what is sound of a damaged log is used, and the rest is said', () => {
 	test('numbers that no car has', async () => {
 		const log = await read(table(headers, 40, i => `${i / 10},${300 + i},${90 + i}`));
 		expect(texts(log)).toContain(
-			'The highest speed would be 339 m/s: its unit may be wrong. If so: --column speed="HEADER [unit]".',
+			'The highest speed would be 758 mph, 1,220 km/h: its unit may be wrong. If so: --column speed="HEADER [unit]".',
 		);
 		expect(texts(log)).toContain('The highest rpm would be 129: the column or its unit may be wrong.');
 	});
@@ -274,7 +274,7 @@ describe('what is sound of a damaged log is used, and the rest is said', () => {
 		const log = await read(table('Time [s],Distance [m],Speed [mph],RPM', 40, i => `${i / 10},${5 * i},50,5000`));
 		// 39 × 5 m against 3.9 s at 50 mph, which is 22.352 m/s.
 		expect(texts(log)).toContain(
-			'The distance of the log (195 m) is 2.24 × what its speed and time make: the unit of one of them may be wrong.',
+			'The distance of the log (640 ft, 195 m) is 2.24 × what its speed and time make: the unit of one of them may be wrong.',
 		);
 	});
 });

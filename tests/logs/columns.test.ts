@@ -222,3 +222,15 @@ describe('units that the log does not state', () => {
 		});
 	});
 });
+
+test.each([
+	['rpm', 6000],
+	['1/min', 6000],
+	['rev/min', 6000],
+	['krpm', 6],
+	['Hz', 100],
+	['rad/s', 628.3185307179587],
+])('an engine speed in %s', async (unit, value) => {
+	const {run} = await read(table(`Time [s],Speed [m/s],Engine Speed [${unit}]`, 3, i => `${i / 10},50,${value}`));
+	expect(run.rpm[0]).toBeCloseTo(6000, 2);
+});

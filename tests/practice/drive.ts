@@ -25,6 +25,8 @@ export type Driving = {
 	/** Where the driver means to shift, and how well he hits it. */
 	readonly shiftRpm: number;
 	readonly shiftSpreadRpm: number;
+	/** Throttle in a shift: 1 where the driver keeps it down. */
+	readonly shiftThrottle: number;
 	/** Lap to lap. */
 	readonly exitSpreadMps: number;
 	readonly liftSpreadM: number;
@@ -145,7 +147,8 @@ export class Drive {
 			if (outS > 0) {
 				const goneShare = 1 - outS / driving.vehicle.shiftTimeS;
 				const [left, entered] = [this.#rpm(this.#gear - 1, slip), this.#rpm(this.#gear, slip)];
-				this.#note(missing ? left + flareRpm : left + goneShare * (entered - left), 1, 0);
+				const rpmOut = missing ? left + flareRpm : left + goneShare * (entered - left);
+				this.#note(rpmOut, driving.shiftThrottle, 0);
 				this.#step(v => accelerationOut(driving.vehicle, course, v));
 				outS -= stepS;
 			} else {

@@ -99,6 +99,7 @@ function usualDriving(plan: Plan, vehicle: Vehicle, train: GearTrain): Driving {
 		highestGear: Math.min(gears.highest, train.overall.length),
 		shiftRpm: plan.limit.rpm - 250,
 		shiftSpreadRpm: 60,
+		shiftThrottle: 1,
 		exitSpreadMps: 0.45,
 		liftSpreadM: 4,
 		slipSpread: 0.0005,

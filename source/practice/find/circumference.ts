@@ -30,6 +30,9 @@ const leastSureGrowth = 0.002;
  * Huber's fit of C = β0 + β1·(V/V_ref)² to blocks of steady full-throttle samples, C = 60·V·(1 + κ)·R/n: C0 = β0, γ = β1/β0.
  * Standard errors over passes of straights, since the samples of one pass err together, with Student's factor where passes
  * are few. `overall`: the ratios of the gears, gear 1 first. Undefined with too few readings.
+ *
+ * Both speeds are taken to be of the same moment: a road speed that is logged τ seconds late makes C too small by τ·a/V, with a
+ * the acceleration, most where the car is slow and pulls hard.
  */
 export function fitCircumference(
 	channels: Channels,

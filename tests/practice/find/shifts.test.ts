@@ -35,6 +35,17 @@ describe('shifts', () => {
 		}
 	});
 
+	test('with a lift of the throttle do not end the straight', async () => {
+		const flat = await found({...hesperRidge, driving: {laps: 4}});
+		const lifting = await found({...hesperRidge, driving: {laps: 4, shiftThrottle: 0.1}});
+		const counts = ({findings}: typeof flat) =>
+			findings.straights.map(({passes, exitGear, endGear}) => [passes, exitGear, endGear]);
+		expect(counts(lifting)).toEqual(counts(flat));
+		expect(lifting.findings.shifts.map(({from, rpm}) => [from, rpm])).toEqual(
+			flat.findings.shifts.map(({from, rpm}) => [from, rpm]),
+		);
+	});
+
 	test('that went well give no events', async () => {
 		const {findings} = await found({...hesperRidge, driving: {laps: 6}});
 		expect(findings.events).toEqual([]);
