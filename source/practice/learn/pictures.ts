@@ -67,8 +67,15 @@ export function lapPicture(
 	const logged: [number, number][] = [];
 	const step = Math.max(1, Math.floor((to - from) / pointsOfLap));
 	for (let i = from; i < to; i += step) logged.push([run.distanceM[i]! - startM, middleOf(run.speedMps, i)]);
-	const passes = findings.passes.filter(pass => pass.lap === middle.index && pass.good);
-	const trace = (learned: boolean) => passes.flatMap(pass => modelAlong(subject, learning, pass, startM, learned));
+	const endM = run.distanceM[to - 1]!;
+	// A straight that the start of the lap lies on belongs to two laps.
+	const passes = findings.passes.filter(
+		({good, startM: from, lengthM}) => good && from < endM && from + lengthM > startM,
+	);
+	const trace = (learned: boolean) =>
+		passes
+			.flatMap(pass => modelAlong(subject, learning, pass, startM, learned))
+			.map(piece => piece.filter(([distanceM]) => distanceM >= 0 && distanceM <= endM - startM));
 	return {lap: number, logged, before: trace(false), after: trace(true)};
 }
 const pointsOfLap = 600;
