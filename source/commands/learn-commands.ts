@@ -6,7 +6,7 @@ const everywhere = ['json', 'units', 'strict', 'ascii', 'help', 'version'] as co
 export const learnCommands: readonly Command[] = [
 	{
 		name: 'learn',
-		summary: 'true circumference, growth and drag from a logged run, or from RPM that was seen',
+		summary: 'circumference, growth and drag from a logged run, or from RPM that was seen',
 		argument: {
 			name: '[LOG]',
 			summary: 'a logged run: comma, semicolon or tab between columns, or - for standard input; left out, by hand',
