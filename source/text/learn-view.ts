@@ -86,11 +86,12 @@ function anchorWords(anchor: Anchor | undefined, limited: readonly string[]): st
 			? []
 			: [`${name} ${signed(100 * (what.value - 1), 1)} %, known to ${percent(what.se, 1)}; ${held}.`];
 	const lost = anchor.straights
-		.filter(({alone}) => alone === undefined)
+		.filter(({alone, tells}) => alone === undefined && tells !== undefined)
 		.map(
 			({reading, tells, beforeMps}) =>
 				`${reading.name} is ${speedText(Math.abs(beforeMps))} ${beforeMps > 0 ? 'faster' : 'slower'} than the model: no ${tells} within reason explains that. Check gear, pair, length and exit speed.`,
 		);
+	const silent = anchor.straights.filter(({tells}) => tells === undefined).map(({reading}) => reading.name);
 	const scattered =
 		anchor.misfit !== undefined && anchor.misfit > scattersFrom
 			? [
@@ -101,6 +102,9 @@ function anchorWords(anchor: Anchor | undefined, limited: readonly string[]): st
 		...factor('Drag area', anchor.drag, anchor.power ? 'the long straights tell it' : powerHeld),
 		...factor('Power', anchor.power, anchor.drag ? 'the short straights tell it' : dragHeld),
 		...aloneWords(anchor.straights),
+		...(silent.length > 0
+			? [`Nothing of drag and power is told by ${listed(silent)}: grip or the shifts decide the speed at the end.`]
+			: []),
 		...scattered,
 		...lost,
 		...onLimiter,

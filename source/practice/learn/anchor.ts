@@ -4,7 +4,9 @@
  */
 import {brentRoot} from '../../drivetrain/brent.ts';
 import {mphMps} from '../../drivetrain/constants.ts';
+import {huberWeight} from '../fit/huber.ts';
 import {leastSquares} from '../fit/least-squares.ts';
+import {robustSd} from '../fit/robust.ts';
 import type {AskModel} from './model.ts';
 import {type Known, type Reading, together} from './reading.ts';
 import type {Trim} from './trim.ts';
@@ -14,13 +16,13 @@ export type Factor = 'drag' | 'power';
 /** What one straight says by itself. */
 export type StraightAnchor = {
 	readonly reading: Reading;
-	/** Drag where 1 % of it moves the end speed by 0.2 mph or more, else power. */
-	readonly tells: Factor;
+	/** Drag where 1 % of it moves the end speed by 0.2 mph or more, else power; undefined where neither does much. */
+	readonly tells: Factor | undefined;
 	/** m/s that 1 % more drag takes away, and that 1 % more power gives, at the end of the straight. */
 	readonly perPercent: {readonly drag: number; readonly power: number};
 	/** Standard deviation of the end speed with all that goes into it, m/s. */
 	readonly seMps: number;
-	/** The factor that this straight alone asks for; undefined where none within the bounds gives its speed. */
+	/** The factor that this straight alone asks for; undefined where it tells none, or none within the bounds gives its speed. */
 	readonly alone: Known | undefined;
 	/** Speed seen less the model's, m/s: before, and after the fit of all. */
 	readonly beforeMps: number;
@@ -38,6 +40,8 @@ export type Anchor = {
 
 /** Least effect of 1 % of drag on the end speed for a straight to tell drag. */
 export const tellingMps = 0.2 * mphMps;
+/** Where 1 % of power moves the end by less, grip or the length decides, and the end says nothing about the engine. */
+export const silentMps = 0.06 * mphMps;
 /** A factor outside is no correction: something else is wrong. */
 export const factorBounds: Record<Factor, readonly [number, number]> = {drag: [0.5, 2], power: [0.7, 1.4]};
 const onePercent = 0.01;
@@ -76,11 +80,13 @@ function straightAnchor(ask: AskModel, reading: Reading, trim: Trim): StraightAn
 	if (run === undefined) return undefined;
 	const slopes = {drag: slopeOf(ask, reading, trim, 'drag'), power: slopeOf(ask, reading, trim, 'power')};
 	const perPercent = {drag: slopes.drag * onePercent, power: slopes.power * onePercent};
-	const tells = Math.abs(perPercent.drag) >= tellingMps ? 'drag' : 'power';
+	const tells = tellsOf(perPercent);
 	const seMps = together(reading.endMps!.se, exitEffect(ask, reading, trim));
+	const beforeMps = reading.endMps!.value - run.endMps;
+	const silent = {reading, tells, perPercent, seMps, alone: undefined, beforeMps, afterMps: beforeMps};
+	if (tells === undefined) return silent;
 	const [low, high] = factorBounds[tells];
 	const factor = brentRoot(value => missBy(ask, reading, {...trim, [tells]: value}), low, high, rootTolerance);
-	const beforeMps = reading.endMps!.value - run.endMps;
 	return {
 		reading,
 		tells,
@@ -91,6 +97,11 @@ function straightAnchor(ask: AskModel, reading: Reading, trim: Trim): StraightAn
 		afterMps: beforeMps,
 	};
 }
+function tellsOf({drag, power}: StraightAnchor['perPercent']): Factor | undefined {
+	if (Math.abs(drag) >= tellingMps) return 'drag';
+	return Math.abs(power) >= silentMps ? 'power' : undefined;
+}
+
 /** Far below what any speed is known to. */
 const rootTolerance = 1e-7;
 
@@ -115,16 +126,19 @@ const mostRounds = 20;
 const settled = 1e-9;
 
 /**
- * Weighted Gauss-Newton on all readings. Standard errors by the given deviations of the readings, widened where the readings
- * scatter more than these say (R. T. Birge, Phys. Rev. 40, 1932).
+ * Weighted Gauss-Newton on all readings, of four or more with Huber's weights: one straight that is not as the track has it must
+ * not carry the others away. Standard errors by the given deviations of the readings, widened where the readings scatter more
+ * than these say (R. T. Birge, Phys. Rev. 40, 1932).
  */
 function fitAll(ask: AskModel, told: readonly StraightAnchor[], start: Trim, factors: readonly Factor[]): Fit {
-	const weights = Float64Array.from(told, ({seMps}) => 1 / Math.max(seMps, leastSeMps) ** 2);
+	const given = told.map(({seMps}) => Math.max(seMps, leastSeMps));
+	let weights: Float64Array = Float64Array.from(given, se => 1 / se ** 2);
 	let trim = start;
 	let inverse: Float64Array | undefined;
 	for (let round = 0; round < mostRounds; round++) {
 		const misses = Float64Array.from(told, ({reading}) => missBy(ask, reading, trim));
 		const columns = factors.map(factor => Float64Array.from(told, ({reading}) => slopeOf(ask, reading, trim, factor)));
+		if (told.length >= fewestForRobust) weights = robustWeights(misses, given);
 		const step = leastSquares(columns, misses, weights);
 		// Readings that cannot tell the two apart: the one that more of them tell.
 		if (step === undefined) return factors.length > 1 ? fitAll(ask, told, start, [commonest(told)]) : noFit;
@@ -152,6 +166,15 @@ function fitAll(ask: AskModel, told: readonly StraightAnchor[], start: Trim, fac
 const noFit: Fit = {factors: {}, misfit: undefined};
 /** A speed that is said to be exact is taken to be known to this, so that it does not outweigh all others without end. */
 const leastSeMps = 0.01 * mphMps;
+
+const fewestForRobust = 4;
+
+/** Each deviation squared, and Huber's weight by how many times the usual miss in such deviations the miss is. */
+function robustWeights(misses: Float64Array, deviations: readonly number[]): Float64Array {
+	const standard = misses.map((miss, i) => miss / deviations[i]!);
+	const scale = Math.max(1, robustSd(standard, 0));
+	return standard.map((miss, i) => huberWeight(miss / scale) / deviations[i]! ** 2);
+}
 
 function commonest(told: readonly StraightAnchor[]): Factor {
 	const drag = told.filter(({tells}) => tells === 'drag').length;

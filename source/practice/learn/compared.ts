@@ -14,7 +14,14 @@ export type Compared = {
 export function comparedRuns(ask: AskModel, readings: readonly Reading[], trim: Trim): Compared[] {
 	return readings.map(reading => ({
 		reading,
-		before: ask({...reading, exitMps: undefined}, untrimmed),
-		after: ask(reading, trim),
+		before: inItsGear(reading, ask({...reading, exitMps: undefined}, untrimmed)),
+		after: inItsGear(reading, ask(reading, trim)),
 	}));
+}
+
+/** The RPM that the model's speed is in the gear that practice ended in: a late shift is no difference of the car. */
+function inItsGear({gear, candidate}: Reading, run: ModelRun | undefined): ModelRun | undefined {
+	if (run === undefined || gear === undefined || gear === run.endGear) return run;
+	const {overall} = candidate.train;
+	return {...run, endGear: gear, endRpm: (run.endRpm * overall[gear - 1]!) / overall[run.endGear - 1]!};
 }

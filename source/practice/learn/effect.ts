@@ -24,8 +24,9 @@ export function effectOf(before: Ranking, after: Ranking): Effect {
 function changedWords(was: Row, is: Row, after: Ranking): string {
 	const oldNow = after.rows.find(row => nameOf(row) === nameOf(was));
 	const start = `First was ${nameOf(was)}, now ${nameOf(is)}`;
-	const place = oldNow && highestEnd(oldNow);
-	const turns = place && endIn(is, place);
+	// In another gear the RPM is another for that reason alone.
+	const place = oldNow && endsOf(oldNow).find(end => endIn(is, end)?.gear === end.gear);
+	const turns = place && endIn(is, place)?.rpm;
 	if (oldNow === undefined || place === undefined || turns === undefined) return `${start}.`;
 	const difference = Math.round(turns - place.rpm);
 	const less = `${grouped(Math.abs(difference))} rpm ${difference < 0 ? 'less' : 'more'}`;
@@ -45,21 +46,26 @@ function stayedWords(was: Row, is: Row): string {
 	return `${start}: ${highestText(after.rpm)} rpm at the end of ${placeText(after.straight, after.situation)}, ${change}.`;
 }
 
-type End = {readonly straight: string; readonly situation: string; readonly rpm: number};
+type End = {readonly straight: string; readonly situation: string; readonly rpm: number; readonly gear: number};
 
-/** The straight and situation at whose end the row turns highest, as it would without a limiter. */
-function highestEnd(row: Row): End | undefined {
-	const ends = row.situations.flatMap(({name, straights}) =>
-		straights.map((straight): End => ({straight: straight.name, situation: name, rpm: endRpm(straight)})),
-	);
-	return ends.sort((a, b) => b.rpm - a.rpm)[0];
+/** What a row turns at the ends of the straights in all situations, as it would without a limiter; the highest first. */
+function endsOf({situations}: Row): End[] {
+	const ends = situations.flatMap(({name, straights}) => straights.map(straight => endOf(straight, name)));
+	return ends.sort((a, b) => b.rpm - a.rpm);
 }
 
-const endRpm = ({endRpm: held, reachRpm}: StraightResult): number => Math.max(held, reachRpm ?? 0);
+const highestEnd = (row: Row): End | undefined => endsOf(row)[0];
 
-function endIn(row: Row, {straight, situation}: End): number | undefined {
+const endOf = ({name, endRpm, reachRpm, endGear}: StraightResult, situation: string): End => ({
+	straight: name,
+	situation,
+	rpm: Math.max(endRpm, reachRpm ?? 0),
+	gear: endGear,
+});
+
+function endIn(row: Row, {straight, situation}: End): End | undefined {
 	const found = row.situations.find(({name}) => name === situation)?.straights.find(({name}) => name === straight);
-	return found && endRpm(found);
+	return found && endOf(found, situation);
 }
 
 const lowered = (sentence: string) => sentence.charAt(0).toLowerCase() + sentence.slice(1);

@@ -2,6 +2,7 @@
 import {type Json, type JsonObject, type Path, valueAt} from '../../documents/json.ts';
 import {quantityOf} from '../../documents/quantity.ts';
 import type {Dimension} from '../../documents/units.ts';
+import {mphMps} from '../../drivetrain/constants.ts';
 import {harmonicRolloutM} from '../../drivetrain/tire.ts';
 import {carAt} from '../../planning/situations.ts';
 import type {Findings, Spread} from '../find/findings.ts';
@@ -176,12 +177,20 @@ function straightProposals({readings}: Learning, findings: Findings | undefined,
 		const speed = (field: 'exit' | 'minimum', spread: Spread | undefined): Proposal[] => {
 			const path: Path = ['straights', index, field];
 			if (spread === undefined || !make.has('track', path)) return [];
-			const value = known(spread.median, spread.sd ?? 0);
+			const value = known(spread.median, spreadOf(spread));
 			return [row(`${field}:${name}`, make.quantity(`${field} ${name}`, 'track', path, value, 'speed'))];
 		};
 		return [...speed('exit', exitMps), ...speed('minimum', minimumMps)];
 	});
 }
+
+/** From lap to lap; a few laps alike are no proof that the next one will be. */
+function spreadOf({sd, count}: Spread): number {
+	return Math.max(sd ?? 0, count < fewLaps ? fewLapsMps : leastSpreadMps);
+}
+const fewLaps = 5;
+const fewLapsMps = 0.5 * mphMps;
+const leastSpreadMps = 0.1 * mphMps;
 
 /**
  * The measurement of a straight as a whole, so that no part of an older one stays beside the new ones. A speed that is only what

@@ -15,9 +15,6 @@ const unitNames: Record<Readers, Partial<Record<Dimension, string>>> = {
 const finest: Partial<Record<Dimension, number>> = {length: 1e-4, share: 1e-2};
 const fineEnough = 1e-3;
 
-/** Digits of a number that is known exactly. */
-const fullDigits = 6;
-
 /** "86.42 in ± 0.06 in", in the unit of the text that stood there or of `like`. */
 export function writtenQuantity(
 	{value, se}: Known,
@@ -50,12 +47,12 @@ const wholeNumbers = 1;
  * number would lose more than the fraction `rounding` by it.
  */
 export function numberTexts({value, se}: Known, rounding: number): readonly [string, string | undefined] {
-	if (!(se > 0) || !Number.isFinite(se)) return [String(Number(value.toPrecision(fullDigits))), undefined];
+	const byValue = Math.max(0, Math.min(maxDecimals, Math.ceil(-Math.log10(2 * rounding * Math.abs(value)))));
+	if (!(se > 0) || !Number.isFinite(se)) return [String(Number(value.toFixed(byValue))), undefined];
 	const power = Math.floor(Math.log10(se));
 	const first = Math.floor(se / 10 ** power);
 	const bySpread = (first <= 2 ? 1 : 0) - power;
-	const byValue = Math.ceil(-Math.log10(2 * rounding * Math.abs(value)));
-	const decimals = Math.max(0, Math.min(maxDecimals, Math.max(bySpread, byValue)));
+	const decimals = Math.min(maxDecimals, Math.max(bySpread, byValue));
 	return [value.toFixed(decimals), se.toFixed(decimals)];
 }
 /** A standard error far below what any document writes is not worth its digits. */

@@ -195,6 +195,52 @@ describe('anchoring', () => {
 		expect(found?.power?.value).toBeCloseTo(0.97, 4);
 	});
 
+	test('takes nothing from a straight at whose end grip decides', () => {
+		const slippery = {...demo.track, car: {...demo.track.car, grip: 0.3}};
+		const ask = modelOf(demo.car, slippery);
+		const reading = {
+			index: back,
+			name: 'Back',
+			candidate,
+			gear: undefined,
+			endMps: known(70, 0.1),
+			endRpm: undefined,
+			speedSeen: true,
+			exitMps: known(40, 0.1),
+			lengthM: 150,
+			timeS: undefined,
+			gears: undefined,
+			limited: false,
+		};
+		const found = anchor(ask, [reading], untrimmed);
+		expect(found).toMatchObject({drag: undefined, power: undefined});
+		expect(found?.straights[0]?.tells).toBeUndefined();
+	});
+
+	test('is not carried away by one straight of four that is not as the track has it', () => {
+		const ask = modelOf(demo.car, demo.track);
+		const readings = [0, 0.1, -0.1, 4].map((offMps, i) => {
+			const index = i % 2;
+			const endMps = known(truth(index, {drag: 1.05}).endMps + offMps, 0.1);
+			return {
+				index,
+				name: '',
+				candidate,
+				gear: undefined,
+				endMps,
+				endRpm: undefined,
+				speedSeen: true,
+				exitMps: undefined,
+				lengthM: undefined,
+				timeS: undefined,
+				gears: undefined,
+				limited: false,
+			};
+		});
+		const {drag} = anchor(ask, readings, untrimmed)!;
+		expect(Math.abs(drag!.value - 1.05)).toBeLessThan(0.02);
+	});
+
 	test('leaves the exit speed its part in the standard error', () => {
 		const ask = modelOf(demo.car, demo.track);
 		const end = truth(back, {}).endMps;
