@@ -5,7 +5,8 @@ import {effectOn, findingsFor, lessonFrom} from '../../source/practice/learn/les
 import {lapPicture, ratioPicture} from '../../source/practice/learn/pictures.ts';
 import {headingOf} from '../../source/text/heading-view.ts';
 import {layOut} from '../../source/text/layout.ts';
-import {fittedLines, type LearnAnswer, learnView} from '../../source/text/learn-view.ts';
+import {type LearnAnswer, learnView} from '../../source/text/learn-view.ts';
+import {fittedLines} from '../../source/text/learned-words.ts';
 import {unitsOf} from '../../source/text/units.ts';
 import {displayWidth} from '../../source/text/width.ts';
 import {demoDocuments, subjectOf} from '../practice/learn/subject.ts';

@@ -8,12 +8,14 @@ import type {Choice} from './catalog.ts';
 import {current, unsaved} from './documents.ts';
 import type {Effect} from './effect.ts';
 import {fileNameFor, items} from './hand-over.ts';
-import {panesOf, practiceOf, straightNames} from './practice-of.ts';
+import {cleared, paneBy, seenEntry} from './intend-practice.ts';
+import {entryFor, next} from './intents.ts';
+import {practiceOf} from './practice-of.ts';
 import {marginEntry} from './reduce.ts';
 import {practicePlace} from './reduce-practice.ts';
 import {takeInPlace} from './reduce-take-in.ts';
 import {cursorIn, orders, type Placed, stepped} from './rows.ts';
-import {type Asked, type Place, pictures, type Session} from './session.ts';
+import {type Place, pictures, type Session} from './session.ts';
 
 /** What a key's meaning may depend on beside the session. */
 export type Scene = {
@@ -246,12 +248,6 @@ const formOf = (kind: 'track' | 'car'): Place => ({
 	editing: undefined,
 });
 
-/** The one so many after another in a circle; an unknown one counts as the first. */
-function next<T>(among: readonly T[], one: T, by: number): T {
-	const at = Math.max(0, among.indexOf(one));
-	return among[(at + by + among.length) % among.length]!;
-}
-
 function rowBy(session: Session, {shown}: Scene, by: number): Action | undefined {
 	const cursor = cursorIn(shown, session.row);
 	const target = Math.max(0, Math.min(shown.length - 1, cursor + by));
@@ -284,11 +280,6 @@ function itemBy(place: Place, by: 1 | -1): Action | undefined {
 	return place.at === 'hand over' ? {do: 'show item', item: next(items, place.item, by)} : undefined;
 }
 
-const entryFor = (asks: Asked, text: string): Action => ({
-	do: 'cover',
-	over: {is: 'entry', asks, line: editLine(text), wrong: undefined},
-});
-
 /** Nothing typed is no name; as notes it means none. */
 function accepted(over: Session['over']): Action | Effect | undefined {
 	if (over?.is !== 'entry') return undefined;
@@ -298,32 +289,6 @@ function accepted(over: Session['over']): Action | Effect | undefined {
 	if (text === '') return {do: 'refuse', wrong: 'a name is needed; Esc goes back'};
 	if (over.asks === 'log') return 'read log';
 	return over.asks === 'file' ? 'write it' : 'export';
-}
-
-/** Of a straight, with what was typed before or with what begins now. */
-export function seenEntry(session: Session, begun?: string): Action {
-	const {place} = session;
-	const practice = practiceOf(session);
-	if (practice.log)
-		return {do: 'tell', notice: `${practice.log.label} is shown; Del puts it away for numbers by hand.`};
-	const straight = straightNames(session)[place.at === 'practice' ? place.cursor : 0];
-	const before = practice.seen.find(one => one.straight === straight)?.text ?? '';
-	return entryFor('seen', begun ?? before);
-}
-
-function paneBy(session: Session, by: 1 | -1): Action | undefined {
-	const {place} = session;
-	return place.at === 'practice'
-		? {do: 'show pane', pane: next(panesOf(practiceOf(session)), place.pane, by)}
-		: undefined;
-}
-
-function cleared(session: Session): Action | undefined {
-	const {place} = session;
-	if (place.at !== 'practice') return undefined;
-	if (practiceOf(session).log) return {do: 'show log', log: undefined};
-	const straight = straightNames(session)[place.cursor];
-	return place.pane !== 'numbers' || straight === undefined ? undefined : {do: 'see', straight, text: undefined};
 }
 
 function forget({place, history}: Session): Action | undefined {

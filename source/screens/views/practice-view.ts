@@ -5,7 +5,8 @@ import {type Block, cell, gap, type Making, tableOf, text} from '../../text/bloc
 import {drawChart} from '../../text/chart.ts';
 import {foundView} from '../../text/found-view.ts';
 import {layOut} from '../../text/layout.ts';
-import {comparedColumns, comparedLegend, fittedLines, notesOn} from '../../text/learn-view.ts';
+import {comparedColumns, comparedLegend, notesOn} from '../../text/learn-view.ts';
+import {fittedLines} from '../../text/learned-words.ts';
 import {lapChart, lapLegend, lapTitle, ratioChart, ratioTitle} from '../../text/practice-pictures.ts';
 import {absent, type Units, unitsOf} from '../../text/units.ts';
 import {beside, blank, clipped, line, type Pieces, piece, tall} from '../parts/pieces.ts';
