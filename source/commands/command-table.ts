@@ -2,6 +2,7 @@
 import type {Command} from './command.ts';
 import {learnCommands} from './learn-commands.ts';
 import {lifeCommands} from './life-commands.ts';
+import {loadingCommands} from './loading-commands.ts';
 import {sharingCommands} from './sharing-commands.ts';
 import {storeCommands} from './store-commands.ts';
 
@@ -91,6 +92,7 @@ export const commands: readonly Command[] = [
 	...lifeCommands,
 	...storeCommands,
 	...sharingCommands,
+	...loadingCommands,
 ];
 
 /** The command of that name. */

@@ -13,6 +13,8 @@ export const scopes = {
 	draft: 'Adding to the history',
 	practice: 'In the practice',
 	differences: 'In the differences',
+	load: 'In the load list',
+	gears: 'Among gears to build',
 	field: 'Typing into a field',
 	margin: 'Typing the least margin',
 	entry: 'Typing a file name, notes, a directory or RPM',

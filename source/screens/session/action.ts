@@ -71,5 +71,7 @@ export type Action =
 	/** Edits of both documents, with the words that say what they were. */
 	| {readonly do: 'learn'; readonly edits: Readonly<Record<Kind, readonly Edit[]>>; readonly notice: string}
 	| {readonly do: 'whole to'; readonly which: 'saved' | 'shipped'}
+	/** The track of that id lies ahead, or no longer. */
+	| {readonly do: 'toggle ahead'; readonly id: string}
 	/** A saved document is no more. */
 	| {readonly do: 'forgotten'; readonly document: OpenDocument};
