@@ -8,7 +8,7 @@ const root = new URL('..', import.meta.url).pathname;
 const groups = [
 	{
 		name: 'common',
-		test: /source\/store\/|source\/text\/(?!.*-view)|source\/text\/list-view|source\/commands\/(print|reply|shelf|find-document)|source\/documents\/(visible|nearest)|picocolors|fast-string|fastest-lev/,
+		test: /source\/store\/|source\/text\/(?!.*(?:-view|chart|canvas|ticks|learned|practice))|source\/text\/list-view|source\/commands\/(print|reply|shelf|find-document)|source\/documents\/(visible|nearest)|picocolors|fast-string|fastest-lev/,
 	},
 	{
 		name: 'plan',

@@ -1,7 +1,6 @@
 /** What a view gives: blocks of cells whose meaning is named. Layout takes the width, paint the color. */
 import {visible} from '../documents/visible.ts';
-import type {Cell, Tone} from './cell.ts';
-import type {Chart} from './chart.ts';
+import type {Cell, Line, Tone} from './cell.ts';
 
 export type {Cell, Tone} from './cell.ts';
 export {cell} from './cell.ts';
@@ -22,8 +21,8 @@ export type Block =
 	/** One line, cut to the width. */
 	| {kind: 'line'; cells: readonly Cell[]}
 	| {kind: 'gap'}
-	/** As wide as there is room, in so many lines. */
-	| {kind: 'chart'; chart: Chart; height: number}
+	/** What draws itself for a width, such as a picture: a listing does not load what draws. */
+	| {kind: 'drawn'; draw: (width: number, ascii: boolean) => Line[]}
 	| Table;
 
 export const gap: Block = {kind: 'gap'};
@@ -33,7 +32,6 @@ export const text = (content: string, tone: Tone = 'plain', hang = 0): Block => 
 	tone,
 	hang,
 });
-export const picture = (chart: Chart, height: number): Block => ({kind: 'chart', chart, height});
 export const line = (...cells: Cell[]): Block => ({kind: 'line', cells});
 export const table = (columns: readonly Column[], rows: readonly (readonly Cell[])[], indent = 0): Block => ({
 	kind: 'table',

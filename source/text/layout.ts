@@ -1,7 +1,6 @@
 /** From blocks to lines no wider than the width. A pure function of both. */
 import {type Block, type Cell, type Column, cell, type Table} from './blocks.ts';
 import type {Line} from './cell.ts';
-import {drawChart} from './chart.ts';
 import {cut, displayWidth, padTo, wrap} from './width.ts';
 
 export type {Line} from './cell.ts';
@@ -73,7 +72,7 @@ export const layOut = (blocks: readonly Block[], width: number, ascii = false): 
 		.flatMap((block): Line[] => {
 			if (block.kind === 'gap') return [[]];
 			if (block.kind === 'line') return [block.cells];
-			if (block.kind === 'chart') return drawChart(block.chart, {width, height: block.height, ascii});
+			if (block.kind === 'drawn') return block.draw(width, ascii);
 			if (block.kind === 'table') return tableLines(block, width);
 			return wrap(block.text, width, block.hang).map(text => [{text, tone: block.tone}]);
 		})

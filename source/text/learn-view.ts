@@ -6,11 +6,11 @@ import type {Effect} from '../practice/learn/effect.ts';
 import type {Learning} from '../practice/learn/learn.ts';
 import type {LapPicture, RatioPicture} from '../practice/learn/pictures.ts';
 import type {Proposal, ProposalRow} from '../practice/learn/proposals.ts';
-import {type Block, cell, gap, type Making, picture, tableOf, text} from './blocks.ts';
+import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
 import {foundView} from './found-view.ts';
 import {closingView, type Heading, headingView} from './heading-view.ts';
 import {fittedLines} from './learned-words.ts';
-import {lapChart, lapLegend, lapTitle, ratioChart, ratioTitle} from './practice-pictures.ts';
+import {lapChart, lapLegend, lapTitle, picture, ratioChart, ratioTitle} from './practice-pictures.ts';
 import {absent, fixed, rpm, signed, type Units} from './units.ts';
 
 export function fittedView(learning: Learning): Block[] {

@@ -1,7 +1,14 @@
 /** Two pictures of a log: in which gears it was driven, and a lap beside the model. */
 import type {LapPicture, RatioPicture} from '../practice/learn/pictures.ts';
-import type {Chart, Series, Sign} from './chart.ts';
+import type {Block} from './blocks.ts';
+import {type Chart, drawChart, type Series, type Sign} from './chart.ts';
 import type {Units} from './units.ts';
+
+/** A chart in so many lines, as wide as there is room. */
+export const picture = (chart: Chart, height: number): Block => ({
+	kind: 'drawn',
+	draw: (width, ascii) => drawChart(chart, {width, height, ascii}),
+});
 
 /** Engine speed over road speed: a hump a gear, and the gears of the pair that explains it best. */
 export function ratioChart({points, gears}: RatioPicture): Chart {
