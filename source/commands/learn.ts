@@ -15,6 +15,7 @@ import {asWritten, effectOn, findingsFor, type Lesson, lessonFrom} from '../prac
 import {lapPicture, ratioPicture} from '../practice/learn/pictures.ts';
 import type {DocumentsAsWritten, Proposal} from '../practice/learn/proposals.ts';
 import {readSeen, seenExample} from '../practice/learn/seen-text.ts';
+import {isUnclear} from '../practice/learn/unclear.ts';
 import {homeDirectory} from '../store/home.ts';
 import type {Written} from '../store/kept-documents.ts';
 import {readPreferences, rememberColumns} from '../store/preferences.ts';
@@ -134,11 +135,7 @@ async function fromLog(log: string, loaded: Loaded, request: Request, around: Su
 	const learning = learnFromFindings(subjectOf(loaded), findings.value);
 	if (!learning.ok) return refuseFaults(learning.faults, labels);
 	const {mounted} = findings.value;
-	if (
-		request.accept &&
-		said.value === undefined &&
-		(mounted.verdict === 'otherFits' || mounted.verdict === 'flippedFits')
-	)
+	if (request.accept && said.value === undefined && isUnclear(findings.value))
 		return badInput(
 			`droprack learn: nothing is accepted before it is clear what was in the car. ${mounted.why} Say it with --pair and --gearbox.`,
 		);

@@ -6,6 +6,7 @@ import type {Effect} from '../practice/learn/effect.ts';
 import type {Learning} from '../practice/learn/learn.ts';
 import type {LapPicture, RatioPicture} from '../practice/learn/pictures.ts';
 import type {Proposal, ProposalRow} from '../practice/learn/proposals.ts';
+import {isUnclear} from '../practice/learn/unclear.ts';
 import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
 import {foundView} from './found-view.ts';
 import {closingView, type Heading, headingView} from './heading-view.ts';
@@ -164,8 +165,6 @@ const pictureLines = 14;
 const toldAbove: readonly NoteCode[] = ['pair', 'wrongCar', 'slipHeld', 'wheelspin'];
 export const notesOn = (findings: Findings): string[] =>
 	findings.notes.filter(({code}) => !toldAbove.includes(code)).map(note => note.text);
-const isUnclear = (findings: Findings | undefined): boolean =>
-	findings?.mounted.verdict === 'otherFits' || findings?.mounted.verdict === 'flippedFits';
 
 /** The whole answer. */
 export function learnView(answer: LearnAnswer, units: Units): Block[] {

@@ -4,13 +4,13 @@ import {withEdits} from '../../documents/edits.ts';
 import type {Car} from '../../drivetrain/car.ts';
 import type {Track} from '../../drivetrain/track.ts';
 import type {LoggedRun} from '../../logs/logged-run.ts';
-import type {Findings} from '../../practice/find/findings.ts';
 import {acceptEdits, takeablesIn, takeBackEdits} from '../../practice/learn/accept.ts';
 import {learnFromFindings, learnFromSeen, type Subject} from '../../practice/learn/learn.ts';
 import {findingsFor, lessonFrom} from '../../practice/learn/lesson.ts';
 import {lapPicture, ratioPicture} from '../../practice/learn/pictures.ts';
 import type {Seen} from '../../practice/learn/seen.ts';
 import {readSeen, type SeenReading} from '../../practice/learn/seen-text.ts';
+import {isUnclear} from '../../practice/learn/unclear.ts';
 import {current, type Documents, withJson} from './documents.ts';
 import {readCarOf, readTrackOf} from './forms.ts';
 import type {JsonObject} from './json.ts';
@@ -132,7 +132,4 @@ export function logShown(
 	return {label, run, findings: findings.value, remarks};
 }
 
-export const isUnclear = (findings: Findings | undefined): boolean =>
-	findings?.mounted.verdict === 'otherFits' || findings?.mounted.verdict === 'flippedFits';
-
-export {acceptEdits, takeBackEdits};
+export {acceptEdits, isUnclear, takeBackEdits};
