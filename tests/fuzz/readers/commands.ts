@@ -1,0 +1,114 @@
+/** The first line is the words of the command line, the rest standard input, in bytes. */
+import {mkdtempSync, rmSync} from 'node:fs';
+import {tmpdir} from 'node:os';
+import {join, resolve} from 'node:path';
+import {pathToFileURL} from 'node:url';
+import {readCommandLine} from '../../../source/commands/arguments.ts';
+import {commands} from '../../../source/commands/command-table.ts';
+import {answer} from '../../../source/commands/main.ts';
+import {options} from '../../../source/commands/options.ts';
+import {status} from '../../../source/commands/reply.ts';
+import type {Surroundings} from '../../../source/commands/surroundings.ts';
+import type {Answer, Reader} from '../reader.ts';
+import {fixtureText, tracks} from './documents.ts';
+import {plans} from './plans.ts';
+
+const home = mkdtempSync(join(tmpdir(), 'droprack-fuzz-'));
+process.on('exit', () => rmSync(home, {recursive: true, force: true}));
+
+const around = (input: Buffer): Surroundings => ({
+	shipped: pathToFileURL(`${resolve('tracks')}/`),
+	environment: {DROPRACK_HOME: home},
+	now: new Date(0),
+	columns: 80,
+	color: false,
+	async *standardInput() {
+		yield input;
+	},
+});
+
+/** Nothing but the home may be touched, and nothing of the fuzzed text be copied to whoever looks at this terminal. */
+function isKeptHere(words: readonly string[]): boolean {
+	const line = readCommandLine(words);
+	if (line.kind !== 'run') return true;
+	if (line.request.copy || ['export', 'import'].includes(line.command?.name ?? '')) return false;
+	return (
+		words.every(word => !/[\\/]|\.json|\.txt|\0/i.test(word) || /^\d+\/\d+$/.test(word)) &&
+		line.command?.name !== 'read'
+	);
+}
+
+async function read(text: string): Promise<Answer> {
+	const [first = '', ...rest] = text.split('\n');
+	const words = first.split(' ').filter(word => word !== '');
+	const isReading = words[0] === 'read' && words[1] === '-' && !words.includes('--copy');
+	if (!isReading && !isKeptHere(words)) return {accepted: true};
+	const reply = await answer(words, around(Buffer.from(rest.join('\n'), 'latin1')));
+	rmSync(home, {recursive: true, force: true});
+	const isKnown = Object.values(status).includes(reply.status) && reply.status !== status.fault;
+	return {
+		accepted: reply.status === status.done,
+		// `show` prints a document as it was written.
+		said: (reply.out + reply.err).replaceAll('\t', ' '),
+		broken: !isKnown
+			? `the status is one of those that are told: ${reply.status} ${reply.err}`
+			: reply.status >= status.badInput && (reply.out !== '' || reply.err.trim() === '')
+				? `a refusal has its reason, and no result: ${reply.out.slice(0, 200)}`
+				: undefined,
+	};
+}
+
+const inBytes = (text: string) => Buffer.from(text).toString('latin1');
+
+export const commandLines: Reader = {
+	name: 'commands',
+	examples: async () => {
+		const [planText, , line] = await plans.examples();
+		return [
+			'rank quillmere --top 3',
+			'rpm tarrowdale --gearbox A --units metric --json',
+			'run Quillmere --ascii --strict --car demo',
+			'tracks --json',
+			'cars --prefer demo',
+			'show tarrowdale',
+			'schema track',
+			'history quillmere --add --date 2026-05-31 --rpm 8840 --remark loose',
+			'new track --name Mine --from quillmere',
+			'save quillmere --gearbox A --notes fine',
+			'help rank',
+			`rank -\n${inBytes(fixtureText('oval'))}`,
+			`compare - quillmere\n${inBytes(fixtureText('oval'))}`,
+			`read -\n${inBytes(planText!)}`,
+			`read - --take\n${inBytes(line!)}`,
+			`card driver -\n${inBytes(fixtureText('oval'))}`,
+			`share - --short\n${inBytes(fixtureText('oval'))}`,
+		];
+	},
+	words: [
+		...commands.map(({name}) => name),
+		...Object.keys(options).map(name => `--${name}`),
+		...[
+			'-',
+			'--',
+			'-h',
+			'--json=1',
+			'--top=0',
+			'demo',
+			'quillmere',
+			'Quillmere',
+			'tarrowdale',
+			'33/38',
+			'0/0',
+			'us',
+			'metric',
+			'driver',
+			'swap',
+			'engine',
+			'2026-02-30',
+		],
+		...tracks.words,
+	],
+	longest: 6000,
+	work: {start: 200_000_000, perCharacter: 0},
+	read,
+};

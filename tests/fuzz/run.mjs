@@ -1,0 +1,7 @@
+/** Each file of the source stays a file of its own, so that the coverage is known by file. */
+import {runBundled} from '../../.config/run-bundled.mjs';
+
+await runBundled('tests/fuzz/main.ts', process.argv.slice(2), {
+	output: {preserveModules: true, preserveModulesRoot: '.'},
+	beside: ['tests/fixtures'],
+});
