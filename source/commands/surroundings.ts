@@ -23,6 +23,10 @@ export const wantsColor = (environment: Surroundings['environment'], isTerminal:
 	return isTerminal && environment.TERM !== 'dumb';
 };
 
+/** Whether a screen can be drawn: a terminal at both ends, one that moves its cursor. */
+export const canDraw = (environment: Surroundings['environment'], isTerminal: boolean): boolean =>
+	isTerminal && environment.TERM !== 'dumb';
+
 export const processSurroundings = (shipped: URL): Surroundings => ({
 	shipped,
 	environment: process.env,

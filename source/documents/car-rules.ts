@@ -45,10 +45,11 @@ export const efficiencyRules = () =>
 		if (efficiencies === undefined) return;
 		if (efficiency !== undefined) report(['efficiencies'], 'either "efficiency" or "efficiencies"');
 		if (!Array.isArray(efficiencies)) return;
-		for (const gearbox of listOf(gearboxes) as {name?: unknown; ratios?: unknown}[]) {
+		for (const [i, gearbox] of (listOf(gearboxes) as {name?: unknown; ratios?: unknown}[]).entries()) {
 			const ratios = gearbox?.ratios;
 			if (!Array.isArray(ratios) || ratios.length === efficiencies.length) continue;
-			report(['efficiencies'], `one for each of the ${ratios.length} gears of gearbox "${gearbox.name}"`);
+			const which = typeof gearbox.name === 'string' ? `"${gearbox.name}"` : `number ${i + 1}`;
+			report(['efficiencies'], `one for each of the ${ratios.length} gears of gearbox ${which}`);
 		}
 	});
 
@@ -76,6 +77,8 @@ export const carRules = () =>
 
 function reportUnknownGearboxes({gearboxes, installed, rules}: CarValues, report: Report): void {
 	const names = listOf(gearboxes).map(gearbox => gearbox?.name);
+	// A name that cannot be read may be the one that is meant.
+	if (names.length === 0 || names.some(name => typeof name !== 'string')) return;
 	const checked = (name: unknown, path: PropertyKey[]) => {
 		if (typeof name !== 'string' || names.includes(name)) return;
 		report(path, `a gearbox of this car: ${names.map(known => `"${known}"`).join(', ')}`);

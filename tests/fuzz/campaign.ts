@@ -17,7 +17,7 @@ export type Finding = Broken & {
 
 /** So many texts between two looks at the coverage: a look takes as long as a few texts. */
 const batchSize = 24;
-const usualWork = {start: 200_000, perCharacter: 400};
+const usualWork = {start: 20_000, perCharacter: 50};
 
 export class Campaign {
 	readonly reader: Reader;
@@ -62,9 +62,10 @@ export class Campaign {
 		this.#coverage.keep(fresh);
 	}
 
+	/** So many texts, or fewer where something is found. */
 	async run(executions: number): Promise<void> {
 		await this.start();
-		while (this.executions < executions) await this.batch();
+		while (this.executions < executions && this.findings.length === 0) await this.batch();
 	}
 
 	/** Lately kept ones more often: they are at the edge of what was reached. */

@@ -79,7 +79,7 @@ export const commandLines: Reader = {
 			`rank -\n${inBytes(fixtureText('oval'))}`,
 			`compare - quillmere\n${inBytes(fixtureText('oval'))}`,
 			`read -\n${inBytes(planText!)}`,
-			`read - --take\n${inBytes(line!)}`,
+			`read - --units metric\n${inBytes(line!)}`,
 			`card driver -\n${inBytes(fixtureText('oval'))}`,
 			`share - --short\n${inBytes(fixtureText('oval'))}`,
 		];
@@ -109,6 +109,6 @@ export const commandLines: Reader = {
 		...tracks.words,
 	],
 	longest: 6000,
-	work: {start: 200_000_000, perCharacter: 0},
+	work: {start: 30_000_000, perCharacter: 0},
 	read,
 };

@@ -11,6 +11,7 @@ import {
 } from '../../../source/documents/read.ts';
 import {carSchema, trackSchema} from '../../../source/documents/schema.ts';
 import {dimensions} from '../../../source/documents/units.ts';
+import {nudged} from '../mutate.ts';
 import type {Answer, Reader} from '../reader.ts';
 
 export const shippedText = (name: string): string => readFileSync(`tracks/${name}.json`, 'utf8');
@@ -78,6 +79,7 @@ export const tracks: Reader = {
 	name: 'tracks',
 	examples: () => [fixtureText('oval'), shippedText('tarrowdale'), shippedText('hesper-ridge')],
 	words: wordsOf('track'),
+	mutators: [nudged],
 	longest: 12_000,
 	read: text => read('track', text),
 };
@@ -86,6 +88,7 @@ export const cars: Reader = {
 	name: 'cars',
 	examples: () => [fixtureText('car'), shippedText('cars/demo')],
 	words: wordsOf('car'),
+	mutators: [nudged],
 	longest: 12_000,
 	read: text => read('car', text),
 };

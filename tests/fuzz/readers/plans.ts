@@ -89,6 +89,6 @@ export const plans: Reader = {
 	],
 	mutators: [withChecks, withChecks, withLineCheck, byMail],
 	longest: 16_000,
-	work: {start: 600_000, perCharacter: 600},
+	work: {start: 150_000, perCharacter: 150},
 	read,
 };

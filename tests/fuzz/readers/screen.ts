@@ -109,6 +109,6 @@ export const screen: Reader = {
 		...'abcdefghijklmnopqrstuvwxyzUGNP?[]/0123456789+-.% ',
 	],
 	longest: 60,
-	work: {start: 400_000_000, perCharacter: 0},
+	work: {start: 20_000_000, perCharacter: 0},
 	read,
 };

@@ -47,7 +47,7 @@ function kept(file: string, kind: KeptKind): Answer {
 	if (!answer.ok) return refused(answer.problem);
 	writeFileSync(file, textOf(answer.value.document));
 	const again: StoreAnswer<Kept<unknown>> = readKept(file, kind);
-	const isSame = again.ok && isDeepStrictEqual(again.value.document, answer.value.document);
+	const isSame = again.ok && textOf(again.value.document) === textOf(answer.value.document);
 	return {
 		accepted: true,
 		broken: isSame ? undefined : `written and read again it is the same: ${JSON.stringify(again)}`,
@@ -60,13 +60,11 @@ function session(file: string): Answer {
 	const [first] = sessions;
 	if (first?.file !== file) return {accepted: false};
 	const taken = restored(first.document);
+	const written = JSON.parse(JSON.stringify(taken ?? null));
+	const isSame = taken === undefined || isDeepStrictEqual(JSON.parse(JSON.stringify(restored(written))), written);
 	return {
 		accepted: taken !== undefined,
-		broken:
-			taken === undefined ||
-			isDeepStrictEqual(restored(JSON.parse(JSON.stringify(taken))), JSON.parse(JSON.stringify(taken)))
-				? undefined
-				: undefined,
+		broken: isSame ? undefined : `kept and restored again it is the same: ${JSON.stringify(taken)}`,
 	};
 }
 
