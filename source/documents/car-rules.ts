@@ -1,11 +1,11 @@
 /** What several fields of a car must be together. Each rule looks only at what could be read. */
-import {type Report, reportRepeated, rule} from './fields.ts';
+import {listRule, type Report, reportRepeated, rule} from './fields.ts';
 
 type Named = {name?: unknown};
 const nameOf = ({name}: Named) => name;
 
 export const curveRules = () =>
-	rule<readonly {rpm?: unknown; torque?: unknown}[]>((points, report) => {
+	listRule<{rpm?: unknown; torque?: unknown} | undefined>((points, report) => {
 		for (let i = 1; i < points.length; i++) {
 			const [before, rpm] = [points[i - 1]?.rpm, points[i]?.rpm];
 			if (typeof before !== 'number' || typeof rpm !== 'number' || rpm > before) continue;
@@ -24,7 +24,7 @@ export const engineRules = () =>
 	});
 
 export const ratioRules = () =>
-	rule<readonly unknown[]>((ratios, report) => {
+	listRule<unknown>((ratios, report) => {
 		for (let i = 1; i < ratios.length; i++) {
 			const [before, ratio] = [ratios[i - 1], ratios[i]];
 			if (typeof before !== 'number' || typeof ratio !== 'number' || ratio <= before) continue;
@@ -95,7 +95,7 @@ function reportInstalledPair({installed, rack}: CarValues, report: Report): void
 	const name = pairName(installed?.pair);
 	const pairs = listOf(rack?.pairs);
 	if (name === undefined || pairs.length === 0) return;
-	const flipped = ({driving, driven}: PairValues = {}) => pairName({driving: driven, driven: driving});
+	const flipped = (pair: PairValues | null) => pairName({driving: pair?.driven, driven: pair?.driving});
 	const names = pairs.flatMap(pair =>
 		rack?.eitherShaft === true ? [pairName(pair), flipped(pair)] : [pairName(pair)],
 	);

@@ -1,11 +1,11 @@
 /** What several fields of a track must be together. Each rule looks only at what could be read. */
-import {type Report, reportRepeated, rule} from './fields.ts';
+import {listRule, type Report, reportRepeated, rule} from './fields.ts';
 
 /** The name of the situation that is the track as it stands. */
 export const baseName = 'Base';
 
 export const gearListRules = () =>
-	rule<readonly unknown[]>((gears, report) => {
+	listRule<unknown>((gears, report) => {
 		const first = gears[0];
 		const isRun = gears.every((gear, i) => typeof gear !== 'number' || typeof first !== 'number' || gear === first + i);
 		if (!isRun)

@@ -21,7 +21,7 @@ const open = (opening: Opening = {}): Pty => {
 	return terminal;
 };
 /** To the last line of the frame. */
-const whole = /10 rows[\s\S]*▸ +1 [\s\S]*q quit/;
+const whole = /10 rows[\s\S]*▸ +1 [\s\S]*stock pass[\s\S]*q quit/;
 const down = '\x1B[B';
 /** Another exit speed on the first straight. */
 const changed = `e\t${down}61\r`;

@@ -35,8 +35,8 @@ describe.runIf(process.getuid?.() === 0)('another account', () => {
 		for (const folder of [home(), join(home(), 'tracks')]) chmodSync(folder, 0o777);
 		const holder = children.start(['hold', home()]);
 		await firstWords(holder);
-		expect(await asOther('saveOnce', home(), '1')).toMatchObject({
-			kind: 'failed',
+		expect(await asOther('tryLock', home())).toMatchObject({
+			ok: false,
 			problem: {reason: 'locked', found: `another copy of Droprack (process ${holder.pid}) is saving`},
 		});
 		holder.kill('SIGKILL');

@@ -59,6 +59,8 @@ const verbs: Record<string, () => void> = {
 			Atomics.wait(new Int32Array(new SharedArrayBuffer(4)), 0, 0, 60_000);
 		});
 	},
+	/** Waits for the lock no longer than a moment. */
+	tryLock: () => say(withLock(home, () => 'mine', 20)),
 	/** The unsaved work that is offered to it. */
 	unsaved: () => say(unsavedSessions(home).sessions.map(({document}) => document)),
 	keepSession: () => say(keepSession(home, {work: rest[0]}, `2026-01-0${rest[1]}`) ?? 'kept'),

@@ -11,6 +11,7 @@ import {
 } from '../../../source/documents/read.ts';
 import {carSchema, trackSchema} from '../../../source/documents/schema.ts';
 import {dimensions} from '../../../source/documents/units.ts';
+import {completeCar, completeTrack} from '../../documents/complete.ts';
 import {nudged} from '../mutate.ts';
 import type {Answer, Reader} from '../reader.ts';
 
@@ -77,7 +78,12 @@ function wordsOf(kind: Kind): string[] {
 
 export const tracks: Reader = {
 	name: 'tracks',
-	examples: () => [fixtureText('oval'), shippedText('tarrowdale'), shippedText('hesper-ridge')],
+	examples: () => [
+		JSON.stringify(completeTrack()),
+		fixtureText('oval'),
+		shippedText('tarrowdale'),
+		shippedText('hesper-ridge'),
+	],
 	words: wordsOf('track'),
 	mutators: [nudged],
 	longest: 12_000,
@@ -86,7 +92,7 @@ export const tracks: Reader = {
 
 export const cars: Reader = {
 	name: 'cars',
-	examples: () => [fixtureText('car'), shippedText('cars/demo')],
+	examples: () => [JSON.stringify(completeCar()), fixtureText('car'), shippedText('cars/demo')],
 	words: wordsOf('car'),
 	mutators: [nudged],
 	longest: 12_000,
