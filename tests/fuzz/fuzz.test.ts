@@ -10,7 +10,7 @@ const coverage = new Coverage();
 afterAll(() => coverage.stop());
 
 /** Of those that take longer for a text, fewer. */
-const slow = new Set(['rankings', 'plans', 'commands', 'screen']);
+const slow = new Set(['rankings', 'plans', 'commands', 'screen', 'opened']);
 
 test.each(readers.map(reader => [reader.name, reader] as const))('%s keep their promises', async (name, reader) => {
 	const campaign = new Campaign(reader, 1, coverage);

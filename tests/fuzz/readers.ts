@@ -8,7 +8,7 @@ import {keys} from './readers/keys.ts';
 import {plans} from './readers/plans.ts';
 import {quantities} from './readers/quantities.ts';
 import {rankings} from './readers/rankings.ts';
-import {screen} from './readers/screen.ts';
+import {openedDocuments, screen} from './readers/screen.ts';
 import {storeFiles} from './readers/store.ts';
 
 export const readers: readonly Reader[] = [
@@ -23,4 +23,5 @@ export const readers: readonly Reader[] = [
 	keys,
 	fields,
 	screen,
+	openedDocuments,
 ];

@@ -1,25 +1,31 @@
 /** Keys pressed in a session that runs, in memory: whatever they are, there is a frame of the window's size. */
 import type {Keeper} from '../../../source/screens/keeper.ts';
 import {painted} from '../../../source/screens/parts/theme.ts';
+import type {Documents} from '../../../source/screens/session/documents.ts';
+import type {JsonObject} from '../../../source/screens/session/json.ts';
 import {LiveSession} from '../../../source/screens/session/live.ts';
 import {startSession} from '../../../source/screens/session/session.ts';
 import {KeyDecoder} from '../../../source/screens/terminal/key-decoder.ts';
 import {frameLines, frameOf} from '../../../source/screens/views/frame.ts';
 import {displayWidth} from '../../../source/text/width.ts';
+import {completeCar, completeTrack} from '../../documents/complete.ts';
 import {errandsInMemory} from '../../screens/errands.ts';
-import {catalog, documents} from '../../screens/session/documents.ts';
+import {catalog, documents, fixture} from '../../screens/session/documents.ts';
+import {inJson} from '../mutate-json.ts';
 import type {Answer, Reader} from '../reader.ts';
+import {cars, tracks} from './documents.ts';
 // What the session loads when it is first needed: loaded here, so that no load outlives a text.
 import '../../../source/screens/session/handing.ts';
 import '../../../source/screens/session/incoming.ts';
 
+const [down, up, right, left, esc] = ['\x1B[B', '\x1B[A', '\x1B[C', '\x1B[D', '\x1B'];
 const sizes = [
 	{width: 80, height: 24},
 	{width: 140, height: 45},
 	{width: 20, height: 5},
 ] as const;
 
-function started(): {live: LiveSession; settle: () => void} {
+function started(opened: Documents): {live: LiveSession; settle: () => void} {
 	const waiting: (() => void)[] = [];
 	const keeper: Keeper = {
 		keep() {},
@@ -38,7 +44,7 @@ function started(): {live: LiveSession; settle: () => void} {
 		},
 	};
 	const outside = {leave() {}, suspend() {}, redraw() {}};
-	const live = new LiveSession(startSession(documents, 'us'), catalog, keeper, outside, clock);
+	const live = new LiveSession(startSession(opened, 'us'), catalog, keeper, outside, clock);
 	return {
 		live,
 		settle: () => {
@@ -47,12 +53,13 @@ function started(): {live: LiveSession; settle: () => void} {
 	};
 }
 
-async function read(text: string): Promise<Answer> {
-	const {live, settle} = started();
+/** What is shown after each of the keys, or how a frame of it is not of the window's size. */
+async function pressed(opened: Documents, keys: string): Promise<Answer> {
+	const {live, settle} = started(opened);
 	settle();
 	const decoder = new KeyDecoder();
 	let said = '';
-	for (const event of [...decoder.push(text), ...decoder.flush()]) {
+	for (const event of [...decoder.push(keys), ...decoder.flush()]) {
 		live.press(event);
 		settle();
 		// What is read or loaded on the way arrives.
@@ -74,8 +81,6 @@ async function read(text: string): Promise<Answer> {
 
 // biome-ignore lint/suspicious/noControlCharactersInRegex: what makes text bold or inverted
 const inverted = /\x1B\[[\d;]*m/g;
-
-const [down, up, right, left, esc] = ['\x1B[B', '\x1B[A', '\x1B[C', '\x1B[D', '\x1B'];
 
 export const screen: Reader = {
 	name: 'screen',
@@ -110,5 +115,41 @@ export const screen: Reader = {
 	],
 	longest: 60,
 	work: {start: 20_000_000, perCharacter: 0},
-	read,
+	read: text => pressed(documents, text),
+};
+
+/** To every place, and along what is there. */
+const tour = `j${right}\rjj${esc}gl${esc}e\t${down}${down}5${esc}\t\t${down}\t\t\t\t${esc}ee\t\t${down}${esc}${esc}xjj${esc}t${down}${esc}sohbc`;
+
+/** Documents as the store hands them over: with a name, and otherwise as anybody has left them. */
+async function readDocuments(text: string): Promise<Answer> {
+	const {track, car} = partsOf(text) ?? {};
+	if (typeof track?.name !== 'string' || typeof car?.name !== 'string') return {accepted: false};
+	const open = {
+		'track:oval': {...documents.open['track:oval']!, json: track, saved: track, shipped: undefined},
+		'car:car': {...documents.open['car:car']!, json: car, saved: car, shipped: undefined},
+	};
+	return pressed({...documents, open}, tour);
+}
+
+function partsOf(text: string): {track?: JsonObject; car?: JsonObject} | undefined {
+	try {
+		const parts = JSON.parse(text);
+		return typeof parts === 'object' && parts !== null ? parts : undefined;
+	} catch {
+		return undefined;
+	}
+}
+
+export const openedDocuments: Reader = {
+	name: 'opened',
+	examples: () => [
+		JSON.stringify({track: completeTrack(), car: completeCar()}),
+		JSON.stringify({track: fixture('oval'), car: fixture('car')}),
+	],
+	words: [...tracks.words, ...cars.words],
+	mutators: [inJson, inJson, inJson],
+	longest: 12_000,
+	work: {start: 60_000_000, perCharacter: 0},
+	read: readDocuments,
 };
