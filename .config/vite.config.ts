@@ -9,9 +9,12 @@ const root = new URL('..', import.meta.url).pathname;
 const groups = [
 	{
 		name: 'common',
-		test: /source\/store\/|source\/text\/|source\/commands\/(print|reply|shelf|find-document)|source\/documents\/(visible|nearest)|picocolors|fast-string|fastest-lev/,
+		test: /source\/store\/|source\/text\/(?!.*-view)|source\/text\/list-view|source\/commands\/(print|reply|shelf|find-document)|source\/documents\/(visible|nearest)|picocolors|fast-string|fastest-lev/,
 	},
-	{name: 'plan', test: /source\/(planning|drivetrain)\/|source\/commands\/(load-documents|read-input|faults)/},
+	{
+		name: 'plan',
+		test: /source\/(planning|drivetrain)\/|source\/text\/(heading|rank|run|rpm|check)-view|source\/commands\/(load-documents|read-input|faults)/,
+	},
 ];
 const hashBang = '#!/usr/bin/env node';
 

@@ -1,5 +1,6 @@
 /** Every command once: parsing, help and the messages about unknown ones are made from this table. */
 import type {Command} from './command.ts';
+import {lifeCommands} from './life-commands.ts';
 import {sharingCommands} from './sharing-commands.ts';
 import {storeCommands} from './store-commands.ts';
 
@@ -85,6 +86,7 @@ export const commands: readonly Command[] = [
 		],
 		load: async () => (await import('./schema.ts')).schema,
 	},
+	...lifeCommands,
 	...storeCommands,
 	...sharingCommands,
 ];

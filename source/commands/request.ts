@@ -29,6 +29,9 @@ export type Request = {
 	short?: boolean;
 	qr?: boolean;
 	copy?: boolean;
+	against?: {driving: number; driven: number};
+	above?: number;
+	laps?: number;
 	json: boolean;
 	units: UnitSystem;
 	strict: boolean;
@@ -83,14 +86,23 @@ export const toRequest = (argument: string | undefined, given: Given, second?: s
 		if (!/^[1-9]\d{0,5}$/.test(given.top)) return `--top is a whole number from 1, found ${given.top}.`;
 		request.top = Number(given.top);
 	}
-	if (typeof given.pair === 'string') {
-		const [, driving, driven] = pairPattern.exec(given.pair) ?? [];
-		if (!Number(driving) || !Number(driven)) return `--pair is driving/driven, such as 33/38, found ${given.pair}.`;
-		request.pair = {driving: Number(driving), driven: Number(driven)};
+	for (const name of ['pair', 'against'] as const) {
+		const text = given[name];
+		if (typeof text !== 'string') continue;
+		const [, driving, driven] = pairPattern.exec(text) ?? [];
+		if (!Number(driving) || !Number(driven)) return `--${name} is driving/driven, such as 33/38, found ${text}.`;
+		request[name] = {driving: Number(driving), driven: Number(driven)};
 	}
-	if (typeof given.rpm === 'string') {
-		if (!/^[1-9]\d{2,4}$/.test(given.rpm)) return `--rpm is a whole number from 100 to 99999, found ${given.rpm}.`;
-		request.rpm = Number(given.rpm);
+	for (const name of ['rpm', 'above'] as const) {
+		const text = given[name];
+		if (typeof text !== 'string') continue;
+		if (!/^[1-9]\d{2,4}$/.test(text)) return `--${name} is a whole number from 100 to 99999, found ${text}.`;
+		request[name] = Number(text);
+	}
+	if (typeof given.laps === 'string') {
+		if (!/^([1-9]\d{0,3}|10000)$/.test(given.laps))
+			return `--laps is a whole number from 1 to 10000, found ${given.laps}.`;
+		request.laps = Number(given.laps);
 	}
 	if (request.date !== undefined && !isDay(request.date))
 		return `--date is a day such as 2026-05-31, found ${request.date}.`;

@@ -21,6 +21,9 @@ const bounds = {
 	ratio: {above: 0, to: 30},
 	toothSum: {from: 2, to: 800},
 	sets: {from: 0, to: 1000},
+	consumptionKgPerJ: {above: 0, to: 1e-6},
+	fuelDensityKgM3: {from: 500, to: 1500},
+	tankM3: {above: 0, to: 1},
 	miles: {from: 0, to: 1e6},
 	maxMiles: {above: 0, to: 1e6},
 } satisfies Record<string, Range>;
@@ -55,6 +58,14 @@ const engine = () =>
 			limiter: z.optional(shared.rpm('Where the ignition cuts; the limit in force unless given.')),
 			pullRpm: z.optional(shared.rpm('Lowest RPM from which it pulls cleanly; the first curve point unless given.')),
 			bandShare: z.prefault(number(bounds.share, 'Share of peak power that bounds the power band.'), 0.9),
+			fuelConsumption: z.prefault(
+				quantity(
+					'consumption',
+					bounds.consumptionKgPerJ,
+					'Fuel for the work at the crankshaft, taken as the same at every load.',
+				),
+				'0.30 kg/kWh',
+			),
 			curve: list(curvePoint(), [leastCurvePoints, most.curve], 'Full-throttle torque, rising in RPM.').check(
 				curveRules(),
 			),
@@ -188,6 +199,8 @@ function buildCarFields() {
 					'One a gear, in place of "efficiency".',
 				),
 			),
+			fuelDensity: z.prefault(quantity('density', bounds.fuelDensityKgM3, 'Density of the fuel.'), '0.745 kg/L'),
+			tank: z.optional(quantity('volume', bounds.tankM3, 'Fuel that the tank holds.')),
 			tires: tires(),
 			rack: rack(),
 			margins: z.prefault(margins(), {}),

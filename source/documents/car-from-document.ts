@@ -26,6 +26,8 @@ export function carFrom(document: CarDocument): Car {
 		gearboxes: document.gearboxes,
 		finalDrive: document.finalDrive,
 		efficiencies: document.efficiencies ?? document.efficiency!,
+		fuelDensityKgM3: document.fuelDensity,
+		tankM3: document.tank,
 		tires: tiresFrom(document.tires),
 		rack: rackFrom(document.rack),
 		margins: marginsFrom(document.margins),
@@ -35,9 +37,9 @@ export function carFrom(document: CarDocument): Car {
 }
 
 function engineFrom(engine: CarDocument['engines'][number]): Engine {
-	const {inertia, limiter, curve, pullRpm = curve[0]!.rpm, ...same} = engine;
+	const {inertia, limiter, fuelConsumption, curve, pullRpm = curve[0]!.rpm, ...same} = engine;
 	const points = curve.map(({rpm, torque}) => ({rpm, torqueNm: torque}));
-	return {...same, inertiaKgM2: inertia, limiter, pullRpm, curve: points};
+	return {...same, inertiaKgM2: inertia, limiter, pullRpm, fuelConsumptionKgPerJ: fuelConsumption, curve: points};
 }
 
 function tiresFrom({left, right, growth, slip, steadySlip, diameter, size = diameter}: CarDocument['tires']): Tires {

@@ -16,6 +16,9 @@ const siNames: Partial<Record<Dimension, string>> = {
 	force: 'N',
 	inertia: 'kg m^2',
 	power: 'W',
+	volume: 'm^3',
+	density: 'kg/m^3',
+	consumption: 'kg/J',
 };
 
 const unitNamePattern = /^[\p{L}]+(\^-?\d)?([ /][\p{L}]+(\^-?\d)?)*$/u;

@@ -43,6 +43,9 @@ const examples: Record<Dimension, string> = {
 	force: '1000 N',
 	inertia: '4 kg m^2',
 	power: '640 hp',
+	volume: '20 gal',
+	density: '0.745 kg/L',
+	consumption: '0.30 kg/kWh',
 	share: '1.5 %',
 	number: '1.2',
 };

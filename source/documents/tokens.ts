@@ -14,9 +14,10 @@ export type Tokens = {ok: true; tokens: Token[]} | {ok: false; stop: Stop};
 const space = /\s+/y;
 const number = /(?:\d+(?:\.\d*)?|\.\d+)(?:[eE][+-]?\d+)?/y;
 const commaNumber = /\d*,\d+/y;
-// Parts like `lbf`, `m²`, `s^-2`, `°F`; joined by blanks, dots, `*`, `-` or `/` where a letter follows: `lbf-ft`, `km / h`.
+// Parts like `lbf`, `m²`, `s^-2`, `°F`; joined by blanks, dots, `*`, `-` or `/` where a letter follows: `lbf-ft`, `km / h`;
+// at the end a divisor of several: `lb/(hp h)`.
 const unit =
-	/(?:["'″′]|[%°\p{L}][\p{L}°%]*(?:\^\s*-?\d|[23](?!\d)|[²³])?(?:\s*[\s·⋅*/-]\s*\p{L}+(?:\^\s*-?\d|[23](?!\d)|[²³])?)*)/uy;
+	/(?:["'″′]|[%°\p{L}][\p{L}°%]*(?:\^\s*-?\d|[23](?!\d)|[²³])?(?:\s*[\s·⋅*/-]\s*\p{L}+(?:\^\s*-?\d|[23](?!\d)|[²³])?)*(?:\s*\/\s*\(\s*\p{L}+(?:[\s·⋅*-]+\p{L}+)*\s*\))?)/uy;
 const operators: Readonly<Record<string, Operator>> = {
 	'+': '+',
 	'-': '-',

@@ -2,7 +2,7 @@
 import * as z from 'zod/mini';
 import {airFields, airRules, windFields} from './air-fields.ts';
 import {change, coefficientChange, powerChange} from './changes.ts';
-import {group, list, name, number, quantity, type Range} from './fields.ts';
+import {group, list, name, number, quantity, type Range, wholeNumber} from './fields.ts';
 import * as shared from './shared-fields.ts';
 import {gearListRules, situationRules, straightRules, trackRules} from './track-rules.ts';
 
@@ -10,6 +10,7 @@ const {ranges} = shared;
 
 const bounds = {
 	lapM: {from: 50, to: 50_000},
+	laps: {from: 1, to: 10_000},
 	lengthM: {from: 1, to: 20_000},
 	restartM: {from: 1, to: 20_000},
 	braking: {above: 0, to: 60},
@@ -149,6 +150,7 @@ function buildTrackFields() {
 			name: name('Name of the track.'),
 			type: shared.trackType('Type of track.'),
 			lap: z.optional(quantity('length', bounds.lapM, 'Length of a lap.')),
+			laps: z.optional(wholeNumber(bounds.laps, 'Laps of the race.')),
 			air: z.optional(
 				group(airFields(), 'The air of the day; 25 °C, 990 hPa, 0 % where a field is missing.').check(airRules()),
 			),

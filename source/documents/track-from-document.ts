@@ -16,7 +16,7 @@ import {baseName} from './track-rules.ts';
 
 /** The track that a checked document describes. `Base` comes first among the situations, the others as written. */
 export function trackFrom(document: TrackDocument): Track {
-	const {name, type, lap, air, wind, gears, straights, situations = [], rules} = document;
+	const {name, type, lap, laps, air, wind, gears, straights, situations = [], rules} = document;
 	const written = situations.map(situation => situationFrom(situation, air?.elevation));
 	const base =
 		written.find(situation => situation.name === baseName) ?? situationFrom({name: baseName, share: 1}, undefined);
@@ -24,6 +24,7 @@ export function trackFrom(document: TrackDocument): Track {
 		name,
 		type,
 		lapM: lap,
+		laps,
 		air: air && airFrom(air, undefined),
 		wind: wind && {speedMps: wind.speed, fromRad: wind.from},
 		pitRoad: pitRoadFrom(document),

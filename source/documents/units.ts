@@ -22,6 +22,9 @@ export const dimensions = [
 	'force',
 	'inertia',
 	'power',
+	'volume',
+	'density',
+	'consumption',
 	'share',
 	'number',
 ] as const;
@@ -44,6 +47,10 @@ const pound = 0.45359237;
 const hour = 3600;
 const poundForce = pound * standardGravity;
 const slug = poundForce / foot;
+/** The US gallon: 231 cubic inches. Exact. */
+const gallon = 231 * inch ** 3;
+const liter = 1e-3;
+const kilowattHour = 1000 * hour;
 const horsepower = 550 * foot * poundForce;
 const metricHorsepower = 75 * standardGravity;
 // Conventional column of mercury at 0 °C: 13595.1 kg/m³ at standard gravity (NIST SP 811, B.8).
@@ -141,6 +148,22 @@ const rows: Record<Dimension, readonly Row[]> = {
 		['W', 1],
 		['PS', metricHorsepower],
 	],
+	volume: [
+		['gal, gallon, gallons', gallon],
+		['qt, quart, quarts', gallon / 4],
+		['L, l, liter, liters, litre, litres', liter],
+		['m^3', 1],
+	],
+	density: [
+		['lb/gal', pound / gallon],
+		['kg/L, kg/l', 1000],
+		['kg/m^3', 1],
+	],
+	consumption: [
+		['lb/(hp h), lb/hp h, lb/hp/h, lb/hph', pound / (horsepower * hour)],
+		['kg/kWh, kg/(kW h), kg/kW h', 1 / kilowattHour],
+		['g/kWh, g/(kW h), g/kW h', 1e-3 / kilowattHour],
+	],
 	share: [['%, percent', 0.01]],
 	number: [],
 };
@@ -175,7 +198,7 @@ export function unitNames(dimension: Dimension): string[] {
 	return rows[dimension].map(([spellings]) => spellings.split(', ')[0]!);
 }
 
-/** One spelling for all ways to write a product, quotient or power: `lb·ft`, `lbf-ft`, `m²`, `m2`, `km / h`. */
+/** One spelling for all ways to write a product, quotient or power: `lb·ft`, `lbf-ft`, `m²`, `m2`, `km / h`, `lb/(hp·h)`. */
 export function unitName(written: string): string {
 	return written
 		.replaceAll('²', '^2')
@@ -183,5 +206,6 @@ export function unitName(written: string): string {
 		.replace(/(\p{L})([23])/gu, '$1^$2')
 		.replace(/\s*\/\s*/g, '/')
 		.replace(/\s*\^\s*/g, '^')
+		.replace(/\s*([()])\s*/g, '$1')
 		.replace(/[\s·⋅*-]+(?=\p{L})/gu, ' ');
 }

@@ -20,6 +20,8 @@ export type Engine = {
 	readonly pullRpm: number;
 	/** Share of peak power that bounds the power band. */
 	readonly bandShare: number;
+	/** Brake specific fuel consumption, kg per joule at the crankshaft. */
+	readonly fuelConsumptionKgPerJ: number;
 	/** At least three points, rising in rpm. */
 	readonly curve: readonly CurvePoint[];
 };
@@ -104,6 +106,9 @@ export type Car = {
 	readonly finalDrive: number;
 	/** From engine to wheels: one number for every gear, or one a gear. */
 	readonly efficiencies: number | readonly number[];
+	readonly fuelDensityKgM3: number;
+	/** Undefined: not known. */
+	readonly tankM3: number | undefined;
 	readonly tires: Tires;
 	readonly rack: Rack;
 	readonly margins: Margins;

@@ -91,6 +91,8 @@ export type Track = {
 	readonly name: string;
 	readonly type: TrackType;
 	readonly lapM: number | undefined;
+	/** Laps of the race; undefined: not known. */
+	readonly laps: number | undefined;
 	readonly air: Air | undefined;
 	readonly wind: Wind | undefined;
 	readonly pitRoad: PitRoad | undefined;

@@ -1,13 +1,25 @@
 /** The units that people read, in one place. Sizes are definitions: SI per unit. */
 export type UnitSystem = 'us' | 'metric';
-export type Quantity = 'speed' | 'distance' | 'longDistance' | 'temperature' | 'pressure' | 'power' | 'density';
+export type Quantity =
+	| 'speed'
+	| 'distance'
+	| 'longDistance'
+	| 'temperature'
+	| 'pressure'
+	| 'power'
+	| 'density'
+	| 'fuel'
+	| 'lapFuel'
+	| 'mass';
 
 type Unit = {label: string; size: number; zero?: number; digits: number};
 
 const footM = 0.3048;
-const poundKg = 0.45359237;
+/** The US gallon: 231 cubic inches. */
+export const gallonM3 = 231 * 0.0254 ** 3;
+export const poundKg = 0.45359237;
 /** 1 hp = 550 ft lbf/s, 1 lbf = 4.4482216152605 N. */
-const horsepowerW = 550 * footM * 4.4482216152605;
+export const horsepowerW = 550 * footM * 4.4482216152605;
 /** Conventional inch of mercury (0 °C, standard gravity). */
 const inchOfMercuryPa = 3386.388640341;
 
@@ -19,6 +31,9 @@ const systems: Record<UnitSystem, Record<Quantity, Unit>> = {
 		temperature: {label: '°F', size: 5 / 9, zero: 32, digits: 0},
 		pressure: {label: 'inHg', size: inchOfMercuryPa, digits: 2},
 		power: {label: 'hp', size: horsepowerW, digits: 0},
+		fuel: {label: 'gal', size: gallonM3, digits: 1},
+		lapFuel: {label: 'gal', size: gallonM3, digits: 4},
+		mass: {label: 'lb', size: poundKg, digits: 0},
 		density: {label: 'lb/ft³', size: poundKg / footM ** 3, digits: 4},
 	},
 	metric: {
@@ -28,6 +43,9 @@ const systems: Record<UnitSystem, Record<Quantity, Unit>> = {
 		temperature: {label: '°C', size: 1, digits: 0},
 		pressure: {label: 'hPa', size: 100, digits: 0},
 		power: {label: 'kW', size: 1000, digits: 0},
+		fuel: {label: 'L', size: 1e-3, digits: 1},
+		lapFuel: {label: 'L', size: 1e-3, digits: 3},
+		mass: {label: 'kg', size: 1, digits: 0},
 		density: {label: 'kg/m³', size: 1, digits: 3},
 	},
 };

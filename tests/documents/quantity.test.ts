@@ -35,6 +35,9 @@ describe('arithmetic', () => {
 		['-5 degC', 'temperature', -5],
 		['- -3 m', 'length', 3],
 		['86.5"', 'length', 86.5 * inch],
+		['20 gal - 2 L', 'volume', 0.07370823568],
+		['3.6e6*(1+1) kg/(kW h)', 'consumption', 2],
+		['(3.6e6) kg/(kW·h) * 2', 'consumption', 2],
 		['1.2 + 0.05', 'number', 1.25],
 	])('%s of %s is %d', (text, dimension, wanted) => {
 		expect(value(quantityOf(text, dimension))).toBeCloseTo(wanted, 10);

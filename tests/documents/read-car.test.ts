@@ -34,6 +34,9 @@ test('the smallest car has every default of the contract', async () => {
 		levelS: 0.02,
 	});
 	expect(smallest.engines[0]).toMatchObject({correctedTo: 'J1349', limiter: undefined, pullRpm: 4000, bandShare: 0.9});
+	// 0.30 kg/kWh.
+	expect(smallest.engines[0]!.fuelConsumptionKgPerJ).toBeCloseTo(8.3333e-8, 12);
+	expect(smallest).toMatchObject({fuelDensityKgM3: 745, tankM3: undefined});
 	expect(smallest.tires).toMatchObject({growth: 0, slip: 0, steadySlip: 0, diameterM: undefined});
 	expect(smallest.rack).toEqual({eitherShaft: false, pairs: [{driving: 33, driven: 38, sets: 1, milesM: 0}]});
 });
@@ -45,7 +48,9 @@ test('a full car is read to SI', async () => {
 		shiftTime: '80 ms',
 		wheelbase: '110 in',
 		cgHeight: '16 in',
-		engines: [engine({correctedTo: 'J607', limiter: 9300, pullRpm: 4500, bandShare: 0.95})],
+		engines: [
+			engine({correctedTo: 'J607', limiter: 9300, pullRpm: 4500, bandShare: 0.95, fuelConsumption: '0.5 lb/(hp h)'}),
+		],
 		efficiency: undefined,
 		efficiencies: [0.9, 0.91, 0.92, 0.93, 0.94],
 		tires: {left: '86.4 in', right: '86.6 in', growth: '0.8 %', slip: '1.5 %', steadySlip: '0.1 %', size: '275/40R17'},
@@ -55,11 +60,17 @@ test('a full car is read to SI', async () => {
 			pairs: [{driving: 33, driven: 38, sets: 2, miles: 100, maxMiles: 1200}],
 		},
 		margins: {limitRpm: 50, settleStart: '0.7 s'},
+		fuelDensity: '6.2173 lb/gal',
+		tank: '20 gal',
 		installed: {pair: '38/33', gearbox: 'A'},
 		rules: {superspeedway: {rpmLimit: 8600, gearboxes: ['A'], pairs: ['33/38']}, road: {}},
 	});
 	expect(full.massKg).toBeCloseTo(3650 * 0.45359237, 9);
 	expect(full).toMatchObject({undrivenInertiaKgM2: 1.5, shiftTimeS: 0.08, efficiencies: [0.9, 0.91, 0.92, 0.93, 0.94]});
+	// Recomputed: 0.30414 kg/kWh; 231 in³ a gallon.
+	expect(full.engines[0]!.fuelConsumptionKgPerJ * 3.6e6).toBeCloseTo(0.30414, 5);
+	expect(full.fuelDensityKgM3).toBeCloseTo(745, 1);
+	expect(full.tankM3).toBeCloseTo(0.0757082, 7);
 	expect(full.wheelbaseM).toBeCloseTo(2.794, 12);
 	expect(full.engines[0]).toMatchObject({correctedTo: 'J607', limiter: 9300, pullRpm: 4500, bandShare: 0.95});
 	expect(full.engines[0]!.curve[0]!.torqueNm).toBeCloseTo(405 * 1.3558179483314, 9);

@@ -27,6 +27,7 @@ test('a full track is read to SI', async () => {
 	const full = await track({
 		$schema: './track.schema.json',
 		lap: '0.6 mi',
+		laps: 300,
 		air: {temperature: '75 degF', pressure: '28.9 inHg', humidity: '40 %'},
 		wind: {speed: '10 m/s', from: '270 deg'},
 		pitRoad: {limit: '40 mph', tolerance: '5 mph', gear: 2},
@@ -59,6 +60,7 @@ test('a full track is read to SI', async () => {
 		},
 	});
 	expect(full.lapM).toBeCloseTo(965.6064, 9);
+	expect(full.laps).toBe(300);
 	expect(full.air?.temperatureC).toBeCloseTo((75 - 32) / 1.8, 12);
 	expect(full.air?.pressurePa).toBeCloseTo(28.9 * 3386.389, 1);
 	expect(full.air?.humidity).toBe(0.4);

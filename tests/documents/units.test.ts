@@ -31,9 +31,20 @@ test.each<[number, string, Dimension, number]>([
 	[760, 'mmHg', 'pressure', 101325.0144354],
 	[1013.25, 'hPa', 'pressure', 101325],
 	[180, 'deg', 'angle', Math.PI],
+	[1, 'gal', 'volume', 3.785411784e-3],
+	[4, 'qt', 'volume', 3.785411784e-3],
+	[0.745, 'kg/L', 'density', 745],
+	[3600, 'kg/kWh', 'consumption', 1e-3],
+	[270, 'g/kWh', 'consumption', 75e-9],
 	[1.5, '%', 'share', 0.015],
 ])('%d %s of %s is %d in SI', (number, spelling, dimension, wanted) => {
 	expectRelative(si(number, spelling, dimension), wanted, 1e-14);
+});
+
+test('a fuel of 0.745 kg/L weighs 6.2173 lb/gal, and 270 g/kWh are 0.4439 lb/(hp h)', () => {
+	// Recomputed.
+	expectRelative(si(6.2173, 'lb/gal', 'density'), 745, 1e-5);
+	expectRelative(si(0.4439, 'lb/(hp h)', 'consumption'), si(270, 'g/kWh', 'consumption'), 1e-4);
 });
 
 test('an inch of mercury is the conventional 3386.389 Pa', () => {
@@ -80,6 +91,9 @@ describe('the table agrees with mathjs', () => {
 		force: 'N',
 		inertia: 'kg m^2',
 		power: 'W',
+		volume: 'm^3',
+		density: 'kg/m^3',
+		consumption: 'kg/J',
 	};
 	const cases = (Object.entries(siNames) as [Dimension, string][]).flatMap(([dimension, siName]) =>
 		unitNames(dimension).map(name => [name, dimension, siName] as const),
@@ -112,6 +126,10 @@ test.each([
 	['lbf in s^2', 'inertia'],
 	['lb ft^2', 'inertia'],
 	['kph', 'speed'],
+	['lb / (hp·h)', 'consumption'],
+	['lb/hp-h', 'consumption'],
+	['g/(kW h)', 'consumption'],
+	['gallons', 'volume'],
 	['°', 'angle'],
 	['mbar', 'pressure'],
 ] as const)('%s is read as a unit of %s', (spelling, dimension) => {

@@ -29,6 +29,7 @@ export const engine = (change: Partial<Engine> = {}): Engine => ({
 	limiter: undefined,
 	pullRpm: 4000,
 	bandShare: 0.9,
+	fuelConsumptionKgPerJ: 0.3 / 3.6e6,
 	curve: [
 		{rpm: 4000, torqueNm: 550},
 		{rpm: 5000, torqueNm: 585},
@@ -63,6 +64,8 @@ export const car = (change: Partial<Car> = {}): Car => ({
 	],
 	finalDrive: 3.25,
 	efficiencies: 0.92,
+	fuelDensityKgM3: 745,
+	tankM3: undefined,
 	tires: {
 		leftM: 86.4 * inch,
 		rightM: 86.6 * inch,
@@ -130,6 +133,7 @@ export const track = (change: Partial<Track> = {}): Track => ({
 	name: 'Test oval',
 	type: 'short',
 	lapM: undefined,
+	laps: undefined,
 	air: undefined,
 	wind: undefined,
 	pitRoad: {limitMps: 40 * mph, toleranceMps: 5 * mph, gear: undefined},

@@ -1,6 +1,7 @@
 /** Everything that the README's table compares, in its order. */
 import {dayAndEngine} from './checks/air.ts';
 import {curve} from './checks/curve.ts';
+import {fuel} from './checks/fuel.ts';
 import {gearing} from './checks/gearing.ts';
 import {integrator} from './checks/integrator.ts';
 import {motion} from './checks/motion.ts';
@@ -13,5 +14,6 @@ export const outsideChecks: readonly OutsideCheck[] = [
 	...dayAndEngine,
 	...curve,
 	...motion,
+	...fuel,
 	...integrator,
 ];

@@ -39,6 +39,7 @@ export const everywhereKeys = [
 	{scope: 'everywhere', keys: ['e'], does: 'edit', words: 'change the track or the car', short: 'edit', rank: 4},
 	{scope: 'everywhere', keys: ['t'], does: 'choose', words: 'choose a track or a car', short: 'track', rank: 4},
 	{scope: 'everywhere', keys: ['g'], does: 'pictures', words: 'look at pictures', short: 'pictures', rank: 4},
+	{scope: 'everywhere', keys: ['f'], does: 'life', words: 'engine life and fuel of this row', short: 'life', rank: 6},
 	{scope: 'everywhere', keys: ['w'], does: 'why', words: 'see why'},
 	{scope: 'everywhere', keys: ['r', 'escape'], does: 'ranking', words: 'the ranking; Esc also stops ranking'},
 	{

@@ -4,6 +4,7 @@ import type {AnyBinding} from './binding.ts';
 import {everywhereKeys} from './everywhere-keys.ts';
 import {formKeys} from './form-keys.ts';
 import {keepingKeys} from './keeping-keys.ts';
+import {lifeKeys} from './life-keys.ts';
 import {lookingKeys} from './looking-keys.ts';
 import type {Scope} from './scopes.ts';
 import {sessionKeys} from './session-keys.ts';
@@ -11,6 +12,7 @@ import {sharingKeys} from './sharing-keys.ts';
 
 export const bindings = [
 	...lookingKeys,
+	...lifeKeys,
 	...formKeys,
 	...sharingKeys,
 	...keepingKeys,

@@ -3,6 +3,7 @@ export const scopes = {
 	ranking: 'In the ranking',
 	why: 'In the reasons',
 	pictures: 'In the pictures',
+	life: 'In engine life and fuel',
 	edit: 'In the form',
 	choose: 'Choosing a track or a car',
 	'hand over': 'Handing over',

@@ -91,6 +91,8 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 			return {do: 'situate', situation: next([undefined, ...scene.situations], session.situation, -1)};
 		case 'why':
 			return {do: 'go', place: {at: 'why', scroll: 0}};
+		case 'life':
+			return {do: 'go', place: {at: 'life', scroll: 0}};
 		case 'ranking':
 			return place.at === 'ranking' ? (scene.isWorking ? 'stop' : undefined) : {do: 'go', place: {at: 'ranking'}};
 		case 'pictures':

@@ -22,6 +22,7 @@ export type FieldPlace = {readonly section: number; readonly row: number; readon
 export type Place =
 	| {readonly at: 'ranking'}
 	| {readonly at: 'why'; readonly scroll: number}
+	| {readonly at: 'life'; readonly scroll: number}
 	| {readonly at: 'pictures'; readonly picture: Picture; readonly straight: number}
 	| ({readonly at: 'edit'; readonly kind: Kind; readonly editing: Editing | undefined} & FieldPlace)
 	| {readonly at: 'choose'; readonly kind: Kind; readonly search: EditLine; readonly cursor: number}

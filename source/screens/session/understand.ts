@@ -31,6 +31,9 @@ const told: Record<UnitSystem, Partial<Record<Dimension, string>>> = {
 		force: 'lbf',
 		inertia: 'lb ft^2',
 		power: 'hp',
+		volume: 'gal',
+		density: 'lb/gal',
+		consumption: 'lb/(hp h)',
 		share: '%',
 	},
 	metric: {
@@ -47,6 +50,9 @@ const told: Record<UnitSystem, Partial<Record<Dimension, string>>> = {
 		force: 'N',
 		inertia: 'kg m^2',
 		power: 'kW',
+		volume: 'L',
+		density: 'kg/L',
+		consumption: 'kg/kWh',
 		share: '%',
 	},
 };

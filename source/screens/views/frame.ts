@@ -17,6 +17,7 @@ import {handOverView, qrLines} from './hand-over-view.ts';
 import {headerView, settingOf} from './header-view.ts';
 import {helpView} from './help-view.ts';
 import {keyLines} from './key-line.ts';
+import {lifeHalves, lifePlaceView} from './life-place-view.ts';
 import {noticeLines} from './notice-view.ts';
 import {pictureView} from './picture-view.ts';
 import {type RankingTable, rankingTable} from './ranking-view.ts';
@@ -103,6 +104,7 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 			line('No row passes the filter. h shows failing rows, b all sets, n with nothing typed any margin.', 'muted'),
 		]);
 	if (session.place.at === 'why') return plain(whyLines(state, here, session.place.scroll, width, body));
+	if (session.place.at === 'life') return plain(lifeLines(state, here, session.place.scroll, width, body));
 	if (session.place.at === 'pictures') return plain(pictureLines(state, here, size, body));
 	return ranking(state, here, cursor, size, previousStart, {head, foot, body});
 }
@@ -162,6 +164,26 @@ function whyLines(state: State, here: Placed, scroll: number, width: number, bod
 	if (width < wide) return scrolled(whyView(whyOf(state, here), width), scroll, body);
 	const half = Math.floor((width - 3) / 2);
 	const [left, right] = whyHalves(whyOf(state, here), half, width - 3 - half);
+	return beside(
+		scrolled(left, Math.min(scroll, Math.max(0, left.length - body)), body),
+		half,
+		scrolled(right, scroll, body),
+		'│',
+	);
+}
+
+function lifeLines({session, scene}: State, here: Placed, scroll: number, width: number, body: number): Pieces[] {
+	if (scene.ranked === undefined) return reasonView(here.row, width);
+	const given = {
+		ranked: scene.ranked,
+		row: here.row,
+		compared: scene.all.find(({name}) => name === session.comparison)?.row,
+		situation: session.situation,
+		units: unitsOf(session.units),
+	};
+	if (width < wide) return scrolled(lifePlaceView(given, width), scroll, body);
+	const half = Math.floor((width - 3) / 2);
+	const [left, right] = lifeHalves(given, half, width - 3 - half);
 	return beside(
 		scrolled(left, Math.min(scroll, Math.max(0, left.length - body)), body),
 		half,

@@ -27,6 +27,15 @@ test('a number alone gets the unit that stood there, else the one that is read',
 	expect(us('120', speed)).toMatchObject({value: '120 mph'});
 });
 
+test('fuel is told in gallons and pounds, or in liters and kilograms', () => {
+	const [tank, consumption] = (['volume', 'consumption'] as const).map(
+		(dimension): FieldKind => ({is: 'quantity', dimensions: [dimension], change: false}),
+	);
+	expect(us('75 L', tank!)).toMatchObject({words: '75 L = 19.813 gal'});
+	expect(us('20', tank!)).toMatchObject({value: '20 gal'});
+	expect(us('0.3 kg/kWh', consumption!)).toMatchObject({words: '0.3 kg/kWh = 0.4932 lb/(hp h)'});
+});
+
 test('a change says what it does', () => {
 	expect(us('+2 mph', speedChange)).toMatchObject({value: '+2 mph', words: 'adds: 2 mph'});
 	expect(us('-3 %', speedChange)).toMatchObject({value: '-3 %', words: 'times 0.9700: -3 %'});

@@ -30,6 +30,8 @@ const places: Record<string, Partial<Session>> = {
 	comparing: {comparison: '36/36 A'},
 	why: {place: {at: 'why', scroll: 0}},
 	'why, compared': {place: {at: 'why', scroll: 8}, comparison: '36/36 A'},
+	life: {place: {at: 'life', scroll: 0}},
+	'life, compared': {place: {at: 'life', scroll: 8}, comparison: '36/36 A'},
 	'picture of RPM': {place: {at: 'pictures', picture: 'rpm', straight: 0}},
 	'picture of thrust': {place: {at: 'pictures', picture: 'thrust', straight: 0}},
 	'picture of speed': {place: {at: 'pictures', picture: 'speed', straight: 1}, comparison: '34/37 A'},
