@@ -9,6 +9,7 @@ export const completeTrack = () =>
 	trackDocument({
 		$schema: './track.json',
 		lap: '0.6 mi',
+		laps: 300,
 		air,
 		wind,
 		gears: [1, 2, 3, 4, 5],
@@ -63,13 +64,24 @@ export const completeTrack = () =>
 export const completeCar = () =>
 	carDocument({
 		$schema: './car.json',
+		fuelDensity: '0.745 kg/L',
+		tank: '18 gal',
 		rearDownforceShare: 0.55,
 		undrivenInertia: '2 kg m^2',
 		wheelbase: '110 in',
 		cgHeight: '18 in',
 		shiftTime: '0.08 s',
 		reactionTime: '0.25 s',
-		engines: [engine({for: ['short', 'road'], correctedTo: 'J1349', limiter: 9300, pullRpm: 4000, bandShare: 0.9})],
+		engines: [
+			engine({
+				for: ['short', 'road'],
+				correctedTo: 'J1349',
+				limiter: 9300,
+				pullRpm: 4000,
+				bandShare: 0.9,
+				fuelConsumption: '0.28 kg/(kW h)',
+			}),
+		],
 		efficiency: undefined,
 		efficiencies: [0.9, 0.91, 0.92, 0.93, 0.94],
 		tires: {left: '86.4 in', right: '86.6 in', growth: '0.8 %', slip: '1.5 %', steadySlip: '0 %'},

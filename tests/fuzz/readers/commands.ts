@@ -33,14 +33,14 @@ function isKeptHere(words: readonly string[]): boolean {
 	if (line.kind !== 'run') return true;
 	if (line.request.copy || ['export', 'import'].includes(line.command?.name ?? '')) return false;
 	return (
-		words.every(word => !/[\\/]|\.json|\.txt|\0/i.test(word) || /^\d+\/\d+$/.test(word)) &&
+		words.every(word => !/[\\/]|\.[a-z]\w{0,4}$|\0/i.test(word) || /^\d+\/\d+$/.test(word)) &&
 		line.command?.name !== 'read'
 	);
 }
 
 async function read(text: string): Promise<Answer> {
 	const [first = '', ...rest] = text.split('\n');
-	const words = first.split(' ').filter(word => word !== '');
+	const words = [...first.matchAll(/"([^"]*)"|\S+/g)].map(([word, quoted]) => quoted ?? word);
 	const isReading = words[0] === 'read' && words[1] === '-' && !words.includes('--copy');
 	if (!isReading && !isKeptHere(words)) return {accepted: true};
 	const reply = await answer(words, around(Buffer.from(rest.join('\n'), 'latin1')));
@@ -60,11 +60,30 @@ async function read(text: string): Promise<Answer> {
 
 const inBytes = (text: string) => Buffer.from(text).toString('latin1');
 
+/** The examples of every command's help, of a track that is there; without those that need more than one line. */
+async function fromHelp(): Promise<string[]> {
+	const lines = commands.flatMap(({examples}) => examples.map(({line}) => line));
+	const asked = lines.map(line =>
+		line
+			.replace(/^droprack /, '')
+			.replace(/ [>|].*/, '')
+			.replaceAll(/\S+\.json/g, 'quillmere')
+			.replaceAll(/--pair \S+/g, ''),
+	);
+	const accepted: string[] = [];
+	for (const line of asked) {
+		const answer = await read(line);
+		if (answer.accepted && answer.said !== undefined) accepted.push(line);
+	}
+	return accepted;
+}
+
 export const commandLines: Reader = {
 	name: 'commands',
 	examples: async () => {
 		const [planText, , line] = await plans.examples();
 		return [
+			...(await fromHelp()),
 			'rank quillmere --top 3',
 			'rpm tarrowdale --gearbox A --units metric --json',
 			'run Quillmere --ascii --strict --car demo',
