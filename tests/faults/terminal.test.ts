@@ -131,16 +131,21 @@ describe('signals at any moment', () => {
 	});
 });
 
-test('a storm of resizes ends in one whole frame of the last size', async () => {
+test('a storm of resizes, while it starts, runs and leaves, ends in one whole frame of the last size', async () => {
 	const pty = open();
+	const storm = () => {
+		for (let i = 0; i < 300; i++) pty.resize({columns: 20 + ((i * 37) % 180), rows: 3 + ((i * 11) % 50)});
+		pty.resize({columns: 100, rows: 30});
+	};
+	storm();
 	await pty.waitFor(ranked);
-	for (let i = 0; i < 300; i++) pty.resize({columns: 20 + ((i * 37) % 180), rows: 3 + ((i * 11) % 50)});
-	pty.resize({columns: 100, rows: 30});
+	storm();
 	await pty.waitFor(ranked);
 	pty.press(down);
 	await pty.waitFor(/▸ +2 /);
 	expect(pty.lines().filter(line => line.includes('10 rows'))).toHaveLength(1);
 	pty.press('q');
+	storm();
 	expect(await pty.ended()).toMatchObject({exitCode: 0});
 	expectGivenBack(pty);
 });

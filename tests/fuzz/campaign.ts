@@ -50,10 +50,8 @@ export class Campaign {
 	}
 
 	/** Some texts more. */
-	async batch(): Promise<void> {
-		const texts = Array.from({length: batchSize}, () =>
-			mutated(this.#choice(), this.reader, this.#random, this.corpus),
-		);
+	async batch(size = batchSize): Promise<void> {
+		const texts = Array.from({length: size}, () => mutated(this.#choice(), this.reader, this.#random, this.corpus));
 		for (const text of texts) await this.#give(text);
 		const {work, fresh} = this.#coverage.take();
 		const least = Math.min(...texts.map(text => this.#mostWork(text)));
@@ -62,10 +60,11 @@ export class Campaign {
 		this.#coverage.keep(fresh);
 	}
 
-	/** So many texts, or fewer where something is found. */
+	/** So many texts beside the examples, or fewer where something is found. */
 	async run(executions: number): Promise<void> {
 		await this.start();
-		while (this.executions < executions && this.findings.length === 0) await this.batch();
+		for (let left = executions; left > 0 && this.findings.length === 0; left -= batchSize)
+			await this.batch(Math.min(left, batchSize));
 	}
 
 	/** Lately kept ones more often: they are at the edge of what was reached. */
