@@ -51,6 +51,7 @@ async function openOnScreen(opening: Opening): Promise<void> {
 			return where === undefined ? '' : `The unsaved session is in ${where}; the next start offers it.\n`;
 		},
 	});
+	process.on('SIGWINCH', () => screen.windowChanged());
 	const outside = {
 		leave: () => unmount(),
 		suspend: () => terminal.suspend(),
