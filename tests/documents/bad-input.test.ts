@@ -232,6 +232,14 @@ test('every problem is listed at once, in the order of the text, with line and c
 	);
 });
 
+test('a list of gears with something else in it is shown as it can be read', async () => {
+	const problems = await problemsOfTrack({gears: [3, 2, [{}]]});
+	expect(problems.map(({path, found}) => [path, found])).toEqual([
+		['gears', '[3, 2, a list of 1]'],
+		['gears[2]', 'a list of 1'],
+	]);
+});
+
 test('a gearbox whose name cannot be read is named by its place', async () => {
 	const gearboxes = [{name: {}, ratios: [2, 1]}];
 	const problems = await problemsOfCar({gearboxes, efficiency: undefined, efficiencies: [0.9]});

@@ -45,6 +45,6 @@ export const fields: Reader = {
 	examples: async () => [...(await quantities.examples()), 'yes', 'no', 'inter', '1, 2; 3', 'Back stretch', '33/38'],
 	words: quantities.words,
 	longest: 400,
-	work: {start: 100_000, perCharacter: 2000},
+	work: {start: 200_000, perCharacter: 6000},
 	read,
 };
