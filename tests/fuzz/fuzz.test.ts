@@ -4,10 +4,14 @@ import {afterAll, expect, test} from 'vitest';
 import {runs} from '../runs.ts';
 import {Campaign} from './campaign.ts';
 import {Coverage} from './coverage.ts';
+import {removePlaces} from './place.ts';
 import {readers} from './readers.ts';
 
 const coverage = new Coverage();
-afterAll(() => coverage.stop());
+afterAll(() => {
+	coverage.stop();
+	removePlaces();
+});
 
 /** Of those that take longer for a text, fewer. */
 const slow = new Set(['rankings', 'plans', 'commands', 'screen', 'opened']);

@@ -1,7 +1,6 @@
 /** The first line is the words of the command line, the rest standard input, in bytes. */
-import {mkdtempSync, rmSync} from 'node:fs';
-import {tmpdir} from 'node:os';
-import {join, resolve} from 'node:path';
+import {rmSync} from 'node:fs';
+import {resolve} from 'node:path';
 import {pathToFileURL} from 'node:url';
 import {readCommandLine} from '../../../source/commands/arguments.ts';
 import {commands} from '../../../source/commands/command-table.ts';
@@ -10,12 +9,12 @@ import {options} from '../../../source/commands/options.ts';
 import {status} from '../../../source/commands/reply.ts';
 import type {Surroundings} from '../../../source/commands/surroundings.ts';
 import {full} from '../../runs.ts';
+import {newPlace} from '../place.ts';
 import type {Answer, Reader} from '../reader.ts';
 import {fixtureText, tracks} from './documents.ts';
 import {plans} from './plans.ts';
 
-const home = mkdtempSync(join(tmpdir(), 'droprack-fuzz-'));
-process.on('exit', () => rmSync(home, {recursive: true, force: true}));
+const home = newPlace();
 
 const around = (input: Buffer): Surroundings => ({
 	shipped: pathToFileURL(`${resolve('tracks')}/`),
@@ -28,22 +27,23 @@ const around = (input: Buffer): Surroundings => ({
 	},
 });
 
-/** Nothing but the home may be touched, and nothing of the fuzzed text be copied to whoever looks at this terminal. */
-function isKeptHere(words: readonly string[]): boolean {
+/** Commands whose argument is a path, whatever it looks like. */
+const takesPath = new Set(['export', 'import', 'read']);
+const looksLikePath = (word: string) => /[\\/]|\.[a-z]\w{0,4}$|\0/i.test(word) && !/^\d+\/\d+$/.test(word);
+
+/** Nothing but the home may be touched, and nothing be copied to the clipboard of whoever looks on. */
+function staysHere(words: readonly string[]): boolean {
 	const line = readCommandLine(words);
 	if (line.kind !== 'run') return true;
-	if (line.request.copy || ['export', 'import'].includes(line.command?.name ?? '')) return false;
-	return (
-		words.every(word => !/[\\/]|\.[a-z]\w{0,4}$|\0/i.test(word) || /^\d+\/\d+$/.test(word)) &&
-		line.command?.name !== 'read'
-	);
+	const {command, request} = line;
+	if (request.copy || words.some(looksLikePath)) return false;
+	return !takesPath.has(command?.name ?? '') || (command?.name === 'read' && request.argument === '-');
 }
 
 async function read(text: string): Promise<Answer> {
 	const [first = '', ...rest] = text.split('\n');
 	const words = [...first.matchAll(/"([^"]*)"|\S+/g)].map(([word, quoted]) => quoted ?? word);
-	const isReading = words[0] === 'read' && words[1] === '-' && !words.includes('--copy');
-	if (!isReading && !isKeptHere(words)) return {accepted: true};
+	if (!staysHere(words)) return {accepted: true};
 	const reply = await answer(words, around(Buffer.from(rest.join('\n'), 'latin1')));
 	rmSync(home, {recursive: true, force: true});
 	const isKnown = Object.values(status).includes(reply.status) && reply.status !== status.fault;

@@ -1,6 +1,5 @@
 /** Files of the store as anybody may have changed them. The first line says which; the rest are the bytes. */
-import {mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync} from 'node:fs';
-import {tmpdir} from 'node:os';
+import {mkdirSync, readFileSync, rmSync, writeFileSync} from 'node:fs';
 import {dirname, join} from 'node:path';
 import {isDeepStrictEqual} from 'node:util';
 import {restored} from '../../../source/screens/session/restore.ts';
@@ -12,10 +11,10 @@ import {processIdentity} from '../../../source/store/process-identity.ts';
 import {type Kept, readKept} from '../../../source/store/read-kept.ts';
 import {sessionFolder, unsavedSessions} from '../../../source/store/session.ts';
 import {documents} from '../../screens/session/documents.ts';
+import {newPlace} from '../place.ts';
 import type {Answer, Reader} from '../reader.ts';
 
-const home = mkdtempSync(join(tmpdir(), 'droprack-fuzz-'));
-process.on('exit', () => rmSync(home, {recursive: true, force: true}));
+const home = newPlace();
 
 const folders = {preset: 'tracks', 'saved-car': 'cars', history: 'history'} as const;
 const endedProcess = processIdentity().replace(/^\d+/, '4194305');
