@@ -16,15 +16,16 @@ const bytesPerMegabyte = 1_000_000;
 const wrongName: Readonly<Record<string, string>> = {
 	ENOENT: 'there is no such file',
 	ENOTDIR: 'there is no such file: a part of its path is not a directory',
-	EISDIR: 'is a directory; a document is one file',
+	EISDIR: 'is a directory; WHAT is one file',
 	ELOOP: 'is a link to itself',
 	ENAMETOOLONG: 'the name is too long',
 };
 
-const refusalOf = (label: string, error: unknown): Refusal => {
+/** Why it cannot be read, from what the system threw. */
+export const refusalOf = (label: string, error: unknown, what = 'a document'): Refusal => {
 	const code = (error as NodeJS.ErrnoException).code ?? '';
 	const known = wrongName[code];
-	if (known) return badInput(`${label}: ${known}.`);
+	if (known) return badInput(`${label}: ${known.replace('WHAT', what)}.`);
 	if (code === 'EACCES' || code === 'EPERM') return unreachable(`${label}: no permission to read it.`);
 	return unreachable(`${label}: cannot be read (${code || String(error)}).`);
 };

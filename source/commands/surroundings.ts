@@ -1,4 +1,5 @@
 /** The outer world as the commands see it, so that a test can stand in for it. */
+import type {ProgressTerminal} from './progress-line.ts';
 
 export type Surroundings = {
 	/** The directory of the shipped tracks; the shipped cars are in `cars/` below it. */
@@ -11,6 +12,8 @@ export type Surroundings = {
 	rows?: number | undefined;
 	color: boolean;
 	standardInput: () => AsyncIterable<Uint8Array>;
+	/** Where a long reading says how far it is; undefined where no terminal looks on. */
+	progress?: () => ProgressTerminal | undefined;
 };
 
 const columnsThroughPipe = 80;
@@ -27,6 +30,14 @@ export const wantsColor = (environment: Surroundings['environment'], isTerminal:
 export const canDraw = (environment: Surroundings['environment'], isTerminal: boolean): boolean =>
 	isTerminal && environment.TERM !== 'dumb';
 
+const progressOn = (
+	stream: NodeJS.WriteStream,
+	environment: Surroundings['environment'],
+): ProgressTerminal | undefined =>
+	stream.isTTY === true && environment.TERM !== 'dumb'
+		? {write: text => void stream.write(text), columns: stream.columns || columnsThroughPipe}
+		: undefined;
+
 export const processSurroundings = (shipped: URL): Surroundings => ({
 	shipped,
 	environment: process.env,
@@ -35,4 +46,6 @@ export const processSurroundings = (shipped: URL): Surroundings => ({
 	rows: process.stdout.rows,
 	color: wantsColor(process.env, process.stdout.isTTY === true),
 	standardInput: () => process.stdin,
+	// A stream is made when it is first asked for, and few commands read for long.
+	progress: () => progressOn(process.stderr, process.env),
 });

@@ -1,6 +1,7 @@
 /** All benchmarks: correctness first, then times; ends with 1 where a budget is missed. Another seed may be given. */
 import {Figures} from './budgets.ts';
 import {line, machine} from './harness.ts';
+import {benchLogs} from './logs.ts';
 import {benchOneStraight} from './one-straight.ts';
 import {benchProcesses} from './processes.ts';
 import {benchGrowth, benchRack} from './rack.ts';
@@ -21,6 +22,8 @@ line();
 benchProcesses(figures);
 line();
 await benchScreen(process.cwd(), figures);
+line();
+benchLogs(figures, seed);
 line();
 if (!figures.conclude()) process.exitCode = 1;
 if (words.includes('--write-readme')) writeReadme(figures.measured);

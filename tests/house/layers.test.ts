@@ -42,6 +42,7 @@ const outside: Record<string, readonly string[]> = {
 	'ink-table': ['screens'],
 	conf: ['store'],
 	mathjs: ['documents', 'practice', 'odds'],
+	'ml-matrix': ['practice'],
 	zod: ['documents', 'sharing'],
 };
 

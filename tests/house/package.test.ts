@@ -33,6 +33,8 @@ test('the package holds the program, the shipped documents and what must go with
 		'tracks/cars/demo.json',
 		'tracks/cullamere.json',
 		'tracks/hesper-ridge.json',
+		'tracks/logs/hesper-ridge.csv',
+		'tracks/logs/quillmere.csv',
 		'tracks/ostrand-flats.json',
 		'tracks/quillmere.json',
 		'tracks/schemas/car.json',
