@@ -14,7 +14,7 @@ afterAll(() => {
 });
 
 /** Of those that take longer for a text, fewer. */
-const slow = new Set(['rankings', 'plans', 'commands', 'screen', 'opened']);
+const slow = new Set(['rankings', 'plans', 'commands', 'screen', 'opened', 'practice']);
 
 test.each(readers.map(reader => [reader.name, reader] as const))('%s keep their promises', async (name, reader) => {
 	const campaign = new Campaign(reader, 1, coverage);

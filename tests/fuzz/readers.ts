@@ -5,7 +5,7 @@ import {cars, tracks} from './readers/documents.ts';
 import {expressions} from './readers/expressions.ts';
 import {fields} from './readers/fields.ts';
 import {keys} from './readers/keys.ts';
-import {logs} from './readers/logs.ts';
+import {logs, practice} from './readers/logs.ts';
 import {plans} from './readers/plans.ts';
 import {quantities} from './readers/quantities.ts';
 import {rankings} from './readers/rankings.ts';
@@ -20,6 +20,7 @@ export const readers: readonly Reader[] = [
 	rankings,
 	plans,
 	logs,
+	practice,
 	storeFiles,
 	commandLines,
 	keys,
