@@ -93,9 +93,9 @@ export const readCommandLine = (words: readonly string[]): CommandLine => {
 		given[token.name as OptionName] = token.value ?? true;
 	}
 	const following = [argument, ...more].filter(word => word !== undefined);
-	const surplus = following.slice(command?.second ? 2 : command?.argument ? 1 : 0);
+	const surplus = command?.many ? [] : following.slice(command?.second ? 2 : command?.argument ? 1 : 0);
 	if (command && surplus.length > 0) return bad(surplusWords(command, surplus));
-	const request = toRequest(argument, given, command?.second ? more[0] : undefined);
+	const request = toRequest(argument, given, command?.second ? more[0] : undefined, command?.many ? more : []);
 	return typeof request === 'string' ? bad(request) : {kind: 'run', command, request};
 };
 

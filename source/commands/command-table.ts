@@ -1,6 +1,7 @@
 /** Every command once: parsing, help and the messages about unknown ones are made from this table. */
 import type {Command} from './command.ts';
 import {lifeCommands} from './life-commands.ts';
+import {loadingCommands} from './loading-commands.ts';
 import {sharingCommands} from './sharing-commands.ts';
 import {storeCommands} from './store-commands.ts';
 
@@ -89,6 +90,7 @@ export const commands: readonly Command[] = [
 	...lifeCommands,
 	...storeCommands,
 	...sharingCommands,
+	...loadingCommands,
 ];
 
 /** The command of that name. */

@@ -13,6 +13,8 @@ export type Command = {
 	argument?: {name: string; summary: string};
 	/** The one after it, where there is one. */
 	second?: {name: string; summary: string};
+	/** Whether the argument may be given several times. */
+	many?: boolean;
 	options: readonly OptionName[];
 	examples: readonly {line: string; gives: string}[];
 	/** Loads what the command needs, and only that. */

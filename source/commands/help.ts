@@ -27,7 +27,7 @@ const optionRow = (name: OptionName): readonly [string, string] => {
 /** The help of one command. */
 export const commandHelp = (command: Command): string => {
 	const described = [command.argument, command.second].filter(one => one !== undefined);
-	const argument = described.map(({name}) => ` ${name}`).join('');
+	const argument = described.map(({name}) => ` ${name}${command.many ? '…' : ''}`).join('');
 	const parts = [
 		`droprack ${command.name}${argument} [options]`,
 		'',
@@ -46,8 +46,11 @@ export const commandHelp = (command: Command): string => {
 /** The help of the whole program. */
 export const topHelp = (): string => {
 	const rows = commands.map(
-		({name, argument, second, summary}) =>
-			[[name, argument?.name, second?.name].filter(Boolean).join(' '), summary] as const,
+		({name, argument, second, many, summary}) =>
+			[
+				[name, argument && `${argument.name}${many ? '…' : ''}`, second?.name].filter(Boolean).join(' '),
+				summary,
+			] as const,
 	);
 	const parts = [
 		'droprack ranks the drop gears on the rack for a stock car at a track.',

@@ -41,7 +41,11 @@ export const loadDocuments = async (request: Request, around: Surroundings): Pro
 type CarChoice = {car: string; notes: string[]; reasons: string[]};
 
 /** The car asked for, else the one saved with the track, else the preferred one, else the demo car. */
-const chooseCar = (request: Request, savedWithTrack: string | undefined, around: Surroundings): CarChoice => {
+export const chooseCar = (
+	request: Pick<Request, 'car'>,
+	savedWithTrack: string | undefined,
+	around: Surroundings,
+): CarChoice => {
 	if (request.car !== undefined) return {car: request.car, notes: [], reasons: []};
 	if (savedWithTrack !== undefined) {
 		const reason = 'The car is the one that was saved with the track; --car names another.';

@@ -15,7 +15,10 @@ export const options = {
 		value: 'PAIR',
 		summary: 'driving/driven teeth, such as 33/38; rpm, run, life and fuel take the installed pair unless given',
 	},
-	gearbox: {value: 'SET', summary: 'the gearbox set; rpm, run, life and fuel take the installed one unless given'},
+	gearbox: {
+		value: 'SET',
+		summary: 'the gearbox set; rpm, run, life and fuel take the installed one unless given, load any',
+	},
 	prefer: {value: 'NAME', summary: 'take this car where none is named; "none" clears it'},
 	name: {value: 'NAME', summary: 'the name of the new document'},
 	from: {value: 'DOCUMENT', summary: 'begin with a copy of this: a file, or the name of a saved or shipped one'},
@@ -32,6 +35,15 @@ export const options = {
 	qr: {summary: 'draw it as a QR code; with --short the one line'},
 	take: {summary: "keep the plan's track, with its pair, set and notes, once it is compared"},
 	copy: {summary: "send it to the terminal's clipboard too"},
+	shorter: {value: 'N', summary: 'steps shorter than the best pair to carry; 1 unless given'},
+	taller: {value: 'N', summary: 'steps taller than the best pair to carry; 1 unless given'},
+	within: {
+		value: 'SECONDS',
+		summary: "a pair this close to the best in lap time stands for it; the car's margin level unless given",
+	},
+	step: {value: 'PERCENT', summary: 'pairs this close in ratio are no step apart; 0.5 unless given'},
+	'each-set': {summary: 'every gearbox set needs its pairs, not only the best set of a track'},
+	together: {summary: 'one set for all the tracks'},
 	against: {
 		value: 'PAIR',
 		summary: 'the pair to compare with, in the same set; unless given the installed one, or the best',

@@ -8,6 +8,8 @@ export type Request = {
 	argument: string | undefined;
 	/** The argument after it. */
 	second?: string;
+	/** The arguments after it, where a command takes any number. */
+	more?: string[];
 	car?: string;
 	situation?: string;
 	top?: number;
@@ -29,6 +31,13 @@ export type Request = {
 	short?: boolean;
 	qr?: boolean;
 	copy?: boolean;
+	shorter?: number;
+	taller?: number;
+	withinS?: number;
+	/** A fraction of 1. */
+	stepRatio?: number;
+	eachSet?: boolean;
+	together?: boolean;
 	against?: {driving: number; driven: number};
 	above?: number;
 	laps?: number;
@@ -69,16 +78,24 @@ const switchesOf = (given: Given) => ({
 	...(given.short && {short: true}),
 	...(given.qr && {qr: true}),
 	...(given.copy && {copy: true}),
+	...(given['each-set'] && {eachSet: true}),
+	...(given.together && {together: true}),
 });
 
 /** The request that the options make, or what is wrong with a value. */
-export const toRequest = (argument: string | undefined, given: Given, second?: string): Request | string => {
+export const toRequest = (
+	argument: string | undefined,
+	given: Given,
+	second?: string,
+	more: readonly string[] = [],
+): Request | string => {
 	const request: Request = {
 		argument,
 		units: 'us',
 		...switchesOf(given),
 		...Object.fromEntries(texts.flatMap(name => (typeof given[name] === 'string' ? [[name, given[name]]] : []))),
 		...(second !== undefined && {second}),
+		...(more.length > 0 && {more: [...more]}),
 	};
 	if (given.units === 'metric') request.units = 'metric';
 	else if (given.units !== undefined && given.units !== 'us') return `--units is us or metric, found ${given.units}.`;
@@ -104,10 +121,13 @@ export const toRequest = (argument: string | undefined, given: Given, second?: s
 			return `--laps is a whole number from 1 to 10000, found ${given.laps}.`;
 		request.laps = Number(given.laps);
 	}
+	const steps = readSteps(given);
+	if (typeof steps === 'string') return steps;
+	Object.assign(request, steps);
 	if (request.date !== undefined && !isDay(request.date))
 		return `--date is a day such as 2026-05-31, found ${request.date}.`;
-	if ([argument, second, request.car].filter(word => word === '-').length > 1)
-		return second === undefined
+	if ([argument, second, ...more, request.car].filter(word => word === '-').length > 1)
+		return second === undefined && more.length === 0
 			? 'only one of TRACK and --car can be standard input.'
 			: 'only one document can be standard input.';
 	return request;
@@ -116,3 +136,34 @@ export const toRequest = (argument: string | undefined, given: Given, second?: s
 /** A day of the calendar, written as in ISO 8601. */
 const isDay = (text: string): boolean =>
 	/^\d{4}-\d\d-\d\d$/.test(text) && new Date(`${text}T00:00:00Z`).toJSON()?.startsWith(text) === true;
+
+/** More steps than that are the whole rack. */
+const mostSteps = 5;
+const mostWithinS = 10;
+const mostStepPercent = 20;
+
+/** What a step is, how many of them, and what stands for the best. */
+const readSteps = (given: Given): Partial<Request> | string => {
+	const read: Partial<Request> = {};
+	for (const name of ['shorter', 'taller'] as const) {
+		const value = given[name];
+		if (typeof value !== 'string') continue;
+		if (!/^\d$/.test(value) || Number(value) > mostSteps)
+			return `--${name} is a whole number from 0 to ${mostSteps}, found ${value}.`;
+		read[name] = Number(value);
+	}
+	if (typeof given.within === 'string') {
+		const withinS = decimal(given.within.replace(/\s*s$/, ''), mostWithinS);
+		if (withinS === undefined) return `--within is seconds from 0 to ${mostWithinS}, found ${given.within}.`;
+		read.withinS = withinS;
+	}
+	if (typeof given.step === 'string') {
+		const percent = decimal(given.step.replace(/\s*%$/, ''), mostStepPercent);
+		if (percent === undefined) return `--step is per cent from 0 to ${mostStepPercent}, found ${given.step}.`;
+		read.stepRatio = percent / 100;
+	}
+	return read;
+};
+
+const decimal = (text: string, most: number): number | undefined =>
+	/^(\d{1,3}(\.\d{0,9})?|\.\d{1,9})$/.test(text) && Number(text) <= most ? Number(text) : undefined;

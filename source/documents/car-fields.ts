@@ -1,7 +1,7 @@
 /** The fields of a car document: what reads it, and what its JSON Schema is made from. */
 import * as z from 'zod/mini';
 import {type CorrectedTo, trackTypes} from '../drivetrain/car.ts';
-import {carRules, curveRules, efficiencyRules, engineRules, ratioRules} from './car-rules.ts';
+import {carRules, curveRules, efficiencyRules, engineRules, inventoryRules, ratioRules} from './car-rules.ts';
 import {choice, flag, group, list, name, number, quantity, type Range, wholeNumber} from './fields.ts';
 import * as shared from './shared-fields.ts';
 
@@ -20,6 +20,7 @@ const bounds = {
 	torqueNm: {from: 0, to: 10_000},
 	ratio: {above: 0, to: 30},
 	toothSum: {from: 2, to: 800},
+	step: {from: 1, to: 10},
 	sets: {from: 0, to: 1000},
 	consumptionKgPerJ: {above: 0, to: 1e-6},
 	fuelDensityKgM3: {from: 500, to: 1500},
@@ -29,7 +30,7 @@ const bounds = {
 } satisfies Record<string, Range>;
 
 /** Most that a list may hold: far more than any car has. */
-const most = {engines: 20, curve: 500, gearboxes: 200, toothSums: 200} as const;
+const most = {engines: 20, curve: 500, gearboxes: 200, spareGears: 120, fits: 20, toothSums: 200} as const;
 const leastCurvePoints = 3;
 
 const seconds = (unlessGiven: string, description: string) =>
@@ -91,6 +92,33 @@ const gearbox = () =>
 		},
 		'The ratios of all forward gears of one gearbox.',
 	);
+
+const spareGear = () =>
+	group(
+		{
+			gear: shared.gear('Which gear it serves as, counted from 1.'),
+			ratio: number(bounds.ratio, 'Its ratio.'),
+			pieces: z.prefault(wholeNumber(bounds.sets, 'Pieces on hand.'), 1),
+			fits: z.optional(
+				list(
+					name('A group of gears that go together, such as those of one layshaft.'),
+					[1, most.fits],
+					'Groups that it goes together with; with everything unless given.',
+				),
+			),
+		},
+		'A single gear.',
+	);
+
+const gearInventory = () =>
+	group(
+		{
+			gears: list(spareGear(), [1, most.spareGears], 'Single gears, at least one for every gear from 1 up.'),
+			smallestStep: z.optional(number(bounds.step, 'Least ratio of a gear to the next; more than 1 in any case.')),
+			largestStep: z.optional(number(bounds.step, 'Most ratio of a gear to the next; any unless given.')),
+		},
+		'What a gearbox may be built from. A set goes together where one group is among those of all its gears.',
+	).check(inventoryRules());
 
 const tires = () =>
 	group(
@@ -190,6 +218,7 @@ function buildCarFields() {
 			cgHeight: z.optional(quantity('length', bounds.cgHeightM, 'Height of the center of gravity; with "wheelbase".')),
 			engines: list(engine(), [1, most.engines], 'Engine builds.'),
 			gearboxes: list(gearbox(), [1, most.gearboxes], 'Gearbox sets.'),
+			gearInventory: z.optional(gearInventory()),
 			finalDrive: number(bounds.ratio, 'Ring teeth ÷ pinion teeth.'),
 			efficiency: z.optional(number(bounds.share, 'From engine to wheels, in every gear.')),
 			efficiencies: z.optional(

@@ -1,4 +1,4 @@
-import type {Car, Engine, Margins, Rack, Rules, Tires, TrackType} from '../drivetrain/car.ts';
+import type {Car, Engine, GearInventory, Margins, Rack, Rules, Tires, TrackType} from '../drivetrain/car.ts';
 import {mileM} from '../drivetrain/constants.ts';
 import type {CarDocument} from './car-fields.ts';
 
@@ -24,6 +24,7 @@ export function carFrom(document: CarDocument): Car {
 		cgHeightM: document.cgHeight,
 		engines: document.engines.map(engineFrom),
 		gearboxes: document.gearboxes,
+		gearInventory: inventoryFrom(document.gearInventory),
 		finalDrive: document.finalDrive,
 		efficiencies: document.efficiencies ?? document.efficiency!,
 		fuelDensityKgM3: document.fuelDensity,
@@ -40,6 +41,12 @@ function engineFrom(engine: CarDocument['engines'][number]): Engine {
 	const {inertia, limiter, fuelConsumption, curve, pullRpm = curve[0]!.rpm, ...same} = engine;
 	const points = curve.map(({rpm, torque}) => ({rpm, torqueNm: torque}));
 	return {...same, inertiaKgM2: inertia, limiter, pullRpm, fuelConsumptionKgPerJ: fuelConsumption, curve: points};
+}
+
+function inventoryFrom(inventory: CarDocument['gearInventory']): GearInventory | undefined {
+	if (inventory === undefined) return undefined;
+	const {gears, smallestStep = 1, largestStep = Number.POSITIVE_INFINITY} = inventory;
+	return {gears: gears.map(({fits, ...gear}) => ({...gear, fits})), smallestStep, largestStep};
 }
 
 function tiresFrom({left, right, growth, slip, steadySlip, diameter, size = diameter}: CarDocument['tires']): Tires {

@@ -32,14 +32,37 @@ export const ratioRules = () =>
 		}
 	});
 
+type InventoryValues = {
+	gears?: readonly {gear?: unknown}[];
+	smallestStep?: unknown;
+	largestStep?: unknown;
+};
+
+export const inventoryRules = () =>
+	rule<InventoryValues>(({gears, smallestStep, largestStep}, report) => {
+		if (typeof smallestStep === 'number' && typeof largestStep === 'number' && smallestStep > largestStep)
+			report(['largestStep'], `no less than the "smallestStep" ${smallestStep}`);
+		const places = new Set(listOf(gears).map(one => one?.gear));
+		const highest = Math.max(0, ...[...places].filter(place => typeof place === 'number'));
+		for (let gear = 1; gear < Math.min(highest, mostGears); gear++) {
+			if (places.has(gear)) continue;
+			report(['gears'], `a gear for every place up to ${highest}`, {found: `none for gear ${gear}`});
+			return;
+		}
+	});
+
+/** As the field allows: what is beyond is reported there. */
+const mostGears = 20;
+
 type EfficiencyValues = {
 	efficiency?: unknown;
 	efficiencies?: readonly unknown[] | undefined;
 	gearboxes?: readonly unknown[];
+	gearInventory?: InventoryValues | undefined;
 };
 
 export const efficiencyRules = () =>
-	rule<EfficiencyValues>(({efficiency, efficiencies, gearboxes}, report) => {
+	rule<EfficiencyValues>(({efficiency, efficiencies, gearboxes, gearInventory}, report) => {
 		if (efficiency === undefined && efficiencies === undefined)
 			report(['efficiency'], 'a share like 0.92, or "efficiencies", one a gear');
 		if (efficiencies === undefined) return;
@@ -51,6 +74,10 @@ export const efficiencyRules = () =>
 			const which = typeof gearbox.name === 'string' ? `"${gearbox.name}"` : `number ${i + 1}`;
 			report(['efficiencies'], `one for each of the ${ratios.length} gears of gearbox ${which}`);
 		}
+		const places = listOf(gearInventory?.gears).map(one => one?.gear);
+		const highest = Math.max(0, ...places.filter(place => typeof place === 'number'));
+		if (highest > 0 && highest !== efficiencies.length)
+			report(['efficiencies'], `one for each of the ${highest} gears of "gearInventory"`);
 	});
 
 type PairValues = {driving?: unknown; driven?: unknown};

@@ -61,6 +61,24 @@ export type Rack = {
 	readonly pairs: readonly RackPair[];
 };
 
+/** A single gear that may be built into a gearbox. */
+export type SpareGear = {
+	/** Its place in the gearbox, counted from 1. */
+	readonly gear: number;
+	readonly ratio: number;
+	readonly pieces: number;
+	/** What it goes together with, by the names of groups; undefined: with everything. */
+	readonly fits: readonly string[] | undefined;
+};
+
+/** What gearboxes may be built from. The largest and smallest ratio of a gear to the next bound what is built. */
+export type GearInventory = {
+	/** At least one for each place. */
+	readonly gears: readonly SpareGear[];
+	readonly smallestStep: number;
+	readonly largestStep: number;
+};
+
 export type Margins = {
 	readonly limitRpm: number;
 	readonly shiftRpm: number;
@@ -103,6 +121,8 @@ export type Car = {
 	readonly cgHeightM: number | undefined;
 	readonly engines: readonly Engine[];
 	readonly gearboxes: readonly Gearbox[];
+	/** Undefined: no gearbox is built from single gears. */
+	readonly gearInventory: GearInventory | undefined;
 	readonly finalDrive: number;
 	/** From engine to wheels: one number for every gear, or one a gear. */
 	readonly efficiencies: number | readonly number[];

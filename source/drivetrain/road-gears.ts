@@ -1,47 +1,42 @@
 /** The gears of a car on one kind of road: how it moves in each, and where it changes up. Made once, used by many runs. */
-import {type Coast, coast} from './coast.ts';
-import {type Road, type RoadForces, roadForces} from './forces.ts';
-import {GearMotion} from './gear-motion.ts';
-import {GearTable} from './gear-table.ts';
-import {mostMps2, peakTorqueNm} from './least-time.ts';
+import {coast} from './coast.ts';
+import type {Road, RoadForces} from './forces.ts';
+import type {GearMotion} from './gear-motion.ts';
+import {GearShelf} from './gear-shelf.ts';
+import type {GearTable} from './gear-table.ts';
+import {mostMps2} from './least-time.ts';
+import type {PlannedShift} from './planned-shift.ts';
 import {shiftSpeedMps} from './shift-point.ts';
 import type {GearTrain, Vehicle} from './straight.ts';
 import {speedAtRpmMps} from './tire.ts';
-
-export type PlannedShift = {
-	/** Where the interruption starts, and the RPM there. */
-	readonly speedMps: number;
-	readonly rpm: number;
-	readonly coasted: Coast;
-	/** In the next gear, after the interruption. */
-	readonly rpmAfter: number;
-};
 
 /** Everything is worked out when it is first asked for: most runs use few of the gears. Gears are counted from 1. */
 export class RoadGears {
 	readonly vehicle: Vehicle;
 	readonly train: GearTrain;
 	readonly forces: RoadForces;
+	readonly #shelf: GearShelf;
 	readonly #motions: GearMotion[] = [];
 	readonly #tables: GearTable[] = [];
 	readonly #shifts: PlannedShift[] = [];
 	readonly #lights: number[] = [];
-	#peakTorqueNm: number | undefined;
 
-	constructor(vehicle: Vehicle, train: GearTrain, road: Road) {
+	/** Trains on the same shelf, which is the vehicle's and the road's, share the gears that they have in common. */
+	constructor(vehicle: Vehicle, train: GearTrain, road: Road, shelf = new GearShelf(vehicle, road)) {
 		this.vehicle = vehicle;
 		this.train = train;
-		this.forces = roadForces(vehicle, road);
+		this.#shelf = shelf;
+		this.forces = shelf.forces;
 	}
 
 	motion(gear: number): GearMotion {
-		this.#motions[gear] ??= this.#newMotion(gear);
+		this.#motions[gear] ??= this.#shelf.motion(this.train.overall[gear - 1]!, this.train.efficiency[gear - 1]!);
 		return this.#motions[gear];
 	}
 
 	/** The motion with its integrals kept. */
 	table(gear: number): GearTable {
-		this.#tables[gear] ??= new GearTable(this.motion(gear));
+		this.#tables[gear] ??= this.#shelf.table(this.motion(gear));
 		return this.#tables[gear];
 	}
 
@@ -57,14 +52,13 @@ export class RoadGears {
 
 	/** A bound above the acceleration in a gear from a speed up. */
 	mostMps2(gear: number, fromMps: number): number {
-		this.#peakTorqueNm ??= peakTorqueNm(this.vehicle);
-		const wheelTorqueNm = this.#peakTorqueNm * this.train.efficiency[gear - 1]! * this.train.overall[gear - 1]!;
+		const wheelTorqueNm = this.#shelf.peakTorqueNm * this.train.efficiency[gear - 1]! * this.train.overall[gear - 1]!;
 		return mostMps2(this.vehicle, this.forces, wheelTorqueNm, fromMps);
 	}
 
 	/** The shift from a gear to the next. */
 	shift(gear: number): PlannedShift {
-		this.#shifts[gear] ??= this.#planShift(gear);
+		this.#shifts[gear] ??= this.#shelf.shift(this.motion(gear), this.motion(gear + 1), () => this.#planShift(gear));
 		return this.#shifts[gear];
 	}
 
@@ -78,11 +72,6 @@ export class RoadGears {
 	shiftFrom(gear: number, enteredMps: number): PlannedShift {
 		const planned = this.shift(gear);
 		return enteredMps <= planned.speedMps ? planned : this.#shiftAt(gear, enteredMps);
-	}
-
-	#newMotion(gear: number): GearMotion {
-		const {overall, efficiency} = this.train;
-		return new GearMotion(this.vehicle, this.forces, overall[gear - 1]!, efficiency[gear - 1]!);
 	}
 
 	#speedAt(gear: number, rpm: number): number {

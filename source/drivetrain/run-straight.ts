@@ -44,7 +44,7 @@ const gearsFrom = (lowest: number, highest: number) =>
 	Array.from({length: Math.max(0, highest - lowest + 1)}, (_, i) => lowest + i);
 
 /** No one starts above the limit, nor in a gear whose shift speed is already behind; a start gear that is given only heeds the limit. */
-function mayStart(gears: RoadGears, course: Course, gear: number): boolean {
+export function mayStart(gears: RoadGears, course: Course, gear: number): boolean {
 	if (course.startGear !== undefined) return gear === course.startGear && course.exitMps <= gears.topMps(gear);
 	if (gear === course.highestGear) return course.exitMps <= gears.topMps(gear);
 	return course.exitMps <= gears.capMps(gear) && course.exitMps <= gears.shift(gear).speedMps;

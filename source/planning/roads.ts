@@ -1,5 +1,6 @@
 /** Straights of one situation that are alike in grade, wind, load and drag share what the solver works out for a row. */
 import type {Road} from '../drivetrain/forces.ts';
+import {GearShelf} from '../drivetrain/gear-shelf.ts';
 import {RoadGears} from '../drivetrain/road-gears.ts';
 import type {GearTrain, Vehicle} from '../drivetrain/straight.ts';
 
@@ -26,6 +27,16 @@ export class Roads {
 			current = vehicle;
 			made[number] ??= new RoadGears(vehicle, train, road);
 			return made[number];
+		};
+	}
+
+	/** The gears of many trains that have gears in common: what one train has had worked out serves the others. */
+	gearsInCommon(): (train: GearTrain, roadNumber: number) => RoadGears {
+		const shelves: GearShelf[] = [];
+		return (train, number) => {
+			const {vehicle, road} = this.#known[number]!;
+			shelves[number] ??= new GearShelf(vehicle, road);
+			return new RoadGears(vehicle, train, road, shelves[number]);
 		};
 	}
 }

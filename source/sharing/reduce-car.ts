@@ -34,7 +34,7 @@ export function reduceCar(carDocument: Json, trackDocument: Json, chosen: Chosen
 	const rules = car.rules?.[track.type];
 	const reduced = rules && reduceRules(rules, sets, pairs);
 	for (const name of [...(track.rules?.gearboxes ?? []), ...(reduced?.gearboxes ?? [])]) sets.add(name);
-	const {$schema: _editor, rules: _rules, ...rest} = car;
+	const {$schema: _editor, rules: _rules, gearInventory: _inventory, ...rest} = car;
 	return {
 		...rest,
 		engines: car.engines.filter(({name}) => name === chosen.engine),

@@ -29,6 +29,12 @@ export const budgets = {
 	pairs: {what: 'Ranking 10 × as many pairs', kind: 'most', bound: linear, unit: '×'},
 	straights: {what: 'Ranking 10 × as many straights', kind: 'most', bound: linear, unit: '×'},
 	situations: {what: 'Ranking 10 × as many situations', kind: 'most', bound: linear, unit: '×'},
+	load: {
+		what: 'A load list of 20 tracks and 80 pairs, against ranking the same tracks',
+		kind: 'most',
+		bound: 1.5,
+		unit: '×',
+	},
 	rankProcess: {what: '`droprack rank` as a process, against `node -e 1`', kind: 'most', bound: 3, unit: '×'},
 	tracksProcess: {what: '`droprack tracks` as a process, against `node -e 1`', kind: 'most', bound: 1.5, unit: '×'},
 	rankMemory: {what: 'Peak memory of `droprack rank`', kind: 'most', bound: 80, unit: 'MB'},

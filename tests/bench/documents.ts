@@ -16,7 +16,7 @@ export async function readDocuments(size: Size, seed: number): Promise<Documents
 	return {car: car.value, track: track.value};
 }
 
-const carDocument = (pairs: readonly Teeth[]) => ({
+export const carDocument = (pairs: readonly Teeth[]) => ({
 	kind: 'car',
 	version: 1,
 	name: 'Benchmark car',
@@ -54,7 +54,7 @@ const sums = Array.from({length: 41}, (_, i) => 60 + i);
 const housingSums = sums.filter(sum => sum % 8 !== 0);
 
 /** From the longest to the shortest. */
-function everyPair(): Teeth[] {
+export function everyPair(): Teeth[] {
 	const ratio = ({driving, driven}: Teeth) => driven / driving;
 	return sums
 		.flatMap(sum => Array.from({length: sum - 1}, (_, i) => ({driving: i + 1, driven: sum - 1 - i})))
@@ -63,7 +63,7 @@ function everyPair(): Teeth[] {
 }
 
 /** So many of them, evenly from the first to the last. */
-function spread<T>(all: readonly T[], count: number): T[] {
+export function spread<T>(all: readonly T[], count: number): T[] {
 	if (count > all.length) throw new Error(`only ${all.length} of ${count}`);
 	return Array.from({length: count}, (_, i) => all[Math.round((i * (all.length - 1)) / Math.max(1, count - 1))]!);
 }

@@ -1,6 +1,7 @@
 /** All benchmarks: correctness first, then times; ends with 1 where a budget is missed. Another seed may be given. */
 import {Figures} from './budgets.ts';
 import {line, machine} from './harness.ts';
+import {benchLoad} from './load.ts';
 import {benchLogs} from './logs.ts';
 import {benchOneStraight} from './one-straight.ts';
 import {benchProcesses} from './processes.ts';
@@ -18,6 +19,8 @@ line();
 benchOneStraight(figures);
 line();
 await benchGrowth(figures, seed);
+line();
+await benchLoad(figures, seed);
 line();
 benchProcesses(figures);
 line();

@@ -184,6 +184,40 @@ describe('a car', () => {
 			'rack.pairs[1]',
 			/found null/,
 		],
+		[
+			'with single gears that leave out a gear',
+			{
+				gearInventory: {
+					gears: [
+						{gear: 1, ratio: 2},
+						{gear: 3, ratio: 1},
+					],
+				},
+			},
+			'gearInventory.gears',
+			/found none for gear 2; allowed a gear for every place up to 3/,
+		],
+		[
+			'with a largest step below the smallest',
+			{gearInventory: {gears: [{gear: 1, ratio: 2}], smallestStep: 1.3, largestStep: 1.2}},
+			'gearInventory.largestStep',
+			/no less than the "smallestStep" 1\.3/,
+		],
+		[
+			'with single gears for another number of gears than efficiencies',
+			{
+				efficiency: undefined,
+				efficiencies: [0.9, 0.9, 0.9, 0.9, 0.9],
+				gearInventory: {
+					gears: [
+						{gear: 1, ratio: 2},
+						{gear: 2, ratio: 1},
+					],
+				},
+			},
+			'efficiencies',
+			/one for each of the 2 gears of "gearInventory"/,
+		],
 		['with rules for an unknown gearbox', {rules: {road: {gearboxes: ['B']}}}, 'rules.road.gearboxes[0]', /"A"/],
 		['with rules for an unknown type', {rules: {raod: {}}}, 'rules.raod', /Did you mean "road"/],
 		['with a bare mass', {mass: 3650}, 'mass', /found 3650; allowed a mass with its unit \(lb, kg/],

@@ -82,6 +82,17 @@ export const completeCar = () =>
 				fuelConsumption: '0.28 kg/(kW h)',
 			}),
 		],
+		gearInventory: {
+			gears: [
+				{gear: 1, ratio: 2.9, pieces: 2, fits: ['X']},
+				{gear: 2, ratio: 2.04, fits: ['X']},
+				{gear: 3, ratio: 1.58},
+				{gear: 4, ratio: 1.24},
+				{gear: 5, ratio: 1},
+			],
+			smallestStep: 1.1,
+			largestStep: 1.5,
+		},
 		efficiency: undefined,
 		efficiencies: [0.9, 0.91, 0.92, 0.93, 0.94],
 		tires: {left: '86.4 in', right: '86.6 in', growth: '0.8 %', slip: '1.5 %', steadySlip: '0 %'},

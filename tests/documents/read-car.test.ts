@@ -86,6 +86,26 @@ test('a full car is read to SI', async () => {
 	});
 });
 
+test('single gears are on hand once and go with everything, and steps are free, unless it is said otherwise', async () => {
+	const gears = [
+		{gear: 1, ratio: 2.9},
+		{gear: 1, ratio: 2.7, pieces: 2, fits: ['long']},
+		{gear: 2, ratio: 2},
+	];
+	expect((await car({gearInventory: {gears}})).gearInventory).toEqual({
+		gears: [
+			{gear: 1, ratio: 2.9, pieces: 1, fits: undefined},
+			{gear: 1, ratio: 2.7, pieces: 2, fits: ['long']},
+			{gear: 2, ratio: 2, pieces: 1, fits: undefined},
+		],
+		smallestStep: 1,
+		largestStep: Number.POSITIVE_INFINITY,
+	});
+	const bounded = await car({gearInventory: {gears, smallestStep: 1.1, largestStep: 1.5}});
+	expect(bounded.gearInventory).toMatchObject({smallestStep: 1.1, largestStep: 1.5});
+	expect((await car()).gearInventory).toBeUndefined();
+});
+
 test.each([
 	['lb ft^2', 94.92],
 	['in lbf s^2', 35.4],

@@ -58,6 +58,7 @@ export const car = (change: Partial<Car> = {}): Car => ({
 	wheelbaseM: undefined,
 	cgHeightM: undefined,
 	engines: [engine()],
+	gearInventory: undefined,
 	gearboxes: [
 		{name: 'A', ratios: [2.9, 2.04, 1.58, 1.24, 1]},
 		{name: 'B', ratios: [2.7, 1.95, 1.5, 1.2, 1]},

@@ -45,8 +45,10 @@ const everywhere = Object.keys(options).filter(name => commands.every(one => one
 const commandTable = (): string =>
 	tableOf(
 		['command', 'what it does', 'its own options'],
-		commands.map(({name, argument, second, summary, options: taken}) => [
-			code(['droprack', name, argument?.name, second?.name].filter(Boolean).join(' ')),
+		commands.map(({name, argument, many, second, summary, options: taken}) => [
+			code(
+				['droprack', name, argument && `${argument.name}${many ? '…' : ''}`, second?.name].filter(Boolean).join(' '),
+			),
 			summary,
 			taken
 				.filter(own => !everywhere.includes(own))

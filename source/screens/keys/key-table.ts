@@ -1,5 +1,6 @@
 /** Every key once: handling, the line of keys, the help and the table in the README are made from this. */
 
+import {aheadKeys} from './ahead-keys.ts';
 import type {AnyBinding} from './binding.ts';
 import {everywhereKeys} from './everywhere-keys.ts';
 import {formKeys} from './form-keys.ts';
@@ -16,6 +17,7 @@ export const bindings = [
 	...formKeys,
 	...sharingKeys,
 	...keepingKeys,
+	...aheadKeys,
 	...sessionKeys,
 	...everywhereKeys,
 ] as const;

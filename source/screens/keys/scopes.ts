@@ -12,6 +12,8 @@ export const scopes = {
 	history: 'In the history of the track',
 	draft: 'Adding to the history',
 	differences: 'In the differences',
+	load: 'In the load list',
+	gears: 'Among gears to build',
 	field: 'Typing into a field',
 	margin: 'Typing the least margin',
 	entry: 'Typing a file name, notes or a directory',

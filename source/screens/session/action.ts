@@ -60,5 +60,7 @@ export type Action =
 	| {readonly do: 'leave draft'}
 	| {readonly do: 'refuse draft'; readonly field: DraftField; readonly wrong: string}
 	| {readonly do: 'whole to'; readonly which: 'saved' | 'shipped'}
+	/** The track of that id lies ahead, or no longer. */
+	| {readonly do: 'toggle ahead'; readonly id: string}
 	/** A saved document is no more. */
 	| {readonly do: 'forgotten'; readonly document: OpenDocument};

@@ -4,6 +4,7 @@ import type {ActionName} from '../keys/key-table.ts';
 import type {Scope} from '../keys/scopes.ts';
 import {editLine} from '../parts/edit-line.ts';
 import type {Action} from './action.ts';
+import {aheadBy, changedAhead, gearsPlace, loadPlace} from './ahead-place.ts';
 import type {Choice} from './catalog.ts';
 import {current, unsaved} from './documents.ts';
 import type {Effect} from './effect.ts';
@@ -141,6 +142,23 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 			return {do: 'whole to', which: 'saved'};
 		case 'forget':
 			return forget(session);
+		case 'load':
+			return {do: 'go', place: loadPlace};
+		case 'gears':
+			return {do: 'go', place: gearsPlace};
+		case 'ahead up':
+			return aheadBy(place, scene.choices.length, -1);
+		case 'ahead down':
+			return aheadBy(place, scene.choices.length, 1);
+		case 'toggle ahead': {
+			const choice = 'cursor' in place ? scene.choices[place.cursor] : undefined;
+			return choice && {do: 'toggle ahead', id: choice.document.id};
+		}
+		case 'more shorter':
+		case 'more taller':
+		case 'each set':
+		case 'one set for all':
+			return changedAhead(name, place);
 		case 'edit':
 			return {do: 'go', place: formOf('track')};
 		case 'other form':

@@ -4,8 +4,10 @@ import type {Keeper} from '../keeper.ts';
 import {type ActionName, actionFor} from '../keys/key-table.ts';
 import {type KeyEvent, keyName} from '../terminal/key-event.ts';
 import type {Action} from './action.ts';
+import type {AheadState} from './ahead.ts';
+import {isAhead} from './ahead-place.ts';
 import {type Answer, rankedIn} from './answer.ts';
-import {choicesFor} from './catalog.ts';
+import {type Choice, choicesFor} from './catalog.ts';
 import {current, type Documents, isChanged, type OpenDocument, titleOf, unsaved} from './documents.ts';
 import type {Effect, ErrandEffect} from './effect.ts';
 import {type Errandful, errandEffects, readPlan} from './errand-effects.ts';
@@ -28,7 +30,7 @@ export type Outside = {
 export type State = {
 	readonly session: Session;
 	readonly answer: Answer;
-	readonly scene: Scene & {readonly handed: Handed | undefined};
+	readonly scene: Scene & {readonly handed: Handed | undefined; readonly ahead: AheadState | undefined};
 };
 
 export class LiveSession {
@@ -43,6 +45,10 @@ export class LiveSession {
 	/** Loaded once there is something to hand over: most sessions never have. */
 	#handing: typeof import('./handing.ts') | undefined;
 	#handingLoad: Promise<void> | undefined;
+	/** Loaded when the tracks ahead are first looked at. */
+	#ahead: import('./ahead.ts').Ahead | undefined;
+	#aheadLoad: Promise<void> | undefined;
+	readonly #clock: Clock;
 	#placed: {readonly ranked: Ranked; readonly rows: Placed[]} | undefined;
 	#shown:
 		| {readonly all: readonly Placed[]; readonly order: Order; readonly filter: Filter; readonly rows: Placed[]}
@@ -52,6 +58,7 @@ export class LiveSession {
 		this.#catalog = catalog;
 		this.#keeper = keeper;
 		this.#outside = outside;
+		this.#clock = clock;
 		this.#ranker = new Ranker(clock, () => this.#settle(this.#state.session));
 		this.#ranker.start(inputsOf(session));
 		this.#state = this.#stateOf(session);
@@ -178,17 +185,30 @@ export class LiveSession {
 		const all = ranked === undefined ? firstRow(answer) : this.#placedIn(ranked);
 		const documents = session.history.present;
 		const track = readTrackOf(documents.open[documents.track]!.json);
-		const {place} = session;
 		const scene: Scene = {
 			ranked,
 			all,
 			shown: this.#shownOf(all, session),
 			situations: track.ok ? track.value.situations.map(({name}) => name) : [],
-			choices: place.at === 'choose' ? choicesFor(this.#catalog, documents, place.kind, place.search.text) : [],
+			choices: this.#choicesIn(session),
 			isWorking: answer.is === 'working',
 		};
 		const handed = answer.is === 'ready' ? this.#handed(session, scene, answer.ranked) : undefined;
-		return {session, answer, scene: {...scene, handed}};
+		return {session, answer, scene: {...scene, handed, ahead: this.#aheadOf(session, scene.choices)}};
+	}
+
+	#choicesIn({place, history}: Session): Choice[] {
+		if (place.at === 'choose') return choicesFor(this.#catalog, history.present, place.kind, place.search.text);
+		return isAhead(place) ? choicesFor(this.#catalog, history.present, 'track', '') : [];
+	}
+
+	#aheadOf(session: Session, choices: readonly Choice[]): AheadState | undefined {
+		if (!isAhead(session.place)) return undefined;
+		this.#aheadLoad ??= import('./ahead.ts').then(({Ahead}) => {
+			this.#ahead = new Ahead(this.#clock, () => this.#settle(this.#state.session));
+			this.#settle(this.#state.session);
+		});
+		return this.#ahead?.of(session, choices);
 	}
 
 	/** Of an answer that is of a moment ago nothing is handed over. */

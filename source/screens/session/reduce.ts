@@ -2,6 +2,7 @@
 import {quantityOf} from '../../documents/quantity.ts';
 import {edited, editLine} from '../parts/edit-line.ts';
 import type {Action} from './action.ts';
+import {aheadIn} from './ahead-place.ts';
 import {current, type Documents, lookAt, newDocument, type OpenDocument, withJson, withNotes} from './documents.ts';
 import {amended, type History, recorded, redone, undone} from './history.ts';
 import {withValue} from './json.ts';
@@ -65,6 +66,8 @@ export function reduce(before: Session, action: Action): Session {
 				: session;
 		case 'note':
 			return noted(session, action.text);
+		case 'toggle ahead':
+			return toggledAhead(session, action.id);
 		case 'whole to':
 		case 'forgotten':
 			return reduceWhole(session, action);
@@ -86,6 +89,11 @@ function scrolledBy(session: Session, by: number): Session {
 	const {place, over} = session;
 	if (over) return over.is === 'help' ? {...session, over: {...over, scroll: Math.max(0, over.scroll + by)}} : session;
 	return 'scroll' in place ? {...session, place: {...place, scroll: Math.max(0, place.scroll + by)}} : session;
+}
+
+function toggledAhead(session: Session, id: string): Session {
+	const ids = aheadIn(session);
+	return {...session, ahead: ids.includes(id) ? ids.filter(one => one !== id) : [...ids, id]};
 }
 
 function noted(session: Session, text: string): Session {

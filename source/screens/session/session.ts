@@ -19,6 +19,9 @@ export type Editing = {readonly line: EditLine /** Why it was not taken. */; rea
 /** A field of a form by its place in it. */
 export type FieldPlace = {readonly section: number; readonly row: number; readonly column: number};
 
+/** How many steps shorter and taller are carried, and whether for every gearbox set. */
+export type LoadSteps = {readonly shorter: number; readonly taller: number; readonly eachSet: boolean};
+
 export type Place =
 	| {readonly at: 'ranking'}
 	| {readonly at: 'why'; readonly scroll: number}
@@ -36,6 +39,9 @@ export type Place =
 			readonly adding: boolean;
 			readonly scroll: number;
 	  }
+	| ({readonly at: 'load'; readonly cursor: number; readonly scroll: number} & LoadSteps)
+	/** `together`: one set for all tracks besides. */
+	| {readonly at: 'gears'; readonly cursor: number; readonly scroll: number; readonly together: boolean}
 	/** From the saved and from the shipped document. */
 	| {readonly at: 'differences'; readonly kind: Kind; readonly scroll: number};
 export type PlaceName = Place['at'];
@@ -69,6 +75,8 @@ export type Session = {
 	readonly filter: Filter;
 	/** Undefined: the worst over all. */
 	readonly situation: string | undefined;
+	/** Ids of the tracks that lie ahead; undefined: the one that is looked at. */
+	readonly ahead: readonly string[] | undefined;
 	/** An entry of the history that was begun. */
 	readonly draft: Draft | undefined;
 	readonly units: UnitSystem;
@@ -86,6 +94,7 @@ export const startSession = (documents: Documents, units: UnitSystem): Session =
 	order: 'place',
 	filter: noFilter,
 	situation: undefined,
+	ahead: undefined,
 	draft: undefined,
 	units,
 	notice: undefined,

@@ -10,6 +10,7 @@ import {current, titleOf} from '../session/documents.ts';
 import {scopesOf} from '../session/intend.ts';
 import type {State} from '../session/live.ts';
 import {cursorIn, type Placed} from '../session/rows.ts';
+import {aheadView} from './ahead-view.ts';
 import {changesView} from './changes-view.ts';
 import {chooseView} from './choose-view.ts';
 import {editView} from './edit-view.ts';
@@ -96,6 +97,8 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 	}
 	if (session.place.at === 'differences')
 		return plain(changesView(current(documents, session.place.kind), session.place.scroll, width, body));
+	if (session.place.at === 'load' || session.place.at === 'gears')
+		return plain(aheadView(state, session.place, width, body));
 	if (answer.is === 'faulty') return plain(wrongView(answer.wrong, width));
 
 	if (session.place.at === 'hand over') return plain(handOverView(state, session.place, body, size));

@@ -45,6 +45,7 @@ function keyPieces({keys, does, short}: Binding): Piece[] {
 		'row up': '↑↓',
 		'field up': '↑↓',
 		'choice up': '↑↓',
+		'ahead up': '↑↓',
 		'item up': '↑↓',
 		'draft down': '↑↓',
 		'scroll up': 'PgUp PgDn',

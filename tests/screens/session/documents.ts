@@ -32,3 +32,13 @@ export const after = (start: Session, ...actions: Action[]): Session => actions.
 
 export const typed = (text: string): Action[] =>
 	[...text].map(character => ({do: 'type', event: {kind: 'text', text: character}}));
+
+/** The car with single gears to build from: those of its sets. */
+export const withGears = (json: JsonObject): JsonObject => ({
+	...json,
+	gearInventory: {
+		gears: [[2.9, 2.7], [2.04, 1.9], [1.58, 1.48], [1.24, 1.2], [1]].flatMap((ratios, i) =>
+			ratios.map(ratio => ({gear: i + 1, ratio})),
+		),
+	},
+});

@@ -110,7 +110,7 @@ test('an entry is added as a copy with a name of its own, moved and removed; the
 
 test('pairs are added to the rack row by row', () => {
 	const pairs: Place = {at: 'edit', kind: 'car', section: 0, row: 0, column: 0, editing: undefined};
-	const at = after(session({place: pairs}), {do: 'move in form', sections: 6, rows: 0, columns: 0});
+	const at = after(session({place: pairs}), {do: 'move in form', sections: 8, rows: 0, columns: 0});
 	const added = after(at, {do: 'add entry'});
 	expect(valueAt(current(added.history.present, 'car').json, ['rack', 'pairs', 1])).toEqual({driving: 37, driven: 34});
 	expect(added.place).toMatchObject({row: 1});

@@ -1,6 +1,7 @@
 import {describe, expect, test} from 'vitest';
 import {editLine} from '../../../source/screens/parts/edit-line.ts';
 import {painted} from '../../../source/screens/parts/theme.ts';
+import {gearsPlace, loadPlace} from '../../../source/screens/session/ahead-place.ts';
 import {withJson} from '../../../source/screens/session/documents.ts';
 import {startHistory} from '../../../source/screens/session/history.ts';
 import {marginEntry} from '../../../source/screens/session/reduce.ts';
@@ -8,7 +9,7 @@ import {takeInPlace} from '../../../source/screens/session/reduce-take-in.ts';
 import type {Place, Session} from '../../../source/screens/session/session.ts';
 import {startDraft} from '../../../source/screens/session/track-history.ts';
 import {frameLines, frameOf} from '../../../source/screens/views/frame.ts';
-import {after, car, documents, oval, session, typed} from '../session/documents.ts';
+import {after, car, documents, oval, session, typed, withGears} from '../session/documents.ts';
 import {linesOf, stateOf, widest} from './states.ts';
 
 const sizes = [
@@ -37,7 +38,7 @@ const places: Record<string, Partial<Session>> = {
 	'picture of speed': {place: {at: 'pictures', picture: 'speed', straight: 1}, comparison: '34/37 A'},
 	form: {place: edit},
 	'form, typing': {place: {...edit, editing: {line: editLine('118 mhp'), wrong: undefined}}},
-	'form of the car, a table': {place: {at: 'edit', kind: 'car', section: 5, row: 2, column: 1, editing: undefined}},
+	'form of the car, a table': {place: {at: 'edit', kind: 'car', section: 8, row: 2, column: 1, editing: undefined}},
 	choosing: {place: {at: 'choose', kind: 'track', search: editLine('ov'), cursor: 0}},
 	help: {over: {is: 'help', scroll: 0}},
 	'least margin': {over: marginEntry(session())},
@@ -56,6 +57,14 @@ const places: Record<string, Partial<Session>> = {
 	'adding to the history': {
 		place: {at: 'history', entries: [], adding: true, scroll: 0},
 		draft: startDraft('Fixture Oval', '2026-05-31', '36/36 A'),
+	},
+	'load list': {place: loadPlace},
+	'load list, nothing ahead': {place: loadPlace, ahead: []},
+	'gears to build, without any': {place: gearsPlace},
+	'gears to build, one set for all': {
+		place: {...gearsPlace, together: true},
+		ahead: ['track:oval', 'track:other'],
+		history: startHistory(withJson(documents, 'car', withGears(car.json))),
 	},
 	differences: {
 		place: {at: 'differences', kind: 'track', scroll: 0},

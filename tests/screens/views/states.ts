@@ -3,6 +3,8 @@
 import {type Ranked, rankSteps} from '../../../source/planning/rank-rack.ts';
 import {finish} from '../../../source/planning/run-rack.ts';
 import {painted} from '../../../source/screens/parts/theme.ts';
+import {Ahead} from '../../../source/screens/session/ahead.ts';
+import {isAhead} from '../../../source/screens/session/ahead-place.ts';
 import type {Answer} from '../../../source/screens/session/answer.ts';
 import {readBoth, wrongFromFault} from '../../../source/screens/session/answer.ts';
 import {choicesFor} from '../../../source/screens/session/catalog.ts';
@@ -23,7 +25,12 @@ export function stateOf(session: Session): State {
 	const all = ranked === undefined ? [] : placedRows(ranked.ranking.rows);
 	const {place} = session;
 	const documents = session.history.present;
-	const choices = place.at === 'choose' ? choicesFor(catalog, documents, place.kind, place.search.text) : [];
+	const choices =
+		place.at === 'choose'
+			? choicesFor(catalog, documents, place.kind, place.search.text)
+			: isAhead(place)
+				? choicesFor(catalog, documents, 'track', '')
+				: [];
 	const situations = ranked?.ground.plan.conditions.map(({name}) => name) ?? [];
 	return {
 		session,
@@ -35,10 +42,20 @@ export function stateOf(session: Session): State {
 			situations,
 			choices,
 			isWorking: false,
+			ahead: isAhead(place) ? new Ahead(atOnce, () => {}).of(session, choices) : undefined,
 			handed: handedIn(session, ranked, all),
 		},
 	};
 }
+
+/** Nothing is put off. */
+const atOnce = {
+	now: () => 0,
+	later: (act: () => void) => {
+		act();
+		return () => {};
+	},
+};
 
 function handedIn(session: Session, ranked: Ranked | undefined, all: readonly Placed[]) {
 	const {place} = session;
