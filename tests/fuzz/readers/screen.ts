@@ -1,5 +1,6 @@
 /** Keys pressed in a session that runs, in memory: whatever they are, there is a frame of the window's size. */
 import type {Keeper} from '../../../source/screens/keeper.ts';
+import {bindingsOf} from '../../../source/screens/keys/key-table.ts';
 import {painted} from '../../../source/screens/parts/theme.ts';
 import type {Documents} from '../../../source/screens/session/documents.ts';
 import type {JsonObject} from '../../../source/screens/session/json.ts';
@@ -18,7 +19,7 @@ import {cars, tracks} from './documents.ts';
 import '../../../source/screens/session/handing.ts';
 import '../../../source/screens/session/incoming.ts';
 
-const [down, up, right, left, esc] = ['\x1B[B', '\x1B[A', '\x1B[C', '\x1B[D', '\x1B'];
+const [down, up, right, left, esc] = ['\x1B[B', '\x1B[A', '\x1B[C', '\x1B[D', '\x1B\n'];
 const sizes = [
 	{width: 80, height: 24},
 	{width: 140, height: 45},
@@ -59,7 +60,9 @@ async function pressed(opened: Documents, keys: string): Promise<Answer> {
 	settle();
 	const decoder = new KeyDecoder();
 	let said = '';
-	for (const event of [...decoder.push(keys), ...decoder.flush()]) {
+	// A line end stands for a moment in which nothing comes, after which Esc is the key.
+	const events = keys.split('\n').flatMap(part => [...decoder.push(part), ...decoder.flush()]);
+	for (const event of events) {
 		live.press(event);
 		settle();
 		// What is read or loaded on the way arrives.
@@ -118,8 +121,13 @@ export const screen: Reader = {
 	read: text => pressed(documents, text),
 };
 
-/** To every place, and along what is there. */
-const tour = `j${right}\rjj${esc}gl${esc}e\t${down}${down}5${esc}\t\t${down}\t\t\t\t${esc}ee\t\t${down}${esc}${esc}xjj${esc}t${down}${esc}sohbc`;
+/** Every key of one character that works everywhere: it leads to a place, or does something in one. */
+const everywhere = bindingsOf('everywhere').flatMap(({keys}) => keys.filter(key => key.length === 1));
+/** To every place and along what is there, and through the form. */
+const tour = [
+	...everywhere.map(key => `${key}${down}${right}\r${down}${esc}${esc}`),
+	`e\t${down}${down}5${esc}\t\t${down}\t\t\t\t${esc}ee\t\t${down}${esc}${esc}`,
+].join('');
 
 /** Documents as the store hands them over: with a name, and otherwise as anybody has left them. */
 async function readDocuments(text: string): Promise<Answer> {
