@@ -234,7 +234,7 @@ function tooSmall({width, height}: Size): Frame {
 	const lines = [
 		...wrap(needed, width),
 		...wrap(`This window has ${width} and ${height}.`, width),
-		...wrap('Nothing is lost: make it larger.', width),
+		...wrap('Nothing is lost: make it larger. Ctrl+C leaves.', width),
 	];
 	return {top: lines.slice(0, height).map(text => line(text)), table: undefined, beside: [], bottom: []};
 }

@@ -217,7 +217,7 @@ test('below 80 × 24 it says what it needs, at any size', () => {
 	expect(linesOf(state, {width: 60, height: 10, ascii: false})).toEqual([
 		'Droprack needs 80 columns and 24 lines.',
 		'This window has 60 and 10.',
-		'Nothing is lost: make it larger.',
+		'Nothing is lost: make it larger. Ctrl+C leaves.',
 	]);
 	for (const [width, height] of [
 		[1, 1],
