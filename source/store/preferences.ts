@@ -77,7 +77,7 @@ export const preferCar = (home: string, car: string | undefined): Promise<Prefer
 /** Keeps how the columns of a car's logs were read. */
 export const rememberColumns = (home: string, car: string, columns: LogColumns): Promise<PreferencesWritten> =>
 	change(home, before => {
-		const isSame = JSON.stringify(before.logColumns?.[car]) === JSON.stringify(columns);
+		const isSame = JSON.stringify(before.logColumns?.[car] ?? {}) === JSON.stringify(columns);
 		return isSame ? undefined : {...before, logColumns: {...before.logColumns, [car]: columns}};
 	});
 

@@ -12,10 +12,10 @@ import {linesOf, stateOf} from '../screens/views/states.ts';
 import {errorOf, finestError, type OutsideCheck, worstCase} from './outside-check.ts';
 import {outsideChecks} from './outside-checks.ts';
 
-/** A fixed day, no saved preferences, no color, the width of a plain terminal. */
+/** A fixed day, no saved preferences and no place for any, no color, the width of a plain terminal. */
 const around: Surroundings = {
 	shipped: new URL('../../tracks/', import.meta.url),
-	environment: {DROPRACK_HOME: '/nonexistent'},
+	environment: {DROPRACK_HOME: '/dev/null/none'},
 	now: new Date(2026, 2, 14),
 	columns: 80,
 	color: false,

@@ -1,4 +1,4 @@
-import {mkdtempSync, readFileSync, rmSync, writeFileSync} from 'node:fs';
+import {existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync} from 'node:fs';
 import {tmpdir} from 'node:os';
 import {join} from 'node:path';
 import {afterEach, beforeEach, expect, test} from 'vitest';
@@ -32,6 +32,11 @@ test('how the logs of a car are read is remembered beside it', async () => {
 	await rememberColumns(home, 'Second', {rpm: {header: 'n'}});
 	const {value} = readPreferences(home) as {value: {logColumns: object}};
 	expect(Object.keys(value.logColumns)).toEqual(['First', 'Second']);
+});
+
+test('a log that needed nothing to be asked leaves no file', async () => {
+	expect(await rememberColumns(home, 'First', {})).toEqual({ok: true});
+	expect(existsSync(preferencesFile(home))).toBe(false);
 });
 
 test('columns that somebody has spoiled by hand are passed over', () => {
