@@ -1,12 +1,16 @@
 /** Writes beside the bundle whose code it holds: name, version and license of every package that ends in it. */
 import {readdirSync, readFileSync} from 'node:fs';
 import {join} from 'node:path';
+import {fileURLToPath} from 'node:url';
 import type {Plugin} from 'vite';
 
 type Manifest = {name: string; version: string; license?: string; author?: string | {name: string}};
 
-/** The directory of the package that a module belongs to; undefined for our own. */
+const packages = fileURLToPath(new URL('../node_modules', import.meta.url));
+
+/** The directory of the package that a module belongs to; undefined for our own. The bundler adds a little of itself. */
 function packageOf(id: string): string | undefined {
+	if (id.startsWith('\0rolldown/')) return join(packages, 'rolldown');
 	return /^\0?(.*\/node_modules\/(?:@[^/]+\/)?[^/]+)\//.exec(id)?.[1];
 }
 
@@ -43,8 +47,8 @@ export function thirdParty(): Plugin {
 		name: 'third-party',
 		generateBundle(_, bundle) {
 			const modules = Object.values(bundle).flatMap(part => (part.type === 'chunk' ? part.moduleIds : []));
-			const packages = new Set(modules.map(packageOf).filter(directory => directory !== undefined));
-			const notices = [...packages].map(notice).sort();
+			const directories = new Set(modules.map(packageOf).filter(directory => directory !== undefined));
+			const notices = [...directories].map(notice).sort();
 			const head = 'Droprack holds code of these packages, each under the license given with it.\n';
 			this.emitFile({
 				type: 'asset',

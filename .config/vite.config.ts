@@ -1,6 +1,7 @@
 import {defineConfig} from 'vitest/config';
 import {inkTable} from './ink-table.ts';
 import {keepPaint} from './keep-paint.ts';
+import {noDevtools} from './no-devtools.ts';
 import {thirdParty} from './third-party.ts';
 
 const root = new URL('..', import.meta.url).pathname;
@@ -8,7 +9,7 @@ const root = new URL('..', import.meta.url).pathname;
 const groups = [
 	{
 		name: 'common',
-		test: /source\/store\/|source\/text\/(?!.*-view)|source\/text\/list-view|source\/commands\/(print|reply|shelf|find-document)|source\/documents\/(visible|nearest)|picocolors|fast-string|fastest-lev/,
+		test: /source\/store\/|source\/text\/(?!.*(?:-view|chart|canvas|ticks|learned|practice))|source\/text\/list-view|source\/commands\/(print|reply|shelf|find-document)|source\/documents\/(visible|nearest)|picocolors|fast-string|fastest-lev/,
 	},
 	{
 		name: 'plan',
@@ -19,16 +20,15 @@ const hashBang = '#!/usr/bin/env node';
 
 export default defineConfig(({command}) => ({
 	root,
-	plugins: [inkTable(), keepPaint(), thirdParty()],
+	plugins: [inkTable(), keepPaint(), noDevtools(), thirdParty()],
 	// Only for the build: in tests it would send every library through the transformer.
 	...(command === 'build' && {
 		ssr: {noExternal: true as const},
-		define: {'process.env.NODE_ENV': '"production"', 'process.env.DEV': '"false"', fetch: 'undefined'},
+		define: {'process.env.NODE_ENV': '"production"', fetch: 'undefined'},
 		// Also where NODE_ENV says otherwise, as in a build that a test asks for.
 		oxc: {jsx: {development: false}},
 		resolve: {
 			alias: {
-				'react-devtools-core': new URL('no-devtools.ts', import.meta.url).pathname,
 				// The same widths at a fraction of the start: the other's patterns take 45 ms to be made ready.
 				'string-width': 'fast-string-width',
 			},

@@ -1,7 +1,7 @@
 import * as nodeModule from 'node:module';
 import {answer, replyFault} from './commands/main.ts';
 import {screenRequest} from './commands/screen-request.ts';
-import {processSurroundings} from './commands/surroundings.ts';
+import {canDraw, processSurroundings} from './commands/surroundings.ts';
 import {writeReply} from './commands/write-reply.ts';
 
 // Node 22 and later keep compiled code between runs; Node 20 has no such function.
@@ -17,10 +17,11 @@ process.on('uncaughtException', async error => {
 const words = process.argv.slice(2);
 const isTerminal = process.stdin.isTTY === true && process.stdout.isTTY === true;
 const request = isTerminal ? screenRequest(words) : undefined;
-if (request) {
+if (request && canDraw(process.env, isTerminal)) {
 	const {openAtTerminal} = await import('./commands/at-terminal.ts');
 	await openAtTerminal(request, surroundings);
 	process.exit(process.exitCode);
 }
 const reply = await answer(words, surroundings);
-process.exitCode = await writeReply(reply, process.stdout, process.stderr);
+const note = request ? 'droprack: TERM is dumb, so the ranking is printed; the screen moves the cursor.\n' : '';
+process.exitCode = await writeReply({...reply, err: note + reply.err}, process.stdout, process.stderr);

@@ -65,7 +65,7 @@ const unknownCommand = (name: string): string => {
 };
 
 /**
- * Reads the words after the program's name. Options may stand anywhere; the last of a repeated option counts.
+ * Reads the words after the program's name. Options may stand anywhere.
  * `--help` and `--version` come before everything that is wrong with the rest.
  */
 export const readCommandLine = (words: readonly string[]): CommandLine => {
@@ -90,13 +90,20 @@ export const readCommandLine = (words: readonly string[]): CommandLine => {
 	for (const token of optionTokens) {
 		const problem = optionProblem(token, allowed, command);
 		if (problem !== undefined) return bad(problem);
-		given[token.name as OptionName] = token.value ?? true;
+		add(given, token.name as OptionName, token.value);
 	}
 	const following = [argument, ...more].filter(word => word !== undefined);
 	const surplus = command?.many ? [] : following.slice(command?.second ? 2 : command?.argument ? 1 : 0);
 	if (command && surplus.length > 0) return bad(surplusWords(command, surplus));
 	const request = toRequest(argument, given, command?.second ? more[0] : undefined, command?.many ? more : []);
 	return typeof request === 'string' ? bad(request) : {kind: 'run', command, request};
+};
+
+/** The last of a repeated option counts, unless it may be repeated. */
+const add = (given: Given, name: OptionName, value: string | undefined): void => {
+	const before = given[name];
+	if (option(name).many !== true || value === undefined) given[name] = value ?? true;
+	else given[name] = [...(Array.isArray(before) ? before : []), value];
 };
 
 const surplusWords = (command: Command, surplus: readonly string[]): string => {

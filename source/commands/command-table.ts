@@ -1,5 +1,6 @@
 /** Every command once: parsing, help and the messages about unknown ones are made from this table. */
 import type {Command} from './command.ts';
+import {learnCommands} from './learn-commands.ts';
 import {lifeCommands} from './life-commands.ts';
 import {loadingCommands} from './loading-commands.ts';
 import {oddsCommands} from './odds-commands.ts';
@@ -88,6 +89,7 @@ export const commands: readonly Command[] = [
 		],
 		load: async () => (await import('./schema.ts')).schema,
 	},
+	...learnCommands,
 	...lifeCommands,
 	...oddsCommands,
 	...storeCommands,

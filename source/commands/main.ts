@@ -20,8 +20,7 @@ export const answer = async (words: readonly string[], around: Surroundings): Pr
 
 const reply = async (words: readonly string[], around: Surroundings): Promise<Reply> => {
 	const line = readCommandLine(words);
-	if (line.kind === 'bad')
-		return replyRefused(badInput(`droprack: ${line.message.split('\n').map(visible).join('\n')}`));
+	if (line.kind === 'bad') return replyRefused(badInput(`droprack: ${line.message}`));
 	if (line.kind === 'version') return replyDone(`droprack ${version}\n`);
 	if (line.kind === 'help') return replyDone(line.command ? commandHelp(line.command) : topHelp());
 	// The bare command ranks the demo track.

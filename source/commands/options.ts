@@ -5,6 +5,8 @@ export type Option = {
 	value?: string;
 	short?: string;
 	summary: string;
+	/** May be given again and again; each counts. */
+	many?: true;
 };
 
 export const options = {
@@ -37,6 +39,30 @@ export const options = {
 	qr: {summary: 'draw it as a QR code; with --short the one line'},
 	take: {summary: "keep the plan's track, with its pair, set and notes, once it is compared"},
 	copy: {summary: "send it to the terminal's clipboard too"},
+	seen: {
+		value: 'TEXT',
+		many: true,
+		summary: 'what was seen: "Back 8420 rpm gear 4 185 mph"; the speed only where it is known; may be repeated',
+	},
+	hold: {
+		value: 'speed|circumference',
+		summary: 'what is taken for right where no speed was seen; circumference unless given',
+	},
+	column: {
+		value: 'CHANNEL=HEADER',
+		many: true,
+		summary: 'which column of the log it is, such as speed="GPS Speed"; may be repeated',
+	},
+	accept: {
+		value: 'all|NAME',
+		many: true,
+		summary: 'write what was learned into track and car; NAME as listed; may be repeated',
+	},
+	'take-back': {
+		value: 'all|NAME',
+		many: true,
+		summary: 'put back what stood there before it was learned; may be repeated',
+	},
 	shorter: {value: 'N', summary: 'steps shorter than the best pair to carry; 1 unless given'},
 	taller: {value: 'N', summary: 'steps taller than the best pair to carry; 1 unless given'},
 	within: {

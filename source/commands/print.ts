@@ -11,7 +11,7 @@ const widest = 200;
 
 export const printText = (blocks: readonly Block[], request: Request, around: Surroundings): string => {
 	const width = Math.min(widest, Math.max(narrowest, around.columns));
-	return paint(layOut(blocks, width), {color: around.color, ascii: request.ascii});
+	return paint(layOut(blocks, width, request.ascii), {color: around.color, ascii: request.ascii});
 };
 
 /** What JSON leaves as it is and a terminal may act on: further controls, direction marks, line separators. */

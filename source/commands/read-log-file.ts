@@ -20,11 +20,14 @@ type Asked = Pick<ReadLogOptions, 'columns' | 'remembered'> & {
 	readonly onProgress?: (bytes: number, totalBytes: number | undefined) => void;
 };
 
+/** Where standard input and the terminal come from. */
+type Source = Pick<Surroundings, 'standardInput' | 'progress'>;
+
 /** Larger pieces than a stream takes of itself: half of the time for a long file. */
 const pieceBytes = 1 << 18;
 
 /** The log of that name, or of standard input for `-`; a log that cannot be used is a refusal with what to do about it. */
-export const readLogFile = async (asked: string, around: Surroundings, options: Asked): Promise<Found<LogFile>> => {
+export const readLogFile = async (asked: string, around: Source, options: Asked): Promise<Found<LogFile>> => {
 	const file = await tryLogFile(asked, around, options);
 	if (!file.ok) return file;
 	const {label, reading} = file.value;
@@ -34,7 +37,7 @@ export const readLogFile = async (asked: string, around: Surroundings, options: 
 /** As `readLogFile`; what is wrong with the log itself is left as it is, for whoever can ask about it. */
 export const tryLogFile = async (
 	asked: string,
-	around: Surroundings,
+	around: Source,
 	options: Asked,
 ): Promise<Found<LogFile<LogReading>>> => {
 	const label = asked === '-' ? 'standard input' : visible(asked);

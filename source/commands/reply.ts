@@ -1,4 +1,5 @@
 /** How a command ends: what goes to standard output, what to standard error, and the exit status. */
+import {visible} from '../documents/visible.ts';
 
 export const status = {
 	done: 0,
@@ -23,15 +24,18 @@ export const found = <T>(value: T): Found<T> => ({ok: true, value});
 export const badInput = (message: string): Refusal => ({ok: false, status: status.badInput, message});
 export const unreachable = (message: string): Refusal => ({ok: false, status: status.unreachable, message});
 
+/** Words of the command line and of documents are in it: nothing in them moves the cursor. */
+const shownLines = (message: string): string => message.split('\n').map(visible).join('\n');
+
 export const replyRefused = (refusal: Refusal): Reply => ({
 	status: refusal.status,
 	out: '',
-	err: `${refusal.message}\n`,
+	err: `${shownLines(refusal.message)}\n`,
 });
 
 /** A result, with what is worth knowing beside it. */
 export const replyDone = (out: string, notes: readonly string[] = [], failed = false): Reply => ({
 	status: failed ? status.checkFailed : status.done,
 	out,
-	err: notes.map(note => `droprack: ${note}\n`).join(''),
+	err: notes.map(note => `droprack: ${shownLines(note)}\n`).join(''),
 });

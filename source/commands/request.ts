@@ -1,5 +1,6 @@
 /** What a command is asked: the options with their values read. */
 
+import type {Held} from '../practice/learn/seen.ts';
 import type {UnitSystem} from '../text/units.ts';
 import type {OptionName} from './options.ts';
 
@@ -34,6 +35,11 @@ export type Request = {
 	short?: boolean;
 	qr?: boolean;
 	copy?: boolean;
+	seen?: readonly string[];
+	hold?: Held;
+	column?: readonly string[];
+	accept?: readonly string[];
+	takeBack?: readonly string[];
 	shorter?: number;
 	taller?: number;
 	withinS?: number;
@@ -50,8 +56,8 @@ export type Request = {
 	ascii: boolean;
 };
 
-/** Options as they were written; a switch is true. */
-export type Given = Partial<Record<OptionName, string | true>>;
+/** Options as they were written; a switch is true, one that may be repeated a list. */
+export type Given = Partial<Record<OptionName, string | true | readonly string[]>>;
 
 const pairPattern = /^\s*(\d{1,4})\s*\/\s*(\d{1,4})\s*$/;
 
@@ -87,6 +93,14 @@ const switchesOf = (given: Given) => ({
 	...(given.together && {together: true}),
 });
 
+const listsOf = ({seen, column, accept, hold, 'take-back': takeBack}: Given): Partial<Request> => ({
+	...(Array.isArray(seen) && {seen}),
+	...(Array.isArray(column) && {column}),
+	...(Array.isArray(accept) && {accept}),
+	...(Array.isArray(takeBack) && {takeBack}),
+	...((hold === 'speed' || hold === 'circumference') && {hold}),
+});
+
 /** The request that the options make, or what is wrong with a value. */
 export const toRequest = (
 	argument: string | undefined,
@@ -104,6 +118,9 @@ export const toRequest = (
 	};
 	if (given.units === 'metric') request.units = 'metric';
 	else if (given.units !== undefined && given.units !== 'us') return `--units is us or metric, found ${given.units}.`;
+	if (given.hold !== undefined && given.hold !== 'speed' && given.hold !== 'circumference')
+		return `--hold is speed or circumference, found ${given.hold}.`;
+	Object.assign(request, listsOf(given));
 	if (typeof given.top === 'string') {
 		if (!/^[1-9]\d{0,5}$/.test(given.top)) return `--top is a whole number from 1, found ${given.top}.`;
 		request.top = Number(given.top);

@@ -4,12 +4,14 @@ import {homedir} from 'node:os';
 import {resolve} from 'node:path';
 import {maxDocumentBytes} from '../documents/read.ts';
 import {visible} from '../documents/visible.ts';
+import type {RememberedColumns} from '../logs/read-log.ts';
 import type {Errands, Saving, Writing} from '../screens/errands.ts';
 import {codeOf, problemText} from '../store/answer.ts';
 import {writeDurably} from '../store/durable-write.ts';
 import {exportStore} from '../store/export-store.ts';
 import {addToHistory} from '../store/history.ts';
 import {keptNamed} from '../store/list-kept.ts';
+import {readPreferences, rememberColumns} from '../store/preferences.ts';
 import {forgetKept} from '../store/save-kept.ts';
 import {localDay} from '../text/heading-view.ts';
 import {copyText} from './copy.ts';
@@ -31,6 +33,20 @@ export function screenErrands(
 			const input = await readFileText(pathOf(file), maxDocumentBytes);
 			return input.ok ? {ok: true, ...input.value} : {ok: false, words: input.message};
 		},
+		readLog: async (file, columns, car, onProgress) => {
+			// The reader of logs is not needed before there is one.
+			const {readLogFile} = await import('./read-log-file.ts');
+			const preferences = readPreferences(home);
+			const remembered = preferences.ok
+				? (preferences.value.logColumns?.[car] as RememberedColumns | undefined)
+				: undefined;
+			const answer = await readLogFile(pathOf(file), noInput, {columns, remembered, onProgress: seldom(onProgress)});
+			if (!answer.ok) return {ok: false, words: answer.message};
+			const {label, reading} = answer.value;
+			const kept = reading.remember as Parameters<typeof rememberColumns>[2];
+			await rememberColumns(home, car, kept);
+			return {ok: true, label, reading};
+		},
 		history: track => keptNamed(home, 'history', track)?.document.entries ?? [],
 		addToHistory: (track, entry) => {
 			const answer = addToHistory(home, track, [entry]);
@@ -38,6 +54,25 @@ export function screenErrands(
 			return {ok: true, words: `Added to the history of ${visible(track)}.`};
 		},
 		exportTo: directory => exportAll(home, pathOf(directory)),
+	};
+}
+
+/** A screen has no standard input to read a log from. */
+const noInput = {
+	standardInput: async function* (): AsyncGenerator<Uint8Array> {},
+};
+
+/** No eye follows more. */
+const betweenMs = 120;
+
+/** Tells the share that was read, and lets keys and drawing have their turn. */
+function seldom(tell: (share: number | undefined) => void) {
+	let nextMs = performance.now() + betweenMs;
+	return (bytes: number, totalBytes: number | undefined) => {
+		const now = performance.now();
+		if (now < nextMs) return;
+		nextMs = now + betweenMs;
+		tell(totalBytes === undefined ? undefined : Math.min(1, bytes / totalBytes));
 	};
 }
 

@@ -35,7 +35,10 @@ export function screenKeeper(home: string, errands: ReturnType<typeof screenErra
 				return saving;
 			},
 		},
-		where: () => (session.isKept ? sessionFolder(home) : undefined),
+		where: () => {
+			session.write();
+			return session.isKept ? sessionFolder(home) : undefined;
+		},
 	};
 }
 

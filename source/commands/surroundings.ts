@@ -26,6 +26,10 @@ export const wantsColor = (environment: Surroundings['environment'], isTerminal:
 	return isTerminal && environment.TERM !== 'dumb';
 };
 
+/** Whether a screen can be drawn: a terminal at both ends, one that moves its cursor. */
+export const canDraw = (environment: Surroundings['environment'], isTerminal: boolean): boolean =>
+	isTerminal && environment.TERM !== 'dumb';
+
 const progressOn = (
 	stream: NodeJS.WriteStream,
 	environment: Surroundings['environment'],

@@ -1,11 +1,11 @@
 /** What several fields of a car must be together. Each rule looks only at what could be read. */
-import {type Report, reportRepeated, rule} from './fields.ts';
+import {listRule, type Report, reportRepeated, rule} from './fields.ts';
 
 type Named = {name?: unknown};
 const nameOf = ({name}: Named) => name;
 
 export const curveRules = () =>
-	rule<readonly {rpm?: unknown; torque?: unknown}[]>((points, report) => {
+	listRule<{rpm?: unknown; torque?: unknown} | undefined>((points, report) => {
 		for (let i = 1; i < points.length; i++) {
 			const [before, rpm] = [points[i - 1]?.rpm, points[i]?.rpm];
 			if (typeof before !== 'number' || typeof rpm !== 'number' || rpm > before) continue;
@@ -24,7 +24,7 @@ export const engineRules = () =>
 	});
 
 export const ratioRules = () =>
-	rule<readonly unknown[]>((ratios, report) => {
+	listRule<unknown>((ratios, report) => {
 		for (let i = 1; i < ratios.length; i++) {
 			const [before, ratio] = [ratios[i - 1], ratios[i]];
 			if (typeof before !== 'number' || typeof ratio !== 'number' || ratio <= before) continue;
@@ -68,10 +68,11 @@ export const efficiencyRules = () =>
 		if (efficiencies === undefined) return;
 		if (efficiency !== undefined) report(['efficiencies'], 'either "efficiency" or "efficiencies"');
 		if (!Array.isArray(efficiencies)) return;
-		for (const gearbox of listOf(gearboxes) as {name?: unknown; ratios?: unknown}[]) {
+		for (const [i, gearbox] of (listOf(gearboxes) as {name?: unknown; ratios?: unknown}[]).entries()) {
 			const ratios = gearbox?.ratios;
 			if (!Array.isArray(ratios) || ratios.length === efficiencies.length) continue;
-			report(['efficiencies'], `one for each of the ${ratios.length} gears of gearbox "${gearbox.name}"`);
+			const which = typeof gearbox.name === 'string' ? `"${gearbox.name}"` : `number ${i + 1}`;
+			report(['efficiencies'], `one for each of the ${ratios.length} gears of gearbox ${which}`);
 		}
 		const places = listOf(gearInventory?.gears).map(one => one?.gear);
 		const highest = Math.max(0, ...places.filter(place => typeof place === 'number'));
@@ -103,6 +104,8 @@ export const carRules = () =>
 
 function reportUnknownGearboxes({gearboxes, installed, rules}: CarValues, report: Report): void {
 	const names = listOf(gearboxes).map(gearbox => gearbox?.name);
+	// A name that cannot be read may be the one that is meant.
+	if (names.length === 0 || names.some(name => typeof name !== 'string')) return;
 	const checked = (name: unknown, path: PropertyKey[]) => {
 		if (typeof name !== 'string' || names.includes(name)) return;
 		report(path, `a gearbox of this car: ${names.map(known => `"${known}"`).join(', ')}`);
@@ -119,7 +122,7 @@ function reportInstalledPair({installed, rack}: CarValues, report: Report): void
 	const name = pairName(installed?.pair);
 	const pairs = listOf(rack?.pairs);
 	if (name === undefined || pairs.length === 0) return;
-	const flipped = ({driving, driven}: PairValues = {}) => pairName({driving: driven, driven: driving});
+	const flipped = (pair: PairValues | null) => pairName({driving: pair?.driven, driven: pair?.driving});
 	const names = pairs.flatMap(pair =>
 		rack?.eitherShaft === true ? [pairName(pair), flipped(pair)] : [pairName(pair)],
 	);

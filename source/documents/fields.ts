@@ -162,13 +162,22 @@ export type Report = (path: readonly PropertyKey[], allowed: string, params?: Is
  * A rule about several fields at once. It runs also where single fields are wrong, so that every problem is listed; a
  * field may then hold anything, and the rule looks only at what it can read.
  */
-export function rule<T>(check: (value: T, report: Report) => void) {
+export function rule<T extends object>(check: (value: T, report: Report) => void) {
+	return ruleWhen(check, value => typeof value === 'object' && value !== null && !Array.isArray(value));
+}
+
+/** As `rule`, about the entries of a list. */
+export function listRule<E>(check: (value: readonly E[], report: Report) => void) {
+	return ruleWhen(check, Array.isArray);
+}
+
+function ruleWhen<T>(check: (value: T, report: Report) => void, isReadable: (value: unknown) => boolean) {
 	return z.check<T>(
 		payload =>
 			check(payload.value, (path, message, params = {}) =>
 				payload.issues.push({code: 'custom', input: payload.value, path: [...path], message, params}),
 			),
-		{when: ({value}: {value: unknown}) => typeof value === 'object' && value !== null},
+		{when: ({value}: {value: unknown}) => isReadable(value)},
 	);
 }
 

@@ -28,13 +28,19 @@ export function brokenJson(text: string): Problem {
 	const first = firstError(text);
 	const offset = Math.min(first?.offset ?? text.length, text.length);
 	const excerpt = excerptAt(text, offset);
-	const found =
-		offset >= text.length
-			? 'the end of the document'
-			: shortened(text.slice(offset, offset + Math.max(1, first?.length ?? 1)));
+	const found = foundAt(text, offset, first?.length ?? 1);
 	const allowed = (first && missing[first.code]) ?? 'JSON';
 	return {path: '', ...placeOf(text, offset), found, allowed, ...(excerpt !== undefined && {excerpt})};
 }
+
+function foundAt(text: string, offset: number, length: number): string {
+	const piece = text.slice(offset, offset + Math.max(1, length));
+	if (text.slice(offset).trim() === '') return 'the end of the document';
+	// JSON knows four blanks; others look like them.
+	return piece.trim() === '' ? `a blank that is none in JSON (U+${codeOf(piece)})` : shortened(piece);
+}
+
+const codeOf = (piece: string): string => piece.charCodeAt(0).toString(16).toUpperCase().padStart(4, '0');
 
 type FirstError = {offset: number; length: number; code: string};
 

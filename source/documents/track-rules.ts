@@ -1,15 +1,18 @@
 /** What several fields of a track must be together. Each rule looks only at what could be read. */
-import {type Report, reportRepeated, rule} from './fields.ts';
+import {listRule, type Report, reportRepeated, rule} from './fields.ts';
+import {shortened, shown} from './problem.ts';
 
 /** The name of the situation that is the track as it stands. */
 export const baseName = 'Base';
 
 export const gearListRules = () =>
-	rule<readonly unknown[]>((gears, report) => {
+	listRule<unknown>((gears, report) => {
 		const first = gears[0];
 		const isRun = gears.every((gear, i) => typeof gear !== 'number' || typeof first !== 'number' || gear === first + i);
 		if (!isRun)
-			report([], 'gears in rising order without gaps, like [3, 4, 5]', {found: `[${gears.map(String).join(', ')}]`});
+			report([], 'gears in rising order without gaps, like [3, 4, 5]', {
+				found: shortened(`[${gears.map(shown).join(', ')}]`),
+			});
 	});
 
 type StraightValues = {length?: unknown; end?: unknown; entry?: unknown; braking?: unknown};

@@ -1,4 +1,5 @@
 /** What the screen asks of whoever started it beside saving: the clipboard, files, the history and all that is kept. */
+import type {AskedColumns, LogRead} from '../logs/read-log.ts';
 import type {HistoryEntry} from '../store/kept-documents.ts';
 
 /** `words` are for the person. */
@@ -6,6 +7,10 @@ export type Saving = {readonly ok: boolean; readonly words: string};
 
 export type FileText =
 	| {readonly ok: true; readonly label: string; readonly text: string}
+	| {readonly ok: false; readonly words: string};
+
+export type LogAnswer =
+	| {readonly ok: true; readonly label: string; readonly reading: LogRead}
 	| {readonly ok: false; readonly words: string};
 
 /** `exists`: there is such a file, and nothing was written. */
@@ -21,6 +26,13 @@ export type Errands = {
 	/** An existing file gives way only where `replace` is set. */
 	write(file: string, text: string, replace: boolean): Writing;
 	read(file: string): Promise<FileText>;
+	/** A logged run; how its columns are read is remembered by the car. `onProgress` gets the share that was read, where that is known. */
+	readLog(
+		file: string,
+		columns: AskedColumns,
+		car: string,
+		onProgress: (share: number | undefined) => void,
+	): Promise<LogAnswer>;
 	/** What is kept of the track of that name, in the order in which it was added. */
 	history(track: string): readonly HistoryEntry[];
 	addToHistory(track: string, entry: HistoryEntry): Saving;

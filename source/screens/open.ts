@@ -45,14 +45,16 @@ async function openOnScreen(opening: Opening): Promise<void> {
 			screen.close();
 			unmount();
 		},
+		comeBack: () => screen.redraw(),
 		lastWords: () => {
 			const where = keeper.where();
 			return where === undefined ? '' : `The unsaved session is in ${where}; the next start offers it.\n`;
 		},
 	});
+	process.on('SIGWINCH', () => screen.windowChanged());
 	const outside = {
 		leave: () => unmount(),
-		suspend: () => terminal.suspend(() => screen.redraw()),
+		suspend: () => terminal.suspend(),
 		redraw: () => screen.redraw(),
 	};
 	const live = new LiveSession(sessionOf(opening), opening.catalog, keeper, outside, clock);

@@ -131,9 +131,11 @@ const chosenRules = () =>
 		const pairs = car?.rack?.pairs;
 		if (pair?.driving === undefined || !Array.isArray(pairs)) return;
 		const isPair = (one: number | unknown, other: unknown) => one === pair.driving && other === pair.driven;
+		// An entry may be anything: what is wrong with it is said where it stands.
 		const found = pairs.some(
-			({driving, driven}: Teeth) =>
-				isPair(driving, driven) || (car?.rack?.eitherShaft === true && isPair(driven, driving)),
+			(entry: Teeth | null) =>
+				isPair(entry?.driving, entry?.driven) ||
+				(car?.rack?.eitherShaft === true && isPair(entry?.driven, entry?.driving)),
 		);
 		if (!found) report(['pair'], 'a pair on the rack of the car in the plan');
 	});

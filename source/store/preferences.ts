@@ -5,7 +5,11 @@ import {join} from 'node:path';
 export type Preferences = {
 	/** Name of the car that is taken where none is named. */
 	car?: string;
+	/** By the name of the car: how the columns of its logs were read last. What is in it, the reader of logs knows. */
+	logColumns?: Readonly<Record<string, LogColumns>>;
 };
+/** By channel: header and unit. */
+export type LogColumns = Readonly<Record<string, {readonly header: string | null; readonly unit?: string}>>;
 export type PreferencesRead =
 	| {ok: true; value: Preferences}
 	| {ok: false; reason: 'broken' | 'unreachable'; message: string};
@@ -42,22 +46,54 @@ export const readPreferences = (home: string): PreferencesRead => {
 	}
 	if (typeof content !== 'object' || content === null || Array.isArray(content))
 		return broken('the preferences are not an object');
-	const {version, car} = content as {version?: unknown; car?: unknown};
+	const {version, car, logColumns} = content as {version?: unknown; car?: unknown; logColumns?: unknown};
 	if (version !== formatVersion)
 		return broken(`the preferences have version ${JSON.stringify(version)}, expected ${formatVersion}`);
 	if (car !== undefined && (typeof car !== 'string' || car === '')) return broken('the preferred car is not a name');
-	return {ok: true, value: car === undefined ? {} : {car}};
+	const columns = understood(logColumns);
+	return {ok: true, value: {...(car !== undefined && {car}), ...(columns !== undefined && {logColumns: columns})}};
 };
 
+/** What a person has made of it by hand is passed over where it is not of this shape: it is only a convenience. */
+const understood = (logColumns: unknown): Preferences['logColumns'] => {
+	if (!isRecord(logColumns)) return undefined;
+	const cars = Object.entries(logColumns).filter(
+		([, columns]) => isRecord(columns) && Object.values(columns).every(isColumn),
+	);
+	return cars.length === 0 ? undefined : (Object.fromEntries(cars) as Preferences['logColumns']);
+};
+
+const isRecord = (value: unknown): value is Record<string, unknown> =>
+	typeof value === 'object' && value !== null && !Array.isArray(value);
+const isColumn = (value: unknown): boolean =>
+	isRecord(value) &&
+	(value.header === null || typeof value.header === 'string') &&
+	(value.unit === undefined || typeof value.unit === 'string');
+
 /** Keeps the preferred car, or forgets it. Writes nothing over a file that cannot be read. */
-export const preferCar = async (home: string, car: string | undefined): Promise<PreferencesWritten> => {
+export const preferCar = (home: string, car: string | undefined): Promise<PreferencesWritten> =>
+	change(home, ({car: before, ...rest}) => (before === car ? undefined : {...rest, ...(car !== undefined && {car})}));
+
+/** Keeps how the columns of a car's logs were read. */
+export const rememberColumns = (home: string, car: string, columns: LogColumns): Promise<PreferencesWritten> =>
+	change(home, before => {
+		const isSame = JSON.stringify(before.logColumns?.[car] ?? {}) === JSON.stringify(columns);
+		return isSame ? undefined : {...before, logColumns: {...before.logColumns, [car]: columns}};
+	});
+
+/** Undefined changes nothing. */
+const change = async (
+	home: string,
+	make: (before: Preferences) => Preferences | undefined,
+): Promise<PreferencesWritten> => {
 	const before = readPreferences(home);
 	if (!before.ok) return before;
-	if (before.value.car === car) return {ok: true};
+	const made = make(before.value);
+	if (made === undefined) return {ok: true};
 	try {
 		const {default: Conf} = await import('conf');
 		const store = new Conf({projectName: 'droprack', cwd: home, configName, accessPropertiesByDotNotation: false});
-		store.store = {version: formatVersion, ...(car !== undefined && {car})};
+		store.store = {version: formatVersion, ...made};
 		return {ok: true};
 	} catch (error) {
 		return {

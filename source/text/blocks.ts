@@ -1,8 +1,9 @@
 /** What a view gives: blocks of cells whose meaning is named. Layout takes the width, paint the color. */
 import {visible} from '../documents/visible.ts';
+import type {Cell, Line, Tone} from './cell.ts';
 
-export type Tone = 'plain' | 'strong' | 'muted' | 'pass' | 'near' | 'fail';
-export type Cell = {text: string; tone: Tone};
+export type {Cell, Tone} from './cell.ts';
+export {cell} from './cell.ts';
 
 export type Column = {
 	head: string;
@@ -20,10 +21,9 @@ export type Block =
 	/** One line, cut to the width. */
 	| {kind: 'line'; cells: readonly Cell[]}
 	| {kind: 'gap'}
+	/** What draws itself for a width, such as a picture: a listing does not load what draws. */
+	| {kind: 'drawn'; draw: (width: number, ascii: boolean) => Line[]}
 	| Table;
-
-/** A cell; what a stranger's text could do to a terminal becomes visible here. */
-export const cell = (text: string, tone: Tone = 'plain'): Cell => ({text: visible(text), tone});
 
 export const gap: Block = {kind: 'gap'};
 export const text = (content: string, tone: Tone = 'plain', hang = 0): Block => ({

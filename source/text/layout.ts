@@ -1,8 +1,9 @@
 /** From blocks to lines no wider than the width. A pure function of both. */
 import {type Block, type Cell, type Column, cell, type Table} from './blocks.ts';
+import type {Line} from './cell.ts';
 import {cut, displayWidth, padTo, wrap} from './width.ts';
 
-export type Line = readonly Cell[];
+export type {Line} from './cell.ts';
 
 const between = '  ';
 
@@ -66,11 +67,12 @@ const clip = (cells: Line, width: number): Line => {
 	return clipped;
 };
 
-export const layOut = (blocks: readonly Block[], width: number): Line[] =>
+export const layOut = (blocks: readonly Block[], width: number, ascii = false): Line[] =>
 	blocks
 		.flatMap((block): Line[] => {
 			if (block.kind === 'gap') return [[]];
 			if (block.kind === 'line') return [block.cells];
+			if (block.kind === 'drawn') return block.draw(width, ascii);
 			if (block.kind === 'table') return tableLines(block, width);
 			return wrap(block.text, width, block.hang).map(text => [{text, tone: block.tone}]);
 		})

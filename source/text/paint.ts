@@ -15,6 +15,8 @@ const paints = (color: boolean): Record<Tone, Paint> => {
 		pass: colors.green,
 		near: colors.yellow,
 		fail: text => colors.bold(colors.red(text)),
+		first: text => text,
+		second: colors.magenta,
 	};
 };
 
@@ -34,6 +36,12 @@ const standIns: Readonly<Record<string, string>> = {
 	'’': "'",
 	'“': '"',
 	'”': '"',
+	'│': '|',
+	'─': '-',
+	'┤': '+',
+	'┬': '+',
+	'└': '+',
+	'╌': '-',
 };
 
 /** The text in ASCII, as wide as it was: letters lose their accents, what has no stand-in becomes question marks. */

@@ -56,6 +56,8 @@ export type Units = {
 	number: (quantity: Quantity, value: number | null) => string;
 	/** The number with its unit. */
 	text: (quantity: Quantity, value: number | null) => string;
+	/** What one SI unit of it is, not rounded; for pictures. */
+	perSi: (quantity: Exclude<Quantity, 'temperature'>) => number;
 };
 
 export const absent = '-';
@@ -72,7 +74,8 @@ export const unitsOf = (system: UnitSystem): Units => {
 		const gap = quantity === 'temperature' ? '' : ' ';
 		return value === null ? absent : `${number(quantity, value)}${gap}${label(quantity)}`;
 	};
-	return {label, number, text};
+	const perSi = (quantity: Quantity) => 1 / units[quantity].size;
+	return {label, number, text, perSi};
 };
 
 /** A rounded number without a negative zero. */

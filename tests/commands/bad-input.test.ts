@@ -53,6 +53,7 @@ test.each<[string, string[], string | Uint8Array, RegExp]>([
 	['a file to show', ['show', './tests/fixtures/car.json'], '', /a file is a document already/],
 	['nothing to show', ['show'], '', /which NAME\?[\s\S]*Fixture Car/],
 	['an unknown kind of schema', ['schema', 'tracks'], '', /track or car\? Found tracks/],
+	['a kind of schema that would turn the line', ['schema', '\u202etrack\u001b[2J'], '', /Found \ufffdtrack␛\[2J/],
 	['an unknown car to prefer', ['cars', '--prefer', 'zzz'], '', /no car called zzz/],
 	['a file to prefer', ['cars', '--prefer', './car.json'], '', /not a file/],
 ])('%s: status 2, a reason, nothing on standard output, no stack', async (_, words, input, message) => {

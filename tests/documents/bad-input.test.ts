@@ -173,6 +173,18 @@ describe('a car', () => {
 			/a pair of this rack/,
 		],
 		[
+			'with a gearbox whose name cannot be read, which may be the installed one',
+			{gearboxes: [{name: {}, ratios: [1]}], installed: {pair: '33/38', gearbox: 'A'}},
+			'gearboxes[0].name',
+			/found an object/,
+		],
+		[
+			'with nothing in the place of a pair',
+			{rack: {eitherShaft: true, pairs: [{driving: 33, driven: 38}, null]}, installed: {pair: '38/33', gearbox: 'A'}},
+			'rack.pairs[1]',
+			/found null/,
+		],
+		[
 			'with single gears that leave out a gear',
 			{
 				gearInventory: {
@@ -252,6 +264,23 @@ test('every problem is listed at once, in the order of the text, with line and c
 	expect(describeProblems('a.json', problems.slice(1, 2))).toMatch(
 		/^a\.json:3:3: nmae: found an unknown field; allowed one of /,
 	);
+});
+
+test('a list of gears with something else in it is shown as it can be read', async () => {
+	const problems = await problemsOfTrack({gears: [3, 2, [{}]]});
+	expect(problems.map(({path, found}) => [path, found])).toEqual([
+		['gears', '[3, 2, a list of 1]'],
+		['gears[2]', 'a list of 1'],
+	]);
+});
+
+test('a gearbox whose name cannot be read is named by its place', async () => {
+	const gearboxes = [{name: {}, ratios: [2, 1]}];
+	const problems = await problemsOfCar({gearboxes, efficiency: undefined, efficiencies: [0.9]});
+	expect(problems.map(({path, allowed}) => [path, allowed])).toEqual([
+		['gearboxes[0].name', expect.stringMatching(/1 to 200 characters/)],
+		['efficiencies', 'one for each of the 2 gears of gearbox number 1'],
+	]);
 });
 
 test('a list that is too short is searched all the same', async () => {

@@ -28,6 +28,16 @@ describe('text that is not JSON is answered with line, column and what is missin
 			'{"a": NaN}',
 			'x.json:1:7: found NaN; allowed a number, true, false, null or a text in double quotes.\n{"a": NaN}\n      ^',
 		],
+		[
+			'an end after blanks',
+			'{"a": 1,\n  ',
+			'x.json:2:3: found the end of the document; allowed the name of a field in double quotes.',
+		],
+		[
+			'a blank of a word processor',
+			'{\u00a0"a": 1}',
+			'x.json:1:2: found a blank that is none in JSON (U+00A0); allowed a number, true, false, null or a text in double quotes.\n{\u00a0"a": 1}\n ^',
+		],
 		['a comment', '{} // a', 'x.json:1:4: found // a; allowed no comments.\n{} // a\n   ^'],
 	])('%s', async (_, text, wanted) => {
 		expect(await message(text)).toBe(wanted);

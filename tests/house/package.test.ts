@@ -1,9 +1,10 @@
 import {execFileSync} from 'node:child_process';
-import {mkdtempSync, readFileSync, rmSync} from 'node:fs';
+import {mkdtempSync, readdirSync, readFileSync, rmSync} from 'node:fs';
 import {tmpdir} from 'node:os';
-import {join} from 'node:path';
+import {join, resolve} from 'node:path';
 import {fileURLToPath} from 'node:url';
 import {afterAll, beforeAll, describe, expect, test} from 'vitest';
+import {Pty} from '../screens/pty.ts';
 
 const root = fileURLToPath(new URL('../..', import.meta.url));
 const place = mkdtempSync(join(tmpdir(), 'droprack-package-'));
@@ -43,12 +44,15 @@ test('the package holds the program, the shipped documents and what must go with
 	expect(paths.some(isChunk)).toBe(true);
 });
 
+const notices = readFileSync(join(root, 'dist', 'THIRD-PARTY.txt'), 'utf8')
+	.split(/^-{80}$/m)
+	.slice(1)
+	.map(notice => notice.trim());
+
 test('every package in the bundle is there with a free license and its text', () => {
-	const notices = readFileSync(join(root, 'dist', 'THIRD-PARTY.txt'), 'utf8')
-		.split(/^-{80}$/m)
-		.slice(1);
-	expect(notices.map(notice => notice.trim().split(' ')[0])).toEqual(
-		expect.arrayContaining(['zod', 'mathjs', 'picocolors']),
+	expect(notices.map(notice => notice.split(' ')[0])).toEqual(
+		// The bundler adds some lines of its own.
+		expect.arrayContaining(['zod', 'mathjs', 'picocolors', 'rolldown']),
 	);
 	for (const notice of notices) {
 		expect(notice).toMatch(/^License: (MIT|ISC|0BSD|BSD-[23]-Clause|Apache-2\.0)$/m);
@@ -58,6 +62,8 @@ test('every package in the bundle is there with a free license and its text', ()
 
 describe('installed from the package, without a network', () => {
 	const prefix = join(place, 'prefix');
+	/** A cache with nothing in it, and a registry that nobody answers at. */
+	const nothing = ['--cache', join(place, 'cache'), '--registry', 'http://127.0.0.1:9/'];
 	const droprack = (...words: string[]) =>
 		execFileSync(join(prefix, 'bin', 'droprack'), words, {
 			cwd: place,
@@ -70,6 +76,7 @@ describe('installed from the package, without a network', () => {
 			'install',
 			'--global',
 			'--offline',
+			...nothing,
 			'--no-audit',
 			'--no-fund',
 			'--prefix',
@@ -83,12 +90,52 @@ describe('installed from the package, without a network', () => {
 		expect(rows.length).toBeGreaterThanOrEqual(3);
 	});
 
+	test('it opens the screen, also where React would look for its tools', async () => {
+		const environment = {DROPRACK_HOME: join(place, 'home'), DEV: 'true'};
+		const pty = new Pty(join(prefix, 'bin', 'droprack'), [], {environment});
+		try {
+			await pty.waitFor('Tarrowdale');
+			await pty.waitFor('q quit');
+			pty.press('q');
+			expect(await pty.ended()).toMatchObject({exitCode: 0});
+			expect(pty.written).not.toMatch(/devtools/i);
+		} finally {
+			pty.close();
+		}
+	});
+
 	test('it lists the tracks that came with it', () => {
 		expect(droprack('tracks')).toContain('Quillmere');
 	});
 });
 
-test('the build before a start says nothing', () => {
+describe('built anew', () => {
 	// Elsewhere than in dist: other tests are reading that.
-	expect(npm('run', '--silent', 'build', '--', '--outDir', join(place, 'dist'), '--emptyOutDir')).toBe('');
+	const built = join(place, 'dist');
+	let said: string;
+	beforeAll(() => {
+		said = npm('run', '--silent', 'build', '--', '--outDir', built, '--emptyOutDir', '--sourcemap');
+	});
+
+	test('the build before a start says nothing', () => {
+		expect(said).toBe('');
+	});
+
+	test('the notices name every package that any of the code comes from', () => {
+		const maps = readdirSync(join(built, 'chunks')).filter(name => name.endsWith('.map'));
+		const sources = maps.flatMap(name =>
+			(JSON.parse(readFileSync(join(built, 'chunks', name), 'utf8')) as {sources: string[]}).sources.map(source =>
+				resolve(built, 'chunks', source),
+			),
+		);
+		const packages = sources
+			.map(source => /^(.*\/node_modules\/((?:@[^/]+\/)?[^/]+))\//.exec(source))
+			.filter(match => match !== null);
+		const named = packages.map(([, directory, name]) => {
+			const {version} = JSON.parse(readFileSync(join(directory!, 'package.json'), 'utf8')) as {version: string};
+			return `${name} ${version}`;
+		});
+		expect(new Set(named).size).toBeGreaterThan(30);
+		expect([...new Set(named)].filter(name => !notices.some(notice => notice.startsWith(`${name}\n`)))).toEqual([]);
+	});
 });

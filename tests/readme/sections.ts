@@ -12,10 +12,10 @@ import {linesOf, stateOf} from '../screens/views/states.ts';
 import {errorOf, finestError, type OutsideCheck, worstCase} from './outside-check.ts';
 import {outsideChecks} from './outside-checks.ts';
 
-/** A fixed day, no saved preferences, no color, the width of a plain terminal. */
+/** A fixed day, no saved preferences and no place for any, no color, the width of a plain terminal. */
 const around: Surroundings = {
 	shipped: new URL('../../tracks/', import.meta.url),
-	environment: {DROPRACK_HOME: '/nonexistent'},
+	environment: {DROPRACK_HOME: '/dev/null/none'},
 	now: new Date(2026, 2, 14),
 	columns: 80,
 	color: false,
@@ -28,6 +28,14 @@ const ranking = async (): Promise<string> => {
 	const words = ['rank', demo.track, '--top', '5'];
 	const {out} = await answer(words, around);
 	return ['```', `$ droprack ${words.join(' ')}`, `${out}\`\`\``].join('\n');
+};
+
+/** The example log, without the pictures. */
+const learning = async (): Promise<string> => {
+	const words = ['learn', 'tracks/logs/quillmere.csv', 'quillmere'];
+	const {out} = await answer(words, around);
+	const told = out.slice(0, out.indexOf('Engine speed over road speed')).trimEnd();
+	return ['```', `$ droprack ${words.join(' ')}`, told, '```'].join('\n');
 };
 
 const cell = (text: string): string => text.replaceAll('|', '\\|');
@@ -102,6 +110,7 @@ const screen = (): string => {
 
 const sections: Record<string, () => string | Promise<string>> = {
 	ranking,
+	learning,
 	commands: () => `${commandTable()}\n\n${optionTable()}`,
 	'outside checks': checkTable,
 	screen,

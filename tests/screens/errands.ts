@@ -1,4 +1,5 @@
 /** Errands in memory: what a test wrote, copied and added. */
+import {readLog} from '../../source/logs/read-log.ts';
 import type {Errands} from '../../source/screens/errands.ts';
 import type {HistoryEntry} from '../../source/store/kept-documents.ts';
 
@@ -28,6 +29,16 @@ export function errandsInMemory(): {errands: Errands; done: Done} {
 		read: async file => {
 			const text = done.files.get(file);
 			return text === undefined ? {ok: false, words: `${file}: there is no such file.`} : {ok: true, label: file, text};
+		},
+		readLog: async (file, _columns, _car, onProgress) => {
+			const text = done.files.get(file);
+			if (text === undefined) return {ok: false, words: `${file}: there is no such file.`};
+			onProgress(0.5);
+			const bytes = async function* () {
+				yield new TextEncoder().encode(text);
+			};
+			const reading = await readLog(bytes());
+			return reading.ok ? {ok: true, label: file, reading} : {ok: false, words: reading.problems[0]!.found};
 		},
 		history: () => done.entries,
 		addToHistory: (track, entry) => {

@@ -20,7 +20,7 @@ export class Pty {
 		// Ink draws nothing where CI is set, whatever its value.
 		const {CI: _, CONTINUOUS_INTEGRATION: __, ...inherited} = process.env;
 		const env = {...inherited, TERM: 'xterm-256color', ...environment} as Record<string, string>;
-		this.#process = spawn(file, [...words], {cols: columns, rows, name: 'xterm-256color', env});
+		this.#process = spawn(file, [...words], {cols: columns, rows, name: env.TERM!, env});
 		this.#process.onData(data => {
 			this.written += data;
 			this.#pending++;
@@ -93,6 +93,20 @@ export class Pty {
 
 	signal(name: string): void {
 		process.kill(this.pid, name);
+	}
+
+	/** A terminal that takes nothing more for now, as on a slow line. */
+	pause(): void {
+		this.#process.pause();
+	}
+
+	resume(): void {
+		this.#process.resume();
+	}
+
+	/** The window is closed, or the line is cut. */
+	hangUp(): void {
+		(this.#process as unknown as {destroy(): void}).destroy();
 	}
 
 	/** For the end of a test: whatever is left. */

@@ -4,7 +4,8 @@ import {join} from 'node:path';
 import {afterAll, afterEach, expect, test, vi} from 'vitest';
 import {demo} from '../../source/commands/shelf.ts';
 import {makeProgram} from '../commands/program.ts';
-import {Pty} from './pty.ts';
+import {expectGivenBack, type Opening, openProgram, ranked} from './opened.ts';
+import type {Pty} from './pty.ts';
 
 const program = makeProgram();
 afterAll(program.remove);
@@ -12,23 +13,11 @@ afterAll(program.remove);
 let terminal: Pty | undefined;
 afterEach(() => terminal?.close());
 
-type Options = {columns?: number; rows?: number; environment?: Record<string, string>; words?: string[]};
-
-function open({columns = 80, rows = 24, environment = {}, words = []}: Options = {}): Pty {
-	const env = {DROPRACK_HOME: program.home, NO_COLOR: undefined, FORCE_COLOR: undefined, ...environment};
-	terminal = new Pty(process.execPath, [program.entry, ...words], {columns, rows, environment: env});
+function open(opening: Opening = {}): Pty {
+	terminal = openProgram(program, opening);
 	return terminal;
 }
-const ranked = /10 rows[\s\S]*▸ +1 /;
 const [down, right, esc] = ['\x1B[B', '\x1B[C', '\x1B'];
-
-/** The terminal as a shell expects it, and nothing of ours left on it. */
-function expectGivenBack(pty: Pty): void {
-	expect(pty.emulator.buffer.active.type).toBe('normal');
-	expect(pty.written).not.toContain('\x1B[3J');
-	expect(pty.written.lastIndexOf('\x1B[?25h')).toBeGreaterThan(pty.written.lastIndexOf('\x1B[?25l'));
-	expect(pty.written.lastIndexOf('\x1B[?2004l')).toBeGreaterThan(pty.written.lastIndexOf('\x1B[?2004h'));
-}
 
 test('start, step, edit with an error, undo, and quit', async () => {
 	const pty = open();

@@ -18,6 +18,12 @@ describe('compare', () => {
 		expect(compare({wind: {from: '180 deg'}}, {wind: {from: '180 °'}})).toEqual([]);
 	});
 
+	test('counts how well a number is known', () => {
+		expect(compare({exit: '118 mph ± 1 mph'}, {exit: '118 ± 1 mph'})).toEqual([]);
+		expect(compare({exit: '118 mph ± 1 mph'}, {exit: '118 mph'})).toHaveLength(1);
+		expect(compare({exit: '118 mph ± 1 mph'}, {exit: '118 mph ± 2 mph'})).toHaveLength(1);
+	});
+
 	test('keeps a change and a value apart, and leaves names alone', () => {
 		expect(compare({exit: '+2 mph'}, {exit: '2 mph'})).toHaveLength(1);
 		expect(compare({name: '1 ft'}, {name: '12 in'})).toHaveLength(1);

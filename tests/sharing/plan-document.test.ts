@@ -71,6 +71,7 @@ describe('what is no plan', () => {
 		['extra', {extra: 1}],
 		['notes', {notes: 'x'.repeat(2001)}],
 		['results.limit', {results: {highest: plan.results.highest, shifts: []}}],
+		['car.rack.pairs[0]', {car: {...plan.car, rack: {pairs: [null]}}}],
 		['track.straights[0].exit', {track: {...plan.track, straights: [{name: 'Front', exit: 88}]}}],
 	])('is named by its path: %s', async (path, change) => {
 		expect(await problemsOf(change)).toContain(path);

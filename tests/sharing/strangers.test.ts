@@ -5,6 +5,9 @@ import {densePlan} from '../../source/sharing/dense.ts';
 import {printPlan} from '../../source/sharing/print-plan.ts';
 import {readShared} from '../../source/sharing/read-shared.ts';
 import {shortForm} from '../../source/sharing/short-form.ts';
+import {mutated} from '../fuzz/mutate.ts';
+import {Random} from '../fuzz/random.ts';
+import {plans} from '../fuzz/readers/plans.ts';
 import {runs} from '../runs.ts';
 import {samplePlan} from './sample.ts';
 
@@ -78,12 +81,12 @@ describe("strangers' text", () => {
 	}, async () => {
 		const json = JSON.stringify(plan, null, 1);
 		const originals = [text, text, json, densePlan(plan), shortForm(plan).line];
-		const random = sequence(20_250_614);
+		const random = new Random(20_250_614);
 		// Loads the library of rare units, once: that is not reading.
 		await told(withEntries(list => list.map(entry => entry.replace('8 mph', '8 blots'))));
 		let slowestMs = 0;
 		for (let i = 0; i < runs(2000, 200_000); i++) {
-			const message = mutate(originals[i % originals.length]!, random);
+			const message = mutated(originals[i % originals.length]!, plans, random, originals);
 			const {answer, tookMs} = await timed(message);
 			// A machine that was busy elsewhere is not the message's doing: what is slow is slow again.
 			const againMs = tookMs < 100 ? tookMs : Math.min((await timed(message)).tookMs, (await timed(message)).tookMs);
@@ -98,57 +101,4 @@ async function timed(message: string): Promise<{answer: string; tookMs: number}>
 	const started = performance.now();
 	const answer = await told(message);
 	return {answer, tookMs: performance.now() - started};
-}
-
-/** A 32-bit xorshift (Marsaglia, 2003): the same mutations on every machine. */
-function sequence(seed: number): (below: number) => number {
-	let state = seed;
-	return below => {
-		state ^= state << 13;
-		state ^= state >>> 17;
-		state ^= state << 5;
-		return (state >>> 0) % below;
-	};
-}
-
-const snippets = [
-	'\u001b[2J',
-	'\u202e',
-	'\u0000',
-	'\n',
-	'[',
-	']',
-	':',
-	', ',
-	'{',
-	'}',
-	'"',
-	'-',
-	'9'.repeat(400),
-	'__proto__',
-	'{1f600}',
-	'\ud800',
-	'> ',
-	'Check:',
-	'{"a":[',
-];
-
-/** One to four cuts, copies, exchanges and insertions. */
-function mutate(original: string, random: (below: number) => number): string {
-	let mutated = original;
-	for (let i = 0; i <= random(4); i++) {
-		const at = random(mutated.length + 1);
-		const end = Math.min(mutated.length, at + random(random(2) === 0 ? 4 : 200));
-		const kind = random(4);
-		const piece =
-			kind === 0
-				? ''
-				: kind === 1
-					? snippets[random(snippets.length)]!
-					: kind === 2
-						? mutated.slice(at, end).repeat(2)
-						: String.fromCharCode(random(300));
-		mutated = mutated.slice(0, at) + piece + mutated.slice(end);
-	}
-	return mutated;
 }

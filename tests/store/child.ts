@@ -4,7 +4,7 @@ import {addToHistory} from '../../source/store/history.ts';
 import {keptNamed} from '../../source/store/list-kept.ts';
 import {withLock} from '../../source/store/lock.ts';
 import {saveKept} from '../../source/store/save-kept.ts';
-import {keepSession} from '../../source/store/session.ts';
+import {keepSession, unsavedSessions} from '../../source/store/session.ts';
 import {preset} from './documents.ts';
 
 const [verb, home = '', ...rest] = process.argv.slice(2);
@@ -59,6 +59,10 @@ const verbs: Record<string, () => void> = {
 			Atomics.wait(new Int32Array(new SharedArrayBuffer(4)), 0, 0, 60_000);
 		});
 	},
+	/** Waits for the lock no longer than a moment. */
+	tryLock: () => say(withLock(home, () => 'mine', 20)),
+	/** The unsaved work that is offered to it. */
+	unsaved: () => say(unsavedSessions(home).sessions.map(({document}) => document)),
 	keepSession: () => say(keepSession(home, {work: rest[0]}, `2026-01-0${rest[1]}`) ?? 'kept'),
 };
 verbs[verb ?? '']?.();

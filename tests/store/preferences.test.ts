@@ -1,8 +1,8 @@
-import {mkdtempSync, readFileSync, rmSync, writeFileSync} from 'node:fs';
+import {existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync} from 'node:fs';
 import {tmpdir} from 'node:os';
 import {join} from 'node:path';
 import {afterEach, beforeEach, expect, test} from 'vitest';
-import {preferCar, preferencesFile, readPreferences} from '../../source/store/preferences.ts';
+import {preferCar, preferencesFile, readPreferences, rememberColumns} from '../../source/store/preferences.ts';
 
 let home = '';
 beforeEach(() => {
@@ -21,6 +21,28 @@ test('a preferred car is kept, replaced and forgotten', async () => {
 	expect(readPreferences(home)).toEqual({ok: true, value: {car: 'Second.with.dots'}});
 	await preferCar(home, undefined);
 	expect(readPreferences(home)).toEqual({ok: true, value: {}});
+});
+
+test('how the logs of a car are read is remembered beside it', async () => {
+	const columns = {speed: {header: 'GPS Speed', unit: 'mph'}, brake: {header: null}};
+	await preferCar(home, 'First');
+	expect(await rememberColumns(home, 'First', columns)).toEqual({ok: true});
+	await preferCar(home, undefined);
+	expect(readPreferences(home)).toEqual({ok: true, value: {logColumns: {First: columns}}});
+	await rememberColumns(home, 'Second', {rpm: {header: 'n'}});
+	const {value} = readPreferences(home) as {value: {logColumns: object}};
+	expect(Object.keys(value.logColumns)).toEqual(['First', 'Second']);
+});
+
+test('a log that needed nothing to be asked leaves no file', async () => {
+	expect(await rememberColumns(home, 'First', {})).toEqual({ok: true});
+	expect(existsSync(preferencesFile(home))).toBe(false);
+});
+
+test('columns that somebody has spoiled by hand are passed over', () => {
+	const logColumns = {First: {speed: 3}, Second: {rpm: {header: 'n'}}};
+	writeFileSync(preferencesFile(home), JSON.stringify({version: 1, car: 'First', logColumns}));
+	expect(readPreferences(home)).toEqual({ok: true, value: {car: 'First', logColumns: {Second: {rpm: {header: 'n'}}}}});
 });
 
 test('the first version of the file is read for ever', () => {

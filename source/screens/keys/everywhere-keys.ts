@@ -78,6 +78,14 @@ export const everywhereKeys = [
 	},
 	{
 		scope: 'everywhere',
+		keys: ['l'],
+		does: 'practice',
+		words: 'learn from practice: the highest RPM that was seen, or a logged run',
+		short: 'learn',
+		rank: 4,
+	},
+	{
+		scope: 'everywhere',
 		keys: ['d'],
 		does: 'differences',
 		words: 'what differs from the saved and the shipped track and car',

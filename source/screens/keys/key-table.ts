@@ -8,6 +8,7 @@ import {keepingKeys} from './keeping-keys.ts';
 import {lifeKeys} from './life-keys.ts';
 import {lookingKeys} from './looking-keys.ts';
 import {oddsKeys} from './odds-keys.ts';
+import {practiceKeys} from './practice-keys.ts';
 import type {Scope} from './scopes.ts';
 import {sessionKeys} from './session-keys.ts';
 import {sharingKeys} from './sharing-keys.ts';
@@ -19,6 +20,7 @@ export const bindings = [
 	...formKeys,
 	...sharingKeys,
 	...keepingKeys,
+	...practiceKeys,
 	...aheadKeys,
 	...sessionKeys,
 	...everywhereKeys,

@@ -4,8 +4,8 @@ import {visible} from '../../documents/visible.ts';
 import type {Tone} from '../../text/blocks.ts';
 import {cut, displayWidth, padTo} from '../../text/width.ts';
 
-/** Beside the tones of the text answers: what is chosen, where the caret stands, a key, the two runs of a picture, a QR code. */
-export type Meaning = Tone | 'chosen' | 'caret' | 'key' | 'first' | 'second' | 'code';
+/** Beside the tones of the text answers: what is chosen, where the caret stands, a key, a QR code. */
+export type Meaning = Tone | 'chosen' | 'caret' | 'key' | 'code';
 export type Piece = {readonly text: string; readonly tone: Meaning};
 /** One line of the screen. */
 export type Pieces = readonly Piece[];

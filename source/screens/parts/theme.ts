@@ -6,12 +6,7 @@ export type Theme = {readonly color: boolean; readonly ascii: boolean};
 
 /** Signs of the screen that have no ASCII stand-in elsewhere. Same width. */
 const asciiSigns: Readonly<Record<string, string>> = {
-	'│': '|',
-	'─': '-',
 	'┼': '+',
-	'┤': '+',
-	'┬': '+',
-	'└': '+',
 	'▸': '>',
 	'●': 'o',
 	'○': 'x',
@@ -19,7 +14,6 @@ const asciiSigns: Readonly<Record<string, string>> = {
 	'↓': 'v',
 	'←': '<',
 	'→': '>',
-	'╌': '-',
 	'┆': ':',
 };
 

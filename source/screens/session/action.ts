@@ -1,10 +1,13 @@
 /** What may happen to a session, named by intention. */
 
+import type {Edit} from '../../documents/edits.ts';
+import type {Held} from '../../practice/learn/seen.ts';
 import type {HistoryEntry} from '../../store/kept-documents.ts';
 import type {UnitSystem} from '../../text/units.ts';
 import type {KeyEvent} from '../terminal/key-event.ts';
 import type {Documents, Kind, OpenDocument} from './documents.ts';
 import type {Item} from './hand-over.ts';
+import type {Pane, PracticeLog} from './practice.ts';
 import type {Filter, Order} from './rows.ts';
 import type {Over, Place} from './session.ts';
 import type {Incoming} from './take-in.ts';
@@ -60,6 +63,14 @@ export type Action =
 	| {readonly do: 'move in draft'; readonly by: 1 | -1}
 	| {readonly do: 'leave draft'}
 	| {readonly do: 'refuse draft'; readonly field: DraftField; readonly wrong: string}
+	/** A number seen on a straight; undefined takes it away. */
+	| {readonly do: 'see'; readonly straight: string; readonly text: string | undefined}
+	| {readonly do: 'hold'; readonly held: Held}
+	| {readonly do: 'show log'; readonly log: PracticeLog | undefined}
+	| {readonly do: 'show pane'; readonly pane: Pane}
+	| {readonly do: 'move in practice'; readonly by: number; readonly count: number}
+	/** Edits of both documents, with the words that say what they were. */
+	| {readonly do: 'learn'; readonly edits: Readonly<Record<Kind, readonly Edit[]>>; readonly notice: string}
 	| {readonly do: 'whole to'; readonly which: 'saved' | 'shipped'}
 	/** The track of that id lies ahead, or no longer. */
 	| {readonly do: 'toggle ahead'; readonly id: string}

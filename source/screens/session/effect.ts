@@ -11,7 +11,12 @@ export type ErrandEffect =
 	| 'add to history'
 	| 'keep entry'
 	| 'read file'
-	| 'forget saved';
+	| 'forget saved'
+	| 'see it'
+	| 'read log'
+	| 'accept this'
+	| 'accept all'
+	| 'take all back';
 
 /** What reaches beyond the session. */
 export type Effect =

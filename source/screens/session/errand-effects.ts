@@ -6,6 +6,7 @@ import type {ErrandEffect} from './effect.ts';
 import {type Handed, items} from './hand-over.ts';
 import type {Scene} from './intend.ts';
 import {isObject} from './json.ts';
+import type {PracticeScene} from './live-practice.ts';
 import {cursorIn} from './rows.ts';
 import type {Session} from './session.ts';
 import {ownAmong} from './take-in.ts';
@@ -13,13 +14,18 @@ import {entryOf, startDraft} from './track-history.ts';
 
 /** The running session, as far as errands need it. */
 export type Errandful = {
-	state(): {readonly session: Session; readonly scene: Scene & {readonly handed: Handed | undefined}};
+	state(): {
+		readonly session: Session;
+		readonly scene: Scene & {readonly handed: Handed | undefined; readonly practice: PracticeScene | undefined};
+	};
 	dispatch(action: Action): void;
 	readonly catalog: readonly OpenDocument[];
 	readonly errands: Errands;
 };
 
-export function errandEffects({state, dispatch, catalog, errands}: Errandful): Record<ErrandEffect, () => void> {
+type OwnEffect = Exclude<ErrandEffect, 'see it' | 'read log' | 'accept this' | 'accept all' | 'take all back'>;
+
+export function errandEffects({state, dispatch, catalog, errands}: Errandful): Record<OwnEffect, () => void> {
 	const tell = (notice: string) => dispatch({do: 'tell', notice});
 	const trackName = () => titleOf(current(state().session.history.present, 'track'));
 	const entry = () => {

@@ -9,11 +9,15 @@ import type {Choice} from './catalog.ts';
 import {current, unsaved} from './documents.ts';
 import type {Effect} from './effect.ts';
 import {fileNameFor, items} from './hand-over.ts';
+import {cleared, paneBy, seenEntry} from './intend-practice.ts';
+import {entryFor, next} from './intents.ts';
+import {practiceOf} from './practice-of.ts';
 import {marginEntry} from './reduce.ts';
+import {practicePlace} from './reduce-practice.ts';
 import {riskEntry} from './reduce-risk.ts';
 import {takeInPlace} from './reduce-take-in.ts';
 import {cursorIn, orders, type Placed, stepped} from './rows.ts';
-import {type Asked, type Place, pictures, type Session} from './session.ts';
+import {type Place, pictures, type Session} from './session.ts';
 
 /** What a key's meaning may depend on beside the session. */
 export type Scene = {
@@ -24,6 +28,8 @@ export type Scene = {
 	readonly situations: readonly string[];
 	readonly choices: readonly Choice[];
 	readonly isWorking: boolean;
+	/** Lines that the cursor of the practice moves over. */
+	readonly practiceLines: number;
 };
 
 /** Which scopes of the key table hold, the first one first. */
@@ -137,6 +143,24 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 			return {do: 'move in draft', by: -1};
 		case 'draft down':
 			return {do: 'move in draft', by: 1};
+		case 'practice':
+			return {do: 'go', place: practicePlace};
+		case 'practice up':
+			return {do: 'move in practice', by: -1, count: scene.practiceLines};
+		case 'practice down':
+			return {do: 'move in practice', by: 1, count: scene.practiceLines};
+		case 'next pane':
+			return paneBy(session, 1);
+		case 'previous pane':
+			return paneBy(session, -1);
+		case 'practice enter':
+			return place.at !== 'practice' ? undefined : place.pane === 'changes' ? 'accept this' : seenEntry(session);
+		case 'name log':
+			return entryFor('log', '');
+		case 'hold other':
+			return {do: 'hold', held: practiceOf(session).held === 'speed' ? 'circumference' : 'speed'};
+		case 'clear number':
+			return cleared(session);
 		case 'differences':
 			return {do: 'go', place: {at: 'differences', kind: 'track', scroll: 0}};
 		case 'other document':
@@ -249,12 +273,6 @@ const formOf = (kind: 'track' | 'car'): Place => ({
 	editing: undefined,
 });
 
-/** The one so many after another in a circle; an unknown one counts as the first. */
-function next<T>(among: readonly T[], one: T, by: number): T {
-	const at = Math.max(0, among.indexOf(one));
-	return among[(at + by + among.length) % among.length]!;
-}
-
 function rowBy(session: Session, {shown}: Scene, by: number): Action | undefined {
 	const cursor = cursorIn(shown, session.row);
 	const target = Math.max(0, Math.min(shown.length - 1, cursor + by));
@@ -287,17 +305,14 @@ function itemBy(place: Place, by: 1 | -1): Action | undefined {
 	return place.at === 'hand over' ? {do: 'show item', item: next(items, place.item, by)} : undefined;
 }
 
-const entryFor = (asks: Asked, text: string): Action => ({
-	do: 'cover',
-	over: {is: 'entry', asks, line: editLine(text), wrong: undefined},
-});
-
 /** Nothing typed is no name; as notes it means none. */
 function accepted(over: Session['over']): Action | Effect | undefined {
 	if (over?.is !== 'entry') return undefined;
 	const text = over.line.text.trim();
 	if (over.asks === 'notes') return {do: 'note', text};
+	if (over.asks === 'seen') return text === '' ? {do: 'cover', over: undefined} : 'see it';
 	if (text === '') return {do: 'refuse', wrong: 'a name is needed; Esc goes back'};
+	if (over.asks === 'log') return 'read log';
 	return over.asks === 'file' ? 'write it' : 'export';
 }
 

@@ -15,8 +15,11 @@ import {type Errandful, errandEffects, readPlan} from './errand-effects.ts';
 import {readTrackOf} from './forms.ts';
 import {type Handed, rowToHandOver} from './hand-over.ts';
 import {intend, type Scene, scopesOf, takesText} from './intend.ts';
+import {seenEntry} from './intend-practice.ts';
+import {LivePractice, type PracticeScene} from './live-practice.ts';
 import {Odder} from './odder.ts';
 import type {OddsShown, OddsSoFar} from './odds-asked.ts';
+import {practiceEffects} from './practice-effects.ts';
 import {type Clock, Ranker} from './ranker.ts';
 import {reduce} from './reduce.ts';
 import {cursorIn, type Filter, type Order, type Placed, placedRows, shownRows} from './rows.ts';
@@ -36,6 +39,7 @@ export type State = {
 	readonly scene: Scene & {
 		readonly handed: Handed | undefined;
 		readonly odds: OddsShown | undefined;
+		readonly practice: PracticeScene | undefined;
 		readonly ahead: AheadState | undefined;
 	};
 };
@@ -53,6 +57,7 @@ export class LiveSession {
 	/** Loaded once there is something to hand over: most sessions never have. */
 	#handing: typeof import('./handing.ts') | undefined;
 	#handingLoad: Promise<void> | undefined;
+	readonly #practice: LivePractice;
 	/** Loaded when the tracks ahead are first looked at. */
 	#ahead: import('./ahead.ts').Ahead | undefined;
 	#aheadLoad: Promise<void> | undefined;
@@ -69,11 +74,16 @@ export class LiveSession {
 		this.#clock = clock;
 		this.#ranker = new Ranker(clock, () => this.#settle(this.#state.session));
 		this.#odder = new Odder(clock, () => this.#settle(this.#state.session));
+		this.#practice = new LivePractice(clock, () => this.#settle(this.#state.session));
 		this.#ranker.start(inputsOf(session));
 		this.#state = this.#stateOf(session);
 		const {errands} = keeper;
 		this.#errandful = {state: this.state, dispatch: action => this.dispatch(action), catalog, errands};
-		this.#effects = {...this.#ownEffects, ...errandEffects(this.#errandful)};
+		this.#effects = {
+			...this.#ownEffects,
+			...errandEffects(this.#errandful),
+			...practiceEffects(this.#errandful, () => this.#practice.teaching),
+		};
 	}
 
 	readonly state = (): State => this.#state;
@@ -92,6 +102,7 @@ export class LiveSession {
 		else if (event.kind === 'paste' && this.#isPlan(event.text)) void readPlan('paste', event.text, this.#errandful);
 		else if (takesText(session)) this.dispatch({do: 'type', event});
 		else if (startsNumber(event) && session.place.at === 'edit') this.dispatch({do: 'open field', text: event.text});
+		else if (startsNumber(event) && isAtNumbers(session)) this.dispatch(seenEntry(session, event.text));
 		else if (event.kind === 'paste') this.dispatch({do: 'paste curve', text: event.text});
 	}
 
@@ -202,10 +213,14 @@ export class LiveSession {
 			situations: track.ok ? track.value.situations.map(({name}) => name) : [],
 			choices: this.#choicesIn(session),
 			isWorking: answer.is === 'working',
+			practiceLines: 0,
 		};
+		const practice = this.#practice.scene(session, rankedIn(answer), answer.is === 'ready');
 		const handed = answer.is === 'ready' ? this.#handed(session, scene, answer.ranked) : undefined;
-		const shown = odds && {...odds, tooth: this.#toothOf(scene.shown, session)};
-		return {session, answer, scene: {...scene, handed, odds: shown, ahead: this.#aheadOf(session, scene.choices)}};
+		const ahead = this.#aheadOf(session, scene.choices);
+		const oddsShown = odds && {...odds, tooth: this.#toothOf(scene.shown, session)};
+		const practiceLines = practice?.lines ?? 0;
+		return {session, answer, scene: {...scene, practiceLines, handed, odds: oddsShown, practice, ahead}};
 	}
 
 	#choicesIn({place, history}: Session): Choice[] {
@@ -268,6 +283,9 @@ export class LiveSession {
 /** A number typed on a field takes the place of what stood there. */
 const startsNumber = (event: KeyEvent): event is KeyEvent & {kind: 'text'} =>
 	event.kind === 'text' && /^[\d.]$/.test(event.text);
+
+const isAtNumbers = ({place, over}: Session): boolean =>
+	place.at === 'practice' && place.pane === 'numbers' && over === undefined;
 
 /** Before the rack has been ranked there is the pair in the car. */
 const firstRow = (answer: Answer): Placed[] =>

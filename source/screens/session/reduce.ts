@@ -8,6 +8,7 @@ import {amended, type History, recorded, redone, undone} from './history.ts';
 import {withValue} from './json.ts';
 import {reduceForm} from './reduce-form.ts';
 import {reduceHistory, typedInDraft} from './reduce-history.ts';
+import {reducePractice} from './reduce-practice.ts';
 import {acceptedRisk} from './reduce-risk.ts';
 import {reduceTakeIn, typedInTakeIn} from './reduce-take-in.ts';
 import {reduceWhole} from './reduce-whole.ts';
@@ -85,6 +86,7 @@ function inPlace(session: Session, action: Action): Session {
 	if (over?.is === 'entry' && action.do === 'refuse') return {...session, over: {...over, wrong: action.wrong}};
 	if (place.at === 'edit') return reduceForm(session, place, action);
 	if (place.at === 'take in') return reduceTakeIn(session, place, action);
+	if (place.at === 'practice') return reducePractice(session, place, action);
 	return place.at === 'history' ? reduceHistory(session, place, action) : session;
 }
 

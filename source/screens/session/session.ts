@@ -6,6 +6,7 @@ import type {EditLine} from '../parts/edit-line.ts';
 import {current, type Documents, type Kind} from './documents.ts';
 import type {HandOver} from './hand-over.ts';
 import {type History, startHistory} from './history.ts';
+import type {Pane, Practice} from './practice.ts';
 import {type Filter, noFilter, type Order} from './rows.ts';
 import type {Incoming} from './take-in.ts';
 import type {Draft} from './track-history.ts';
@@ -40,6 +41,8 @@ export type Place =
 			readonly adding: boolean;
 			readonly scroll: number;
 	  }
+	/** `cursor` is the straight, or the line among what would change. */
+	| {readonly at: 'practice'; readonly pane: Pane; readonly cursor: number; readonly scroll: number}
 	| ({readonly at: 'load'; readonly cursor: number; readonly scroll: number} & LoadSteps)
 	/** `together`: one set for all tracks besides. */
 	| {readonly at: 'gears'; readonly cursor: number; readonly scroll: number; readonly together: boolean}
@@ -61,7 +64,7 @@ export type Over =
 	| {readonly is: 'forgetting'};
 
 /** What an entry field asks for. */
-export type Asked = 'file' | 'notes' | 'directory';
+export type Asked = 'file' | 'notes' | 'directory' | 'seen' | 'log';
 
 export type Session = {
 	readonly history: History<Documents>;
@@ -83,6 +86,8 @@ export type Session = {
 	readonly ahead: readonly string[] | undefined;
 	/** An entry of the history that was begun. */
 	readonly draft: Draft | undefined;
+	/** What was seen in practice, of the track that it names. */
+	readonly practice: Practice | undefined;
 	readonly units: UnitSystem;
 	/** What the last key did, where the screen does not show it by itself. */
 	readonly notice: string | undefined;
@@ -101,6 +106,7 @@ export const startSession = (documents: Documents, units: UnitSystem): Session =
 	risk: undefined,
 	ahead: undefined,
 	draft: undefined,
+	practice: undefined,
 	units,
 	notice: undefined,
 });

@@ -28,6 +28,8 @@ export class Screen extends EventEmitter {
 	readonly #terminal: Terminal;
 	#shown: string[] | undefined;
 	#frame: string | undefined;
+	/** The size when it was last written to. */
+	#painted = {width: 0, height: 0};
 	#open = true;
 	#waiting = false;
 
@@ -58,7 +60,13 @@ export class Screen extends EventEmitter {
 	/** Draws everything anew: after a suspension, or when something else wrote on the screen. */
 	redraw(): void {
 		this.#shown = undefined;
-		if (this.#frame !== undefined) this.#paint(this.#frame);
+		if (this.#open && this.#frame !== undefined) this.#paint(this.#frame);
+	}
+
+	/** For a window that was changed: one that has its size again may have lost what stood there, and no resize is told. */
+	windowChanged(): void {
+		const {width, height} = this.size;
+		if (width === this.#painted.width && height === this.#painted.height) this.redraw();
 	}
 
 	/** Nothing is written any more: the terminal is given back. */
@@ -91,6 +99,7 @@ export class Screen extends EventEmitter {
 		const next = frame.split('\n').slice(0, this.rows);
 		const codes = this.#shown === undefined ? home + clearScreen + linesFrom([], next) : changes(this.#shown, next);
 		this.#shown = next;
+		this.#painted = this.size;
 		this.frames++;
 		this.#terminal.write(together(codes + hideCursor));
 	}

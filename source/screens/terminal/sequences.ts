@@ -51,8 +51,8 @@ const oldMouse = /^\[M[\s\S]{3}/u;
 const unfinishedOldMouse = /^\[M[\s\S]{0,2}$/u;
 /** The Linux console's F1 to F5. */
 const linuxConsole = /^\[\[[\s\S]/u;
-/** Answers of the terminal, closed by BEL or by ESC and a backslash. */
-const answer = /^[\]PX^_]\P{Cc}*\p{Cc}\\?/u;
+/** Answers of the terminal, closed by BEL or by ESC and a backslash; any other control character breaks one off. */
+const answer = new RegExp(`^[\\]PX^_]\\P{Cc}*(?:${esc}\\\\|(?=${esc})|(?!${esc})\\p{Cc})`, 'u');
 const unfinishedAnswer = /^[\]PX^_]\P{Cc}*$/u;
 
 /** Whether the text may be the beginning of a sequence whose rest is still on its way. */

@@ -18,21 +18,24 @@ export type Taken = {
 	/** Gives back, then tells what went wrong, and ends the process. */
 	crash(error: unknown): void;
 	/** Ctrl+Z: back to the shell, and here again at `fg`. */
-	suspend(comeBack: () => void): void;
+	suspend(): void;
 };
 
 export type Leaving = {
 	/** Called once, before the terminal is given back: nothing may be drawn any more. */
 	stopDrawing(): void;
+	/** The terminal is ours again after a stop, with nothing on it. */
+	comeBack(): void;
 	/** What a person should read after a crash, such as where the session was saved. */
 	lastWords(): string;
 };
 
-export function takeTerminal({stopDrawing, lastWords}: Leaving): Taken {
+/** A stop that was asked for comes at once; where nobody could continue us, the system passes it over. */
+const stopWithinMs = 100;
+
+export function takeTerminal({stopDrawing, comeBack, lastWords}: Leaving): Taken {
 	let taken = true;
-	writeSync(standardOutput, enter);
-	// Before anything listens: what is typed meanwhile must not be echoed.
-	setRawMode(true);
+	let away = false;
 
 	const giveBack = () => {
 		if (!taken) return;
@@ -52,18 +55,32 @@ export function takeTerminal({stopDrawing, lastWords}: Leaving): Taken {
 		process.exit(faultStatus);
 	};
 
-	const suspend = (comeBack: () => void) => {
-		writeSync(standardOutput, leave);
+	const suspend = () => {
+		if (!taken || away) return;
+		away = true;
+		tryTo(() => writeSync(standardOutput, leave));
 		setRawMode(false);
-		process.once('SIGCONT', () => {
-			setRawMode(true);
-			writeSync(standardOutput, enter);
-			comeBack();
-		});
+		// Without a listener the signal does what it does to every program.
+		process.off('SIGTSTP', suspend);
 		process.kill(process.pid, 'SIGTSTP');
+		setTimeout(() => {
+			if (away) goOn();
+		}, stopWithinMs);
+	};
+
+	/** Also where somebody else stopped us, who may have used the terminal since. */
+	const goOn = () => {
+		if (!taken) return;
+		if (away) process.on('SIGTSTP', suspend);
+		away = false;
+		setRawMode(true);
+		tryTo(() => writeSync(standardOutput, enter));
+		comeBack();
 	};
 
 	process.on('exit', giveBack);
+	process.on('SIGTSTP', suspend);
+	process.on('SIGCONT', goOn);
 	for (const [name, number] of Object.entries(signals)) {
 		process.on(name, () => {
 			giveBack();
@@ -73,6 +90,11 @@ export function takeTerminal({stopDrawing, lastWords}: Leaving): Taken {
 	process.removeAllListeners('uncaughtException');
 	process.on('uncaughtException', crash);
 	process.on('unhandledRejection', crash);
+
+	// Only now: a signal finds somebody who gives back.
+	writeSync(standardOutput, enter);
+	// Before anything listens to keys: what is typed meanwhile must not be echoed.
+	setRawMode(true);
 	return {giveBack, crash, suspend};
 }
 

@@ -22,6 +22,7 @@ import {lifeHalves, lifePlaceView} from './life-place-view.ts';
 import {noticeLines} from './notice-view.ts';
 import {oddsRows, oddsTold} from './odds-place-view.ts';
 import {pictureView} from './picture-view.ts';
+import {practiceView} from './practice-view.ts';
 import {type RankingTable, rankingTable} from './ranking-view.ts';
 import {reasonView, sentenceView} from './reason-view.ts';
 import {scrolled} from './scrolled.ts';
@@ -102,6 +103,10 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 		return plain(aheadView(state, session.place, width, body));
 	if (answer.is === 'faulty') return plain(wrongView(answer.wrong, width));
 
+	if (session.place.at === 'practice') {
+		const given = {session, place: session.place, scene: scene.practice, width, height: body, ascii: size.ascii};
+		return plain(practiceView(given));
+	}
 	if (session.place.at === 'hand over') return plain(handOverView(state, session.place, body, size));
 	if (here === undefined)
 		return plain([
@@ -241,7 +246,7 @@ function tooSmall({width, height}: Size): Frame {
 	const lines = [
 		...wrap(needed, width),
 		...wrap(`This window has ${width} and ${height}.`, width),
-		...wrap('Nothing is lost: make it larger.', width),
+		...wrap('Nothing is lost: make it larger. Ctrl+C leaves.', width),
 	];
 	return {top: lines.slice(0, height).map(text => line(text)), table: undefined, beside: [], bottom: []};
 }

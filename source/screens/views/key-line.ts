@@ -48,6 +48,7 @@ function keyPieces({keys, does, short}: Binding): Piece[] {
 		'ahead up': '↑↓',
 		'item up': '↑↓',
 		'draft down': '↑↓',
+		'practice up': '↑↓',
 		'scroll up': 'PgUp PgDn',
 	};
 	return [piece(both[does] ?? keyWords(keys[0]!), 'key'), piece(` ${short}`, 'muted')];

@@ -4,15 +4,17 @@ import {visible} from '../../documents/visible.ts';
 import {wrap} from '../../text/width.ts';
 import {blank, clipped, line, type Pieces, piece, widthOf} from '../parts/pieces.ts';
 import {current, type Documents, titleOf, unsaved} from '../session/documents.ts';
+import {straightNames} from '../session/practice-of.ts';
 import type {Asked, Over, Session} from '../session/session.ts';
 import {caretPieces} from './caret.ts';
 
-const questions: Record<Asked | 'margin' | 'risk', string> = {
+const questions: Record<Exclude<Asked, 'seen'> | 'margin' | 'risk', string> = {
 	risk: 'Accepted chance of passing the RPM limit: ',
 	margin: 'Least margin to the limit, RPM: ',
 	file: 'Write it to the file: ',
 	notes: 'Notes for the plan: ',
 	directory: 'Write all that is kept to the directory: ',
+	log: 'Read the logged run in the file: ',
 };
 
 /** What went wrong may need a path and what to do. */
@@ -22,7 +24,10 @@ export function noticeLines(session: Session, width: number): Pieces[] {
 	const {over, notice} = session;
 	if (over?.is === 'margin') return entryLines(questions.margin, over.line, over.wrong, width);
 	if (over?.is === 'risk') return entryLines(questions.risk, over.line, over.wrong, width);
-	if (over?.is === 'entry') return entryLines(questions[over.asks], over.line, over.wrong, width);
+	if (over?.is === 'entry') {
+		const question = over.asks === 'seen' ? seenQuestion(session) : questions[over.asks];
+		return entryLines(question, over.line, over.wrong, width);
+	}
 	if (over !== undefined) return [clipped(questionPieces(over, session), width)];
 	return notice === undefined ? [blank] : told(notice, width).map(text => line(text, 'strong'));
 }
@@ -47,6 +52,12 @@ function questionPieces(over: Over, {place, history}: Session): Pieces {
 		default:
 			return blank;
 	}
+}
+
+/** The straight that the number is of. */
+function seenQuestion(session: Session): string {
+	const name = straightNames(session)[session.place.at === 'practice' ? session.place.cursor : 0] ?? 'the straight';
+	return `Highest RPM on ${name}, and gear 4 or 185 mph where known: `;
 }
 
 type Entry = Parameters<typeof caretPieces>[0];

@@ -8,7 +8,9 @@ const size = {width: 119, height: 40, ascii: true} as const;
 
 export function spokenLines(state: State): Pieces[] {
 	const frame = frameOf(state, size, 0);
-	if (state.session.place.at === 'pictures') return pictureSpoken(frame);
+	const {place} = state.session;
+	if (place.at === 'pictures') return pictureSpoken(frame);
+	if (place.at === 'practice' && (place.pane === 'gears' || place.pane === 'lap')) return pictureSpoken(frame);
 	if (frame.table === undefined) return frameLines(frame).filter(isSpoken);
 	const rows = frame.table.rows.map(spokenRow(frame));
 	const selected = rows[frame.table.selected];

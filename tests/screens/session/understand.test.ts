@@ -27,6 +27,18 @@ test('a number alone gets the unit that stood there, else the one that is read',
 	expect(us('120', speed)).toMatchObject({value: '120 mph'});
 });
 
+test('how well a number is known is told with it, and stays as it was written', () => {
+	expect(us('118 mph ± 1.5 mph', speed)).toEqual({ok: true, value: '118 mph ± 1.5 mph', words: '118 ± 1.5 mph'});
+	expect(us('118 ± 1.5', speed, '117 mph')).toEqual({ok: true, value: '118 ± 1.5 mph', words: '118 ± 1.5 mph'});
+	expect(understand('86.5 in +/- 0.1 in', rollout, undefined, 'metric')).toMatchObject({
+		words: '86.5 ± 0.1 in = 2197.1 ± 2.54 mm',
+	});
+	const coefficient: FieldKind = {is: 'quantity', dimensions: ['number'], change: false};
+	expect(us('1.25', coefficient)).toMatchObject({value: 1.25});
+	expect(us('1.25 ± 0.05', coefficient)).toEqual({ok: true, value: '1.25 ± 0.05', words: '1.25 ± 0.05'});
+	expect(us('118 mph ± 1 in', speed)).toMatchObject({ok: false, words: expect.stringMatching(/in is a length/)});
+});
+
 test('fuel is told in gallons and pounds, or in liters and kilograms', () => {
 	const [tank, consumption] = (['volume', 'consumption'] as const).map(
 		(dimension): FieldKind => ({is: 'quantity', dimensions: [dimension], change: false}),

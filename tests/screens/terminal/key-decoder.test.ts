@@ -70,6 +70,13 @@ test('what is unknown is dropped as a whole, never typed', () => {
 	expect(decoded('\x1B[[A')).toEqual([]);
 });
 
+test('an answer of the terminal that is broken off ends there, and what follows is what it is', () => {
+	expect(names('\x1BP\x17\\')).toEqual(['\\']);
+	expect(names('\x1BP\x17', '\\')).toEqual(['\\']);
+	expect(names('\x1B]11;rgb\x1B[A')).toEqual(['up']);
+	expect(names('\x1B]11;rgb\x1B', '[A')).toEqual(['up']);
+});
+
 test('the mouse is passed over, in both of its ways of speaking', () => {
 	expect(decoded('\x1B[<0;10;5M\x1B[<0;10;5m')).toEqual([]);
 	expect(decoded('\x1B[M !"')).toEqual([]);

@@ -66,6 +66,20 @@ test('after a resize everything is drawn anew', () => {
 	expect(terminal.written[1]).toContain('\x1B[2J');
 });
 
+test('a window that was changed and has its size again is drawn anew; one of another size waits for its frame', () => {
+	const {terminal, screen} = started();
+	screen.write('one');
+	screen.windowChanged();
+	expect(terminal.written[1]).toContain('\x1B[2J');
+	terminal.columns = 30;
+	screen.windowChanged();
+	expect(terminal.written).toHaveLength(2);
+	screen.close();
+	terminal.columns = 20;
+	screen.windowChanged();
+	expect(terminal.written).toHaveLength(2);
+});
+
 test('a slow line gets the latest frame only', () => {
 	const {terminal, screen} = started();
 	screen.write('first');

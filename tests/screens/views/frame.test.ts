@@ -4,6 +4,7 @@ import {painted} from '../../../source/screens/parts/theme.ts';
 import {gearsPlace, loadPlace} from '../../../source/screens/session/ahead-place.ts';
 import {withJson} from '../../../source/screens/session/documents.ts';
 import {startHistory} from '../../../source/screens/session/history.ts';
+import type {Practice} from '../../../source/screens/session/practice.ts';
 import {marginEntry} from '../../../source/screens/session/reduce.ts';
 import {riskEntry} from '../../../source/screens/session/reduce-risk.ts';
 import {takeInPlace} from '../../../source/screens/session/reduce-take-in.ts';
@@ -27,6 +28,13 @@ const handOver = {
 	date: '2026-05-31T18:05:00Z',
 	day: '2026-05-31',
 } as const;
+const practicePlace = {at: 'practice', pane: 'numbers', cursor: 1, scroll: 0} as const;
+const seenPractice: Practice = {
+	track: oval.id,
+	seen: [{straight: 'Back', text: '8420 gear 4'}],
+	held: 'circumference',
+	log: undefined,
+};
 const places: Record<string, Partial<Session>> = {
 	ranking: {},
 	comparing: {comparison: '36/36 A'},
@@ -74,6 +82,13 @@ const places: Record<string, Partial<Session>> = {
 		history: startHistory(withJson(documents, 'track', {...oval.json, lap: '0.7 mi'})),
 	},
 	forgetting: {place: {at: 'differences', kind: 'car', scroll: 0}, over: {is: 'forgetting'}},
+	practice: {place: practicePlace},
+	'practice, a number': {place: practicePlace, practice: seenPractice},
+	'practice, what would change': {place: {...practicePlace, pane: 'changes'}, practice: seenPractice},
+	'practice, typing': {
+		place: practicePlace,
+		over: {is: 'entry', asks: 'seen', line: editLine('8420 gear 4 118 mph'), wrong: 'x'.repeat(90)},
+	},
 	'no row left': {filter: {hideFailing: true, gearbox: 'C', leastMarginRpm: 5000}},
 };
 
@@ -205,7 +220,7 @@ test('below 80 × 24 it says what it needs, at any size', () => {
 	expect(linesOf(state, {width: 60, height: 10, ascii: false})).toEqual([
 		'Droprack needs 80 columns and 24 lines.',
 		'This window has 60 and 10.',
-		'Nothing is lost: make it larger.',
+		'Nothing is lost: make it larger. Ctrl+C leaves.',
 	]);
 	for (const [width, height] of [
 		[1, 1],

@@ -1,10 +1,10 @@
 import fc from 'fast-check';
 import {describe, expect, test} from 'vitest';
-import {type Chart, drawChart, type Point} from '../../../source/screens/parts/chart.ts';
-import {shown} from '../../../source/screens/parts/theme.ts';
-import {niceTicks, tickLabels} from '../../../source/screens/parts/ticks.ts';
-import {displayWidth} from '../../../source/text/width.ts';
-import {runs} from '../../runs.ts';
+import {shown} from '../../source/screens/parts/theme.ts';
+import {type Chart, drawChart, type Point} from '../../source/text/chart.ts';
+import {niceTicks, tickLabels} from '../../source/text/ticks.ts';
+import {displayWidth} from '../../source/text/width.ts';
+import {runs} from '../runs.ts';
 
 const plain = (chart: Chart, width: number, height: number, ascii: boolean): string[] =>
 	drawChart(chart, {width, height, ascii}).map(pieces =>

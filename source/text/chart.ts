@@ -1,8 +1,9 @@
 /** A picture of lines over two labeled axes, as lines of text. What is not finite is a gap. */
-import {displayWidth} from '../../text/width.ts';
+
 import {Canvas} from './canvas.ts';
-import {line, type Meaning, type Piece, type Pieces, piece} from './pieces.ts';
+import {type Cell, cell, type Line, type Tone} from './cell.ts';
 import {niceTicks, tickLabels} from './ticks.ts';
+import {displayWidth} from './width.ts';
 
 export type Point = readonly [x: number, y: number];
 
@@ -11,7 +12,7 @@ export type Series = {
 	readonly name: string;
 	/** One ASCII character: how the line is drawn where there is no braille. */
 	readonly mark: string;
-	readonly tone: Meaning;
+	readonly tone: Tone;
 	/** Drawn as single dots: tells two lines apart without color. */
 	readonly dotted?: boolean;
 	readonly points: readonly Point[];
@@ -19,7 +20,7 @@ export type Series = {
 /** A level line over the whole width, such as a limit. */
 export type Level = {readonly y: number; readonly name: string};
 /** A place with a sign, such as a shift. */
-export type Sign = {readonly x: number; readonly y: number; readonly text: string; readonly tone: Meaning};
+export type Sign = {readonly x: number; readonly y: number; readonly text: string; readonly tone: Tone};
 export type Axis = {readonly name: string /** Always inside. */; readonly include?: readonly number[]};
 
 export type Chart = {
@@ -40,9 +41,9 @@ const linesAround = 3;
 
 type Span = {readonly from: number; readonly to: number};
 
-export function drawChart(chart: Chart, size: ChartSize): Pieces[] {
+export function drawChart(chart: Chart, size: ChartSize): Line[] {
 	const spans = spansOf(chart);
-	if (spans === undefined) return [line('Nothing to draw.', 'muted')];
+	if (spans === undefined) return [[cell('Nothing to draw.', 'muted')]];
 	const rows = Math.max(2, size.height - linesAround);
 	const yTicks = niceTicks(spans.y.from, spans.y.to, Math.max(2, Math.round(rows / linesPerTick)));
 	const yLabels = tickLabels(yTicks);
@@ -60,13 +61,13 @@ export function drawChart(chart: Chart, size: ChartSize): Pieces[] {
 
 	const {wide, high} = canvas.dotsPerCell;
 	const labelOfRow = new Map(yTicks.map((tick, i) => [Math.floor(place.y(tick) / high), yLabels[i]!]));
-	const body = canvas.lines().map((cells, row): Pieces => {
+	const body = canvas.lines().map((cells, row): Line => {
 		const label = labelOfRow.get(row);
-		return [piece(`${(label ?? '').padStart(gutter - 1)}${label === undefined ? ' │' : ' ┤'}`, 'muted'), ...cells];
+		return [cell(`${(label ?? '').padStart(gutter - 1)}${label === undefined ? ' │' : ' ┤'}`, 'muted'), ...cells];
 	});
 	const column = (value: number) => Math.floor(place.x(value) / wide);
 	return [
-		line(`${' '.repeat(gutter)}${chart.y.name}`, 'muted'),
+		[cell(`${' '.repeat(gutter)}${chart.y.name}`, 'muted')],
 		...body,
 		...axisBelow(chart, spans.x, column, gutter, columns),
 	];
@@ -128,13 +129,7 @@ function nameLine({name, tone, points}: Series, canvas: Canvas, place: Place): v
 	}
 }
 
-function axisBelow(
-	{x}: Chart,
-	span: Span,
-	column: (value: number) => number,
-	gutter: number,
-	columns: number,
-): Pieces[] {
+function axisBelow({x}: Chart, span: Span, column: (value: number) => number, gutter: number, columns: number): Line[] {
 	const ticks = niceTicks(span.from, span.to, Math.max(2, Math.round(columns / columnsPerTick)));
 	const labels = tickLabels(ticks);
 	const rule = Array.from({length: columns}, () => '─');
@@ -152,6 +147,6 @@ function axisBelow(
 	const numbers = below
 		.slice(0, columns - displayWidth(name))
 		.replace(/\S+$/, cut => (below[columns - displayWidth(name)] === ' ' ? cut : ''));
-	const axis: Piece[] = [piece(`${' '.repeat(gutter)}└${rule.join('')}`, 'muted')];
-	return [axis, [piece(`${' '.repeat(gutter + 1)}${numbers.padEnd(columns - displayWidth(name))}${name}`, 'muted')]];
+	const axis: Cell[] = [cell(`${' '.repeat(gutter)}└${rule.join('')}`, 'muted')];
+	return [axis, [cell(`${' '.repeat(gutter + 1)}${numbers.padEnd(columns - displayWidth(name))}${name}`, 'muted')]];
 }

@@ -1,9 +1,9 @@
 /** A field of cells to draw on: braille dots (2 × 4 a cell), or one mark a cell where only ASCII can be shown. */
-import type {Meaning, Piece} from './pieces.ts';
+import type {Cell, Tone} from './cell.ts';
 
 export type Pen = {
 	readonly mark: string;
-	readonly tone: Meaning /** Draw every so many dots. */;
+	readonly tone: Tone /** Draw every so many dots. */;
 	readonly every?: number;
 };
 
@@ -16,7 +16,7 @@ const brailleStart = 0x2800;
 const bitOf = (x: number, y: number): number => dotBits[x % 2]![y % 4]!;
 
 /** `text` stands in place of dots; `under` gives way to them. */
-type CellState = {dots: number; tone: Meaning; text: string | undefined; under: boolean};
+type CellState = {dots: number; tone: Tone; text: string | undefined; under: boolean};
 
 export class Canvas {
 	/** Size in dots. */
@@ -60,7 +60,7 @@ export class Canvas {
 	}
 
 	/** A line of signs from left to right, under everything else. */
-	rule(y: number, sign: string, tone: Meaning): void {
+	rule(y: number, sign: string, tone: Tone): void {
 		if (!this.#isInside(0, y)) return;
 		const start = this.#cellOf(0, y);
 		for (let index = start; index < start + this.#columns; index++) {
@@ -69,7 +69,7 @@ export class Canvas {
 	}
 
 	/** Text over what is drawn, from a dot's cell on. What does not fit is cut. */
-	label(x: number, y: number, text: string, tone: Meaning): void {
+	label(x: number, y: number, text: string, tone: Tone): void {
 		if (!this.#isInside(x, y)) return;
 		const start = this.#cellOf(x, y);
 		const room = this.#columns - (start % this.#columns);
@@ -93,7 +93,7 @@ export class Canvas {
 	}
 
 	/** The lines from top to bottom; neighbors of one meaning are one piece. */
-	lines(): Piece[][] {
+	lines(): Cell[][] {
 		return Array.from({length: this.#rows}, (_, row) => this.#line(row));
 	}
 
@@ -107,8 +107,8 @@ export class Canvas {
 		return Math.floor(y / high) * this.#columns + Math.floor(x / wide);
 	}
 
-	#line(row: number): Piece[] {
-		const pieces: {text: string; tone: Meaning}[] = [];
+	#line(row: number): Cell[] {
+		const pieces: {text: string; tone: Tone}[] = [];
 		for (let column = 0; column < this.#columns; column++) {
 			const cell = this.#cells[row * this.#columns + column];
 			const text = cell === undefined ? ' ' : (cell.text ?? String.fromCharCode(brailleStart | cell.dots));

@@ -1,0 +1,170 @@
+/** What practice teaches: circumference, growth, drag and power with their uncertainty, and the model held against practice. */
+import type {Car} from '../../drivetrain/car.ts';
+import type {Track} from '../../drivetrain/track.ts';
+import type {Uncertainties} from '../../drivetrain/uncertainties.ts';
+import {type Candidate, candidateOf, gearboxNamed, onRack} from '../../planning/candidates.ts';
+import {done, failed, fault} from '../../planning/faults.ts';
+import {measuredPoints} from '../../planning/measured.ts';
+import {type Plan, planFor} from '../../planning/plan.ts';
+import type {Outcome} from '../../planning/results.ts';
+import {counted} from '../../planning/words.ts';
+import type {Findings} from '../find/findings.ts';
+import {type Anchor, anchor} from './anchor.ts';
+import {type CircumferenceLearned, circumferenceFromFindings, circumferenceFromReadings} from './circumference.ts';
+import {type Compared, comparedRuns} from './compared.ts';
+import {readingsFrom} from './from-findings.ts';
+import {modelOf} from './model.ts';
+import {type Known, known, type Reading} from './reading.ts';
+import {circumferenceSeen, givenSpeedSe, type Held, heldCircumferenceShare, readingOf, type Seen} from './seen.ts';
+import {type Trim, untrimmed} from './trim.ts';
+
+export type Subject = {
+	readonly car: Car;
+	readonly track: Track;
+	/** What both documents state of their own numbers. */
+	readonly uncertainties: {readonly car: Uncertainties; readonly track: Uncertainties};
+};
+
+export type Learning = {
+	readonly source: 'hand' | 'log' | 'measured';
+	/** "practice, 41 laps", "2 numbers seen by hand". */
+	readonly from: string;
+	/** What the car ran with. */
+	readonly candidate: Candidate | undefined;
+	readonly circumference: CircumferenceLearned | undefined;
+	/** Without a speed one number cannot tell circumference and speed apart: what was taken for right. */
+	readonly held: Held | undefined;
+	readonly anchor: Anchor | undefined;
+	readonly readings: readonly Reading[];
+	/** All of it, to compute with. */
+	readonly trim: Trim;
+	readonly compared: readonly Compared[];
+};
+
+/** From numbers that were seen by hand; each may be at another straight, with another pair. */
+export function learnFromSeen(subject: Subject, seen: readonly Seen[], held: Held): Outcome<Learning> {
+	return withPlan(subject, plan => {
+		const ask = modelOf(subject.car, subject.track);
+		const words = seen.flatMap(one => circumferenceSeen(plan, ask, one, held) ?? []);
+		const circumference = circumferenceFromReadings(plan, words);
+		const rolloutM = circumference?.rolloutM ?? statedRollout(subject, plan);
+		const readings = seen.map(one => readingOf(plan, ask, one, held, rolloutM));
+		const needsHolding = seen.some(one => one.speedMps === undefined);
+		const from = `${counted(seen.length, 'number')} seen by hand`;
+		return learned(subject, {
+			source: 'hand',
+			from,
+			candidate: seen[0]?.candidate,
+			circumference,
+			held: needsHolding ? held : undefined,
+			readings,
+		});
+	});
+}
+
+/** From a logged run. */
+export function learnFromFindings(subject: Subject, findings: Findings): Outcome<Learning> {
+	return withPlan(subject, plan => {
+		const candidate = findings.mounted.best?.candidate;
+		const circumference = circumferenceFromFindings(plan, findings);
+		const readings =
+			candidate === undefined ? [] : readingsFrom(findings, candidate, modelOf(subject.car, subject.track));
+		const laps = findings.laps.filter(({kind}) => kind === 'good').length;
+		return learned(subject, {
+			source: 'log',
+			from: `practice, ${counted(laps, 'lap')}`,
+			candidate,
+			circumference,
+			held: undefined,
+			readings,
+		});
+	});
+}
+
+/** From the speeds and RPM that the track holds as measured. */
+export function learnFromMeasured(subject: Subject): Outcome<Learning> {
+	return withPlan(subject, plan => {
+		const readings = measuredReadings(subject, plan);
+		const from = `${counted(readings.length, 'measured straight')} of the track`;
+		return learned(subject, {
+			source: 'measured',
+			from,
+			candidate: readings[0]?.candidate,
+			circumference: undefined,
+			held: readings.some(({speedSeen}) => !speedSeen) ? 'circumference' : undefined,
+			readings,
+		});
+	});
+}
+
+function withPlan(subject: Subject, learn: (plan: Plan) => Learning): Outcome<Learning> {
+	const plan = planFor(subject.car, subject.track);
+	return plan.ok ? done(learn(plan.value)) : plan;
+}
+
+function learned(subject: Subject, found: Omit<Learning, 'anchor' | 'trim' | 'compared'>): Learning {
+	const ask = modelOf(subject.car, subject.track);
+	const {circumference} = found;
+	const rolled: Trim = {...untrimmed, rollout: circumference?.factor ?? 1, growth: circumference?.growth?.value};
+	const anchored = anchor(ask, found.readings, rolled);
+	const trim = {...rolled, drag: anchored?.drag?.value ?? 1, power: anchored?.power?.value ?? 1};
+	return {...found, anchor: anchored, trim, compared: comparedRuns(ask, found.readings, trim)};
+}
+
+/** The circumference of the documents, with what they state of it. */
+function statedRollout({uncertainties}: Subject, plan: Plan): Known {
+	const {rolloutM} = plan.base.vehicle;
+	const sides = (['left', 'right'] as const).map(
+		side => uncertainties.track.get(`car.tires.${side}`) ?? uncertainties.car.get(`tires.${side}`),
+	);
+	const [left, right] = sides;
+	// One tape for both sides: their errors go together.
+	const stated = left === undefined || right === undefined ? undefined : (left + right) / 2;
+	return known(rolloutM, stated ?? rolloutM * heldCircumferenceShare);
+}
+
+function measuredReadings({track, uncertainties}: Subject, plan: Plan): Reading[] {
+	return measuredPoints(plan).flatMap(({index, straight, speedMps, rpm, candidate, gear}): Reading[] => {
+		if (candidate === undefined || speedMps === undefined) return [];
+		const stated = (field: string) => uncertainties.track.get(`straights[${index}].measured.${field}`);
+		const given = track.straights[index]!.measured;
+		const lowest = (track.straights[index]!.gears ?? track.gears)?.lowest ?? 1;
+		return [
+			{
+				index,
+				name: straight,
+				candidate,
+				gear,
+				endMps: known(speedMps, stated('end') ?? givenSpeedSe),
+				endRpm: rpm === undefined ? undefined : known(rpm, stated('rpm') ?? 0),
+				speedSeen: given?.endMps !== undefined,
+				exitMps: undefined,
+				lengthM: undefined,
+				timeS: undefined,
+				gears: given?.gear === undefined ? undefined : {lowest: Math.min(lowest, given.gear), highest: given.gear},
+				limited: false,
+			},
+		];
+	});
+}
+
+/** The pair and set of the car that were named, else the installed ones. */
+export function candidateFor(
+	car: Car,
+	pair: {driving: number; driven: number} | undefined,
+	gearbox: string | undefined,
+): Outcome<Candidate> {
+	const asked = pair ?? car.installed?.pair;
+	const name = gearbox ?? car.installed?.gearbox;
+	if (asked === undefined || name === undefined)
+		return failed([fault('command', asked === undefined ? 'pair' : 'gearbox', 'nothing', 'what the car ran with')]);
+	const mounted = onRack(car, asked);
+	const set = gearboxNamed(car, name);
+	if (mounted === undefined)
+		return failed([fault('command', 'pair', `${asked.driving}/${asked.driven}`, 'a pair of this rack')]);
+	if (set === undefined)
+		return failed([
+			fault('command', 'gearbox', `"${name}"`, `one of ${car.gearboxes.map(one => one.name).join(', ')}`),
+		]);
+	return done(candidateOf(car, mounted, set));
+}

@@ -1,0 +1,183 @@
+import {expect, test, vi} from 'vitest';
+import {learnedIn} from '../../../source/documents/learned.ts';
+import {checkCar, checkTrack} from '../../../source/documents/read.ts';
+import {planFor} from '../../../source/planning/plan.ts';
+import {candidateFor} from '../../../source/practice/learn/learn.ts';
+import type {Keeper} from '../../../source/screens/keeper.ts';
+import {current} from '../../../source/screens/session/documents.ts';
+import {LiveSession} from '../../../source/screens/session/live.ts';
+import {practiceOf} from '../../../source/screens/session/practice-of.ts';
+import type {Session} from '../../../source/screens/session/session.ts';
+import {KeyDecoder} from '../../../source/screens/terminal/key-decoder.ts';
+import {csvOf} from '../../practice/csv.ts';
+import {generateLog} from '../../practice/log-generator.ts';
+import {errandsInMemory} from '../errands.ts';
+import {car, catalog, oval, session} from './documents.ts';
+
+function started(start: Session = session()) {
+	const {errands, done} = errandsInMemory();
+	const keeper: Keeper = {
+		keep() {},
+		drop() {},
+		earlier: undefined,
+		dropEarlier() {},
+		save: () => ({ok: true, words: 'Saved.'}),
+		where: () => undefined,
+		errands,
+	};
+	const waiting: (() => void)[] = [];
+	const clock = {
+		now: () => 0,
+		later: (act: () => void) => {
+			waiting.push(act);
+			return () => {
+				if (waiting.includes(act)) waiting.splice(waiting.indexOf(act), 1);
+			};
+		},
+	};
+	const live = new LiveSession(start, catalog, keeper, {leave() {}, suspend() {}, redraw() {}}, clock);
+	/** What was put off until keys and drawing have had their turn. */
+	const settle = () => {
+		for (let act = waiting.shift(); act !== undefined; act = waiting.shift()) act();
+	};
+	settle();
+	const press = (keys: string) => {
+		for (const part of keys.split(new RegExp(`(${esc}(?!\\[))`))) {
+			const decoder = new KeyDecoder();
+			for (const event of [...decoder.push(part), ...decoder.flush()]) live.press(event);
+		}
+		settle();
+		return live.state();
+	};
+	const until = (holds: () => unknown) =>
+		vi.waitFor(() => {
+			settle();
+			expect(holds()).toBeTruthy();
+		}, 10_000);
+	const atPractice = async () => {
+		press('l');
+		await until(() => live.state().scene.practice?.taught);
+	};
+	return {live, press, until, atPractice, done};
+}
+const [down, esc, enter, tab, del] = ['\x1B[B', '\x1B', '\r', '\t', '\x1B[3~'];
+const trackOf = (live: LiveSession) => current(live.state().session.history.present, 'track').json;
+const taughtIn = (live: LiveSession) => live.state().scene.practice?.taught;
+
+test('from a measured peak RPM to the next pick in at most ten keys', async () => {
+	const {live, press, until, atPractice} = started();
+	await atPractice();
+	const keys = ['l', down, '8', '4', '2', '0', enter];
+	expect(keys.length).toBeLessThanOrEqual(10);
+	press(keys.slice(1).join(''));
+	expect(practiceOf(live.state().session).seen).toEqual([{straight: 'Back', text: '8420'}]);
+	await until(() => typeof live.state().scene.practice?.effect === 'object');
+	const {effect} = live.state().scene.practice!;
+	expect(effect === 'working' ? '' : effect?.words).toMatch(/first/i);
+});
+
+test('a digit begins the number of the straight under the cursor, and Enter opens it again', async () => {
+	const {live, press, atPractice} = started();
+	await atPractice();
+	press('84');
+	expect(live.state().session.over).toMatchObject({is: 'entry', asks: 'seen', line: {text: '84'}});
+	press(`20 gear 4 118 mph${enter}`);
+	expect(practiceOf(live.state().session).seen).toEqual([{straight: 'Front', text: '8420 gear 4 118 mph'}]);
+	press(enter);
+	expect(live.state().session.over).toMatchObject({line: {text: '8420 gear 4 118 mph'}});
+});
+
+test('what cannot be understood stays open with what is wrong', async () => {
+	const {live, press, atPractice} = started();
+	await atPractice();
+	press(`8420 gear 9${enter}`);
+	expect(live.state().session.over).toMatchObject({is: 'entry', wrong: 'found gear 9; allowed from 1 to 5'});
+	press(esc);
+	expect(practiceOf(live.state().session).seen).toEqual([]);
+});
+
+test('h holds the other, Del takes the number away', async () => {
+	const {live, press, atPractice} = started();
+	await atPractice();
+	press(`8420${enter}h`);
+	expect(taughtIn(live)?.lesson?.learning).toMatchObject({held: 'speed', circumference: {withHeldSpeed: 1}});
+	press(del);
+	expect(taughtIn(live)?.lesson).toBeUndefined();
+});
+
+test('nothing changes before it is accepted; a line is, then taken back, and undone', async () => {
+	const {live, press, atPractice, done} = started();
+	await atPractice();
+	press(`${down}8200${enter}`);
+	expect(trackOf(live)).toBe(oval.json);
+	press(`${tab}${enter}`);
+	expect(learnedIn(trackOf(live)).map(({field, from}) => [field, from])).toEqual([
+		['car.power', '1 number seen by hand'],
+	]);
+	expect(live.state().session.notice).toMatch(/^power is in the documents\. Ctrl\+S saves, u undoes\.$/);
+	expect(done.entries.at(-1)?.remark).toMatch(/^learned from 1 number seen by hand: power /);
+	press('b');
+	expect(trackOf(live)).toEqual(oval.json);
+	expect(done.entries.at(-1)?.remark).toMatch(/^taken back: car\.power/);
+	press('u');
+	expect(learnedIn(trackOf(live))).toHaveLength(1);
+	press('u');
+	expect(trackOf(live)).toBe(oval.json);
+});
+
+test('all is accepted at once, and what is ranked follows', async () => {
+	const {live, press, until, atPractice} = started();
+	await atPractice();
+	press(`${down}8200${enter}a`);
+	expect(trackOf(live).car).toEqual({power: expect.stringMatching(/ ± /)});
+	await until(() => live.state().answer.is === 'ready');
+	const {answer} = live.state();
+	expect(answer.is === 'ready' && answer.ranked.ranking.setting.anchored).toBe(true);
+});
+
+test('numbers belong to their track', async () => {
+	const {live, press, atPractice} = started();
+	await atPractice();
+	press(`8420${enter}`);
+	press(`${esc}tÄuß${enter}l`);
+	expect(practiceOf(live.state().session).seen).toEqual([]);
+});
+
+function oneLog(): string {
+	const [track, ours] = [checkTrack({...oval.json}), checkCar({...car.json})];
+	if (!track.ok || !ours.ok) throw new Error('fixtures');
+	const plan = planFor(ours.value, track.value);
+	const mounted = candidateFor(ours.value, undefined, undefined);
+	if (!plan.ok || !mounted.ok) throw new Error('fixtures');
+	return csvOf(generateLog({seed: 2, plan: plan.value, mounted: mounted.value, driving: {laps: 6}}).run);
+}
+
+test('a log is read while keys are answered, and put away again', async () => {
+	const {live, press, until, atPractice, done} = started();
+	done.files.set('run.csv', oneLog());
+	await atPractice();
+	press(`frun.csv${enter}`);
+	expect(live.state().session.notice).toMatch(/^Reading run\.csv/);
+	press('m');
+	expect(live.state().session.units).toBe('metric');
+	await until(() => practiceOf(live.state().session).log);
+	const {lesson} = taughtIn(live)!;
+	expect(lesson?.learning.from).toBe('practice, 6 laps');
+	expect(lesson?.learning.compared.map(({reading}) => reading.name)).toEqual(['Front', 'Back']);
+	press('8');
+	expect(live.state().session.notice).toMatch(/run\.csv is shown; Del puts it away/);
+	press(`${tab}${tab}${tab}`);
+	expect(live.state().session.place).toMatchObject({pane: 'gears'});
+	press(del);
+	expect(practiceOf(live.state().session).log).toBeUndefined();
+	expect(live.state().session.place).toMatchObject({pane: 'numbers'});
+});
+
+test('a log that is not there, and columns that are none, are told', async () => {
+	const {live, press, until, atPractice} = started();
+	await atPractice();
+	press(`fnone.csv${enter}`);
+	await until(() => live.state().session.notice?.includes('there is no such file'));
+	press(`frun.csv; tempo=Speed${enter}`);
+	expect(live.state().session.over).toMatchObject({is: 'entry', wrong: expect.stringMatching(/tempo=Speed/)});
+});
