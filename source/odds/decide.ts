@@ -16,6 +16,8 @@ export type Standing = {readonly row: RowTally; readonly over: Estimate; readonl
  */
 export function decide(standings: readonly Standing[], risk: number | null): Decision {
 	const open = standings.filter(({row}) => row.barred === null && row.draws > 0);
+	// Without a length there is no time to choose by.
+	if (open.every(({row}) => Number.isNaN(meanTime(row)))) return {row: null, next: null, isDecided: true, open: []};
 	return risk === null ? byChance(open) : withinRisk(open, risk);
 }
 

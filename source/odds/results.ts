@@ -15,10 +15,10 @@ export type OddsRow = {
 	readonly barred: string | null;
 	/** On how many draws this stands. */
 	readonly draws: number;
-	/** Chance of passing the RPM limit anywhere in any situation. */
-	readonly over: Estimate;
-	/** Chance of being the fastest of those that are allowed in the same draw; rows just as fast share it. */
-	readonly first: Estimate;
+	/** Chance of passing the RPM limit anywhere in any situation; null where it is not drawn. */
+	readonly over: Estimate | null;
+	/** Chance of being the fastest of those that are allowed in the same draw; rows just as fast share it; null where it is not drawn. */
+	readonly first: Estimate | null;
 	/** Share-weighted mean time; null where none can be had. */
 	readonly timeS: Spread | null;
 	readonly highestRpm: Spread | null;
@@ -36,7 +36,7 @@ export type OddsInput = {
 };
 
 export type Decision = {
-	/** "33/38 A"; null where nothing is within the risk, or nothing is allowed in any draw. */
+	/** "33/38 A"; null where nothing is within the risk, nothing is allowed in any draw, or no straight has a length. */
 	readonly row: string | null;
 	/** The one that would be next. */
 	readonly next: string | null;

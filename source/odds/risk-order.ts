@@ -13,9 +13,13 @@ export function riskOrder(rows: readonly Row[], odds: Odds, risk: number): RiskR
 	const byName = new Map(odds.rows.map(row => [`${row.pair} ${row.gearbox}`, row]));
 	const told = rows.map(row => {
 		const found = byName.get(`${row.pair} ${row.gearbox}`);
-		const known = found === undefined || found.barred !== null ? null : found;
+		const known = found === undefined || found.over === null ? null : found;
 		const fails = row.checks.some(({check, verdict}) => verdict === 'fail' && check !== 'limit' && check !== 'limiter');
-		return {row, odds: known, isWithin: known !== null && known.timeS !== null && known.over.value <= risk && !fails};
+		return {
+			row,
+			odds: known,
+			isWithin: known?.over != null && known.timeS !== null && known.over.value <= risk && !fails,
+		};
 	});
 	const within = told.filter(({isWithin}) => isWithin);
 	return [

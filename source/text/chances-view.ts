@@ -3,13 +3,14 @@ import type {Estimate, Matters, Odds, OddsInput, Share} from '../odds/results.ts
 import type {RiskRow} from '../odds/risk-order.ts';
 import {rowName} from '../planning/rank-rack.ts';
 import type {Row} from '../planning/results.ts';
-import {fixed, type UnitSystem, unitsOf} from './units.ts';
+import {absent, fixed, type UnitSystem, unitsOf} from './units.ts';
 
 /** "3.1 %": enough digits for what is known. */
 export const percent = (share: number, digits = 1): string => `${fixed(100 * share, digits)} %`;
 
 /** "3.1 ± 0.5 %" */
-export const chanceText = ({value, error}: Estimate): string => `${fixed(100 * value, 1)} ± ${fixed(100 * error, 1)} %`;
+export const chanceText = (chance: Estimate | null): string =>
+	chance === null ? absent : `${fixed(100 * chance.value, 1)} ± ${fixed(100 * chance.error, 1)} %`;
 
 export const rowText = ({pair, gearbox}: {readonly pair: string; readonly gearbox: string}): string =>
 	`${pair} ${gearbox}`;
@@ -67,6 +68,8 @@ export const doubtsOf = ({decision: {isDecided, open}, isComplete}: Odds): strin
 export const decisionSentences = (odds: Odds): string[] => {
 	const {decision, risk, rows} = odds;
 	const {row, next} = decision;
+	if (rows.every(({timeS}) => timeS === null))
+		return ['No straight has a length: there are chances of passing the limit, and no times to choose by.'];
 	if (row === null)
 		return [
 			risk === null
@@ -139,7 +142,7 @@ const namesText = (names: readonly string[]): string =>
 
 /** The ranking by risk: its rows with the reason for their place, and the chance of each. */
 export const riskView = (rows: readonly RiskRow[], {risk}: Odds) => {
-	const chances = new Map(rows.map(({row, odds}) => [rowName(row), odds === null ? '-' : chanceText(odds.over)]));
+	const chances = new Map(rows.map(({row, odds}) => [rowName(row), chanceText(odds?.over ?? null)]));
 	return {rows: rows.map(one => ({...one.row, reason: riskReason(one, risk ?? 0)})), chances};
 };
 
@@ -149,5 +152,5 @@ function riskReason({row, odds, isWithin}: RiskRow, risk: number): Row['reason']
 	const mean = odds.timeS === null ? '' : `, ${fixed(odds.timeS.mean, 3)} s on the mean`;
 	if (isWithin)
 		return `${chance}, within the risk of ${percent(risk)}${mean}; the fastest allowed in ${chanceText(odds.first)}.`;
-	return odds.over.value > risk ? `${chance}, above the risk of ${percent(risk)}. ${row.reason}` : row.reason;
+	return (odds.over?.value ?? 0) > risk ? `${chance}, above the risk of ${percent(risk)}. ${row.reason}` : row.reason;
 }

@@ -23,7 +23,7 @@ type Placed = {place: number; row: OddsRow; risk: number | null};
 const likely = 0.5;
 
 const overCell = ({row, risk}: Placed): Cell => {
-	if (row.barred !== null) return cell(absent, 'muted');
+	if (row.over === null) return cell(absent, 'muted');
 	const tone = row.over.value > (risk ?? likely) ? 'fail' : row.over.value > 0 ? 'near' : 'pass';
 	return cell(chanceText(row.over), tone);
 };
@@ -37,7 +37,7 @@ export const oddsColumns: readonly Making<Placed>[] = [
 		head: 'fastest',
 		align: 'right',
 		keep: 0,
-		cell: ({row}) => cell(row.barred === null ? chanceText(row.first) : absent),
+		cell: ({row}) => cell(chanceText(row.first)),
 	},
 	{head: 'loss s', align: 'right', keep: 1, cell: ({row}) => cell(row.lossS === null ? absent : fixed(row.lossS, 3))},
 	{

@@ -4,8 +4,9 @@ import type {Track} from '../../source/drivetrain/track.ts';
 import {worldOfDraw} from '../../source/odds/draws/draw.ts';
 import type {OddsOptions} from '../../source/odds/odds-steps.ts';
 import {oddsOf} from '../../source/odds/odds-steps.ts';
-import type {Odds} from '../../source/odds/results.ts';
+import type {Odds, OddsRow} from '../../source/odds/results.ts';
 import type {Stated} from '../../source/odds/stated.ts';
+import {decisionSentences} from '../../source/text/chances-view.ts';
 import {car, engine, foot, mph, rackPair, situation, straight, track} from '../planning/build.ts';
 import {runs} from '../runs.ts';
 import {shippedCar, shippedTrack} from '../tracks/demo.ts';
@@ -16,7 +17,9 @@ function answer(one: Car, at: Track, options: OddsOptions = {}): Odds {
 	if (!odds.ok) throw new Error(JSON.stringify(odds.faults));
 	return odds.value;
 }
-const rowOf = (odds: Odds, name: string) => odds.rows.find(({pair, gearbox}) => `${pair} ${gearbox}` === name)!;
+const rowOf = (odds: Odds, name: string) => drawn(odds.rows.find(({pair, gearbox}) => `${pair} ${gearbox}` === name)!);
+/** With its chances, of a row that is drawn. */
+const drawn = (row: OddsRow) => ({...row, over: row.over!, first: row.first!});
 
 /** Φ(z) by Abramowitz & Stegun 26.2.17, |error| below 7.5e-8. */
 function normalBelow(z: number): number {
@@ -84,7 +87,7 @@ const small = car({engines: [engine({rpmLimit: 9100})], gearboxes: [car().gearbo
 test('the same seed gives the same answer, another a like one', () => {
 	const [one, again, other] = [1, 1, 2].map(seed => answer(small, track(), {seed, mostDraws: 512}));
 	expect(one).toEqual(again);
-	for (const row of one!.rows) {
+	for (const row of one!.rows.map(drawn)) {
 		const like = rowOf(other!, `${row.pair} ${row.gearbox}`);
 		expect(Math.abs(row.over.value - like.over.value)).toBeLessThan(5 * Math.hypot(row.over.error, like.over.error));
 	}
@@ -111,7 +114,7 @@ test('draws from a sequence agree with ten times as many random ones through the
 		const allowed = rows.filter(({isAllowed}) => isAllowed).sort((a, b) => a.timeS - b.timeS);
 		if (allowed[0] !== undefined) first.set(allowed[0].name, (first.get(allowed[0].name) ?? 0) + 1);
 	}
-	for (const row of odds.rows) {
+	for (const row of odds.rows.map(drawn)) {
 		const name = `${row.pair} ${row.gearbox}`;
 		for (const [estimate, found] of [
 			[row.over, over],
@@ -140,7 +143,7 @@ test.each(['tarrowdale.json', 'brackenfold.json', 'ostrand-flats.json'])(
 			expect(some!.decision).toEqual(all!.decision);
 			for (const row of some!.rows) {
 				const full = rowOf(all!, `${row.pair} ${row.gearbox}`);
-				expect([row.over.value, row.first.value]).toEqual([full.over.value, full.first.value]);
+				expect([row.over?.value, row.first?.value]).toEqual([full.over?.value, full.first?.value]);
 			}
 		}
 	},
@@ -181,7 +184,7 @@ test('rows that cannot be mounted are told why and not drawn', async () => {
 		draws: 64,
 		mostDraws: 64,
 	});
-	expect(rowOf(odds, '25/44 A')).toMatchObject({barred: 'not on hand', draws: 0});
+	expect(rowOf(odds, '25/44 A')).toMatchObject({barred: 'not on hand', draws: 0, over: null, first: null, timeS: null});
 	expect(rowOf(odds, '31/37 A')).toMatchObject({barred: 'past its miles'});
 	expect(rowOf(odds, '36/34 A')).toMatchObject({barred: 'does not fit the housing'});
 });
@@ -198,6 +201,14 @@ test('a number that is known exactly is not drawn, and one that is known badly m
 	const off = drawn.track.straights[0]!.exitMps - track().straights[0]!.exitMps;
 	expect(drawn.track.straights[0]!.minimumMps! - track().straights[0]!.minimumMps!).toBeCloseTo(off, 12);
 	expect(drawn.car.tires.rightM / drawn.car.tires.leftM).toBeCloseTo(small.tires.rightM / small.tires.leftM, 12);
+});
+
+test('without a length there are chances of passing the limit, and nothing to choose by', () => {
+	const odds = answer(oneGear, held, {stated: still, draws: 64});
+	expect(odds.decision).toEqual({row: null, next: null, isDecided: true, open: []});
+	expect(rowOf(odds, '33/38 A').over.value).toBeGreaterThan(0);
+	expect(decisionSentences(odds)[0]).toMatch(/^No straight has a length/);
+	expect(answer(oneGear, held, {stated: still, draws: 64, risk: 0.05}).decision.row).toBeNull();
 });
 
 test('bad input comes back as faults', () => {
