@@ -1,7 +1,8 @@
 /** The bare command in a terminal: the screen, on the documents that the ranking would be printed of. */
+
+import type {JsonObject} from '../documents/json.ts';
 import {openScreen} from '../screens/open.ts';
 import type {OpenDocument} from '../screens/session/documents.ts';
-import type {JsonObject} from '../screens/session/json.ts';
 import {homeDirectory} from '../store/home.ts';
 import {readPreferences} from '../store/preferences.ts';
 import {findDocument} from './find-document.ts';

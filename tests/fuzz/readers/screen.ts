@@ -1,9 +1,10 @@
 /** Keys pressed in a session that runs, in memory: whatever they are, there is a frame of the window's size. */
+
+import type {JsonObject} from '../../../source/documents/json.ts';
 import type {Keeper} from '../../../source/screens/keeper.ts';
 import {bindingsOf} from '../../../source/screens/keys/key-table.ts';
 import {painted} from '../../../source/screens/parts/theme.ts';
 import type {Documents} from '../../../source/screens/session/documents.ts';
-import type {JsonObject} from '../../../source/screens/session/json.ts';
 import {LiveSession} from '../../../source/screens/session/live.ts';
 import {startSession} from '../../../source/screens/session/session.ts';
 import {KeyDecoder} from '../../../source/screens/terminal/key-decoder.ts';
