@@ -17,8 +17,10 @@ import {inJson} from '../mutate-json.ts';
 import type {Answer, Reader} from '../reader.ts';
 import {cars, tracks} from './documents.ts';
 // What the session loads when it is first needed: loaded here, so that no load outlives a text.
+import '../../../source/screens/session/ahead.ts';
 import '../../../source/screens/session/handing.ts';
 import '../../../source/screens/session/incoming.ts';
+import '../../../source/screens/session/teaching.ts';
 
 const [down, up, right, left, esc] = ['\x1B[B', '\x1B[A', '\x1B[C', '\x1B[D', '\x1B\n'];
 const sizes = [
