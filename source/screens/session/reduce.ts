@@ -1,11 +1,12 @@
 /** The session after an action: the one place where it changes. Pure. */
+
+import {withValue} from '../../documents/json.ts';
 import {quantityOf} from '../../documents/quantity.ts';
 import {edited, editLine} from '../parts/edit-line.ts';
 import type {Action} from './action.ts';
 import {aheadIn} from './ahead-place.ts';
 import {current, type Documents, lookAt, newDocument, type OpenDocument, withJson, withNotes} from './documents.ts';
 import {amended, type History, recorded, redone, undone} from './history.ts';
-import {withValue} from './json.ts';
 import {reduceForm} from './reduce-form.ts';
 import {reduceHistory, typedInDraft} from './reduce-history.ts';
 import {reducePractice} from './reduce-practice.ts';
