@@ -5,13 +5,14 @@ import {mphMps} from '../drivetrain/constants.ts';
 import {pairRatio} from '../drivetrain/gear-pair.ts';
 import type {Track} from '../drivetrain/track.ts';
 import {type Candidate, candidatesOf} from '../planning/candidates.ts';
-import {limitMargin} from '../planning/order.ts';
 import {type Plan, planFor} from '../planning/plan.ts';
 import type {Row} from '../planning/results.ts';
 import {rowOf} from '../planning/row.ts';
 import {finish, groundOf} from '../planning/run-rack.ts';
 import {runRow} from '../planning/run-row.ts';
 import {barredBy} from './barred.ts';
+import {dayOf} from './day.ts';
+import {RowDraws} from './row-draw.ts';
 import {noShift, type Shift, shifted, type World, worldOf} from './world.ts';
 
 /** Highest RPM on a straight: as the track stands, and the most over the situations. */
@@ -66,6 +67,8 @@ export function* oneToothSteps(car: Car, track: Track, name: string): Generator<
 	const ratio = pairRatio(candidate.pair);
 	const shorter = others.find(one => pairRatio(one.pair) > ratio);
 	const taller = others.findLast(one => pairRatio(one.pair) < ratio);
+	const draws = new RowDraws({plan, measured: ground.measured});
+	const runIn = (shift: Shift, one: Candidate) => draws.run(dayOf(plan, shifted(world, shift)), {candidate: one});
 	const neighbors: Neighbor[] = [];
 	for (const [direction, other] of [
 		['shorter', shorter],
@@ -73,9 +76,9 @@ export function* oneToothSteps(car: Car, track: Track, name: string): Generator<
 	] as const) {
 		if (other === undefined) continue;
 		const told = toothRow(plan, other);
-		const sameTime = yield* breakEvenSteps(world, shift => timeLead(world, shift, candidate, other));
+		const sameTime = yield* breakEvenSteps(world, shift => runIn(shift, other).timeS - runIn(shift, candidate).timeS);
 		const shorterOne = direction === 'shorter' ? other : candidate;
-		const atLimit = yield* breakEvenSteps(world, shift => marginOf(world, shift, shorterOne));
+		const atLimit = yield* breakEvenSteps(world, shift => plan.limitRpm - runIn(shift, shorterOne).highestRpm);
 		neighbors.push({direction, ...told, sameTime, atLimit});
 	}
 	return {of: toothRow(plan, candidate), neighbors};
@@ -140,22 +143,4 @@ function* nearestRootSteps(f: (x: number) => number, far: number, near: number):
 	}
 	yield;
 	return roots.length === 0 ? null : roots.reduce((best, root) => (Math.abs(root) < Math.abs(best) ? root : best));
-}
-
-function timeLead(world: World, shift: Shift, candidate: Candidate, other: Candidate): number {
-	const plan = planIn(world, shift);
-	if (plan === undefined) return Number.NaN;
-	const [one, next] = [rowIn(plan, candidate), rowIn(plan, other)];
-	return one.fastestS === null || next.fastestS === null ? Number.NaN : next.fastestS - one.fastestS;
-}
-
-function marginOf(world: World, shift: Shift, candidate: Candidate): number {
-	const plan = planIn(world, shift);
-	return plan === undefined ? Number.NaN : limitMargin(rowIn(plan, candidate));
-}
-
-function planIn(world: World, shift: Shift): Plan | undefined {
-	const {car, track} = shifted(world, shift);
-	const plan = planFor(car, track);
-	return plan.ok ? plan.value : undefined;
 }
