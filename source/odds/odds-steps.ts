@@ -13,34 +13,12 @@ import {decide, ordered, type Standing} from './decide.ts';
 import {worldOfDraw} from './draws/draw.ts';
 import {chanceOf, replicates, spreadOf} from './estimates.ts';
 import {inputsOf} from './inputs.ts';
+import {drawsUnlessGiven, mostDrawsUnlessGiven, type OddsOptions, seedUnlessGiven} from './options.ts';
 import type {Odds, OddsRow} from './results.ts';
 import {type RowDraw, RowDraws} from './row-draw.ts';
-import {nothingStated, type Stated} from './stated.ts';
-import {type Best, bestOf, firstPart, levelS, lossOf, RowTally} from './tally.ts';
+import {nothingStated} from './stated.ts';
+import {type Best, bestOf, deviationsBehind, firstPart, lossOf, RowTally} from './tally.ts';
 import {noShift, shifted, worldOf} from './world.ts';
-
-export type OddsOptions = {
-	/** The chance of passing the RPM limit that is accepted, a share of 1. */
-	readonly risk?: number | undefined;
-	readonly seed?: number | undefined;
-	/** The only situation; all of them unless given. */
-	readonly situation?: string | undefined;
-	/** What the documents say of how well their numbers are known. */
-	readonly stated?: Stated | undefined;
-	/** Draws for every row that matters, and the most of all; powers of two. */
-	readonly draws?: number | undefined;
-	readonly mostDraws?: number | undefined;
-	/** Names of rows in the order of a ranking that is known, so that the first answer is about the best of them at once. */
-	readonly order?: readonly string[] | undefined;
-	/** Leaves nothing for later: every row goes through every draw. For tests. */
-	readonly inFull?: boolean | undefined;
-};
-
-export const seedUnlessGiven = 1;
-/** With these a chance near a half is known to a few percent. */
-export const drawsUnlessGiven = 512;
-/** More would not change what a person does. */
-export const mostDrawsUnlessGiven = 4096;
 
 /** The rows that a first answer is about, and the draws for it. */
 const firstRows = 8;
@@ -76,7 +54,7 @@ export function oddsOf(car: Car, track: Track, options: OddsOptions = {}): Outco
  * What is dropped, and why it changes nothing:
  * - A row that a rule, the case, the stock or its miles rule out is not allowed in any draw.
  * - In a draw in which a row is over the limit at one place it is over and not allowed, whatever it does at the others. Once
- *   it has been over in all of the pilot, that place is looked at first, and the rest only where it is not over there.
+ *   it has been over in its first draws, that place is looked at first, and the rest only where it is not over there.
  * - A safe row that on the mean is `hopeless` standard deviations of its own lag behind the best safe row of each draw. Safe:
  *   never over in the pilot, and the highest RPM `safeMargin` standard deviations below the limit on the mean. To
  *   be first in a draw, either the safe rows are over in it, or the lag is 0 or less. Whatever the distributions, Cantelli's
@@ -150,7 +128,6 @@ class OddsRun {
 		yield;
 		yield* this.#advance(rows.slice(0, firstRows), Math.min(firstDraws, this.#draws));
 		yield* this.#advance(rows, Math.min(pilotDraws, this.#draws));
-		for (const row of rows) row.isBrief = row.overCount === row.draws;
 		yield* this.#advance(
 			rows.filter(row => this.#standing(row, rows) === 'matters'),
 			this.#draws,
@@ -300,20 +277,4 @@ class OddsRun {
 			lossS: lossOf(row, best),
 		};
 	}
-}
-
-/** How far behind the best it is on the mean, in standard deviations of that; 0 where it was no slower in a draw or has no time. */
-function deviationsBehind(row: RowTally, best: Best): number {
-	let [count, sum, squares] = [0, 0, 0];
-	for (let draw = 0; draw < best.timeS.length; draw++) {
-		const behind = row.timeS[draw]! - best.timeS[draw]!;
-		if (!Number.isFinite(behind)) continue;
-		if (behind <= levelS) return 0;
-		count++;
-		sum += behind;
-		squares += behind * behind;
-	}
-	if (count < 2) return 0;
-	const mean = sum / count;
-	return mean / Math.sqrt(Math.max(Number.MIN_VALUE, (squares - count * mean * mean) / (count - 1)));
 }

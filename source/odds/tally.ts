@@ -1,5 +1,6 @@
 /** What every row did in every draw, and what follows from it. */
 import type {Candidate} from '../planning/candidates.ts';
+import {replicates} from './estimates.ts';
 import type {Drawn, RowDraw, Spot} from './row-draw.ts';
 
 /** Two rows this close are as fast as each other: the same ratios in another set. */
@@ -11,14 +12,14 @@ export class RowTally {
 	readonly barred: string | null;
 	/** How many draws it has been through, from the first on. */
 	draws = 0;
+	/** In how many of them it was over the limit. */
+	overCount = 0;
 	readonly timeS: Float64Array;
 	readonly highestRpm: Float64Array;
 	readonly isOver: Uint8Array;
 	readonly isAllowed: Uint8Array;
 	readonly spot: Spot = {condition: 0, place: 0};
 	worthwhile: Drawn['worthwhile'];
-	/** Once it has been over the limit in every one of many draws, one place is looked at first. */
-	isBrief = false;
 
 	constructor(candidate: Candidate, barred: string | null, most: number) {
 		this.candidate = candidate;
@@ -30,18 +31,18 @@ export class RowTally {
 		this.isAllowed = new Uint8Array(most);
 	}
 
+	/** Once it has been over the limit in every one of its draws, the place where it was is looked at first. */
+	get isBrief(): boolean {
+		return this.draws >= replicates && this.overCount === this.draws;
+	}
+
 	add({timeS, highestRpm, isOver, isAllowed}: RowDraw): void {
 		const draw = this.draws++;
 		this.timeS[draw] = timeS;
 		this.highestRpm[draw] = highestRpm;
 		this.isOver[draw] = isOver ? 1 : 0;
+		if (isOver) this.overCount++;
 		this.isAllowed[draw] = isAllowed ? 1 : 0;
-	}
-
-	get overCount(): number {
-		let count = 0;
-		for (let draw = 0; draw < this.draws; draw++) count += this.isOver[draw]!;
-		return count;
 	}
 }
 
@@ -82,4 +83,20 @@ export function lossOf(row: RowTally, best: Best): number | null {
 		count++;
 	}
 	return count === 0 ? null : sum / count;
+}
+
+/** How far behind the best it is on the mean, in standard deviations of that; 0 where it was no slower in a draw or has no time. */
+export function deviationsBehind(row: RowTally, best: Best): number {
+	let [count, sum, squares] = [0, 0, 0];
+	for (let draw = 0; draw < best.timeS.length; draw++) {
+		const behind = row.timeS[draw]! - best.timeS[draw]!;
+		if (!Number.isFinite(behind)) continue;
+		if (behind <= levelS) return 0;
+		count++;
+		sum += behind;
+		squares += behind * behind;
+	}
+	if (count < 2) return 0;
+	const mean = sum / count;
+	return mean / Math.sqrt(Math.max(Number.MIN_VALUE, (squares - count * mean * mean) / (count - 1)));
 }
