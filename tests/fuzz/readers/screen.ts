@@ -20,6 +20,7 @@ import {cars, tracks} from './documents.ts';
 import '../../../source/screens/session/ahead.ts';
 import '../../../source/screens/session/handing.ts';
 import '../../../source/screens/session/incoming.ts';
+import '../../../source/screens/session/odds-work.ts';
 import '../../../source/screens/session/teaching.ts';
 
 const [down, up, right, left, esc] = ['\x1B[B', '\x1B[A', '\x1B[C', '\x1B[D', '\x1B\n'];
