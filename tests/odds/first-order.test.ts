@@ -2,12 +2,7 @@ import {expect, test} from 'vitest';
 import {firstOrderSteps} from '../../source/odds/first-order.ts';
 import {finish} from '../../source/planning/run-rack.ts';
 import {runs} from '../runs.ts';
-
-/** T. Ishigami and T. Homma, 1990: sin x1 + a·sin² x2 + b·x3⁴·sin x1 on [−π, π]³ with a = 7, b = 0.1. */
-const ishigami = (point: readonly number[]) => {
-	const [x1, x2, x3] = point.map(u => Math.PI * (2 * u - 1)) as [number, number, number];
-	return Math.sin(x1) + 7 * Math.sin(x2) ** 2 + 0.1 * x3 ** 4 * Math.sin(x1);
-};
+import {ishigami} from './ishigami.ts';
 
 test("the Ishigami function's first-order shares", () => {
 	const [shares] = finish(firstOrderSteps(3, point => [ishigami(point)], runs(8192, 65_536), 1));
