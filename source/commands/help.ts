@@ -55,7 +55,8 @@ export const topHelp = (): string => {
 	const parts = [
 		'droprack ranks the drop gears on the rack for a stock car at a track.',
 		'',
-		'  droprack             the ranking of the demo track',
+		'  droprack             the screen; where there is no terminal, the ranking of',
+		'                       the demo track',
 		'  droprack COMMAND --help',
 		'',
 		'Commands',

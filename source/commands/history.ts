@@ -4,6 +4,7 @@ import {addToHistory} from '../store/history.ts';
 import {homeDirectory} from '../store/home.ts';
 import type {HistoryEntry, Written} from '../store/kept-documents.ts';
 import {keptNamed, listKept} from '../store/list-kept.ts';
+import {isSeenRpm, seenRpmWords} from '../store/seen-rpm.ts';
 import {localDay} from '../text/heading-view.ts';
 import {historyView} from '../text/history-view.ts';
 import type {CommandRun} from './command.ts';
@@ -24,6 +25,8 @@ export const history: CommandRun = async (request, around) => {
 	if (!request.add && first) return replyRefused(badInput(`droprack history: --${first} goes with --add.`));
 	if (request.add && !first)
 		return replyRefused(badInput('droprack history: --add needs what was seen, such as --rpm 8840 --session race.'));
+	if (request.rpm !== undefined && !isSeenRpm(request.rpm))
+		return replyRefused(badInput(`droprack history: --rpm is ${seenRpmWords}, found ${request.rpm}.`));
 	const track = await trackOf(request.argument ?? '', around);
 	if (!track.ok) return replyRefused(track);
 	return request.add ? add(track.value, request, around) : list(track.value.name, request, around);

@@ -13,15 +13,16 @@ export const options = {
 	car: {value: 'CAR', summary: 'the car: a file, or the name of a saved or shipped one'},
 	risk: {value: 'PERCENT', summary: 'the chance of passing the RPM limit that you accept, such as 5%'},
 	seed: {value: 'N', summary: 'seed of the draws; the same seed gives the same answer'},
-	situation: {value: 'NAME', summary: 'the situation: rank by it alone, or what the entry was seen in'},
+	situation: {value: 'NAME', summary: 'the situation that alone counts; with --add the one in which it was seen'},
 	top: {value: 'N', summary: 'show the first N rows'},
 	pair: {
 		value: 'PAIR',
-		summary: 'driving/driven teeth, such as 33/38; rpm, run, life and fuel take the installed pair unless given',
+		summary:
+			'driving/driven teeth, such as 33/38; rpm, run, life, fuel, share and card take the installed pair unless given',
 	},
 	gearbox: {
 		value: 'SET',
-		summary: 'the gearbox set; rpm, run, life and fuel take the installed one unless given, load any',
+		summary: 'the gearbox set; rpm, run, life, fuel, share and card take the installed one unless given, load any',
 	},
 	prefer: {value: 'NAME', summary: 'take this car where none is named; "none" clears it'},
 	name: {value: 'NAME', summary: 'the name of the new document'},

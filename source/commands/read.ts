@@ -34,18 +34,18 @@ export const read: CommandRun = async (request, around) => {
 	const computed = computeAgain(reading);
 	if (!computed.ok)
 		return replyRefused(refuseFaults(computed.faults, {track: `${label}, track`, car: `${label}, car`}));
-	const {compared, failed} = computed.value;
+	const {compared, failure} = computed.value;
 	const own = ownDifferences(reading, around);
 	const taken = request.take ? takeOver(reading, request, around) : undefined;
 	if (taken && taken.status !== status.done) return taken;
 	const out = request.json
 		? printJson({plan: reading.plan, numbers: compared, differences: own}, request)
 		: printText(
-				planView(reading.plan, compared, own, taken === undefined ? 'Nothing was taken over.' : takenWords),
+				planView(reading.plan, {compared, failure}, own, taken === undefined ? 'Nothing was taken over.' : takenWords),
 				request,
 				around,
 			);
-	const done = replyDone(out, [], request.strict && failed);
+	const done = replyDone(out, [], request.strict && failure !== undefined);
 	return {...done, err: taken?.err ?? ''};
 };
 

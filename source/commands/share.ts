@@ -26,7 +26,9 @@ export const share: CommandRun = async (request, around) => {
 	const text = request.short ? `${shortForm(plan).line}\n` : printPlan(plan);
 	const out = request.qr ? qrOf(plan, request, around) : found(request.json ? jsonOf(plan, request) : text);
 	if (!out.ok) return replyRefused(out);
-	const reply = replyDone(out.value, notes, request.strict && row.verdict === 'fail');
+	const fails = row.verdict === 'fail';
+	const said = fails ? [...notes, `${row.pair} ${row.gearbox} FAILS a check. ${row.reason}`] : notes;
+	const reply = replyDone(out.value, said, request.strict && fails);
 	return request.copy ? withCopy(reply, text, around) : reply;
 };
 

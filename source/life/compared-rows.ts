@@ -40,7 +40,9 @@ export function comparedRows({ranking, ground}: Ranked, comparison: Comparison):
 	if (against !== undefined && !runs(against)) return failed([notRunning(against, 'against')]);
 	const other = against ?? heldAgainst(subject, ranking.rows);
 	const remarks =
-		subject === asked ? [] : [`${rowName(asked)} does not run here: the first of the ranking is told of.`];
+		subject === asked
+			? []
+			: [`${rowName(asked)} ${notRunningWords(asked)}: ${rowName(subject)}, the first that does, is shown.`];
 	return done({rows: other === undefined || other === subject ? [subject] : [subject, other], remarks});
 }
 
@@ -55,8 +57,8 @@ export function runs({timeS}: Row): boolean {
 	return timeS !== null;
 }
 
+const notRunningWords = ({remarks: [why]}: Row) => `does not run here${why === undefined ? '' : ` (${why})`}`;
+
 function notRunning(row: Row, option: string) {
-	const [why] = row.remarks;
-	const found = `${rowName(row)}, which does not run here${why === undefined ? '' : ` (${why})`}`;
-	return fault('command', option, found, 'a pair and set that runs');
+	return fault('command', option, `${rowName(row)}, which ${notRunningWords(row)}`, 'a pair and set that runs');
 }

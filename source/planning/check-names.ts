@@ -1,6 +1,9 @@
 /** What the checks are called in a sentence or a table. */
 import type {CheckName} from './results.ts';
 
+/** Remark of the limit check where a straight would bring the engine there if the ignition were not cut. */
+export const withoutLimiter = 'without the limiter';
+
 export const checkNames: Readonly<Record<CheckName, string>> = {
 	limit: 'RPM limit',
 	limiter: 'on the limiter',

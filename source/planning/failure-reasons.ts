@@ -1,4 +1,5 @@
 /** Why a row fails, in one sentence. */
+import {withoutLimiter} from './check-names.ts';
 import type {Check, CheckName, Row} from './results.ts';
 import {grouped, highestText, lengthText, longLengthText, placeText} from './words.ts';
 
@@ -17,7 +18,7 @@ const fallback = (check: Check) => `${where(check) || check.check}: ${check.rema
 
 const sentences: Partial<Record<CheckName, (check: Check) => string>> = {
 	limit: check =>
-		`Over the limit: ${highestText(check.value!)} at ${where(check)}, ${grouped(Math.ceil(-check.margin!))} above ${grouped(check.bound!)}`,
+		`Over the limit: ${highestText(check.value!)} at ${where(check)}${check.remark === withoutLimiter ? ` ${withoutLimiter}` : ''}, ${grouped(Math.ceil(-check.margin!))} above ${grouped(check.bound!)}`,
 	limiter: check => `On the limiter for ${lengthText(check.value!)} at ${where(check)}`,
 	permitted: check => `Not permitted: ${check.remark}`,
 	housing: check =>

@@ -12,8 +12,8 @@ import {statedResults} from './stated-results.ts';
 
 export type ReadPlan = Extract<SharedReading, {form: 'plan'}>;
 
-/** Each stated number beside the computed one, and whether the row fails a check. */
-export type Recomputed = {compared: Agreement[]; failed: boolean};
+/** Each stated number beside the computed one, and why the row fails a check, where it does. */
+export type Recomputed = {readonly compared: readonly Agreement[]; readonly failure: string | undefined};
 
 /** The plan's pair and set run at its track; faults where its car and track do not go together. */
 export function computeAgain({plan, car, track}: ReadPlan): Outcome<Recomputed> {
@@ -24,7 +24,10 @@ export function computeAgain({plan, car, track}: ReadPlan): Outcome<Recomputed> 
 	if (!table.ok) return table;
 	const {row, setting} = run.value;
 	const computed = statedResults(row, setting, restartOf(table.value));
-	return {ok: true, value: {compared: agreements(plan.results, computed), failed: row.verdict === 'fail'}};
+	return {
+		ok: true,
+		value: {compared: agreements(plan.results, computed), failure: row.verdict === 'fail' ? row.reason : undefined},
+	};
 }
 
 /** How the reader's own documents of the same name differ; undefined where there is none. */

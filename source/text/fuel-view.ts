@@ -38,9 +38,9 @@ const hourS = 3600;
 export const assumedWords = ({fuelConsumptionKgPerJ, fuelDensityKgM3, tankM3}: FuelAnswer, units: Units): string => {
 	const metric = fixed(fuelConsumptionKgPerJ * 1000 * hourS, 3);
 	const us = fixed((fuelConsumptionKgPerJ * horsepowerW * hourS) / poundKg, 3);
-	const density = fixed(fuelDensityKgM3 * literM3, 3);
+	const density = `${fixed(fuelDensityKgM3 * literM3, 3)} kg/L (${fixed((fuelDensityKgM3 * gallonM3) / poundKg, 2)} lb/gal)`;
 	const tank = tankM3 === null ? [] : [`a tank of ${units.text('fuel', tankM3)}`];
-	return [`Assumed: ${metric} kg/kWh (${us} lb/(hp h)) at every load`, `fuel of ${density} kg/L`, ...tank]
+	return [`Assumed: ${metric} kg/kWh (${us} lb/(hp h)) at every load`, `fuel of ${density}`, ...tank]
 		.join(', ')
 		.concat('.');
 };

@@ -32,8 +32,10 @@ export const takenBackEntry = (taken: readonly Takeable[], day: string): History
 	remark: `taken back: ${taken.map(takenBackWords).join('; ')}`,
 });
 
-/** "car.dragArea: 0.95 m^2 ± 0.01 m^2 is not given again". */
+/** "car.dragArea: 0.95 m^2 ± 0.01 m^2 is 0.9 m^2 again", or "is taken out, as before". */
 export const takenBackWords = ({entry: {field, value, before}, untouched}: Takeable): string =>
 	untouched
-		? `${field}: ${value} is ${before ?? 'not given'} again`
+		? before === undefined
+			? `${field}: ${value} is taken out; it was not given before`
+			: `${field}: ${value} is ${before} again`
 		: `${field}: was changed since and stays; its record is gone`;

@@ -1,7 +1,7 @@
 /** A plan that was read: what it says, which numbers agree, and what differs from the reader's own documents. */
 import type {Agreement} from '../sharing/agreement.ts';
 import type {Difference} from '../sharing/compare.ts';
-import type {Own} from '../sharing/hold-against.ts';
+import type {Own, Recomputed} from '../sharing/hold-against.ts';
 import type {PlanDocument} from '../sharing/plan-document.ts';
 import type {ShortPlan} from '../sharing/short-form.ts';
 import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
@@ -9,13 +9,14 @@ import {caution} from './heading-view.ts';
 import {absent} from './units.ts';
 
 /** `end` says what became of it. */
-export const planView = (plan: PlanDocument, compared: readonly Agreement[], own: Own, end: string): Block[] => [
+export const planView = (plan: PlanDocument, {compared, failure}: Recomputed, own: Own, end: string): Block[] => [
 	text(`${plan.car.name} · engine ${plan.engine} · plan of ${plan.date}`, 'strong', 2),
 	text(`${plan.track.name} · pair ${plan.pair} · gearbox ${plan.gearbox}`, 'plain', 2),
 	...(plan.notes ? [text(`Notes: ${plan.notes}`, 'plain', 2)] : []),
 	gap,
 	text(agreementWords(compared), compared.every(({agrees}) => agrees) ? 'pass' : 'fail'),
 	tableOf(numberColumns, compared, 2),
+	...(failure === undefined ? [] : [text(`The plan FAILS a check. ${failure}`, 'fail', 2)]),
 	gap,
 	...ownView('track', String(plan.track.name), own.track),
 	...ownView('car', String(plan.car.name), own.car),

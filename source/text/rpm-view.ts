@@ -2,7 +2,7 @@
 import type {RpmPoint, RpmTable} from '../planning/results.ts';
 import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
 import {closingView, type Heading, headingView} from './heading-view.ts';
-import {absent, fixed, rpm, rpmUp, type Units} from './units.ts';
+import {absent, fixed, rpm, rpmDown, rpmUp, type Units} from './units.ts';
 
 /** Marks stand behind the number, in color and without. */
 const inUse = '*';
@@ -11,19 +11,26 @@ const above = '!';
 export const isAboveLimit = (point: RpmPoint, gear: number, rpmLimit: number): boolean =>
 	(point.rpm[gear - 1] ?? 0) > rpmLimit;
 
+/** Driven by, and watched: never above what was computed, as on the cards. */
+const isPitRoad = ({at}: RpmPoint): boolean => at.startsWith('pit road');
+
+/** The longest name would leave the situations no room in 80 columns. */
+const placeOf = ({at}: RpmPoint): string => (at === 'pit road + tolerance' ? 'pit + tolerance' : at);
+
 const gearCell = (point: RpmPoint, gear: number, rpmLimit: number) => {
 	const value = point.rpm[gear - 1] ?? null;
 	const used = point.gear === gear;
 	if (value === null) return cell(`${absent} `);
 	if (isAboveLimit(point, gear, rpmLimit))
 		return cell(rpmUp(value) + above + (used ? inUse : ' '), used ? 'fail' : 'muted');
-	return cell(`${rpm(value)}${used ? inUse : ' '} `, used ? 'strong' : 'plain');
+	const shown = isPitRoad(point) ? rpmDown(value) : rpm(value);
+	return cell(`${shown}${used ? inUse : ' '} `, used ? 'strong' : 'plain');
 };
 
 const columnsFor = ({overall, setting}: RpmTable, units: Units): Making<RpmPoint>[] => {
 	const gears = overall.map((_, index) => index + 1);
 	return [
-		{head: 'at', align: 'left', keep: 0, shortest: 12, cell: point => cell(point.at)},
+		{head: 'at', align: 'left', keep: 0, shortest: 12, cell: point => cell(placeOf(point))},
 		{head: 'situation', align: 'left', keep: 9, shortest: 6, cell: point => cell(point.situation, 'muted')},
 		{head: units.label('speed'), align: 'right', keep: 1, cell: point => cell(units.number('speed', point.speedMps))},
 		...gears.map(

@@ -38,7 +38,9 @@ test('fuel tells mileage, laps to a tank and stops, in either units', async () =
 	const us = await program.run(words, {input: lapped});
 	expect(us.out).toMatch(/^miles a gallon +\d+\.\d\d/m);
 	expect(us.out).toMatch(/^gal a race +\d+\.\d/m);
-	expect(us.out).toMatch(/Assumed: 0\.300 kg\/kWh \(0\.493 lb\/\(hp h\)\) at every load, fuel of 0\.745\s+kg\/L\./);
+	expect(us.out).toMatch(
+		/Assumed: 0\.300 kg\/kWh \(0\.493 lb\/\(hp h\)\) at every load, fuel of 0\.745\s+kg\/L\s+\(6\.22 lb\/gal\)\./,
+	);
 	expect(us.out).toContain('The car has no "tank".');
 	expect(us.out).not.toMatch(/laps a tank/);
 	const metric = await program.run([...words, '--units', 'metric'], {input: lapped});

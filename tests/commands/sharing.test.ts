@@ -37,6 +37,26 @@ describe('droprack share', () => {
 		expect(plan).toMatch(/\nCheck: \d+ entries, code [0-9a-f]{8}\n$/);
 	});
 
+	test('says of a plan that fails a check that it does, and why, beside the plan; so does reading it', async () => {
+		expect((await ask(['share', fixture('oval.json'), ...oval])).err).not.toContain('FAILS');
+		const {out, err} = await ask(['share', 'tarrowdale']);
+		expect(err).toMatch(/^droprack: 33\/35 A FAILS a check\. Over the limit: /);
+		const read = await ask(['read', '-'], out);
+		expect(read.out).toContain('The plan FAILS a check. Over the limit: ');
+		expect((await ask(['read', '-'], plan)).out).not.toContain('FAILS');
+	});
+
+	test('and a card say where another pair is saved for the track than the installed one that they are of', async () => {
+		const told = /This is 33\/35 A, as installed; --pair 34\/35 --gearbox C, as saved for Tarrowdale, is another\./;
+		const own = {environment: {DROPRACK_HOME: join(place, 'planned')}};
+		const shown = (await ask(['show', 'tarrowdale'], '', own)).out;
+		await ask(['save', '-', '--pair', '34/35', '--gearbox', 'C'], shown, own);
+		expect((await ask(['share', 'tarrowdale'], '', own)).err).toMatch(told);
+		expect((await ask(['card', 'driver', 'tarrowdale'], '', own)).err).toMatch(told);
+		const given = ['card', 'driver', 'tarrowdale', '--pair', '34/35', '--gearbox', 'C'];
+		expect((await ask(given, '', own)).err).toBe('');
+	});
+
 	test('prints one line, the JSON, or a QR code', async () => {
 		const short = await ask(['share', fixture('oval.json'), ...oval, '--short']);
 		expect(short.out).toMatch(/^DR1 Fixture Oval short: .*: [0-9a-f]{8}\n$/);

@@ -165,6 +165,7 @@ test.each([
 	[['--rpm', '8840'], /--rpm goes with --add/],
 	[['--add'], /--add needs what was seen/],
 	[['--add', '--rpm', 'fast'], /--rpm is a whole number/],
+	[['--add', '--rpm', '88400'], /--rpm is RPM up to 30000, found 88400/],
 	[['--add', '--date', '2026-02-30'], /--date is a day/],
 ])('history %j is refused', async (words, message) => {
 	expect(await run('history', 'quillmere', ...words)).toMatchObject({status: 2, err: expect.stringMatching(message)});

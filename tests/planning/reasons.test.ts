@@ -88,6 +88,9 @@ describe('a failure', () => {
 		expect(fails({...tow, value: 9310, bound: 9200, margin: -110})).toBe(
 			'Over the limit: 9310 at Front end (In the tow), 110 above 9200.',
 		);
+		expect(fails({...tow, value: 9310, bound: 9200, margin: -110, remark: 'without the limiter'})).toBe(
+			'Over the limit: 9310 at Front end (In the tow) without the limiter, 110 above 9200.',
+		);
 		expect(fails({...tow, check: 'limiter', value: 36.576})).toBe(
 			'On the limiter for 120 ft (37 m) at Front end (In the tow).',
 		);

@@ -97,7 +97,7 @@ test('a field is typed, refused, mended and taken; the ranking follows', async (
 	press('8000');
 	await frame('Understood 8000 mph');
 	press('\r');
-	await frame('Not taken found "8000 mph"');
+	await frame('Not taken: found "8000 mph"');
 	press('\x7F\x7F\x7F\x7F60\r');
 	await frame(/exit +~60 mph/);
 	await frame('Fixture Oval (changed)');

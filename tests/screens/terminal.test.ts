@@ -28,7 +28,7 @@ test('start, step, edit with an error, undo, and quit', async () => {
 	pty.press(right);
 	await pty.waitFor(/▸ +1 /);
 	pty.press(`e\t${down}8000\r`);
-	await pty.waitFor('Not taken found "8000 mph"');
+	await pty.waitFor('Not taken: found "8000 mph"');
 	pty.press('\x7F\x7F\x7F\x7F61\r');
 	await pty.waitFor(/exit +~61 mph/);
 	pty.press('u');

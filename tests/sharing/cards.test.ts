@@ -18,7 +18,7 @@ describe.each(Object.keys(cards) as (keyof typeof cards)[])('the %s', name => {
 	test('says whose numbers these are, for which day, how far they are trusted, and its caution', () => {
 		expect(lines.slice(1, 5)).toEqual([
 			'Test car 7 at Pine Hollow',
-			'Day 2025-06-14: 75 °F, 28.90 inHg',
+			'Day 2025-06-14: 75°F, 28.90 inHg',
 			'Pair 33/38, gearbox A, engine Open',
 			'Not anchored: no measured speed here that the model meets.',
 		]);
@@ -26,6 +26,14 @@ describe.each(Object.keys(cards) as (keyof typeof cards)[])('the %s', name => {
 			'Anchored to speeds measured here.',
 		);
 		expect(lines.join(' ')).toMatch(/estimate/i);
+	});
+
+	test('says below its heading that the plan fails a check, and which, and nothing of the kind of one that does not', () => {
+		expect(lines.join(' ')).not.toContain('FAILS');
+		const reason = 'Over the limit: 9400 at Front end, 200 above 9200.';
+		expect(cards[name]({...source, row: {...row, verdict: 'fail', reason}})[5]).toBe(
+			'FAILS A CHECK. Over the limit: 9400 at Front end, 200 above',
+		);
 	});
 
 	test('is at most 60 columns wide', () => {
@@ -108,6 +116,13 @@ describe('the swap sheet', () => {
 		expect(lines.filter(line => line.includes('____'))).toHaveLength(2);
 	});
 
+	test('has the cautions before the first thing that is done, and what to look at before the engine is started', () => {
+		const at = (start: string) => lines.findIndex(line => line.trim().startsWith(start));
+		expect(at('Before and during the swap')).toBeGreaterThan(0);
+		expect(at('- The oil is hot')).toBeLessThan(at('DRIVING gear'));
+		expect(at('- Before the engine is started')).toBeLessThan(at('Hand-turn check'));
+	});
+
 	test('tells when a pair does not hunt', async () => {
 		const even = await ground(undefined, undefined, {driving: 36, driven: 36});
 		expect(swapSheet({...source, ...even}).join(' ')).toContain('Hunting tooth: no: the same teeth meet every 1 turn');
@@ -121,6 +136,12 @@ describe("the engine builder's sheet", () => {
 		expect(numberAfter(lines, 'Ignition cut')).toBe(9300);
 		for (const {name} of row.situations) expect(lineWith(lines, name)).toMatch(/^ {2}.* \d{4,5} {2}\S/);
 		expect(lines).toContain('Shift RPM');
+	});
+
+	test('says that the highest RPM are without the cut where they are above it', () => {
+		expect(engineSheet(source)).toContain('Highest RPM, and where');
+		const lower = {...car, engines: car.engines.map(engine => ({...engine, limiter: 8000}))};
+		expect(engineSheet({...source, car: lower})).toContain('Highest RPM were there no cut, and where');
 	});
 
 	test('has the seconds on the limiter where there are any, and time above an RPM only when it is known', () => {

@@ -74,6 +74,6 @@ test('at 80 columns the dwell of both pairs and its difference stand beside a ba
 
 test('fuel names what it stands on', () => {
 	expect(lineWith(fuel(120), /^- Assumed/)).toBe(
-		'- Assumed: 0.300 kg/kWh (0.493 lb/(hp h)) at every load, fuel of 0.745 kg/L, a tank of 20.0 gal.',
+		'- Assumed: 0.300 kg/kWh (0.493 lb/(hp h)) at every load, fuel of 0.745 kg/L (6.22 lb/gal), a tank of 20.0 gal.',
 	);
 });

@@ -89,6 +89,18 @@ test('RPM in every gear, with signs for the gear in use and for what is above th
 	);
 });
 
+test('pit-road RPM are rounded down, as on the cards, and the name with the tolerance leaves room beside it', () => {
+	const point = {
+		at: 'pit road + tolerance',
+		situation: '',
+		speedMps: 20,
+		rpm: [6800.6, 5000.6, 3960.6, 3100.6, 2600.6],
+		gear: 3,
+	};
+	const view = rpmView(heading, {...table, points: [point]}, us);
+	expect(lineWith(lines(view, 80), /^pit/)).toMatch(/^pit \+ tolerance .* 3960\* /);
+});
+
 test('a run shows gears, shifts rounded down, pit road and checks', () => {
 	const all = run(100);
 	expect(lineWith(all, /^ {2}Front +3-4 +88/)).toBe(

@@ -1,4 +1,5 @@
 /** The highest RPM anywhere against the limit in force. */
+import {withoutLimiter} from '../check-names.ts';
 import type {Condition} from '../conditions.ts';
 import {measuredRpm} from '../measured.ts';
 import type {Verdict} from '../results.ts';
@@ -58,7 +59,7 @@ function highest({place, result, sequence}: PlaceRun, situation: string, ground:
 	if (reachRpm > result.endRpm + roundingRpm && reachRpm > rpm) {
 		rpm = reachRpm;
 		part = 'end';
-		remark = 'without the limiter';
+		remark = withoutLimiter;
 	}
 	return reading(rpm, ground, place.name, part, situation, remark);
 }

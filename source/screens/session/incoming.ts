@@ -30,9 +30,9 @@ export async function readIncoming(
 	// What is not sound cannot be compared field by field.
 	const track = mine.track && readTrackOf(mine.track.json).ok ? mine.track.json : undefined;
 	const car = mine.car && readCarOf(mine.car.json).ok ? mine.car.json : undefined;
-	const {compared} = computed.value;
+	const {compared, failure} = computed.value;
 	return {
 		ok: true,
-		incoming: {form: 'plan', plan, compared, own: mine, differences: differencesFrom(reading, track, car)},
+		incoming: {form: 'plan', plan, compared, failure, own: mine, differences: differencesFrom(reading, track, car)},
 	};
 }

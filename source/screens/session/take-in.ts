@@ -13,6 +13,8 @@ export type Incoming =
 			readonly form: 'plan';
 			readonly plan: PlanDocument;
 			readonly compared: readonly Agreement[];
+			/** Why the plan fails a check, computed again; undefined where it fails none. */
+			readonly failure: string | undefined;
 			readonly own: OwnDocuments;
 			readonly differences: Own;
 	  }

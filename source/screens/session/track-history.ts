@@ -2,6 +2,7 @@
 
 import {parsePair} from '../../drivetrain/gear-pair.ts';
 import type {HistoryEntry, Written} from '../../store/kept-documents.ts';
+import {isSeenRpm, seenRpmWords} from '../../store/seen-rpm.ts';
 import {type EditLine, editLine} from '../parts/edit-line.ts';
 
 export const draftFields = ['date', 'session', 'pair', 'gearbox', 'highestRpm', 'at', 'situation', 'remark'] as const;
@@ -27,8 +28,6 @@ export type DraftReading =
 	| {readonly ok: true; readonly entry: HistoryEntry}
 	| {readonly ok: false; readonly field: DraftField; readonly wrong: string};
 
-const mostRpm = 30_000;
-
 /** The entry that was typed, with the day's air as the track has it; or what is wrong with which field. */
 export function entryOf({lines}: Draft, air: Written | undefined): DraftReading {
 	const texts = Object.fromEntries(draftFields.map(field => [field, lines[field].text.trim()])) as Record<
@@ -40,7 +39,7 @@ export function entryOf({lines}: Draft, air: Written | undefined): DraftReading 
 	if (texts.pair !== '' && parsePair(texts.pair) === undefined)
 		return refused('pair', 'driving/driven teeth, such as 33/38');
 	const rpm = Number(texts.highestRpm);
-	if (texts.highestRpm !== '' && !(rpm > 0 && rpm <= mostRpm)) return refused('highestRpm', `RPM up to ${mostRpm}`);
+	if (texts.highestRpm !== '' && !isSeenRpm(rpm)) return refused('highestRpm', seenRpmWords);
 	if (seen.every(field => texts[field] === ''))
 		return refused('session', 'one of session, highest RPM, where, situation and remark is needed');
 	const given = (field: DraftField) => (texts[field] === '' ? undefined : texts[field]);

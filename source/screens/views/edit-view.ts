@@ -127,13 +127,13 @@ function footLines(field: Field | undefined, given: Given, width: number): Piece
 	const {editing} = given.edit;
 	if (editing === undefined) {
 		const wrong = wrongAt(given.edit.kind, given.json, field);
-		return wrong === undefined ? [help] : [...wrapped(wrong, width, 'Wrong'), help];
+		return wrong === undefined ? [help] : [...wrapped(wrong, width, 'Wrong:'), help];
 	}
-	if (editing.wrong !== undefined) return wrapped(editing.wrong, width, 'Not taken');
+	if (editing.wrong !== undefined) return wrapped(editing.wrong, width, 'Not taken:');
 	if (editing.line.text.trim() === '')
 		return [line(field.needed ? 'This field is needed.' : 'Enter empties the field.'), help];
 	const understood = understand(editing.line.text, field.kind, field.value ?? field.unlessGiven, given.units);
-	if (!understood.ok) return wrapped(understood.words, width, 'Not yet');
+	if (!understood.ok) return wrapped(understood.words, width, 'Not yet:');
 	return [understood.words === '' ? blank : [piece('Understood ', 'pass'), piece(understood.words)], help];
 }
 

@@ -34,5 +34,5 @@ export function takeInView(place: Place & {at: 'take in'}, width: number, height
 function incomingLines(incoming: Incoming, width: number): Pieces[] {
 	if (incoming.form === 'short') return layOut(shortView(incoming.fields), width);
 	const end = 'Nothing is taken over yet. Enter takes the track over, with this pair, set and notes.';
-	return layOut(planView(incoming.plan, incoming.compared, incoming.differences, end), width);
+	return layOut(planView(incoming.plan, incoming, incoming.differences, end), width);
 }

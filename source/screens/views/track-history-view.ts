@@ -32,7 +32,7 @@ function draftLines({track, lines, field, wrong}: Draft, width: number): Pieces[
 		const head = [piece(isHere ? '▸ ' : '  '), padded(labels[one], labelWidth, isHere ? 'strong' : 'plain')];
 		return [...head, ...(isHere ? caretPieces(lines[one], width - labelWidth - 2) : [piece(lines[one].text)])];
 	});
-	const told = wrong === undefined ? [] : [[piece('Not taken ', 'fail'), piece(wrong)]];
+	const told = wrong === undefined ? [] : [[piece('Not taken: ', 'fail'), piece(wrong)]];
 	return [
 		line(`What was seen at ${track}`, 'strong'),
 		blank,

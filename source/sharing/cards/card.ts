@@ -25,7 +25,7 @@ const columns = 60;
 export const estimate =
 	"An estimate, to be checked against practice. The engine builder's limit, the rule book and the track's officials decide.";
 
-/** The lines of a card: title, car, day and anchor above, the caution below. No character in it moves the cursor. */
+/** The lines of a card: title, car, day, anchor and what the plan fails above, the caution below. No character in it moves the cursor. */
 export function cardOf(title: string, source: CardSource, body: readonly string[], caution: string): string[] {
 	const {car, track, row, setting, day, units} = source;
 	const heading = [
@@ -36,6 +36,7 @@ export function cardOf(title: string, source: CardSource, body: readonly string[
 		setting.anchored
 			? 'Anchored to speeds measured here.'
 			: 'Not anchored: no measured speed here that the model meets.',
+		...(row.verdict === 'fail' ? [`FAILS A CHECK. ${row.reason}`] : []),
 	];
 	return [...heading, '', ...body, '', caution].flatMap(line => wrap(visible(line)));
 }
@@ -61,7 +62,7 @@ const inchOfMercuryPa = 3386.388640341;
 function airText(air: Air | undefined, units: UnitSystem): string {
 	const {temperatureC = reference.temperatureC, pressurePa = reference.pressurePa} = air ?? {};
 	const metric = units === 'metric';
-	const temperature = metric ? `${temperatureC.toFixed(0)} °C` : `${(temperatureC * 1.8 + 32).toFixed(0)} °F`;
+	const temperature = metric ? `${temperatureC.toFixed(0)}°C` : `${(temperatureC * 1.8 + 32).toFixed(0)}°F`;
 	const pressure = metric
 		? `${(pressurePa / 100).toFixed(0)} hPa`
 		: `${(pressurePa / inchOfMercuryPa).toFixed(2)} inHg`;

@@ -14,11 +14,14 @@ const caution =
 export function engineSheet(source: EngineSheetSource): string[] {
 	const {row, setting, car, track, timeAbove} = source;
 	const limiter = engineFor(car, track.type)?.limiter ?? setting.rpmLimit;
+	const highest = highestBySituation(row);
+	// What a straight would bring it to, were the ignition not cut: the limit check judges by that.
+	const isCut = highest.some(({rpm}) => wholeUp(rpm) > limiter);
 	const body = [
 		item(`Limit in force (${setting.limitFrom})`, wholeDown(setting.rpmLimit)),
 		item('Ignition cut', wholeDown(limiter)),
-		'Highest RPM, and where',
-		...highestBySituation(row).map(({situation, rpm, at}) => `${item(situation, wholeUp(rpm))}  ${at}`),
+		isCut ? 'Highest RPM were there no cut, and where' : 'Highest RPM, and where',
+		...highest.map(({situation, rpm, at}) => `${item(situation, wholeUp(rpm))}  ${at}`),
 		...shiftLines(source),
 		...limiterLines(source),
 		...(timeAbove ? [item(`Seconds above ${timeAbove.rpm} RPM`, timeAbove.seconds.toFixed(1))] : []),

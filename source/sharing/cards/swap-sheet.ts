@@ -11,22 +11,23 @@ const caution =
 	"An estimate. The rule book and the track's officials decide; the engine builder's RPM limit rules, and a flipped pair can pass it.";
 
 const cautions = [
-	'- Car on stands, wheels chocked, ignition and fuel pump off.',
-	'- The oil is hot.',
+	'- Car on stands, wheels chocked, ignition and fuel pump off; never on the jack alone.',
+	'- The oil is hot: gloves, eyes covered.',
 	'- Rotating parts: hands and sleeves away during the check.',
 	'- A second person counts the teeth.',
+	'- Before the engine is started: cover tight, oil filled, no tool left inside, everybody clear.',
 ];
 
 /** For whoever swaps the gears. */
 export function swapSheet(source: CardSource): string[] {
 	const pair = parsePair(source.row.pair)!;
 	const body = [
-		...gearLines(pair, source),
-		...checkLines(pair, source),
-		...wearLines(pair, source),
 		'Before and during the swap',
 		...cautions,
 		'',
+		...gearLines(pair, source),
+		...checkLines(pair, source),
+		...wearLines(pair, source),
 		'Swapped by  ______________________  time __________',
 		'Counted by  ______________________  time __________',
 	];

@@ -140,7 +140,7 @@ test('a long notice, and what is wrong with a name, are told whole', () => {
 test('a card is whole: scrolled to its end, its caution is there', () => {
 	const card = stateOf(session({place: {...handOver, item: 'swap sheet', scroll: 999}}));
 	const text = linesOf(card, {width: 80, height: 24, ascii: false}).join('\n');
-	expect(text).toContain('A second person counts the teeth.');
+	expect(text).toContain('Counted by');
 	expect(text).toContain('and a flipped pair');
 });
 
@@ -255,7 +255,7 @@ test('a field that is not as shipped is marked, and one that does not read', () 
 	});
 	const lines = linesOf(stateOf(changed), {width: 100, height: 30, ascii: false});
 	expect(lines.find(line => line.includes('lap'))).toMatch(/▸!lap +~7/);
-	expect(lines.join('\n')).toContain('Wrong found "7"');
+	expect(lines.join('\n')).toContain('Wrong: found "7"');
 });
 
 test('documents that do not rank say what is wrong, with its place', () => {
