@@ -30,7 +30,7 @@ export function fittedLines({circumference, held, anchor, readings}: Learning): 
 }
 
 /** What practice corrects is small: beyond these something else is wrong. */
-const plausible = {circumference: 0.03, drag: 0.2, power: 0.1} as const;
+const plausible = {circumference: 0.03, drag: 0.2, power: 0.05} as const;
 
 function implausibleWords(circumference: CircumferenceLearned | undefined, anchor: Anchor | undefined): string[] {
 	const factors = {circumference: circumference?.factor, drag: anchor?.drag?.value, power: anchor?.power?.value};

@@ -24,3 +24,8 @@ export function keyWords(key: string): string {
 	const letter = signs[rest] ?? rest.toUpperCase();
 	return `${modifier.charAt(0).toUpperCase()}${modifier.slice(1)}+${letter}`;
 }
+
+/** Where arrows cannot be drawn, their stand-ins "<", ">", "^" and "v" would read as other keys. */
+const arrowNames: Readonly<Record<string, string>> = {up: 'Up', down: 'Down', left: 'Left', right: 'Right'};
+
+export const asciiKeyWords = (key: string): string => arrowNames[key] ?? keyWords(key);

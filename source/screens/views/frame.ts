@@ -68,9 +68,12 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 	const here = scene.shown[cursor];
 	const counts = {shown: scene.shown.length, all: scene.all.length};
 	const head = [...headerView(session, answer, counts, here, width), rule(width)];
-	const foot = [...noticeLines(session, width), ...keyLines(scopesOf(session), width, height < roomy ? 1 : 2)];
+	const foot = [
+		...noticeLines(session, width),
+		...keyLines(scopesOf(session), width, height < roomy ? 1 : 2, size.ascii),
+	];
 	const body = height - head.length - foot.length;
-	const qr = qrLines(state, size, keyLines(scopesOf(session), width, 1));
+	const qr = qrLines(state, size, keyLines(scopesOf(session), width, 1, size.ascii));
 	if (qr !== undefined) return {top: qr, table: undefined, beside: [], bottom: []};
 	const plain = (lines: readonly Pieces[]): Frame => ({
 		top: [...head, ...tall(lines, body).map(one => clipped(one, width))],
@@ -80,7 +83,7 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 	});
 
 	if (session.over?.is === 'help')
-		return plain(scrolled(helpView(scopesOf({...session, over: undefined})), session.over.scroll, body));
+		return plain(scrolled(helpView(scopesOf({...session, over: undefined}), size.ascii), session.over.scroll, body));
 	if (session.place.at === 'choose') {
 		const given = {
 			place: session.place,

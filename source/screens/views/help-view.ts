@@ -1,13 +1,13 @@
 /** Every key, those of the place first. */
 import {bindingsOf, workingIn} from '../keys/key-table.ts';
-import {keyWords} from '../keys/key-words.ts';
+import {asciiKeyWords, keyWords} from '../keys/key-words.ts';
 import {type Scope, scopes} from '../keys/scopes.ts';
 import {blank, line, type Pieces, padded, piece} from '../parts/pieces.ts';
 import {marks} from './marks.ts';
 
 const keysWidth = 18;
 
-export function helpView(held: readonly Scope[]): Pieces[] {
+export function helpView(held: readonly Scope[], ascii: boolean): Pieces[] {
 	const others = (Object.keys(scopes) as Scope[]).filter(scope => !held.includes(scope));
 	const working = workingIn(held);
 	const bindings = (scope: Scope) =>
@@ -17,7 +17,7 @@ export function helpView(held: readonly Scope[]): Pieces[] {
 		...bindings(scope).map(
 			({keys, words}): Pieces => [
 				piece('  '),
-				padded(keys.map(keyWords).join(' '), keysWidth, 'key'),
+				padded(keys.map(ascii ? asciiKeyWords : keyWords).join(' '), keysWidth, 'key'),
 				piece(` ${words}`),
 			],
 		),

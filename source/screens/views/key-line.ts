@@ -1,6 +1,6 @@
 /** The keys of the place: as many as fit, the rest is in the help. */
 import {type Binding, workingIn} from '../keys/key-table.ts';
-import {keyWords} from '../keys/key-words.ts';
+import {asciiKeyWords, keyWords} from '../keys/key-words.ts';
 import type {Scope} from '../keys/scopes.ts';
 import {clipped, type Piece, type Pieces, piece, widthOf} from '../parts/pieces.ts';
 
@@ -9,18 +9,18 @@ const between = '  ';
 const usualRank = 5;
 
 /** So many lines of keys; help and the way out are always there. */
-export function keyLines(scopes: readonly Scope[], width: number, count: number): Pieces[] {
+export function keyLines(scopes: readonly Scope[], width: number, count: number, ascii: boolean): Pieces[] {
 	const shown = workingIn(scopes).filter(({short}) => short !== undefined);
 	const once = shown.filter((binding, i) => shown.findIndex(other => other.short === binding.short) === i);
 	const last = once.filter(({does}) => does === 'help' || does === 'quit');
 	const rest = once
 		.filter(binding => !last.includes(binding))
 		.sort((a, b) => (a.rank ?? usualRank) - (b.rank ?? usualRank));
-	const end = joined(last);
+	const end = joined(last, ascii);
 	const lines: Piece[][] = Array.from({length: count}, () => []);
 	let at = 0;
 	for (const binding of rest) {
-		const part = keyPieces(binding);
+		const part = keyPieces(binding, ascii);
 		const fits = () => {
 			const line = lines[at]!;
 			const reserved = at === count - 1 && end.length > 0 ? widthOf(end) + between.length : 0;
@@ -36,20 +36,21 @@ export function keyLines(scopes: readonly Scope[], width: number, count: number)
 	return lines.map(line => clipped(line, width));
 }
 
-const joined = (bindings: readonly Binding[]): Piece[] =>
-	bindings.flatMap((binding, i) => [...(i > 0 ? [piece(between)] : []), ...keyPieces(binding)]);
+const joined = (bindings: readonly Binding[], ascii: boolean): Piece[] =>
+	bindings.flatMap((binding, i) => [...(i > 0 ? [piece(between)] : []), ...keyPieces(binding, ascii)]);
 
 /** Arrows that belong together are shown together. */
-function keyPieces({keys, does, short}: Binding): Piece[] {
+function keyPieces({keys, does, short}: Binding, ascii: boolean): Piece[] {
+	const upDown = ascii ? 'Up Dn' : '↑↓';
 	const both: Record<string, string> = {
-		'row up': '↑↓',
-		'field up': '↑↓',
-		'choice up': '↑↓',
-		'ahead up': '↑↓',
-		'item up': '↑↓',
-		'draft down': '↑↓',
-		'practice up': '↑↓',
+		'row up': upDown,
+		'field up': upDown,
+		'choice up': upDown,
+		'ahead up': upDown,
+		'item up': upDown,
+		'draft down': upDown,
+		'practice up': upDown,
 		'scroll up': 'PgUp PgDn',
 	};
-	return [piece(both[does] ?? keyWords(keys[0]!), 'key'), piece(` ${short}`, 'muted')];
+	return [piece(both[does] ?? (ascii ? asciiKeyWords : keyWords)(keys[0]!), 'key'), piece(` ${short}`, 'muted')];
 }

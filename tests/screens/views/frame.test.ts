@@ -137,6 +137,14 @@ test('a long notice, and what is wrong with a name, are told whole', () => {
 	expect(asked.slice(20, 23).join(' ')).toBe(`Write it to the file: plan.txt ${words}`);
 });
 
+test('in ASCII the keys of the arrows are named, since "v" and ">" are other keys', () => {
+	const size = {width: 80, height: 24, ascii: true};
+	const foot = linesOf(stateOf(session()), size).at(-1);
+	expect(foot).toMatch(/^Up Dn row .* Right shorter {2}Left taller/);
+	const help = linesOf(stateOf(session({over: {is: 'help', scroll: 0}})), size).join('\n');
+	expect(help).toMatch(/\n {2}Up k +the row above/);
+});
+
 test('a card is whole: scrolled to its end, its caution is there', () => {
 	const card = stateOf(session({place: {...handOver, item: 'swap sheet', scroll: 999}}));
 	const text = linesOf(card, {width: 80, height: 24, ascii: false}).join('\n');
