@@ -2,13 +2,14 @@
 
 import type {Tires} from '../../drivetrain/car.ts';
 import {growthReferenceMps} from '../../drivetrain/tire.ts';
-import {huberFit} from '../fit/huber.ts';
+import {huberSteps} from '../fit/huber.ts';
 import type {Columns} from '../fit/least-squares.ts';
 import {median, quantile, sorted} from '../fit/robust.ts';
 import {fewGroupsFactor} from '../fit/student.ts';
 import type {Channels} from './channels.ts';
 import {type CircumferenceFit, type Estimate, type Pass, sampleState} from './findings.ts';
 import {growthSd} from './fittings.ts';
+import type {Steps} from './steps.ts';
 
 /** One block of steady samples in one gear of one pass. */
 type Readings = {
@@ -34,19 +35,19 @@ const leastSureGrowth = 0.002;
  * Both speeds are taken to be of the same moment: a road speed that is logged τ seconds late makes C too small by τ·a/V, with a
  * the acceleration, most where the car is slow and pulls hard.
  */
-export function fitCircumference(
+export function* fitCircumference(
 	channels: Channels,
 	gears: Uint8Array,
 	state: Uint8Array,
 	passes: readonly Pass[],
 	overall: readonly number[],
 	tires: Pick<Tires, 'growth' | 'slip'>,
-): CircumferenceFit | undefined {
-	const readings = readingsOf(channels, gears, state, passes, overall, tires.slip);
+): Steps<CircumferenceFit | undefined> {
+	const readings = yield* readingsOf(channels, gears, state, passes, overall, tires.slip);
 	if (readings.circumferenceM.length < fewestReadings) return undefined;
-	const free = fitted(readings, undefined);
+	const free = yield* fitted(readings, undefined);
 	const sure = free !== undefined && free.growth.se <= leastSureGrowth;
-	const fit = sure ? free : fitted(readings, tires.growth);
+	const fit = sure ? free : yield* fitted(readings, tires.growth);
 	if (fit === undefined) return undefined;
 	const speeds = sorted(readings.square.map(square => growthReferenceMps * Math.sqrt(square)));
 	const seen = new Set(readings.pass);
@@ -67,7 +68,7 @@ type Fit = Pick<
 	'rolloutM' | 'growth' | 'atMps' | 'circumferenceM' | 'correlation' | 'scatterM' | 'downweighted'
 >;
 
-function fitted({circumferenceM, square, pass}: Readings, held: number | undefined): Fit | undefined {
+function* fitted({circumferenceM, square, pass}: Readings, held: number | undefined): Steps<Fit | undefined> {
 	// About the middle of the squares, where level and slope err independently.
 	const middle = median(square);
 	const columns: Columns =
@@ -76,7 +77,7 @@ function fitted({circumferenceM, square, pass}: Readings, held: number | undefin
 			: [square.map(x => (1 + held * x) / (1 + held * middle))];
 	const groups = new Set(pass).size;
 	const grouped = groups > fewestGroups;
-	const fit = huberFit(columns, circumferenceM, grouped ? pass : undefined);
+	const fit = yield* huberSteps(columns, circumferenceM, grouped ? pass : undefined);
 	if (fit === undefined) return undefined;
 	const degrees = (grouped ? groups : circumferenceM.length) - columns.length;
 	const wider = fewGroupsFactor(degrees) ** 2;
@@ -124,15 +125,15 @@ const fewestGroups = 4;
 
 const estimate = (value: number, variance: number): Estimate => ({value, se: Math.sqrt(variance)});
 
-function readingsOf(
+function* readingsOf(
 	channels: Channels,
 	gears: Uint8Array,
 	state: Uint8Array,
 	passes: readonly Pass[],
 	overall: readonly number[],
 	slip: number,
-): Readings {
-	const {run, rateHz} = channels;
+): Steps<Readings> {
+	const {run, rateHz, pace} = channels;
 	const size = Math.max(1, Math.round(blockS * rateHz));
 	const [circumferenceM, square, of]: [number[], number[], number[]] = [[], [], []];
 	const ratios = new Float64Array(size);
@@ -144,6 +145,7 @@ function readingsOf(
 			if (gear === 0) continue;
 			let [count, squares] = [0, 0];
 			for (let i = from; i < to; i++) {
+				if (pace.isDue()) yield;
 				if (state[i] !== sampleState.steady || gears[i] !== gear) continue;
 				ratios[count++] = run.speedMps[i]! / run.rpm[i]!;
 				squares += (run.speedMps[i]! / growthReferenceMps) ** 2;
