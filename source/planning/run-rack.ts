@@ -52,7 +52,7 @@ export function groundOf(plan: Plan): Ground {
 }
 
 /** All steps at once. */
-export function finish<T>(steps: Generator<Progress, T, void>): T {
+export function finish<T>(steps: Generator<unknown, T, void>): T {
 	for (;;) {
 		const step = steps.next();
 		if (step.done) return step.value;

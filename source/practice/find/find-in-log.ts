@@ -1,6 +1,7 @@
 /** From a logged run to what it shows. */
 import type {LoggedRun} from '../../logs/logged-run.ts';
 import type {Plan} from '../../planning/plan.ts';
+import {finish} from '../../planning/run-rack.ts';
 import {type Channels, channelsOf, overallBy} from './channels.ts';
 import {fitCircumference} from './circumference.ts';
 import {humpsOf} from './clusters.ts';
@@ -15,7 +16,7 @@ import {notesOn} from './notes.ts';
 import {measured} from './passes.ts';
 import {type Power, powerOf} from './power.ts';
 import {revEvents, shiftFindings} from './shift-findings.ts';
-import {finish, type Steps} from './steps.ts';
+import type {Steps} from './steps.ts';
 import {straightFindings} from './straight-findings.ts';
 
 /**

@@ -21,11 +21,3 @@ export class Pace {
 		return true;
 	}
 }
-
-/** All steps at once. */
-export function finish<T>(steps: Steps<T>): T {
-	for (;;) {
-		const step = steps.next();
-		if (step.done) return step.value;
-	}
-}

@@ -2,6 +2,7 @@
  * Robust regression after P. J. Huber (Robust estimation of a location parameter, Ann. Math. Statist. 35, 1964; Robust
  * Statistics, 1981, ch. 7): squares near the middle, absolute values far out, by iteratively reweighted least squares.
  */
+import {finish} from '../../planning/run-rack.ts';
 import {type Columns, leastSquares, residualsOf} from './least-squares.ts';
 import {robustSd} from './robust.ts';
 
@@ -34,11 +35,7 @@ const settled = 1e-9;
  * together (sandwich over groups). Undefined where the columns do not determine the coefficients.
  */
 export function huberFit(columns: Columns, y: Float64Array, groups?: ArrayLike<number>): RobustFit | undefined {
-	const steps = huberSteps(columns, y, groups);
-	for (;;) {
-		const step = steps.next();
-		if (step.done) return step.value;
-	}
+	return finish(huberSteps(columns, y, groups));
 }
 
 /** The same round by round, for a caller that has other things to do in between. */

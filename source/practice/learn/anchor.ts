@@ -4,6 +4,7 @@
  */
 import {brentRoot} from '../../drivetrain/brent.ts';
 import {mphMps} from '../../drivetrain/constants.ts';
+import {finish} from '../../planning/run-rack.ts';
 import {huberWeight} from '../fit/huber.ts';
 import {leastSquares} from '../fit/least-squares.ts';
 import {robustSd} from '../fit/robust.ts';
@@ -48,15 +49,26 @@ const onePercent = 0.01;
 
 /** The anchor of the readings that have an end speed and are not on the limiter; undefined where there is none. */
 export function anchor(ask: AskModel, readings: readonly Reading[], trim: Trim): Anchor | undefined {
-	const told = readings.flatMap(reading => {
+	return finish(anchorSteps(ask, readings, trim));
+}
+
+/** The same step by step: a straight, or a round of all of them. */
+export function* anchorSteps(
+	ask: AskModel,
+	readings: readonly Reading[],
+	trim: Trim,
+): Generator<undefined, Anchor | undefined, void> {
+	const told: StraightAnchor[] = [];
+	for (const reading of readings) {
+		yield;
 		const one = reading.endMps === undefined || reading.limited ? undefined : straightAnchor(ask, reading, trim);
-		return one === undefined ? [] : [one];
-	});
+		if (one !== undefined) told.push(one);
+	}
 	const usable = told.filter(({alone}) => alone !== undefined);
 	if (usable.length === 0)
 		return told.length === 0 ? undefined : {drag: undefined, power: undefined, straights: told, misfit: undefined};
 	const factors = (['drag', 'power'] as const).filter(factor => usable.some(({tells}) => tells === factor));
-	const fit = fitAll(ask, usable, trim, factors);
+	const fit = yield* fitAll(ask, usable, trim, factors);
 	const final = {...trim, ...valuesOf(fit.factors)};
 	return {
 		drag: fit.factors.drag,
@@ -130,18 +142,24 @@ const settled = 1e-9;
  * not carry the others away. Standard errors by the given deviations of the readings, widened where the readings scatter more
  * than these say (R. T. Birge, Phys. Rev. 40, 1932).
  */
-function fitAll(ask: AskModel, told: readonly StraightAnchor[], start: Trim, factors: readonly Factor[]): Fit {
+function* fitAll(
+	ask: AskModel,
+	told: readonly StraightAnchor[],
+	start: Trim,
+	factors: readonly Factor[],
+): Generator<undefined, Fit, void> {
 	const given = told.map(({seMps}) => Math.max(seMps, leastSeMps));
 	let weights: Float64Array = Float64Array.from(given, se => 1 / se ** 2);
 	let trim = start;
 	let inverse: Float64Array | undefined;
 	for (let round = 0; round < mostRounds; round++) {
+		yield;
 		const misses = Float64Array.from(told, ({reading}) => missBy(ask, reading, trim));
 		const columns = factors.map(factor => Float64Array.from(told, ({reading}) => slopeOf(ask, reading, trim, factor)));
 		if (told.length >= fewestForRobust) weights = robustWeights(misses, given);
 		const step = leastSquares(columns, misses, weights);
 		// Readings that cannot tell the two apart: the one that more of them tell.
-		if (step === undefined) return factors.length > 1 ? fitAll(ask, told, start, [commonest(told)]) : noFit;
+		if (step === undefined) return factors.length > 1 ? yield* fitAll(ask, told, start, [commonest(told)]) : noFit;
 		inverse = step.inverse;
 		const before = trim;
 		trim = {...trim};

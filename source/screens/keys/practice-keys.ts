@@ -55,5 +55,12 @@ export const practiceKeys = [
 	},
 	{scope: 'practice', keys: ['pageup'], does: 'scroll up', words: 'scroll up'},
 	{scope: 'practice', keys: ['pagedown', 'space'], does: 'scroll down', words: 'scroll down'},
-	{scope: 'practice', keys: ['escape'], does: 'ranking', words: 'back to the ranking', short: 'back', rank: 3},
+	{
+		scope: 'practice',
+		keys: ['escape'],
+		does: 'leave practice',
+		words: 'leave the log that is being read; else back to the ranking',
+		short: 'back',
+		rank: 3,
+	},
 ] as const satisfies readonly AnyBinding[];

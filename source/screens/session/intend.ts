@@ -29,6 +29,7 @@ export type Scene = {
 	readonly isWorking: boolean;
 	/** Lines that the cursor of the practice moves over. */
 	readonly practiceLines: number;
+	readonly isReadingLog: boolean;
 };
 
 /** Which scopes of the key table hold, the first one first. */
@@ -138,6 +139,8 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 			return {do: 'move in draft', by: 1};
 		case 'practice':
 			return {do: 'go', place: practicePlace};
+		case 'leave practice':
+			return scene.isReadingLog ? 'stop log' : {do: 'go', place: {at: 'ranking'}};
 		case 'practice up':
 			return {do: 'move in practice', by: -1, count: scene.practiceLines};
 		case 'practice down':

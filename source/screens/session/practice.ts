@@ -1,6 +1,7 @@
 /** What was seen in practice: numbers typed straight by straight, or a log. */
 import type {LoggedRun} from '../../logs/logged-run.ts';
 import type {Findings} from '../../practice/find/findings.ts';
+import type {RatioPicture} from '../../practice/learn/pictures.ts';
 import type {Held} from '../../practice/learn/seen.ts';
 
 export type PracticeLog = {
@@ -8,6 +9,7 @@ export type PracticeLog = {
 	readonly label: string;
 	readonly run: LoggedRun;
 	readonly findings: Findings;
+	readonly ratio: RatioPicture;
 	/** What reading it had to say. */
 	readonly remarks: readonly string[];
 };

@@ -50,10 +50,8 @@ const paneNames: Record<Pane, string> = {
 /** Where the numbers come from, and what there is to look at. */
 function headPieces(practice: Practice, pane: Pane, taught: Taught | undefined): Pieces {
 	const {log, held} = practice;
-	const from =
-		log === undefined
-			? `By hand, ${taught?.inCar ?? 'nothing'} in the car, ${held} held`
-			: `${log.label}: ${taught?.lesson?.learning.from ?? 'a log'}`;
+	const byHand = taught === undefined ? '' : `By hand, ${taught.inCar ?? 'nothing'} in the car, ${held} held`;
+	const from = log === undefined ? byHand : `${log.label}: ${taught?.lesson?.learning.from ?? 'a log'}`;
 	const tabs = panesOf(practice).flatMap(one => [
 		piece(' '),
 		one === pane ? piece(` ${paneNames[one]} `, 'chosen') : piece(` ${paneNames[one]} `, 'muted'),
