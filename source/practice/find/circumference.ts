@@ -2,9 +2,10 @@
 
 import type {Tires} from '../../drivetrain/car.ts';
 import {growthReferenceMps} from '../../drivetrain/tire.ts';
+import {groupLevelsEvened} from '../fit/group-levels.ts';
 import {huberSteps} from '../fit/huber.ts';
 import type {Columns} from '../fit/least-squares.ts';
-import {median, quantile, sorted} from '../fit/robust.ts';
+import {median, sorted, trimmedMean} from '../fit/robust.ts';
 import {fewGroupsFactor} from '../fit/student.ts';
 import type {Channels} from './channels.ts';
 import {type CircumferenceFit, type Estimate, type Pass, sampleState} from './findings.ts';
@@ -24,6 +25,8 @@ const blockS = 0.5;
 /** A block with less of its samples than this is left out. */
 const leastFilled = 0.5;
 const fewestReadings = 4;
+/** Of the samples of a block, at each end of their order: what is left out of its mean. */
+const trimmed = 0.1;
 /** Growth less sure than this, as a fraction at 100 mph, is held: the documents' is about as good. */
 const leastSureGrowth = 0.002;
 
@@ -77,7 +80,11 @@ function* fitted({circumferenceM, square, pass}: Readings, held: number | undefi
 			: [square.map(x => (1 + held * x) / (1 + held * middle))];
 	const groups = new Set(pass).size;
 	const grouped = groups > fewestGroups;
-	const fit = yield* huberSteps(columns, circumferenceM, grouped ? pass : undefined);
+	const first = yield* huberSteps(columns, circumferenceM, grouped ? pass : undefined);
+	if (first === undefined) return undefined;
+	// Slip differs a little from pass to pass: what growth is shows within each, whatever its level.
+	const evened = grouped ? groupLevelsEvened(columns, circumferenceM, pass, first) : undefined;
+	const fit = evened === undefined ? first : yield* huberSteps(evened.columns, evened.y, pass);
 	if (fit === undefined) return undefined;
 	const degrees = (grouped ? groups : circumferenceM.length) - columns.length;
 	const wider = fewGroupsFactor(degrees) ** 2;
@@ -151,7 +158,7 @@ function* readingsOf(
 				squares += (run.speedMps[i]! / growthReferenceMps) ** 2;
 			}
 			if (count < leastFilled * size) continue;
-			const middle = quantile(ratios.subarray(0, count).sort(), 0.5);
+			const middle = trimmedMean(ratios.subarray(0, count).sort(), trimmed);
 			circumferenceM.push(60 * middle * (1 + slip) * overall[gear - 1]!);
 			square.push(squares / count);
 			of.push(number);
