@@ -2,6 +2,7 @@
 import type {Car} from '../../drivetrain/car.ts';
 import type {Track} from '../../drivetrain/track.ts';
 import type {Uncertainties} from '../../drivetrain/uncertainties.ts';
+import type {LoggedRun} from '../../logs/logged-run.ts';
 import {type Candidate, candidateOf, gearboxNamed, onRack} from '../../planning/candidates.ts';
 import {done, failed, fault} from '../../planning/faults.ts';
 import {measuredPoints} from '../../planning/measured.ts';
@@ -14,7 +15,8 @@ import {type Anchor, anchorSteps} from './anchor.ts';
 import {type CircumferenceLearned, circumferenceFromFindings, circumferenceFromReadings} from './circumference.ts';
 import {type Compared, comparedRuns} from './compared.ts';
 import {readingsFrom} from './from-findings.ts';
-import {modelOf} from './model.ts';
+import {type GripLearned, gripSteps} from './grip.ts';
+import {modelOf, motionsOf} from './model.ts';
 import {type Known, known, type Reading} from './reading.ts';
 import {
 	type CircumferenceReading,
@@ -44,6 +46,8 @@ export type Learning = {
 	/** Without a speed one number cannot tell circumference and speed apart: what was taken for right. */
 	readonly held: Held | undefined;
 	readonly anchor: Anchor | undefined;
+	/** Undefined where it was not asked for. */
+	readonly grip: GripLearned | undefined;
 	readonly readings: readonly Reading[];
 	/** All of it, to compute with. */
 	readonly trim: Trim;
@@ -83,26 +87,21 @@ export function seenSteps(subject: Subject, seen: readonly Seen[], held: Held): 
 	});
 }
 
-/** From a logged run. */
-export function learnFromFindings(subject: Subject, findings: Findings): Outcome<Learning> {
-	return finish(findingsSteps(subject, findings));
+/** From a logged run; with the run itself grip is learned too. */
+export function learnFromFindings(subject: Subject, findings: Findings, gripFrom?: LoggedRun): Outcome<Learning> {
+	return finish(findingsSteps(subject, findings, gripFrom));
 }
 
-export function findingsSteps(subject: Subject, findings: Findings): LearnSteps {
+export function findingsSteps(subject: Subject, findings: Findings, gripFrom?: LoggedRun): LearnSteps {
 	return withPlan(subject, function* (plan) {
 		const candidate = findings.mounted.best?.candidate;
 		const circumference = circumferenceFromFindings(plan, findings);
 		const readings =
 			candidate === undefined ? [] : yield* readingsFrom(findings, candidate, modelOf(subject.car, subject.track));
 		const laps = findings.laps.filter(({kind}) => kind === 'good').length;
-		return yield* learned(subject, {
-			source: 'log',
-			from: `practice, ${counted(laps, 'lap')}`,
-			candidate,
-			circumference,
-			held: undefined,
-			readings,
-		});
+		const found = {source: 'log', candidate, circumference, held: undefined, readings} as const;
+		const seen = gripFrom && {findings, run: gripFrom};
+		return yield* learned(subject, {...found, from: `practice, ${counted(laps, 'lap')}`}, seen);
 	});
 }
 
@@ -132,15 +131,44 @@ function* withPlan(subject: Subject, learn: Learn): LearnSteps {
 
 function* learned(
 	subject: Subject,
-	found: Omit<Learning, 'anchor' | 'trim' | 'compared'>,
+	found: Omit<Learning, 'anchor' | 'grip' | 'trim' | 'compared'>,
+	seen?: {readonly findings: Findings; readonly run: LoggedRun},
 ): Generator<undefined, Learning, void> {
 	const ask = modelOf(subject.car, subject.track);
 	const {circumference} = found;
 	const rolled: Trim = {...untrimmed, rollout: circumference?.factor ?? 1, growth: circumference?.growth?.value};
-	const anchored = yield* anchorSteps(ask, found.readings, rolled);
-	const trim = {...rolled, drag: anchored?.drag?.value ?? 1, power: anchored?.power?.value ?? 1};
-	return {...found, anchor: anchored, trim, compared: yield* comparedRuns(ask, found.readings, trim)};
+	const {readings} = found;
+	let anchored = yield* anchorSteps(ask, readings, rolled);
+	let grip: GripLearned | undefined;
+	for (let round = 0; seen !== undefined && round < gripRounds; round++) {
+		const before = startOfGrip(rolled, anchored);
+		const dragSe = anchored?.drag?.se ?? heldDragSe;
+		grip = yield* gripSteps(motionsOf(subject.car, subject.track), readings, seen, before, dragSe);
+		if (grip.factor === undefined) break;
+		// What the exits lost to grip is not the engine's or the air's.
+		anchored = yield* anchorSteps(ask, readings, {...rolled, grip: grip.factor.value});
+	}
+	const trim = anchoredTrim({...rolled, grip: grip?.factor?.value ?? 1}, anchored);
+	return {...found, anchor: anchored, grip, trim, compared: yield* comparedRuns(ask, found.readings, trim)};
 }
+
+/** Grip and power are fitted in turn: each needs what the other one is. */
+const gripRounds = 2;
+/** A drag area that no straight tells is right to about this. */
+const heldDragSe = 0.05;
+/** A power that is further off is not likely: what the exits lost is first laid to grip. */
+const likelyPower = 0.1;
+
+function startOfGrip(rolled: Trim, anchored: Anchor | undefined): Trim {
+	const power = anchored?.power?.value ?? 1;
+	return Math.abs(power - 1) > likelyPower ? rolled : anchoredTrim(rolled, anchored);
+}
+
+const anchoredTrim = (trim: Trim, anchored: Anchor | undefined): Trim => ({
+	...trim,
+	drag: anchored?.drag?.value ?? 1,
+	power: anchored?.power?.value ?? 1,
+});
 
 /** The circumference of the documents, with what they state of it. */
 function statedRollout({uncertainties}: Subject, plan: Plan): Known {

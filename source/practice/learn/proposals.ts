@@ -10,7 +10,7 @@ import type {Compared} from './compared.ts';
 import type {Learning, Subject} from './learn.ts';
 import {type Known, known, type Reading} from './reading.ts';
 import {heldSpeedSe} from './seen.ts';
-import {type Readers, writtenNumber, writtenQuantity} from './written.ts';
+import {type Readers, writtenCoefficient, writtenNumber, writtenQuantity} from './written.ts';
 
 export type DocumentName = 'track' | 'car';
 export type Written = string | number;
@@ -93,9 +93,10 @@ class Maker {
 		return isAsSure && Math.abs(value - reading.value) <= se / 2 ? before : undefined;
 	}
 
-	plain(label: string, path: Path, value: Written): ProposalRow {
+	plain(label: string, path: Path, value: Written, elsewhere?: {document: DocumentName; path: Path}): ProposalRow {
 		const before = this.#at('track', path);
-		return {label, document: 'track', path, before, now: before === undefined ? '' : String(before), value};
+		const now = before ?? (elsewhere && this.#at(elsewhere.document, elsewhere.path));
+		return {label, document: 'track', path, before, now: now === undefined ? '' : String(now), value};
 	}
 
 	has(document: DocumentName, path: Path): boolean {
@@ -148,7 +149,7 @@ function rolloutProposals({car, track}: Subject, {circumference}: Learning, make
 	return [rollout, row('growth', grown)];
 }
 
-function forceProposals({car, track}: Subject, {anchor}: Learning, make: Maker): Proposal[] {
+function forceProposals({car, track}: Subject, {anchor, grip}: Learning, make: Maker): Proposal[] {
 	const here = carAt(track, car);
 	const scaled = (now: number, factor: Known) => known(now * factor.value, now * factor.se);
 	const proposals: Proposal[] = [];
@@ -163,6 +164,10 @@ function forceProposals({car, track}: Subject, {anchor}: Learning, make: Maker):
 		const elsewhere = {document: 'car', path: ['engines', engine, 'power'], unlessGiven: '100 %'} as const;
 		const value = scaled(now, anchor.power);
 		proposals.push(row('power', make.quantity('power', 'track', ['car', 'power'], value, 'share', elsewhere)));
+	}
+	if (grip?.factor !== undefined) {
+		const value = writtenCoefficient(scaled(here.grip, grip.factor));
+		proposals.push(row('grip', make.plain('grip', ['car', 'grip'], value, {document: 'car', path: ['grip']})));
 	}
 	return proposals;
 }
