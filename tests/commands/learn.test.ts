@@ -207,3 +207,21 @@ describe('accepting and taking back', () => {
 		expect(err).toMatch(message);
 	});
 });
+
+describe('grip', () => {
+	test('is learned where it is asked for', async () => {
+		const [without, asked] = [
+			await json(log(), 'tarrowdale', ...with3435),
+			await json(log(), 'tarrowdale', ...with3435, '--grip'),
+		];
+		expect(without.grip).toBeNull();
+		expect(asked.grip).toBeNull();
+		const {out} = await learn(log(), 'tarrowdale', ...with3435, '--grip');
+		expect(out).toContain('No exit is held by grip: the log says nothing about how much there is.');
+	});
+
+	test('goes with a log', async () => {
+		const {status, err} = await learn('tarrowdale', '--grip');
+		expect([status, err]).toEqual([2, expect.stringContaining('--grip goes with a log.')]);
+	});
+});

@@ -33,6 +33,14 @@ export const practiceKeys = [
 	},
 	{
 		scope: 'practice',
+		keys: ['g'],
+		does: 'grip too',
+		words: 'of a log: learn grip too, from exits that it holds; or not',
+		short: 'grip',
+		rank: 4,
+	},
+	{
+		scope: 'practice',
 		keys: ['a'],
 		does: 'accept all',
 		words: 'accept all that would change',

@@ -9,7 +9,7 @@ import type {Choice} from './catalog.ts';
 import {current, unsaved} from './documents.ts';
 import type {Effect} from './effect.ts';
 import {fileNameFor, items} from './hand-over.ts';
-import {cleared, paneBy, seenEntry} from './intend-practice.ts';
+import {cleared, gripToo, paneBy, seenEntry} from './intend-practice.ts';
 import {entryFor, next} from './intents.ts';
 import {practiceOf} from './practice-of.ts';
 import {marginEntry} from './reduce.ts';
@@ -155,6 +155,8 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 			return entryFor('log', '');
 		case 'hold other':
 			return {do: 'hold', held: practiceOf(session).held === 'speed' ? 'circumference' : 'speed'};
+		case 'grip too':
+			return gripToo(session);
 		case 'clear number':
 			return cleared(session);
 		case 'differences':

@@ -111,4 +111,5 @@ const isSame = (one: Inputs, other: Inputs): boolean =>
 	one.units === other.units &&
 	one.practice.log === other.practice.log &&
 	one.practice.held === other.practice.held &&
+	one.practice.grip === other.practice.grip &&
 	JSON.stringify(one.practice.seen) === JSON.stringify(other.practice.seen);

@@ -20,6 +20,8 @@ export type Practice = {
 	/** As typed behind the name of the straight: "8420 gear 4 185 mph". */
 	readonly seen: readonly {readonly straight: string; readonly text: string}[];
 	readonly held: Held;
+	/** Whether grip is learned from a log too. */
+	readonly grip: boolean;
 	/** In place of the numbers, where one was read. */
 	readonly log: PracticeLog | undefined;
 };

@@ -53,7 +53,7 @@ export function* teachSteps(session: Session): Generator<undefined, Taught | und
 	if (log === undefined && seen.length === 0) return nothing;
 	const learning = yield* log === undefined
 		? seenSteps(subject, seen, practice.held)
-		: findingsSteps(subject, log.findings);
+		: findingsSteps(subject, log.findings, practice.grip ? log.run : undefined);
 	if (!learning.ok)
 		return {
 			...nothing,

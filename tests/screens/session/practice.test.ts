@@ -146,6 +146,13 @@ test('all is accepted at once, and what is ranked follows', async () => {
 	expect(answer.is === 'ready' && answer.ranked.ranking.setting.anchored).toBe(true);
 });
 
+test('grip asks for a log', async () => {
+	const {live, press, atPractice} = started();
+	await atPractice();
+	press('g');
+	expect(live.state().session.notice).toBe('Grip is learned from a logged run: f reads one.');
+});
+
 test('numbers belong to their track', async () => {
 	const {live, press, atPractice} = started();
 	await atPractice();
@@ -177,7 +184,11 @@ test('a log is read while keys are answered, and put away again', async () => {
 	expect(lesson?.learning.compared.map(({reading}) => reading.name)).toEqual(['Front', 'Back']);
 	press('8');
 	expect(live.state().session.notice).toMatch(/run\.csv is shown; Del puts it away/);
-	press(`${tab}${tab}${tab}`);
+	expect(lesson?.learning.grip).toBeUndefined();
+	press('g');
+	expect(taughtIn(live)?.lesson?.learning.grip).toMatchObject({straights: expect.any(Array)});
+	press(`g${tab}${tab}${tab}`);
+	expect(taughtIn(live)?.lesson?.learning.grip).toBeUndefined();
 	expect(live.state().session.place).toMatchObject({pane: 'gears'});
 	press(del);
 	expect(practiceOf(live.state().session).log).toBeUndefined();
