@@ -17,7 +17,7 @@ export type Factor = 'drag' | 'power';
 /** What one straight says by itself. */
 export type StraightAnchor = {
 	readonly reading: Reading;
-	/** Drag where 1 % of it moves the end speed by 0.2 mph or more, else power; undefined where neither does much. */
+	/** Drag where 1 % of it takes 0.2 mph or more from the end speed, else power; undefined where neither does much, or does it by leaps. */
 	readonly tells: Factor | undefined;
 	/** m/s that 1 % more drag takes away, and that 1 % more power gives, at the end of the straight. */
 	readonly perPercent: {readonly drag: number; readonly power: number};
@@ -92,7 +92,10 @@ function straightAnchor(ask: AskModel, reading: Reading, trim: Trim): StraightAn
 	if (run === undefined) return undefined;
 	const slopes = {drag: slopeOf(ask, reading, trim, 'drag'), power: slopeOf(ask, reading, trim, 'power')};
 	const perPercent = {drag: slopes.drag * onePercent, power: slopes.power * onePercent};
-	const tells = tellsOf(perPercent);
+	const isSmooth = (['drag', 'power'] as const).every(factor =>
+		changesSmoothly(ask, reading, trim, factor, run.endMps),
+	);
+	const tells = isSmooth ? tellsOf(perPercent) : undefined;
 	const seMps = together(reading.endMps!.se, exitEffect(ask, reading, trim));
 	const beforeMps = reading.endMps!.value - run.endMps;
 	const silent = {reading, tells, perPercent, seMps, alone: undefined, beforeMps, afterMps: beforeMps};
@@ -110,8 +113,8 @@ function straightAnchor(ask: AskModel, reading: Reading, trim: Trim): StraightAn
 	};
 }
 function tellsOf({drag, power}: StraightAnchor['perPercent']): Factor | undefined {
-	if (Math.abs(drag) >= tellingMps) return 'drag';
-	return Math.abs(power) >= silentMps ? 'power' : undefined;
+	if (-drag >= tellingMps) return 'drag';
+	return power >= silentMps ? 'power' : undefined;
 }
 
 /** Far below what any speed is known to. */
@@ -122,6 +125,16 @@ function slopeOf(ask: AskModel, reading: Reading, trim: Trim, factor: Factor): n
 	const at = (by: number) => ask(reading, {...trim, [factor]: trim[factor] * (1 + by)})?.endMps ?? Number.NaN;
 	return (at(onePercent / 2) - at(-onePercent / 2)) / (onePercent * trim[factor]);
 }
+
+/** Not where a little more or less of the factor has another gear or shift at the end: such a leap tells nothing of the factor. */
+function changesSmoothly(ask: AskModel, reading: Reading, trim: Trim, factor: Factor, endMps: number): boolean {
+	const change = (by: number) =>
+		Math.abs((ask(reading, {...trim, [factor]: trim[factor] * (1 + by)})?.endMps ?? Number.NaN) - endMps);
+	const [up, down] = [change(onePercent / 2), change(-onePercent / 2)];
+	return Math.max(up, down) <= mostUneven * Math.min(up, down) + slightMps;
+}
+const mostUneven = 2;
+const slightMps = 0.02 * mphMps;
 
 /** What the uncertainty of the exit speed makes at the end, m/s. */
 function exitEffect(ask: AskModel, reading: Reading, trim: Trim): number {

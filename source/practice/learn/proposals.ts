@@ -6,6 +6,7 @@ import {mphMps} from '../../drivetrain/constants.ts';
 import {harmonicRolloutM} from '../../drivetrain/tire.ts';
 import {carAt} from '../../planning/situations.ts';
 import type {Findings, Spread} from '../find/findings.ts';
+import {edgesFromHz} from '../find/notes.ts';
 import type {Compared} from './compared.ts';
 import type {Learning, Subject} from './learn.ts';
 import {type Known, known, type Reading} from './reading.ts';
@@ -52,7 +53,9 @@ export function proposalsOf(
 		...rolloutProposals(subject, learning, make),
 		...forceProposals(subject, learning, make),
 		...straightProposals(learning, findings, make),
-		...(learning.source === 'measured' ? [] : learning.compared.flatMap(one => measuredProposal(one, make))),
+		...(learning.source === 'measured' || isCoarse(findings)
+			? []
+			: learning.compared.flatMap(one => measuredProposal(one, make))),
 	];
 	return all
 		.map(proposal => ({...proposal, rows: proposal.rows.filter(({value, before}) => value !== before)}))
@@ -181,13 +184,17 @@ function straightProposals({readings}: Learning, findings: Findings | undefined,
 	return found.flatMap(({index, name, exitMps, minimumMps}) => {
 		const speed = (field: 'exit' | 'minimum', spread: Spread | undefined): Proposal[] => {
 			const path: Path = ['straights', index, field];
-			if (spread === undefined || !make.has('track', path)) return [];
+			if (spread === undefined || !make.has('track', path) || (field === 'exit' && isCoarse(findings))) return [];
 			const value = known(spread.median, spreadOf(spread));
 			return [row(`${field}:${name}`, make.quantity(`${field} ${name}`, 'track', path, value, 'speed'))];
 		};
 		return [...speed('exit', exitMps), ...speed('minimum', minimumMps)];
 	});
 }
+
+/** Its first and last samples at full throttle are not the exit and the end: the car is faster than at the one, slower than at the other. */
+const isCoarse = (findings: Findings | undefined): boolean =>
+	findings !== undefined && findings.log.rateHz < edgesFromHz;
 
 /** From lap to lap; a few laps alike are no proof that the next one will be. */
 function spreadOf({sd, count}: Spread): number {

@@ -176,13 +176,13 @@ function effectLines(scene: PracticeScene | undefined, width: number): Pieces[] 
 	return [blank, ...layOut([text(words, effect === 'working' ? 'muted' : 'strong')], width)];
 }
 
-function changeLines({place}: Given, taught: Taught, width: number, height: number): readonly Pieces[] {
+function changeLines({place, ascii}: Given, taught: Taught, width: number, height: number): readonly Pieces[] {
 	const lines = linesOf(taught);
 	if (lines.length === 0)
 		return layOut([text('Nothing would change, and nothing was learned before.', 'muted')], width);
 	const rows = lines.flatMap((one, i) => changeRows(one, i === place.cursor));
 	const cursor = rows.findIndex(({isHere}) => isHere);
-	const drawn = layOut([tableOf(changeColumns, rows)], width);
+	const drawn = layOut([tableOf(changeColumns, rows)], width, ascii);
 	const start = Math.max(0, Math.min(cursor - Math.floor(height / 2), drawn.length - height));
 	const shown = drawn.length <= height ? drawn : [drawn[0]!, ...drawn.slice(1 + start, start + height)];
 	return shown;

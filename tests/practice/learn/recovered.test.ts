@@ -4,13 +4,16 @@
  */
 import {expect, test} from 'vitest';
 import {readLog} from '../../../source/logs/read-log.ts';
+import {tellingMps} from '../../../source/practice/learn/anchor.ts';
 import {learnFromFindings} from '../../../source/practice/learn/learn.ts';
 import {findingsFor} from '../../../source/practice/learn/lesson.ts';
+import {proposalsOf} from '../../../source/practice/learn/proposals.ts';
 import {runs} from '../../runs.ts';
 import {shippedCar, shippedTrack} from '../../tracks/demo.ts';
 import {type Dialect, logAsCsv, plainDialect, usualColumns} from '../log-as-csv.ts';
 import {generateLog, type LogWish} from '../log-generator.ts';
 import {mount, named, samplePlan} from '../sample.ts';
+import {demoDocuments, subjectOf} from './subject.ts';
 
 const {time, distance, speed, rpm, throttle, lap} = usualColumns;
 const kmh = {...speed, unit: 'km/h', perSi: 3.6};
@@ -89,3 +92,26 @@ test('fewer samples know the circumference at standstill less well, and say so; 
 		expect(Math.abs(circumferenceM.value / truth - 1)).toBeLessThan(0.0005);
 	}
 }, 300_000);
+
+test('a straight that ends just at a shift, where a little more drag leaps over it, tells no drag', async () => {
+	const wish = {seed: 4, driving: {...worn, laps: 6}, sensors: {...sensed, rateHz: 50}};
+	const {learning} = await learnedAt('hesper-ridge', '33/35 A', wish);
+	const ledge = learning.anchor!.straights.find(({reading}) => reading.name === 'Ledge')!;
+	expect(ledge.perPercent.drag).toBeGreaterThan(tellingMps);
+	expect(ledge.tells).toBeUndefined();
+	expect(learning.anchor!.drag).toBeUndefined();
+});
+
+test('at one sample a second nothing is proposed that lies between two samples', async () => {
+	const {learning, findings} = await learnedAt('tarrowdale', '34/34 C', {
+		seed: 0,
+		driving: {laps: 12},
+		sensors: {rateHz: 1},
+	});
+	const documents = demoDocuments();
+	const names = proposalsOf(subjectOf(documents), documents, learning, findings, 'us').map(({name}) => name);
+	expect(names).toEqual(['rollout', 'growth', 'drag', 'minimum:Front', 'minimum:Back']);
+	expect(findings.notes.find(({code}) => code === 'slowSampling')!.text).toContain(
+		'so no exit speed and no highest RPM is proposed',
+	);
+});
