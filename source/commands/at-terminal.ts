@@ -1,9 +1,10 @@
 /** The bare command in a terminal: the screen, on the documents that the ranking would be printed of. */
+
+import type {JsonObject} from '../documents/json.ts';
 import {openScreen} from '../screens/open.ts';
 import type {OpenDocument} from '../screens/session/documents.ts';
-import type {JsonObject} from '../screens/session/json.ts';
 import {homeDirectory} from '../store/home.ts';
-import {readPreferences} from '../store/preferences.ts';
+import {readPreferences, rememberTrack} from '../store/preferences.ts';
 import {findDocument} from './find-document.ts';
 import type {Request} from './request.ts';
 import {screenErrands} from './screen-errands.ts';
@@ -15,10 +16,11 @@ export async function openAtTerminal({units, ascii, car}: Request, around: Surro
 	const home = homeDirectory(around.environment);
 	const [tracks, cars] = [shelf('track', around), shelf('car', around)];
 	const catalog = [...openDocuments('track', tracks.entries, around), ...openDocuments('car', cars.entries, around)];
-	const track = catalog.find(({kind, id}) => kind === 'track' && id === `track:${demo.track}`)!;
-	const savedWith = tracks.entries.find(({stem}) => stem === demo.track)?.car;
+	const first = trackToStartWith(tracks.entries, home);
+	const track = catalog.find(({id}) => id === `track:${first}`)!;
+	const savedWith = tracks.entries.find(({stem}) => stem === first)?.car;
 	const chosen = chosenCar(car ?? savedWith, catalog, cars.entries, home);
-	await openScreen({
+	const left = await openScreen({
 		documents: {open: {[track.id]: track, [chosen.id]: chosen}, track: track.id, car: chosen.id},
 		catalog,
 		units,
@@ -31,6 +33,16 @@ export async function openAtTerminal({units, ascii, car}: Request, around: Surro
 		reader: around.environment.INK_SCREEN_READER === 'true',
 		notice: [...tracks.notes, ...cars.notes][0],
 	});
+	const last = tracks.entries.find(({stem}) => `track:${stem}` === left.track)?.stem;
+	// A convenience: where it cannot be kept, the next start is at the same track as this one.
+	if (last !== undefined && last !== first) await rememberTrack(home, last);
+}
+
+/** The track that the screen was left at, else the demo's. */
+function trackToStartWith(entries: readonly Shelved[], home: string): string {
+	const preferences = readPreferences(home);
+	const last = preferences.ok ? preferences.value.track : undefined;
+	return entries.some(({stem}) => stem === last) ? last! : demo.track;
 }
 
 function openDocuments(kind: Kind, entries: readonly Shelved[], around: Surroundings): OpenDocument[] {

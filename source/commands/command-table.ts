@@ -3,6 +3,7 @@ import type {Command} from './command.ts';
 import {learnCommands} from './learn-commands.ts';
 import {lifeCommands} from './life-commands.ts';
 import {loadingCommands} from './loading-commands.ts';
+import {oddsCommands} from './odds-commands.ts';
 import {sharingCommands} from './sharing-commands.ts';
 import {storeCommands} from './store-commands.ts';
 
@@ -17,7 +18,7 @@ export const commands: readonly Command[] = [
 		name: 'rank',
 		summary: 'rank every pair and gearbox set, best first, with checks and reasons',
 		argument: track,
-		options: ['car', 'situation', 'top', ...everywhere],
+		options: ['car', 'situation', 'top', 'risk', 'seed', ...everywhere],
 		examples: [
 			{line: 'droprack rank friday.json --car ours.json', gives: 'your car at your track'},
 			{line: 'droprack rank friday.json --situation "In the tow" --top 5', gives: 'the five best in the tow'},
@@ -90,6 +91,7 @@ export const commands: readonly Command[] = [
 	},
 	...learnCommands,
 	...lifeCommands,
+	...oddsCommands,
 	...storeCommands,
 	...sharingCommands,
 	...loadingCommands,

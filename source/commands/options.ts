@@ -11,6 +11,8 @@ export type Option = {
 
 export const options = {
 	car: {value: 'CAR', summary: 'the car: a file, or the name of a saved or shipped one'},
+	risk: {value: 'PERCENT', summary: 'the chance of passing the RPM limit that you accept, such as 5%'},
+	seed: {value: 'N', summary: 'seed of the draws; the same seed gives the same answer'},
 	situation: {value: 'NAME', summary: 'the situation: rank by it alone, or what the entry was seen in'},
 	top: {value: 'N', summary: 'show the first N rows'},
 	pair: {

@@ -19,14 +19,23 @@ export const rank: CommandRun = async (request, around) => {
 	const {situation} = request;
 	const outcome = rankRack(car, track, {situation});
 	if (!outcome.ok) return replyRefused(refuseFaults(outcome.faults, labels));
-	const ranking = outcome.value;
+	const byRisk = request.risk === undefined ? undefined : await orderedByRisk(outcome.value, loaded.value, request);
+	if (byRisk !== undefined && !byRisk.ok) return replyRefused(refuseFaults(byRisk.faults, labels));
+	const {ranking, odds, chances} = byRisk?.value ?? {ranking: outcome.value};
 	const failed = request.strict && ranking.rows[0]?.verdict === 'fail';
 	if (request.json) {
 		const {setting, remarks} = ranking;
 		const rows = ranking.rows.slice(0, request.top);
-		return replyDone(printJson({track: track.name, car: car.name, setting, rows, remarks}, request), notes, failed);
+		const told = {track: track.name, car: car.name, setting, rows, remarks};
+		return replyDone(printJson(odds === undefined ? told : {...told, odds}, request), notes, failed);
 	}
 	const heading = headingOf(car, track, around.now);
-	const view = rankView({heading, ranking, top: request.top ?? shownUnlessAsked, situation}, unitsOf(request.units));
+	const view = rankView(
+		{heading, ranking, top: request.top ?? shownUnlessAsked, situation, chances},
+		unitsOf(request.units),
+	);
 	return replyDone(printText(view, request, around), notes, failed);
 };
+
+const orderedByRisk = async (...asked: Parameters<typeof import('./rank-by-risk.ts').rankByRisk>) =>
+	(await import('./rank-by-risk.ts')).rankByRisk(...asked);

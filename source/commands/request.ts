@@ -16,6 +16,9 @@ export type Request = {
 	top?: number;
 	pair?: {driving: number; driven: number};
 	gearbox?: string;
+	/** A share of 1. */
+	risk?: number;
+	seed?: number;
 	prefer?: string;
 	name?: string;
 	from?: string;
@@ -58,6 +61,8 @@ export type Request = {
 export type Given = Partial<Record<OptionName, string | true | readonly string[]>>;
 
 const pairPattern = /^\s*(\d{1,4})\s*\/\s*(\d{1,4})\s*$/;
+
+const riskPattern = /^\s*(\d+(?:\.\d+)?)\s*(%)\s*$/;
 
 /** Options that are taken as they were written. */
 const texts = [
@@ -139,6 +144,17 @@ export const toRequest = (
 		if (!/^([1-9]\d{0,3}|10000)$/.test(given.laps))
 			return `--laps is a whole number from 1 to 10000, found ${given.laps}.`;
 		request.laps = Number(given.laps);
+	}
+	if (typeof given.risk === 'string') {
+		const [, number, sign] = riskPattern.exec(given.risk) ?? [];
+		const share = Number(number) / 100;
+		if (sign === undefined || !(share >= 0 && share < 1))
+			return `--risk is a percentage from 0% to below 100%, such as 5%, found ${given.risk}.`;
+		request.risk = share;
+	}
+	if (typeof given.seed === 'string') {
+		if (!/^\d{1,9}$/.test(given.seed)) return `--seed is a whole number from 0 to 999999999, found ${given.seed}.`;
+		request.seed = Number(given.seed);
 	}
 	const steps = readSteps(given);
 	if (typeof steps === 'string') return steps;

@@ -9,6 +9,19 @@ export const isObject = (value: Json | undefined): value is JsonObject =>
 	typeof value === 'object' && value !== null && !Array.isArray(value);
 export const isList = (value: Json | undefined): value is readonly Json[] => Array.isArray(value);
 
+/** Whether two say the same, in whatever order their fields stand. What both share is not gone through. */
+export function sameJson(one: Json | undefined, other: Json | undefined): boolean {
+	if (one === other) return true;
+	if (isList(one))
+		return isList(other) && one.length === other.length && one.every((entry, i) => sameJson(entry, other[i]));
+	if (!isObject(one) || !isObject(other)) return false;
+	const names = Object.keys(one);
+	return (
+		names.length === Object.keys(other).length &&
+		names.every(name => Object.hasOwn(other, name) && sameJson(one[name], other[name]))
+	);
+}
+
 /** What stands at a path; undefined where nothing does. */
 export function valueAt(document: Json | undefined, path: Path): Json | undefined {
 	let value = document;

@@ -3,7 +3,9 @@ import type {Finish} from './sequence.ts';
 
 /** The least time. */
 export function fastestOf(finishes: readonly Finish[]): Finish {
-	return finishes.reduce((best, finish) => (finish.timeS < best.timeS ? finish : best));
+	let best = finishes[0]!;
+	for (const finish of finishes) if (finish.timeS < best.timeS) best = finish;
+	return best;
 }
 
 /**
@@ -11,10 +13,10 @@ export function fastestOf(finishes: readonly Finish[]): Finish {
  * fewest shifts, then the fastest. A shift that gains less than the driver can feel is not worth making.
  */
 export function chosenOf(finishes: readonly Finish[], sameTimeS: number): Finish {
-	const bound = fastestOf(finishes).timeS + sameTimeS;
-	return finishes
-		.filter(finish => finish.timeS <= bound)
-		.reduce((best, finish) => (preferred(finish, best) ? finish : best));
+	let best = fastestOf(finishes);
+	const bound = best.timeS + sameTimeS;
+	for (const finish of finishes) if (finish.timeS <= bound && preferred(finish, best)) best = finish;
+	return best;
 }
 
 function preferred(one: Finish, other: Finish): boolean {

@@ -9,9 +9,29 @@ import type {PlannedShift} from './planned-shift.ts';
 import {shiftSpeedMps} from './shift-point.ts';
 import type {GearTrain, Vehicle} from './straight.ts';
 import {speedAtRpmMps} from './tire.ts';
+import type {Goal, Travel} from './travel.ts';
 
-/** Everything is worked out when it is first asked for: most runs use few of the gears. Gears are counted from 1. */
-export class RoadGears {
+/** What the sequences of a run need to know of the gears, however it is worked out. Gears are counted from 1. */
+export type Gears = {
+	readonly vehicle: Vehicle;
+	/** The speed in a gear above which no straight starts. */
+	topMps(gear: number): number;
+	/** The speed in a gear above which no shift is planned. */
+	capMps(gear: number): number;
+	/** The speed in a gear at which thrust ends. */
+	limiterMps(gear: number): number;
+	/** A bound above the acceleration in a gear from a speed up. */
+	mostMps2(gear: number, fromMps: number): number;
+	/** The shift from a gear to the next. */
+	shift(gear: number): Pick<PlannedShift, 'speedMps' | 'coasted'>;
+	/** The shift of a car that enters the gear at a speed: it shifts at once where the planned speed is already behind. */
+	shiftFrom(gear: number, enteredMps: number): Pick<PlannedShift, 'speedMps' | 'coasted'>;
+	/** The run in a gear from a speed until the goal is met. */
+	carry(gear: number, fromMps: number, goal: Goal): Travel;
+};
+
+/** Everything is worked out when it is first asked for: most runs use few of the gears. */
+export class RoadGears implements Gears {
 	readonly vehicle: Vehicle;
 	readonly train: GearTrain;
 	readonly forces: RoadForces;
@@ -40,23 +60,27 @@ export class RoadGears {
 		return this.#tables[gear];
 	}
 
-	/** The speed in a gear above which no straight starts. */
 	topMps(gear: number): number {
 		return this.#speedAt(gear, this.vehicle.topRpm);
 	}
 
-	/** The speed in a gear above which no shift is planned. */
 	capMps(gear: number): number {
 		return this.#speedAt(gear, this.vehicle.shiftCapRpm);
 	}
 
-	/** A bound above the acceleration in a gear from a speed up. */
+	limiterMps(gear: number): number {
+		return this.motion(gear).limiterMps;
+	}
+
+	carry(gear: number, fromMps: number, goal: Goal): Travel {
+		return this.table(gear).travel(fromMps, goal);
+	}
+
 	mostMps2(gear: number, fromMps: number): number {
 		const wheelTorqueNm = this.#shelf.peakTorqueNm * this.train.efficiency[gear - 1]! * this.train.overall[gear - 1]!;
 		return mostMps2(this.vehicle, this.forces, wheelTorqueNm, fromMps);
 	}
 
-	/** The shift from a gear to the next. */
 	shift(gear: number): PlannedShift {
 		this.#shifts[gear] ??= this.#shelf.shift(this.motion(gear), this.motion(gear + 1), () => this.#planShift(gear));
 		return this.#shifts[gear];
@@ -68,7 +92,6 @@ export class RoadGears {
 		return this.#lights[gear];
 	}
 
-	/** The shift of a car that enters the gear at a speed: it shifts at once where the planned speed is already behind. */
 	shiftFrom(gear: number, enteredMps: number): PlannedShift {
 		const planned = this.shift(gear);
 		return enteredMps <= planned.speedMps ? planned : this.#shiftAt(gear, enteredMps);

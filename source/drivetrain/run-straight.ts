@@ -1,6 +1,6 @@
 /** The run on a straight: every rising sequence of gears, and the choice among them. */
 import {chosenOf, fastestOf} from './choose-sequence.ts';
-import {RoadGears} from './road-gears.ts';
+import {type Gears, RoadGears} from './road-gears.ts';
 import {atExit, brakingOf, type Carry, described, type Entry, type Finish, finished, shifted} from './sequence.ts';
 import {finishesTogether} from './shared-sequences.ts';
 import type {Course, GearTrain, StraightRun, Vehicle} from './straight.ts';
@@ -20,31 +20,41 @@ export function runStraightPlainly(vehicle: Vehicle, train: GearTrain, course: C
 	return run(gears, course, startGears => {
 		const carry: Carry = (gear, fromMps, goal) => travel(gears.motion(gear), fromMps, goal);
 		return startGears.flatMap(first =>
-			gearsFrom(first, course.highestGear).map(last => sequence(gears, course, first, last, carry)),
+			gearsFrom(first, course.highestGear).flatMap(last => sequence(gears, course, first, last, carry) ?? []),
 		);
 	});
 }
 
-function run(
-	gears: RoadGears,
-	course: Course,
-	finishesOf: (startGears: number[]) => (Finish | undefined)[],
-): StraightRun {
-	if (brakingDistanceM(course.exitMps, brakingOf(course)) > course.lengthM) return {kind: 'cannotBrake'};
-	const startGears = gearsFrom(course.lowestGear, course.highestGear).filter(gear => mayStart(gears, course, gear));
-	if (startGears.length === 0) return {kind: 'overLimit'};
-	const finishes = finishesOf(startGears).filter(finish => finish !== undefined);
-	if (finishes.length === 0) return {kind: 'stops'};
-	const [chosen, fastest] = [chosenOf(finishes, gears.vehicle.sameTimeS), fastestOf(finishes)];
+function run(gears: RoadGears, course: Course, finishesOf: (startGears: number[]) => Finish[]): StraightRun {
+	const outcome = outcomeOf(gears, course, finishesOf);
+	if (outcome.kind !== 'ran') return outcome;
+	const {chosen, fastest} = outcome;
 	const told = described(gears, course, chosen);
 	return {kind: 'ran', chosen: told, fastest: fastest === chosen ? told : described(gears, course, fastest)};
+}
+
+/** The same before it is told in full. */
+export type RunOutcome =
+	| {readonly kind: 'ran'; readonly chosen: Finish; readonly fastest: Finish}
+	| {readonly kind: Exclude<StraightRun['kind'], 'ran'>};
+
+/** How a straight is run with any kind of gears, by the sequences that `finishesOf` gives for the start gears. */
+export function outcomeOf(gears: Gears, course: Course, finishesOf: (startGears: number[]) => Finish[]): RunOutcome {
+	if (brakingDistanceM(course.exitMps, brakingOf(course)) > course.lengthM) return {kind: 'cannotBrake'};
+	const startGears: number[] = [];
+	for (let gear = course.lowestGear; gear <= course.highestGear; gear++)
+		if (mayStart(gears, course, gear)) startGears.push(gear);
+	if (startGears.length === 0) return {kind: 'overLimit'};
+	const finishes = finishesOf(startGears);
+	if (finishes.length === 0) return {kind: 'stops'};
+	return {kind: 'ran', chosen: chosenOf(finishes, gears.vehicle.sameTimeS), fastest: fastestOf(finishes)};
 }
 
 const gearsFrom = (lowest: number, highest: number) =>
 	Array.from({length: Math.max(0, highest - lowest + 1)}, (_, i) => lowest + i);
 
 /** No one starts above the limit, nor in a gear whose shift speed is already behind; a start gear that is given only heeds the limit. */
-export function mayStart(gears: RoadGears, course: Course, gear: number): boolean {
+export function mayStart(gears: Gears, course: Course, gear: number): boolean {
 	if (course.startGear !== undefined) return gear === course.startGear && course.exitMps <= gears.topMps(gear);
 	if (gear === course.highestGear) return course.exitMps <= gears.topMps(gear);
 	return course.exitMps <= gears.capMps(gear) && course.exitMps <= gears.shift(gear).speedMps;

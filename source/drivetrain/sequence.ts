@@ -1,7 +1,7 @@
 /** One rising sequence of gears on a straight: carried through shift by shift, and told in full. */
 import {resistanceN} from './forces.ts';
 import {fastestMps} from './gear-motion.ts';
-import type {RoadGears} from './road-gears.ts';
+import type {Gears, RoadGears} from './road-gears.ts';
 import type {Course, GearShift, SequenceRun} from './straight.ts';
 import {type Braking, brakingDistanceM, type Goal, type Travel} from './travel.ts';
 
@@ -38,7 +38,7 @@ export function brakingOf(course: Course): Braking | undefined {
 }
 
 /** From a place to the next gear's start; undefined where the shift is not complete before the end or the brakes. */
-export function shifted(gears: RoadGears, course: Course, gear: number, from: Place, carry: Carry): Entry | undefined {
+export function shifted(gears: Gears, course: Course, gear: number, from: Place, carry: Carry): Entry | undefined {
 	const {speedMps: shiftMps, coasted} = gears.shiftFrom(gear, from.speedMps);
 	const braking = brakingOf(course);
 	const atOnce = {distanceM: 0, timeS: 0, why: 'speed'};
@@ -53,7 +53,7 @@ export function shifted(gears: RoadGears, course: Course, gear: number, from: Pl
 
 /** From a place to the end in one gear; undefined where the car stops. */
 export function finished(
-	gears: RoadGears,
+	gears: Gears,
 	course: Course,
 	firstGear: number,
 	entered: readonly Entry[],
@@ -64,7 +64,7 @@ export function finished(
 	const braking = brakingOf(course);
 	const run = carry(gear, from.speedMps, {
 		distanceM: course.lengthM - from.distanceM,
-		toMps: gears.motion(gear).limiterMps,
+		toMps: gears.limiterMps(gear),
 		braking,
 	});
 	if (run.why === 'stopped') return undefined;
@@ -93,6 +93,10 @@ export function described(gears: RoadGears, course: Course, finish: Finish): Seq
 	const braking = brakingOf(course);
 	const top = highest(course, finish);
 	const topRpm = gears.motion(top.gear).rpmAt(top.speedMps);
+	const reachRpm =
+		finish.heldFrom === undefined
+			? topRpm
+			: gears.motion(lastGear).rpmAt(reachMps(gears, course, lastGear, finish.heldFrom));
 	return {
 		firstGear,
 		lastGear,
@@ -102,7 +106,7 @@ export function described(gears: RoadGears, course: Course, finish: Finish): Seq
 		topRpm,
 		finalMps: braking === undefined ? end.speedMps : Math.min(end.speedMps, braking.entryMps),
 		limiterM: finish.limiterM,
-		reachRpm: finish.heldFrom === undefined ? topRpm : reachRpm(gears, course, lastGear, finish.heldFrom),
+		reachRpm,
 		shifts: entered.map((_, i) => shiftTold(gears, course, finish, i)),
 		slows: end.speedMps < course.exitMps,
 		entryMissed: braking !== undefined && end.speedMps < braking.entryMps,
@@ -118,7 +122,11 @@ function brakingTimeS(speedMps: number, braking: Braking | undefined): number {
 	return braking === undefined ? 0 : Math.max(0, speedMps - braking.entryMps) / braking.brakingMps2;
 }
 
-function highest(course: Course, {firstGear, entered, fullThrottleEnd}: Finish) {
+/** The highest speed on the straight and the gear then in use. */
+export function highest(
+	course: Course,
+	{firstGear, entered, fullThrottleEnd}: Finish,
+): {readonly gear: number; readonly speedMps: number} {
 	let top = {gear: firstGear, speedMps: course.exitMps};
 	const raise = (gear: number, speedMps: number) => {
 		if (speedMps > top.speedMps) top = {gear, speedMps};
@@ -131,11 +139,10 @@ function highest(course: Course, {firstGear, entered, fullThrottleEnd}: Finish) 
 	return top;
 }
 
-/** The highest RPM in the gear had the limiter not cut, from where it was met. */
-function reachRpm(gears: RoadGears, course: Course, gear: number, heldFrom: Place): number {
+/** The highest speed in the gear had the limiter not cut, from where it was met. */
+export function reachMps(gears: Gears, course: Course, gear: number, heldFrom: Place): number {
 	const goal = {distanceM: course.lengthM - heldFrom.distanceM, toMps: fastestMps, braking: brakingOf(course)};
-	const {speedMps} = gears.table(gear).travel(heldFrom.speedMps, goal);
-	return gears.motion(gear).rpmAt(Math.max(heldFrom.speedMps, speedMps));
+	return Math.max(heldFrom.speedMps, gears.carry(gear, heldFrom.speedMps, goal).speedMps);
 }
 
 function shiftTold(

@@ -1,6 +1,6 @@
 /** Every sequence that can be driven, at a fraction of the work: shared ways, kept integrals, and none that cannot matter. */
 import {leastTimeS} from './least-time.ts';
-import type {RoadGears} from './road-gears.ts';
+import type {Gears} from './road-gears.ts';
 import {atExit, brakingOf, type Carry, type Entry, type Finish, finished, type Place, shifted} from './sequence.ts';
 import type {Course} from './straight.ts';
 import {brakingDistanceM} from './travel.ts';
@@ -12,7 +12,7 @@ type Reference = {readonly from: Place; readonly finish: Finish};
  * The finishes from each start gear. Sequences from the same gear go on from one another; one is left out, before its last
  * gear is integrated, where a bound shows that it loses more than `sameTimeS` to another.
  */
-export function finishesTogether(gears: RoadGears, course: Course, startGears: readonly number[]): Finish[] {
+export function finishesTogether(gears: Gears, course: Course, startGears: readonly number[]): Finish[] {
 	const shared = new SharedSequences(gears, course);
 	for (const first of startGears) shared.addFrom(first);
 	return shared.finishes;
@@ -20,13 +20,13 @@ export function finishesTogether(gears: RoadGears, course: Course, startGears: r
 
 class SharedSequences {
 	readonly finishes: Finish[] = [];
-	readonly #gears: RoadGears;
+	readonly #gears: Gears;
 	readonly #course: Course;
 	readonly #references: (Reference | undefined)[] = [];
 	/** Whoever takes longer cannot be chosen. */
 	#boundS = Number.POSITIVE_INFINITY;
 
-	constructor(gears: RoadGears, course: Course) {
+	constructor(gears: Gears, course: Course) {
 		this.#gears = gears;
 		this.#course = course;
 	}
@@ -54,7 +54,7 @@ class SharedSequences {
 		return leastTimeS(lengthM, exitMps, most);
 	}
 
-	readonly #carry: Carry = (gear, fromMps, goal) => this.#gears.table(gear).travel(fromMps, goal);
+	readonly #carry: Carry = (gear, fromMps, goal) => this.#gears.carry(gear, fromMps, goal);
 
 	#finish(first: number, entered: readonly Entry[], from: Place): void {
 		const finish = finished(this.#gears, this.#course, first, entered, this.#carry);

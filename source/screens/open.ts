@@ -21,12 +21,14 @@ export type Opening = {
 	readonly notice: string | undefined;
 };
 
-export async function openScreen(opening: Opening): Promise<void> {
-	await (opening.reader ? openForReader(opening) : openOnScreen(opening));
+/** The documents as they stood when the screen was left. */
+export async function openScreen(opening: Opening): Promise<Documents> {
+	const live = await (opening.reader ? openForReader(opening) : openOnScreen(opening));
+	return live.state().session.history.present;
 }
 
 /** Nothing is drawn at a place: Ink writes text, and Ctrl+Z and signals do what they do to every program. */
-async function openForReader(opening: Opening): Promise<void> {
+async function openForReader(opening: Opening): Promise<LiveSession> {
 	let unmount = () => {};
 	const outside = {leave: () => unmount(), suspend() {}, redraw() {}};
 	const live = new LiveSession(sessionOf(opening), opening.catalog, opening.keeper, outside, clock);
@@ -34,9 +36,10 @@ async function openForReader(opening: Opening): Promise<void> {
 	const ink = readAloud(live);
 	unmount = ink.unmount;
 	await ink.left;
+	return live;
 }
 
-async function openOnScreen(opening: Opening): Promise<void> {
+async function openOnScreen(opening: Opening): Promise<LiveSession> {
 	const {keeper, theme} = opening;
 	const screen = new Screen(process.stdout);
 	let unmount = () => {};
@@ -70,6 +73,7 @@ async function openOnScreen(opening: Opening): Promise<void> {
 		terminal.crash(error);
 	}
 	terminal.giveBack();
+	return live;
 }
 
 function sessionOf({documents, units, notice, keeper}: Opening) {

@@ -5,6 +5,8 @@ import {join} from 'node:path';
 export type Preferences = {
 	/** Name of the car that is taken where none is named. */
 	car?: string;
+	/** Name of the track that the screen was left at. */
+	track?: string;
 	/** By the name of the car: how the columns of its logs were read last. What is in it, the reader of logs knows. */
 	logColumns?: Readonly<Record<string, LogColumns>>;
 };
@@ -46,12 +48,19 @@ export const readPreferences = (home: string): PreferencesRead => {
 	}
 	if (typeof content !== 'object' || content === null || Array.isArray(content))
 		return broken('the preferences are not an object');
-	const {version, car, logColumns} = content as {version?: unknown; car?: unknown; logColumns?: unknown};
+	const {version, car, track, logColumns} = content as Partial<Record<keyof Preferences | 'version', unknown>>;
 	if (version !== formatVersion)
 		return broken(`the preferences have version ${JSON.stringify(version)}, expected ${formatVersion}`);
 	if (car !== undefined && (typeof car !== 'string' || car === '')) return broken('the preferred car is not a name');
 	const columns = understood(logColumns);
-	return {ok: true, value: {...(car !== undefined && {car}), ...(columns !== undefined && {logColumns: columns})}};
+	return {
+		ok: true,
+		value: {
+			...(car !== undefined && {car}),
+			...(typeof track === 'string' && {track}),
+			...(columns !== undefined && {logColumns: columns}),
+		},
+	};
 };
 
 /** What a person has made of it by hand is passed over where it is not of this shape: it is only a convenience. */
@@ -73,6 +82,10 @@ const isColumn = (value: unknown): boolean =>
 /** Keeps the preferred car, or forgets it. Writes nothing over a file that cannot be read. */
 export const preferCar = (home: string, car: string | undefined): Promise<PreferencesWritten> =>
 	change(home, ({car: before, ...rest}) => (before === car ? undefined : {...rest, ...(car !== undefined && {car})}));
+
+/** Keeps at which track the screen was left. */
+export const rememberTrack = (home: string, track: string): Promise<PreferencesWritten> =>
+	change(home, before => (before.track === track ? undefined : {...before, track}));
 
 /** Keeps how the columns of a car's logs were read. */
 export const rememberColumns = (home: string, car: string, columns: LogColumns): Promise<PreferencesWritten> =>

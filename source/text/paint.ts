@@ -23,7 +23,7 @@ const paints = (color: boolean): Record<Tone, Paint> => {
 /** Signs that have an ASCII stand-in of the same width. */
 const standIns: Readonly<Record<string, string>> = {
 	'·': '-',
-	'±': '+',
+	'±': '~',
 	'…': '~',
 	'°': ' ',
 	'³': '3',

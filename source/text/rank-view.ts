@@ -1,5 +1,6 @@
 /** The ranking as a person reads it: one line a row, the reasons, the remarks. */
 import {checkNames} from '../planning/check-names.ts';
+import {rowName} from '../planning/rank-rack.ts';
 import type {Check, Ranking, Row} from '../planning/results.ts';
 import {type Block, cell, gap, type Making, tableOf, text} from './blocks.ts';
 import {closingView, type Heading, headingView, verdictCell} from './heading-view.ts';
@@ -12,9 +13,11 @@ export type RankAnswer = {
 	top: number;
 	/** The one situation asked for. */
 	situation?: string | undefined;
+	/** The chance of passing the limit, by the name of the row; only where a risk was asked for. */
+	chances?: ReadonlyMap<string, string> | undefined;
 };
 
-type Placed = {place: number; row: Row; bandLowRpm: number};
+type Placed = {place: number; row: Row; bandLowRpm: number; chance: string | undefined};
 
 const checkOf = (row: Row, name: Check['check']): Check | undefined => row.checks.find(check => check.check === name);
 
@@ -70,14 +73,28 @@ const causesColumn: Making<Placed> = {
 	cell: ({row}) => cell(verdictCauses(row), 'muted'),
 };
 
+const chanceColumn: Making<Placed> = {
+	head: 'over limit',
+	align: 'right',
+	keep: 0,
+	cell: ({chance}) => cell(chance ?? absent),
+};
+
 /** The causes have a column where there is one to tell. */
-const columnsFor = (shown: readonly Placed[]): readonly Making<Placed>[] =>
-	shown.some(({row}) => verdictCauses(row) !== '') ? [...columns, causesColumn] : columns;
+const columnsFor = (shown: readonly Placed[]): readonly Making<Placed>[] => {
+	const told = shown.some(({row}) => verdictCauses(row) !== '') ? [...columns, causesColumn] : columns;
+	return shown.some(({chance}) => chance !== undefined) ? [...told.slice(0, 4), chanceColumn, ...told.slice(4)] : told;
+};
 
 /** The first rows, and the installed one wherever it stands. */
-const shownRows = ({ranking, top}: RankAnswer): Placed[] =>
+const shownRows = ({ranking, top, chances}: RankAnswer): Placed[] =>
 	ranking.rows
-		.map((row, index) => ({place: index + 1, row, bandLowRpm: ranking.setting.bandLowRpm}))
+		.map((row, index) => ({
+			place: index + 1,
+			row,
+			bandLowRpm: ranking.setting.bandLowRpm,
+			chance: chances?.get(rowName(row)),
+		}))
 		.filter(({place, row}) => place <= top || row.installed);
 
 const reasonsView = (shown: readonly Placed[]): Block[] => {

@@ -35,6 +35,16 @@ export const budgets = {
 		bound: 1.5,
 		unit: '×',
 	},
+	odds: {
+		what: 'Odds of the rows that matter, 512 draws, against a plain loop over rankings of them',
+		kind: 'most',
+		bound: 0.6,
+		unit: '×',
+	},
+	// At most 2 s where Node itself takes 45 ms to start.
+	oddsTime: {what: 'Odds of the rows that matter, 512 draws, against `node -e 1`', kind: 'most', bound: 45, unit: '×'},
+	oddsFirst: {what: 'Odds: the first answer, against `node -e 1`', kind: 'most', bound: 1.25, unit: '×'},
+	oddsSlice: {what: 'Odds: the longest that a key waits, against `node -e 1`', kind: 'most', bound: 1.25, unit: '×'},
 	rankProcess: {what: '`droprack rank` as a process, against `node -e 1`', kind: 'most', bound: 3, unit: '×'},
 	tracksProcess: {what: '`droprack tracks` as a process, against `node -e 1`', kind: 'most', bound: 1.5, unit: '×'},
 	rankMemory: {what: 'Peak memory of `droprack rank`', kind: 'most', bound: 80, unit: 'MB'},

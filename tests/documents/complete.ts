@@ -5,6 +5,14 @@ const air = {temperature: '75 degF', altimeter: '29.9 inHg', elevation: '650 ft'
 const wind = {speed: '8 mph', from: '270 deg'};
 const rules = {rpmLimit: 8900, gearboxes: ['A'], pairs: ['33/38']};
 
+const learned = (field: string, value: string) => ({
+	field,
+	value,
+	before: '1.05',
+	from: 'practice, 41 laps',
+	date: '2026-05-30',
+});
+
 export const completeTrack = () =>
 	trackDocument({
 		$schema: './track.json',
@@ -54,11 +62,13 @@ export const completeTrack = () =>
 		rules,
 		car: {
 			tires: {left: '86.1 in', right: '86.3 in', growth: '0.8 %', slip: '1.5 %', steadySlip: '0.2 %'},
-			grip: 1.2,
+			grip: '1.2 ± 0.05',
+			power: '98.2 % ± 0.5 %',
 			mass: '3640 lb',
-			dragArea: '1 m^2',
+			dragArea: '1 m^2 ± 0.02 m^2',
 			downforceArea: '1.5 m^2',
 		},
+		learned: [learned('car.dragArea', '1 m^2 ± 0.02 m^2')],
 	});
 
 export const completeCar = () =>
@@ -80,6 +90,7 @@ export const completeCar = () =>
 				pullRpm: 4000,
 				bandShare: 0.9,
 				fuelConsumption: '0.28 kg/(kW h)',
+				power: '99 %',
 			}),
 		],
 		gearInventory: {
@@ -116,4 +127,5 @@ export const completeCar = () =>
 		},
 		installed: {pair: '38/33', gearbox: 'A'},
 		rules: {short: rules, intermediate: {}, superspeedway: {}, road: {}},
+		learned: [learned('tires.growth', '0.8 %')],
 	});

@@ -1,5 +1,5 @@
 /** The built program in a pseudo-terminal, its screen read back through a terminal emulator. */
-import {existsSync, readdirSync, readFileSync, writeFileSync} from 'node:fs';
+import {existsSync, readdirSync, readFileSync, rmSync, writeFileSync} from 'node:fs';
 import {join} from 'node:path';
 import {afterAll, afterEach, expect, test, vi} from 'vitest';
 import {demo} from '../../source/commands/shelf.ts';
@@ -45,6 +45,23 @@ test('another track in three keys', async () => {
 	await pty.waitFor('Choose a track');
 	pty.press('f\r');
 	await pty.waitFor(ranked);
+});
+
+test('the next start is at the track that was left', async () => {
+	const oval = readFileSync(join(program.place, 'tracks', `${demo.track}.json`), 'utf8');
+	const other = join(program.place, 'tracks', 'another.json');
+	writeFileSync(other, oval.replace(/"name": "[^"]+"/, '"name": "Another oval"'));
+	const environment = {DROPRACK_HOME: join(program.place, 'another home')};
+	const first = open({environment});
+	await first.waitFor(ranked);
+	expect(first.screen()).not.toContain('Another oval');
+	first.press('tanother\r');
+	await first.waitFor(/Another oval[\s\S]*▸ +1 /);
+	first.press('q');
+	expect(await first.ended()).toMatchObject({exitCode: 0});
+	const second = open({environment});
+	await second.waitFor(/Another oval[\s\S]*▸ +1 /);
+	rmSync(other);
 });
 
 test('the whole screen follows a resize, down to too small and up again, while something is typed', async () => {

@@ -2,7 +2,13 @@ import {existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync} from 'node
 import {tmpdir} from 'node:os';
 import {join} from 'node:path';
 import {afterEach, beforeEach, expect, test} from 'vitest';
-import {preferCar, preferencesFile, readPreferences, rememberColumns} from '../../source/store/preferences.ts';
+import {
+	preferCar,
+	preferencesFile,
+	readPreferences,
+	rememberColumns,
+	rememberTrack,
+} from '../../source/store/preferences.ts';
 
 let home = '';
 beforeEach(() => {
@@ -32,6 +38,14 @@ test('how the logs of a car are read is remembered beside it', async () => {
 	await rememberColumns(home, 'Second', {rpm: {header: 'n'}});
 	const {value} = readPreferences(home) as {value: {logColumns: object}};
 	expect(Object.keys(value.logColumns)).toEqual(['First', 'Second']);
+});
+
+test('the track that the screen was left at is remembered beside it, and passed over where it is no name', async () => {
+	await preferCar(home, 'First');
+	expect(await rememberTrack(home, 'oval')).toEqual({ok: true});
+	expect(readPreferences(home)).toEqual({ok: true, value: {car: 'First', track: 'oval'}});
+	writeFileSync(preferencesFile(home), '{"version": 1, "track": 3}');
+	expect(readPreferences(home)).toEqual({ok: true, value: {}});
 });
 
 test('a log that needed nothing to be asked leaves no file', async () => {

@@ -40,6 +40,14 @@ export const everywhereKeys = [
 	{scope: 'everywhere', keys: ['t'], does: 'choose', words: 'choose a track or a car', short: 'track', rank: 4},
 	{scope: 'everywhere', keys: ['g'], does: 'pictures', words: 'look at pictures', short: 'pictures', rank: 4},
 	{scope: 'everywhere', keys: ['f'], does: 'life', words: 'engine life and fuel of this row', short: 'life', rank: 6},
+	{
+		scope: 'everywhere',
+		keys: ['v'],
+		does: 'odds',
+		words: 'chances of every row; what to measure; one tooth',
+		short: 'odds',
+		rank: 4,
+	},
 	{scope: 'everywhere', keys: ['w'], does: 'why', words: 'see why'},
 	{scope: 'everywhere', keys: ['r', 'escape'], does: 'ranking', words: 'the ranking; Esc also stops ranking'},
 	{

@@ -7,6 +7,7 @@ import {formKeys} from './form-keys.ts';
 import {keepingKeys} from './keeping-keys.ts';
 import {lifeKeys} from './life-keys.ts';
 import {lookingKeys} from './looking-keys.ts';
+import {oddsKeys} from './odds-keys.ts';
 import {practiceKeys} from './practice-keys.ts';
 import type {Scope} from './scopes.ts';
 import {sessionKeys} from './session-keys.ts';
@@ -15,6 +16,7 @@ import {sharingKeys} from './sharing-keys.ts';
 export const bindings = [
 	...lookingKeys,
 	...lifeKeys,
+	...oddsKeys,
 	...formKeys,
 	...sharingKeys,
 	...keepingKeys,

@@ -48,6 +48,7 @@ export type Action =
 	| {readonly do: 'paste curve'; readonly text: string}
 	| {readonly do: 'move choice'; readonly by: number}
 	| {readonly do: 'accept margin'}
+	| {readonly do: 'accept risk'}
 	| {readonly do: 'show item'; readonly item: Item}
 	| {readonly do: 'scroll'; readonly by: number}
 	| {readonly do: 'note'; readonly text: string}

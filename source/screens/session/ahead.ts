@@ -1,5 +1,6 @@
 /** What the tracks ahead ask for, worked out in slices while keys are answered. Loaded only where it is looked at. */
 
+import type {JsonObject} from '../../documents/json.ts';
 import type {Car} from '../../drivetrain/car.ts';
 import type {Track} from '../../drivetrain/track.ts';
 import {gearboxSteps} from '../../loading/choose-gearbox.ts';
@@ -13,7 +14,6 @@ import {type AheadPlace, aheadIn, isAhead} from './ahead-place.ts';
 import type {Choice} from './catalog.ts';
 import {current} from './documents.ts';
 import {readCarOf, readTrackOf} from './forms.ts';
-import type {JsonObject} from './json.ts';
 import type {Clock} from './ranker.ts';
 import type {Session} from './session.ts';
 

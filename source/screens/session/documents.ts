@@ -1,5 +1,5 @@
 /** The documents of a session: those that were opened, and which track and car are looked at. */
-import type {JsonObject} from './json.ts';
+import {type JsonObject, sameJson} from '../../documents/json.ts';
 
 export type Kind = 'track' | 'car';
 
@@ -59,7 +59,7 @@ export function lookAt(documents: Documents, document: OpenDocument): Documents 
 }
 
 export const isChanged = ({json, saved, notes, savedNotes}: OpenDocument): boolean =>
-	json !== saved || notes !== savedNotes;
+	!sameJson(json, saved) || notes !== savedNotes;
 
 /** Documents with changes that are not saved. */
 export const unsaved = (documents: Documents): OpenDocument[] => Object.values(documents.open).filter(isChanged);

@@ -1,5 +1,5 @@
 /** Entries of the lists in a document: straights, situations, gearbox sets, engines, pairs, curve points. */
-import type {Section} from './form.ts';
+
 import {
 	isList,
 	isObject,
@@ -11,7 +11,8 @@ import {
 	without,
 	withSwapped,
 	withValue,
-} from './json.ts';
+} from '../../documents/json.ts';
+import type {Section} from './form.ts';
 
 /** The list that a section belongs to, and the entry in it that the cursor is on. */
 export type EntryPlace = {readonly list: Path; readonly index: number};

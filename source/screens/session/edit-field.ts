@@ -1,11 +1,11 @@
 /** Changes of one field: each gives the new content, or says why there is none. */
 
+import {type JsonObject, valueAt, without, withValue} from '../../documents/json.ts';
 import {pathText} from '../../documents/problem.ts';
 import type {UnitSystem} from '../../text/units.ts';
 import type {Kind} from './documents.ts';
 import type {Field} from './form.ts';
 import {problemsOf} from './forms.ts';
-import {type JsonObject, valueAt, without, withValue} from './json.ts';
 import {understand} from './understand.ts';
 
 export type Change = {readonly ok: true; readonly json: JsonObject} | {readonly ok: false; readonly words: string};

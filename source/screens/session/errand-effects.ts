@@ -1,11 +1,12 @@
 /** What the session has done for it outside: each asks an errand, and tells what came of it. */
+
+import {isObject} from '../../documents/json.ts';
 import type {Errands, Writing} from '../errands.ts';
 import type {Action} from './action.ts';
 import {current, type OpenDocument, titleOf} from './documents.ts';
 import type {ErrandEffect} from './effect.ts';
 import {type Handed, items} from './hand-over.ts';
 import type {Scene} from './intend.ts';
-import {isObject} from './json.ts';
 import type {PracticeScene} from './live-practice.ts';
 import {cursorIn} from './rows.ts';
 import type {Session} from './session.ts';

@@ -1,6 +1,7 @@
 /** A document as a form: sections of fields, made from its JSON Schema. A field added to the documents is here at once. */
+
+import {isList, isObject, type Json, type JsonObject, type Path, valueAt} from '../../documents/json.ts';
 import {type FieldKind, fieldKind, type Schema} from './field-kind.ts';
-import {isList, isObject, type Json, type JsonObject, type Path, valueAt} from './json.ts';
 
 export type Field = {
 	readonly path: Path;

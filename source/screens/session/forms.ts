@@ -1,4 +1,6 @@
 /** The form of a document, and what its reader says of it; each made once a content. */
+
+import type {JsonObject} from '../../documents/json.ts';
 import {checkCar, checkTrack, type Problem, type Reading} from '../../documents/read.ts';
 import {carSchema, trackSchema} from '../../documents/schema.ts';
 import type {Car} from '../../drivetrain/car.ts';
@@ -6,7 +8,6 @@ import type {Track} from '../../drivetrain/track.ts';
 import type {Kind} from './documents.ts';
 import type {Schema} from './field-kind.ts';
 import {type Field, type Form, formOf, type Section} from './form.ts';
-import type {JsonObject} from './json.ts';
 import type {FieldPlace} from './session.ts';
 
 /** What was made of the latest documents: the history holds every earlier state, and what is made of one is larger than it. */

@@ -1,5 +1,6 @@
 /** What can be handed over of one row, made when it is looked at. Loaded only then: a start does not need it. */
 
+import type {JsonObject} from '../../documents/json.ts';
 import {type Ranked, rankSteps} from '../../planning/rank-rack.ts';
 import {pointsOf} from '../../planning/rpm-table.ts';
 import {finish} from '../../planning/run-rack.ts';
@@ -17,7 +18,6 @@ import {shortForm} from '../../sharing/short-form.ts';
 import {readBoth} from './answer.ts';
 import {current, type Documents} from './documents.ts';
 import type {Handed, HandOver, Item} from './hand-over.ts';
-import type {JsonObject} from './json.ts';
 import {rowNamed} from './rows.ts';
 import type {Session} from './session.ts';
 

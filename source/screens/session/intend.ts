@@ -14,6 +14,7 @@ import {entryFor, next} from './intents.ts';
 import {practiceOf} from './practice-of.ts';
 import {marginEntry} from './reduce.ts';
 import {practicePlace} from './reduce-practice.ts';
+import {riskEntry} from './reduce-risk.ts';
 import {takeInPlace} from './reduce-take-in.ts';
 import {cursorIn, orders, type Placed, stepped} from './rows.ts';
 import {type Place, pictures, type Session} from './session.ts';
@@ -43,7 +44,7 @@ export function scopesOf({place, over}: Session): Scope[] {
 
 /** Whether what a person types is text here. */
 export function takesText({place, over}: Session): boolean {
-	if (over) return over.is === 'margin' || over.is === 'entry';
+	if (over) return over.is === 'margin' || over.is === 'risk' || over.is === 'entry';
 	if (place.at === 'edit') return place.editing !== undefined;
 	if (place.at === 'history') return place.adding;
 	return place.at === 'choose' || (place.at === 'take in' && place.incoming === undefined);
@@ -91,6 +92,10 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 		}
 		case 'least margin':
 			return {do: 'cover', over: marginEntry(session)};
+		case 'risk':
+			return {do: 'cover', over: riskEntry(session)};
+		case 'accept risk':
+			return {do: 'accept risk'};
 		case 'accept margin':
 			return {do: 'accept margin'};
 		case 'next situation':
@@ -101,6 +106,8 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 			return {do: 'go', place: {at: 'why', scroll: 0}};
 		case 'life':
 			return {do: 'go', place: {at: 'life', scroll: 0}};
+		case 'odds':
+			return {do: 'go', place: {at: 'odds', scroll: 0}};
 		case 'ranking':
 			return place.at === 'ranking' ? (scene.isWorking ? 'stop' : undefined) : {do: 'go', place: {at: 'ranking'}};
 		case 'pictures':

@@ -1,8 +1,9 @@
 /** The practice of a running session: what it teaches, and what the ranking would be with it, worked out beside the keys. */
+
+import type {JsonObject} from '../../documents/json.ts';
 import type {Ranked} from '../../planning/rank-rack.ts';
 import {type Effect, effectOf} from '../../practice/learn/effect.ts';
 import {current, type Documents} from './documents.ts';
-import type {JsonObject} from './json.ts';
 import {LogJob} from './log-job.ts';
 import type {Practice} from './practice.ts';
 import {practiceOf, straightNames} from './practice-of.ts';

@@ -1,4 +1,5 @@
 /** A session that runs: its state, the answer that follows from it, and who is told when either changes. */
+import type {OneTooth} from '../../odds/one-tooth.ts';
 import {type Ranked, rowName} from '../../planning/rank-rack.ts';
 import type {Keeper} from '../keeper.ts';
 import {type ActionName, actionFor} from '../keys/key-table.ts';
@@ -16,6 +17,8 @@ import {type Handed, rowToHandOver} from './hand-over.ts';
 import {intend, type Scene, scopesOf, takesText} from './intend.ts';
 import {seenEntry} from './intend-practice.ts';
 import {LivePractice, type PracticeScene} from './live-practice.ts';
+import {Odder} from './odder.ts';
+import type {OddsShown, OddsSoFar} from './odds-asked.ts';
 import {practiceEffects} from './practice-effects.ts';
 import {type Clock, Ranker} from './ranker.ts';
 import {reduce} from './reduce.ts';
@@ -35,6 +38,7 @@ export type State = {
 	readonly answer: Answer;
 	readonly scene: Scene & {
 		readonly handed: Handed | undefined;
+		readonly odds: OddsShown | undefined;
 		readonly practice: PracticeScene | undefined;
 		readonly ahead: AheadState | undefined;
 	};
@@ -43,6 +47,7 @@ export type State = {
 export class LiveSession {
 	#state: State;
 	readonly #ranker: Ranker;
+	readonly #odder: Odder;
 	readonly #catalog: readonly OpenDocument[];
 	readonly #keeper: Keeper;
 	readonly #outside: Outside;
@@ -57,7 +62,7 @@ export class LiveSession {
 	#ahead: import('./ahead.ts').Ahead | undefined;
 	#aheadLoad: Promise<void> | undefined;
 	readonly #clock: Clock;
-	#placed: {readonly ranked: Ranked; readonly rows: Placed[]} | undefined;
+	#placed: {readonly ranked: Ranked; readonly odds: OddsShown['odds']; readonly rows: Placed[]} | undefined;
 	#shown:
 		| {readonly all: readonly Placed[]; readonly order: Order; readonly filter: Filter; readonly rows: Placed[]}
 		| undefined;
@@ -68,6 +73,7 @@ export class LiveSession {
 		this.#outside = outside;
 		this.#clock = clock;
 		this.#ranker = new Ranker(clock, () => this.#settle(this.#state.session));
+		this.#odder = new Odder(clock, () => this.#settle(this.#state.session));
 		this.#practice = new LivePractice(clock, () => this.#settle(this.#state.session));
 		this.#ranker.start(inputsOf(session));
 		this.#state = this.#stateOf(session);
@@ -196,7 +202,8 @@ export class LiveSession {
 	#stateOf(session: Session): State {
 		const {answer} = this.#ranker;
 		const ranked = rankedIn(answer);
-		const all = ranked === undefined ? firstRow(answer) : this.#placedIn(ranked);
+		const odds = answer.is === 'ready' ? this.#oddsOf(session, answer.ranked) : undefined;
+		const all = ranked === undefined ? firstRow(answer) : this.#placedIn(ranked, session.risk, odds);
 		const documents = session.history.present;
 		const track = readTrackOf(documents.open[documents.track]!.json);
 		const scene: Scene = {
@@ -212,7 +219,9 @@ export class LiveSession {
 		const practice = this.#practice.scene(session, rankedIn(answer), answer.is === 'ready');
 		const handed = answer.is === 'ready' ? this.#handed(session, scene, answer.ranked) : undefined;
 		const ahead = this.#aheadOf(session, scene.choices);
-		return {session, answer, scene: {...scene, practiceLines: practice?.lines ?? 0, handed, practice, ahead}};
+		const oddsShown = odds && {...odds, tooth: this.#toothOf(scene.shown, session)};
+		const practiceLines = practice?.lines ?? 0;
+		return {session, answer, scene: {...scene, practiceLines, handed, odds: oddsShown, practice, ahead}};
 	}
 
 	#choicesIn({place, history}: Session): Choice[] {
@@ -249,9 +258,26 @@ export class LiveSession {
 		return this.#shown.rows;
 	}
 
-	#placedIn(ranked: Ranked): Placed[] {
-		if (this.#placed?.ranked !== ranked) this.#placed = {ranked, rows: placedRows(ranked.ranking.rows)};
+	/** In the order of the risk once its odds are complete: rows do not move while they are refined. */
+	#placedIn(ranked: Ranked, risk: number | undefined, shown: OddsSoFar | undefined): Placed[] {
+		const odds = risk !== undefined && shown?.odds?.isComplete === true ? shown.odds : undefined;
+		if (this.#placed?.ranked !== ranked || this.#placed.odds !== odds) {
+			const byRisk = odds && this.#odder.work?.placedByRisk(ranked, odds, risk!);
+			this.#placed = {ranked, odds, rows: byRisk ?? placedRows(ranked.ranking.rows)};
+		}
 		return this.#placed.rows;
+	}
+
+	/** Where they are looked at, or order the ranking. */
+	#oddsOf({history, situation, risk, place}: Session, ranked: Ranked): OddsSoFar | undefined {
+		if (place.at !== 'odds' && risk === undefined) return undefined;
+		return this.#odder.soFar({documents: history.present, situation, risk, ranked});
+	}
+
+	/** Of the row under the cursor, where it is looked at. */
+	#toothOf(shown: readonly Placed[], {place, row}: Session): OneTooth | undefined {
+		const here = shown[cursorIn(shown, row)];
+		return place.at === 'odds' && here !== undefined ? this.#odder.tooth(here.name) : undefined;
 	}
 }
 

@@ -1,11 +1,12 @@
 /** What the practice has done for it outside: a log read, the history written. */
+
+import {isObject} from '../../documents/json.ts';
 import {type AskedColumns, channelNames} from '../../logs/channels.ts';
 import type {Sought} from '../../practice/find/steps.ts';
 import {learnedEntry, takenBackEntry} from '../../text/learned-entry.ts';
 import {current, titleOf} from './documents.ts';
 import type {ErrandEffect} from './effect.ts';
 import type {Errandful} from './errand-effects.ts';
-import {isObject} from './json.ts';
 import type {LogJob} from './log-job.ts';
 import {straightNames} from './practice-of.ts';
 import {type Line, linesOf} from './taught.ts';

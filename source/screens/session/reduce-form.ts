@@ -1,4 +1,6 @@
 /** What may happen at the form: moving in it, typing into a field, and changes of the document. */
+
+import type {JsonObject, Path} from '../../documents/json.ts';
 import {pathText} from '../../documents/problem.ts';
 import {editLine} from '../parts/edit-line.ts';
 import type {Action} from './action.ts';
@@ -7,7 +9,6 @@ import {curveFrom, entryAt, isCurve, withCopy, withCurve, withMoved, withoutEntr
 import {asShipped, type Change, cleared, withTyped} from './edit-field.ts';
 import {fieldAt, formFor, inside, sectionAt} from './forms.ts';
 import {recorded} from './history.ts';
-import type {JsonObject, Path} from './json.ts';
 import type {Place, Session} from './session.ts';
 import {valueText} from './understand.ts';
 

@@ -1,10 +1,11 @@
 /** What may happen where a plan is taken in. */
+
+import type {JsonObject} from '../../documents/json.ts';
 import {edited, editLine} from '../parts/edit-line.ts';
 import type {KeyEvent} from '../terminal/key-event.ts';
 import type {Action} from './action.ts';
 import {lookAt, newId, type OpenDocument, withDocument} from './documents.ts';
 import {recorded} from './history.ts';
-import type {JsonObject} from './json.ts';
 import type {Place, Session} from './session.ts';
 import type {Incoming} from './take-in.ts';
 

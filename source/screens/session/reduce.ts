@@ -1,14 +1,16 @@
 /** The session after an action: the one place where it changes. Pure. */
+
+import {withValue} from '../../documents/json.ts';
 import {quantityOf} from '../../documents/quantity.ts';
 import {edited, editLine} from '../parts/edit-line.ts';
 import type {Action} from './action.ts';
 import {aheadIn} from './ahead-place.ts';
 import {current, type Documents, lookAt, newDocument, type OpenDocument, withJson, withNotes} from './documents.ts';
 import {amended, type History, recorded, redone, undone} from './history.ts';
-import {withValue} from './json.ts';
 import {reduceForm} from './reduce-form.ts';
 import {reduceHistory, typedInDraft} from './reduce-history.ts';
 import {reducePractice} from './reduce-practice.ts';
+import {acceptedRisk} from './reduce-risk.ts';
 import {reduceTakeIn, typedInTakeIn} from './reduce-take-in.ts';
 import {reduceWhole} from './reduce-whole.ts';
 import type {Session} from './session.ts';
@@ -53,6 +55,8 @@ export function reduce(before: Session, action: Action): Session {
 			return timeTravelled(session, redone(session.history), 'Nothing to redo.');
 		case 'type':
 			return typed(session, action);
+		case 'accept risk':
+			return acceptedRisk(session);
 		case 'accept margin':
 			return acceptedMargin(session);
 		case 'move choice':
@@ -157,7 +161,7 @@ function timeTravelled(session: Session, history: History<Documents> | undefined
 
 function typed(session: Session, {event}: Action & {do: 'type'}): Session {
 	const {place, over} = session;
-	if (over?.is === 'margin' || over?.is === 'entry') {
+	if (over?.is === 'margin' || over?.is === 'risk' || over?.is === 'entry') {
 		const line = edited(over.line, event);
 		return line === undefined ? session : {...session, over: {...over, line, wrong: undefined}};
 	}

@@ -1,6 +1,7 @@
 /** A session that was kept as JSON, read back. The file may have been changed by hand, or be of another program. */
+
+import {isObject, type Json, type JsonObject} from '../../documents/json.ts';
 import {type Documents, describesKind, type Kind, type OpenDocument} from './documents.ts';
-import {isObject, type Json, type JsonObject} from './json.ts';
 
 /** The documents of a kept session; undefined where what is there are none. */
 export function restored(kept: unknown): Documents | undefined {

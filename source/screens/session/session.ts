@@ -27,6 +27,7 @@ export type Place =
 	| {readonly at: 'ranking'}
 	| {readonly at: 'why'; readonly scroll: number}
 	| {readonly at: 'life'; readonly scroll: number}
+	| {readonly at: 'odds'; readonly scroll: number}
 	| {readonly at: 'pictures'; readonly picture: Picture; readonly straight: number}
 	| ({readonly at: 'edit'; readonly kind: Kind; readonly editing: Editing | undefined} & FieldPlace)
 	| {readonly at: 'choose'; readonly kind: Kind; readonly search: EditLine; readonly cursor: number}
@@ -56,6 +57,7 @@ export type Over =
 	/** An earlier session that ended without being saved. */
 	| {readonly is: 'recovery'; readonly documents: Documents}
 	| ({readonly is: 'margin'} & Editing)
+	| ({readonly is: 'risk'} & Editing)
 	| ({readonly is: 'entry'; readonly asks: Asked} & Editing)
 	/** A file of that name is there already. */
 	| {readonly is: 'overwriting'; readonly file: string}
@@ -78,6 +80,8 @@ export type Session = {
 	readonly filter: Filter;
 	/** Undefined: the worst over all. */
 	readonly situation: string | undefined;
+	/** The chance of passing the RPM limit that is accepted, a share of 1; undefined: the ranking goes by the numbers as they are. */
+	readonly risk: number | undefined;
 	/** Ids of the tracks that lie ahead; undefined: the one that is looked at. */
 	readonly ahead: readonly string[] | undefined;
 	/** An entry of the history that was begun. */
@@ -99,6 +103,7 @@ export const startSession = (documents: Documents, units: UnitSystem): Session =
 	order: 'place',
 	filter: noFilter,
 	situation: undefined,
+	risk: undefined,
 	ahead: undefined,
 	draft: undefined,
 	practice: undefined,

@@ -1,6 +1,7 @@
 /** What practice teaches about what is looked at. Loaded when the place is first looked at: a start does not need it. */
 
 import {withEdits} from '../../documents/edits.ts';
+import type {JsonObject} from '../../documents/json.ts';
 import type {Car} from '../../drivetrain/car.ts';
 import type {Track} from '../../drivetrain/track.ts';
 import type {LoggedRun} from '../../logs/logged-run.ts';
@@ -14,7 +15,6 @@ import {readSeen, type SeenReading} from '../../practice/learn/seen-text.ts';
 import {isUnclear} from '../../practice/learn/unclear.ts';
 import {current, type Documents, withJson} from './documents.ts';
 import {readCarOf, readTrackOf} from './forms.ts';
-import type {JsonObject} from './json.ts';
 import type {Practice, PracticeLog} from './practice.ts';
 import {practiceOf} from './practice-of.ts';
 import type {Session} from './session.ts';

@@ -1,11 +1,11 @@
 /** What was typed into a field: what it means and how that is told, or what is wrong with it. */
 
+import {isList, type Json} from '../../documents/json.ts';
 import {didYouMean} from '../../documents/nearest.ts';
 import {type Dimension, type Quantity, quantityOf} from '../../documents/quantity.ts';
 import {findUnit} from '../../documents/units.ts';
 import {fixed, type UnitSystem} from '../../text/units.ts';
 import type {FieldKind} from './field-kind.ts';
-import {isList, type Json} from './json.ts';
 
 export type Understanding =
 	| {

@@ -1,12 +1,12 @@
 /** What of the track or the car differs from what is saved of it and from what is shipped. */
 
+import type {JsonObject} from '../../documents/json.ts';
 import {compare} from '../../sharing/compare.ts';
 import {type Block, gap, text} from '../../text/blocks.ts';
 import {layOut} from '../../text/layout.ts';
 import {differenceTable} from '../../text/plan-view.ts';
 import type {Pieces} from '../parts/pieces.ts';
 import {type OpenDocument, titleOf} from '../session/documents.ts';
-import type {JsonObject} from '../session/json.ts';
 import {scrolled} from './scrolled.ts';
 
 export function changesView(document: OpenDocument, scroll: number, width: number, height: number): Pieces[] {

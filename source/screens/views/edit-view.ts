@@ -1,4 +1,6 @@
 /** The form: its sections on the left, the fields of one of them beside it, and below what the field takes and what was understood. */
+
+import {type JsonObject, valueAt} from '../../documents/json.ts';
 import type {UnitSystem} from '../../text/units.ts';
 import {displayWidth, wrap} from '../../text/width.ts';
 import {listWindow} from '../parts/list-window.ts';
@@ -7,7 +9,6 @@ import {current} from '../session/documents.ts';
 import {wrongAt} from '../session/edit-field.ts';
 import type {Field, Section} from '../session/form.ts';
 import {fieldAt, formFor, inside, problemsOf} from '../session/forms.ts';
-import {type JsonObject, valueAt} from '../session/json.ts';
 import type {Place, Session} from '../session/session.ts';
 import {inOtherUnits, understand, valueText} from '../session/understand.ts';
 import {caretPieces} from './caret.ts';

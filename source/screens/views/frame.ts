@@ -20,6 +20,7 @@ import {helpView} from './help-view.ts';
 import {keyLines} from './key-line.ts';
 import {lifeHalves, lifePlaceView} from './life-place-view.ts';
 import {noticeLines} from './notice-view.ts';
+import {oddsRows, oddsTold} from './odds-place-view.ts';
 import {pictureView} from './picture-view.ts';
 import {practiceView} from './practice-view.ts';
 import {type RankingTable, rankingTable} from './ranking-view.ts';
@@ -113,6 +114,7 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 		]);
 	if (session.place.at === 'why') return plain(whyLines(state, here, session.place.scroll, width, body));
 	if (session.place.at === 'life') return plain(lifeLines(state, here, session.place.scroll, width, body));
+	if (session.place.at === 'odds') return plain(oddsLines(state, cursor, session.place.scroll, width, body));
 	if (session.place.at === 'pictures') return plain(pictureLines(state, here, size, body));
 	return ranking(state, here, cursor, size, previousStart, {head, foot, body});
 }
@@ -198,6 +200,16 @@ function lifeLines({session, scene}: State, here: Placed, scroll: number, width:
 		scrolled(right, scroll, body),
 		'│',
 	);
+}
+
+function oddsLines({session, scene}: State, cursor: number, scroll: number, width: number, body: number): Pieces[] {
+	const given = {shown: scene.odds, rows: scene.shown, cursor, units: session.units};
+	if (width < wide) {
+		const rows = oddsRows(given, width, Math.floor(body / 2));
+		return [...rows, rule(width), ...scrolled(oddsTold(given, width), scroll, body - rows.length - 1)];
+	}
+	const half = Math.floor((width - 3) / 2);
+	return beside(oddsRows(given, half, body), half, scrolled(oddsTold(given, width - 3 - half), scroll, body), '│');
 }
 
 function pictureLines(state: State, here: Placed, {width, ascii}: Size, body: number): Pieces[] {

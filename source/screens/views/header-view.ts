@@ -2,6 +2,7 @@
 
 import {visible} from '../../documents/visible.ts';
 import type {Setting} from '../../planning/results.ts';
+import {percent} from '../../text/chances-view.ts';
 import {airWords} from '../../text/heading-view.ts';
 import {rpm, rpmDown, seconds, unitsOf} from '../../text/units.ts';
 import {type Piece, type Pieces, piece, spread} from '../parts/pieces.ts';
@@ -73,6 +74,7 @@ function stateLine(session: Session, answer: Answer, {shown, all}: Counts, width
 		...(filter.hideFailing ? ['FAIL hidden'] : []),
 		...(filter.gearbox === undefined ? [] : [`set ${filter.gearbox}`]),
 		...(filter.leastMarginRpm === undefined ? [] : [`margin ${filter.leastMarginRpm} or more`]),
+		...(session.risk === undefined ? [] : [`risk ${percent(session.risk)}`]),
 		...(comparison === undefined ? [] : [`against ${comparison}`]),
 		...(plan === undefined ? [] : [`plan ${plan}`]),
 	];

@@ -8,7 +8,8 @@ import {straightNames} from '../session/practice-of.ts';
 import type {Asked, Over, Session} from '../session/session.ts';
 import {caretPieces} from './caret.ts';
 
-const questions: Record<Exclude<Asked, 'seen'> | 'margin', string> = {
+const questions: Record<Exclude<Asked, 'seen'> | 'margin' | 'risk', string> = {
+	risk: 'Accepted chance of passing the RPM limit: ',
 	margin: 'Least margin to the limit, RPM: ',
 	file: 'Write it to the file: ',
 	notes: 'Notes for the plan: ',
@@ -22,6 +23,7 @@ const mostLines = 4;
 export function noticeLines(session: Session, width: number): Pieces[] {
 	const {over, notice} = session;
 	if (over?.is === 'margin') return entryLines(questions.margin, over.line, over.wrong, width);
+	if (over?.is === 'risk') return entryLines(questions.risk, over.line, over.wrong, width);
 	if (over?.is === 'entry') {
 		const question = over.asks === 'seen' ? seenQuestion(session) : questions[over.asks];
 		return entryLines(question, over.line, over.wrong, width);

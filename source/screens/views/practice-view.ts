@@ -146,13 +146,17 @@ function numberColumns(units: Units, practice: Practice, rows: readonly NumberRo
 const nothingYet =
 	'Type the highest RPM seen at the end of a straight: 8420, or 8420 gear 4 185 mph. f reads a logged run instead.';
 
+const nothingMatched =
+	'No straight of this track was found in the log: is it a run at another track? Tab shows why, under log.';
+
 function toldBlocks({lesson, wrong}: Taught): Block[] {
 	if (wrong !== undefined) return [text(wrong, 'fail')];
 	if (lesson === undefined) return [text(nothingYet, 'muted')];
 	const {findings, learning} = lesson;
 	const mounted =
 		findings && findings.mounted.verdict !== 'asInstalled' ? [text(mountedWords(findings), 'near', 2)] : [];
-	return [...mounted, ...fittedLines(learning).map(words => text(words, 'plain', 2))];
+	const unmatched = findings && learning.compared.length === 0 ? [text(nothingMatched, 'near', 2)] : [];
+	return [...mounted, ...unmatched, ...fittedLines(learning).map(words => text(words, 'plain', 2))];
 }
 
 /** In one line; the whole of it is told where the log is. */

@@ -1,9 +1,10 @@
 /** Keys pressed in a session that runs, in memory: whatever they are, there is a frame of the window's size. */
+
+import type {JsonObject} from '../../../source/documents/json.ts';
 import type {Keeper} from '../../../source/screens/keeper.ts';
 import {bindingsOf} from '../../../source/screens/keys/key-table.ts';
 import {painted} from '../../../source/screens/parts/theme.ts';
 import type {Documents} from '../../../source/screens/session/documents.ts';
-import type {JsonObject} from '../../../source/screens/session/json.ts';
 import {LiveSession} from '../../../source/screens/session/live.ts';
 import {startSession} from '../../../source/screens/session/session.ts';
 import {KeyDecoder} from '../../../source/screens/terminal/key-decoder.ts';
@@ -16,8 +17,11 @@ import {inJson} from '../mutate-json.ts';
 import type {Answer, Reader} from '../reader.ts';
 import {cars, tracks} from './documents.ts';
 // What the session loads when it is first needed: loaded here, so that no load outlives a text.
+import '../../../source/screens/session/ahead.ts';
 import '../../../source/screens/session/handing.ts';
 import '../../../source/screens/session/incoming.ts';
+import '../../../source/screens/session/odds-work.ts';
+import '../../../source/screens/session/teaching.ts';
 
 const [down, up, right, left, esc] = ['\x1B[B', '\x1B[A', '\x1B[C', '\x1B[D', '\x1B\n'];
 const sizes = [

@@ -1,6 +1,7 @@
 import {describe, expect, test} from 'vitest';
 import {huberFit, huberWeight} from '../../../source/practice/fit/huber.ts';
 import {median, medianLine, quantile, robustSd} from '../../../source/practice/fit/robust.ts';
+import {stackLoss} from './stack-loss.ts';
 
 // Huber 1964: w(u) = min(1, k/|u|), k = 1.345.
 test.each([
@@ -13,23 +14,12 @@ test.each([
 	expect(huberWeight(u)).toBeCloseTo(weight, 14);
 });
 
-describe('stack loss (Brownlee, 1965)', () => {
-	const air = [80, 80, 75, 62, 62, 62, 62, 62, 58, 58, 58, 58, 58, 58, 50, 50, 50, 50, 50, 56, 70];
-	const water = [27, 27, 25, 24, 22, 23, 24, 24, 23, 18, 18, 17, 18, 19, 18, 18, 19, 19, 20, 20, 20];
-	const acid = [89, 88, 90, 87, 87, 87, 93, 93, 87, 80, 89, 88, 82, 93, 89, 86, 72, 79, 80, 82, 91];
-	const loss = [42, 37, 37, 28, 18, 18, 19, 20, 15, 14, 14, 13, 11, 12, 8, 7, 8, 8, 9, 15, 15];
-	const columns = [air.map(() => 1), air, water, acid].map(column => Float64Array.from(column));
-
-	test("Huber's fit and its standard errors are those of the statistics packages", () => {
-		const fit = huberFit(columns, Float64Array.from(loss))!;
-		// From memory: documentation of statsmodels (RLM, HuberT), rounded; R's rlm of MASS prints the same to four digits.
-		const coefficients = [-41.0265, 0.82938, 0.92607, -0.12785];
-		const errors = [9.7919, 0.111, 0.30293, 0.12865];
-		for (const [j, value] of coefficients.entries()) {
-			expect(Math.abs(fit.coefficients[j]! / value - 1)).toBeLessThan(5e-4);
-			expect(Math.abs(Math.sqrt(fit.covariance[5 * j]!) / errors[j]! - 1)).toBeLessThan(3e-3);
-		}
-	});
+test("Huber's fit of the stack loss data and its standard errors are those of the statistics packages", () => {
+	const fit = huberFit(stackLoss.columns, stackLoss.y)!;
+	for (const [j, value] of stackLoss.coefficients.entries()) {
+		expect(Math.abs(fit.coefficients[j]! / value - 1)).toBeLessThan(5e-4);
+		expect(Math.abs(Math.sqrt(fit.covariance[5 * j]!) / stackLoss.standardErrors[j]! - 1)).toBeLessThan(3e-3);
+	}
 });
 
 test('one reading far off hardly moves the fit', () => {

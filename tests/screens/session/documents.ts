@@ -1,8 +1,8 @@
 /** The documents of the command tests as a session has them, and what is often done with it. */
 import {readFileSync} from 'node:fs';
+import type {JsonObject} from '../../../source/documents/json.ts';
 import type {Action} from '../../../source/screens/session/action.ts';
 import type {Documents, OpenDocument} from '../../../source/screens/session/documents.ts';
-import type {JsonObject} from '../../../source/screens/session/json.ts';
 import {reduce} from '../../../source/screens/session/reduce.ts';
 import {type Session, startSession} from '../../../source/screens/session/session.ts';
 

@@ -1,7 +1,7 @@
 import {expect, test} from 'vitest';
+import {type JsonObject, valueAt} from '../../../source/documents/json.ts';
 import type {Form} from '../../../source/screens/session/form.ts';
 import {fieldAt, formFor, inside} from '../../../source/screens/session/forms.ts';
-import {type JsonObject, valueAt} from '../../../source/screens/session/json.ts';
 import {car, fixture, oval} from './documents.ts';
 
 const titles = (form: Form) => form.map(({title}) => title);

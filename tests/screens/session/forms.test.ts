@@ -1,6 +1,6 @@
 import {expect, test} from 'vitest';
+import type {JsonObject} from '../../../source/documents/json.ts';
 import {readTrackOf} from '../../../source/screens/session/forms.ts';
-import type {JsonObject} from '../../../source/screens/session/json.ts';
 
 const tracks = Array.from({length: 6}, (_, i): JsonObject => ({kind: 'track', version: 1, name: `Track ${i}`}));
 

@@ -1,7 +1,7 @@
 import {expect, test} from 'vitest';
+import {valueAt} from '../../../source/documents/json.ts';
 import type {Keeper} from '../../../source/screens/keeper.ts';
 import {current, type Documents, type OpenDocument} from '../../../source/screens/session/documents.ts';
-import {valueAt} from '../../../source/screens/session/json.ts';
 import {LiveSession} from '../../../source/screens/session/live.ts';
 import type {Session} from '../../../source/screens/session/session.ts';
 import {KeyDecoder} from '../../../source/screens/terminal/key-decoder.ts';

@@ -1,6 +1,6 @@
 import {expect, test} from 'vitest';
+import {valueAt} from '../../../source/documents/json.ts';
 import {current, isChanged, unsaved} from '../../../source/screens/session/documents.ts';
-import {valueAt} from '../../../source/screens/session/json.ts';
 import {marginEntry} from '../../../source/screens/session/reduce.ts';
 import type {Place, Session} from '../../../source/screens/session/session.ts';
 import {keyEvent} from '../../../source/screens/terminal/key-event.ts';

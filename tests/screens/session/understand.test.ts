@@ -1,6 +1,6 @@
 import {expect, test} from 'vitest';
+import type {Json} from '../../../source/documents/json.ts';
 import type {FieldKind} from '../../../source/screens/session/field-kind.ts';
-import type {Json} from '../../../source/screens/session/json.ts';
 import {inOtherUnits, understand, valueText} from '../../../source/screens/session/understand.ts';
 
 const speed: FieldKind = {is: 'quantity', dimensions: ['speed'], change: false};

@@ -6,6 +6,7 @@ import {withJson} from '../../../source/screens/session/documents.ts';
 import {startHistory} from '../../../source/screens/session/history.ts';
 import type {Practice} from '../../../source/screens/session/practice.ts';
 import {marginEntry} from '../../../source/screens/session/reduce.ts';
+import {riskEntry} from '../../../source/screens/session/reduce-risk.ts';
 import {takeInPlace} from '../../../source/screens/session/reduce-take-in.ts';
 import type {Place, Session} from '../../../source/screens/session/session.ts';
 import {startDraft} from '../../../source/screens/session/track-history.ts';
@@ -42,6 +43,8 @@ const places: Record<string, Partial<Session>> = {
 	'why, compared': {place: {at: 'why', scroll: 8}, comparison: '36/36 A'},
 	life: {place: {at: 'life', scroll: 0}},
 	'life, compared': {place: {at: 'life', scroll: 8}, comparison: '36/36 A'},
+	odds: {place: {at: 'odds', scroll: 0}},
+	'typing the risk': {place: {at: 'odds', scroll: 0}, over: riskEntry(session({risk: 0.05}))},
 	'picture of RPM': {place: {at: 'pictures', picture: 'rpm', straight: 0}},
 	'picture of thrust': {place: {at: 'pictures', picture: 'thrust', straight: 0}},
 	'picture of speed': {place: {at: 'pictures', picture: 'speed', straight: 1}, comparison: '34/37 A'},

@@ -1,6 +1,9 @@
 /** States of a session on the fixtures, ranked, and their frames as text. */
 
-import {type Ranked, rankSteps} from '../../../source/planning/rank-rack.ts';
+import {mattersSteps} from '../../../source/odds/matters.ts';
+import {oddsOf} from '../../../source/odds/odds-steps.ts';
+import {oneTooth} from '../../../source/odds/one-tooth.ts';
+import {type Ranked, rankSteps, rowName} from '../../../source/planning/rank-rack.ts';
 import {finish} from '../../../source/planning/run-rack.ts';
 import {painted} from '../../../source/screens/parts/theme.ts';
 import {Ahead} from '../../../source/screens/session/ahead.ts';
@@ -47,6 +50,7 @@ export function stateOf(session: Session): State {
 			isReadingLog: false,
 			ahead: isAhead(place) ? new Ahead(atOnce, () => {}).of(session, choices) : undefined,
 			handed: handedIn(session, ranked, all),
+			odds: oddsIn(session, ranked),
 			practice:
 				place.at === 'practice' ? {taught: finish(teachSteps(session)), effect: 'working', lines: 2} : undefined,
 		},
@@ -67,6 +71,17 @@ function handedIn(session: Session, ranked: Ranked | undefined, all: readonly Pl
 	const shown = shownRows([...all], session.order, session.filter);
 	const row = rowToHandOver(session.plan, all, shown[cursorIn(shown, session.row)]);
 	return place.at === 'hand over' && ranked && row ? handed(session, place, row.placed.name, ranked) : undefined;
+}
+
+/** Few draws: enough for every line to be there. */
+function oddsIn(session: Session, ranked: Ranked | undefined): State['scene']['odds'] {
+	const read = readBoth(session.history.present);
+	if (session.place.at !== 'odds' || ranked === undefined || !read.ok) return undefined;
+	const odds = oddsOf(read.car, read.track, {draws: 16, mostDraws: 16, risk: session.risk});
+	if (!odds.ok) return undefined;
+	const matters = finish(mattersSteps(read.car, read.track, odds.value, {points: 8}));
+	const tooth = oneTooth(read.car, read.track, session.row ?? rowName(ranked.ranking.rows[0]!));
+	return {odds: odds.value, matters, tooth, isDone: true};
 }
 
 function answerTo({history, situation}: Session): Answer {

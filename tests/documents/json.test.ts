@@ -1,12 +1,13 @@
 import {expect, test} from 'vitest';
 import {
 	type JsonObject,
+	sameJson,
 	valueAt,
 	withEntry,
 	without,
 	withSwapped,
 	withValue,
-} from '../../../source/screens/session/json.ts';
+} from '../../source/documents/json.ts';
 
 const document: JsonObject = {
 	name: 'Oval',
@@ -50,4 +51,14 @@ test('entries of a list are added, removed and exchanged', () => {
 	expect(without(document, ['straights', 0]).straights).toEqual([{name: 'Back', exit: '74 mph'}]);
 	expect(valueAt(withSwapped(document, ['straights'], 0, 1), ['straights', 0, 'name'])).toBe('Back');
 	expect(withSwapped(document, ['straights'], 1, 2)).toBe(document);
+});
+
+test('documents say the same in whatever order their fields stand', () => {
+	expect(sameJson({name: 'Oval', lap: '1 mi'}, {lap: '1 mi', name: 'Oval'})).toBe(true);
+	expect(sameJson(withValue(without(document, ['name']), ['name'], 'Oval'), document)).toBe(true);
+	expect(sameJson(document, withValue(document, ['straights', 1, 'exit'], '75 mph'))).toBe(false);
+	expect(sameJson({name: 'Oval'}, {name: 'Oval', lap: '1 mi'})).toBe(false);
+	expect(sameJson(JSON.parse('{"__proto__": {}}'), {other: {}})).toBe(false);
+	expect(sameJson([1, 2], [1])).toBe(false);
+	expect(sameJson(null, {})).toBe(false);
 });
