@@ -68,7 +68,7 @@ describe('by hand', () => {
 		expect(out).toMatch(/Held: the model's speed/);
 		expect(out).toMatch(/Back .*8650 +-113 +0\n/);
 		expect(out).toMatch(/First was 34\/35 C, now 35\/33 \w: 2\d\d rpm less at the end of Front/);
-		expect(out).toMatch(/rollout +rollout left +87\.3 in +86\.\d\d in \+\/- 0\.\d\d? in/);
+		expect(out).toMatch(/rollout +rollout left +87\.3 in +86\.\d\d in ± 0\.\d\d? in/);
 		expect(out).toMatch(/Nothing is written yet/);
 	});
 
