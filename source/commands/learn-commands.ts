@@ -15,7 +15,7 @@ export const learnCommands: readonly Command[] = [
 			name: 'TRACK',
 			summary: 'a file (with a slash or .json), or a saved or shipped track',
 		},
-		options: ['car', 'pair', 'gearbox', 'seen', 'hold', 'column', 'accept', 'take-back', ...everywhere],
+		options: ['car', 'pair', 'gearbox', 'seen', 'hold', 'column', 'grip', 'accept', 'take-back', ...everywhere],
 		examples: [
 			{line: 'droprack learn friday.json --seen "Back 8420 rpm gear 4"', gives: 'what one number changes'},
 			{

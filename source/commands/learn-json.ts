@@ -56,7 +56,7 @@ const choice = (row: Row | undefined) => (row === undefined ? null : {pair: row.
 const run = (one: ModelRun | undefined) =>
 	one === undefined ? null : {endSpeedMps: one.endMps, endRpm: one.endRpm, endGear: one.endGear, timeS: one.timeS};
 
-const fitted = ({circumference, anchor}: Learning) => ({
+const fitted = ({circumference, anchor, grip}: Learning) => ({
 	circumference:
 		circumference === undefined
 			? null
@@ -68,6 +68,7 @@ const fitted = ({circumference, anchor}: Learning) => ({
 				},
 	drag: known(anchor?.drag),
 	power: known(anchor?.power),
+	grip: known(grip?.factor),
 	misfit: anchor?.misfit ?? null,
 });
 

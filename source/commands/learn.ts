@@ -50,7 +50,7 @@ export const learn: CommandRun = async (request, around) => {
 type Asked = {readonly log: string | undefined; readonly track: string};
 
 /** With one word it is the track, and what was seen comes by hand. */
-function askedOf({argument, second, seen, takeBack: back, accept, hold, column}: Request): Asked | Refusal {
+function askedOf({argument, second, seen, takeBack: back, accept, hold, column, grip}: Request): Asked | Refusal {
 	const [log, track] = second === undefined ? [undefined, argument] : [argument, second];
 	const wrong =
 		track === undefined
@@ -59,11 +59,13 @@ function askedOf({argument, second, seen, takeBack: back, accept, hold, column}:
 				? 'a log or --seen, one at a time.'
 				: log === undefined && column !== undefined
 					? '--column goes with a log.'
-					: back !== undefined && (log ?? seen ?? accept) !== undefined
-						? '--take-back stands alone with the track.'
-						: hold !== undefined && seen === undefined
-							? '--hold goes with --seen.'
-							: undefined;
+					: log === undefined && grip
+						? '--grip goes with a log.'
+						: back !== undefined && (log ?? seen ?? accept) !== undefined
+							? '--take-back stands alone with the track.'
+							: hold !== undefined && seen === undefined
+								? '--hold goes with --seen.'
+								: undefined;
 	return wrong === undefined ? {log, track: track!} : badInput(`droprack learn: ${wrong}`);
 }
 
@@ -132,7 +134,7 @@ async function fromLog(log: string, loaded: Loaded, request: Request, around: Su
 	if (!said.ok) return said;
 	const findings = findingsFor(car, track, reading.run, said.value);
 	if (!findings.ok) return refuseFaults(findings.faults, labels);
-	const learning = learnFromFindings(subjectOf(loaded), findings.value);
+	const learning = learnFromFindings(subjectOf(loaded), findings.value, request.grip ? reading.run : undefined);
 	if (!learning.ok) return refuseFaults(learning.faults, labels);
 	const {mounted} = findings.value;
 	if (request.accept && said.value === undefined && isUnclear(findings.value))

@@ -54,6 +54,7 @@ export const options = {
 		many: true,
 		summary: 'which column of the log it is, such as speed="GPS Speed"; may be repeated',
 	},
+	grip: {summary: 'learn grip too, from exits that it holds; from a log'},
 	accept: {
 		value: 'all|NAME',
 		many: true,

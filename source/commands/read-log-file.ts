@@ -15,7 +15,9 @@ export type LogFile<Reading = LogRead> = {
 	readonly reading: Reading;
 };
 
-type Asked = Pick<ReadLogOptions, 'columns' | 'remembered'> & {
+type Asked = Pick<ReadLogOptions, 'columns' | 'remembered' | 'rest'> & {
+	/** Ends the reading of a file. */
+	readonly signal?: AbortSignal;
 	/** Shows the progress in place of the line on the terminal: bytes read, and of how many where that is known. */
 	readonly onProgress?: (bytes: number, totalBytes: number | undefined) => void;
 };
@@ -43,7 +45,9 @@ export const tryLogFile = async (
 	const label = asked === '-' ? 'standard input' : visible(asked);
 	try {
 		const sizeBytes = asked === '-' ? undefined : await sizeOf(asked);
-		const chunks = asked === '-' ? around.standardInput() : createReadStream(asked, {highWaterMark: pieceBytes});
+		const {signal} = options;
+		const chunks =
+			asked === '-' ? around.standardInput() : createReadStream(asked, {highWaterMark: pieceBytes, signal});
 		const line = progressLine(options.onProgress ? undefined : around.progress?.(), label, sizeBytes);
 		const onProgress = (bytes: number) => {
 			line.update(bytes);

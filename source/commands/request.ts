@@ -40,6 +40,7 @@ export type Request = {
 	column?: readonly string[];
 	accept?: readonly string[];
 	takeBack?: readonly string[];
+	grip?: boolean;
 	shorter?: number;
 	taller?: number;
 	withinS?: number;
@@ -91,6 +92,7 @@ const switchesOf = (given: Given) => ({
 	...(given.copy && {copy: true}),
 	...(given['each-set'] && {eachSet: true}),
 	...(given.together && {together: true}),
+	...(given.grip && {grip: true}),
 });
 
 const listsOf = ({seen, column, accept, hold, 'take-back': takeBack}: Given): Partial<Request> => ({

@@ -33,18 +33,24 @@ export function screenErrands(
 			const input = await readFileText(pathOf(file), maxDocumentBytes);
 			return input.ok ? {ok: true, ...input.value} : {ok: false, words: input.message};
 		},
-		readLog: async (file, columns, car, onProgress) => {
+		readLog: async (file, columns, car, onProgress, signal) => {
 			// The reader of logs is not needed before there is one.
 			const {readLogFile} = await import('./read-log-file.ts');
 			const preferences = readPreferences(home);
 			const remembered = preferences.ok
 				? (preferences.value.logColumns?.[car] as RememberedColumns | undefined)
 				: undefined;
-			const answer = await readLogFile(pathOf(file), noInput, {columns, remembered, onProgress: seldom(onProgress)});
+			const answer = await readLogFile(pathOf(file), noInput, {
+				columns,
+				remembered,
+				onProgress: seldom(onProgress),
+				rest: () => new Promise(resolve => setImmediate(resolve)),
+				signal,
+			});
 			if (!answer.ok) return {ok: false, words: answer.message};
 			const {label, reading} = answer.value;
 			const kept = reading.remember as Parameters<typeof rememberColumns>[2];
-			await rememberColumns(home, car, kept);
+			if (!signal.aborted) await rememberColumns(home, car, kept);
 			return {ok: true, label, reading};
 		},
 		history: track => keptNamed(home, 'history', track)?.document.entries ?? [],

@@ -23,14 +23,15 @@ import {sentenceOf} from './remark-text.ts';
 import type {Rows} from './row-reader.ts';
 import {rowRemarks} from './row-remarks.ts';
 import type {RowPlan} from './row-table.ts';
-import {runFromRows} from './run-from-rows.ts';
+import {runFromRows, type Steps} from './run-from-rows.ts';
 
 export type OpenLog = {
 	readonly ok: true;
 	readonly plan: RowPlan;
 	/** Where in the head the rows begin. */
 	readonly start: number;
-	readonly finish: (rows: Rows) => LogReading;
+	/** Rests after each pass over the rows. */
+	readonly finish: (rows: Rows) => Steps<LogReading>;
 };
 
 type Given = {
@@ -123,18 +124,18 @@ function choiceRemarks({notThere, leftOut}: Choice): RemarkData[] {
 	return [...(notThere.length > 0 ? [{kind: 'notRemembered' as const, headers: notThere}] : []), ...several];
 }
 
-function finished(
+function* finished(
 	rows: Rows,
 	table: Table,
 	columns: readonly UsedColumn[],
 	choice: Choice,
 	before: readonly RemarkData[],
 	given: Given,
-): LogReading {
+): Steps<LogReading> {
 	if (rows.samples <= rows.wrongCells.count) return refused(noRows(rows, table));
 	const empty = noNumbers(rows, columns);
 	if (empty) return refused(empty);
-	const made = runFromRows(rows, columns);
+	const made = yield* runFromRows(rows, columns);
 	if ('backward' in made) return refused(runsBackward(made.backward, made.rows, rows.samples));
 	if ('dead' in made) return refused(deadSensor(made.dead, columns));
 	const {run, remarks} = made;

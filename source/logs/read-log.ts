@@ -21,6 +21,8 @@ export type ReadLogOptions = {
 	readonly sizeBytes?: number | undefined;
 	/** Called with the bytes read so far, once for each piece. */
 	readonly onProgress?: (bytes: number) => void;
+	/** Lets other things have their turn: called between the passes over all rows that come after the last piece. */
+	readonly rest?: (() => Promise<void>) | undefined;
 };
 
 /** Hours of running at hundreds of samples a second; what is kept of it still fits a small computer. */
@@ -50,7 +52,13 @@ export async function readLog(chunks: AsyncIterable<Uint8Array>, options: ReadLo
 	}
 	if (log === undefined) head.take(decoder.end());
 	log ??= opened(head.bytes, true, options, decoder.encoding);
-	return log.ok ? log.finish(log.reader.end()) : log;
+	if (!log.ok) return log;
+	const steps = log.finish(log.reader.end());
+	for (;;) {
+		const step = steps.next();
+		if (step.done) return step.value;
+		await options.rest?.();
+	}
 }
 
 type Opened = Pick<OpenLog, 'ok' | 'finish'> & {readonly reader: RowReader};

@@ -20,24 +20,34 @@ const lowestPeakRpm = 1000;
 /** By how much the distance of a log may differ from what its speed makes. */
 const agreement = 0.05;
 
+/** Steps of one pass over the samples at most. */
+export type Steps<T> = Generator<undefined, T, void>;
+
 /** A sensor hung all the time: speed or engine speed is known nowhere. */
 type Dead = {readonly dead: 'speed' | 'rpm'};
 /** More rows go back than ahead. */
 type Backward = {readonly backward: 'time' | 'distance'; readonly rows: number};
 
-export function runFromRows(rows: Rows, columns: readonly UsedColumn[]): RunFromRows | Dead | Backward {
+/** Rests after each pass over the samples, for a caller that has other things to do in between. */
+export function* runFromRows(rows: Rows, columns: readonly UsedColumn[]): Steps<RunFromRows | Dead | Backward> {
 	const byChannel = new Map<ChannelName, Numbers>(columns.map(({channel}, slot) => [channel, rows.values[slot]!]));
 	const samples = new Samples(byChannel, rows.samples);
 	const axis = byChannel.has('time') ? 'time' : 'distance';
 	const inOrder = ordered(samples, axis);
+	yield;
 	if ('backward' in inOrder) return inOrder;
 	const [speedMps, rpm] = [samples.get('speed') as Float32Array, samples.get('rpm') as Float32Array];
 	const along = samples.get(axis) as Float64Array;
 	const timeS = axis === 'time' ? along : timeFromSpeed(along, everywhere(speedMps, along));
-	const stuck = forgetStuck(timeS, speedMps, rpm);
+	const stuck = yield* forgetStuck(timeS, speedMps, rpm);
 	for (const dead of ['speed', 'rpm'] as const) if (samples.get(dead)!.every(Number.isNaN)) return {dead};
-	const place = axis === 'time' ? distanceBeside(timeS, samples, speedMps) : timeWorkedOut(along);
-	const sound = [...samplingRemarks(timeS), ...stuck, ...implausible(speedMps, rpm), ...shares(samples, columns)];
+	const place = axis === 'time' ? yield* distanceBeside(timeS, samples, speedMps) : timeWorkedOut(along);
+	const sampling = samplingRemarks(timeS);
+	yield;
+	const wild = implausible(speedMps, rpm);
+	yield;
+	const sound = [...sampling, ...stuck, ...wild, ...shares(samples, columns)];
+	yield;
 	const channel = (name: ChannelName) => (samples.get(name) as Float32Array | undefined) ?? null;
 	const gear = channel('gear');
 	// Reverse, and what a logger writes where it does not know.
@@ -71,12 +81,14 @@ const timeWorkedOut = (distanceM: Float64Array): Placed => ({
 	remarks: [{kind: 'workedOut', channel: 'time'}],
 });
 
-function distanceBeside(timeS: Float64Array, samples: Samples, speedMps: Float32Array): Placed {
+function* distanceBeside(timeS: Float64Array, samples: Samples, speedMps: Float32Array): Steps<Placed> {
 	const known = everywhere(speedMps, timeS);
+	yield;
 	const logged = samples.get('distance') as Float64Array | undefined;
 	if (logged === undefined || logged.every(Number.isNaN))
 		return {distanceM: distanceFromSpeed(timeS, known), remarks: [{kind: 'workedOut', channel: 'distance'}]};
 	const restartsS = joinDistance(logged, timeS, known);
+	yield;
 	const remarks: RemarkData[] = [];
 	if (restartsS.length > 0) remarks.push({kind: 'restart', channel: 'distance', atS: restartsS});
 	const [loggedM, bySpeedM] = [logged.at(-1) ?? 0, lengthFromSpeed(timeS, known)];

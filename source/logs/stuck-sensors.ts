@@ -12,10 +12,16 @@ const slowest = {speed: 5, rpm: 1000};
 
 type Channel = 'speed' | 'rpm';
 
-/** Makes the stretches unknown, in place. The standing value of a speed of 0 is a car that stands. */
-export function forgetStuck(timeS: Float64Array, speedMps: Numbers, rpm: Numbers): RemarkData[] {
+/** Makes the stretches unknown, in place, with a rest after each channel. The standing value of a speed of 0 is a car that stands. */
+export function* forgetStuck(
+	timeS: Float64Array,
+	speedMps: Numbers,
+	rpm: Numbers,
+): Generator<undefined, RemarkData[], void> {
 	const stuckSpeed = stretches(timeS, speedMps, rpm, 'speed');
+	yield;
 	const stuckRpm = stretches(timeS, rpm, speedMps, 'rpm');
+	yield;
 	for (const [values, list] of [
 		[speedMps, stuckSpeed],
 		[rpm, stuckRpm],

@@ -41,9 +41,13 @@ export function lengthText(lengthM: number): string {
 	return `${grouped(lengthM / footM)} ft (${grouped(lengthM)} m)`;
 }
 
-/** "1200 miles (1931 km)" */
+/** Below it a tenth counts. */
+const shortTo = 10;
+
+/** "1200 miles (1931 km)", "0.9 miles (1.5 km)" */
 export function longLengthText(lengthM: number): string {
-	return `${grouped(lengthM / mileM)} miles (${grouped(lengthM / kilometerM)} km)`;
+	const text = (value: number) => (value < shortTo ? value.toFixed(1) : grouped(value));
+	return `${text(lengthM / mileM)} miles (${text(lengthM / kilometerM)} km)`;
 }
 
 /** "0.021 s" */

@@ -26,12 +26,16 @@ export type Errands = {
 	/** An existing file gives way only where `replace` is set. */
 	write(file: string, text: string, replace: boolean): Writing;
 	read(file: string): Promise<FileText>;
-	/** A logged run; how its columns are read is remembered by the car. `onProgress` gets the share that was read, where that is known. */
+	/**
+	 * A logged run; how its columns are read is remembered by the car. `onProgress` gets the share that was read, where that is
+	 * known; `signal` ends it, and what comes then is not looked at.
+	 */
 	readLog(
 		file: string,
 		columns: AskedColumns,
 		car: string,
 		onProgress: (share: number | undefined) => void,
+		signal: AbortSignal,
 	): Promise<LogAnswer>;
 	/** What is kept of the track of that name, in the order in which it was added. */
 	history(track: string): readonly HistoryEntry[];

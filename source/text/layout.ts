@@ -67,8 +67,18 @@ const clip = (cells: Line, width: number): Line => {
 	return clipped;
 };
 
+/** Longer in ASCII, so before anything is measured; all other signs have a stand-in of their own width. */
+const spelled = (text: string): string => text.replaceAll('±', '+/-');
+const spelledCells = (cells: readonly Cell[]): Cell[] => cells.map(each => ({...each, text: spelled(each.text)}));
+
+const inAscii = (block: Block): Block => {
+	if (block.kind === 'text') return {...block, text: spelled(block.text)};
+	if (block.kind === 'line') return {...block, cells: spelledCells(block.cells)};
+	return block.kind === 'table' ? {...block, rows: block.rows.map(spelledCells)} : block;
+};
+
 export const layOut = (blocks: readonly Block[], width: number, ascii = false): Line[] =>
-	blocks
+	(ascii ? blocks.map(inAscii) : blocks)
 		.flatMap((block): Line[] => {
 			if (block.kind === 'gap') return [[]];
 			if (block.kind === 'line') return [block.cells];

@@ -18,7 +18,9 @@ export function fittedView(learning: Learning): Block[] {
 	const lines = fittedLines(learning);
 	return [
 		text('What it teaches', 'strong'),
-		...(lines.length === 0 ? [text('Nothing that can be told.', 'near')] : lines.map(one => text(one, 'plain', 2))),
+		...(lines.length === 0
+			? [text('Nothing that can be told; why is said at the end.', 'near')]
+			: lines.map(one => text(one, 'plain', 2))),
 	];
 }
 
@@ -139,11 +141,8 @@ const proposalColumns: readonly Making<ProposalLine>[] = [
 		shortest: 8,
 		cell: ({row}) => cell(row.now === '' ? absent : row.now, row.before === undefined ? 'muted' : 'plain'),
 	},
-	{head: 'learned', align: 'left', keep: 0, shortest: 12, cell: ({row}) => cell(writtenText(row.value), 'strong')},
+	{head: 'learned', align: 'left', keep: 0, shortest: 12, cell: ({row}) => cell(String(row.value), 'strong')},
 ];
-
-/** The sign has no stand-in that says the same in ASCII. */
-const writtenText = (value: string | number): string => String(value).replace(' ± ', ' +/- ');
 
 export type LearnAnswer = {
 	readonly heading: Heading;

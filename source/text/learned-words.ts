@@ -2,6 +2,7 @@
 import {listed, speedText} from '../planning/words.ts';
 import type {Anchor, StraightAnchor} from '../practice/learn/anchor.ts';
 import type {CircumferenceLearned} from '../practice/learn/circumference.ts';
+import type {GripLearned} from '../practice/learn/grip.ts';
 import type {Learning} from '../practice/learn/learn.ts';
 import {fixed, signed} from './units.ts';
 
@@ -17,7 +18,7 @@ export function circumferenceText(value: number, se?: number): string {
 const percent = (share: number, digits: number) => `${fixed(100 * share, digits)} %`;
 
 /** In sentences; what is held is said with how to hold the other. */
-export function fittedLines({circumference, held, anchor, readings}: Learning): string[] {
+export function fittedLines({circumference, held, anchor, grip, readings}: Learning): string[] {
 	return [
 		...(circumference === undefined ? [] : circumferenceWords(circumference)),
 		...(held === undefined ? [] : [heldWords[held]]),
@@ -25,15 +26,43 @@ export function fittedLines({circumference, held, anchor, readings}: Learning): 
 			anchor,
 			readings.filter(({limited}) => limited).map(({name}) => name),
 		),
-		...implausibleWords(circumference, anchor),
+		...gripWords(grip),
+		...implausibleWords({circumference, anchor, grip}),
+	];
+}
+
+function gripWords(grip: GripLearned | undefined): string[] {
+	if (grip === undefined) return [];
+	const {factor, straights, untold} = grip;
+	const unclear =
+		untold.length === 0
+			? []
+			: [`Grip seems to hold the exit of ${listed(untold)}, but the samples cannot tell how much of it there was.`];
+	if (factor === undefined)
+		return unclear.length > 0 ? unclear : ['No exit is held by grip: the log says nothing about how much there is.'];
+	const held = straights.map(
+		({name, heldS, alone}) => `${name} ${signed(100 * (alone.value - 1), 1)} % (${fixed(heldS, 1)} s)`,
+	);
+	return [
+		`Grip ${signed(100 * (factor.value - 1), 1)} %, known to ${percent(factor.se, 1)}, from exits that it holds: ${held.join(', ')}.`,
+		...unclear,
 	];
 }
 
 /** What practice corrects is small: beyond these something else is wrong. */
-const plausible = {circumference: 0.03, drag: 0.2, power: 0.05} as const;
+const plausible = {circumference: 0.03, drag: 0.2, power: 0.05, grip: 0.3} as const;
 
-function implausibleWords(circumference: CircumferenceLearned | undefined, anchor: Anchor | undefined): string[] {
-	const factors = {circumference: circumference?.factor, drag: anchor?.drag?.value, power: anchor?.power?.value};
+function implausibleWords({
+	circumference,
+	anchor,
+	grip,
+}: Pick<Learning, 'circumference' | 'anchor' | 'grip'>): string[] {
+	const factors = {
+		circumference: circumference?.factor,
+		drag: anchor?.drag?.value,
+		power: anchor?.power?.value,
+		grip: grip?.factor?.value,
+	};
 	const wild = (Object.keys(plausible) as (keyof typeof plausible)[]).filter(
 		name => Math.abs((factors[name] ?? 1) - 1) > plausible[name],
 	);

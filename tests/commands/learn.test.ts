@@ -68,7 +68,7 @@ describe('by hand', () => {
 		expect(out).toMatch(/Held: the model's speed/);
 		expect(out).toMatch(/Back .*8650 +-113 +0\n/);
 		expect(out).toMatch(/First was 34\/35 C, now 35\/33 \w: 2\d\d rpm less at the end of Front/);
-		expect(out).toMatch(/rollout +rollout left +87\.3 in +86\.\d\d in \+\/- 0\.\d\d? in/);
+		expect(out).toMatch(/rollout +rollout left +87\.3 in +86\.\d\d in ± 0\.\d\d? in/);
 		expect(out).toMatch(/Nothing is written yet/);
 	});
 
@@ -205,5 +205,23 @@ describe('accepting and taking back', () => {
 		const {status, out, err} = await learn(...words);
 		expect({status, out}).toEqual({status: 2, out: ''});
 		expect(err).toMatch(message);
+	});
+});
+
+describe('grip', () => {
+	test('is learned where it is asked for', async () => {
+		const [without, asked] = [
+			await json(log(), 'tarrowdale', ...with3435),
+			await json(log(), 'tarrowdale', ...with3435, '--grip'),
+		];
+		expect(without.grip).toBeNull();
+		expect(asked.grip).toBeNull();
+		const {out} = await learn(log(), 'tarrowdale', ...with3435, '--grip');
+		expect(out).toContain('No exit is held by grip: the log says nothing about how much there is.');
+	});
+
+	test('goes with a log', async () => {
+		const {status, err} = await learn('tarrowdale', '--grip');
+		expect([status, err]).toEqual([2, expect.stringContaining('--grip goes with a log.')]);
 	});
 });

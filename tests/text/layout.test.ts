@@ -41,3 +41,10 @@ test('a line is cut, a text is wrapped', () => {
 test('control characters of a document become visible in a cell', () => {
 	expect(cell('a\u001b[31mb\nc').text).toBe('a␛[31mb␊c');
 });
+
+test('what is known to within something is spelled out in ASCII, before it is measured', () => {
+	const blocks = [text('88 mph ± 1 mph'), table(columns, [[cell('a ± b'), cell('1'), cell('x')]])];
+	const told = (ascii: boolean) => layOut(blocks, 40, ascii).map(cells => cells.map(each => each.text).join(''));
+	expect(told(false)).toEqual(['88 mph ± 1 mph', 'name   rpm  where', 'a ± b    1  x']);
+	expect(told(true)).toEqual(['88 mph +/- 1 mph', 'name     rpm  where', 'a +/- b    1  x']);
+});

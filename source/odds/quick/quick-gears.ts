@@ -99,11 +99,11 @@ export class QuickGears implements Gears {
 				this.#distanceM = cells.distanceM[cell]!;
 				this.#timeS = cells.timeS[cell]!;
 			} else if (far === top) this.#startCell(gear, cells, speedMps, cell);
-			else this.#integrate(gear, speedMps, this.#mps2(gear, speedMps), far, this.#mps2(gear, far));
+			else this.#integrate(gear, speedMps, this.#startMps2(gear, speedMps, cell), far, this.#mps2(gear, far));
 			if (Number.isNaN(this.#timeS)) break;
 			const brakesM = far > entryMps ? brakingDistanceM(far, braking) : 0;
 			if (distanceM + this.#distanceM + brakesM > goal.distanceM)
-				return this.#meet(gear, speedMps, distanceM, timeS, far, goal);
+				return this.#meet(gear, this.#startMps2(gear, speedMps, cell), speedMps, distanceM, timeS, far, goal);
 			distanceM += this.#distanceM;
 			timeS += this.#timeS;
 			speedMps = far;
@@ -120,14 +120,22 @@ export class QuickGears implements Gears {
 	}
 
 	/** Where inside a stretch the distance ends or the brakes go on: one step of Newton's method; what it leaves is driven evenly. */
-	#meet(gear: number, fromMps: number, goneM: number, goneS: number, farMps: number, goal: Goal): Travel {
+	#meet(
+		gear: number,
+		fromMps2: number,
+		fromMps: number,
+		goneM: number,
+		goneS: number,
+		farMps: number,
+		goal: Goal,
+	): Travel {
 		const {braking} = goal;
 		const leftM = goal.distanceM - goneM;
 		const room = leftM - brakingDistanceM(fromMps, braking);
 		const over = this.#distanceM + brakingDistanceM(farMps, braking) - leftM;
 		const guess = fromMps + ((farMps - fromMps) * room) / (room + over);
 		const guessMps2 = this.#mps2(gear, guess);
-		this.#integrate(gear, fromMps, this.#mps2(gear, fromMps), guess, guessMps2);
+		this.#integrate(gear, fromMps, fromMps2, guess, guessMps2);
 		const brakes = braking !== undefined && guess > braking.entryMps ? braking.brakingMps2 : Infinity;
 		const step = (leftM - this.#distanceM - brakingDistanceM(guess, braking)) / (guess / guessMps2 + guess / brakes);
 		const speed = Math.min(farMps, Math.max(fromMps, guess + step));
@@ -173,6 +181,11 @@ export class QuickGears implements Gears {
 		return Math.min(powered, held);
 	}
 
+	/** Where a stretch of a cell starts: the table has it at the cell's foot. */
+	#startMps2(gear: number, speedMps: number, cell: number): number {
+		return speedMps === cell * cellMps ? this.#nodeMps2(gear, 2 * cell) : this.#mps2(gear, speedMps);
+	}
+
 	/** The acceleration at any speed. All in one place, since nothing is asked for as often. */
 	#mps2(gear: number, speedMps: number): number {
 		const {headwindMps, fixedN, dragKgPerM, rollingKgPerM, gripN, gripKgPerM} = this.#forces;
@@ -184,9 +197,12 @@ export class QuickGears implements Gears {
 		const resistance = fixedN + (air < 0 ? -dragKgPerM : dragKgPerM) * square + rollingKgPerM * square;
 		const here = this.#tables.gear(gear);
 		const thrust = here.thrustFactor * torqueAt(table.torqueNm, here.rpmFactor * speedMps * turns, here) * turns;
-		const powered = (thrust - resistance) / (table.massKg + perInertia * here.drivenKgM2);
-		const held = (gripN + gripKgPerM * square - resistance) / (table.massKg + perInertia * table.undrivenKgM2);
-		return Math.min(powered, held);
+		const poweredN = thrust - resistance;
+		const heldN = gripN + gripKgPerM * square - resistance;
+		const poweredKg = table.massKg + perInertia * here.drivenKgM2;
+		const heldKg = table.massKg + perInertia * table.undrivenKgM2;
+		// The lesser of the two quotients, for one division.
+		return poweredN * heldKg < heldN * poweredKg ? poweredN / poweredKg : heldN / heldKg;
 	}
 
 	#keepCell(gear: number, cells: CellTable, cell: number): void {

@@ -3,7 +3,9 @@ import type {Vehicle} from '../../drivetrain/straight.ts';
 import {circumferenceM} from '../../drivetrain/tire.ts';
 import type {LoggedRun} from '../../logs/logged-run.ts';
 import type {Plan} from '../../planning/plan.ts';
-import {bridged, middleOfThree, movingMean, roughQuantile} from './smooth.ts';
+import {median} from '../fit/robust.ts';
+import {bridged, everyOf, middleOfThree, movingMean} from './smooth.ts';
+import {Pace, type Steps} from './steps.ts';
 
 export type Channels = {
 	readonly run: LoggedRun;
@@ -15,6 +17,8 @@ export type Channels = {
 	readonly middleRpm: Float32Array;
 	/** n·C/(60·V·(1 + slip)) by the documents; NaN where speed or RPM are missing or near nothing. */
 	readonly overall: Float32Array;
+	/** For whoever goes through the samples. */
+	readonly pace: Pace;
 };
 
 /** Below these, n/V tells nothing of a gear: the clutch slips and sensors are coarse. */
@@ -22,26 +26,32 @@ const slowestMps = 5;
 const slowestRpm = 1000;
 const smoothS = 0.25;
 
-export function channelsOf(run: LoggedRun, plan: Plan): Channels {
+export function* channelsOf(run: LoggedRun, plan: Plan): Steps<Channels> {
+	const pace = new Pace();
 	const rateHz = sampleRateHz(run.timeS);
-	const smoothMps = movingMean(bridged(middleOfThree(run.speedMps)), Math.round(smoothS * rateHz));
-	return {run, rateHz, smoothMps, middleRpm: middleOfThree(run.rpm), overall: overallBy(run, plan.base.vehicle)};
+	const whole = yield* bridged(yield* middleOfThree(run.speedMps, pace), pace);
+	const smoothMps = yield* movingMean(whole, Math.round(smoothS * rateHz), pace);
+	const middleRpm = yield* middleOfThree(run.rpm, pace);
+	return {run, rateHz, smoothMps, middleRpm, overall: yield* overallBy(run, plan.base.vehicle, pace), pace};
 }
 
 /** 0 where time does not pass. */
 function sampleRateHz(timeS: Float64Array): number {
-	const steps = timeS.subarray(1).map((time, i) => time - timeS[i]!);
-	const stepS = roughQuantile(steps, 0.5);
+	const steps: number[] = [];
+	for (let i = 0; i + 1 < timeS.length; i += everyOf(timeS.length - 1)) steps.push(timeS[i + 1]! - timeS[i]!);
+	const stepS = median(steps);
 	return stepS > 0 ? 1 / stepS : 0;
 }
 
 /** n·C/(60·V·(1 + slip)) at each sample; NaN where speed or RPM are missing or near nothing. */
-export function overallBy(
+export function* overallBy(
 	{samples, speedMps, rpm}: LoggedRun,
 	{rolloutM, growth, slip}: Pick<Vehicle, 'rolloutM' | 'growth' | 'slip'>,
-): Float32Array {
+	pace: Pace,
+): Steps<Float32Array> {
 	const overall = new Float32Array(samples);
 	for (let i = 0; i < samples; i++) {
+		if (pace.isDue()) yield;
 		const [v, n] = [speedMps[i]!, rpm[i]!];
 		const turns = (n * circumferenceM(rolloutM, growth, v)) / (60 * v * (1 + slip));
 		overall[i] = v > slowestMps && n > slowestRpm ? turns : Number.NaN;

@@ -2,13 +2,15 @@
 
 import type {Tires} from '../../drivetrain/car.ts';
 import {growthReferenceMps} from '../../drivetrain/tire.ts';
-import {huberFit} from '../fit/huber.ts';
+import {groupLevelsEvened} from '../fit/group-levels.ts';
+import {huberSteps} from '../fit/huber.ts';
 import type {Columns} from '../fit/least-squares.ts';
-import {median, quantile, sorted} from '../fit/robust.ts';
+import {median, sorted, trimmedMean} from '../fit/robust.ts';
 import {fewGroupsFactor} from '../fit/student.ts';
 import type {Channels} from './channels.ts';
 import {type CircumferenceFit, type Estimate, type Pass, sampleState} from './findings.ts';
 import {growthSd} from './fittings.ts';
+import type {Steps} from './steps.ts';
 
 /** One block of steady samples in one gear of one pass. */
 type Readings = {
@@ -23,6 +25,8 @@ const blockS = 0.5;
 /** A block with less of its samples than this is left out. */
 const leastFilled = 0.5;
 const fewestReadings = 4;
+/** Of the samples of a block, at each end of their order: what is left out of its mean. */
+const trimmed = 0.1;
 /** Growth less sure than this, as a fraction at 100 mph, is held: the documents' is about as good. */
 const leastSureGrowth = 0.002;
 
@@ -34,19 +38,19 @@ const leastSureGrowth = 0.002;
  * Both speeds are taken to be of the same moment: a road speed that is logged τ seconds late makes C too small by τ·a/V, with a
  * the acceleration, most where the car is slow and pulls hard.
  */
-export function fitCircumference(
+export function* fitCircumference(
 	channels: Channels,
 	gears: Uint8Array,
 	state: Uint8Array,
 	passes: readonly Pass[],
 	overall: readonly number[],
 	tires: Pick<Tires, 'growth' | 'slip'>,
-): CircumferenceFit | undefined {
-	const readings = readingsOf(channels, gears, state, passes, overall, tires.slip);
+): Steps<CircumferenceFit | undefined> {
+	const readings = yield* readingsOf(channels, gears, state, passes, overall, tires.slip);
 	if (readings.circumferenceM.length < fewestReadings) return undefined;
-	const free = fitted(readings, undefined);
+	const free = yield* fitted(readings, undefined);
 	const sure = free !== undefined && free.growth.se <= leastSureGrowth;
-	const fit = sure ? free : fitted(readings, tires.growth);
+	const fit = sure ? free : yield* fitted(readings, tires.growth);
 	if (fit === undefined) return undefined;
 	const speeds = sorted(readings.square.map(square => growthReferenceMps * Math.sqrt(square)));
 	const seen = new Set(readings.pass);
@@ -67,7 +71,7 @@ type Fit = Pick<
 	'rolloutM' | 'growth' | 'atMps' | 'circumferenceM' | 'correlation' | 'scatterM' | 'downweighted'
 >;
 
-function fitted({circumferenceM, square, pass}: Readings, held: number | undefined): Fit | undefined {
+function* fitted({circumferenceM, square, pass}: Readings, held: number | undefined): Steps<Fit | undefined> {
 	// About the middle of the squares, where level and slope err independently.
 	const middle = median(square);
 	const columns: Columns =
@@ -76,7 +80,11 @@ function fitted({circumferenceM, square, pass}: Readings, held: number | undefin
 			: [square.map(x => (1 + held * x) / (1 + held * middle))];
 	const groups = new Set(pass).size;
 	const grouped = groups > fewestGroups;
-	const fit = huberFit(columns, circumferenceM, grouped ? pass : undefined);
+	const first = yield* huberSteps(columns, circumferenceM, grouped ? pass : undefined);
+	if (first === undefined) return undefined;
+	// Slip differs a little from pass to pass: what growth is shows within each, whatever its level.
+	const evened = grouped ? groupLevelsEvened(columns, circumferenceM, pass, first) : undefined;
+	const fit = evened === undefined ? first : yield* huberSteps(evened.columns, evened.y, pass);
 	if (fit === undefined) return undefined;
 	const degrees = (grouped ? groups : circumferenceM.length) - columns.length;
 	const wider = fewGroupsFactor(degrees) ** 2;
@@ -124,15 +132,15 @@ const fewestGroups = 4;
 
 const estimate = (value: number, variance: number): Estimate => ({value, se: Math.sqrt(variance)});
 
-function readingsOf(
+function* readingsOf(
 	channels: Channels,
 	gears: Uint8Array,
 	state: Uint8Array,
 	passes: readonly Pass[],
 	overall: readonly number[],
 	slip: number,
-): Readings {
-	const {run, rateHz} = channels;
+): Steps<Readings> {
+	const {run, rateHz, pace} = channels;
 	const size = Math.max(1, Math.round(blockS * rateHz));
 	const [circumferenceM, square, of]: [number[], number[], number[]] = [[], [], []];
 	const ratios = new Float64Array(size);
@@ -144,12 +152,13 @@ function readingsOf(
 			if (gear === 0) continue;
 			let [count, squares] = [0, 0];
 			for (let i = from; i < to; i++) {
+				if (pace.isDue()) yield;
 				if (state[i] !== sampleState.steady || gears[i] !== gear) continue;
 				ratios[count++] = run.speedMps[i]! / run.rpm[i]!;
 				squares += (run.speedMps[i]! / growthReferenceMps) ** 2;
 			}
 			if (count < leastFilled * size) continue;
-			const middle = quantile(ratios.subarray(0, count).sort(), 0.5);
+			const middle = trimmedMean(ratios.subarray(0, count).sort(), trimmed);
 			circumferenceM.push(60 * middle * (1 + slip) * overall[gear - 1]!);
 			square.push(squares / count);
 			of.push(number);

@@ -2,6 +2,8 @@
 import {median, robustSd} from '../fit/robust.ts';
 import type {Channels} from './channels.ts';
 import type {Stretch} from './full-throttle.ts';
+import {everyOf} from './smooth.ts';
+import type {Steps} from './steps.ts';
 
 /** A hump: middle, robust standard deviation of the logarithm, samples within. */
 export type Hump = {
@@ -30,11 +32,13 @@ export type Humps = {
 	readonly speedMps: number;
 };
 
-export function humpsOf({overall, smoothMps, run}: Channels, stretches: readonly Stretch[]): Humps {
+export function* humpsOf(channels: Channels, stretches: readonly Stretch[]): Steps<Humps> {
+	const {overall, smoothMps, pace} = channels;
 	const counts = new Float64Array(bins);
 	let [total, squares] = [0, 0];
 	for (const {from, to} of stretches) {
 		for (let i = from; i <= to; i++) {
+			if (pace.isDue()) yield;
 			const bin = Math.floor(Math.log(overall[i]!) / binWidth);
 			if (!(bin >= 0 && bin < bins)) continue;
 			counts[bin]! += 1;
@@ -43,9 +47,11 @@ export function humpsOf({overall, smoothMps, run}: Channels, stretches: readonly
 		}
 	}
 	const centers = centersOf(counts, Math.max(leastSamples, leastShare * total));
-	const humps = centers
-		.map(center => humpAt(overall, run.gear, stretches, center))
-		.filter(({samples}) => samples >= leastSamples);
+	const humps: Hump[] = [];
+	for (const center of centers) {
+		const hump = yield* humpAt(channels, stretches, center);
+		if (hump.samples >= leastSamples) humps.push(hump);
+	}
 	return {humps, speedMps: total === 0 ? 0 : Math.sqrt(squares / total)};
 }
 
@@ -77,24 +83,23 @@ function standsOut(counts: Float64Array, bin: number): boolean {
 	return inside >= 2 * beside;
 }
 
-function humpAt(
-	overall: Float32Array,
-	column: Float32Array | null,
-	stretches: readonly Stretch[],
-	center: number,
-): Hump {
+function* humpAt({overall, run, pace}: Channels, stretches: readonly Stretch[], center: number): Steps<Hump> {
+	const column = run.gear;
 	const inside: number[] = [];
 	const counts = new Map<number, number>();
 	for (const {from, to} of stretches) {
 		for (let i = from; i <= to; i++) {
+			if (pace.isDue()) yield;
 			const logarithm = Math.log(overall[i]!);
 			if (!(Math.abs(logarithm - center) <= reach)) continue;
 			inside.push(logarithm);
 			if (column !== null) counts.set(column[i]!, (counts.get(column[i]!) ?? 0) + 1);
 		}
 	}
-	const middle = median(inside);
+	const every = everyOf(inside.length);
+	const some = every === 1 ? inside : inside.filter((_, i) => i % every === 0);
+	const middle = median(some);
 	const [most] = [...counts].sort(([, many], [, few]) => few - many);
 	const logged = most !== undefined && most[0] >= 1 && 2 * most[1] > inside.length ? most[0] : undefined;
-	return {overall: Math.exp(middle), spread: robustSd(inside, middle), samples: inside.length, logged};
+	return {overall: Math.exp(middle), spread: robustSd(some, middle), samples: inside.length, logged};
 }

@@ -1,6 +1,7 @@
 /** From a logged run to what it shows. */
 import type {LoggedRun} from '../../logs/logged-run.ts';
 import type {Plan} from '../../planning/plan.ts';
+import {finish} from '../../planning/run-rack.ts';
 import {type Channels, channelsOf, overallBy} from './channels.ts';
 import {fitCircumference} from './circumference.ts';
 import {humpsOf} from './clusters.ts';
@@ -15,6 +16,7 @@ import {notesOn} from './notes.ts';
 import {measured} from './passes.ts';
 import {type Power, powerOf} from './power.ts';
 import {revEvents, shiftFindings} from './shift-findings.ts';
+import type {Steps} from './steps.ts';
 import {straightFindings} from './straight-findings.ts';
 
 /**
@@ -22,11 +24,25 @@ import {straightFindings} from './straight-findings.ts';
  * documents' circumference; `installed` what is said to be mounted, the car's own unless given.
  */
 export function findInLog(run: LoggedRun, plan: Plan, installed: Installed | undefined = plan.car.installed): Findings {
-	const channels = channelsOf(run, plan);
-	const {stretches, by} = fullThrottle(channels, plan.track.lapM);
-	const laid = layOut(channels, plan, measured(channels, undefined, stretches, []));
-	const fit = mountedBy(plan, humpsOf(channels, stretches), installed);
-	const {gears, power, circumference, passes} = inGears({channels, plan, stretches, laid}, fit);
+	return finish(findSteps(run, plan, installed));
+}
+
+/** The same step by step, for a caller that has other things to do in between: each looks at a bounded number of samples. */
+export function* findSteps(
+	run: LoggedRun,
+	plan: Plan,
+	installed: Installed | undefined = plan.car.installed,
+): Steps<Findings> {
+	yield 'full throttle';
+	const channels = yield* channelsOf(run, plan);
+	const {stretches, by} = yield* fullThrottle(channels, plan.track.lapM);
+	yield 'laps and straights';
+	const laid = yield* layOut(channels, plan, yield* measured(channels, undefined, stretches, []));
+	yield 'the pair';
+	const fit = mountedBy(plan, yield* humpsOf(channels, stretches), installed);
+	yield 'gears';
+	const {gears, power, circumference, passes} = yield* inGears({channels, plan, stretches, laid}, fit);
+	yield 'events';
 	const findings = {
 		log: {
 			samples: run.samples,
@@ -39,16 +55,16 @@ export function findInLog(run: LoggedRun, plan: Plan, installed: Installed | und
 		},
 		laps: laid.laps,
 		lapsFrom: laid.lapsFrom,
-		mounted: {...fit, gearColumnAgrees: columnAgrees(run, gears, stretches)},
+		mounted: {...fit, gearColumnAgrees: yield* columnAgrees(channels, gears, stretches)},
 		matching: laid.matching,
 		straights: straightFindings(plan.track, passes),
 		passes,
-		shifts: shiftFindings(channels, passes, power.shifts),
-		events: revEvents(channels, gears, laid.laps, stretches, power.shifts, plan.limit.rpm),
-		wheelspin: wheelspinOf(power.state, passes),
-		limiter: limiterOf(run, power.state, passes, plan.base.vehicle.limiterRpm),
-		highestRpm: peak(run, laid.laps, channels.middleRpm),
-		highestMps: peak(run, laid.laps, channels.smoothMps),
+		shifts: yield* shiftFindings(channels, passes, power.shifts),
+		events: yield* revEvents(channels, gears, laid.laps, stretches, power.shifts, plan.limit.rpm),
+		wheelspin: yield* wheelspinOf(channels, power.state, passes),
+		limiter: yield* limiterOf(channels, power.state, passes, plan.base.vehicle.limiterRpm),
+		highestRpm: yield* peak(channels, laid.laps, channels.middleRpm),
+		highestMps: yield* peak(channels, laid.laps, channels.smoothMps),
 		circumference,
 		samples: {gear: gears, state: power.state, overall: channels.overall},
 	};
@@ -73,51 +89,52 @@ type Geared = {
  * Gears twice: by the documents' circumference, moved as a whole to where the humps lie, then by the one that these gears
  * give, whose growth is the log's own. Without a pair that fits there are no gears.
  */
-function inGears(ground: Ground, fit: Omit<Mounted, 'gearColumnAgrees'>): Geared {
+function* inGears(ground: Ground, fit: Omit<Mounted, 'gearColumnAgrees'>): Steps<Geared> {
 	const {channels, plan} = ground;
 	const {vehicle} = plan.base;
 	const places = gearPlaces(fit, vehicle.slip);
 	if (places === undefined) {
 		const gears = new Uint8Array(channels.run.samples);
 		const power = {state: gears, inGear: [], shifts: []};
-		return {gears, power, passes: passesOf(ground, channels, power), circumference: undefined};
+		return {gears, power, passes: yield* passesOf(ground, channels, power), circumference: undefined};
 	}
-	const rough = inPlaces(ground, channels, places);
+	const rough = yield* inPlaces(ground, channels, places);
 	if (rough.circumference === undefined) return rough;
 	const tire = {
 		rolloutM: rough.circumference.rolloutM.value,
 		growth: rough.circumference.growth.value,
 		slip: vehicle.slip,
 	};
-	const own = {...channels, overall: overallBy(channels.run, tire)};
-	return inPlaces(ground, own, {...places, at: places.overall.map(Math.log)});
+	const own = {...channels, overall: yield* overallBy(channels.run, tire, channels.pace)};
+	return yield* inPlaces(ground, own, {...places, at: places.overall.map(Math.log)});
 }
 
-function inPlaces(ground: Ground, channels: Channels, places: GearPlaces): Geared {
+function* inPlaces(ground: Ground, channels: Channels, places: GearPlaces): Steps<Geared> {
 	const {plan, stretches} = ground;
 	const {vehicle} = plan.base;
-	const gears = gearsOf(channels, places, stretches);
-	const power = powerOf(channels, gears, places, stretches, plan.car.shiftTimeS, vehicle.limiterRpm);
-	const passes = passesOf(ground, channels, power);
-	const circumference = fitCircumference(channels, gears, power.state, passes, places.overall, vehicle);
+	const gears = yield* gearsOf(channels, places, stretches);
+	const power = yield* powerOf(channels, gears, places, stretches, plan.car.shiftTimeS, vehicle.limiterRpm);
+	const passes = yield* passesOf(ground, channels, power);
+	const circumference = yield* fitCircumference(channels, gears, power.state, passes, places.overall, vehicle);
 	return {gears, power, passes, circumference};
 }
 
-function passesOf({laid, stretches}: Ground, channels: Channels, power: Power): Pass[] {
-	const runs = measured(channels, power.state, stretches, power.inGear);
+function* passesOf({laid, stretches}: Ground, channels: Channels, power: Power): Steps<Pass[]> {
+	const runs = yield* measured(channels, power.state, stretches, power.inGear);
 	return runs.map((one, i) => ({...one, ...laid.runs[i]!}));
 }
 
 /** Of the samples in gear at full throttle: how often the column says the same; undefined without a column. */
-function columnAgrees(
-	{gear}: LoggedRun,
+function* columnAgrees(
+	{run: {gear}, pace}: Channels,
 	gears: Uint8Array,
-	stretches: readonly {from: number; to: number}[],
-): number | undefined {
+	stretches: readonly Stretch[],
+): Steps<number | undefined> {
 	if (gear === null) return undefined;
 	let [same, all] = [0, 0];
 	for (const {from, to} of stretches) {
 		for (let i = from; i <= to; i++) {
+			if (pace.isDue()) yield;
 			if (gears[i] === 0 || Number.isNaN(gear[i]!)) continue;
 			all++;
 			if (gear[i] === gears[i]) same++;
@@ -126,10 +143,13 @@ function columnAgrees(
 	return all === 0 ? undefined : same / all;
 }
 
-function wheelspinOf(state: Uint8Array, passes: readonly Pass[]): Wheelspin {
+function* wheelspinOf({pace}: Channels, state: Uint8Array, passes: readonly Pass[]): Steps<Wheelspin> {
 	let [spin, all] = [0, 0];
 	for (const pass of passes) {
-		for (let i = pass.from; i <= pass.to; i++) if (state[i] === sampleState.spin) spin++;
+		for (let i = pass.from; i <= pass.to; i++) {
+			if (pace.isDue()) yield;
+			if (state[i] === sampleState.spin) spin++;
+		}
 		all += pass.to - pass.from + 1;
 	}
 	const good = passes.filter(pass => pass.good);
@@ -141,16 +161,31 @@ function wheelspinOf(state: Uint8Array, passes: readonly Pass[]): Wheelspin {
 	};
 }
 
-function limiterOf({timeS}: LoggedRun, state: Uint8Array, passes: readonly Pass[], rpm: number): LimiterFinding {
+function* limiterOf(
+	{run: {timeS}, pace}: Channels,
+	state: Uint8Array,
+	passes: readonly Pass[],
+	rpm: number,
+): Steps<LimiterFinding> {
 	let heldS = 0;
-	for (let i = 1; i < state.length; i++) if (state[i] === sampleState.limiter) heldS += timeS[i]! - timeS[i - 1]!;
+	for (let i = 1; i < state.length; i++) {
+		if (pace.isDue()) yield;
+		if (state[i] === sampleState.limiter) heldS += timeS[i]! - timeS[i - 1]!;
+	}
 	const distanceM = passes.reduce((sum, pass) => sum + pass.limiterM, 0);
 	return {rpm, distanceM, timeS: heldS, passes: passes.filter(pass => pass.limiterM > 0).length};
 }
 
-function peak({timeS, distanceM}: LoggedRun, laps: readonly Lap[], values: Channels['smoothMps']): Peak | undefined {
+function* peak(
+	{run: {timeS, distanceM}, pace}: Channels,
+	laps: readonly Lap[],
+	values: Float32Array,
+): Steps<Peak | undefined> {
 	let at = -1;
-	for (let i = 0; i < values.length; i++) if (values[i]! > (values[at] ?? Number.NEGATIVE_INFINITY)) at = i;
+	for (let i = 0; i < values.length; i++) {
+		if (pace.isDue()) yield;
+		if (values[i]! > (values[at] ?? Number.NEGATIVE_INFINITY)) at = i;
+	}
 	if (at < 0) return undefined;
 	const lap = Math.max(
 		0,

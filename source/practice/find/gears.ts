@@ -3,6 +3,7 @@ import type {Channels} from './channels.ts';
 import {samplesIn} from './channels.ts';
 import type {Mounted} from './findings.ts';
 import type {Stretch} from './full-throttle.ts';
+import type {Pace, Steps} from './steps.ts';
 
 /** Where each gear lies, by the documents' circumference: logarithms, gear 1 first. */
 export type GearPlaces = {
@@ -41,11 +42,16 @@ export function gearPlaces({best, clusters}: Pick<Mounted, 'best' | 'clusters'>,
 }
 
 /** Counted from 1; 0 where no gear fits. `stretches`: at full throttle, where no tire slips less than it should. */
-export function gearsOf({overall, rateHz}: Channels, places: GearPlaces, stretches: readonly Stretch[]): Uint8Array {
+export function* gearsOf(
+	{overall, rateHz, pace}: Channels,
+	places: GearPlaces,
+	stretches: readonly Stretch[],
+): Steps<Uint8Array> {
 	const {at, within, below} = places;
 	const gears = new Uint8Array(overall.length);
 	let next = 0;
 	for (let i = 0; i < overall.length; i++) {
+		if (pace.isDue()) yield;
 		while (next < stretches.length && stretches[next]!.to < i) next++;
 		const low = next < stretches.length && stretches[next]!.from <= i ? within : below;
 		const x = Math.log(overall[i]!);
@@ -57,7 +63,7 @@ export function gearsOf({overall, rateHz}: Channels, places: GearPlaces, stretch
 			}
 		}
 	}
-	dropShort(gears, samplesIn(shortestS, rateHz));
+	yield* dropShort(gears, samplesIn(shortestS, rateHz), pace);
 	return gears;
 }
 
@@ -65,9 +71,10 @@ export function gearsOf({overall, rateHz}: Channels, places: GearPlaces, stretch
 const mostStray = 2;
 
 /** Stretches in one gear that have fewer than `least` samples become 0: strays that fell on a ratio. */
-function dropShort(gears: Uint8Array, least: number): void {
+function* dropShort(gears: Uint8Array, least: number, pace: Pace): Steps<void> {
 	let [from, last, count] = [0, -1, 0];
 	for (let i = 0; i <= gears.length; i++) {
+		if (pace.isDue()) yield;
 		const gear = gears[i] ?? 0;
 		if (gear === 0 && i < gears.length) continue;
 		if (last >= 0 && gear === gears[last] && i - last <= mostStray + 1) [last, count] = [i, count + 1];

@@ -1,5 +1,6 @@
 /** A full-throttle run cut into stretches of one gear, and what lies between them. */
 import type {Stretch} from './full-throttle.ts';
+import type {Pace, Steps} from './steps.ts';
 
 export type InGear = Stretch & {readonly gear: number};
 
@@ -7,13 +8,14 @@ export type InGear = Stretch & {readonly gear: number};
 const mostStray = 2;
 
 /** The stretches in one gear, in order; strays of a sample or two inside one do not end it. */
-export function inGear(gears: Uint8Array, {from, to}: Stretch): InGear[] {
-	const stretches: InGear[] = [];
+export function* inGear(gears: Uint8Array, {from, to}: Stretch, pace: Pace): Steps<InGear[]> {
+	const stretches: {from: number; to: number; readonly gear: number}[] = [];
 	for (let i = from; i <= to; i++) {
+		if (pace.isDue()) yield;
 		const gear = gears[i]!;
 		if (gear === 0) continue;
 		const last = stretches.at(-1);
-		if (last?.gear === gear && i - last.to <= mostStray + 1) stretches[stretches.length - 1] = {...last, to: i};
+		if (last?.gear === gear && i - last.to <= mostStray + 1) last.to = i;
 		else stretches.push({from: i, to: i, gear});
 	}
 	return stretches;

@@ -1,7 +1,8 @@
 /** Where laps begin and end: by the log's column, else by the repeating full-throttle runs. */
-import type {LoggedRun} from '../../logs/logged-run.ts';
 import {median} from '../fit/robust.ts';
+import type {Channels} from './channels.ts';
 import type {Measured} from './passes.ts';
+import type {Steps} from './steps.ts';
 
 /** Samples from `from` up to but not including `to`. */
 export type LapCut = {readonly number: number; readonly from: number; readonly to: number};
@@ -10,12 +11,13 @@ export type LapCut = {readonly number: number; readonly from: number; readonly t
 const shortestLapS = 5;
 
 /** By the lap column; undefined where there is none, or it never changes. */
-export function lapsByColumn({lap, timeS, samples}: LoggedRun): LapCut[] | undefined {
+export function* lapsByColumn({run: {lap, timeS, samples}, pace}: Channels): Steps<LapCut[] | undefined> {
 	if (lap === null) return undefined;
 	const cuts: LapCut[] = [];
 	let from = 0;
 	let number = Number.NaN;
 	for (let i = 0; i <= samples; i++) {
+		if (pace.isDue()) yield;
 		const read = i < samples ? lap[i]! : Number.NaN;
 		if (i < samples && (Number.isNaN(read) || read === number)) continue;
 		if (!Number.isNaN(number)) cuts.push({number, from, to: i});
@@ -74,10 +76,15 @@ export function lapsByPasses(starts: readonly Measured[], samples: number): LapC
 }
 
 /** Laps of the known length, from the first exit on. */
-export function lapsByLength({distanceM, samples}: LoggedRun, startM: number, lapM: number): LapCut[] {
+export function* lapsByLength(
+	{run: {distanceM, samples}, pace}: Channels,
+	startM: number,
+	lapM: number,
+): Steps<LapCut[]> {
 	const edges = [0];
 	let nextM = startM;
 	for (let i = 1; i < samples; i++) {
+		if (pace.isDue()) yield;
 		if (distanceM[i]! < nextM) continue;
 		if (distanceM[i]! > 0) edges.push(i);
 		nextM += lapM;

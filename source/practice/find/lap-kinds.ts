@@ -6,6 +6,7 @@ import type {Channels} from './channels.ts';
 import type {Lap, LapKind} from './findings.ts';
 import type {LapCut} from './lap-cuts.ts';
 import {highestIn} from './passes.ts';
+import type {Steps} from './steps.ts';
 
 /** A lap and how many full-throttle runs began in it. */
 export type CutLap = LapCut & {readonly runs: number};
@@ -19,8 +20,9 @@ const partShare = 0.95;
 /** A hole in time longer than this breaks a lap. */
 const longestHoleS = 1.5;
 
-export function lapsOf(channels: Channels, track: Track, cuts: readonly CutLap[]): Lap[] {
-	const seen = cuts.map(cut => look(channels, cut));
+export function* lapsOf(channels: Channels, track: Track, cuts: readonly CutLap[]): Steps<Lap[]> {
+	const seen: Look[] = [];
+	for (const cut of cuts) seen.push(yield* look(channels, cut));
 	const fast = seen.filter(lap => lap.highestMps >= median(seen.map(({highestMps}) => highestMps)));
 	const inner = fast.filter(lap => lap.cut.from > 0 && lap.cut.to < channels.run.samples);
 	const whole = inner.length > 0 ? inner : fast;
@@ -59,10 +61,11 @@ type Usual = Pick<Look, 'timeS' | 'lengthM' | 'lowestMps' | 'highestMps'> & {
 	readonly lapM: number | undefined;
 };
 
-function look({run, smoothMps}: Channels, cut: CutLap): Look {
+function* look({run, smoothMps, pace}: Channels, cut: CutLap): Steps<Look> {
 	const last = Math.min(cut.to, run.samples - 1);
 	let [lowest, hole] = [cut.from, 0];
 	for (let i = cut.from; i < cut.to; i++) {
+		if (pace.isDue()) yield;
 		if (smoothMps[i]! < smoothMps[lowest]!) lowest = i;
 		if (i > cut.from) hole = Math.max(hole, run.timeS[i]! - run.timeS[i - 1]!);
 	}
@@ -73,7 +76,7 @@ function look({run, smoothMps}: Channels, cut: CutLap): Look {
 		lengthM: run.distanceM[last]! - run.distanceM[cut.from]!,
 		lowestMps: smoothMps[lowest]!,
 		lowestAt: (run.timeS[lowest]! - run.timeS[cut.from]!) / timeS,
-		highestMps: highestIn(smoothMps, cut.from, cut.to - 1),
+		highestMps: yield* highestIn(smoothMps, cut.from, cut.to - 1, pace),
 		holeS: hole,
 	};
 }

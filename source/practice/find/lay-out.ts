@@ -10,6 +10,7 @@ import {lapsOf} from './lap-kinds.ts';
 import {type Match, matchStraights} from './match-straights.ts';
 import type {Measured} from './passes.ts';
 import {type Places, placesByLaps, placesByRhythm} from './places.ts';
+import type {Steps} from './steps.ts';
 
 export type LaidOut = {
 	readonly laps: readonly Lap[];
@@ -19,11 +20,11 @@ export type LaidOut = {
 	readonly runs: readonly Pick<Pass, 'lap' | 'straight' | 'good'>[];
 };
 
-export function layOut(channels: Channels, plan: Plan, runs: readonly Measured[]): LaidOut {
-	const {cuts, lapsFrom, where, match} = cutAndMatch(channels, plan, runs);
+export function* layOut(channels: Channels, plan: Plan, runs: readonly Measured[]): Steps<LaidOut> {
+	const {cuts, lapsFrom, where, match} = yield* cutAndMatch(channels, plan, runs);
 	const lapOf = runs.map(pass => cuts.findLastIndex(cut => cut.from <= pass.from));
 	const counted = cuts.map((cut, i) => ({...cut, runs: lapOf.filter(lap => lap === i).length}));
-	const laps = lapsOf(channels, plan.track, counted);
+	const laps = yield* lapsOf(channels, plan.track, counted);
 	const straightOf = runs.map((_, i) => match?.straightAt[where?.of[i] ?? -1]);
 	const matching = {
 		matched: match?.matched ?? false,
@@ -41,8 +42,9 @@ type Cut = {
 	readonly match: Match | undefined;
 };
 
-function cutAndMatch({run, rateHz}: Channels, {track}: Plan, runs: readonly Measured[]): Cut {
-	const byColumn = lapsByColumn(run);
+function* cutAndMatch(channels: Channels, {track}: Plan, runs: readonly Measured[]): Steps<Cut> {
+	const {run, rateHz} = channels;
+	const byColumn = yield* lapsByColumn(channels);
 	const all: LapCut[] = run.samples === 0 ? [] : [{number: 1, from: 0, to: run.samples}];
 	if (runs.length === 0) {
 		return {cuts: byColumn ?? all, lapsFrom: byColumn ? 'column' : 'none', where: undefined, match: undefined};
@@ -56,7 +58,8 @@ function cutAndMatch({run, rateHz}: Channels, {track}: Plan, runs: readonly Meas
 	const first = firstPlace(match);
 	const starts = runs.filter((_, i) => where.of[i] === first);
 	if (starts.length > 1) return {cuts: lapsByPasses(starts, run.samples), lapsFrom: 'straights', where, match};
-	return {cuts: lapsByLength(run, runs[0]!.startM, where.lapM), lapsFrom: 'length', where, match};
+	const cuts = yield* lapsByLength(channels, runs[0]!.startM, where.lapM);
+	return {cuts, lapsFrom: 'length', where, match};
 }
 
 /** A log of one lap or less: its runs as they come. */

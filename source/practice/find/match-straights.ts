@@ -1,6 +1,6 @@
 /** The places of the log laid on the track's straights: in order around the lap, from whichever fits best. */
 import type {Straight, Track} from '../../drivetrain/track.ts';
-import {listed} from '../../planning/words.ts';
+import {counted, lengthText, listed} from '../../planning/words.ts';
 import {median} from '../fit/robust.ts';
 import type {Measured} from './passes.ts';
 import type {Places} from './places.ts';
@@ -42,11 +42,12 @@ export function matchStraights(track: Track, places: Places, passes: readonly Me
 	return {
 		straightAt: chosen.straightAt,
 		matched: names.length === 0,
-		why: words(close.length > 1, places, names, spare),
+		why: words(close.length > 1, places, names, spare, track),
 	};
 }
 
-function words(alike: boolean, places: Places, missing: readonly string[], spare: number): string {
+function words(alike: boolean, places: Places, missing: readonly string[], spare: number, track: Track): string {
+	if (missing.length === track.straights.length) return noneFound(places, track);
 	const told: string[] = [];
 	if (alike && places.at.length > 1) {
 		told.push(
@@ -58,6 +59,11 @@ function words(alike: boolean, places: Places, missing: readonly string[], spare
 	if (missing.length > 0) told.push(`Not found in the log: ${listed(missing)}.`);
 	if (spare > 0) told.push(`Full-throttle runs a lap that match no straight of the track: ${spare}.`);
 	return told.join(' ');
+}
+
+function noneFound({at, lapM}: Places, track: Track): string {
+	const known = track.lapM === undefined ? '' : `, by the document ${lengthText(track.lapM)}`;
+	return `None of the straights of ${track.name} is in the log: a lap of it is ${lengthText(lapM)}${known}, with ${counted(at.length, 'full-throttle run')}. Is it of another track?`;
 }
 
 function typical(passes: readonly Measured[], stepS: number): Place {

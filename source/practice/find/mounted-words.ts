@@ -11,9 +11,13 @@ export const fittingName = ({candidate}: Fitting) => `${candidate.pairName} set 
 
 const percent = (fraction: number, digits = 1) => `${(100 * fraction).toFixed(digits)} %`;
 
-/** "0.6 % more than in the documents" */
+/** Shown as 0.0 %. */
+const asStated = 0.0005;
+
+/** "a rolling circumference 0.6 % above the documents'" */
 function circumferenceText({circumferenceFactor}: Fitting): string {
 	const off = circumferenceFactor - 1;
+	if (Math.abs(off) < asStated) return "the documents' rolling circumference";
 	return `a rolling circumference ${percent(Math.abs(off))} ${off < 0 ? 'below' : 'above'} the documents'`;
 }
 
@@ -53,12 +57,17 @@ function insteadText(installed: Fitting | undefined): string {
 
 function alsoText({alsoFit, verdict}: Told): string {
 	if (alsoFit.length === 0) return '';
-	const names = listed(
-		alsoFit.map(fit => `${fittingName(fit)} (circumference ${signed(fit.circumferenceFactor - 1)})`),
-	);
+	const names = alsoFit
+		.slice(0, mostNamed)
+		.map(fit => `${fittingName(fit)} (circumference ${signed(fit.circumferenceFactor - 1)})`);
+	const more = alsoFit.length - names.length;
+	const told = listed(more > 0 ? [...names, `${more} more`] : names);
 	const kept = verdict === 'asInstalled' ? 'what is installed is kept' : 'the likeliest is taken';
-	return `The log alone cannot tell it from ${names}; ${kept}.`;
+	return `The log alone cannot tell it from ${told}; ${kept}.`;
 }
+
+/** As many as one reads. */
+const mostNamed = 3;
 
 const signed = (fraction: number) => `${fraction < 0 ? '-' : '+'}${percent(Math.abs(fraction))}`;
 

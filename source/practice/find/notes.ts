@@ -10,7 +10,7 @@ type Seen = Omit<Findings, 'notes'>;
 
 /** Below these rates, in samples a second, shifts are not seen, and exits and ends only to within some meters. */
 const shiftsFromHz = 8;
-const edgesFromHz = 4;
+export const edgesFromHz = 4;
 const gearColumnDoubt = 0.97;
 
 export function notesOn(seen: Seen, plan: Plan, by: FullThrottle['by']): Note[] {
@@ -28,7 +28,7 @@ export function notesOn(seen: Seen, plan: Plan, by: FullThrottle['by']): Note[] 
 function sampling({log}: Seen): Note[] {
 	if (log.rateHz >= shiftsFromHz || log.rateHz === 0) return [];
 	const rate = `The log has ${log.rateHz.toFixed(log.rateHz < 2 ? 1 : 0)} samples a second: shift RPM and missed shifts cannot be told from it`;
-	const edges = `; exits and ends of straights are the first and last full-throttle samples, up to ${(1 / log.rateHz).toFixed(1)} s off. Pair, gears and circumference are found all the same`;
+	const edges = `; exits and ends of straights are the first and last full-throttle samples, up to ${(1 / log.rateHz).toFixed(1)} s off, so no exit speed and no highest RPM is proposed. Pair, gears and circumference are found all the same`;
 	return [{code: 'slowSampling', text: `${rate}${log.rateHz < edgesFromHz ? edges : ''}.`}];
 }
 
@@ -64,10 +64,11 @@ function laps({laps: all, lapsFrom, passes}: Seen): Note[] {
 	else if (good.length === 1)
 		notes.push({code: 'oneLap', text: 'There is one good lap: no spread from lap to lap can be told.'});
 	const left = all.filter((lap): lap is Lap & {kind: Exclude<LapKind, 'good'>} => lap.kind !== 'good');
+	const others = left.length > mostTold ? [counted(left.length - mostTold, 'other')] : [];
 	if (left.length > 0)
 		notes.push({
 			code: 'lapsLeftOut',
-			text: `Left out of medians and fits: ${listed(left.slice(0, mostTold).map(told))}${left.length > mostTold ? ` and ${counted(left.length - mostTold, 'other')}` : ''}.`,
+			text: `Left out of medians and fits: ${listed([...left.slice(0, mostTold).map(told), ...others])}.`,
 		});
 	return notes;
 }

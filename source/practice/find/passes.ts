@@ -5,6 +5,7 @@ import type {Pass} from './findings.ts';
 import {sampleState} from './findings.ts';
 import type {Stretch} from './full-throttle.ts';
 import type {InGear} from './in-gear.ts';
+import type {Pace, Steps} from './steps.ts';
 
 /** What a pass is by itself; its lap and straight come later. */
 export type Measured = Omit<Pass, 'lap' | 'straight' | 'good'>;
@@ -14,27 +15,29 @@ const edgeS = 0.5;
 const mostSamples = 24;
 const fewestSamples = 3;
 
-export function measured(
+export function* measured(
 	channels: Channels,
 	state: Uint8Array | undefined,
 	stretches: readonly Stretch[],
 	gearsIn: readonly (readonly InGear[])[],
-): Measured[] {
-	return stretches.map((stretch, i) => measure(channels, state, stretch, stretches[i - 1]?.to, gearsIn[i] ?? []));
+): Steps<Measured[]> {
+	const passes: Measured[] = [];
+	for (const [i, stretch] of stretches.entries())
+		passes.push(yield* measure(channels, state, stretch, stretches[i - 1]?.to, gearsIn[i] ?? []));
+	return passes;
 }
 
-function measure(
+function* measure(
 	channels: Channels,
 	state: Uint8Array | undefined,
 	{from, to}: Stretch,
 	endBefore: number | undefined,
 	gears: readonly InGear[],
-): Measured {
-	const {run, smoothMps, middleRpm} = channels;
+): Steps<Measured> {
+	const {run, smoothMps, middleRpm, pace} = channels;
 	const endMps = edge(channels, run.speedMps, to, from, -1) ?? smoothMps[to]!;
 	const last = gears.at(-1);
 	const inLast = last === undefined || last.to < to - 2 ? from : Math.max(from, last.from);
-	const spin = spent(run.timeS, state, from, to, sampleState.spin);
 	return {
 		from,
 		to,
@@ -42,16 +45,16 @@ function measure(
 		startM: run.distanceM[from]!,
 		exitMps: edge(channels, run.speedMps, from, to, 1) ?? smoothMps[from]!,
 		endMps,
-		minimumMps: endBefore === undefined ? undefined : lowestIn(smoothMps, endBefore, from),
-		highestMps: Math.max(endMps, highestIn(smoothMps, from, to)),
-		highestRpm: known(highestIn(middleRpm, from, to)),
+		minimumMps: endBefore === undefined ? undefined : yield* lowestIn(smoothMps, endBefore, from, pace),
+		highestMps: Math.max(endMps, yield* highestIn(smoothMps, from, to, pace)),
+		highestRpm: known(yield* highestIn(middleRpm, from, to, pace)),
 		endRpm: edge(channels, run.rpm, to, inLast, -1),
 		exitGear: gears[0]?.gear,
 		endGear: last?.gear,
 		timeS: run.timeS[to]! - run.timeS[from]!,
 		lengthM: run.distanceM[to]! - run.distanceM[from]!,
-		spinS: spin,
-		limiterM: spent(run.distanceM, state, from, to, sampleState.limiter),
+		spinS: yield* spent(run.timeS, state, {from, to}, sampleState.spin, pace),
+		limiterM: yield* spent(run.distanceM, state, {from, to}, sampleState.limiter, pace),
 	};
 }
 
@@ -80,24 +83,39 @@ function edge(
 }
 
 /** How much of time or distance went by in a state. */
-function spent(along: Float64Array, state: Uint8Array | undefined, from: number, to: number, which: number): number {
+function* spent(
+	along: Float64Array,
+	state: Uint8Array | undefined,
+	{from, to}: Stretch,
+	which: number,
+	pace: Pace,
+): Steps<number> {
 	if (state === undefined) return 0;
 	let sum = 0;
-	for (let i = from; i < to; i++) if (state[i] === which) sum += along[i + 1]! - along[i]!;
+	for (let i = from; i < to; i++) {
+		if (pace.isDue()) yield;
+		if (state[i] === which) sum += along[i + 1]! - along[i]!;
+	}
 	return sum;
 }
 
-function lowestIn(values: Float32Array, from: number, to: number): number {
+function* lowestIn(values: Float32Array, from: number, to: number, pace: Pace): Steps<number> {
 	let lowest = Number.POSITIVE_INFINITY;
-	for (let i = from; i <= to; i++) if (values[i]! < lowest) lowest = values[i]!;
+	for (let i = from; i <= to; i++) {
+		if (pace.isDue()) yield;
+		if (values[i]! < lowest) lowest = values[i]!;
+	}
 	return lowest;
 }
 
 const known = (value: number) => (Number.isNaN(value) ? undefined : value);
 
 /** NaN where nothing was read. */
-export function highestIn(values: Float32Array, from: number, to: number): number {
+export function* highestIn(values: Float32Array, from: number, to: number, pace: Pace): Steps<number> {
 	let highest = Number.NEGATIVE_INFINITY;
-	for (let i = from; i <= to; i++) if (values[i]! > highest) highest = values[i]!;
+	for (let i = from; i <= to; i++) {
+		if (pace.isDue()) yield;
+		if (values[i]! > highest) highest = values[i]!;
+	}
 	return highest === Number.NEGATIVE_INFINITY ? Number.NaN : highest;
 }

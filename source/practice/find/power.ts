@@ -4,6 +4,7 @@ import {sampleState} from './findings.ts';
 import type {Stretch} from './full-throttle.ts';
 import type {GearPlaces} from './gears.ts';
 import {type Between, between, type InGear, inGear} from './in-gear.ts';
+import type {Pace, Steps} from './steps.ts';
 
 export type ShiftSeen = {
 	readonly from: number;
@@ -32,35 +33,50 @@ const freeShare = 0.14;
 const flareShare = 0.025;
 const lateS = 0.35;
 
-export function powerOf(
+export function* powerOf(
 	channels: Channels,
 	gears: Uint8Array,
 	places: GearPlaces,
 	stretches: readonly Stretch[],
 	shiftTimeS: number,
 	limiterRpm: number,
-): Power {
+): Steps<Power> {
 	const state = new Uint8Array(gears.length);
-	for (let i = 0; i < gears.length; i++) if (gears[i]! > 0) state[i] = sampleState.inGear;
-	const all = stretches.map(stretch => inGear(gears, stretch));
-	const shifts = stretches.map((stretch, i) => {
-		const gaps = between(stretch, all[i]!);
-		for (const gap of gaps) markSpin(channels, state, gears, places, gap);
-		for (const one of all[i]!) markSteady(channels, state, one, stretch);
-		markLimiter(channels, state, stretch, limiterRpm);
-		return gaps.flatMap(gap => shiftIn(channels, gap, shiftTimeS));
-	});
+	for (let i = 0; i < gears.length; i++) {
+		if (channels.pace.isDue()) yield;
+		if (gears[i]! > 0) state[i] = sampleState.inGear;
+	}
+	const all: InGear[][] = [];
+	const shifts: ShiftSeen[][] = [];
+	for (const stretch of stretches) {
+		const pieces = yield* inGear(gears, stretch, channels.pace);
+		const gaps = between(stretch, pieces);
+		const seen: ShiftSeen[] = [];
+		for (const gap of gaps) yield* markSpin(channels, state, gears, places, gap);
+		for (const one of pieces) yield* markSteady(channels, state, one, stretch);
+		yield* markLimiter(channels, state, stretch, limiterRpm);
+		for (const gap of gaps) seen.push(...(yield* shiftIn(channels, gap, shiftTimeS)));
+		all.push(pieces);
+		shifts.push(seen);
+	}
 	return {state, inGear: all, shifts};
 }
 
 /** Samples above the gear that follows, or that goes on: the wheels spin. They take that gear. */
-function markSpin(channels: Channels, state: Uint8Array, gears: Uint8Array, places: GearPlaces, gap: Between): void {
+function* markSpin(
+	channels: Channels,
+	state: Uint8Array,
+	gears: Uint8Array,
+	places: GearPlaces,
+	gap: Between,
+): Steps<void> {
 	const gear = gap.after?.gear;
 	if (gear === undefined || (gap.before !== undefined && gap.before.gear !== gear)) return;
 	const above = (i: number) => Math.log(channels.overall[i]!) - places.at[gear - 1]!;
-	const highest = highestIn(gap, above);
+	const highest = yield* secondHighestIn(gap, above, channels.pace);
 	if (gap.before !== undefined && highest > freeShare) return;
 	for (let i = gap.from; i <= gap.to; i++) {
+		if (channels.pace.isDue()) yield;
 		if (!(above(i) > places.within)) continue;
 		state[i] = sampleState.spin;
 		gears[i] = gear;
@@ -68,9 +84,10 @@ function markSpin(channels: Channels, state: Uint8Array, gears: Uint8Array, plac
 }
 
 /** The second highest: one reading alone may be astray. */
-function highestIn({from, to}: Stretch, of: (i: number) => number): number {
+function* secondHighestIn({from, to}: Stretch, of: (i: number) => number, pace: Pace): Steps<number> {
 	let [highest, second] = [Number.NEGATIVE_INFINITY, Number.NEGATIVE_INFINITY];
 	for (let i = from; i <= to; i++) {
+		if (pace.isDue()) yield;
 		const value = of(i);
 		if (value > highest) [highest, second] = [value, highest];
 		else if (value > second) second = value;
@@ -78,13 +95,14 @@ function highestIn({from, to}: Stretch, of: (i: number) => number): number {
 	return from === to ? highest : second;
 }
 
-function markSteady({run, rateHz}: Channels, state: Uint8Array, one: InGear, whole: Stretch): void {
+function* markSteady({run, rateHz, pace}: Channels, state: Uint8Array, one: InGear, whole: Stretch): Steps<void> {
 	const spun = state[one.from - 1] === sampleState.spin;
 	const startS = run.timeS[one.from]! + (spun ? afterSpinS : settleS);
 	const endS = run.timeS[one.to]! - beforeEndS;
 	// At a sample a second the exit and the shift lie somewhere between two samples: the one inside is whole.
 	const coarse = 1 / rateHz > settleS;
 	for (let i = one.from; i <= one.to; i++) {
+		if (pace.isDue()) yield;
 		const timeS = run.timeS[i]!;
 		const inside = coarse ? i > whole.from || i > one.from : timeS >= startS && timeS <= endS;
 		if (state[i] === sampleState.inGear && inside) state[i] = sampleState.steady;
@@ -97,35 +115,43 @@ const limiterBand = 0.006;
 const heldS = 0.3;
 const heldShare = 0.002;
 
-function markLimiter(
-	{run: {timeS}, middleRpm}: Channels,
+function* markLimiter(
+	{run: {timeS}, middleRpm, pace}: Channels,
 	state: Uint8Array,
 	{from, to}: Stretch,
 	limiterRpm: number,
-): void {
+): Steps<void> {
 	const near = (i: number) => Math.abs(middleRpm[i]! / limiterRpm - 1) <= limiterBand;
 	for (let i = from; i <= to; i++) {
+		if (pace.isDue()) yield;
 		if (!near(i)) continue;
 		let last = i;
-		while (last < to && near(last + 1)) last++;
+		while (last < to && near(last + 1)) {
+			if (pace.isDue()) yield;
+			last++;
+		}
 		const third = Math.max(1, Math.floor((last - i + 1) / 3));
-		const rose = meanOf(middleRpm, last - third + 1, last) - meanOf(middleRpm, i, i + third - 1);
+		const begin = yield* meanOf(middleRpm, i, i + third - 1, pace);
+		const rose = (yield* meanOf(middleRpm, last - third + 1, last, pace)) - begin;
 		if (timeS[last]! - timeS[i]! >= heldS && rose <= heldShare * limiterRpm)
 			state.fill(sampleState.limiter, i, last + 1);
 		i = last;
 	}
 }
 
-function meanOf(values: Float32Array, from: number, to: number): number {
+function* meanOf(values: Float32Array, from: number, to: number, pace: Pace): Steps<number> {
 	let sum = 0;
-	for (let i = from; i <= to; i++) sum += values[i]!;
+	for (let i = from; i <= to; i++) {
+		if (pace.isDue()) yield;
+		sum += values[i]!;
+	}
 	return sum / (to - from + 1);
 }
 
-function shiftIn({run, rateHz, middleRpm}: Channels, gap: Between, shiftTimeS: number): ShiftSeen[] {
+function* shiftIn({run, rateHz, middleRpm, pace}: Channels, gap: Between, shiftTimeS: number): Steps<ShiftSeen[]> {
 	const {before, after} = gap;
 	if (before === undefined) return [];
-	const flare = highestIn(gap, i => middleRpm[i]!) / run.rpm[before.to]! - 1;
+	const flare = (yield* secondHighestIn(gap, i => middleRpm[i]!, pace)) / run.rpm[before.to]! - 1;
 	if (after === undefined) {
 		const ran = flare > flareShare && run.timeS[gap.to]! - run.timeS[gap.from]! > shiftTimeS;
 		return ran ? [{from: before.gear, into: undefined, leftAt: before.to, enteredAt: gap.to, missed: true}] : [];

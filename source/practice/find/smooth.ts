@@ -1,14 +1,19 @@
 /** Channels without their gaps, strays and noise: for finding where things happen, never for what is measured there. */
 import {quantile} from '../fit/robust.ts';
+import type {Pace, Steps} from './steps.ts';
 
 /** Gaps bridged in a straight line; the ends are held. All 0 where there is nothing. */
-export function bridged(values: Float32Array): Float32Array {
+export function* bridged(values: Float32Array, pace: Pace): Steps<Float32Array> {
 	const full = values.slice();
 	let last = -1;
 	for (let i = 0; i < full.length; i++) {
+		if (pace.isDue()) yield;
 		if (Number.isNaN(full[i]!)) continue;
 		const step = last < 0 ? 0 : (full[i]! - full[last]!) / (i - last);
-		for (let j = last + 1; j < i; j++) full[j] = last < 0 ? full[i]! : full[last]! + step * (j - last);
+		for (let j = last + 1; j < i; j++) {
+			if (pace.isDue()) yield;
+			full[j] = last < 0 ? full[i]! : full[last]! + step * (j - last);
+		}
 		last = i;
 	}
 	full.fill(last < 0 ? 0 : full[last]!, last + 1);
@@ -16,9 +21,10 @@ export function bridged(values: Float32Array): Float32Array {
 }
 
 /** The middle one of each three in a row: single strays go. NaN where one of them is. The ends stay. */
-export function middleOfThree(values: Float32Array): Float32Array {
+export function* middleOfThree(values: Float32Array, pace: Pace): Steps<Float32Array> {
 	const middle = values.slice();
 	for (let i = 1; i < values.length - 1; i++) {
+		if (pace.isDue()) yield;
 		const [a, b, c] = [values[i - 1]!, values[i]!, values[i + 1]!];
 		middle[i] = a + b + c - Math.max(a, b, c) - Math.min(a, b, c);
 	}
@@ -26,23 +32,32 @@ export function middleOfThree(values: Float32Array): Float32Array {
 }
 
 /** Mean over `width` samples about each one, fewer at the ends. */
-export function movingMean(values: Float32Array, width: number): Float32Array {
+export function* movingMean(values: Float32Array, width: number, pace: Pace): Steps<Float32Array> {
 	const half = Math.floor(width / 2);
-	if (half === 0) return values.slice();
+	const means = values.slice();
+	if (half === 0) return means;
 	const sums = new Float64Array(values.length + 1);
-	for (let i = 0; i < values.length; i++) sums[i + 1] = sums[i]! + values[i]!;
-	return values.map((_, i) => {
+	for (let i = 0; i < values.length; i++) {
+		if (pace.isDue()) yield;
+		sums[i + 1] = sums[i]! + values[i]!;
+	}
+	for (let i = 0; i < values.length; i++) {
+		if (pace.isDue()) yield;
 		const [from, to] = [Math.max(0, i - half), Math.min(values.length, i + half + 1)];
-		return (sums[to]! - sums[from]!) / (to - from);
-	});
+		means[i] = (sums[to]! - sums[from]!) / (to - from);
+	}
+	return means;
 }
 
-/** Quantile of a long channel from at most this many of its samples; NaN does not count. */
+/** What is told from a long channel is told from at most about this many of its samples. */
 const enough = 20_000;
 
+/** Every so many-th of a channel is enough to tell a quantile by. */
+export const everyOf = (samples: number): number => Math.max(1, Math.floor(samples / enough));
+
+/** Quantile of a long channel, roughly; NaN does not count. */
 export function roughQuantile(values: ArrayLike<number>, share: number): number {
-	const every = Math.max(1, Math.floor(values.length / enough));
 	const some: number[] = [];
-	for (let i = 0; i < values.length; i += every) if (!Number.isNaN(values[i]!)) some.push(values[i]!);
+	for (let i = 0; i < values.length; i += everyOf(values.length)) if (!Number.isNaN(values[i]!)) some.push(values[i]!);
 	return quantile(Float64Array.from(some).sort(), share);
 }

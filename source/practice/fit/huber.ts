@@ -2,6 +2,7 @@
  * Robust regression after P. J. Huber (Robust estimation of a location parameter, Ann. Math. Statist. 35, 1964; Robust
  * Statistics, 1981, ch. 7): squares near the middle, absolute values far out, by iteratively reweighted least squares.
  */
+import {finish} from '../../planning/run-rack.ts';
 import {type Columns, leastSquares, residualsOf} from './least-squares.ts';
 import {robustSd} from './robust.ts';
 
@@ -34,12 +35,22 @@ const settled = 1e-9;
  * together (sandwich over groups). Undefined where the columns do not determine the coefficients.
  */
 export function huberFit(columns: Columns, y: Float64Array, groups?: ArrayLike<number>): RobustFit | undefined {
+	return finish(huberSteps(columns, y, groups));
+}
+
+/** The same round by round, for a caller that has other things to do in between. */
+export function* huberSteps(
+	columns: Columns,
+	y: Float64Array,
+	groups?: ArrayLike<number>,
+): Generator<undefined, RobustFit | undefined, void> {
 	let fit = leastSquares(columns, y);
 	if (fit === undefined) return undefined;
 	let coefficients = fit.coefficients;
 	let residuals = fit.residuals;
 	let weights = new Float64Array(y.length).fill(1);
 	for (let round = 0; round < mostRounds; round++) {
+		yield;
 		const scale = robustSd(residuals, 0);
 		if (!(scale > 0)) break;
 		weights = residuals.map(r => huberWeight(r / scale));
@@ -50,6 +61,7 @@ export function huberFit(columns: Columns, y: Float64Array, groups?: ArrayLike<n
 		residuals = residualsOf(columns, y, coefficients);
 		if (coefficients.every((b, j) => Math.abs(b - before[j]!) <= settled * (Math.abs(b) + scale))) break;
 	}
+	yield;
 	const scale = robustSd(residuals, 0);
 	const covariance =
 		groups === undefined

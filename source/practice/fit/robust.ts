@@ -17,6 +17,14 @@ export function quantile(rising: ArrayLike<number>, share: number): number {
 	return low + (at - below) * ((rising[below + 1] ?? low) - low);
 }
 
+/** The mean of sorted values without that share, rounded up, at each end; with fewer than four of all of them. NaN of nothing. */
+export function trimmedMean(rising: ArrayLike<number>, share: number): number {
+	const off = rising.length < 4 ? 0 : Math.ceil(share * rising.length);
+	let sum = 0;
+	for (let i = off; i < rising.length - off; i++) sum += rising[i]!;
+	return sum / (rising.length - 2 * off);
+}
+
 /** A rising copy. NaN goes to the end. */
 export function sorted(values: ArrayLike<number>): Float64Array {
 	return Float64Array.from(values).sort();

@@ -4,6 +4,7 @@
  */
 import {brentRoot} from '../../drivetrain/brent.ts';
 import {mphMps} from '../../drivetrain/constants.ts';
+import {finish} from '../../planning/run-rack.ts';
 import {huberWeight} from '../fit/huber.ts';
 import {leastSquares} from '../fit/least-squares.ts';
 import {robustSd} from '../fit/robust.ts';
@@ -16,7 +17,7 @@ export type Factor = 'drag' | 'power';
 /** What one straight says by itself. */
 export type StraightAnchor = {
 	readonly reading: Reading;
-	/** Drag where 1 % of it moves the end speed by 0.2 mph or more, else power; undefined where neither does much. */
+	/** Drag where 1 % of it takes 0.2 mph or more from the end speed, else power; undefined where neither does much, or does it by leaps. */
 	readonly tells: Factor | undefined;
 	/** m/s that 1 % more drag takes away, and that 1 % more power gives, at the end of the straight. */
 	readonly perPercent: {readonly drag: number; readonly power: number};
@@ -48,15 +49,26 @@ const onePercent = 0.01;
 
 /** The anchor of the readings that have an end speed and are not on the limiter; undefined where there is none. */
 export function anchor(ask: AskModel, readings: readonly Reading[], trim: Trim): Anchor | undefined {
-	const told = readings.flatMap(reading => {
+	return finish(anchorSteps(ask, readings, trim));
+}
+
+/** The same step by step: a straight, or a round of all of them. */
+export function* anchorSteps(
+	ask: AskModel,
+	readings: readonly Reading[],
+	trim: Trim,
+): Generator<undefined, Anchor | undefined, void> {
+	const told: StraightAnchor[] = [];
+	for (const reading of readings) {
+		yield;
 		const one = reading.endMps === undefined || reading.limited ? undefined : straightAnchor(ask, reading, trim);
-		return one === undefined ? [] : [one];
-	});
+		if (one !== undefined) told.push(one);
+	}
 	const usable = told.filter(({alone}) => alone !== undefined);
 	if (usable.length === 0)
 		return told.length === 0 ? undefined : {drag: undefined, power: undefined, straights: told, misfit: undefined};
 	const factors = (['drag', 'power'] as const).filter(factor => usable.some(({tells}) => tells === factor));
-	const fit = fitAll(ask, usable, trim, factors);
+	const fit = yield* fitAll(ask, usable, trim, factors);
 	const final = {...trim, ...valuesOf(fit.factors)};
 	return {
 		drag: fit.factors.drag,
@@ -80,7 +92,10 @@ function straightAnchor(ask: AskModel, reading: Reading, trim: Trim): StraightAn
 	if (run === undefined) return undefined;
 	const slopes = {drag: slopeOf(ask, reading, trim, 'drag'), power: slopeOf(ask, reading, trim, 'power')};
 	const perPercent = {drag: slopes.drag * onePercent, power: slopes.power * onePercent};
-	const tells = tellsOf(perPercent);
+	const isSmooth = (['drag', 'power'] as const).every(factor =>
+		changesSmoothly(ask, reading, trim, factor, run.endMps),
+	);
+	const tells = isSmooth ? tellsOf(perPercent) : undefined;
 	const seMps = together(reading.endMps!.se, exitEffect(ask, reading, trim));
 	const beforeMps = reading.endMps!.value - run.endMps;
 	const silent = {reading, tells, perPercent, seMps, alone: undefined, beforeMps, afterMps: beforeMps};
@@ -98,8 +113,8 @@ function straightAnchor(ask: AskModel, reading: Reading, trim: Trim): StraightAn
 	};
 }
 function tellsOf({drag, power}: StraightAnchor['perPercent']): Factor | undefined {
-	if (Math.abs(drag) >= tellingMps) return 'drag';
-	return Math.abs(power) >= silentMps ? 'power' : undefined;
+	if (-drag >= tellingMps) return 'drag';
+	return power >= silentMps ? 'power' : undefined;
 }
 
 /** Far below what any speed is known to. */
@@ -110,6 +125,16 @@ function slopeOf(ask: AskModel, reading: Reading, trim: Trim, factor: Factor): n
 	const at = (by: number) => ask(reading, {...trim, [factor]: trim[factor] * (1 + by)})?.endMps ?? Number.NaN;
 	return (at(onePercent / 2) - at(-onePercent / 2)) / (onePercent * trim[factor]);
 }
+
+/** Not where a little more or less of the factor has another gear or shift at the end: such a leap tells nothing of the factor. */
+function changesSmoothly(ask: AskModel, reading: Reading, trim: Trim, factor: Factor, endMps: number): boolean {
+	const change = (by: number) =>
+		Math.abs((ask(reading, {...trim, [factor]: trim[factor] * (1 + by)})?.endMps ?? Number.NaN) - endMps);
+	const [up, down] = [change(onePercent / 2), change(-onePercent / 2)];
+	return Math.max(up, down) <= mostUneven * Math.min(up, down) + slightMps;
+}
+const mostUneven = 2;
+const slightMps = 0.02 * mphMps;
 
 /** What the uncertainty of the exit speed makes at the end, m/s. */
 function exitEffect(ask: AskModel, reading: Reading, trim: Trim): number {
@@ -130,18 +155,24 @@ const settled = 1e-9;
  * not carry the others away. Standard errors by the given deviations of the readings, widened where the readings scatter more
  * than these say (R. T. Birge, Phys. Rev. 40, 1932).
  */
-function fitAll(ask: AskModel, told: readonly StraightAnchor[], start: Trim, factors: readonly Factor[]): Fit {
+function* fitAll(
+	ask: AskModel,
+	told: readonly StraightAnchor[],
+	start: Trim,
+	factors: readonly Factor[],
+): Generator<undefined, Fit, void> {
 	const given = told.map(({seMps}) => Math.max(seMps, leastSeMps));
 	let weights: Float64Array = Float64Array.from(given, se => 1 / se ** 2);
 	let trim = start;
 	let inverse: Float64Array | undefined;
 	for (let round = 0; round < mostRounds; round++) {
+		yield;
 		const misses = Float64Array.from(told, ({reading}) => missBy(ask, reading, trim));
 		const columns = factors.map(factor => Float64Array.from(told, ({reading}) => slopeOf(ask, reading, trim, factor)));
 		if (told.length >= fewestForRobust) weights = robustWeights(misses, given);
 		const step = leastSquares(columns, misses, weights);
 		// Readings that cannot tell the two apart: the one that more of them tell.
-		if (step === undefined) return factors.length > 1 ? fitAll(ask, told, start, [commonest(told)]) : noFit;
+		if (step === undefined) return factors.length > 1 ? yield* fitAll(ask, told, start, [commonest(told)]) : noFit;
 		inverse = step.inverse;
 		const before = trim;
 		trim = {...trim};

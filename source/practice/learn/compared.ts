@@ -11,12 +11,19 @@ export type Compared = {
 	readonly after: ModelRun | undefined;
 };
 
-export function comparedRuns(ask: AskModel, readings: readonly Reading[], trim: Trim): Compared[] {
-	return readings.map(reading => ({
-		reading,
-		before: inItsGear(reading, ask({...reading, exitMps: undefined}, untrimmed)),
-		after: inItsGear(reading, ask(reading, trim)),
-	}));
+/** A step a straight. */
+export function* comparedRuns(
+	ask: AskModel,
+	readings: readonly Reading[],
+	trim: Trim,
+): Generator<undefined, Compared[], void> {
+	const compared: Compared[] = [];
+	for (const reading of readings) {
+		yield;
+		const before = inItsGear(reading, ask({...reading, exitMps: undefined}, untrimmed));
+		compared.push({reading, before, after: inItsGear(reading, ask(reading, trim))});
+	}
+	return compared;
 }
 
 /** The RPM that the model's speed is in the gear that practice ended in: a late shift is no difference of the car. */

@@ -18,15 +18,20 @@ const unknownSpeedSe = 0.5 * mphMps;
 const unknownRpmSe = 20;
 const unknownTimeS = 0.05;
 
-/** One a straight that the log shows, in the track's order. */
-export function readingsFrom({straights, passes}: Findings, candidate: Candidate, ask: AskModel): Reading[] {
-	return straights
-		.filter(straight => straight.passes > 0)
-		.map(straight => {
-			const reading = readingFrom(straight, candidate);
-			const own = passes.filter(pass => pass.good && pass.straight === straight.index);
-			return {...reading, endMps: likeForLike(reading, own, ask) ?? reading.endMps};
-		});
+/** One a straight that the log shows, in the track's order; a step each. */
+export function* readingsFrom(
+	{straights, passes}: Findings,
+	candidate: Candidate,
+	ask: AskModel,
+): Generator<undefined, Reading[], void> {
+	const readings: Reading[] = [];
+	for (const straight of straights.filter(straight => straight.passes > 0)) {
+		yield;
+		const reading = readingFrom(straight, candidate);
+		const own = passes.filter(pass => pass.good && pass.straight === straight.index);
+		readings.push({...reading, endMps: likeForLike(reading, own, ask) ?? reading.endMps});
+	}
+	return readings;
 }
 
 /**

@@ -2,20 +2,31 @@
 import type {Car} from '../../drivetrain/car.ts';
 import type {Track} from '../../drivetrain/track.ts';
 import type {Uncertainties} from '../../drivetrain/uncertainties.ts';
+import type {LoggedRun} from '../../logs/logged-run.ts';
 import {type Candidate, candidateOf, gearboxNamed, onRack} from '../../planning/candidates.ts';
 import {done, failed, fault} from '../../planning/faults.ts';
 import {measuredPoints} from '../../planning/measured.ts';
 import {type Plan, planFor} from '../../planning/plan.ts';
 import type {Outcome} from '../../planning/results.ts';
+import {finish} from '../../planning/run-rack.ts';
 import {counted} from '../../planning/words.ts';
 import type {Findings} from '../find/findings.ts';
-import {type Anchor, anchor} from './anchor.ts';
+import {type Anchor, anchorSteps} from './anchor.ts';
 import {type CircumferenceLearned, circumferenceFromFindings, circumferenceFromReadings} from './circumference.ts';
 import {type Compared, comparedRuns} from './compared.ts';
 import {readingsFrom} from './from-findings.ts';
-import {modelOf} from './model.ts';
+import {type GripLearned, gripSteps} from './grip.ts';
+import {modelOf, motionsOf} from './model.ts';
 import {type Known, known, type Reading} from './reading.ts';
-import {circumferenceSeen, givenSpeedSe, type Held, heldCircumferenceShare, readingOf, type Seen} from './seen.ts';
+import {
+	type CircumferenceReading,
+	circumferenceSeen,
+	givenSpeedSe,
+	type Held,
+	heldCircumferenceShare,
+	readingOf,
+	type Seen,
+} from './seen.ts';
 import {type Trim, untrimmed} from './trim.ts';
 
 export type Subject = {
@@ -35,23 +46,37 @@ export type Learning = {
 	/** Without a speed one number cannot tell circumference and speed apart: what was taken for right. */
 	readonly held: Held | undefined;
 	readonly anchor: Anchor | undefined;
+	/** Undefined where it was not asked for. */
+	readonly grip: GripLearned | undefined;
 	readonly readings: readonly Reading[];
 	/** All of it, to compute with. */
 	readonly trim: Trim;
 	readonly compared: readonly Compared[];
 };
 
+/** Learning for a caller that has other things to do in between: a step is a straight, or a round of a fit. */
+export type LearnSteps = Generator<undefined, Outcome<Learning>, void>;
+
 /** From numbers that were seen by hand; each may be at another straight, with another pair. */
 export function learnFromSeen(subject: Subject, seen: readonly Seen[], held: Held): Outcome<Learning> {
-	return withPlan(subject, plan => {
+	return finish(seenSteps(subject, seen, held));
+}
+
+export function seenSteps(subject: Subject, seen: readonly Seen[], held: Held): LearnSteps {
+	return withPlan(subject, function* (plan) {
 		const ask = modelOf(subject.car, subject.track);
-		const words = seen.flatMap(one => circumferenceSeen(plan, ask, one, held) ?? []);
+		const words: CircumferenceReading[] = [];
+		for (const one of seen) {
+			yield;
+			const word = circumferenceSeen(plan, ask, one, held);
+			if (word !== undefined) words.push(word);
+		}
 		const circumference = circumferenceFromReadings(plan, words);
 		const rolloutM = circumference?.rolloutM ?? statedRollout(subject, plan);
 		const readings = seen.map(one => readingOf(plan, ask, one, held, rolloutM));
 		const needsHolding = seen.some(one => one.speedMps === undefined);
 		const from = `${counted(seen.length, 'number')} seen by hand`;
-		return learned(subject, {
+		return yield* learned(subject, {
 			source: 'hand',
 			from,
 			candidate: seen[0]?.candidate,
@@ -62,31 +87,30 @@ export function learnFromSeen(subject: Subject, seen: readonly Seen[], held: Hel
 	});
 }
 
-/** From a logged run. */
-export function learnFromFindings(subject: Subject, findings: Findings): Outcome<Learning> {
-	return withPlan(subject, plan => {
+/** From a logged run; with the run itself grip is learned too. */
+export function learnFromFindings(subject: Subject, findings: Findings, gripFrom?: LoggedRun): Outcome<Learning> {
+	return finish(findingsSteps(subject, findings, gripFrom));
+}
+
+export function findingsSteps(subject: Subject, findings: Findings, gripFrom?: LoggedRun): LearnSteps {
+	return withPlan(subject, function* (plan) {
 		const candidate = findings.mounted.best?.candidate;
 		const circumference = circumferenceFromFindings(plan, findings);
 		const readings =
-			candidate === undefined ? [] : readingsFrom(findings, candidate, modelOf(subject.car, subject.track));
+			candidate === undefined ? [] : yield* readingsFrom(findings, candidate, modelOf(subject.car, subject.track));
 		const laps = findings.laps.filter(({kind}) => kind === 'good').length;
-		return learned(subject, {
-			source: 'log',
-			from: `practice, ${counted(laps, 'lap')}`,
-			candidate,
-			circumference,
-			held: undefined,
-			readings,
-		});
+		const found = {source: 'log', candidate, circumference, held: undefined, readings} as const;
+		const seen = gripFrom && {findings, run: gripFrom};
+		return yield* learned(subject, {...found, from: `practice, ${counted(laps, 'lap')}`}, seen);
 	});
 }
 
 /** From the speeds and RPM that the track holds as measured. */
 export function learnFromMeasured(subject: Subject): Outcome<Learning> {
-	return withPlan(subject, plan => {
+	const steps = withPlan(subject, function* (plan) {
 		const readings = measuredReadings(subject, plan);
 		const from = `${counted(readings.length, 'measured straight')} of the track`;
-		return learned(subject, {
+		return yield* learned(subject, {
 			source: 'measured',
 			from,
 			candidate: readings[0]?.candidate,
@@ -95,21 +119,56 @@ export function learnFromMeasured(subject: Subject): Outcome<Learning> {
 			readings,
 		});
 	});
+	return finish(steps);
 }
 
-function withPlan(subject: Subject, learn: (plan: Plan) => Learning): Outcome<Learning> {
+type Learn = (plan: Plan) => Generator<undefined, Learning, void>;
+
+function* withPlan(subject: Subject, learn: Learn): LearnSteps {
 	const plan = planFor(subject.car, subject.track);
-	return plan.ok ? done(learn(plan.value)) : plan;
+	return plan.ok ? done(yield* learn(plan.value)) : plan;
 }
 
-function learned(subject: Subject, found: Omit<Learning, 'anchor' | 'trim' | 'compared'>): Learning {
+function* learned(
+	subject: Subject,
+	found: Omit<Learning, 'anchor' | 'grip' | 'trim' | 'compared'>,
+	seen?: {readonly findings: Findings; readonly run: LoggedRun},
+): Generator<undefined, Learning, void> {
 	const ask = modelOf(subject.car, subject.track);
 	const {circumference} = found;
 	const rolled: Trim = {...untrimmed, rollout: circumference?.factor ?? 1, growth: circumference?.growth?.value};
-	const anchored = anchor(ask, found.readings, rolled);
-	const trim = {...rolled, drag: anchored?.drag?.value ?? 1, power: anchored?.power?.value ?? 1};
-	return {...found, anchor: anchored, trim, compared: comparedRuns(ask, found.readings, trim)};
+	const {readings} = found;
+	let anchored = yield* anchorSteps(ask, readings, rolled);
+	let grip: GripLearned | undefined;
+	for (let round = 0; seen !== undefined && round < gripRounds; round++) {
+		const before = startOfGrip(rolled, anchored);
+		const dragSe = anchored?.drag?.se ?? heldDragSe;
+		grip = yield* gripSteps(motionsOf(subject.car, subject.track), readings, seen, before, dragSe);
+		if (grip.factor === undefined) break;
+		// What the exits lost to grip is not the engine's or the air's.
+		anchored = yield* anchorSteps(ask, readings, {...rolled, grip: grip.factor.value});
+	}
+	const trim = anchoredTrim({...rolled, grip: grip?.factor?.value ?? 1}, anchored);
+	return {...found, anchor: anchored, grip, trim, compared: yield* comparedRuns(ask, found.readings, trim)};
 }
+
+/** Grip and power are fitted in turn: each needs what the other one is. */
+const gripRounds = 2;
+/** A drag area that no straight tells is right to about this. */
+const heldDragSe = 0.05;
+/** A power that is further off is not likely: what the exits lost is first laid to grip. */
+const likelyPower = 0.1;
+
+function startOfGrip(rolled: Trim, anchored: Anchor | undefined): Trim {
+	const power = anchored?.power?.value ?? 1;
+	return Math.abs(power - 1) > likelyPower ? rolled : anchoredTrim(rolled, anchored);
+}
+
+const anchoredTrim = (trim: Trim, anchored: Anchor | undefined): Trim => ({
+	...trim,
+	drag: anchored?.drag?.value ?? 1,
+	power: anchored?.power?.value ?? 1,
+});
 
 /** The circumference of the documents, with what they state of it. */
 function statedRollout({uncertainties}: Subject, plan: Plan): Known {

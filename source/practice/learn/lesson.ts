@@ -11,8 +11,10 @@ import {done} from '../../planning/faults.ts';
 import {planFor} from '../../planning/plan.ts';
 import {rankRack} from '../../planning/rank-rack.ts';
 import type {Outcome} from '../../planning/results.ts';
-import {findInLog} from '../find/find-in-log.ts';
+import {finish} from '../../planning/run-rack.ts';
+import {findSteps} from '../find/find-in-log.ts';
 import type {Findings} from '../find/findings.ts';
+import type {Steps} from '../find/steps.ts';
 import {acceptEdits} from './accept.ts';
 import {type Effect, effectOf} from './effect.ts';
 import type {Learning, Subject} from './learn.ts';
@@ -72,9 +74,19 @@ export type SaidMounted = {readonly pair: Pair; readonly gearbox: string};
  * findings are those with it; unless said, the log is.
  */
 export function findingsFor(car: Car, track: Track, run: LoggedRun, said: SaidMounted | undefined): Outcome<Findings> {
+	return finish(findingsForSteps(car, track, run, said));
+}
+
+/** The same step by step. */
+export function* findingsForSteps(
+	car: Car,
+	track: Track,
+	run: LoggedRun,
+	said: SaidMounted | undefined,
+): Steps<Outcome<Findings>> {
 	const plan = planFor(car, track);
 	if (!plan.ok) return plan;
-	const findings = findInLog(run, plan.value, said ?? car.installed);
+	const findings = yield* findSteps(run, plan.value, said ?? car.installed);
 	const {verdict} = findings.mounted;
 	if (said === undefined || (verdict !== 'otherFits' && verdict !== 'flippedFits')) return done(findings);
 	const alone = planFor(onlyWith(car, said), {
@@ -82,7 +94,7 @@ export function findingsFor(car: Car, track: Track, run: LoggedRun, said: SaidMo
 		straights: track.straights.map(one => ({...one, measured: undefined})),
 	});
 	if (!alone.ok) return alone;
-	const again = findInLog(run, alone.value, said);
+	const again = yield* findSteps(run, alone.value, said);
 	return done({...again, mounted: {...again.mounted, why: `${findings.mounted.why} ${againWords(said)}`}});
 }
 

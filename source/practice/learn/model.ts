@@ -1,5 +1,6 @@
 /** The plan's own model, asked for the run of one straight as practice had it. */
 import type {Car} from '../../drivetrain/car.ts';
+import type {GearMotion} from '../../drivetrain/gear-motion.ts';
 import type {RoadGears} from '../../drivetrain/road-gears.ts';
 import {speedTrace, type TracePoint} from '../../drivetrain/speed-trace.ts';
 import {speedAtRpmMps} from '../../drivetrain/tire.ts';
@@ -41,6 +42,14 @@ export function modelOf(car: Car, track: Track): AskModel {
 	};
 }
 
+/** How the car moves in a gear on the straight of a reading; undefined where no plan can be made of it. */
+export type AskMotion = (reading: Reading, trim: Trim, gear: number) => GearMotion | undefined;
+
+export function motionsOf(car: Car, track: Track): AskMotion {
+	const prepare = preparer(car, track);
+	return (reading, trim, gear) => prepare(reading, trim, {})?.gears.motion(gear);
+}
+
 /** The same model, told along the way. */
 export function tracesOf(car: Car, track: Track): TraceModel {
 	const run = runnerOf(car, track);
@@ -53,20 +62,29 @@ export function tracesOf(car: Car, track: Track): TraceModel {
 /** Points along a straight: more than a terminal has dots across. */
 const tracePoints = 120;
 
-type Drive = {readonly plan: Plan; readonly gears: RoadGears; readonly run: PlaceRun};
+type Prepared = {readonly plan: Plan; readonly gears: RoadGears};
+type Drive = Prepared & {readonly run: PlaceRun};
 
-function runnerOf(car: Car, track: Track) {
+function preparer(car: Car, track: Track) {
 	const alone = {...track, situations: track.situations.slice(0, 1), pitRoad: undefined, restart: undefined};
-	return (reading: Reading, trim: Trim, nudge: Nudge = {}): Drive | undefined => {
+	return (reading: Reading, trim: Trim, nudge: Nudge): Prepared | undefined => {
 		const {exitMps = reading.exitMps?.value, lengthM = reading.lengthM} = nudge;
 		const straight = straightOf(track, {...reading, lengthM}, exitMps);
 		const plan = planFor(car, trimmed(car, {...alone, straights: [straight]}, trim));
 		if (!plan.ok) return undefined;
 		const {base, roads} = plan.value;
-		const place = base.places[0]!;
-		const gears = roads.gearsFor(reading.candidate.train)(place.road);
-		const run = runPlace(base, place, gears);
-		return run.state === 'ran' ? {plan: plan.value, gears, run} : undefined;
+		return {plan: plan.value, gears: roads.gearsFor(reading.candidate.train)(base.places[0]!.road)};
+	};
+}
+
+function runnerOf(car: Car, track: Track) {
+	const prepare = preparer(car, track);
+	return (reading: Reading, trim: Trim, nudge: Nudge = {}): Drive | undefined => {
+		const prepared = prepare(reading, trim, nudge);
+		if (prepared === undefined) return undefined;
+		const {base} = prepared.plan;
+		const run = runPlace(base, base.places[0]!, prepared.gears);
+		return run.state === 'ran' ? {...prepared, run} : undefined;
 	};
 }
 

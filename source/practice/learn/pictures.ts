@@ -1,6 +1,9 @@
 /** The numbers behind the pictures of a log: how often each ratio of engine to road speed was held, and a lap beside the model. */
 import type {LoggedRun} from '../../logs/logged-run.ts';
+import {finish} from '../../planning/run-rack.ts';
 import {type Findings, type Pass, sampleState} from '../find/findings.ts';
+import {roughQuantile} from '../find/smooth.ts';
+import {Pace, type Steps} from '../find/steps.ts';
 import type {Learning, Subject} from './learn.ts';
 import {tracesOf} from './model.ts';
 import {untrimmed} from './trim.ts';
@@ -16,19 +19,26 @@ const bins = 240;
 /** Around the ratios that were seen. */
 const roomAround = 1.12;
 
-export function ratioPicture({samples, mounted}: Findings): RatioPicture {
+export const ratioPicture = (findings: Findings): RatioPicture => finish(ratioSteps(findings));
+
+/** The same step by step, each of a bounded number of samples. */
+export function* ratioSteps({samples, mounted}: Findings): Steps<RatioPicture> {
 	const factor = mounted.best?.circumferenceFactor ?? 1;
-	const held = Float32Array.from(
-		samples.overall.filter((ratio, i) => Number.isFinite(ratio) && isUnderPower(samples.state[i]!)),
-		ratio => ratio * factor,
-	).sort();
+	const pace = new Pace();
+	const held: number[] = [];
+	for (let i = 0; i < samples.overall.length; i++) {
+		if (pace.isDue()) yield;
+		if (Number.isFinite(samples.overall[i]!) && isUnderPower(samples.state[i]!))
+			held.push(samples.overall[i]! * factor);
+	}
 	const gears = (mounted.best?.candidate.train.overall ?? []).map((ratio, i) => ({gear: i + 1, ratio}));
 	if (held.length === 0) return {points: [], gears};
 	// A few wild ratios would press all the rest together.
-	const low = held[Math.floor(0.005 * held.length)]! / roomAround;
-	const high = held[Math.floor(0.995 * held.length)]! * roomAround;
+	const low = roughQuantile(held, 0.005) / roomAround;
+	const high = roughQuantile(held, 0.995) * roomAround;
 	const counts = new Array<number>(bins).fill(0);
 	for (const ratio of held) {
+		if (pace.isDue()) yield;
 		const bin = Math.floor(((ratio - low) / (high - low)) * bins);
 		if (bin >= 0 && bin < bins) counts[bin]!++;
 	}

@@ -6,11 +6,12 @@ import {mphMps} from '../../drivetrain/constants.ts';
 import {harmonicRolloutM} from '../../drivetrain/tire.ts';
 import {carAt} from '../../planning/situations.ts';
 import type {Findings, Spread} from '../find/findings.ts';
+import {edgesFromHz} from '../find/notes.ts';
 import type {Compared} from './compared.ts';
 import type {Learning, Subject} from './learn.ts';
 import {type Known, known, type Reading} from './reading.ts';
 import {heldSpeedSe} from './seen.ts';
-import {type Readers, writtenNumber, writtenQuantity} from './written.ts';
+import {type Readers, writtenCoefficient, writtenNumber, writtenQuantity} from './written.ts';
 
 export type DocumentName = 'track' | 'car';
 export type Written = string | number;
@@ -52,7 +53,9 @@ export function proposalsOf(
 		...rolloutProposals(subject, learning, make),
 		...forceProposals(subject, learning, make),
 		...straightProposals(learning, findings, make),
-		...(learning.source === 'measured' ? [] : learning.compared.flatMap(one => measuredProposal(one, make))),
+		...(learning.source === 'measured' || isCoarse(findings)
+			? []
+			: learning.compared.flatMap(one => measuredProposal(one, make))),
 	];
 	return all
 		.map(proposal => ({...proposal, rows: proposal.rows.filter(({value, before}) => value !== before)}))
@@ -93,9 +96,10 @@ class Maker {
 		return isAsSure && Math.abs(value - reading.value) <= se / 2 ? before : undefined;
 	}
 
-	plain(label: string, path: Path, value: Written): ProposalRow {
+	plain(label: string, path: Path, value: Written, elsewhere?: {document: DocumentName; path: Path}): ProposalRow {
 		const before = this.#at('track', path);
-		return {label, document: 'track', path, before, now: before === undefined ? '' : String(before), value};
+		const now = before ?? (elsewhere && this.#at(elsewhere.document, elsewhere.path));
+		return {label, document: 'track', path, before, now: now === undefined ? '' : String(now), value};
 	}
 
 	has(document: DocumentName, path: Path): boolean {
@@ -148,7 +152,7 @@ function rolloutProposals({car, track}: Subject, {circumference}: Learning, make
 	return [rollout, row('growth', grown)];
 }
 
-function forceProposals({car, track}: Subject, {anchor}: Learning, make: Maker): Proposal[] {
+function forceProposals({car, track}: Subject, {anchor, grip}: Learning, make: Maker): Proposal[] {
 	const here = carAt(track, car);
 	const scaled = (now: number, factor: Known) => known(now * factor.value, now * factor.se);
 	const proposals: Proposal[] = [];
@@ -164,6 +168,10 @@ function forceProposals({car, track}: Subject, {anchor}: Learning, make: Maker):
 		const value = scaled(now, anchor.power);
 		proposals.push(row('power', make.quantity('power', 'track', ['car', 'power'], value, 'share', elsewhere)));
 	}
+	if (grip?.factor !== undefined) {
+		const value = writtenCoefficient(scaled(here.grip, grip.factor));
+		proposals.push(row('grip', make.plain('grip', ['car', 'grip'], value, {document: 'car', path: ['grip']})));
+	}
 	return proposals;
 }
 
@@ -176,13 +184,17 @@ function straightProposals({readings}: Learning, findings: Findings | undefined,
 	return found.flatMap(({index, name, exitMps, minimumMps}) => {
 		const speed = (field: 'exit' | 'minimum', spread: Spread | undefined): Proposal[] => {
 			const path: Path = ['straights', index, field];
-			if (spread === undefined || !make.has('track', path)) return [];
+			if (spread === undefined || !make.has('track', path) || (field === 'exit' && isCoarse(findings))) return [];
 			const value = known(spread.median, spreadOf(spread));
 			return [row(`${field}:${name}`, make.quantity(`${field} ${name}`, 'track', path, value, 'speed'))];
 		};
 		return [...speed('exit', exitMps), ...speed('minimum', minimumMps)];
 	});
 }
+
+/** Its first and last samples at full throttle are not the exit and the end: the car is faster than at the one, slower than at the other. */
+const isCoarse = (findings: Findings | undefined): boolean =>
+	findings !== undefined && findings.log.rateHz < edgesFromHz;
 
 /** From lap to lap; a few laps alike are no proof that the next one will be. */
 function spreadOf({sd, count}: Spread): number {

@@ -11,13 +11,15 @@ export type Trim = {
 	readonly drag: number;
 	/** Of the share of the dyno curve that the car has. */
 	readonly power: number;
+	/** Of the coefficient of friction. */
+	readonly grip: number;
 };
 
-export const untrimmed: Trim = {rollout: 1, growth: undefined, drag: 1, power: 1};
+export const untrimmed: Trim = {rollout: 1, growth: undefined, drag: 1, power: 1, grip: 1};
 
 /** The track with the corrected numbers as its own, which replace the car's. */
 export function trimmed(car: Car, track: Track, trim: Trim): Track {
-	const {tires, dragAreaM2, engines} = carAt(track, car);
+	const {tires, dragAreaM2, engines, grip} = carAt(track, car);
 	const engine = engines.find(one => one.for.includes(track.type));
 	return {
 		...track,
@@ -29,6 +31,7 @@ export function trimmed(car: Car, track: Track, trim: Trim): Track {
 				...(trim.growth !== undefined && {growth: trim.growth}),
 			},
 			...(trim.drag !== 1 && {dragAreaM2: dragAreaM2 * trim.drag}),
+			...(trim.grip !== 1 && {grip: grip * trim.grip}),
 			...(trim.power !== 1 && engine !== undefined && {power: engine.power * trim.power}),
 		},
 	};

@@ -39,6 +39,12 @@ export function writtenNumber(value: Known): string | number {
 	return spread === undefined ? Number(number) : `${number} ± ${spread}`;
 }
 
+/** "1.13 ± 0.02": a coefficient. */
+export function writtenCoefficient(value: Known): string | number {
+	const [number, spread] = numberTexts(value, fineEnough);
+	return spread === undefined ? Number(number) : `${number} ± ${spread}`;
+}
+
 /** RPM is read in whole numbers. */
 const wholeNumbers = 1;
 

@@ -33,6 +33,14 @@ export const practiceKeys = [
 	},
 	{
 		scope: 'practice',
+		keys: ['g'],
+		does: 'grip too',
+		words: 'of a log: learn grip too, from exits that it holds; or not',
+		short: 'grip',
+		rank: 4,
+	},
+	{
+		scope: 'practice',
 		keys: ['a'],
 		does: 'accept all',
 		words: 'accept all that would change',
@@ -55,5 +63,12 @@ export const practiceKeys = [
 	},
 	{scope: 'practice', keys: ['pageup'], does: 'scroll up', words: 'scroll up'},
 	{scope: 'practice', keys: ['pagedown', 'space'], does: 'scroll down', words: 'scroll down'},
-	{scope: 'practice', keys: ['escape'], does: 'ranking', words: 'back to the ranking', short: 'back', rank: 3},
+	{
+		scope: 'practice',
+		keys: ['escape'],
+		does: 'leave practice',
+		words: 'leave the log that is being read; else back to the ranking',
+		short: 'back',
+		rank: 3,
+	},
 ] as const satisfies readonly AnyBinding[];

@@ -66,6 +66,7 @@ export type Action =
 	/** A number seen on a straight; undefined takes it away. */
 	| {readonly do: 'see'; readonly straight: string; readonly text: string | undefined}
 	| {readonly do: 'hold'; readonly held: Held}
+	| {readonly do: 'learn grip'; readonly grip: boolean}
 	| {readonly do: 'show log'; readonly log: PracticeLog | undefined}
 	| {readonly do: 'show pane'; readonly pane: Pane}
 	| {readonly do: 'move in practice'; readonly by: number; readonly count: number}

@@ -14,6 +14,7 @@ export type ErrandEffect =
 	| 'forget saved'
 	| 'see it'
 	| 'read log'
+	| 'stop log'
 	| 'accept this'
 	| 'accept all'
 	| 'take all back';

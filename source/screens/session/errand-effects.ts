@@ -24,7 +24,10 @@ export type Errandful = {
 	readonly errands: Errands;
 };
 
-type OwnEffect = Exclude<ErrandEffect, 'see it' | 'read log' | 'accept this' | 'accept all' | 'take all back'>;
+type OwnEffect = Exclude<
+	ErrandEffect,
+	'see it' | 'read log' | 'stop log' | 'accept this' | 'accept all' | 'take all back'
+>;
 
 export function errandEffects({state, dispatch, catalog, errands}: Errandful): Record<OwnEffect, () => void> {
 	const tell = (notice: string) => dispatch({do: 'tell', notice});

@@ -29,3 +29,11 @@ export function cleared(session: Session): Action | undefined {
 	const straight = straightNames(session)[place.cursor];
 	return place.pane !== 'numbers' || straight === undefined ? undefined : {do: 'see', straight, text: undefined};
 }
+
+/** Grip shows in a log alone. */
+export function gripToo(session: Session): Action {
+	const {log, grip} = practiceOf(session);
+	return log === undefined
+		? {do: 'tell', notice: 'Grip is learned from a logged run: f reads one.'}
+		: {do: 'learn grip', grip: !grip};
+}

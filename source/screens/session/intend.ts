@@ -9,7 +9,7 @@ import type {Choice} from './catalog.ts';
 import {current, unsaved} from './documents.ts';
 import type {Effect} from './effect.ts';
 import {fileNameFor, items} from './hand-over.ts';
-import {cleared, paneBy, seenEntry} from './intend-practice.ts';
+import {cleared, gripToo, paneBy, seenEntry} from './intend-practice.ts';
 import {entryFor, next} from './intents.ts';
 import {practiceOf} from './practice-of.ts';
 import {marginEntry} from './reduce.ts';
@@ -30,6 +30,7 @@ export type Scene = {
 	readonly isWorking: boolean;
 	/** Lines that the cursor of the practice moves over. */
 	readonly practiceLines: number;
+	readonly isReadingLog: boolean;
 };
 
 /** Which scopes of the key table hold, the first one first. */
@@ -145,6 +146,8 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 			return {do: 'move in draft', by: 1};
 		case 'practice':
 			return {do: 'go', place: practicePlace};
+		case 'leave practice':
+			return scene.isReadingLog ? 'stop log' : {do: 'go', place: {at: 'ranking'}};
 		case 'practice up':
 			return {do: 'move in practice', by: -1, count: scene.practiceLines};
 		case 'practice down':
@@ -159,6 +162,8 @@ export function intend(name: ActionName, session: Session, scene: Scene): Action
 			return entryFor('log', '');
 		case 'hold other':
 			return {do: 'hold', held: practiceOf(session).held === 'speed' ? 'circumference' : 'speed'};
+		case 'grip too':
+			return gripToo(session);
 		case 'clear number':
 			return cleared(session);
 		case 'differences':

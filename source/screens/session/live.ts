@@ -82,7 +82,7 @@ export class LiveSession {
 		this.#effects = {
 			...this.#ownEffects,
 			...errandEffects(this.#errandful),
-			...practiceEffects(this.#errandful, () => this.#practice.teaching),
+			...practiceEffects(this.#errandful, {teaching: () => this.#practice.teaching, job: this.#practice.job}),
 		};
 	}
 
@@ -214,6 +214,7 @@ export class LiveSession {
 			choices: this.#choicesIn(session),
 			isWorking: answer.is === 'working',
 			practiceLines: 0,
+			isReadingLog: this.#practice.job.isUnderWay,
 		};
 		const practice = this.#practice.scene(session, rankedIn(answer), answer.is === 'ready');
 		const handed = answer.is === 'ready' ? this.#handed(session, scene, answer.ranked) : undefined;

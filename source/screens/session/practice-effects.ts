@@ -2,19 +2,24 @@
 
 import {isObject} from '../../documents/json.ts';
 import {type AskedColumns, channelNames} from '../../logs/channels.ts';
+import type {Sought} from '../../practice/find/steps.ts';
 import {learnedEntry, takenBackEntry} from '../../text/learned-entry.ts';
 import {current, titleOf} from './documents.ts';
 import type {ErrandEffect} from './effect.ts';
 import type {Errandful} from './errand-effects.ts';
+import type {LogJob} from './log-job.ts';
 import {straightNames} from './practice-of.ts';
 import {type Line, linesOf} from './taught.ts';
 
 type Teaching = typeof import('./teaching.ts');
-type PracticeEffect = Extract<ErrandEffect, 'see it' | 'read log' | 'accept this' | 'accept all' | 'take all back'>;
+type PracticeEffect = Extract<
+	ErrandEffect,
+	'see it' | 'read log' | 'stop log' | 'accept this' | 'accept all' | 'take all back'
+>;
 
 export function practiceEffects(
 	{state, dispatch, errands}: Errandful,
-	teaching: () => Teaching | undefined,
+	{teaching, job}: {readonly teaching: () => Teaching | undefined; readonly job: LogJob},
 ): Record<PracticeEffect, () => void> {
 	const tell = (notice: string) => dispatch({do: 'tell', notice});
 	const typed = () => {
@@ -84,26 +89,37 @@ export function practiceEffects(
 			const track = state().session.history.present.track;
 			const car = titleOf(current(state().session.history.present, 'car'));
 			dispatch({do: 'cover', over: undefined});
+			const signal = job.begin();
 			tell(`Reading ${asked.file} …`);
 			const onProgress = (share: number | undefined) => {
-				if (share !== undefined) tell(`Reading ${asked.file}: ${Math.floor(100 * share)} %`);
+				if (share !== undefined && !signal.aborted)
+					tell(`Reading ${asked.file}: ${Math.floor(100 * share)} %. Esc stops.`);
 			};
-			void errands.readLog(asked.file, asked.columns, car, onProgress).then(answer => {
-				if (!answer.ok) return tell(answer.words);
-				const {session} = state();
-				// Meanwhile another track may be looked at, or another place.
-				if (session.history.present.track !== track || session.place.at !== 'practice')
-					return tell(`${answer.label} was read, but another track or place is looked at now.`);
+			void errands.readLog(asked.file, asked.columns, car, onProgress, signal).then(answer => {
+				if (signal.aborted) return;
+				if (!answer.ok) {
+					job.end();
+					return tell(answer.words);
+				}
+				const label = fileName(answer.label);
 				const {run, remarks} = answer.reading;
-				const shown = teaching()!.logShown(
-					session,
-					fileName(answer.label),
-					run,
-					remarks.map(({text}) => text),
-				);
-				if (typeof shown === 'string') tell(shown);
-				else dispatch({do: 'show log', log: shown});
+				const words = remarks.map(({text}) => text);
+				const steps = teaching()!.logSteps(state().session, label, run, words);
+				const onStep = (sought: Sought | undefined) => {
+					if (sought !== undefined) tell(`${label}: finding ${sought} … Esc stops.`);
+				};
+				job.lookThrough(steps, onStep, shown => {
+					const {session} = state();
+					// Meanwhile another track may be looked at, or another place.
+					if (session.history.present.track !== track || session.place.at !== 'practice')
+						return tell(`${label} was read, but another track or place is looked at now.`);
+					if (typeof shown === 'string') return tell(shown);
+					dispatch({do: 'show log', log: shown});
+				});
 			});
+		},
+		'stop log': () => {
+			if (job.stop()) tell('The log is left; nothing of it was taken.');
 		},
 		'accept this': () => {
 			const {place} = state().session;

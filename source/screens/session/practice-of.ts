@@ -11,7 +11,7 @@ export const panesOf = (practice: Practice): readonly Pane[] =>
 /** Of the track that is looked at; a new one where nothing was seen of it. */
 export function practiceOf({practice, history}: Session): Practice {
 	const {track} = history.present;
-	return practice?.track === track ? practice : {track, seen: [], held: 'circumference', log: undefined};
+	return practice?.track === track ? practice : {track, seen: [], held: 'circumference', grip: false, log: undefined};
 }
 
 /** The names of the straights; none of a track that cannot be read. */

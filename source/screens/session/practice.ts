@@ -1,6 +1,7 @@
 /** What was seen in practice: numbers typed straight by straight, or a log. */
 import type {LoggedRun} from '../../logs/logged-run.ts';
 import type {Findings} from '../../practice/find/findings.ts';
+import type {RatioPicture} from '../../practice/learn/pictures.ts';
 import type {Held} from '../../practice/learn/seen.ts';
 
 export type PracticeLog = {
@@ -8,6 +9,7 @@ export type PracticeLog = {
 	readonly label: string;
 	readonly run: LoggedRun;
 	readonly findings: Findings;
+	readonly ratio: RatioPicture;
 	/** What reading it had to say. */
 	readonly remarks: readonly string[];
 };
@@ -18,6 +20,8 @@ export type Practice = {
 	/** As typed behind the name of the straight: "8420 gear 4 185 mph". */
 	readonly seen: readonly {readonly straight: string; readonly text: string}[];
 	readonly held: Held;
+	/** Whether grip is learned from a log too. */
+	readonly grip: boolean;
 	/** In place of the numbers, where one was read. */
 	readonly log: PracticeLog | undefined;
 };

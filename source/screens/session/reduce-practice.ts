@@ -22,6 +22,8 @@ export function reducePractice(session: Session, place: Place & {at: 'practice'}
 		}
 		case 'hold':
 			return {...session, practice: {...practice, held: action.held}};
+		case 'learn grip':
+			return {...session, practice: {...practice, grip: action.grip}};
 		case 'show log': {
 			const shown = {...session, practice: {...practice, log: action.log}, over: undefined};
 			return {...shown, place: {...place, pane: 'numbers', cursor: 0, scroll: 0}};

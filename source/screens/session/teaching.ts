@@ -5,10 +5,11 @@ import type {JsonObject} from '../../documents/json.ts';
 import type {Car} from '../../drivetrain/car.ts';
 import type {Track} from '../../drivetrain/track.ts';
 import type {LoggedRun} from '../../logs/logged-run.ts';
+import type {Steps} from '../../practice/find/steps.ts';
 import {acceptEdits, takeablesIn, takeBackEdits} from '../../practice/learn/accept.ts';
-import {learnFromFindings, learnFromSeen, type Subject} from '../../practice/learn/learn.ts';
-import {findingsFor, lessonFrom} from '../../practice/learn/lesson.ts';
-import {lapPicture, ratioPicture} from '../../practice/learn/pictures.ts';
+import {findingsSteps, type Subject, seenSteps} from '../../practice/learn/learn.ts';
+import {findingsForSteps, lessonFrom} from '../../practice/learn/lesson.ts';
+import {lapPicture, ratioSteps} from '../../practice/learn/pictures.ts';
 import type {Seen} from '../../practice/learn/seen.ts';
 import {readSeen, type SeenReading} from '../../practice/learn/seen-text.ts';
 import {isUnclear} from '../../practice/learn/unclear.ts';
@@ -18,30 +19,6 @@ import type {Practice, PracticeLog} from './practice.ts';
 import {practiceOf} from './practice-of.ts';
 import type {Session} from './session.ts';
 import type {Taught} from './taught.ts';
-
-type Made = {
-	readonly track: JsonObject;
-	readonly car: JsonObject;
-	readonly practice: Practice;
-	readonly units: Session['units'];
-	readonly taught: Taught | undefined;
-};
-let last: Made | undefined;
-
-/** Undefined where the documents cannot be read; once for the same content. */
-export function taughtIn(session: Session): Taught | undefined {
-	const {present} = session.history;
-	const [track, car] = [current(present, 'track').json, current(present, 'car').json];
-	const practice = practiceOf(session);
-	const {units} = session;
-	const isSame =
-		last?.track === track && last.car === car && last.units === units && samePractice(last.practice, practice);
-	if (!isSame) last = {track, car, practice, units, taught: make(session, practice)};
-	return last!.taught;
-}
-
-const samePractice = (one: Practice, other: Practice): boolean =>
-	one.log === other.log && one.held === other.held && JSON.stringify(one.seen) === JSON.stringify(other.seen);
 
 function subjectIn({history: {present}}: Session): Subject | undefined {
 	const track = readTrackOf(current(present, 'track').json);
@@ -54,7 +31,9 @@ function subjectIn({history: {present}}: Session): Subject | undefined {
 	};
 }
 
-function make(session: Session, practice: Practice): Taught | undefined {
+/** Undefined where the documents cannot be read. Step by step: a straight, a round of a fit, a picture. */
+export function* teachSteps(session: Session): Generator<undefined, Taught | undefined, void> {
+	const practice = practiceOf(session);
 	const subject = subjectIn(session);
 	if (subject === undefined) return undefined;
 	const {present} = session.history;
@@ -72,8 +51,9 @@ function make(session: Session, practice: Practice): Taught | undefined {
 	const {log} = practice;
 	const seen = log === undefined ? seenIn(practice, subject) : [];
 	if (log === undefined && seen.length === 0) return nothing;
-	const learning =
-		log === undefined ? learnFromSeen(subject, seen, practice.held) : learnFromFindings(subject, log.findings);
+	const learning = yield* log === undefined
+		? seenSteps(subject, seen, practice.held)
+		: findingsSteps(subject, log.findings, practice.grip ? log.run : undefined);
 	if (!learning.ok)
 		return {
 			...nothing,
@@ -82,8 +62,9 @@ function make(session: Session, practice: Practice): Taught | undefined {
 	const lesson = lessonFrom(subject, documents, learning.value, log?.findings, session.units);
 	const edits = acceptEdits(lesson.proposals, documents, {from: 'practice', date: '2000-01-01'});
 	const after = lesson.proposals.length === 0 ? undefined : withBoth(present, documents, edits);
+	yield;
 	const pictures = log && {
-		ratio: ratioPicture(log.findings),
+		ratio: log.ratio,
 		lap: lapPicture(subject, log.run, log.findings, learning.value),
 	};
 	return {...nothing, lesson, after, pictures};
@@ -118,18 +99,18 @@ export function wrongWith(session: Session, straight: string, text: string): str
 	return `found ${reading.found}; allowed ${reading.allowed}${reading.hint === undefined ? '' : `. ${reading.hint}`}`;
 }
 
-/** The log with what it shows; words where no plan can be made of the documents. */
-export function logShown(
+/** The log with what it shows; words where no plan can be made of the documents. Each step looks at a bounded number of samples. */
+export function* logSteps(
 	session: Session,
 	label: string,
 	run: LoggedRun,
 	remarks: readonly string[],
-): PracticeLog | string {
+): Steps<PracticeLog | string> {
 	const subject = subjectIn(session);
 	if (subject === undefined) return 'track and car cannot be read yet';
-	const findings = findingsFor(subject.car, subject.track, run, undefined);
+	const findings = yield* findingsForSteps(subject.car, subject.track, run, undefined);
 	if (!findings.ok) return findings.faults.map(({path, found}) => `${path}: found ${found}`).join('. ');
-	return {label, run, findings: findings.value, remarks};
+	return {label, run, findings: findings.value, ratio: yield* ratioSteps(findings.value), remarks};
 }
 
 export {acceptEdits, isUnclear, takeBackEdits};

@@ -50,10 +50,8 @@ const paneNames: Record<Pane, string> = {
 /** Where the numbers come from, and what there is to look at. */
 function headPieces(practice: Practice, pane: Pane, taught: Taught | undefined): Pieces {
 	const {log, held} = practice;
-	const from =
-		log === undefined
-			? `By hand, ${taught?.inCar ?? 'nothing'} in the car, ${held} held`
-			: `${log.label}: ${taught?.lesson?.learning.from ?? 'a log'}`;
+	const byHand = taught === undefined ? '' : `By hand, ${taught.inCar ?? 'nothing'} in the car, ${held} held`;
+	const from = log === undefined ? byHand : `${log.label}: ${taught?.lesson?.learning.from ?? 'a log'}`;
 	const tabs = panesOf(practice).flatMap(one => [
 		piece(' '),
 		one === pane ? piece(` ${paneNames[one]} `, 'chosen') : piece(` ${paneNames[one]} `, 'muted'),
@@ -182,13 +180,13 @@ function effectLines(scene: PracticeScene | undefined, width: number): Pieces[] 
 	return [blank, ...layOut([text(words, effect === 'working' ? 'muted' : 'strong')], width)];
 }
 
-function changeLines({place}: Given, taught: Taught, width: number, height: number): readonly Pieces[] {
+function changeLines({place, ascii}: Given, taught: Taught, width: number, height: number): readonly Pieces[] {
 	const lines = linesOf(taught);
 	if (lines.length === 0)
 		return layOut([text('Nothing would change, and nothing was learned before.', 'muted')], width);
 	const rows = lines.flatMap((one, i) => changeRows(one, i === place.cursor));
 	const cursor = rows.findIndex(({isHere}) => isHere);
-	const drawn = layOut([tableOf(changeColumns, rows)], width);
+	const drawn = layOut([tableOf(changeColumns, rows)], width, ascii);
 	const start = Math.max(0, Math.min(cursor - Math.floor(height / 2), drawn.length - height));
 	const shown = drawn.length <= height ? drawn : [drawn[0]!, ...drawn.slice(1 + start, start + height)];
 	return shown;

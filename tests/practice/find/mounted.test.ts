@@ -89,3 +89,14 @@ describe('a log of the wrong car', () => {
 		expect(findings.mounted.why).toContain('km/h read as mph');
 	});
 });
+
+test('of the others that fit too the likeliest three are named, and how many more there are', async () => {
+	const {findings} = await found({...tarrowdale, ...few});
+	const {alsoFit, why} = findings.mounted;
+	expect(alsoFit.length).toBeGreaterThan(3);
+	const [first, , third, fourth] = alsoFit.map(fittingName);
+	expect(why).toContain(`cannot tell it from ${first} (circumference`);
+	expect(why).toContain(`${third} (`);
+	expect(why).not.toContain(`${fourth} (`);
+	expect(why).toContain(`and ${alsoFit.length - 3} more; what is installed is kept.`);
+});

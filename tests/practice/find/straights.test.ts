@@ -1,6 +1,8 @@
 import {describe, expect, test} from 'vitest';
+import {findInLog} from '../../../source/practice/find/find-in-log.ts';
 import {median} from '../../../source/practice/fit/robust.ts';
-import {found, hesperRidge, quillmere, type Sample, tarrowdale} from '../sample.ts';
+import {generateLog} from '../log-generator.ts';
+import {found, hesperRidge, mount, named, quillmere, type Sample, samplePlan, tarrowdale} from '../sample.ts';
 
 const mph = 0.44704;
 
@@ -83,4 +85,14 @@ test('at one sample a second the straights are still told apart, and what is coa
 	const {findings} = await found({...hesperRidge, driving: {laps: 12}, sensors: {rateHz: 1}});
 	expect(findings.straights.filter(({passes}) => passes >= 4).length).toBeGreaterThanOrEqual(10);
 	expect(findings.notes.map(({code}) => code)).toContain('slowSampling');
+});
+
+test('a log of another track is not laid on this one, and the laps of both are told', async () => {
+	const [here, there] = [await samplePlan('tarrowdale'), await samplePlan('quillmere')];
+	const log = generateLog({seed: 1, plan: there, mounted: mount(there, '33/35 A'), driving: {laps: 5}});
+	const {matching} = findInLog(log.run, here, named('33/35 A'));
+	expect(matching.matched).toBe(false);
+	expect(matching.why).toMatch(
+		/^None of the straights of Tarrowdale is in the log: a lap of it is 2,?6\d\d ft .*, by the document 10,560 ft \(3219 m\), with 2 full-throttle runs\. Is it of another track\?$/,
+	);
 });

@@ -1,4 +1,4 @@
-import {expect, test, vi} from 'vitest';
+import {describe, expect, test, vi} from 'vitest';
 import {learnedIn} from '../../../source/documents/learned.ts';
 import {checkCar, checkTrack} from '../../../source/documents/read.ts';
 import {planFor} from '../../../source/planning/plan.ts';
@@ -14,7 +14,8 @@ import {generateLog} from '../../practice/log-generator.ts';
 import {errandsInMemory} from '../errands.ts';
 import {car, catalog, oval, session} from './documents.ts';
 
-function started(start: Session = session()) {
+/** `tickMs` passes each time the clock is looked at: with it a slice is one step. */
+function started(start: Session = session(), tickMs = 0) {
 	const {errands, done} = errandsInMemory();
 	const keeper: Keeper = {
 		keep() {},
@@ -26,8 +27,12 @@ function started(start: Session = session()) {
 		errands,
 	};
 	const waiting: (() => void)[] = [];
+	let nowMs = 0;
 	const clock = {
-		now: () => 0,
+		now: () => {
+			nowMs += tickMs;
+			return nowMs;
+		},
 		later: (act: () => void) => {
 			waiting.push(act);
 			return () => {
@@ -58,7 +63,13 @@ function started(start: Session = session()) {
 		press('l');
 		await until(() => live.state().scene.practice?.taught);
 	};
-	return {live, press, until, atPractice, done};
+	/** Keys without what was put off; and one slice of that. */
+	const type = (keys: string) => {
+		const decoder = new KeyDecoder();
+		for (const event of [...decoder.push(keys), ...decoder.flush()]) live.press(event);
+	};
+	const slice = () => waiting.shift()?.();
+	return {live, press, until, atPractice, done, type, slice, waiting};
 }
 const [down, esc, enter, tab, del] = ['\x1B[B', '\x1B', '\r', '\t', '\x1B[3~'];
 const trackOf = (live: LiveSession) => current(live.state().session.history.present, 'track').json;
@@ -135,6 +146,13 @@ test('all is accepted at once, and what is ranked follows', async () => {
 	expect(answer.is === 'ready' && answer.ranked.ranking.setting.anchored).toBe(true);
 });
 
+test('grip asks for a log', async () => {
+	const {live, press, atPractice} = started();
+	await atPractice();
+	press('g');
+	expect(live.state().session.notice).toBe('Grip is learned from a logged run: f reads one.');
+});
+
 test('numbers belong to their track', async () => {
 	const {live, press, atPractice} = started();
 	await atPractice();
@@ -166,7 +184,11 @@ test('a log is read while keys are answered, and put away again', async () => {
 	expect(lesson?.learning.compared.map(({reading}) => reading.name)).toEqual(['Front', 'Back']);
 	press('8');
 	expect(live.state().session.notice).toMatch(/run\.csv is shown; Del puts it away/);
-	press(`${tab}${tab}${tab}`);
+	expect(lesson?.learning.grip).toBeUndefined();
+	press('g');
+	expect(taughtIn(live)?.lesson?.learning.grip).toMatchObject({straights: expect.any(Array)});
+	press(`g${tab}${tab}${tab}`);
+	expect(taughtIn(live)?.lesson?.learning.grip).toBeUndefined();
 	expect(live.state().session.place).toMatchObject({pane: 'gears'});
 	press(del);
 	expect(practiceOf(live.state().session).log).toBeUndefined();
@@ -180,4 +202,63 @@ test('a log that is not there, and columns that are none, are told', async () =>
 	await until(() => live.state().session.notice?.includes('there is no such file'));
 	press(`frun.csv; tempo=Speed${enter}`);
 	expect(live.state().session.over).toMatchObject({is: 'entry', wrong: expect.stringMatching(/tempo=Speed/)});
+});
+
+describe('a log is looked through in slices', () => {
+	const aSliceEach = 50;
+
+	async function reading() {
+		const screen = started(session(), aSliceEach);
+		screen.done.files.set('run.csv', oneLog());
+		await screen.atPractice();
+		screen.type(`frun.csv${enter}`);
+		await vi.waitFor(() => expect(screen.waiting.length).toBeGreaterThan(0));
+		return screen;
+	}
+
+	test('between which keys are answered and what is looked for is told', async () => {
+		const {live, type, slice} = await reading();
+		const told = new Set<string | undefined>();
+		let slices = 0;
+		while (practiceOf(live.state().session).log === undefined) {
+			slice();
+			slices++;
+			told.add(live.state().session.notice);
+		}
+		expect(slices).toBeGreaterThan(20);
+		expect([...told]).toContain('run.csv: finding gears … Esc stops.');
+		// What it teaches is worked out in slices too.
+		expect(live.state().scene.practice?.taught).toBeUndefined();
+		type('m');
+		expect(live.state().session.units).toBe('metric');
+		while (live.state().scene.practice?.taught === undefined) slice();
+		expect(taughtIn(live)?.lesson?.learning.from).toBe('practice, 6 laps');
+	});
+
+	test('and Esc leaves it; another Esc leaves the place', async () => {
+		const {live, type, slice, waiting} = await reading();
+		for (let i = 0; i < 5; i++) slice();
+		type(esc);
+		expect(live.state().session).toMatchObject({
+			place: {at: 'practice'},
+			notice: 'The log is left; nothing of it was taken.',
+		});
+		while (waiting.length > 0) slice();
+		expect(practiceOf(live.state().session).log).toBeUndefined();
+		type(esc);
+		expect(live.state().session.place.at).toBe('ranking');
+	});
+});
+
+test('Esc leaves a log that is still being read, and what was read is not looked at', async () => {
+	const {live, press, atPractice, done} = started();
+	done.files.set('run.csv', oneLog());
+	await atPractice();
+	press(`frun.csv${enter}`);
+	press(esc);
+	expect(live.state().session.notice).toBe('The log is left; nothing of it was taken.');
+	await new Promise(resolve => setImmediate(resolve));
+	press('m');
+	expect(live.state().session).toMatchObject({place: {at: 'practice'}, units: 'metric'});
+	expect(practiceOf(live.state().session).log).toBeUndefined();
 });

@@ -33,6 +33,7 @@ const seenPractice: Practice = {
 	track: oval.id,
 	seen: [{straight: 'Back', text: '8420 gear 4'}],
 	held: 'circumference',
+	grip: false,
 	log: undefined,
 };
 const places: Record<string, Partial<Session>> = {

@@ -16,7 +16,7 @@ import {handed} from '../../../source/screens/session/handing.ts';
 import type {State} from '../../../source/screens/session/live.ts';
 import {cursorIn, type Placed, placedRows, shownRows} from '../../../source/screens/session/rows.ts';
 import type {Session} from '../../../source/screens/session/session.ts';
-import {taughtIn} from '../../../source/screens/session/teaching.ts';
+import {teachSteps} from '../../../source/screens/session/teaching.ts';
 import {frameLines, frameOf, type Size} from '../../../source/screens/views/frame.ts';
 import {displayWidth} from '../../../source/text/width.ts';
 import {catalog} from '../session/documents.ts';
@@ -47,10 +47,12 @@ export function stateOf(session: Session): State {
 			choices,
 			isWorking: false,
 			practiceLines: 2,
+			isReadingLog: false,
 			ahead: isAhead(place) ? new Ahead(atOnce, () => {}).of(session, choices) : undefined,
 			handed: handedIn(session, ranked, all),
 			odds: oddsIn(session, ranked),
-			practice: place.at === 'practice' ? {taught: taughtIn(session), effect: 'working', lines: 2} : undefined,
+			practice:
+				place.at === 'practice' ? {taught: finish(teachSteps(session)), effect: 'working', lines: 2} : undefined,
 		},
 	};
 }
