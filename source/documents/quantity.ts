@@ -141,7 +141,7 @@ function lastUnit(tokens: readonly Token[]) {
 	return tokens.findLast(token => token.kind === 'unit');
 }
 
-/** As `quantityOf`; a unit that the table lacks (`furlong`, `stone`) is looked up first, which loads a library. */
+/** As `quantityOf`; a unit that the table lacks (`chain`, `stone`) is looked up first, which loads a library. */
 export async function readQuantity(text: string, expected: Dimension | readonly Dimension[]): Promise<QuantityReading> {
 	const reading = quantityOf(text, expected);
 	if (reading.ok || reading.unknownUnits === undefined) return reading;

@@ -1,5 +1,5 @@
 /** Why a row fails, in one sentence. */
-import {withoutLimiter} from './check-names.ts';
+import {checkNames, withoutLimiter} from './check-names.ts';
 import type {Check, CheckName, Row} from './results.ts';
 import {grouped, highestText, lengthText, longLengthText, placeText} from './words.ts';
 
@@ -9,12 +9,12 @@ export function failureReason(row: Row): string {
 	const [first, ...more] = failed;
 	if (first === undefined) return '';
 	const words = sentences[first.check] ?? fallback;
-	const others = more.map(({check}) => names[check] ?? check);
+	const others = more.map(({check}) => names[check] ?? checkNames[check]);
 	return `${words(first)}${others.length > 0 ? `; also ${others.join(', ')}` : ''}.`;
 }
 
 const where = (check: Check) => placeText(check.at, check.situation);
-const fallback = (check: Check) => `${where(check) || check.check}: ${check.remark ?? 'fails'}`;
+const fallback = (check: Check) => `${where(check) || checkNames[check.check]}: ${check.remark ?? 'fails'}`;
 
 const sentences: Partial<Record<CheckName, (check: Check) => string>> = {
 	limit: check =>
@@ -29,7 +29,7 @@ const sentences: Partial<Record<CheckName, (check: Check) => string>> = {
 	mileage: check => `Out of miles: ${longLengthText(check.value!)} of ${longLengthText(check.bound!)}`,
 };
 
-/** How a check that can fail is called in a sentence. */
+/** How a check that can fail is called in a sentence, where that is not its name. */
 const names: Partial<Record<CheckName, string>> = {
 	limit: 'over the limit',
 	limiter: 'on the limiter',

@@ -39,6 +39,9 @@ const words: Record<CheckName, Words> = {
 	mileage: ofLength('longDistance'),
 };
 
+/** Whether a check compares RPM. */
+export const countsRpm = (name: CheckName): boolean => words[name].margin === rpmDown;
+
 const labelled = (name: CheckName, units: Units): string => {
 	const {unit} = words[name];
 	return unit ? `${checkNames[name]}, ${unit(units)}` : checkNames[name];

@@ -53,7 +53,6 @@ export class LiveSession {
 	readonly #outside: Outside;
 	readonly #listeners = new Set<() => void>();
 	readonly #errandful: Errandful;
-	/** Comes when something is handed over for the first time. */
 	/** Loaded once there is something to hand over: most sessions never have. */
 	#handing: typeof import('./handing.ts') | undefined;
 	#handingLoad: Promise<void> | undefined;

@@ -48,7 +48,6 @@ export type Place =
 	| {readonly at: 'gears'; readonly cursor: number; readonly scroll: number; readonly together: boolean}
 	/** From the saved and from the shipped document. */
 	| {readonly at: 'differences'; readonly kind: Kind; readonly scroll: number};
-export type PlaceName = Place['at'];
 
 /** What lies over the place until it is answered. */
 export type Over =

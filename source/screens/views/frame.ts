@@ -119,6 +119,8 @@ export function frameOf(state: State, size: Size, previousStart: number): Frame 
 	if (session.place.at === 'life') return plain(lifeLines(state, here, session.place.scroll, width, body));
 	if (session.place.at === 'odds') return plain(oddsLines(state, cursor, session.place.scroll, width, body));
 	if (session.place.at === 'pictures') return plain(pictureLines(state, here, size, body));
+	// A place without a line above does not compile.
+	session.place.at satisfies 'ranking';
 	return ranking(state, here, cursor, size, previousStart, {head, foot, body});
 }
 

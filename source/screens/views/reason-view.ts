@@ -2,6 +2,7 @@
 
 import {visible} from '../../documents/visible.ts';
 import type {Check, Row} from '../../planning/results.ts';
+import {countsRpm} from '../../text/check-view.ts';
 import {rpmDown, rpmUp, seconds, signed} from '../../text/units.ts';
 import {wrap} from '../../text/width.ts';
 import {line, type Meaning, type Piece, type Pieces, piece, widthOf} from '../parts/pieces.ts';
@@ -25,6 +26,7 @@ export function sentenceView(row: Row, width: number): Pieces[] {
 	return [first.startsWith(`${name} ${verdict}`) ? head : line(first), ...rest.map(text => line(text))];
 }
 
+/** Shorter than in the tables, since all of them share a few lines. */
 const names: Record<Check['check'], string> = {
 	limit: 'limit',
 	limiter: 'limiter',
@@ -58,8 +60,7 @@ function checkWords(checks: readonly Check[]): Piece[][] {
 function marginWords({check, margin, verdict}: Check): string {
 	if (margin === null || (verdict === 'pass' && margin < 0)) return '';
 	if (check === 'settle') return ` ${signed(margin, 1)} s`;
-	const rpms: readonly Check['check'][] = ['limit', 'band', 'afterShift', 'pitRoad', 'restart', 'downshift'];
-	return rpms.includes(check) ? ` ${margin > 0 ? '+' : ''}${margin < 0 ? rpmUp(margin) : rpmDown(margin)}` : '';
+	return countsRpm(check) ? ` ${margin > 0 ? '+' : ''}${margin < 0 ? rpmUp(margin) : rpmDown(margin)}` : '';
 }
 
 const placeWords = ({at, situation}: Check): string => {
