@@ -18,7 +18,7 @@ const slow = new Set(['rankings', 'plans', 'commands', 'screen', 'opened', 'prac
 
 test.each(readers.map(reader => [reader.name, reader] as const))('%s keep their promises', async (name, reader) => {
 	const campaign = new Campaign(reader, 1, coverage);
-	await campaign.run(slow.has(name) ? runs(8, 1000) : runs(72, 5000));
+	await campaign.run(slow.has(name) ? runs(8, 500) : runs(72, 5000));
 	expect(campaign.findings).toEqual([]);
 	expect(campaign.accepted).toBeGreaterThan(0);
 });
