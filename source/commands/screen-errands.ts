@@ -4,8 +4,8 @@ import {homedir} from 'node:os';
 import {resolve} from 'node:path';
 import {maxDocumentBytes} from '../documents/read.ts';
 import {visible} from '../documents/visible.ts';
-import type {RememberedColumns} from '../logs/read-log.ts';
-import type {Errands, Saving, Writing} from '../screens/errands.ts';
+import type {LogRefused, RememberedColumns} from '../logs/read-log.ts';
+import type {Errands, LogAnswer, Saving, Writing} from '../screens/errands.ts';
 import {codeOf, problemText} from '../store/answer.ts';
 import {writeDurably} from '../store/durable-write.ts';
 import {exportStore} from '../store/export-store.ts';
@@ -35,12 +35,12 @@ export function screenErrands(
 		},
 		readLog: async (file, columns, car, onProgress, signal) => {
 			// The reader of logs is not needed before there is one.
-			const {readLogFile} = await import('./read-log-file.ts');
+			const {refuseLog, tryLogFile} = await import('./read-log-file.ts');
 			const preferences = readPreferences(home);
 			const remembered = preferences.ok
 				? (preferences.value.logColumns?.[car] as RememberedColumns | undefined)
 				: undefined;
-			const answer = await readLogFile(pathOf(file), noInput, {
+			const answer = await tryLogFile(pathOf(file), noInput, {
 				columns,
 				remembered,
 				onProgress: seldom(onProgress),
@@ -49,6 +49,8 @@ export function screenErrands(
 			});
 			if (!answer.ok) return {ok: false, words: answer.message};
 			const {label, reading} = answer.value;
+			if (!reading.ok)
+				return columnAsked(label, reading.problems) ?? {ok: false, words: refuseLog(label, reading.problems).message};
 			const kept = reading.remember as Parameters<typeof rememberColumns>[2];
 			if (!signal.aborted) await rememberColumns(home, car, kept);
 			return {ok: true, label, reading};
@@ -62,6 +64,18 @@ export function screenErrands(
 		exportTo: directory => exportAll(home, pathOf(directory)),
 	};
 }
+
+/** What may be more than one column is asked for where the file's name is typed. */
+function columnAsked(label: string, problems: LogRefused['problems']): LogAnswer | undefined {
+	const problem = problems.find(({choice}) => choice !== undefined);
+	if (problem?.choice === undefined) return undefined;
+	const {channel, values} = problem.choice;
+	const shown = values.slice(0, mostShown).map(value => `"; ${channel}=${visible(value)}"`);
+	const words = `${label}: ${problem.where}: found ${problem.found}; type behind the name ${shown.join(' or ')}`;
+	return {ok: false, words, channel};
+}
+
+const mostShown = 4;
 
 /** A screen has no standard input to read a log from. */
 const noInput = {

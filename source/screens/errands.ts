@@ -11,7 +11,8 @@ export type FileText =
 
 export type LogAnswer =
 	| {readonly ok: true; readonly label: string; readonly reading: LogRead}
-	| {readonly ok: false; readonly words: string};
+	/** `channel`: whose column is asked for. */
+	| {readonly ok: false; readonly words: string; readonly channel?: string};
 
 /** `exists`: there is such a file, and nothing was written. */
 export type Writing = Saving | 'exists';

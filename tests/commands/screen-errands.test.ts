@@ -92,3 +92,19 @@ test('what another copy saved meanwhile is not forgotten', () => {
 	});
 	expect(keptNamed(home, 'preset', 'Oval')?.document.notes).toBe('theirs');
 });
+
+test('a log with two speeds asks for one of them where its name is typed, and the answer is remembered', async () => {
+	const row = (i: number) => `${i / 10},${100 + i},${101 + i},${5000 + 50 * i}`;
+	const rows = Array.from({length: 60}, (_, i) => row(i));
+	writeFileSync(at('run.csv'), ['Time [s],GPS Speed [mph],Wheel Speed [mph],RPM', ...rows, ''].join('\n'));
+	const read = (columns = {}) =>
+		errands().readLog(at('run.csv'), columns, 'Car', () => {}, new AbortController().signal);
+	expect(await read()).toMatchObject({
+		ok: false,
+		channel: 'speed',
+		words: expect.stringContaining('type behind the name "; speed=GPS Speed [mph]" or "; speed=Wheel Speed [mph]"'),
+	});
+	expect(await read({speed: 'Wheel Speed'})).toMatchObject({ok: true});
+	const again = await read();
+	expect(again.ok && again.reading.run.speedMps[0]).toBeCloseTo(101 * 0.44704, 4);
+});

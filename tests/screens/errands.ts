@@ -38,7 +38,9 @@ export function errandsInMemory(): {errands: Errands; done: Done} {
 				yield new TextEncoder().encode(text);
 			};
 			const reading = await readLog(bytes());
-			return reading.ok ? {ok: true, label: file, reading} : {ok: false, words: reading.problems[0]!.found};
+			if (reading.ok) return {ok: true, label: file, reading};
+			const {found, choice} = reading.problems[0]!;
+			return {ok: false, words: found, ...(choice && {channel: choice.channel})};
 		},
 		history: () => done.entries,
 		addToHistory: (track, entry) => {

@@ -4,6 +4,7 @@ import {isObject} from '../../documents/json.ts';
 import {type AskedColumns, channelNames} from '../../logs/channels.ts';
 import type {Sought} from '../../practice/find/steps.ts';
 import {learnedEntry, takenBackEntry} from '../../text/learned-entry.ts';
+import {editLine} from '../parts/edit-line.ts';
 import {current, titleOf} from './documents.ts';
 import type {ErrandEffect} from './effect.ts';
 import type {Errandful} from './errand-effects.ts';
@@ -71,6 +72,13 @@ export function practiceEffects(
 		});
 	};
 
+	/** The file's name is there to be typed on: what is asked for stands behind it. */
+	const askFor = (channel: string, text: string, wrong: string) =>
+		dispatch({
+			do: 'cover',
+			over: {is: 'entry', asks: 'log', line: editLine(`${text.replace(/[;\s]+$/, '')}; ${channel}=`), wrong},
+		});
+
 	return {
 		'see it': () => {
 			const {session} = state();
@@ -84,7 +92,8 @@ export function practiceEffects(
 			else dispatch({do: 'refuse', wrong});
 		},
 		'read log': () => {
-			const asked = askedIn(typed());
+			const text = typed();
+			const asked = askedIn(text);
 			if (typeof asked === 'string') return dispatch({do: 'refuse', wrong: asked});
 			const track = state().session.history.present.track;
 			const car = titleOf(current(state().session.history.present, 'car'));
@@ -99,7 +108,7 @@ export function practiceEffects(
 				if (signal.aborted) return;
 				if (!answer.ok) {
 					job.end();
-					return tell(answer.words);
+					return answer.channel === undefined ? tell(answer.words) : askFor(answer.channel, text, answer.words);
 				}
 				const label = fileName(answer.label);
 				const {run, remarks} = answer.reading;

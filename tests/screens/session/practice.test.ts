@@ -204,6 +204,17 @@ test('a log that is not there, and columns that are none, are told', async () =>
 	expect(live.state().session.over).toMatchObject({is: 'entry', wrong: expect.stringMatching(/tempo=Speed/)});
 });
 
+test('a log that says too little keeps the entry open, with what is asked for behind its name', async () => {
+	const {live, press, until, atPractice, done} = started();
+	done.files.set('run.csv', 'Time [s],GPS Speed [mph],Wheel Speed [mph],RPM\n0,100,101,5000\n0.1,100,101,5010\n');
+	await atPractice();
+	press(`frun.csv${enter}`);
+	await until(() => live.state().session.over);
+	const {over} = live.state().session;
+	expect(over).toMatchObject({is: 'entry', asks: 'log', wrong: expect.stringContaining('2 columns')});
+	expect(over?.is === 'entry' && over.line.text).toBe('run.csv; speed=');
+});
+
 describe('a log is looked through in slices', () => {
 	const aSliceEach = 50;
 
