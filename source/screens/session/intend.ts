@@ -1,7 +1,6 @@
 /** From the name of what a key does to what happens to the session, or outside of it. */
 import type {Ranked} from '../../planning/rank-rack.ts';
 import type {ActionName} from '../keys/key-table.ts';
-import type {Scope} from '../keys/scopes.ts';
 import {editLine} from '../parts/edit-line.ts';
 import type {Action} from './action.ts';
 import {aheadBy, changedAhead, gearsPlace, loadPlace} from './ahead-place.ts';
@@ -10,13 +9,14 @@ import {current, unsaved} from './documents.ts';
 import type {Effect} from './effect.ts';
 import {fileNameFor, items} from './hand-over.ts';
 import {cleared, gripToo, paneBy, seenEntry} from './intend-practice.ts';
+import {rowBy, stepTo} from './intend-rows.ts';
 import {entryFor, next} from './intents.ts';
 import {practiceOf} from './practice-of.ts';
 import {marginEntry} from './reduce.ts';
 import {practicePlace} from './reduce-practice.ts';
 import {riskEntry} from './reduce-risk.ts';
 import {takeInPlace} from './reduce-take-in.ts';
-import {cursorIn, orders, type Placed, stepped} from './rows.ts';
+import {cursorIn, orders, type Placed} from './rows.ts';
 import {type Place, pictures, type Session} from './session.ts';
 
 /** What a key's meaning may depend on beside the session. */
@@ -32,23 +32,6 @@ export type Scene = {
 	readonly practiceLines: number;
 	readonly isReadingLog: boolean;
 };
-
-/** Which scopes of the key table hold, the first one first. */
-export function scopesOf({place, over}: Session): Scope[] {
-	if (over) return [over.is];
-	if (place.at === 'edit' && place.editing) return ['field'];
-	if (place.at === 'history' && place.adding) return ['draft'];
-	if (place.at === 'take in' && place.incoming) return ['incoming', 'everywhere'];
-	return place.at === 'choose' || place.at === 'take in' ? [place.at] : [place.at, 'everywhere'];
-}
-
-/** Whether what a person types is text here. */
-export function takesText({place, over}: Session): boolean {
-	if (over) return over.is === 'margin' || over.is === 'risk' || over.is === 'entry';
-	if (place.at === 'edit') return place.editing !== undefined;
-	if (place.at === 'history') return place.adding;
-	return place.at === 'choose' || (place.at === 'take in' && place.incoming === undefined);
-}
 
 const tenRows = 10;
 const scrollLines = 8;
@@ -277,22 +260,6 @@ const formOf = (kind: 'track' | 'car'): Place => ({
 	column: 0,
 	editing: undefined,
 });
-
-function rowBy(session: Session, {shown}: Scene, by: number): Action | undefined {
-	const cursor = cursorIn(shown, session.row);
-	const target = Math.max(0, Math.min(shown.length - 1, cursor + by));
-	// At the end of the list nothing is chosen that was not chosen before.
-	return target === cursor ? undefined : {do: 'selectRow', row: shown[target]!.name};
-}
-
-function stepTo({all, shown}: Scene, here: Placed | undefined, by: 1 | -1): Action | undefined {
-	if (here === undefined) return undefined;
-	const row = stepped(all, here, by);
-	if (row === undefined)
-		return {do: 'tell', notice: `No ${by > 0 ? 'shorter' : 'taller'} pair on the rack for this set.`};
-	if (!shown.includes(row)) return {do: 'tell', notice: `${row.name} is next, but hidden by the filter.`};
-	return {do: 'selectRow', row: row.name};
-}
 
 function pictureBy(place: Place, by: 1 | -1): Action | undefined {
 	return place.at === 'pictures'

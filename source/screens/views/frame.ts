@@ -7,7 +7,7 @@ import {beside, blank, clipped, line, type Pieces, piece, tall} from '../parts/p
 import {tableBar, tableHeading, tableLine, tableWidth} from '../parts/table-line.ts';
 import type {Wrong} from '../session/answer.ts';
 import {current, titleOf} from '../session/documents.ts';
-import {scopesOf} from '../session/intend.ts';
+import {scopesOf} from '../session/held-scopes.ts';
 import type {State} from '../session/live.ts';
 import {cursorIn, type Placed} from '../session/rows.ts';
 import {aheadView} from './ahead-view.ts';

@@ -1,8 +1,9 @@
 import {describe, expect, test} from 'vitest';
 import {actionFor} from '../../../source/screens/keys/key-table.ts';
 import {withJson} from '../../../source/screens/session/documents.ts';
+import {scopesOf} from '../../../source/screens/session/held-scopes.ts';
 import {startHistory} from '../../../source/screens/session/history.ts';
-import {intend, scopesOf} from '../../../source/screens/session/intend.ts';
+import {intend} from '../../../source/screens/session/intend.ts';
 import {reduce} from '../../../source/screens/session/reduce.ts';
 import type {Session} from '../../../source/screens/session/session.ts';
 import {linesOf, stateOf} from '../views/states.ts';
